@@ -1,0 +1,2 @@
+export * from './client.js';
+export * as schema from './schema/index.js';

@@ -1,0 +1,41 @@
+import type { Settings } from '@overtally/contracts';
+import { index, integer, jsonb, pgEnum, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core';
+import { createdAt, moment } from './columns.js';
+import { users } from './identity.js';
+
+export const projectRole = pgEnum('project_role', ['technician', 'analyst', 'manager', 'guest']);
+
+/** One job for one customer or product. The counters hand out recording and report numbers without gaps. */
+export const projects = pgTable('projects', {
+  id: uuid().primaryKey().defaultRandom(),
+  name: text().notNull(),
+  customer: text().notNull().default(''),
+  description: text().notNull().default(''),
+  defaultSettings: jsonb().$type<Settings>().notNull(),
+  comparisonLimitSetId: text(),
+  lastRecordingNumber: integer().notNull().default(0),
+  lastReportNumber: integer().notNull().default(0),
+  archivedAt: moment(),
+  createdById: uuid()
+    .notNull()
+    .references(() => users.id),
+  createdAt,
+});
+
+export const members = pgTable(
+  'members',
+  {
+    projectId: uuid()
+      .notNull()
+      .references(() => projects.id, { onDelete: 'cascade' }),
+    userId: uuid()
+      .notNull()
+      .references(() => users.id),
+    role: projectRole().notNull(),
+    addedAt: createdAt,
+  },
+  (table) => [
+    primaryKey({ columns: [table.projectId, table.userId] }),
+    index('members_user_index').on(table.userId),
+  ],
+);

@@ -1,0 +1,89 @@
+import type { ImportOptions, Quantity, ReadProblem, ReadWarning } from '@overtally/contracts';
+import { sql } from 'drizzle-orm';
+import {
+  bigint,
+  check,
+  doublePrecision,
+  index,
+  integer,
+  jsonb,
+  pgEnum,
+  pgTable,
+  primaryKey,
+  text,
+  unique,
+  uuid,
+} from 'drizzle-orm/pg-core';
+import { createdAt, moment } from './columns.js';
+import { users } from './identity.js';
+import { projects } from './projects.js';
+
+export const recordingStatus = pgEnum('recording_status', [
+  'received',
+  'reading',
+  'analysing',
+  'ready',
+  'failed',
+]);
+
+/** One uploaded time record. The source file lies in storage under its SHA-256 and never changes. */
+export const recordings = pgTable(
+  'recordings',
+  {
+    id: uuid().primaryKey().defaultRandom(),
+    projectId: uuid()
+      .notNull()
+      .references(() => projects.id, { onDelete: 'cascade' }),
+    number: integer().notNull(),
+    name: text().notNull(),
+    eut: text().notNull().default(''),
+    measuringChain: text().notNull().default(''),
+    instrument: text().notNull().default(''),
+    remark: text().notNull().default(''),
+    capturedAt: moment(),
+    status: recordingStatus().notNull().default('received'),
+    progress: doublePrecision().notNull().default(0),
+    problem: jsonb().$type<ReadProblem>(),
+    warnings: jsonb().$type<ReadWarning[]>().notNull().default([]),
+    fileName: text().notNull(),
+    fileSize: bigint({ mode: 'number' }).notNull(),
+    fileSha256: text().notNull(),
+    sourceKey: text().notNull(),
+    importOptions: jsonb().$type<ImportOptions>().notNull().default({}),
+    format: text(),
+    metadata: jsonb().$type<Record<string, string>>().notNull().default({}),
+    sampleRateHz: doublePrecision(),
+    sampleCount: bigint({ mode: 'number' }),
+    uploadedById: uuid()
+      .notNull()
+      .references(() => users.id),
+    createdAt,
+  },
+  (table) => [
+    unique('recordings_project_number_key').on(table.projectId, table.number),
+    index('recordings_project_sha256_index').on(table.projectId, table.fileSha256),
+    check('recordings_sha256_form', sql`${table.fileSha256} ~ '^[0-9a-f]{64}$'`),
+  ],
+);
+
+/** One sampled quantity of a recording; its samples lie in storage as .npy, before gain and offset. */
+export const channels = pgTable(
+  'channels',
+  {
+    recordingId: uuid()
+      .notNull()
+      .references(() => recordings.id, { onDelete: 'cascade' }),
+    index: integer().notNull(),
+    name: text().notNull(),
+    quantity: text().$type<Quantity>().notNull(),
+    unit: text().notNull(),
+    gain: doublePrecision().notNull().default(1),
+    offset: doublePrecision().notNull().default(0),
+    lowestCode: doublePrecision(),
+    highestCode: doublePrecision(),
+    missingValues: integer().notNull().default(0),
+    samplesKey: text().notNull(),
+    pyramidKey: text().notNull(),
+  },
+  (table) => [primaryKey({ columns: [table.recordingId, table.index] })],
+);

@@ -1,0 +1,58 @@
+import { z } from 'zod';
+import { idSchema, pageOf, timestampSchema } from './common.js';
+
+const emailSchema = z
+  .email()
+  .max(254)
+  .transform((email) => email.toLowerCase())
+  .describe('E-mail address, compared without regard to case');
+
+const newPasswordSchema = z
+  .string()
+  .min(12, 'Use at least 12 characters')
+  .max(256, 'Use at most 256 characters')
+  .describe('New password, 12 to 256 characters');
+
+export const signInSchema = z.object({ email: emailSchema, password: z.string().min(1).max(256) });
+export type SignIn = z.infer<typeof signInSchema>;
+
+export const changePasswordSchema = z.object({
+  currentPassword: z.string().min(1).max(256),
+  newPassword: newPasswordSchema,
+});
+export type ChangePassword = z.infer<typeof changePasswordSchema>;
+
+export const accountSchema = z.object({
+  id: idSchema,
+  email: z.string(),
+  name: z.string(),
+  isAdministrator: z.boolean(),
+});
+export type Account = z.infer<typeof accountSchema>;
+
+export const updateAccountSchema = z.object({ name: z.string().trim().min(1).max(120) });
+export type UpdateAccount = z.infer<typeof updateAccountSchema>;
+
+/** A person as an administrator sees them. */
+export const userSchema = accountSchema.extend({
+  disabledAt: timestampSchema.nullable(),
+  createdAt: timestampSchema,
+});
+export type User = z.infer<typeof userSchema>;
+export const userPageSchema = pageOf(userSchema);
+
+export const createUserSchema = z.object({
+  email: emailSchema,
+  name: z.string().trim().min(1).max(120),
+  password: newPasswordSchema,
+  isAdministrator: z.boolean().default(false),
+});
+export type CreateUser = z.infer<typeof createUserSchema>;
+
+export const updateUserSchema = z.object({
+  name: z.string().trim().min(1).max(120).optional(),
+  isAdministrator: z.boolean().optional(),
+  disabled: z.boolean().optional(),
+  password: newPasswordSchema.optional().describe('Set by an administrator; ends the person’s sessions'),
+});
+export type UpdateUser = z.infer<typeof updateUserSchema>;

@@ -1,0 +1,70 @@
+import { z } from 'zod';
+import { projectRoleSchema } from './access.js';
+import { settingsSchema } from './analyses.js';
+import { idSchema, pageOf, timestampSchema } from './common.js';
+
+const name = z.string().trim().min(1).max(160).describe('Name of the project');
+
+export const createProjectSchema = z.object({
+  name,
+  customer: z.string().trim().max(160).default('').describe('For whom the work is done'),
+  description: z.string().trim().max(2000).default(''),
+  defaultSettings: settingsSchema
+    .prefault({ profile: 'mains', nominalFrequencyHz: 'auto' })
+    .describe('Settings of the analysis that follows each reading'),
+  comparisonLimitSetId: z.string().max(80).nullable().default(null).describe('Limit set that lists compare with'),
+});
+export type CreateProject = z.infer<typeof createProjectSchema>;
+
+export const updateProjectSchema = z
+  .object({
+    name,
+    customer: z.string().trim().max(160),
+    description: z.string().trim().max(2000),
+    defaultSettings: settingsSchema,
+    comparisonLimitSetId: z.string().max(80).nullable(),
+    archived: z.boolean(),
+  })
+  .partial();
+export type UpdateProject = z.infer<typeof updateProjectSchema>;
+
+export const projectSchema = z.object({
+  id: idSchema,
+  name: z.string(),
+  customer: z.string(),
+  description: z.string(),
+  defaultSettings: settingsSchema,
+  comparisonLimitSetId: z.string().nullable(),
+  archivedAt: timestampSchema.nullable(),
+  createdAt: timestampSchema,
+  role: projectRoleSchema.nullable().describe('Role of the person who asks; null for an administrator who is no member'),
+  counts: z.object({
+    recordings: z.number().int(),
+    members: z.number().int(),
+    reports: z.number().int(),
+  }),
+});
+export type Project = z.infer<typeof projectSchema>;
+export const projectPageSchema = pageOf(projectSchema);
+
+export const memberSchema = z.object({
+  userId: idSchema,
+  name: z.string(),
+  email: z.string(),
+  role: projectRoleSchema,
+  addedAt: timestampSchema,
+});
+export type Member = z.infer<typeof memberSchema>;
+export const memberPageSchema = pageOf(memberSchema);
+
+export const addMemberSchema = z.object({
+  email: z
+    .email()
+    .max(254)
+    .transform((email) => email.toLowerCase()),
+  role: projectRoleSchema,
+});
+export type AddMember = z.infer<typeof addMemberSchema>;
+
+export const updateMemberSchema = z.object({ role: projectRoleSchema });
+export type UpdateMember = z.infer<typeof updateMemberSchema>;

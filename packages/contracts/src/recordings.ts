@@ -1,0 +1,195 @@
+import { z } from 'zod';
+import { idSchema, pageOf, pageQuerySchema, personRefSchema, timestampSchema } from './common.js';
+
+export const quantitySchema = z.enum([
+  'voltage',
+  'current',
+  'power',
+  'sound_pressure',
+  'acceleration',
+  'velocity',
+  'dimensionless',
+  'other',
+]);
+export type Quantity = z.infer<typeof quantitySchema>;
+
+const columnSchema = z.union([z.number().int().min(0), z.string().min(1).max(200)]);
+
+/** How a file is to be read; what is absent is detected. */
+export const importOptionsSchema = z.strictObject({
+  sampleRateHz: z.number().positive().finite().optional().describe('Sample rate in Hz'),
+  delimiter: z.enum([',', ';', '\t', ' ', '|']).optional(),
+  decimal: z.enum(['.', ',']).optional(),
+  headerRows: z.number().int().min(0).max(1000).optional().describe('Lines before the first row of numbers'),
+  timeColumn: columnSchema.nullable().optional().describe('Index from 0 or header name; null: no time column'),
+  timeUnit: z.enum(['s', 'ms', 'us', 'ns']).optional(),
+  channels: z
+    .array(
+      z.strictObject({
+        column: columnSchema.describe('Index from 0 or header name; for WAV the channel'),
+        name: z.string().trim().min(1).max(80).optional(),
+        quantity: quantitySchema.optional(),
+        unit: z.string().trim().max(20).optional(),
+        gain: z.number().finite().optional().describe('Engineering value = gain x stored value + offset'),
+        offset: z.number().finite().optional(),
+      }),
+    )
+    .min(1)
+    .max(512)
+    .optional()
+    .describe('Columns to keep; absent: all value columns'),
+});
+export type ImportOptions = z.infer<typeof importOptionsSchema>;
+
+/** Why a recording or an analysis failed, in words for the person who uploaded it. */
+export const readProblemSchema = z.object({
+  code: z.string(),
+  message: z.string(),
+  cure: z.string(),
+  line: z.number().int().optional(),
+  column: z.number().int().optional(),
+});
+export type ReadProblem = z.infer<typeof readProblemSchema>;
+
+export const readWarningSchema = z.object({
+  code: z.string(),
+  message: z.string(),
+  count: z.number().int().optional(),
+  firstLine: z.number().int().optional(),
+});
+export type ReadWarning = z.infer<typeof readWarningSchema>;
+
+export const recordingStatusSchema = z.enum(['received', 'reading', 'analysing', 'ready', 'failed']);
+export type RecordingStatus = z.infer<typeof recordingStatusSchema>;
+
+export const channelSchema = z.object({
+  index: z.number().int(),
+  name: z.string(),
+  quantity: quantitySchema,
+  unit: z.string(),
+  gain: z.number(),
+  offset: z.number(),
+});
+export type Channel = z.infer<typeof channelSchema>;
+
+/** Figures of one channel of the latest analysis, enough for a list row and its tally strip. */
+export const channelSummarySchema = z.object({
+  channel: z.number().int(),
+  name: z.string(),
+  quantity: quantitySchema,
+  unit: z.string(),
+  fundamentalHz: z.number().nullable(),
+  rms: z.number(),
+  thdFPercent: z.number().nullable(),
+  harmonicRms: z.array(z.number()).describe('rms of orders 1, 2, 3 … as far as computed'),
+});
+export type ChannelSummary = z.infer<typeof channelSummarySchema>;
+
+const bench = {
+  name: z.string().trim().min(1).max(160),
+  eut: z.string().trim().max(200).describe('Equipment under test, with serial number'),
+  measuringChain: z.string().trim().max(200).describe('Transducers and front end'),
+  instrument: z.string().trim().max(200).describe('Recording instrument, serial number, calibration'),
+  capturedAt: timestampSchema.nullable(),
+  remark: z.string().trim().max(2000),
+};
+
+export const updateRecordingSchema = z
+  .object({
+    ...bench,
+    channels: z
+      .array(
+        z.object({
+          index: z.number().int().min(0),
+          name: z.string().trim().min(1).max(80).optional(),
+          quantity: quantitySchema.optional(),
+          unit: z.string().trim().max(20).optional(),
+          gain: z.number().finite().optional(),
+          offset: z.number().finite().optional(),
+        }),
+      )
+      .describe('Scaling changes are followed by a new analysis'),
+  })
+  .partial();
+export type UpdateRecording = z.infer<typeof updateRecordingSchema>;
+
+export const recordingSchema = z.object({
+  id: idSchema,
+  projectId: idSchema,
+  number: z.string().describe('Number in the project, R-0001'),
+  ...bench,
+  status: recordingStatusSchema,
+  progress: z.number().min(0).max(1),
+  problem: readProblemSchema.nullable(),
+  warnings: z.array(readWarningSchema),
+  file: z.object({ name: z.string(), size: z.number().int(), sha256: z.string() }),
+  duplicateOf: z
+    .object({ id: idSchema, number: z.string() })
+    .nullable()
+    .describe('Earlier recording of the project with the same bytes'),
+  format: z.string().nullable(),
+  metadata: z.record(z.string(), z.string()),
+  import: importOptionsSchema.describe('As given on upload'),
+  sampleRateHz: z.number().nullable(),
+  sampleCount: z.number().int().nullable(),
+  durationS: z.number().nullable(),
+  channels: z.array(channelSchema),
+  latestAnalysisId: idSchema.nullable(),
+  summaries: z.array(channelSummarySchema),
+  uploadedBy: personRefSchema,
+  createdAt: timestampSchema,
+});
+export type Recording = z.infer<typeof recordingSchema>;
+export const recordingPageSchema = pageOf(recordingSchema);
+
+export const recordingSortSchema = z.enum(['number', '-number', 'name', '-name', 'createdAt', '-createdAt']);
+
+export const recordingQuerySchema = pageQuerySchema.extend({
+  q: z.string().trim().max(200).optional().describe('Looks in number, name, EUT, file name'),
+  status: recordingStatusSchema.optional(),
+  sort: recordingSortSchema.default('-number'),
+});
+export type RecordingQuery = z.infer<typeof recordingQuerySchema>;
+
+/** Preview of a file's beginning under given options. */
+export const importPreviewSchema = z.object({
+  format: z.enum(['csv', 'wav']).nullable(),
+  lines: z.array(z.string()).describe('The first lines as they stand'),
+  columns: z.array(
+    z.object({ index: z.number().int(), name: z.string(), unit: z.string(), quantity: quantitySchema }),
+  ),
+  rows: z.array(z.array(z.union([z.string(), z.number(), z.null()]))),
+  delimiter: z.string().nullable(),
+  decimal: z.string().nullable(),
+  headerRows: z.number().int().nullable(),
+  timeColumn: z.number().int().nullable(),
+  timeUnit: z.string().nullable(),
+  sampleRateHz: z.number().nullable(),
+  confident: z.boolean(),
+  doubts: z.array(z.string()),
+  problem: readProblemSchema.nullable(),
+});
+export type ImportPreview = z.infer<typeof importPreviewSchema>;
+
+export const waveformQuerySchema = z.object({
+  channel: z.coerce.number().int().min(0).default(0),
+  fromS: z.coerce.number().min(0).optional(),
+  toS: z.coerce.number().positive().optional(),
+  points: z.coerce.number().int().min(2).max(8000).default(2000),
+});
+export type WaveformQuery = z.infer<typeof waveformQuerySchema>;
+
+/** Samples, or one minimum and maximum per bin when more samples than points are asked for. */
+export const waveformSchema = z.object({
+  channel: z.number().int(),
+  unit: z.string(),
+  kind: z.enum(['samples', 'envelope']),
+  fromS: z.number(),
+  toS: z.number(),
+  startS: z.number().describe('Time of the first point'),
+  stepS: z.number().describe('Time between points'),
+  values: z.array(z.number().nullable()).describe('kind samples: the samples; else empty'),
+  minimum: z.array(z.number().nullable()).describe('kind envelope; else empty'),
+  maximum: z.array(z.number().nullable()).describe('kind envelope; else empty'),
+});
+export type Waveform = z.infer<typeof waveformSchema>;
