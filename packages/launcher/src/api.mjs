@@ -1,0 +1,84 @@
+/** The server process: its environment, its start and the moment it is ready. */
+import { join } from 'node:path';
+import { setTimeout as delay } from 'node:timers/promises';
+import { LauncherError } from './lifecycle.mjs';
+import { rootDirectory } from './paths.mjs';
+import { startService } from './processes.mjs';
+import { sessionSecret } from './session-secret.mjs';
+
+/**
+ * @typedef {object} ApiOptions
+ * @property {string} databaseUrl
+ * @property {string} dataDirectory
+ * @property {string} host
+ * @property {number} port
+ */
+
+/**
+ * Starts the built server. What the user set in the environment wins over the defaults given here.
+ * @param {ApiOptions} options
+ */
+export function startApi({ databaseUrl, dataDirectory, host, port }) {
+  return startService(
+    process.execPath,
+    ['--enable-source-maps', join(rootDirectory, 'apps/api/dist/main.js')],
+    {
+      cwd: rootDirectory,
+      env: {
+        DEMO: 'on',
+        LOG_FORMAT: 'pretty',
+        WEB_DIST: join(rootDirectory, 'apps/web/dist'),
+        ...process.env,
+        DATABASE_URL: databaseUrl,
+        DATA_DIR: dataDirectory,
+        HOST: host,
+        PORT: String(port),
+        SESSION_SECRET: sessionSecret(dataDirectory),
+      },
+    },
+  );
+}
+
+/**
+ * The address under which this machine reaches a server that listens on the given host.
+ * @param {string} host
+ * @param {number} port
+ */
+export function localAddress(host, port) {
+  const reachable =
+    { '0.0.0.0': '127.0.0.1', '::': '[::1]' }[host] ?? (host.includes(':') ? `[${host}]` : host);
+  return `http://${reachable}:${port}`;
+}
+
+/**
+ * Waits until the server answers that it is healthy.
+ * @param {string} address
+ * @param {import('./processes.mjs').Service} api
+ * @param {number} [timeoutMs] a first start migrates and fills the demo project
+ * @throws {LauncherError} when the server ends or the time is over
+ */
+export async function waitUntilHealthy(address, api, timeoutMs = 300_000) {
+  const deadline = Date.now() + timeoutMs;
+  /** @type {number | undefined} */
+  let exitCode;
+  void api.exited.then((code) => (exitCode = code));
+  while (Date.now() < deadline) {
+    if (exitCode !== undefined)
+      throw new LauncherError(`The server ended while starting (exit code ${exitCode}, see above).`);
+    if (await answersOk(`${address}/api/health`)) return;
+    await delay(150);
+  }
+  throw new LauncherError(`The server did not become ready within ${timeoutMs / 1000} s.`);
+}
+
+/** @param {string} url */
+async function answersOk(url) {
+  try {
+    const reply = await fetch(url, { signal: AbortSignal.timeout(5_000) });
+    await reply.arrayBuffer();
+    return reply.ok;
+  } catch {
+    // Not listening yet, which is what the caller waits for.
+    return false;
+  }
+}
