@@ -1,8 +1,10 @@
 import { sql } from 'drizzle-orm';
 import {
+  bigint,
   boolean,
   check,
   index,
+  integer,
   json,
   pgTable,
   text,
@@ -39,5 +41,18 @@ export const sessions = pgTable(
     sess: json().notNull(),
     expire: timestamp({ precision: 6 }).notNull(),
   },
-  (table) => [index('sessions_expire_index').on(table.expire)],
+  (table) => [
+    index('sessions_expire_index').on(table.expire),
+    index('sessions_user_index').on(sql`(${table.sess} ->> 'userId')`),
+  ],
 );
+
+/**
+ * Failed sign-ins within a time window, by hashed e-mail and address and by address alone.
+ * The limiter inserts by position, so the order of the columns matters; `expire` is in ms since 1970.
+ */
+export const signInLimits = pgTable('sign_in_limits', {
+  key: varchar({ length: 255 }).primaryKey(),
+  points: integer().notNull().default(0),
+  expire: bigint({ mode: 'number' }),
+});

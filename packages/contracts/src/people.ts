@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { idSchema, pageOf, timestampSchema } from './common.js';
+import { idSchema, pageOf, pageQuerySchema, timestampSchema } from './common.js';
 
 const emailSchema = z
   .email()
@@ -40,6 +40,11 @@ export const userSchema = accountSchema.extend({
 });
 export type User = z.infer<typeof userSchema>;
 export const userPageSchema = pageOf(userSchema);
+
+export const userQuerySchema = pageQuerySchema.extend({
+  q: z.string().trim().max(200).optional().describe('Looks in name and e-mail'),
+});
+export type UserQuery = z.infer<typeof userQuerySchema>;
 
 export const createUserSchema = z.object({
   email: emailSchema,

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { projectRoleSchema } from './access.js';
 import { settingsSchema } from './analyses.js';
-import { idSchema, pageOf, timestampSchema } from './common.js';
+import { idSchema, pageOf, pageQuerySchema, timestampSchema } from './common.js';
 
 const name = z.string().trim().min(1).max(160).describe('Name of the project');
 
@@ -12,7 +12,12 @@ export const createProjectSchema = z.object({
   defaultSettings: settingsSchema
     .prefault({ profile: 'mains', nominalFrequencyHz: 'auto' })
     .describe('Settings of the analysis that follows each reading'),
-  comparisonLimitSetId: z.string().max(80).nullable().default(null).describe('Limit set that lists compare with'),
+  comparisonLimitSetId: z
+    .string()
+    .max(80)
+    .nullable()
+    .default(null)
+    .describe('Limit set that lists compare with'),
 });
 export type CreateProject = z.infer<typeof createProjectSchema>;
 
@@ -37,7 +42,9 @@ export const projectSchema = z.object({
   comparisonLimitSetId: z.string().nullable(),
   archivedAt: timestampSchema.nullable(),
   createdAt: timestampSchema,
-  role: projectRoleSchema.nullable().describe('Role of the person who asks; null for an administrator who is no member'),
+  role: projectRoleSchema
+    .nullable()
+    .describe('Role of the person who asks; null for an administrator who is no member'),
   counts: z.object({
     recordings: z.number().int(),
     members: z.number().int(),
@@ -46,6 +53,15 @@ export const projectSchema = z.object({
 });
 export type Project = z.infer<typeof projectSchema>;
 export const projectPageSchema = pageOf(projectSchema);
+
+export const projectQuerySchema = pageQuerySchema.extend({
+  q: z.string().trim().max(200).optional().describe('Looks in name and customer'),
+  archived: z
+    .enum(['false', 'true', 'all'])
+    .default('false')
+    .describe('Archived projects: left out, alone, or too'),
+});
+export type ProjectQuery = z.infer<typeof projectQuerySchema>;
 
 export const memberSchema = z.object({
   userId: idSchema,

@@ -1,0 +1,33 @@
+import { Module, type DynamicModule } from '@nestjs/common';
+import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE } from '@nestjs/core';
+import { LoggerModule } from 'nestjs-pino';
+import { ZodSerializerInterceptor, ZodValidationPipe } from 'nestjs-zod';
+import { AccessModule } from './access/access.module.js';
+import { AuthModule } from './auth/auth.module.js';
+import { loggerParams } from './common/logging.js';
+import { ProblemFilter } from './common/problem.filter.js';
+import { AppConfig } from './config/app-config.js';
+import { ConfigModule } from './config/config.module.js';
+import { DatabaseModule } from './database/database.module.js';
+
+/** The whole application. Order matters where modules bring middleware: logs, then sessions. */
+@Module({})
+export class AppModule {
+  static with(config: AppConfig): DynamicModule {
+    return {
+      module: AppModule,
+      imports: [
+        LoggerModule.forRoot(loggerParams(config)),
+        ConfigModule.with(config),
+        DatabaseModule,
+        AccessModule,
+        AuthModule,
+      ],
+      providers: [
+        { provide: APP_FILTER, useClass: ProblemFilter },
+        { provide: APP_PIPE, useClass: ZodValidationPipe },
+        { provide: APP_INTERCEPTOR, useClass: ZodSerializerInterceptor },
+      ],
+    };
+  }
+}

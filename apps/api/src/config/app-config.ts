@@ -1,0 +1,49 @@
+import { resolve } from 'node:path';
+import type { Environment } from './environment.js';
+
+/** Settings of the process, checked at start. Nothing else reads the environment. */
+export class AppConfig {
+  readonly port: number;
+  readonly host: string;
+  readonly databaseUrl: string;
+  /** Absolute path of the folder that keeps files. */
+  readonly dataDir: string;
+  /** Absolute path of the built web application; null: the API alone is served. */
+  readonly webDist: string | null;
+  readonly sessionSecret: string;
+  /** Address people use, without a slash at the end. */
+  readonly publicUrl: string;
+  readonly maxUploadBytes: number;
+  readonly worker: 'embedded' | 'off';
+  readonly demo: boolean;
+  readonly logLevel: Environment['LOG_LEVEL'];
+  readonly logFormat: 'json' | 'pretty';
+  readonly computeThreads: number;
+  readonly adminEmail?: string;
+  readonly adminPassword?: string;
+  readonly storage: 'disk';
+
+  constructor(env: Environment) {
+    this.port = env.PORT;
+    this.host = env.HOST;
+    this.databaseUrl = env.DATABASE_URL;
+    this.dataDir = resolve(env.DATA_DIR);
+    this.webDist = env.WEB_DIST === undefined ? null : resolve(env.WEB_DIST);
+    this.sessionSecret = env.SESSION_SECRET;
+    this.publicUrl = (env.PUBLIC_URL ?? `http://${env.HOST}:${env.PORT}`).replace(/\/+$/, '');
+    this.maxUploadBytes = Math.floor(env.MAX_UPLOAD_MB * 1024 * 1024);
+    this.worker = env.WORKER;
+    this.demo = env.DEMO === 'on';
+    this.logLevel = env.LOG_LEVEL;
+    this.logFormat = env.LOG_FORMAT;
+    this.computeThreads = env.COMPUTE_THREADS;
+    this.adminEmail = env.ADMIN_EMAIL?.toLowerCase();
+    this.adminPassword = env.ADMIN_PASSWORD;
+    this.storage = env.STORAGE;
+  }
+
+  /** True when people reach the installation over TLS. */
+  get isHttps(): boolean {
+    return this.publicUrl.startsWith('https:');
+  }
+}

@@ -1,0 +1,66 @@
+import { availableParallelism } from 'node:os';
+import { z } from 'zod';
+
+const absent = (value: unknown) => (value === '' ? undefined : value);
+const optional = <T extends z.ZodType>(schema: T) => z.preprocess(absent, schema.optional());
+
+/** The environment of a process. An empty value counts as absent. */
+export const environmentSchema = z
+  .object({
+    PORT: z.preprocess(absent, z.coerce.number().int().min(0).max(65535).default(4310)),
+    HOST: z.preprocess(absent, z.string().default('127.0.0.1')),
+    DATABASE_URL: z.preprocess(
+      absent,
+      z.url({ protocol: /^postgres(ql)?$/, error: 'give a postgresql:// address' }),
+    ),
+    DATA_DIR: z.preprocess(absent, z.string({ error: 'give the folder that keeps uploaded files' })),
+    WEB_DIST: optional(z.string()),
+    SESSION_SECRET: z.preprocess(
+      absent,
+      z
+        .string({ error: 'give a random text of at least 32 characters' })
+        .min(32, 'use at least 32 characters'),
+    ),
+    PUBLIC_URL: optional(z.url({ protocol: /^https?$/, error: 'give an http:// or https:// address' })),
+    MAX_UPLOAD_MB: z.preprocess(absent, z.coerce.number().positive().default(2048)),
+    WORKER: z.preprocess(absent, z.enum(['embedded', 'off']).default('embedded')),
+    DEMO: z.preprocess(absent, z.enum(['on', 'off']).default('off')),
+    LOG_LEVEL: z.preprocess(
+      absent,
+      z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
+    ),
+    LOG_FORMAT: z.preprocess(absent, z.enum(['json', 'pretty']).default('json')),
+    COMPUTE_THREADS: z.preprocess(
+      absent,
+      z.coerce
+        .number()
+        .int()
+        .min(1)
+        .max(256)
+        .default(() => Math.max(1, availableParallelism() - 1)),
+    ),
+    ADMIN_EMAIL: optional(z.email({ error: 'give an e-mail address' })),
+    ADMIN_PASSWORD: optional(z.string().min(12, 'use at least 12 characters').max(256)),
+    STORAGE: z.preprocess(absent, z.literal('disk', { error: "only 'disk' is known" }).default('disk')),
+  })
+  .refine((env) => (env.ADMIN_EMAIL === undefined) === (env.ADMIN_PASSWORD === undefined), {
+    path: ['ADMIN_EMAIL'],
+    message: 'give ADMIN_EMAIL and ADMIN_PASSWORD together, or neither',
+    when: () => true,
+  });
+
+export type Environment = z.infer<typeof environmentSchema>;
+
+/** The environment is unfit; `message` lists every fault, one a line. */
+export class EnvironmentFaults extends Error {}
+
+/**
+ * Reads and checks the whole environment at once.
+ * @throws EnvironmentFaults naming each variable and its fault; values are not repeated.
+ */
+export function readEnvironment(env: NodeJS.ProcessEnv): Environment {
+  const parsed = environmentSchema.safeParse(env);
+  if (parsed.success) return parsed.data;
+  const lines = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`);
+  throw new EnvironmentFaults(['The environment is not complete or not valid:', ...lines].join('\n'));
+}
