@@ -1,0 +1,100 @@
+import { refuse } from './refusal.js';
+import type { ChannelOptions, ImportOptions, LayoutColumn, ReadChannel } from './types.js';
+import { unitMeaning } from './units.js';
+
+/** Raw ends of an integer sample format. */
+export interface CodeRange {
+  lowest: number;
+  highest: number;
+}
+
+/**
+ * Finds a column by 0-based index or by name (as written in the header or without its unit, ignoring case).
+ * Refuses one that is not there, naming those that are.
+ */
+export function findColumn(
+  wanted: number | string,
+  columns: LayoutColumn[],
+  headerCells: string[],
+  what: string,
+): number {
+  if (typeof wanted === 'number' && Number.isInteger(wanted) && columns[wanted] !== undefined) return wanted;
+  if (typeof wanted === 'string') {
+    const text = wanted.trim().toLowerCase();
+    const index = columns.findIndex(
+      (column, i) => column.name.toLowerCase() === text || headerCells[i]?.trim().toLowerCase() === text,
+    );
+    if (index >= 0) return index;
+  }
+  const known = columns.map((column) => `${column.index} "${column.name}"`).join(', ');
+  return refuse(
+    'unknown-column',
+    `The ${what} "${wanted}" is not in the file. It has these columns: ${known}.`,
+    'Choose one of the columns there are, by name or by index counting from 0.',
+  );
+}
+
+function makeChannel(
+  index: number,
+  column: LayoutColumn,
+  wanted: ChannelOptions | undefined,
+  range: CodeRange | null,
+): ReadChannel {
+  const written = wanted?.unit ?? column.unit;
+  const meaning = unitMeaning(written);
+  const factor = meaning?.factor ?? 1;
+  const gain = (wanted?.gain ?? 1) * factor;
+  const offset = (wanted?.offset ?? 0) * factor;
+  if (!Number.isFinite(gain) || gain === 0 || !Number.isFinite(offset)) {
+    refuse(
+      'bad-scaling',
+      `The gain ${wanted?.gain} and offset ${wanted?.offset} of channel "${column.name}" are not usable numbers.`,
+      'Give a gain other than zero and a finite offset.',
+    );
+  }
+  return {
+    index,
+    column: column.index,
+    name: wanted?.name ?? column.name,
+    quantity:
+      wanted?.quantity ?? (wanted?.unit === undefined ? column.quantity : meaning?.quantity) ?? 'other',
+    unit: meaning?.base ?? written,
+    gain,
+    offset,
+    lowestCode: range?.lowest ?? null,
+    highestCode: range?.highest ?? null,
+  };
+}
+
+/**
+ * Channels to read: those the options select, or every column of `byDefault`. The prefix of a unit goes into the
+ * gain, so that gain x raw + offset is in the base unit.
+ */
+export function selectChannels(
+  options: ImportOptions,
+  columns: LayoutColumn[],
+  headerCells: string[],
+  byDefault: number[],
+  range: CodeRange | null,
+): ReadChannel[] {
+  if (options.channels === undefined || options.channels.length === 0) {
+    return byDefault.map((column, index) =>
+      makeChannel(index, columns[column] as LayoutColumn, undefined, range),
+    );
+  }
+  return options.channels.map((wanted, index) => {
+    const column = findColumn(wanted.column, columns, headerCells, 'channel');
+    return makeChannel(index, columns[column] as LayoutColumn, wanted, range);
+  });
+}
+
+/** Refuses a sample rate that cannot be one. */
+export function checkSampleRateOption(options: ImportOptions): void {
+  const rate = options.sampleRateHz;
+  if (rate === undefined || (Number.isFinite(rate) && rate > 0)) return;
+  refuse(
+    'bad-sample-rate',
+    `The sample rate given, ${rate} Hz, is not a positive number.`,
+    'Give the sample rate in hertz, for example 50000.',
+  );
+}

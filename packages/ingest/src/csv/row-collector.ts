@@ -1,0 +1,179 @@
+import { refuse } from '../refusal.js';
+import type { ReadChannel, ReadWarning } from '../types.js';
+import type { CsvLayout } from './layout.js';
+import type { RowParser } from './row-parser.js';
+import type { TimeAxis } from './time-axis.js';
+
+const BLOCK_VALUES = 1 << 18;
+
+/** Takes parsed rows into one block of samples per channel, applying the rules for missing, repeated and odd rows. */
+export class RowCollector {
+  /** Rows in the block. */
+  filled = 0;
+  rowCount = 0;
+  readonly blocks: Float64Array[];
+  readonly missing: number[];
+  private readonly capacity: number;
+  private readonly previous: Float64Array;
+  private missingLine = 0;
+  private missingTimes = 0;
+  private duplicates = { count: 0, firstLine: 0 };
+  private trailingTextLine = 0;
+  private tailLow = Infinity;
+  private tailHigh = -Infinity;
+  private partialLine = 0;
+
+  constructor(
+    private readonly layout: CsvLayout,
+    private readonly channels: ReadChannel[],
+    private readonly axis: TimeAxis | null,
+  ) {
+    this.capacity = Math.max(64, Math.min(16384, Math.floor(BLOCK_VALUES / channels.length)));
+    this.blocks = channels.map(() => new Float64Array(this.capacity));
+    this.missing = channels.map(() => 0);
+    this.previous = new Float64Array(channels.length);
+  }
+
+  get full(): boolean {
+    return this.filled === this.capacity;
+  }
+
+  /** Takes the row that `parser` holds. `unfinished`: it is the last line and has no line end. */
+  take(parser: RowParser, line: number, unfinished: boolean): void {
+    if (parser.filledCount === 0 && (parser.cellCount <= 1 || this.axis !== null)) return;
+    if (unfinished && this.isCut(parser)) {
+      this.partialLine = line;
+      return;
+    }
+    if (this.isText(parser)) {
+      if (this.trailingTextLine === 0) this.trailingTextLine = line;
+      return;
+    }
+    if (this.trailingTextLine !== 0) this.refuseText(this.trailingTextLine);
+    this.checkWidth(parser, line);
+    if (!this.keepTime(parser, line)) return;
+    if (parser.tail < this.tailLow) this.tailLow = parser.tail;
+    if (parser.tail > this.tailHigh) this.tailHigh = parser.tail;
+    this.keepValues(parser, line);
+  }
+
+  warnings(): ReadWarning[] {
+    const found: ReadWarning[] = [];
+    const missing = this.missing.reduce((sum, n) => sum + n, 0) + this.missingTimes;
+    if (missing > 0) {
+      found.push({
+        code: 'missing-values',
+        message: `${missing} cells hold no number, first at line ${this.missingLine}; they are kept as missing, not as zero.`,
+        count: missing,
+        firstLine: this.missingLine,
+      });
+    }
+    if (this.duplicates.count > 0) {
+      found.push({
+        code: 'duplicate-rows',
+        message: `${this.duplicates.count} rows repeat the time and values of the row before, first at line ${this.duplicates.firstLine}; the copies were dropped.`,
+        ...this.duplicates,
+      });
+    }
+    if (this.partialLine > 0) {
+      const message = `The last line, ${this.partialLine}, is cut off and was dropped.`;
+      found.push({ code: 'partial-row', message, count: 1, firstLine: this.partialLine });
+    }
+    if (this.trailingTextLine > 0) {
+      const message = `Text follows the numbers from line ${this.trailingTextLine} on; it was not read.`;
+      found.push({ code: 'trailing-text', message, firstLine: this.trailingTextLine });
+    }
+    return found;
+  }
+
+  private isCut(parser: RowParser): boolean {
+    const { columnCount } = this.layout.dialect;
+    if (parser.cellCount < columnCount) return true;
+    const last = parser.kinds[columnCount - 1];
+    if (last === 2) return true;
+    // A number of a fixed format that ends early: all rows before had the same count of digits, this one has fewer.
+    return last === 1 && this.tailLow === this.tailHigh && parser.tail >= 0 && parser.tail < this.tailLow;
+  }
+
+  /** A line of another shape without a single number is no row of the table. */
+  private isText(parser: RowParser): boolean {
+    if (parser.kinds.includes(1)) return false;
+    const { columnCount } = this.layout.dialect;
+    const time = this.layout.time;
+    if (time !== null) return parser.kinds[time.column] === 2 || parser.cellCount < columnCount;
+    return (
+      parser.cellCount < columnCount || (columnCount === 1 && parser.kinds[0] === 2 && parser.filledCount > 1)
+    );
+  }
+
+  private refuseText(line: number): never {
+    refuse(
+      'text-in-data',
+      `Line ${line} holds text in the middle of the rows of numbers.`,
+      'Remove the line, or export each part of the record as a file of its own.',
+      { line },
+    );
+  }
+
+  private checkWidth(parser: RowParser, line: number): void {
+    const { length } = this.layout.columns;
+    if (parser.cellCount <= length || (parser.cellCount === length + 1 && parser.filledCount <= length))
+      return;
+    if (parser.filledCount <= length) return;
+    refuse(
+      'too-many-cells',
+      `Line ${line} holds ${parser.cellCount} cells where the table has ${length} columns; a thousands separator or a decimal comma may have split a number.`,
+      'Export the table with another delimiter or without thousands separators.',
+      { line, column: length + 1 },
+    );
+  }
+
+  /** Follows the time stamp; returns false for a copy of the row before. */
+  private keepTime(parser: RowParser, line: number): boolean {
+    const { time } = this.layout;
+    if (this.axis === null || time === null) return true;
+    const kind = parser.kinds[time.column];
+    if (kind === 2) {
+      refuse(
+        'bad-time-stamp',
+        `Line ${line}, column ${time.column + 1}: the time stamp is not a number or a time that can be read.`,
+        'Correct the time stamp; or state that there is no time column and give the sample rate.',
+        { line, column: time.column + 1 },
+      );
+    }
+    if (kind === 0) {
+      this.missingTimes += 1;
+      if (this.missingLine === 0) this.missingLine = line;
+      this.axis.skip();
+      return true;
+    }
+    const stampS = (parser.cells[time.column] as number) * time.secondsPerUnit;
+    if (this.axis.repeats(stampS) && this.equalsPrevious(parser)) {
+      if (this.duplicates.count === 0) this.duplicates.firstLine = line;
+      this.duplicates.count += 1;
+      return false;
+    }
+    this.axis.push(stampS, line);
+    return true;
+  }
+
+  private equalsPrevious(parser: RowParser): boolean {
+    return this.channels.every(({ column }, k) => Object.is(parser.cells[column], this.previous[k]));
+  }
+
+  private keepValues(parser: RowParser, line: number): void {
+    const { channels, blocks, previous, filled } = this;
+    for (let k = 0; k < channels.length; k += 1) {
+      const column = (channels[k] as ReadChannel).column;
+      const value = parser.cells[column] as number;
+      if (parser.kinds[column] !== 1) {
+        this.missing[k] = (this.missing[k] as number) + 1;
+        if (this.missingLine === 0) this.missingLine = line;
+      }
+      previous[k] = value;
+      (blocks[k] as Float64Array)[filled] = value;
+    }
+    this.filled += 1;
+    this.rowCount += 1;
+  }
+}

@@ -1,0 +1,128 @@
+import { refuse } from '../refusal.js';
+import type { ReadWarning } from '../types.js';
+
+const SETTLE_AFTER = 256;
+const UNEVEN = 0.05;
+const GAP = 1.5;
+
+interface Tally {
+  count: number;
+  firstLine: number;
+}
+
+function count(tally: Tally, line: number): void {
+  if (tally.count === 0) tally.firstLine = line;
+  tally.count += 1;
+}
+
+/**
+ * Watches the time stamps go by: refuses time that runs backwards, counts uneven intervals and gaps against the median
+ * of the first intervals, and knows the sample rate at the end. Holds no stamps beyond the first few hundred.
+ */
+export class TimeAxis {
+  firstStampS = NaN;
+  private lastStamp = NaN;
+  private rowsSinceLast = 0;
+  private intervals = 0;
+  private interval = 0;
+  private early: { step: number; line: number }[] | null = [];
+  private regularTime = 0;
+  private regularCount = 0;
+  private readonly uneven: Tally = { count: 0, firstLine: 0 };
+  private readonly gaps: Tally = { count: 0, firstLine: 0 };
+
+  constructor(private readonly column: number) {}
+
+  /** A row whose time stamp is missing stands in the record like any other. */
+  skip(): void {
+    this.rowsSinceLast += 1;
+  }
+
+  /** True when `stampS` repeats the time of the row before. */
+  repeats(stampS: number): boolean {
+    return stampS === this.lastStamp && this.rowsSinceLast === 0;
+  }
+
+  push(stampS: number, line: number): void {
+    const rows = this.rowsSinceLast + 1;
+    if (Number.isNaN(this.lastStamp)) this.firstStampS = stampS;
+    else {
+      if (stampS <= this.lastStamp) this.refuseBackwards(stampS, line);
+      this.intervals += rows;
+      this.measure((stampS - this.lastStamp) / rows, line);
+    }
+    this.lastStamp = stampS;
+    this.rowsSinceLast = 0;
+  }
+
+  /** Sample rate in Hz, from the regular intervals only where whole rows are missing; null with fewer than two stamps. */
+  sampleRateHz(): number | null {
+    this.settle();
+    if (this.intervals === 0) return null;
+    if (this.gaps.count > 0 && this.uneven.count === 0 && this.regularCount > 0) {
+      return this.regularCount / this.regularTime;
+    }
+    return this.intervals / (this.lastStamp - this.firstStampS);
+  }
+
+  warnings(): ReadWarning[] {
+    this.settle();
+    const found: ReadWarning[] = [];
+    if (this.uneven.count > 0) {
+      found.push({
+        code: 'uneven-sampling',
+        message: `${this.uneven.count} intervals between time stamps differ by more than 5 % from the usual one, first at line ${this.uneven.firstLine}; the samples are treated as evenly spaced at the mean rate.`,
+        ...this.uneven,
+      });
+    }
+    if (this.gaps.count > 0) {
+      found.push({
+        code: 'gap',
+        message: `The time jumps by more than 1.5 sample intervals in ${this.gaps.count} places, first before line ${this.gaps.firstLine}; samples are missing there.`,
+        ...this.gaps,
+      });
+    }
+    return found;
+  }
+
+  private measure(step: number, line: number): void {
+    if (this.early === null) this.judge(step, line);
+    else {
+      this.early.push({ step, line });
+      if (this.early.length === SETTLE_AFTER) this.settle();
+    }
+  }
+
+  private settle(): void {
+    const early = this.early;
+    if (early === null) return;
+    this.early = null;
+    const steps = early.map(({ step }) => step).sort((a, b) => a - b);
+    this.interval = steps[steps.length >> 1] ?? 0;
+    for (const { step, line } of early) this.judge(step, line);
+  }
+
+  private judge(step: number, line: number): void {
+    if (step > GAP * this.interval) {
+      count(this.gaps, line);
+      return;
+    }
+    this.regularTime += step;
+    this.regularCount += 1;
+    if (Math.abs(step - this.interval) > UNEVEN * this.interval) count(this.uneven, line);
+  }
+
+  private refuseBackwards(stampS: number, line: number): never {
+    const same = stampS === this.lastStamp;
+    refuse(
+      same ? 'time-repeated' : 'time-not-increasing',
+      same
+        ? `Line ${line} repeats the time ${stampS} s of the row before with different values: one time stamp stands twice.`
+        : `Line ${line}: the time runs backwards, ${stampS} s after ${this.lastStamp} s. Time stamps must be in increasing order.`,
+      same
+        ? 'Export the time with more digits; or state that there is no time column and give the sample rate.'
+        : 'Export the record as one piece in the order of time; or state that there is no time column and give the sample rate.',
+      { line, column: this.column + 1 },
+    );
+  }
+}

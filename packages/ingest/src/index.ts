@@ -1,0 +1,22 @@
+export { decodeNpyHeader, encodeNpyHeader } from './npy-header.js';
+export { previewRecording } from './preview-recording.js';
+export { readRecording } from './read-recording.js';
+export type {
+  ChannelOptions,
+  DecimalMark,
+  Delimiter,
+  DetectedLayout,
+  ImportOptions,
+  LayoutColumn,
+  PreviewArguments,
+  PreviewOutcome,
+  Problem,
+  Quantity,
+  ReadArguments,
+  ReadChannel,
+  ReadOutcome,
+  ReadSuccess,
+  ReadWarning,
+  SampleSink,
+  TimeUnit,
+} from './types.js';

@@ -1,0 +1,155 @@
+/** Physical quantity of a channel. */
+export type Quantity =
+  | 'voltage'
+  | 'current'
+  | 'power'
+  | 'sound_pressure'
+  | 'acceleration'
+  | 'velocity'
+  | 'dimensionless'
+  | 'other';
+
+export type Delimiter = ',' | ';' | '\t' | ' ' | '|';
+export type DecimalMark = '.' | ',';
+export type TimeUnit = 's' | 'ms' | 'us' | 'ns';
+
+/** One channel as the user wants it read; `column` is a 0-based index or the name in the header. */
+export interface ChannelOptions {
+  column: number | string;
+  name?: string;
+  quantity?: Quantity;
+  unit?: string;
+  gain?: number;
+  offset?: number;
+}
+
+/** What the user states about a file; everything absent is detected from its content. */
+export interface ImportOptions {
+  sampleRateHz?: number;
+  delimiter?: Delimiter;
+  decimal?: DecimalMark;
+  /** Lines before the first data row, whatever they hold. */
+  headerRows?: number;
+  /** Index or name of the time column; null: the file has none. */
+  timeColumn?: number | string | null;
+  timeUnit?: TimeUnit;
+  channels?: ChannelOptions[];
+}
+
+/** A channel of the file. Engineering value = raw value x `gain` + `offset`, in `unit`. */
+export interface ReadChannel {
+  index: number;
+  /** 0-based source column, or 0-based channel of a WAV file. */
+  column: number;
+  name: string;
+  quantity: Quantity;
+  unit: string;
+  gain: number;
+  offset: number;
+  /** Raw value of the lowest code of an integer format, else null. */
+  lowestCode: number | null;
+  /** Raw value of the highest code of an integer format, else null. */
+  highestCode: number | null;
+}
+
+/** Receives the samples while the file is read. */
+export interface SampleSink {
+  begin(channels: ReadChannel[]): void | Promise<void>;
+  /**
+   * Raw values as they stand in the file (integer WAV: code / 2^(bits-1)), before gain and offset; NaN where a
+   * value is missing. The buffer is used again once the returned promise resolves.
+   */
+  write(channelIndex: number, samples: Float64Array): void | Promise<void>;
+}
+
+/** Why a file was not read, where, and what helps. Lines and columns count from 1. */
+export interface Problem {
+  code: string;
+  message: string;
+  cure: string;
+  line?: number;
+  column?: number;
+}
+
+/** Something the reader noticed and dealt with. */
+export interface ReadWarning {
+  code: 'missing-values' | 'uneven-sampling' | 'duplicate-rows' | 'truncated' | 'partial-row' | (string & {});
+  message: string;
+  count?: number;
+  firstLine?: number;
+}
+
+/** A column as the file names it; `unit` is the unit as written, prefix included. */
+export interface LayoutColumn {
+  index: number;
+  name: string;
+  unit: string;
+  quantity: Quantity;
+}
+
+/** How the reader understood the file. */
+export interface DetectedLayout {
+  format: 'csv' | 'wav';
+  encoding?: string;
+  delimiter?: string;
+  decimal?: string;
+  headerRows?: number;
+  /** 1-based line of the units row, null when there is none. */
+  unitsRow?: number | null;
+  /** 0-based index of the time column, null when there is none. */
+  timeColumn?: number | null;
+  timeUnit?: string | null;
+  columns?: LayoutColumn[];
+  bitsPerSample?: number;
+  sampleFormat?: string;
+  confident: boolean;
+  /** What a person should look at, in plain sentences. */
+  doubts: string[];
+}
+
+/** A recording that was read to its end. */
+export interface ReadSuccess {
+  ok: true;
+  format: 'csv' | 'wav';
+  sampleRateHz: number;
+  /** Samples per channel, missing ones included. */
+  sampleCount: number;
+  channels: ReadChannel[];
+  /** Missing values per channel, in the order of `channels`. */
+  missingValues: number[];
+  /** First time stamp in seconds (0 for calendar stamps, whose text is in the metadata); null without a time column. */
+  startTimeS: number | null;
+  warnings: ReadWarning[];
+  metadata: Record<string, string>;
+  layout: DetectedLayout;
+}
+
+export type ReadOutcome = ReadSuccess | { ok: false; problem: Problem };
+
+export interface ReadArguments {
+  fileName: string;
+  sizeBytes?: number;
+  options?: ImportOptions;
+  sink: SampleSink;
+  onProgress?: (bytesRead: number) => void;
+  signal?: AbortSignal;
+}
+
+export interface PreviewArguments {
+  fileName: string;
+  sizeBytes?: number;
+  options?: ImportOptions;
+}
+
+/** What the beginning of a file tells about it. */
+export interface PreviewOutcome {
+  layout: DetectedLayout;
+  /** The first lines as they stand in the file; the first has number 1. Empty for WAV. */
+  lines: string[];
+  /** The first data rows, cell by cell: number, text, or null where the cell is blank. */
+  rows: (string | number | null)[][];
+  sampleRateHz: number | null;
+  problem: Problem | null;
+  /** Names of the import options the user must give, such as `sampleRateHz`. */
+  needs: string[];
+}

@@ -1,0 +1,229 @@
+import type { ByteSource } from '../byte-source.js';
+import { checkSampleRateOption, selectChannels } from '../channels.js';
+import { refuse } from '../refusal.js';
+import type {
+  DetectedLayout,
+  ImportOptions,
+  LayoutColumn,
+  ReadChannel,
+  ReadSuccess,
+  ReadWarning,
+  SampleSink,
+} from '../types.js';
+import { fourCc, readWavHeader, type WavHeader } from './header.js';
+import { readInfoList } from './info-list.js';
+import { codeRange, decoderOf } from './samples.js';
+
+const HEAD_BYTES = 1 << 16;
+const MAX_HEADER_BYTES = 1 << 26;
+const BLOCK_BYTES = 1 << 17;
+const TRAILER_BYTES = 1 << 20;
+
+export interface WavArguments {
+  fileName: string;
+  options: ImportOptions;
+  sink: SampleSink;
+}
+
+async function readHeader(source: ByteSource): Promise<WavHeader> {
+  let wanted = HEAD_BYTES;
+  for (;;) {
+    const bytes = await source.peek(wanted);
+    const header = readWavHeader(bytes, bytes.length < wanted || source.isLast(bytes.length));
+    if (typeof header !== 'number') return header;
+    if (header > MAX_HEADER_BYTES) {
+      refuse(
+        'header-too-long',
+        'The WAV file holds a chunk of more than 64 MB before its samples.',
+        'Save the recording again without embedded pictures or other extras.',
+      );
+    }
+    wanted = Math.max(header, wanted + 1);
+  }
+}
+
+/** Columns of a WAV file: its channels, named ch1, ch2 … */
+export function wavColumns(header: WavHeader): LayoutColumn[] {
+  return Array.from({ length: header.format.channelCount }, (_, index) => ({
+    index,
+    name: `ch${index + 1}`,
+    unit: '',
+    quantity: 'dimensionless' as const,
+  }));
+}
+
+export function describeWav(header: WavHeader): DetectedLayout {
+  const { encoding, bytesPerSample } = header.format;
+  return {
+    format: 'wav',
+    columns: wavColumns(header),
+    bitsPerSample: bytesPerSample * 8,
+    sampleFormat: encoding,
+    confident: true,
+    doubts: [],
+  };
+}
+
+/** Channels of a WAV file as the options have them. */
+export function wavChannels(header: WavHeader, options: ImportOptions): ReadChannel[] {
+  checkSampleRateOption(options);
+  const columns = wavColumns(header);
+  return selectChannels(
+    options,
+    columns,
+    [],
+    columns.map(({ index }) => index),
+    codeRange(header.format),
+  );
+}
+
+/** Replaces what is no finite number by NaN; returns how many there were. */
+function countMissing(samples: Float64Array): number {
+  let missing = 0;
+  for (let i = 0; i < samples.length; i += 1) {
+    if (Number.isFinite(samples[i])) continue;
+    samples[i] = NaN;
+    missing += 1;
+  }
+  return missing;
+}
+
+interface Counts {
+  frames: number;
+  /** Bytes of a last frame that is not whole. */
+  leftover: number;
+  missing: number[];
+}
+
+async function readSamples(
+  source: ByteSource,
+  header: WavHeader,
+  channels: ReadChannel[],
+  sink: SampleSink,
+): Promise<Counts> {
+  const { format } = header;
+  const stride = format.bytesPerSample * format.channelCount;
+  const blockFrames = Math.max(1, Math.floor(BLOCK_BYTES / stride));
+  const decode = decoderOf(format);
+  const out = new Float64Array(blockFrames);
+  const counts: Counts = { frames: 0, leftover: 0, missing: channels.map(() => 0) };
+  let left = header.dataBytes ?? Infinity;
+  while (left > 0) {
+    const bytes = await source.peek(Math.min(left, blockFrames * stride));
+    const frames = Math.floor(bytes.length / stride);
+    for (const [index, channel] of channels.entries()) {
+      const samples = out.subarray(0, frames);
+      decode(bytes, channel.column * format.bytesPerSample, stride, frames, samples);
+      if (format.encoding === 'float')
+        counts.missing[index] = (counts.missing[index] as number) + countMissing(samples);
+      if (frames > 0) await sink.write(index, samples);
+    }
+    const used = frames === 0 ? bytes.length : frames * stride;
+    source.consume(used);
+    left -= used;
+    counts.frames += frames;
+    if (frames === 0) {
+      counts.leftover = bytes.length;
+      break;
+    }
+  }
+  return counts;
+}
+
+function collectWarnings(header: WavHeader, counts: Counts): ReadWarning[] {
+  const { frames, leftover, missing } = counts;
+  const { format, dataBytes } = header;
+  const claimed =
+    dataBytes === null ? null : Math.floor(dataBytes / (format.bytesPerSample * format.channelCount));
+  const found: ReadWarning[] = [];
+  if (claimed !== null && frames < claimed) {
+    const message = `The header claims ${claimed} samples per channel but the file ends after ${frames}; what is there was read.`;
+    found.push({ code: 'truncated', message, count: claimed - frames });
+  } else if (leftover > 0) {
+    found.push({
+      code: 'truncated',
+      message: 'The last frame of samples is not whole and was dropped.',
+      count: 1,
+    });
+  }
+  if (header.sizeWasZero) {
+    found.push({
+      code: 'data-size-zero',
+      message: 'The header says 0 bytes of samples; the file was read to its end.',
+    });
+  } else if (dataBytes === null) {
+    found.push({
+      code: 'data-size-unknown',
+      message: 'The header does not state how many samples there are; the file was read to its end.',
+    });
+  }
+  const total = missing.reduce((sum, n) => sum + n, 0);
+  if (total > 0) {
+    found.push({
+      code: 'missing-values',
+      message: `${total} samples are not finite numbers; they are kept as missing, not as zero.`,
+      count: total,
+    });
+  }
+  return found;
+}
+
+/** Texts in LIST chunks after the samples. Whatever else follows is not looked at. */
+async function readTrailer(source: ByteSource, header: WavHeader): Promise<Record<string, string>> {
+  if (header.dataBytes === null) return {};
+  const bytes = await source.peek(TRAILER_BYTES);
+  const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
+  const metadata: Record<string, string> = {};
+  for (let offset = header.dataBytes % 2; offset + 8 <= bytes.length;) {
+    const size = view.getUint32(offset + 4, true);
+    const start = offset + 8;
+    if (fourCc(bytes, offset) === 'LIST')
+      Object.assign(metadata, readInfoList(bytes.subarray(start, start + size)));
+    offset = start + size + (size % 2);
+  }
+  return metadata;
+}
+
+async function requireSamples(source: ByteSource, header: WavHeader): Promise<void> {
+  const stride = header.format.bytesPerSample * header.format.channelCount;
+  const wanted = Math.min(2 * stride, header.dataBytes ?? Infinity);
+  const frames = Math.floor((await source.peek(wanted)).length / stride);
+  if (frames >= 2) return;
+  refuse(
+    frames === 0 ? 'no-samples' : 'too-few-samples',
+    frames === 0
+      ? 'The data chunk of the WAV file is empty: there are no samples in it.'
+      : 'The WAV file holds one sample per channel only; at least two are needed.',
+    'Check that the recording was stopped properly, then copy the file again.',
+  );
+}
+
+/** Reads a WAV file. Refusals travel as `Refusal`; see `readRecording` for the rules. */
+export async function readWav(source: ByteSource, args: WavArguments): Promise<ReadSuccess> {
+  const { options, sink } = args;
+  const header = await readHeader(source);
+  const channels = wavChannels(header, options);
+  source.consume(header.dataOffset);
+  await requireSamples(source, header);
+  await sink.begin(channels);
+  const counts = await readSamples(source, header, channels, sink);
+  const warnings = collectWarnings(header, counts);
+  const stated = options.sampleRateHz;
+  const own = header.format.sampleRateHz;
+  if (stated !== undefined && Math.abs(stated - own) > 0.01 * own) {
+    const message = `The sample rate given, ${stated} Hz, is used; the file itself says ${own} Hz.`;
+    warnings.push({ code: 'sample-rate-differs', message });
+  }
+  return {
+    ok: true,
+    format: 'wav',
+    sampleRateHz: stated ?? own,
+    sampleCount: counts.frames,
+    channels,
+    missingValues: counts.missing,
+    startTimeS: null,
+    warnings,
+    metadata: { ...header.metadata, ...(await readTrailer(source, header)) },
+    layout: describeWav(header),
+  };
+}
