@@ -51,7 +51,7 @@ export async function keptClusterHome(dataDirectory) {
  * @throws {LauncherError}
  */
 export async function temporaryClusterHome() {
-  for (const parent of new Set([tmpdir(), '/tmp', '/var/tmp'])) {
+  for (const parent of [tmpdir(), '/var/tmp']) {
     const directory = mkdtempSync(join(parent, 'overtally-test-'));
     const account = accountFor(directory);
     if (await canHold(directory, account)) return { directory, account };

@@ -55,21 +55,23 @@ async function runCleanups() {
  * @param {{ exitCodeOnSignal: number }} options
  */
 export function runCommand(main, { exitCodeOnSignal }) {
+  let interrupted = false;
   for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
     process.on(signal, () => {
-      if (stopping !== undefined) return;
+      if (interrupted) return;
+      interrupted = true;
       console.log('\nStopping …');
       void stop().then(() => process.exit(process.exitCode ?? exitCodeOnSignal));
     });
   }
   main().then(
     async (code) => {
-      if (stopping !== undefined) return;
+      if (interrupted) return;
       await stop();
-      process.exit(code);
+      process.exit(process.exitCode ?? code);
     },
     async (error) => {
-      if (stopping !== undefined) return;
+      if (interrupted) return;
       console.error(error instanceof LauncherError ? `\n${error.message}` : error);
       await stop();
       process.exit(1);

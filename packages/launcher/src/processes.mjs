@@ -10,6 +10,7 @@ import { onStop, refuseWhenStopping } from './lifecycle.mjs';
  * @property {number} [uid] run as this user
  * @property {number} [gid]
  * @property {'show' | 'collect' | 'discard'} [output] default `show`
+ * @property {number} [timeoutMs] end it after this time
  * @property {boolean} [finishOnStop] may run, and ends by itself, while the launcher stops
  */
 
@@ -49,19 +50,22 @@ function launch(command, args, options) {
  * @param {string[]} args
  * @param {RunOptions} [options]
  * @returns {Promise<{ code: number, output: string }>} code 127 when the program could not be started,
- *   128 when a signal ended it; output is empty unless it is collected
+ *   128 when a signal or the time limit ended it; output is empty unless it is collected
  */
 export function run(command, args, options = {}) {
   const child = launch(command, args, options);
   const forget = options.finishOnStop ? () => {} : onStop(() => endGroup(child, 5_000));
+  const limit = options.timeoutMs && setTimeout(() => void endGroup(child, 5_000), options.timeoutMs);
   let output = '';
   for (const stream of [child.stdout, child.stderr]) stream?.on('data', (chunk) => (output += String(chunk)));
   return new Promise((resolve) => {
     child.once('error', (error) => {
+      clearTimeout(limit);
       forget();
       resolve({ code: 127, output: error.message });
     });
     child.once('close', (code) => {
+      clearTimeout(limit);
       forget();
       resolve({ code: code ?? 128, output });
     });
