@@ -1,0 +1,131 @@
+import type { OrderVerdict, ReportSection, TotalVerdict } from '@overtally/contracts';
+import { formatList, formatPercent, formatQuantity, formatShare } from './format.js';
+import type { Sheet } from './sheet.js';
+import { drawTable, type Cell, type Column } from './table.js';
+import { text, tinted } from './theme.js';
+import { isOver, orderResultName, resultColour } from './words.js';
+
+const rowHeight = 14.5;
+
+const figure = (content: string, over = false, colour?: string): Cell => ({
+  text: content,
+  style: over && colour ? tinted(text.figureStrong, colour) : text.figure,
+});
+
+/** Every order against its limit: value, part of the fundamental, highest 1.5 s value, limit, share, result. */
+export function drawOrderTable(sheet: Sheet, section: ReportSection): void {
+  const { orders, unit } = section.verdict;
+  if (orders.length === 0) return;
+  const withUncertainty = orders.some((entry) => entry.uncertainty !== null);
+  sheet.heading('Orders against their limits', 60);
+  drawTable(sheet, orderColumns(withUncertainty), orderRows(section, unit, withUncertainty), { rowHeight });
+  drawRemarks(sheet, orders);
+}
+
+function orderColumns(withUncertainty: boolean): Column[] {
+  const right = (header: string, share: number): Column => ({ header, share, align: 'right' });
+  return [
+    right('Order', 0.7),
+    right('Value', 1.3),
+    ...(withUncertainty ? [right('±, k = 2', 1.2)] : []),
+    right('Of fundamental', 1.25),
+    right('Highest 1.5 s', 1.3),
+    right('Limit', 1.3),
+    right('Share', 1.2),
+    { header: 'Result', share: 1.35 },
+  ];
+}
+
+function orderRows({ verdict, analysis }: ReportSection, unit: string, withUncertainty: boolean): Cell[][] {
+  const parts = new Map(analysis.channel.harmonics.map((each) => [each.order, each.percentOfFundamental]));
+  const { fundamental } = analysis.channel;
+  const none = figure('–');
+  const first =
+    fundamental === null
+      ? []
+      : [
+          [
+            figure('1'),
+            figure(formatQuantity(fundamental.rms, unit)),
+            ...(withUncertainty ? [none] : []),
+            figure(formatPercent(100)),
+            none,
+            none,
+            none,
+            { text: 'fundamental', style: tinted(text.cell, text.soft.colour) },
+          ],
+        ];
+  const judged = verdict.orders.map((entry) => {
+    const colour = resultColour(entry.result);
+    return [
+      figure(String(entry.order), isOver(entry.result), colour),
+      figure(formatQuantity(entry.mean, unit)),
+      ...(withUncertainty ? [figure(formatQuantity(entry.uncertainty, unit, 2))] : []),
+      figure(formatPercent(parts.get(entry.order))),
+      figure(formatQuantity(entry.smoothedMax, unit)),
+      figure(formatQuantity(entry.limit, unit)),
+      figure(formatShare(entry.sharePercent), isOver(entry.result), colour),
+      resultCell(entry.result),
+    ];
+  });
+  return [...first, ...judged];
+}
+
+const resultCell = (result: OrderVerdict['result']): Cell => ({
+  text: orderResultName(result),
+  style: tinted(isOver(result) ? text.cellStrong : text.cell, resultColour(result)),
+});
+
+/** Reasons that the columns do not show: a relief, an open decision, an order left out. */
+function drawRemarks(sheet: Sheet, orders: readonly OrderVerdict[]): void {
+  const byReason = new Map<string, number[]>();
+  for (const { order, reason, result, sharePercent } of orders) {
+    const decided = result === 'pass' || result === 'fail';
+    const shown = decided && (result === 'pass') === (sharePercent ?? 0) <= 100;
+    if (reason === null || shown) continue;
+    byReason.set(reason, [...(byReason.get(reason) ?? []), order]);
+  }
+  sheet.y += 4;
+  for (const [reason, at] of byReason) {
+    sheet.room(14);
+    sheet.paragraph(`Order ${formatList(at, 8)}: ${reason}`, text.soft);
+  }
+}
+
+const totalNames: Record<string, string> = {
+  THD: 'THD, total harmonic distortion',
+  THC: 'THC, total harmonic current',
+  POHC: 'POHC, partial odd harmonic current',
+  PWHC: 'PWHC, partial weighted harmonic current',
+  TDD: 'TDD, total demand distortion',
+};
+
+/** Totals such as THD against their limits. */
+export function drawTotals(sheet: Sheet, totals: readonly TotalVerdict[]): void {
+  if (totals.length === 0) return;
+  sheet.heading('Totals', 40);
+  drawTable(
+    sheet,
+    [
+      { header: 'Total', share: 3.2 },
+      { header: 'Value', share: 1.3, align: 'right' },
+      { header: 'Limit', share: 1.3, align: 'right' },
+      { header: 'Share', share: 1.2, align: 'right' },
+      { header: 'Result', share: 2 },
+    ],
+    totals.map((total) => [
+      { text: totalNames[total.name] ?? total.name },
+      figure(formatQuantity(total.value, total.unit)),
+      figure(formatQuantity(total.limit, total.unit)),
+      figure(formatShare(total.sharePercent), isOver(total.result), resultColour(total.result)),
+      totalResult(total),
+    ]),
+    {},
+  );
+}
+
+function totalResult(total: TotalVerdict): Cell {
+  if (total.limit === null)
+    return { text: total.reason ?? 'no limit', style: tinted(text.cell, text.soft.colour) };
+  return resultCell(total.result);
+}

@@ -1,0 +1,107 @@
+import type { ImportOptions, ReportSection, Settings } from '@overtally/contracts';
+import { formatCount, formatGiven, formatMoment } from './format.js';
+import type { Sheet } from './sheet.js';
+import { drawTable, type Cell } from './table.js';
+import { text, tinted } from './theme.js';
+import { confidenceName, profileName } from './words.js';
+
+/** Where every figure of a section comes from, so that it can be computed again. */
+export function drawProvenance(sheet: Sheet, section: ReportSection): void {
+  sheet.heading('Provenance', 50);
+  const rows = provenanceRows(section).map(([name, value, mono]): Cell[] => [
+    { text: name, style: tinted(text.cell, text.soft.colour) },
+    { text: value, style: mono ? text.figure : text.cell },
+  ]);
+  drawTable(
+    sheet,
+    [
+      { header: 'What', share: 1 },
+      { header: 'As stored', share: 3.6 },
+    ],
+    rows,
+  );
+}
+
+type Row = [name: string, value: string, mono?: boolean];
+
+function provenanceRows({ recording, analysis, verdict }: ReportSection): Row[] {
+  const { limitSet } = verdict;
+  const edition = [limitSet.standard, limitSet.edition, limitSet.tableRef]
+    .filter((part) => part !== '')
+    .join(', ');
+  const parameters = Object.entries(verdict.parameters);
+  return [
+    ['Source file', `${recording.file.name}, ${formatCount(recording.file.size)} bytes`],
+    ['SHA-256 of the file', recording.file.sha256, true],
+    ['Import options', importWords(recording.import)],
+    ...Object.entries(recording.metadata).map(([name, value]): Row => [`From the file: ${name}`, value]),
+    ['Analysis', analysis.id, true],
+    ['Engine version', analysis.engineVersion ?? '–', true],
+    ['Finished', formatMoment(analysis.finishedAt)],
+    ['Settings', settingsWords(analysis.settings)],
+    ['Verdict', verdict.id, true],
+    ['Judged by', `${verdict.author.name}, ${formatMoment(verdict.createdAt)}`],
+    ['Limit set', `${limitSet.title} (${limitSet.id}, version ${limitSet.version})`],
+    ['Edition', edition === '' ? '–' : edition],
+    ['Source of the limits', limitSet.source.join('; ') || '–'],
+    [
+      'Confidence in the limits',
+      `${confidenceName(limitSet.confidence)}${limitSet.evidence ? `: ${limitSet.evidence}` : ''}`,
+    ],
+    ...limitSet.notes.map((note): Row => ['Note to the limits', note]),
+    ['Parameters', parameters.length === 0 ? 'none' : parameters.map(parameterWords).join(', ')],
+  ];
+}
+
+const parameterUnits: Record<string, [name: string, unit: string]> = {
+  powerW: ['active power', 'W'],
+  powerFactor: ['power factor', ''],
+  iscOverIl: ['Isc/IL', ''],
+  ilA: ['IL', 'A'],
+  rsce: ['Rsce', ''],
+  irefA: ['Iref', 'A'],
+  nominalV: ['nominal voltage', 'V'],
+  expandedUncertaintyPercent: ['expanded uncertainty (k = 2)', '%'],
+};
+
+function parameterWords([key, value]: [string, number]): string {
+  const [name, unit] = parameterUnits[key] ?? [key, ''];
+  return `${name} ${formatGiven(value)}\u00a0${unit}`.trimEnd();
+}
+
+function settingsWords(settings: Settings): string {
+  const { nominalFrequencyHz: nominal, span } = settings;
+  return [
+    profileName(settings.profile),
+    nominal === 'auto' ? 'fundamental searched' : `nominal frequency ${formatGiven(nominal)} Hz`,
+    settings.window && `${settings.window} window for the drawn spectrum`,
+    settings.cyclesPerWindow && `${settings.cyclesPerWindow} cycles per window`,
+    settings.maxOrder && `orders up to ${settings.maxOrder}`,
+    settings.thdMaxOrder && `THD up to order ${settings.thdMaxOrder}`,
+    span && `from ${formatGiven(span.fromS)} s to ${formatGiven(span.toS)} s`,
+  ]
+    .filter((part) => typeof part === 'string')
+    .join('; ');
+}
+
+const delimiterNames = { ',': 'comma', ';': 'semicolon', '\t': 'tab', ' ': 'space', '|': 'bar' } as const;
+
+function importWords(options: ImportOptions): string {
+  const columns = options.channels?.map(
+    ({ column, gain, offset, unit }) =>
+      `column ${column}${gain === undefined ? '' : ` × ${formatGiven(gain)}`}${
+        offset === undefined ? '' : ` + ${formatGiven(offset)}`
+      }${unit ? ` in ${unit}` : ''}`,
+  );
+  const parts = [
+    options.sampleRateHz !== undefined && `sample rate ${formatGiven(options.sampleRateHz)} Hz`,
+    options.delimiter && `delimiter ${delimiterNames[options.delimiter]}`,
+    options.decimal && `decimal ${options.decimal === ',' ? 'comma' : 'point'}`,
+    options.headerRows !== undefined && `${options.headerRows} header rows`,
+    options.timeColumn !== undefined &&
+      (options.timeColumn === null ? 'no time column' : `time in column ${options.timeColumn}`),
+    options.timeUnit && `time in ${options.timeUnit}`,
+    columns?.join(', '),
+  ].filter((part) => typeof part === 'string');
+  return parts.length === 0 ? 'all detected' : `${parts.join('; ')}; the rest detected`;
+}
