@@ -9,6 +9,10 @@ import { ProblemFilter } from './common/problem.filter.js';
 import { AppConfig } from './config/app-config.js';
 import { ConfigModule } from './config/config.module.js';
 import { DatabaseModule } from './database/database.module.js';
+import { HealthModule } from './health/health.module.js';
+import { HttpModule } from './http/http.module.js';
+import { ProjectsModule } from './projects/projects.module.js';
+import { UsersModule } from './users/users.module.js';
 
 /** The whole application. Order matters where modules bring middleware: logs, then sessions. */
 @Module({})
@@ -22,6 +26,10 @@ export class AppModule {
         DatabaseModule,
         AccessModule,
         AuthModule,
+        UsersModule,
+        ProjectsModule,
+        HealthModule,
+        HttpModule,
       ],
       providers: [
         { provide: APP_FILTER, useClass: ProblemFilter },

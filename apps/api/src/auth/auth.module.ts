@@ -8,9 +8,19 @@ import {
 import type pg from 'pg';
 import { AppConfig } from '../config/app-config.js';
 import { POOL } from '../database/database.tokens.js';
+import { AccountSessions } from './account-sessions.js';
+import { AccountsRepository } from './accounts.repository.js';
+import { AuthController } from './auth.controller.js';
+import { AuthService } from './auth.service.js';
+import { PasswordHasher } from './password-hasher.js';
+import { SignInLimits } from './sign-in-limits.js';
 import { makeSessionStore, sessionMiddleware } from './session.middleware.js';
 
-@Module({})
+@Module({
+  controllers: [AuthController],
+  providers: [AuthService, AccountsRepository, AccountSessions, PasswordHasher, SignInLimits],
+  exports: [AccountSessions, PasswordHasher],
+})
 export class AuthModule implements NestModule, OnModuleDestroy {
   private readonly store: ReturnType<typeof makeSessionStore>;
 
