@@ -1,0 +1,36 @@
+export { analyseRecord, engineVersion } from './analyse-record.js';
+export { AnalysisInputError, AnalysisStopped } from './errors.js';
+export type * from './types.js';
+export { createComplexFftPlan, type ComplexFftPlan } from './fft/complex-fft-plan.js';
+export { createRealFftPlan, type RealFftPlan } from './fft/real-fft-plan.js';
+export { windowSamples, type WindowName } from './windows/window-samples.js';
+export { windowFigures, type WindowFigures } from './windows/window-figures.js';
+export { amplitudeSpectrum, type SpectrumOptions } from './spectrum/amplitude-spectrum.js';
+export {
+  findFundamental,
+  type FundamentalEstimate,
+  type FundamentalOptions,
+} from './fundamental/find-fundamental.js';
+export { frequencyTrack, type FrequencyTrack } from './fundamental/frequency-track.js';
+export { fitSinusoids, wrapDegrees, type FittedSinusoid, type SinusoidFit } from './model/fit-sinusoids.js';
+export { fitHarmonics, type FittedHarmonic, type HarmonicFit } from './harmonics/fit-harmonics.js';
+export { zeroCrossingPhase } from './harmonics/zero-crossing-phase.js';
+export { synthesise, type SynthesisComponent } from './harmonics/synthesise.js';
+export { crestFactor } from './figures/crest-factor.js';
+export { formFactor } from './figures/form-factor.js';
+export { thdF, thdR } from './figures/distortion.js';
+export { toneFigures, type ToneResult } from './figures/tone-figures.js';
+export { waveformFigures, type WaveformFigures } from './figures/waveform-figures.js';
+export { windowBoundaries } from './groups/window-boundaries.js';
+export {
+  synchronousWindows,
+  type SynchronousWindowOptions,
+  type SynchronousWindows,
+} from './groups/synchronous-windows.js';
+export {
+  centredSubgroups,
+  harmonicGroups,
+  harmonicSubgroups,
+  interharmonicGroups,
+} from './groups/grouping.js';
+export { smooth, smoothingAlpha } from './groups/smooth.js';

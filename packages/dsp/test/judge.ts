@@ -1,0 +1,53 @@
+import type { Expected, Nested } from './reference-cases.js';
+
+/** What is wrong with a result, or null: the comparison that fixtures/reference/SOURCE.md describes. */
+export function judge(expected: Expected, got: unknown): string | null {
+  switch (expected.kind) {
+    case 'number':
+      return judgeNumber(expected, expected.value as number, got, false);
+    case 'angle':
+      return judgeNumber(expected, expected.value as number, got, true);
+    case 'array':
+      return judgeArray(expected, got, false);
+    case 'angles':
+      return judgeArray(expected, got, true);
+    case 'integer':
+      return got === expected.value ? null : `expected ${String(expected.value)}, got ${String(got)}`;
+    case 'flags':
+      return judgeFlags(expected, got as string[]);
+  }
+}
+
+function judgeNumber(expected: Expected, want: number, got: unknown, angle: boolean): string | null {
+  if (typeof got !== 'number' || !Number.isFinite(got)) return `expected about ${want}, got ${String(got)}`;
+  const difference = angle ? ((((got - want + 180) % 360) + 360) % 360) - 180 : got - want;
+  const limit = Math.max(expected.tol_abs ?? 0, (expected.tol_rel ?? 0) * Math.abs(want));
+  return Math.abs(difference) <= limit ? null : `expected ${want} ± ${limit}, got ${got}`;
+}
+
+function judgeArray(expected: Expected, got: unknown, angle: boolean): string | null {
+  const want = expected.value as Nested;
+  if (!Array.isArray(got) || got.length !== want.length) {
+    return `expected ${want.length} elements, got ${Array.isArray(got) ? got.length : String(got)}`;
+  }
+  const misses = want.flatMap((value, i) => {
+    if (value === null) return [];
+    const each = expected.tol_abs_each?.[i];
+    const miss = judgeNumber(
+      each === undefined ? expected : { ...expected, tol_abs: each },
+      value,
+      got[i],
+      angle,
+    );
+    return miss === null ? [] : [`[${i}] ${miss}`];
+  });
+  return misses.length === 0 ? null : misses.join('; ');
+}
+
+function judgeFlags(expected: Expected, got: string[]): string | null {
+  const missing = (expected.must ?? []).filter((m) => ![m].flat().some((name) => got.includes(name)));
+  const wrong = (expected.must_not ?? []).filter((name) => got.includes(name));
+  return missing.length + wrong.length === 0
+    ? null
+    : `missing ${missing.join()}, wrong ${wrong.join()}, got ${got.join()}`;
+}
