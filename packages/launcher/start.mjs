@@ -2,28 +2,15 @@
 import { localAddress, startApi, waitUntilHealthy } from './src/api.mjs';
 import { buildAll } from './src/build.mjs';
 import { productDatabase } from './src/database.mjs';
-import { ensureDebianPackages } from './src/debian.mjs';
-import { installWorkspace } from './src/install.mjs';
-import { takeDataDirectory } from './src/instance-lock.mjs';
 import { LauncherError, runCommand } from './src/lifecycle.mjs';
-import { requireNodeVersion } from './src/node-version.mjs';
-import { dataDirectory as openDataDirectory } from './src/paths.mjs';
-import { choosePort } from './src/ports.mjs';
+import { setUp } from './src/set-up.mjs';
 import { demoPeople, welcomeText } from './src/welcome.mjs';
 
 /** @returns {Promise<never>} it ends by a signal or a failure */
 async function start() {
-  requireNodeVersion();
-  const dataDirectory = openDataDirectory();
-  takeDataDirectory(dataDirectory);
-  const host = process.env.HOST || '127.0.0.1';
-  const port = await choosePort({ asked: process.env.PORT, fallback: 4310, host, setting: 'PORT' });
-
-  if (!process.env.DATABASE_URL) await ensureDebianPackages(['postgresql']);
-  await installWorkspace();
+  const { dataDirectory, host, port } = await setUp();
   await buildAll();
   const databaseUrl = await productDatabase(dataDirectory);
-
   const api = startApi({ databaseUrl, dataDirectory, host, port });
   const address = localAddress(host, port);
   await waitUntilHealthy(address, api);

@@ -93,7 +93,7 @@ export function startService(command, args, options = {}) {
     child.once('exit', (code) => resolve(code ?? 128));
   });
   const stopService = () => endGroup(child, options.graceMs ?? 15_000);
-  onStop(stopService);
+  void exited.then(onStop(stopService));
   return { exited, stop: stopService };
 }
 
