@@ -13,6 +13,8 @@ const SMALLEST_RATIO = 1e-28;
 export interface ToneResult extends ToneFigures {
   thdFPercent: number | null;
   thdRPercent: number | null;
+  /** Orders 2, 3, … relative to the tone; null where an order cannot be told apart after folding. */
+  harmonicsDbc: (number | null)[];
 }
 
 /**
@@ -30,8 +32,12 @@ export function toneFigures(
   fundamentalHz: number,
   maxOrder: number,
 ): ToneResult {
-  const frequencies = toneFrequencies(fundamentalHz, sampleRateHz, samples.length, maxOrder);
-  const fit = fitSinusoids(samples, sampleRateHz, frequencies);
+  const lines = toneLines(fundamentalHz, sampleRateHz, samples.length, maxOrder);
+  const fit = fitSinusoids(
+    samples,
+    sampleRateHz,
+    lines.map((line) => line.frequencyHz),
+  );
   const tone = fit.components[0]!;
   const harmonics = fit.components.slice(1);
   const power = tone.rms ** 2;
@@ -47,22 +53,28 @@ export function toneFigures(
     snrDb: ratioDb(power, nad - distortion),
     sfdrDb: ratioDb(power, largestSpur(residual, sampleRateHz, tone, harmonics)),
     enobBits: sinadDb === null ? null : (sinadDb - FULL_SCALE_SINE_DB) / DB_PER_BIT,
+    harmonicsDbc: Array.from({ length: maxOrder - 1 }, (_, i) => {
+      const at = lines.findIndex((line) => line.order === i + 2);
+      const level = at < 0 ? null : ratioDb(power, fit.components[at]!.rms ** 2);
+      return level === null ? null : -level;
+    }),
   };
 }
 
 /** The tone and its harmonics where they appear, without those that meet DC, the Nyquist line or one another. */
-function toneFrequencies(
+function toneLines(
   fundamentalHz: number,
   sampleRateHz: number,
   sampleCount: number,
   maxOrder: number,
-): number[] {
-  const lineHz = sampleRateHz / sampleCount;
-  const out = [fundamentalHz];
+): { order: number; frequencyHz: number }[] {
+  const closest = (0.9 * sampleRateHz) / sampleCount;
+  const out = [{ order: 1, frequencyHz: fundamentalHz }];
   for (let order = 2; order <= maxOrder; order++) {
-    const f = foldedFrequency(order * fundamentalHz, sampleRateHz);
-    const atEnd = f < lineHz || f > sampleRateHz / 2 - lineHz;
-    if (!atEnd && out.every((other) => Math.abs(other - f) >= lineHz)) out.push(f);
+    const frequencyHz = foldedFrequency(order * fundamentalHz, sampleRateHz);
+    const atEnd = frequencyHz < closest || frequencyHz > sampleRateHz / 2 - closest;
+    const free = out.every((other) => Math.abs(other.frequencyHz - frequencyHz) >= closest);
+    if (!atEnd && free) out.push({ order, frequencyHz });
   }
   return out;
 }

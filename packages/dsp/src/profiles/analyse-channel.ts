@@ -17,8 +17,6 @@ import { cyclesFor } from './resolve-settings.js';
 /** Reports the share of the channel that is done; throws when the caller wants to stop. */
 export type Checkpoint = (fraction: number) => void;
 
-const NO_TONE_FIGURES = { thdPlusNPercent: null, sinadDb: null, snrDb: null, sfdrDb: null, enobBits: null };
-
 /** Everything about one channel, by the profile of the settings. */
 export function analyseChannel(
   channel: ChannelInput,
@@ -75,8 +73,11 @@ export function analyseChannel(
       phaseDeg: harmonics[0]!.phaseDeg,
       frequencyUncertaintyHz: estimate.frequencyUncertaintyHz,
     },
-    ...NO_TONE_FIGURES,
-    ...tone,
+    thdPlusNPercent: tone?.thdPlusNPercent ?? null,
+    sinadDb: tone?.sinadDb ?? null,
+    snrDb: tone?.snrDb ?? null,
+    sfdrDb: tone?.sfdrDb ?? null,
+    enobBits: tone?.enobBits ?? null,
     thdFPercent: tone ? tone.thdFPercent : percent(thdF(harmonicRms, settings.thdMaxOrder)),
     thdRPercent: tone ? tone.thdRPercent : percent(thdR(harmonicRms, settings.thdMaxOrder)),
     thdMaxOrder: settings.thdMaxOrder,
