@@ -1,0 +1,28 @@
+const project = (projectId: string) => `/projects/${projectId}`;
+
+/** Addresses of all pages. */
+export const paths = {
+  signIn: (next?: string) =>
+    next && next !== '/' ? `/sign-in?next=${encodeURIComponent(next)}` : '/sign-in',
+  projects: () => '/projects',
+  account: () => '/account',
+  people: () => '/people',
+  project,
+  recordings: (projectId: string) => `${project(projectId)}/recordings`,
+  recording: (projectId: string, recordingId: string) => `${project(projectId)}/recordings/${recordingId}`,
+  overlay: (projectId: string, recordingIds: readonly string[] = []) =>
+    `${project(projectId)}/overlay${recordingIds.length > 0 ? `?r=${recordingIds.join(',')}` : ''}`,
+  limits: (projectId: string) => `${project(projectId)}/limits`,
+  limitSet: (projectId: string, limitSetId: string) =>
+    `${project(projectId)}/limits/${encodeURIComponent(limitSetId)}`,
+  reports: (projectId: string) => `${project(projectId)}/reports`,
+  report: (projectId: string, reportId: string) => `${project(projectId)}/reports/${reportId}`,
+  members: (projectId: string) => `${project(projectId)}/members`,
+  projectSettings: (projectId: string) => `${project(projectId)}/settings`,
+} as const;
+
+/** The page to return to after signing in; only addresses of this application count. */
+export function safeNext(next: string | null): string {
+  const isOwn = next !== null && /^\/(?![/\\])/.test(next);
+  return isOwn ? next : paths.projects();
+}

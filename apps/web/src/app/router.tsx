@@ -1,0 +1,43 @@
+import { createBrowserRouter, type RouteObject } from 'react-router-dom';
+import { RouteProblem } from './layouts/route-problem.js';
+import { StartingUp } from './layouts/starting-up.js';
+import { projectRoutes } from './project-routes.js';
+
+/** All pages; each is fetched when it is first visited. */
+export const routes: RouteObject[] = [
+  {
+    path: '/sign-in',
+    lazy: () => import('./routes/sign-in.js'),
+    HydrateFallback: StartingUp,
+    ErrorBoundary: RouteProblem,
+  },
+  {
+    path: '/',
+    lazy: () => import('./layouts/signed-in.js'),
+    HydrateFallback: StartingUp,
+    ErrorBoundary: RouteProblem,
+    children: [
+      { index: true, lazy: () => import('./routes/home.js') },
+      {
+        lazy: () => import('./layouts/general.js'),
+        children: [
+          { path: 'projects', lazy: () => import('./routes/projects.js') },
+          { path: 'account', lazy: () => import('./routes/account.js') },
+          { path: 'people', lazy: () => import('./routes/people.js') },
+          { path: '*', lazy: () => import('./routes/not-found.js') },
+        ],
+      },
+      {
+        path: 'projects/:projectId',
+        lazy: () => import('./layouts/project.js'),
+        children: [
+          { index: true, lazy: () => import('./routes/project/home.js') },
+          ...projectRoutes,
+          { path: '*', lazy: () => import('./routes/not-found.js') },
+        ],
+      },
+    ],
+  },
+];
+
+export const createRouter = () => createBrowserRouter(routes);

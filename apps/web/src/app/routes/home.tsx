@@ -1,0 +1,4 @@
+import { redirect } from 'react-router-dom';
+import { paths } from '../paths.js';
+
+export const loader = () => redirect(paths.projects());

@@ -1,0 +1,5 @@
+import { requestEmpty } from '../../../lib/http.js';
+
+export function signOut(): Promise<void> {
+  return requestEmpty('/auth/sign-out', { method: 'POST' });
+}

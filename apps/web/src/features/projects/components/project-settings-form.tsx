@@ -1,0 +1,62 @@
+import { Button, Input, Stack, Textarea } from '@chakra-ui/react';
+import { zodResolver } from '@hookform/resolvers/zod';
+import type { LimitSet, Project } from '@overtally/contracts';
+import { useForm } from 'react-hook-form';
+import { FormField } from '../../../components/form-field.js';
+import { FormProblem } from '../../../components/form-problem.js';
+import { notifyDone } from '../../../components/notify.js';
+import { Section } from '../../../components/section.js';
+import { setFormProblem } from '../../../lib/form-errors.js';
+import { useUpdateProject } from '../hooks/use-update-project.js';
+import { projectFormSchema, toForm, toUpdate } from '../settings-form-values.js';
+import { AnalysisDefaults } from './analysis-defaults.js';
+
+interface ProjectSettingsFormProps {
+  project: Project;
+  limitSets: readonly LimitSet[];
+}
+
+/** Name, customer, and how new recordings are analysed and compared. */
+export function ProjectSettingsForm({ project, limitSets }: ProjectSettingsFormProps) {
+  const form = useForm({ resolver: zodResolver(projectFormSchema), defaultValues: toForm(project) });
+  const { errors, isDirty } = form.formState;
+  const update = useUpdateProject(project.id);
+  const save = form.handleSubmit((values) =>
+    update.mutate(toUpdate(project, values), {
+      onSuccess: (saved) => {
+        form.reset(toForm(saved));
+        notifyDone('Project saved');
+      },
+      onError: (error) => setFormProblem(form, error),
+    }),
+  );
+  return (
+    <form noValidate onSubmit={save}>
+      <Section title="Project">
+        <Stack gap="4" maxW="lg">
+          <FormField label="Name" error={errors.name?.message}>
+            <Input autoComplete="off" {...form.register('name')} />
+          </FormField>
+          <FormField
+            label="Customer"
+            optional
+            error={errors.customer?.message}
+            help="For whom the work is done."
+          >
+            <Input autoComplete="off" {...form.register('customer')} />
+          </FormField>
+          <FormField label="Description" optional error={errors.description?.message}>
+            <Textarea rows={4} {...form.register('description')} />
+          </FormField>
+        </Stack>
+      </Section>
+      <AnalysisDefaults form={form} limitSets={limitSets} />
+      <Stack gap="3" align="flex-start" mb="10">
+        <FormProblem message={errors.root?.message} />
+        <Button type="submit" variant="solid" loading={update.isPending} disabled={!isDirty}>
+          Save project
+        </Button>
+      </Stack>
+    </form>
+  );
+}
