@@ -19,28 +19,20 @@ import { sessionSecret } from './session-secret.mjs';
  * @param {ApiOptions} options
  */
 export function startApi({ databaseUrl, dataDirectory, host, port }) {
-  return startService(
-    process.execPath,
-    ['--enable-source-maps', join(rootDirectory, 'apps/api/dist/main.js')],
-    {
-      cwd: rootDirectory,
-      env: {
-        DEMO: 'on',
-        LOG_FORMAT: 'pretty',
-        WEB_DIST: join(rootDirectory, 'apps/web/dist'),
-        ...process.env,
-        DATABASE_URL: databaseUrl,
-        DATA_DIR: dataDirectory,
-        HOST: host,
-        PORT: String(port),
-        PUBLIC_URL: process.env.PUBLIC_URL || localAddress(host, port),
-        WEB_DIST: process.env.WEB_DIST || join(rootDirectory, 'apps/web/dist'),
-        DEMO: process.env.DEMO || 'on',
-        LOG_FORMAT: process.env.LOG_FORMAT || 'pretty',
-        SESSION_SECRET: sessionSecret(dataDirectory),
-      },
-    },
-  );
+  const main = join(rootDirectory, 'apps/api/dist/main.js');
+  const env = {
+    ...process.env,
+    DATABASE_URL: databaseUrl,
+    DATA_DIR: dataDirectory,
+    HOST: host,
+    PORT: String(port),
+    PUBLIC_URL: process.env.PUBLIC_URL || localAddress(host, port),
+    WEB_DIST: process.env.WEB_DIST || join(rootDirectory, 'apps/web/dist'),
+    DEMO: process.env.DEMO || 'on',
+    LOG_FORMAT: process.env.LOG_FORMAT || 'pretty',
+    SESSION_SECRET: sessionSecret(dataDirectory),
+  };
+  return startService(process.execPath, ['--enable-source-maps', main], { cwd: rootDirectory, env });
 }
 
 /**

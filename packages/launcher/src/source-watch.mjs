@@ -1,5 +1,5 @@
 /** Tells when the sources of the server or of a package have changed. */
-import { readdirSync, statSync } from 'node:fs';
+import { existsSync, readdirSync, statSync } from 'node:fs';
 import { join } from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
 import { workspaceFolders } from './install.mjs';
@@ -15,14 +15,13 @@ function watchedFolders() {
 
 /**
  * @param {string} folder
- * @returns {string[]} `path time` of every file below it
+ * @returns {string[]} `path time` of every file below it; files that vanish meanwhile are left out
  */
 function stamps(folder) {
-  return readdirSync(folder, { withFileTypes: true }).flatMap((entry) => {
-    const path = join(folder, entry.name);
-    if (entry.isDirectory()) return stamps(path);
-    const found = statSync(path, { throwIfNoEntry: false });
-    return found === undefined ? [] : [`${path} ${found.mtimeMs}`];
+  if (!existsSync(folder)) return [];
+  return readdirSync(folder, { recursive: true, encoding: 'utf8' }).flatMap((name) => {
+    const found = statSync(join(folder, name), { throwIfNoEntry: false });
+    return found?.isFile() ? [`${folder}/${name} ${found.mtimeMs}`] : [];
   });
 }
 
