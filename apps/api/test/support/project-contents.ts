@@ -1,0 +1,109 @@
+import type { LimitSet } from '@overtally/contracts';
+import { schema, type Database } from '@overtally/db';
+import { made } from './factories.js';
+
+/** What rows of a project hang on: whose they are and where. */
+export interface Owner {
+  projectId: string;
+  userId: string;
+}
+
+let lastNumber = 0;
+
+/** A recording that was received and not read yet; no file lies in storage. */
+export async function newRecording(database: Database, { projectId, userId }: Owner) {
+  lastNumber += 1;
+  const [row] = await database
+    .insert(schema.recordings)
+    .values({
+      projectId,
+      number: 100_000 + lastNumber,
+      name: 'Input current',
+      fileName: 'current.csv',
+      fileSize: 12,
+      fileSha256: '0'.repeat(64),
+      sourceKey: `sources/${'0'.repeat(64)}`,
+      uploadedById: userId,
+    })
+    .returning();
+  return made(row);
+}
+
+/** A queued analysis. */
+export async function newAnalysis(database: Database, recordingId: string, { userId }: Owner) {
+  const settings = { profile: 'mains', nominalFrequencyHz: 50 } as const;
+  const [row] = await database
+    .insert(schema.analyses)
+    .values({ recordingId, settings, startedById: userId })
+    .returning();
+  return made(row);
+}
+
+export async function newNote(database: Database, analysisId: string, { userId }: Owner) {
+  const [row] = await database
+    .insert(schema.notes)
+    .values({ analysisId, channelIndex: 0, kind: 'order', order: 5, text: 'Six-pulse', authorId: userId })
+    .returning();
+  return made(row);
+}
+
+export async function newVerdict(database: Database, analysisId: string, { userId }: Owner) {
+  const [row] = await database
+    .insert(schema.verdicts)
+    .values({
+      analysisId,
+      channelIndex: 0,
+      limitSetId: 'bench.fifth',
+      limitSet: { ...limits, id: 'bench.fifth', projectId: null },
+      parameters: {},
+      decisionRule: 'simple-acceptance',
+      decisionRuleText: 'Within the limit is a pass',
+      result: 'pass',
+      reason: 'Every order is within its limit',
+      orders: [],
+      totals: [],
+      authorId: userId,
+    })
+    .returning();
+  return made(row);
+}
+
+export async function newLimitSet(database: Database, { projectId, userId }: Owner) {
+  const [row] = await database
+    .insert(schema.limitSets)
+    .values({ projectId, definition: limits, createdById: userId })
+    .returning();
+  return made(row);
+}
+
+/** A draft that speaks of one verdict. */
+export async function newReport(database: Database, verdictId: string, { projectId, userId }: Owner) {
+  const [row] = await database
+    .insert(schema.reports)
+    .values({ projectId, title: 'Harmonic currents', preparedById: userId })
+    .returning();
+  const report = made(row);
+  await database.insert(schema.reportVerdicts).values({ reportId: report.id, verdictId, position: 0 });
+  return report;
+}
+
+const limits: Omit<LimitSet, 'id' | 'projectId'> = {
+  version: 1,
+  title: 'Fifth order on the bench',
+  standard: '',
+  edition: '',
+  tableRef: '',
+  appliesWhen: '',
+  quantity: 'current',
+  unit: 'A',
+  basis: 'absolute',
+  referenceParameter: null,
+  procedure: 'plain',
+  parameters: [],
+  orders: [{ order: 5, limit: 1 }],
+  totals: [],
+  source: ['Made for the tests'],
+  confidence: 'low',
+  evidence: '',
+  notes: [],
+};
