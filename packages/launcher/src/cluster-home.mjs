@@ -52,7 +52,7 @@ export async function keptClusterHome(dataDirectory) {
  */
 export async function temporaryClusterHome() {
   for (const parent of [tmpdir(), '/var/tmp']) {
-    const directory = mkdtempSync(join(parent, 'overtally-test-'));
+    const directory = mkdtempSync(join(parent, 'overtally-cluster-'));
     const account = accountFor(directory);
     if (await canHold(directory, account)) return { directory, account };
     rmSync(directory, { recursive: true });

@@ -41,8 +41,9 @@ export async function ensureDebianPackages(wanted) {
   const installed = await run(...asRoot(root, ['env', 'DEBIAN_FRONTEND=noninteractive', ...install]), {
     output: 'collect',
   });
-  if (installed.code !== 0)
+  if (installed.code !== 0 || !missing.every((name) => isPresent[name]())) {
     throw new LauncherError(`apt-get install failed:\n${installed.output}\n${byHand}`);
+  }
 }
 
 /**

@@ -35,7 +35,7 @@ export async function installWorkspace() {
   const { code } = await pnpm(['install', '--frozen-lockfile', '--reporter=append-only', '--loglevel=warn']);
   if (code !== 0) {
     throw new LauncherError(
-      'The packages could not be installed (see above). The first start needs the npm registry; run the command again when it can be reached.',
+      'The packages could not be installed (see above). This step needs to reach the npm registry.',
     );
   }
   writeFileSync(marker, state);
