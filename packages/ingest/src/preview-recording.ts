@@ -1,13 +1,13 @@
 import { bareCell, cellKind, cellNumber } from './csv/cell.js';
 import { decodeText, guessEncoding } from './csv/encoding.js';
 import { splitCells, splitLines } from './csv/lines.js';
-import { type CsvPlan, describeLayout, planCsv, requireSampleRate } from './csv/read-csv.js';
+import { type CsvPlan, describeLayout, planCsv, requireSampleRate } from './csv/plan.js';
 import { parseStamp } from './csv/time-stamp.js';
 import { refuseKnownBinary } from './known-binary.js';
 import { catchRefusal, refuse } from './refusal.js';
 import type { ImportOptions, PreviewArguments, PreviewOutcome, Problem } from './types.js';
 import { isWav, readWavHeader } from './wav/header.js';
-import { describeWav, wavChannels } from './wav/read-wav.js';
+import { describeWav, wavChannels } from './wav/layout.js';
 import { decoderOf } from './wav/samples.js';
 
 const PREVIEW_LINES = 30;

@@ -41,6 +41,7 @@ const PLAIN: Record<string, Quantity> = {
   FS: 'dimensionless',
   '°C': 'other',
   K: 'other',
+  kg: 'other',
   dB: 'other',
   rpm: 'other',
   '1/min': 'other',
@@ -95,7 +96,8 @@ export function unitMeaning(written: string): UnitMeaning | null {
     .trim()
     .replace(/[µμ]/g, 'u')
     .replace(/s\^?2$|s\*\*2$|_s2$/, (end) => (end.startsWith('_') ? '/s²' : 's²'));
-  const unit = SPELLINGS[tidy.toLowerCase()] ?? tidy;
+  const word = tidy.toLowerCase();
+  const unit = Object.hasOwn(SPELLINGS, word) ? (SPELLINGS[word] as string) : tidy;
   if (Object.hasOwn(PLAIN, unit)) return { base: unit, factor: 1, quantity: PLAIN[unit] as Quantity };
   if (Object.hasOwn(PREFIXED, unit)) return { base: unit, factor: 1, quantity: PREFIXED[unit] as Quantity };
   const base = unit.slice(1);

@@ -1,4 +1,5 @@
 import { readFileSync } from 'node:fs';
+import { Readable } from 'node:stream';
 import { type ImportOptions, readRecording, type ReadChannel, type ReadOutcome } from '../src/index.js';
 
 /** Bytes of a file under `fixtures/readers`. */
@@ -6,8 +7,10 @@ export function fixture(name: string): Uint8Array {
   return new Uint8Array(readFileSync(new URL(`../../../fixtures/readers/${name}`, import.meta.url)));
 }
 
-export async function* inChunks(bytes: Uint8Array, size = 65536): AsyncGenerator<Uint8Array> {
-  for (let i = 0; i < bytes.length; i += size) yield bytes.subarray(i, i + size);
+/** `bytes` as a stream of chunks of `size`. */
+export function inChunks(bytes: Uint8Array, size = 65536): AsyncIterable<Uint8Array> {
+  const count = Math.ceil(bytes.length / size);
+  return Readable.from(Array.from({ length: count }, (_, i) => bytes.subarray(i * size, (i + 1) * size)));
 }
 
 export interface Reading {

@@ -3,8 +3,9 @@ import type { DecimalMark, Delimiter, ImportOptions } from '../types.js';
 import { cellKind } from './cell.js';
 import { splitCells } from './lines.js';
 
-const SNIFFED_LINES = 300;
+const SNIFFED_LINES = 200;
 const RUN = 4;
+const TIE = 0.02;
 const DELIMITERS: Delimiter[] = ['\t', ';', ',', '|', ' '];
 
 /** How the cells of a table are written, and where its numbers begin. */
@@ -21,6 +22,15 @@ export interface Dialect {
 
 interface Candidate extends Dialect {
   score: number;
+  hasHeader: boolean;
+  headerFits: boolean;
+}
+
+/** Several columns before one (1,2 are two numbers unless the header says one), then the share of numbers, then width. */
+function byPreference(a: Candidate, b: Candidate): number {
+  const several = (one: Candidate) => Number(one.columnCount > 1 && one.headerFits && one.score > 0.6);
+  const score = Math.abs(a.score - b.score) > TIE ? b.score - a.score : 0;
+  return several(b) - several(a) || score || b.columnCount - a.columnCount;
 }
 
 function withoutTrailingBlanks(cells: string[]): string[] {
@@ -41,7 +51,8 @@ function dataShare(cells: string[], decimal: DecimalMark): number {
     numeric += weight;
     if (i === 0) first = kind === 'missing' || kind === 'blank' ? 0.5 : weight;
   });
-  const share = filled === 0 ? 0 : numeric / filled;
+  if (filled === 0) return cells.some((cell) => /[a-z#]/i.test(cell)) ? 0.5 : 0;
+  const share = numeric / filled;
   return (first > 0 && share >= 0.5) || share > 0.5 ? share : 0;
 }
 
@@ -69,6 +80,16 @@ function findBody(shares: number[], filled: boolean[], stated: number | undefine
   return -1;
 }
 
+/**
+ * Rows of nothing but numbers before the run belong to the table too: a line of text between them and the run must
+ * not make them vanish with the header.
+ */
+function includeEarlier(run: number, columnCount: number, widths: number[], shares: number[]): number {
+  const isRow = (i: number) => widths[i] === columnCount && shares[i] === 1;
+  const earlier = widths.findIndex((_, i) => i < run && isRow(i) && (columnCount > 1 || isRow(i + 1)));
+  return earlier < 0 ? run : earlier;
+}
+
 function evaluate(
   lines: string[],
   delimiter: Delimiter,
@@ -78,15 +99,20 @@ function evaluate(
   const rows = lines.map((line) => splitCells(line, delimiter));
   const filled = rows.map((cells) => cells.some((cell) => cell !== ''));
   const shares = rows.map((cells) => dataShare(cells, decimal));
-  const bodyLine = findBody(shares, filled, options.headerRows);
-  if (bodyLine < 0) return null;
-  const body = rows.map((cells, i) => ({ cells, share: shares[i] ?? 0 })).slice(bodyLine);
-  const used = body.filter((_, i) => filled[i + bodyLine]);
+  const run = findBody(shares, filled, options.headerRows);
+  if (run < 0) return null;
+  const widths = rows.map((cells) => withoutTrailingBlanks(cells).length);
+  const used = widths
+    .map((width, i) => ({ width, share: shares[i] ?? 0 }))
+    .filter((_, i) => i >= run && filled[i]);
   if (used.length === 0) return null;
-  const columnCount = mostFrequent(used.map(({ cells }) => withoutTrailingBlanks(cells).length));
-  const fits = used.filter(({ cells }) => withoutTrailingBlanks(cells).length === columnCount);
+  const columnCount = mostFrequent(used.map(({ width }) => width));
+  const fits = used.filter(({ width }) => width === columnCount);
   const score = fits.reduce((sum, { share }) => sum + share, 0) / used.length;
-  if (score < 0.25) return null;
+  const bodyLine = options.headerRows ?? includeEarlier(run, columnCount, widths, shares);
+  // One number after lines of text is no table.
+  const lone = used.length === 1 && columnCount === 1 && bodyLine > 1 && options.headerRows === undefined;
+  if (score < 0.25 || lone) return null;
   const header = rows.slice(0, bodyLine).findLast((_, i) => filled[i]);
   const headerFits = header === undefined || withoutTrailingBlanks(header).length === columnCount;
   return {
@@ -96,7 +122,16 @@ function evaluate(
     columnCount,
     ambiguous: false,
     score: score + (headerFits ? 0.1 : 0),
+    hasHeader: header !== undefined,
+    headerFits,
   };
+}
+
+/** Delimiters that occur in the lines, and one more that stands for a single column. */
+function delimitersIn(lines: string[]): Delimiter[] {
+  const text = lines.join('\n');
+  const found = DELIMITERS.filter((delimiter) => text.includes(delimiter));
+  return found.includes(';') ? found : [...found, ';'];
 }
 
 /** A comma as decimal mark with commas as delimiter is possible only where the cells are quoted. */
@@ -113,21 +148,19 @@ function isPossible(delimiter: Delimiter, decimal: DecimalMark, lines: string[])
 export function sniffDialect(allLines: string[], options: ImportOptions): Dialect | null {
   const lines = allLines.slice(0, SNIFFED_LINES + (options.headerRows ?? 0));
   const candidates: Candidate[] = [];
-  for (const delimiter of options.delimiter === undefined ? DELIMITERS : [options.delimiter]) {
+  for (const delimiter of options.delimiter === undefined ? delimitersIn(lines) : [options.delimiter]) {
     for (const decimal of options.decimal === undefined ? (['.', ','] as const) : [options.decimal]) {
       if (!isPossible(delimiter, decimal, lines)) continue;
       const candidate = evaluate(lines, delimiter, decimal, options);
       if (candidate !== null) candidates.push(candidate);
     }
   }
-  candidates.sort((a, b) =>
-    Math.abs(a.score - b.score) > 0.02 ? b.score - a.score : b.columnCount - a.columnCount,
-  );
+  candidates.sort(byPreference);
   const [best, second] = candidates;
   if (best === undefined) return null;
   const rival =
-    second !== undefined && best.score - second.score <= 0.02 && second.delimiter !== best.delimiter;
-  return { ...best, ambiguous: rival && second.columnCount > 1 };
+    second !== undefined && second.delimiter !== best.delimiter && best.score - second.score <= TIE;
+  return { ...best, ambiguous: rival && (second.columnCount > 1 || !best.hasHeader) };
 }
 
 /** Refuses a table whose header names half as many columns as its rows hold: decimal commas between comma cells. */

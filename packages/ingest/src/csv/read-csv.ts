@@ -1,40 +1,20 @@
 import { ByteSource } from '../byte-source.js';
-import { checkSampleRateOption, selectChannels } from '../channels.js';
 import { refuse } from '../refusal.js';
-import type {
-  DetectedLayout,
-  ImportOptions,
-  ReadChannel,
-  ReadSuccess,
-  ReadWarning,
-  SampleSink,
-} from '../types.js';
-import { decodeText, guessEncoding, type TextEncoding, looksBinary, utf16ToUtf8 } from './encoding.js';
-import { type CsvLayout, detectLayout } from './layout.js';
-import { splitLines } from './lines.js';
-import { RowCollector } from './row-collector.js';
-import { RowParser } from './row-parser.js';
-import { makeStampReader } from './stamp-reader.js';
-import { TimeAxis } from './time-axis.js';
+import type { ImportOptions, ReadSuccess, ReadWarning, SampleSink } from '../types.js';
+import { decodeText, guessEncoding, utf16ToUtf8 } from './encoding.js';
+import type { CsvLayout } from './layout.js';
+import { describeLayout, planCsv, refuseNoSampleRate, requireSampleRate } from './plan.js';
+import { TableReader } from './table-reader.js';
 
 /** Bytes that are looked at to work out how a table is laid out. */
-export const HEAD_BYTES = 1 << 17;
+const HEAD_BYTES = 1 << 17;
 const WINDOW_BYTES = 1 << 18;
 const MAX_LINE_BYTES = 1 << 22;
-const LF = 10;
-const CR = 13;
 
 export interface CsvArguments {
   fileName: string;
   options: ImportOptions;
   sink: SampleSink;
-}
-
-/** The table as understood from the head of the file, ready to be read. */
-export interface CsvPlan {
-  layout: CsvLayout;
-  channels: ReadChannel[];
-  encoding: TextEncoding;
 }
 
 async function* bytesOf(source: ByteSource): AsyncGenerator<Uint8Array> {
@@ -44,142 +24,6 @@ async function* bytesOf(source: ByteSource): AsyncGenerator<Uint8Array> {
     yield bytes;
     source.consume(bytes.length);
   }
-}
-
-/** Refuses bytes that are no text. */
-export function refuseBinary(text: string, fileName: string): void {
-  if (!looksBinary(text)) return;
-  refuse(
-    'not-a-capture',
-    `"${fileName}" holds binary data that is not recognised: it is not text and has no RIFF or RF64 header of a WAV file.`,
-    'Upload a table of numbers as text (CSV) or a WAV file.',
-  );
-}
-
-/**
- * Plans the reading of a table from its first lines.
- * Refuses tables from which no sample rate can be had and options that do not fit.
- */
-export function planCsv(
-  text: string,
-  encoding: TextEncoding,
-  complete: boolean,
-  args: Omit<CsvArguments, 'sink'>,
-): CsvPlan {
-  const { options, fileName } = args;
-  checkSampleRateOption(options);
-  refuseBinary(text, fileName);
-  const lines = splitLines(text);
-  if (!complete && lines.length > 1) lines.pop();
-  const layout = detectLayout(lines, fileName, options);
-  const channels = selectChannels(options, layout.columns, layout.headerCells, layout.valueColumns, null);
-  if (channels.length === 0) {
-    refuse(
-      'no-channels',
-      `"${fileName}" holds a time column but no column of values.`,
-      'Export at least one channel beside the time.',
-    );
-  }
-  return { layout, channels, encoding };
-}
-
-/** Refuses a table that tells nothing of its sample rate. */
-export function requireSampleRate({ layout }: CsvPlan, options: ImportOptions): void {
-  if (layout.time !== null || layout.statedSampleRateHz !== null || options.sampleRateHz !== undefined)
-    return;
-  refuse(
-    'needs-sample-rate',
-    'The file has no time column and states no sample rate or sample interval.',
-    'Give the sample rate in hertz, or name the time column.',
-  );
-}
-
-/** Describes the plan in the words of the public interface. */
-export function describeLayout({ layout, encoding }: CsvPlan): DetectedLayout {
-  return {
-    format: 'csv',
-    encoding,
-    delimiter: layout.dialect.delimiter,
-    decimal: layout.dialect.decimal,
-    headerRows: layout.dialect.bodyLine,
-    unitsRow: layout.unitsLine === null ? null : layout.unitsLine + 1,
-    timeColumn: layout.time?.column ?? null,
-    timeUnit: layout.time?.unit ?? null,
-    columns: layout.columns,
-    confident: layout.doubts.length === 0,
-    doubts: layout.doubts,
-  };
-}
-
-/** Reads the rows of a planned table from bytes and hands them on block by block. */
-class TableReader {
-  readonly axis: TimeAxis | null;
-  readonly collector: RowCollector;
-  private readonly parser: RowParser;
-  private readonly stamps: ReturnType<typeof makeStampReader> | null;
-  private line = 1;
-
-  constructor(
-    private readonly plan: CsvPlan,
-    private readonly sink: SampleSink,
-  ) {
-    const { layout, channels, encoding } = plan;
-    this.axis = layout.time === null ? null : new TimeAxis(layout.time.column);
-    this.stamps = layout.time !== null && layout.time.unit === null ? makeStampReader() : null;
-    this.collector = new RowCollector(layout, channels, this.axis);
-    const wanted = layout.columns.map(
-      ({ index }) => index === layout.time?.column || channels.some(({ column }) => column === index),
-    );
-    const text = encoding === 'latin1' ? 'latin1' : 'utf-8';
-    this.parser = new RowParser(
-      { ...layout.dialect, encoding: text },
-      wanted,
-      layout.time?.column ?? -1,
-      this.stamps?.read ?? null,
-    );
-  }
-
-  get startText(): string | null {
-    return this.stamps?.firstText() ?? null;
-  }
-
-  /** Parses whole lines of `bytes`, or all of it when it is the last; returns the bytes used. */
-  async read(bytes: Uint8Array, last: boolean): Promise<number> {
-    const end = last ? bytes.length : lastLineEnd(bytes);
-    let p = 0;
-    while (p < end) {
-      if (this.line <= this.plan.layout.dialect.bodyLine) p = nextLine(bytes, p, end);
-      else {
-        this.parser.parse(bytes, p, end, this.line);
-        p = this.parser.next;
-        const ended = bytes[p - 1] === LF || bytes[p - 1] === CR;
-        this.collector.take(this.parser, this.line, !ended);
-      }
-      this.line += 1;
-      if (this.collector.full) await this.flush();
-    }
-    return end;
-  }
-
-  async flush(): Promise<void> {
-    const { blocks, filled } = this.collector;
-    if (filled === 0) return;
-    for (const [index, block] of blocks.entries()) await this.sink.write(index, block.subarray(0, filled));
-    this.collector.filled = 0;
-  }
-}
-
-/** Offset after the last line end. A CR as the very last byte may be half of a CRLF and is left for the next window. */
-function lastLineEnd(bytes: Uint8Array): number {
-  let p = bytes.length;
-  while (p > 0 && bytes[p - 1] !== LF && (bytes[p - 1] !== CR || p === bytes.length)) p -= 1;
-  return p;
-}
-
-function nextLine(bytes: Uint8Array, from: number, end: number): number {
-  let p = from;
-  while (p < end && bytes[p] !== LF && bytes[p] !== CR) p += 1;
-  return bytes[p] === CR && bytes[p + 1] === LF ? Math.min(end, p + 2) : Math.min(end, p + 1);
 }
 
 async function readRows(source: ByteSource, reader: TableReader): Promise<void> {
@@ -209,7 +53,10 @@ function chooseRate(
 ): number {
   const measured = reader.axis?.sampleRateHz() ?? layout.statedSampleRateHz;
   const stated = options.sampleRateHz;
-  if (stated === undefined) return measured as number;
+  if (stated === undefined) {
+    if (measured !== null && Number.isFinite(measured)) return measured;
+    refuseNoSampleRate('No sample rate can be had from the time stamps of the file.');
+  }
   if (measured !== null && Math.abs(stated - measured) > 0.01 * measured) {
     const message = `The sample rate given, ${stated} Hz, is used; the file itself says ${Number(measured.toPrecision(6))} Hz.`;
     warnings.push({ code: 'sample-rate-differs', message });

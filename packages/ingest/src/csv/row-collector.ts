@@ -89,6 +89,7 @@ export class RowCollector {
   private isCut(parser: RowParser): boolean {
     const { columnCount } = this.layout.dialect;
     if (parser.cellCount < columnCount) return true;
+    if (parser.cellCount === columnCount && parser.endsBlank) return true;
     const last = parser.kinds[columnCount - 1];
     if (last === 2) return true;
     // A number of a fixed format that ends early: all rows before had the same count of digits, this one has fewer.

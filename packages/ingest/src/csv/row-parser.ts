@@ -26,6 +26,8 @@ export class RowParser {
   cellCount = 0;
   /** Cells on the line that are not blank. */
   filledCount = 0;
+  /** True when the last cell on the line is blank. */
+  endsBlank = false;
   /** Offset of the byte after the line and its end. */
   next = 0;
   /** Digits at the end of the last number, see {@link NumberScanner.tail}; -1 when the last cell is no plain number. */
@@ -67,16 +69,18 @@ export class RowParser {
       const quoted = p < end && bytes[p] === QUOTE;
       if (wanted[column] === true && scanner.scan(bytes, quoted ? p + 1 : p, end) === SCANNED) {
         p = scanner.next;
-        if (quoted && p < end && bytes[p] === QUOTE) p += 1;
-        p = this.skipBlanks(bytes, p, end);
+        const closed = !quoted || (p < end && bytes[p] === QUOTE);
+        p = this.skipBlanks(bytes, quoted && closed ? p + 1 : p, end);
         const byte = p < end ? (bytes[p] as number) : LF;
-        if (byte === delimiterByte || byte === LF || byte === CR || (blankRuns && p > scanner.next)) {
+        const ends = byte === delimiterByte || byte === LF || byte === CR || (blankRuns && p > scanner.next);
+        if (closed && ends) {
           cells[column] = scanner.value;
           kinds[column] = 1;
           this.tail = scanner.tail;
         } else p = this.parseText(bytes, start, end, column, line);
       } else p = this.parseText(bytes, start, end, column, line);
-      if (p > start) filled += 1;
+      this.endsBlank = p === start;
+      if (!this.endsBlank) filled += 1;
       column += 1;
       if (p >= end || bytes[p] === LF || bytes[p] === CR) break;
       if (!blankRuns) p += 1;

@@ -78,7 +78,7 @@ export class TimeAxis {
     if (this.gaps.count > 0) {
       found.push({
         code: 'gap',
-        message: `The time jumps by more than 1.5 sample intervals in ${this.gaps.count} places, first before line ${this.gaps.firstLine}; samples are missing there.`,
+        message: `The time jumps by more than 1.5 sample intervals in ${this.gaps.count} places, first before line ${this.gaps.firstLine}${this.uneven.count > 0 ? '' : '; samples are missing there'}.`,
         ...this.gaps,
       });
     }

@@ -75,6 +75,7 @@ function findByHeader(input: TimeColumnInput): number | null {
 
 function findByValues(input: TimeColumnInput): number | null {
   const [first] = input.columns;
+  if (input.options.sampleRateHz !== undefined) return null;
   if (first === undefined || input.columns.length < 2 || first.quantity !== 'other' || !mayBeTime(first))
     return null;
   const values = numbersOf(input, 0);

@@ -1,18 +1,11 @@
 import type { ByteSource } from '../byte-source.js';
-import { checkSampleRateOption, selectChannels } from '../channels.js';
 import { refuse } from '../refusal.js';
-import type {
-  DetectedLayout,
-  ImportOptions,
-  LayoutColumn,
-  ReadChannel,
-  ReadSuccess,
-  ReadWarning,
-  SampleSink,
-} from '../types.js';
+import type { ImportOptions, ReadChannel, ReadSuccess, SampleSink } from '../types.js';
 import { fourCc, readWavHeader, type WavHeader } from './header.js';
 import { readInfoList } from './info-list.js';
-import { codeRange, decoderOf } from './samples.js';
+import { describeWav, wavChannels } from './layout.js';
+import { decoderOf } from './samples.js';
+import { collectWarnings, type Counts } from './warnings.js';
 
 const HEAD_BYTES = 1 << 16;
 const MAX_HEADER_BYTES = 1 << 26;
@@ -42,41 +35,6 @@ async function readHeader(source: ByteSource): Promise<WavHeader> {
   }
 }
 
-/** Columns of a WAV file: its channels, named ch1, ch2 … */
-export function wavColumns(header: WavHeader): LayoutColumn[] {
-  return Array.from({ length: header.format.channelCount }, (_, index) => ({
-    index,
-    name: `ch${index + 1}`,
-    unit: '',
-    quantity: 'dimensionless' as const,
-  }));
-}
-
-export function describeWav(header: WavHeader): DetectedLayout {
-  const { encoding, bytesPerSample } = header.format;
-  return {
-    format: 'wav',
-    columns: wavColumns(header),
-    bitsPerSample: bytesPerSample * 8,
-    sampleFormat: encoding,
-    confident: true,
-    doubts: [],
-  };
-}
-
-/** Channels of a WAV file as the options have them. */
-export function wavChannels(header: WavHeader, options: ImportOptions): ReadChannel[] {
-  checkSampleRateOption(options);
-  const columns = wavColumns(header);
-  return selectChannels(
-    options,
-    columns,
-    [],
-    columns.map(({ index }) => index),
-    codeRange(header.format),
-  );
-}
-
 /** Replaces what is no finite number by NaN; returns how many there were. */
 function countMissing(samples: Float64Array): number {
   let missing = 0;
@@ -86,13 +44,6 @@ function countMissing(samples: Float64Array): number {
     missing += 1;
   }
   return missing;
-}
-
-interface Counts {
-  frames: number;
-  /** Bytes of a last frame that is not whole. */
-  leftover: number;
-  missing: number[];
 }
 
 async function readSamples(
@@ -128,44 +79,6 @@ async function readSamples(
     }
   }
   return counts;
-}
-
-function collectWarnings(header: WavHeader, counts: Counts): ReadWarning[] {
-  const { frames, leftover, missing } = counts;
-  const { format, dataBytes } = header;
-  const claimed =
-    dataBytes === null ? null : Math.floor(dataBytes / (format.bytesPerSample * format.channelCount));
-  const found: ReadWarning[] = [];
-  if (claimed !== null && frames < claimed) {
-    const message = `The header claims ${claimed} samples per channel but the file ends after ${frames}; what is there was read.`;
-    found.push({ code: 'truncated', message, count: claimed - frames });
-  } else if (leftover > 0) {
-    found.push({
-      code: 'truncated',
-      message: 'The last frame of samples is not whole and was dropped.',
-      count: 1,
-    });
-  }
-  if (header.sizeWasZero) {
-    found.push({
-      code: 'data-size-zero',
-      message: 'The header says 0 bytes of samples; the file was read to its end.',
-    });
-  } else if (dataBytes === null) {
-    found.push({
-      code: 'data-size-unknown',
-      message: 'The header does not state how many samples there are; the file was read to its end.',
-    });
-  }
-  const total = missing.reduce((sum, n) => sum + n, 0);
-  if (total > 0) {
-    found.push({
-      code: 'missing-values',
-      message: `${total} samples are not finite numbers; they are kept as missing, not as zero.`,
-      count: total,
-    });
-  }
-  return found;
 }
 
 /** Texts in LIST chunks after the samples. Whatever else follows is not looked at. */

@@ -1,0 +1,78 @@
+import { checkSampleRateOption, selectChannels } from '../channels.js';
+import { refuse } from '../refusal.js';
+import type { DetectedLayout, ImportOptions, ReadChannel } from '../types.js';
+import { looksBinary, type TextEncoding } from './encoding.js';
+import { type CsvLayout, detectLayout } from './layout.js';
+import { splitLines } from './lines.js';
+
+/** The table as understood from the head of the file, ready to be read. */
+export interface CsvPlan {
+  layout: CsvLayout;
+  channels: ReadChannel[];
+  encoding: TextEncoding;
+}
+
+/** Refuses bytes that are no text. */
+function refuseBinary(text: string, fileName: string): void {
+  if (!looksBinary(text)) return;
+  refuse(
+    'not-a-capture',
+    `"${fileName}" holds binary data that is not recognised: it is not text and has no RIFF or RF64 header of a WAV file.`,
+    'Upload a table of numbers as text (CSV) or a WAV file.',
+  );
+}
+
+/**
+ * Plans the reading of a table from its first lines.
+ * Refuses tables from which no sample rate can be had and options that do not fit.
+ */
+export function planCsv(
+  text: string,
+  encoding: TextEncoding,
+  complete: boolean,
+  args: { fileName: string; options: ImportOptions },
+): CsvPlan {
+  const { options, fileName } = args;
+  checkSampleRateOption(options);
+  refuseBinary(text, fileName);
+  const lines = splitLines(text);
+  if (!complete && lines.length > 1) lines.pop();
+  const layout = detectLayout(lines, fileName, options);
+  const channels = selectChannels(options, layout.columns, layout.headerCells, layout.valueColumns, null);
+  if (channels.length === 0) {
+    refuse(
+      'no-channels',
+      `"${fileName}" holds a time column but no column of values.`,
+      'Export at least one channel beside the time.',
+    );
+  }
+  return { layout, channels, encoding };
+}
+
+/** Refuses a table that tells nothing of its sample rate. */
+export function requireSampleRate({ layout }: CsvPlan, options: ImportOptions): void {
+  if (layout.time !== null || layout.statedSampleRateHz !== null || options.sampleRateHz !== undefined)
+    return;
+  refuseNoSampleRate('The file has no time column and states no sample rate or sample interval.');
+}
+
+export function refuseNoSampleRate(message: string): never {
+  refuse('needs-sample-rate', message, 'Give the sample rate in hertz, or name the time column.');
+}
+
+/** Describes the plan in the words of the public interface. */
+export function describeLayout({ layout, encoding }: CsvPlan): DetectedLayout {
+  return {
+    format: 'csv',
+    encoding,
+    delimiter: layout.dialect.delimiter,
+    decimal: layout.dialect.decimal,
+    headerRows: layout.dialect.bodyLine,
+    unitsRow: layout.unitsLine === null ? null : layout.unitsLine + 1,
+    timeColumn: layout.time?.column ?? null,
+    timeUnit: layout.time?.unit ?? null,
+    columns: layout.columns,
+    confident: layout.doubts.length === 0,
+    doubts: layout.doubts,
+  };
+}

@@ -1,0 +1,76 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { previewRecording } from '../src/index.js';
+import { fixture, readAll } from './support.js';
+
+const SEEDS = [
+  'F9-P01.csv',
+  'F9-P03.csv',
+  'F9-P06.csv',
+  'F9-P08.csv',
+  'F9-P25.csv',
+  'F9-P38.wav',
+  'F9-P43.wav',
+  'F9-P47.wav',
+  'F9-P54.wav',
+];
+
+interface Edit {
+  at: number;
+  byte: number;
+  kind: 'set' | 'insert' | 'delete' | 'cut';
+}
+
+function mutate(bytes: Uint8Array, edits: Edit[]): Uint8Array {
+  // The short head holds what decides; mutations there matter most.
+  let out = Array.from(bytes.subarray(0, 1500));
+  for (const { at, byte, kind } of edits) {
+    const index = Math.floor(at * at * out.length);
+    if (kind === 'set') out[index] = byte;
+    else if (kind === 'insert') out.splice(index, 0, byte);
+    else if (kind === 'delete') out.splice(index, 1);
+    else if (at > 0.9) out = out.slice(0, index);
+  }
+  return Uint8Array.from(out);
+}
+
+const edit = fc.record({
+  at: fc.double({ min: 0, max: 0.999999, noNaN: true }),
+  byte: fc.oneof(fc.integer({ min: 0, max: 255 }), fc.constantFrom(0, 10, 13, 34, 44, 45, 46, 59, 255)),
+  kind: fc.constantFrom('set' as const, 'insert' as const, 'delete' as const, 'cut' as const),
+});
+
+describe('damaged files', () => {
+  it.each(SEEDS)('give an outcome, never an exception: %s', async (name) => {
+    const bytes = fixture(name);
+    await fc.assert(
+      fc.asyncProperty(fc.array(edit, { minLength: 1, maxLength: 12 }), async (edits) => {
+        const damaged = mutate(bytes, edits);
+        const { outcome, samples } = await readAll(damaged, {}, name, 512);
+        if (outcome.ok) {
+          expect(outcome.sampleRateHz).toBeGreaterThan(0);
+          for (const values of samples) expect(values).toHaveLength(outcome.sampleCount);
+          const gaps = samples.map((values) => values.filter((value) => !Number.isFinite(value)).length);
+          expect(gaps).toEqual(outcome.missingValues);
+        } else expect(outcome.problem.message.length * outcome.problem.cure.length).toBeGreaterThan(0);
+        const preview = previewRecording(damaged, { fileName: name, sizeBytes: damaged.length });
+        expect(preview.layout.doubts).toBeInstanceOf(Array);
+      }),
+      { seed: 20240917, numRuns: 50 },
+    );
+  });
+
+  it('give an outcome for arbitrary bytes', async () => {
+    await fc.assert(
+      fc.asyncProperty(
+        fc.uint8Array({ maxLength: 300 }),
+        fc.constantFrom('', 'RIFF    WAVE', 'RIFF    WAVEfmt '),
+        async (tail, start) => {
+          const bytes = Uint8Array.from([...new TextEncoder().encode(start), ...tail]);
+          expect(typeof (await readAll(bytes)).outcome.ok).toBe('boolean');
+        },
+      ),
+      { seed: 7, numRuns: 200 },
+    );
+  });
+});

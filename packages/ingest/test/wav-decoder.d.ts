@@ -1,0 +1,7 @@
+declare module 'wav-decoder' {
+  interface AudioData {
+    sampleRate: number;
+    channelData: Float32Array[];
+  }
+  export function decode(source: ArrayBuffer): Promise<AudioData>;
+}
