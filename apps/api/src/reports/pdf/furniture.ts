@@ -6,9 +6,9 @@ import { statusName } from './words.js';
 
 const footTop = page.height - 42;
 
-/** Number and revision as each page carries them: "HR-0001 revision 0". */
+/** Number and revision as each page carries them: "HR-0001, revision 0". */
 export const reportMark = (report: Report): string =>
-  `${report.number ?? 'Report without number'} revision ${report.revision}`;
+  `${report.number ?? 'Not numbered yet'}, revision ${report.revision}`;
 
 const isIssued = (report: Report): boolean => report.status === 'issued' || report.status === 'superseded';
 

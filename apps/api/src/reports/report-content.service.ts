@@ -1,0 +1,67 @@
+import { Injectable } from '@nestjs/common';
+import type { Analysis, Note, ReportContent, ReportSection, Verdict } from '@overtally/contracts';
+import { AnalysesService } from '../analyses/analyses.service.js';
+import { VerdictsService } from '../limits/verdicts.service.js';
+import { NotesService } from '../notes/notes.service.js';
+import { RecordingsService } from '../recordings/recordings.service.js';
+import { worstResult } from './report-state.js';
+
+const notesPerQuery = 200;
+
+/** Gathers what a report says from what is stored; computes nothing anew. */
+@Injectable()
+export class ReportContentService {
+  constructor(
+    private readonly verdicts: VerdictsService,
+    private readonly recordings: RecordingsService,
+    private readonly analyses: AnalysesService,
+    private readonly notes: NotesService,
+  ) {}
+
+  /** The content as of now, one section per verdict in the order given. */
+  async gather(project: ReportContent['project'], verdictIds: readonly string[]): Promise<ReportContent> {
+    const verdicts = await this.verdicts.ofProject(project.id, verdictIds);
+    const sections: ReportSection[] = [];
+    for (const verdict of verdicts) {
+      if (verdict) sections.push(await this.section(verdict));
+    }
+    return { project, sections, result: worstResult(sections.map((section) => section.verdict.result)) };
+  }
+
+  private async notesOf(analysisId: string): Promise<Note[]> {
+    const notes: Note[] = [];
+    let cursor: string | undefined;
+    do {
+      const page = await this.notes.page(analysisId, { cursor, limit: notesPerQuery });
+      notes.push(...page.items);
+      cursor = page.nextCursor ?? undefined;
+    } while (cursor !== undefined);
+    return notes;
+  }
+
+  private async section(verdict: Verdict): Promise<ReportSection> {
+    const [recording, analysis, notes] = await Promise.all([
+      this.recordings.get(verdict.recordingId),
+      this.analyses.get(verdict.analysisId),
+      this.notesOf(verdict.analysisId),
+    ]);
+    const { id, number, name, eut, measuringChain, instrument, capturedAt, file } = recording;
+    const { sampleRateHz, sampleCount, durationS, metadata } = recording;
+    return {
+      verdict,
+      recording: {
+        ...{ id, number, name, eut, measuringChain, instrument, capturedAt, file },
+        ...{ sampleRateHz, sampleCount, durationS, metadata, import: recording.import },
+      },
+      analysis: analysisPart(analysis, verdict.channel),
+      notes: notes.filter((note) => note.channel === verdict.channel),
+    };
+  }
+}
+
+function analysisPart(analysis: Analysis, index: number): ReportSection['analysis'] {
+  const { id, engineVersion, finishedAt, settings } = analysis;
+  const channel = analysis.channels.find((each) => each.index === index);
+  if (!channel) throw new Error(`Analysis ${id} has lost channel ${index}`);
+  return { id, engineVersion, finishedAt, settings, channel };
+}

@@ -1,0 +1,47 @@
+import type { ReportStatus, VerdictResult } from '@overtally/contracts';
+import { problem } from '../common/problem.js';
+
+/** What can be done with a report in a state. */
+export type ReportAction = 'change' | 'delete' | 'submit' | 'return' | 'issue';
+
+const possible: Record<ReportStatus, readonly ReportAction[]> = {
+  draft: ['change', 'delete', 'submit'],
+  'in-review': ['return', 'issue'],
+  issued: [],
+  superseded: [],
+};
+
+const statusWords: Record<ReportStatus, string> = {
+  draft: 'a draft',
+  'in-review': 'in review',
+  issued: 'issued',
+  superseded: 'superseded',
+};
+
+const sentence: Record<ReportStatus, string> = {
+  draft: 'it can be changed, deleted or submitted for review',
+  'in-review': 'a manager can return or issue it',
+  issued: 'it can only be read',
+  superseded: 'it can only be read',
+};
+
+/** @throws a 409 problem that says what is possible when the report's state does not allow the action */
+export function requireAction(status: ReportStatus, action: ReportAction): void {
+  if (possible[status].includes(action)) return;
+  const detail = `The report is ${statusWords[status]}: ${sentence[status]}`;
+  throw problem(409, 'wrong-state', detail);
+}
+
+const severity: readonly VerdictResult[] = [
+  'fail',
+  'conditional-fail',
+  'not-decidable',
+  'conditional-pass',
+  'pass',
+  'not-applicable',
+];
+
+/** The worst of the results; one that does not apply counts only when no other is there. */
+export function worstResult(results: readonly VerdictResult[]): VerdictResult {
+  return severity.find((result) => results.includes(result)) ?? 'not-applicable';
+}

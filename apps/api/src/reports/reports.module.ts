@@ -1,0 +1,21 @@
+import { Module } from '@nestjs/common';
+import { AnalysesModule } from '../analyses/analyses.module.js';
+import { LimitsModule } from '../limits/limits.module.js';
+import { NotesModule } from '../notes/notes.module.js';
+import { RecordingsModule } from '../recordings/recordings.module.js';
+import { ReportContentService } from './report-content.service.js';
+import { ReportPdfController } from './report-pdf.controller.js';
+import { ReportPdfService } from './report-pdf.service.js';
+import { ReportStepsController } from './report-steps.controller.js';
+import { ReportStepsService } from './report-steps.service.js';
+import { ReportsController } from './reports.controller.js';
+import { ReportsRepository } from './reports.repository.js';
+import { ReportsService } from './reports.service.js';
+
+@Module({
+  imports: [AnalysesModule, LimitsModule, NotesModule, RecordingsModule],
+  controllers: [ReportsController, ReportStepsController, ReportPdfController],
+  providers: [ReportsService, ReportsRepository, ReportContentService, ReportStepsService, ReportPdfService],
+  exports: [ReportsService, ReportStepsService],
+})
+export class ReportsModule {}

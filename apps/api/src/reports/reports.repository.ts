@@ -1,0 +1,123 @@
+import { Inject, Injectable } from '@nestjs/common';
+import type { ReportEvent, ReportStatus, VerdictResult } from '@overtally/contracts';
+import { schema, type Database, type Tx } from '@overtally/db';
+import { and, asc, desc, eq, getTableColumns, sql } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/pg-core';
+import { DATABASE } from '../database/database.tokens.js';
+
+const { projects, reportEvents, reports, reportVerdicts, users, verdicts } = schema;
+
+const preparers = alias(users, 'preparers');
+const issuers = alias(users, 'issuers');
+
+const { content: _content, ...headColumns } = getTableColumns(reports);
+const joined = {
+  preparerName: preparers.name,
+  issuerName: issuers.name,
+  projectName: projects.name,
+  customer: projects.customer,
+  verdictIds: sql<string[]>`coalesce((
+    select json_agg(rv.verdict_id order by rv.position) from ${reportVerdicts} rv
+    where rv.report_id = ${reports.id}), '[]')`,
+  results: sql<VerdictResult[]>`coalesce((
+    select json_agg(v.result order by rv.position) from ${reportVerdicts} rv
+    join ${verdicts} v on v.id = rv.verdict_id where rv.report_id = ${reports.id}), '[]')`,
+};
+
+export type LockedReport = typeof reports.$inferSelect;
+export type ReportRow = NonNullable<Awaited<ReturnType<ReportsRepository['find']>>>;
+export type ReportEventRow = Awaited<ReturnType<ReportsRepository['eventsOf']>>[number];
+
+/** Reports, the verdicts they speak of and what was done with them. */
+@Injectable()
+export class ReportsRepository {
+  constructor(@Inject(DATABASE) private readonly database: Database) {}
+
+  async find(id: string) {
+    const [row] = await this.database
+      .select({ ...headColumns, content: reports.content, ...joined })
+      .from(reports)
+      .innerJoin(projects, eq(projects.id, reports.projectId))
+      .innerJoin(preparers, eq(preparers.id, reports.preparedById))
+      .leftJoin(issuers, eq(issuers.id, reports.issuedById))
+      .where(eq(reports.id, id));
+    return row;
+  }
+
+  /** The newest first, from behind `after`, without contents. */
+  async list(
+    projectId: string,
+    status: ReportStatus | undefined,
+    after: { createdAt: string; id: string } | undefined,
+    limit: number,
+  ) {
+    const behind =
+      after &&
+      sql`(${reports.createdAt}, ${reports.id}) < (${after.createdAt}::timestamptz, ${after.id}::uuid)`;
+    return this.database
+      .select({ ...headColumns, ...joined })
+      .from(reports)
+      .innerJoin(projects, eq(projects.id, reports.projectId))
+      .innerJoin(preparers, eq(preparers.id, reports.preparedById))
+      .leftJoin(issuers, eq(issuers.id, reports.issuedById))
+      .where(and(eq(reports.projectId, projectId), status && eq(reports.status, status), behind))
+      .orderBy(desc(reports.createdAt), desc(reports.id))
+      .limit(limit);
+  }
+
+  async eventsOf(reportId: string) {
+    const { kind, byId, at, comment } = reportEvents;
+    return this.database
+      .select({ kind, byId, at, comment, byName: users.name })
+      .from(reportEvents)
+      .innerJoin(users, eq(users.id, reportEvents.byId))
+      .where(eq(reportEvents.reportId, reportId))
+      .orderBy(asc(reportEvents.at), asc(reportEvents.id));
+  }
+
+  /** The report, held until the transaction ends; every step goes through this lock. */
+  async lock(tx: Tx, id: string): Promise<LockedReport | undefined> {
+    const [row] = await tx.select().from(reports).where(eq(reports.id, id)).for('update');
+    return row;
+  }
+
+  async insert(tx: Tx, row: typeof reports.$inferInsert): Promise<string> {
+    const [made] = await tx.insert(reports).values(row).returning({ id: reports.id });
+    return made!.id;
+  }
+
+  async update(tx: Tx, id: string, change: Partial<LockedReport>): Promise<void> {
+    await tx
+      .update(reports)
+      .set({ updatedAt: new Date(), ...change })
+      .where(eq(reports.id, id));
+  }
+
+  async setVerdicts(tx: Tx, reportId: string, verdictIds: readonly string[]): Promise<void> {
+    await tx.delete(reportVerdicts).where(eq(reportVerdicts.reportId, reportId));
+    await tx
+      .insert(reportVerdicts)
+      .values(verdictIds.map((verdictId, position) => ({ reportId, verdictId, position })));
+  }
+
+  async addEvent(
+    tx: Tx,
+    event: { reportId: string; byId: string; kind: ReportEvent['kind']; comment?: string; at?: Date },
+  ): Promise<void> {
+    await tx.insert(reportEvents).values(event);
+  }
+
+  async delete(tx: Tx, id: string): Promise<void> {
+    await tx.delete(reports).where(eq(reports.id, id));
+  }
+
+  /** The next report number of a project; one that is not committed is given out again. */
+  async nextNumber(tx: Tx, projectId: string): Promise<number> {
+    const [counter] = await tx
+      .update(projects)
+      .set({ lastReportNumber: sql`${projects.lastReportNumber} + 1` })
+      .where(eq(projects.id, projectId))
+      .returning({ number: projects.lastReportNumber });
+    return counter!.number;
+  }
+}

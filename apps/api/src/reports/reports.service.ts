@@ -1,0 +1,104 @@
+import { Inject, Injectable } from '@nestjs/common';
+import type { CreateReport, Report, ReportStatus, UpdateReport } from '@overtally/contracts';
+import type { Database, Tx } from '@overtally/db';
+import { z } from 'zod';
+import { decodeCursor, pageOfRows } from '../common/paging.js';
+import { problem } from '../common/problem.js';
+import type { SignedInUser } from '../common/request.js';
+import { DATABASE } from '../database/database.tokens.js';
+import { VerdictsService } from '../limits/verdicts.service.js';
+import { ReportContentService } from './report-content.service.js';
+import { requireAction, type ReportAction } from './report-state.js';
+import { toListItem, toReport } from './report-view.js';
+import { ReportsRepository, type LockedReport } from './reports.repository.js';
+
+const placeSchema = z.tuple([z.iso.datetime(), z.uuid()]);
+
+interface ReportQuery {
+  status?: ReportStatus;
+  cursor?: string;
+  limit: number;
+}
+
+/** Reports as drafts: making, reading, changing and deleting them. */
+@Injectable()
+export class ReportsService {
+  constructor(
+    @Inject(DATABASE) private readonly database: Database,
+    private readonly repository: ReportsRepository,
+    private readonly verdicts: VerdictsService,
+    private readonly contents: ReportContentService,
+  ) {}
+
+  /** A report with its content: live for a draft, as frozen for an issued one. */
+  async get(id: string): Promise<Report> {
+    const [row, events] = await Promise.all([this.repository.find(id), this.repository.eventsOf(id)]);
+    if (!row) throw noSuchReport();
+    const project = { id: row.projectId, name: row.projectName, customer: row.customer };
+    const content = row.content ?? (await this.contents.gather(project, row.verdictIds));
+    return toReport(row, content, events);
+  }
+
+  /** Reports of a project, the newest first. */
+  async list(projectId: string, { status, cursor, limit }: ReportQuery) {
+    const place = decodeCursor(cursor, placeSchema);
+    const after = place && { createdAt: place[0], id: place[1] };
+    const rows = await this.repository.list(projectId, status, after, limit + 1);
+    return pageOfRows(rows, limit, (row) => [row.createdAt.toISOString(), row.id], toListItem);
+  }
+
+  async create(user: SignedInUser, projectId: string, input: CreateReport): Promise<Report> {
+    const { verdictIds, ...words } = input;
+    await this.requireVerdicts(projectId, verdictIds);
+    const id = await this.database.transaction(async (tx) => {
+      const made = await this.repository.insert(tx, { ...words, projectId, preparedById: user.id });
+      await this.repository.setVerdicts(tx, made, verdictIds);
+      await this.repository.addEvent(tx, { reportId: made, byId: user.id, kind: 'created' });
+      return made;
+    });
+    return this.get(id);
+  }
+
+  async update(user: SignedInUser, projectId: string, id: string, input: UpdateReport): Promise<Report> {
+    const { verdictIds, ...words } = input;
+    if (verdictIds) await this.requireVerdicts(projectId, verdictIds);
+    await this.database.transaction(async (tx) => {
+      await this.lockFor(tx, id, 'change');
+      if (verdictIds) await this.repository.setVerdicts(tx, id, verdictIds);
+      await this.repository.update(tx, id, words);
+      await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'changed' });
+    });
+    return this.get(id);
+  }
+
+  async delete(id: string): Promise<void> {
+    await this.database.transaction(async (tx) => {
+      await this.lockFor(tx, id, 'delete');
+      await this.repository.delete(tx, id);
+    });
+  }
+
+  /** The report's row, held for an action that its state allows. */
+  async lockFor(tx: Tx, id: string, action: ReportAction): Promise<LockedReport> {
+    const row = await this.repository.lock(tx, id);
+    if (!row) throw noSuchReport();
+    requireAction(row.status, action);
+    return row;
+  }
+
+  private async requireVerdicts(projectId: string, ids: readonly string[]): Promise<void> {
+    const found = await this.verdicts.ofProject(projectId, ids);
+    const errors = found.flatMap((verdict, index) =>
+      verdict ? [] : [{ path: `verdictIds.${index}`, message: 'The project has no such verdict' }],
+    );
+    if (errors.length === 0) return;
+    throw problem(
+      422,
+      'verdict-unknown',
+      'A report speaks of verdicts of its own project; see errors',
+      errors,
+    );
+  }
+}
+
+const noSuchReport = () => problem(404, 'not-found', 'There is no such report');
