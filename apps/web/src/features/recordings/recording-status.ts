@@ -1,0 +1,13 @@
+import type { Recording, RecordingStatus } from '@overtally/contracts';
+
+/** True while the recording waits for the worker or is being worked on. */
+export const isBusy = (recording: Pick<Recording, 'status'>): boolean =>
+  recording.status === 'received' || recording.status === 'reading' || recording.status === 'analysing';
+
+export const statusWords: Record<RecordingStatus, string> = {
+  received: 'waiting to be read',
+  reading: 'reading',
+  analysing: 'analysing',
+  ready: 'ready',
+  failed: 'not readable',
+};
