@@ -50,6 +50,8 @@ const shared = {
 } satisfies Partial<LimitSet>;
 
 const checkEdition = 'Check the values against your own copy of the edition that applies to the product.';
+const observation =
+  'The average is over the whole record: it is that of the standard only when the record covers the observation period that the standard asks for.';
 const noLimits =
   'No limits: rated power up to 75 W (lighting excepted), professional equipment above 1 kW, symmetrically controlled heating elements up to 200 W, independent dimmers for incandescent lamps up to 1 kW.';
 
@@ -70,6 +72,7 @@ export const iec61000_3_2ClassA: LimitSet = {
     'Orders above 40 have no limit.',
     noLimits,
     'Single smoothed values between 150 % and 200 % are allowed for a short share of the time; the share is not recorded, so such an order is not decidable.',
+    observation,
     checkEdition,
   ],
 };
@@ -86,7 +89,12 @@ export const iec61000_3_2ClassB: LimitSet = {
   basis: 'absolute',
   parameters: [],
   orders: classAOrders.map(({ order, limit }) => ({ order, limit: 1.5 * limit })),
-  notes: ['Orders above 40 have no limit.', 'The 200 % rule of class A does not apply.', checkEdition],
+  notes: [
+    'Orders above 40 have no limit.',
+    'The 200 % rule of class A does not apply.',
+    observation,
+    checkEdition,
+  ],
 };
 
 /** IEC 61000-3-2, Table 3: limits for class D equipment, mA/W with a cap in A. */
@@ -106,6 +114,7 @@ export const iec61000_3_2ClassD: LimitSet = {
     'Odd orders only. Both columns apply: the mA/W value times the power, never more than the cap in A.',
     'The power is the largest 1.5 s smoothed active input power, or a declared value within 10 % of it.',
     'The 200 % rule of class A does not apply.',
+    observation,
     checkEdition,
   ],
 };
