@@ -21,6 +21,17 @@ describe('time stamps', () => {
     expect(problem.message).toContain('0.001 s after 0.003 s');
   });
 
+  it.each([
+    [0.08, ['uneven-sampling']],
+    [0.009, []],
+  ])('off by %d of the interval give the warnings %j', async (off, warnings) => {
+    const rows = Array.from(
+      { length: 40 },
+      (_, i) => `${((i + (i % 3 === 1 ? off : 0)) / 1000).toFixed(7)},${i}`,
+    );
+    expect(codes(await readGood(`t,u\n${rows.join('\n')}\n`))).toEqual(warnings);
+  });
+
   it('keeps the rate of the regular intervals over a gap, and says where it is', async () => {
     const read = await readGood(table(50, (lines) => lines.splice(20, 5)));
     expect(read.sampleRateHz).toBeCloseTo(1000, 6);

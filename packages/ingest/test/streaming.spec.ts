@@ -27,6 +27,18 @@ describe('streaming', () => {
     expect(samples[0]).toEqual(Array.from({ length: count }, (_, i) => i));
   });
 
+  it('counts a CRLF that its window cuts in two as one line end', async () => {
+    const rows = Array.from({ length: 30000 }, (_, i) => `${(i / 1000).toFixed(3).padStart(6, '0')},${i}`);
+    const end = '\r\n99.000,lost\r\n';
+    const text = `t,u\r\n${rows.join('\r\n')}${end}`;
+    const cut = text.lastIndexOf('\r', 2 ** 18);
+    const padded = `t,u${' '.repeat(2 ** 18 - 1 - cut)}${text.slice(3)}`;
+    expect(padded[2 ** 18 - 1]).toBe('\r');
+    const { outcome } = await readAll(padded, {}, 'long.csv');
+    const missing = { code: 'missing-values', count: 1, firstLine: 30002 };
+    expect(outcome).toMatchObject({ ok: true, warnings: [missing, { code: 'gap' }] });
+  });
+
   it('does not run ahead of a slow sink and hands out blocks of bounded size', async () => {
     let largest = 0;
     let busy = false;

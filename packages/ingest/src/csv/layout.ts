@@ -1,4 +1,3 @@
-import { findColumn } from '../channels.js';
 import { describeColumns } from '../header-cell.js';
 import type { ImportOptions, LayoutColumn } from '../types.js';
 import { unitMeaning } from '../units.js';
@@ -111,9 +110,4 @@ export function detectLayout(lines: string[], fileName: string, options: ImportO
     statedSampleRateHz: statedSampleRateHz(metadata),
     doubts,
   };
-}
-
-/** Index of a column that options name, see {@link findColumn}. */
-export function columnOf(layout: CsvLayout, wanted: number | string, what: string): number {
-  return findColumn(wanted, layout.columns, layout.headerCells, what);
 }
