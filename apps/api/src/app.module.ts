@@ -3,6 +3,7 @@ import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE } from '@nestjs/core';
 import { LoggerModule } from 'nestjs-pino';
 import { ZodSerializerInterceptor, ZodValidationPipe } from 'nestjs-zod';
 import { AccessModule } from './access/access.module.js';
+import { AnalysesModule } from './analyses/analyses.module.js';
 import { AuthModule } from './auth/auth.module.js';
 import { loggerParams } from './common/logging.js';
 import { ProblemFilter } from './common/problem.filter.js';
@@ -11,8 +12,15 @@ import { ConfigModule } from './config/config.module.js';
 import { DatabaseModule } from './database/database.module.js';
 import { HealthModule } from './health/health.module.js';
 import { HttpModule } from './http/http.module.js';
+import { JobsModule } from './jobs/jobs.module.js';
+import { LimitsModule } from './limits/limits.module.js';
+import { NotesModule } from './notes/notes.module.js';
 import { ProjectsModule } from './projects/projects.module.js';
+import { RecordingsModule } from './recordings/recordings.module.js';
+import { ReportsModule } from './reports/reports.module.js';
+import { StorageModule } from './storage/storage.module.js';
 import { UsersModule } from './users/users.module.js';
+import { WorkerModule } from './worker/worker.module.js';
 
 /** The whole application. Order matters where modules bring middleware: logs, then sessions. */
 @Module({})
@@ -28,6 +36,14 @@ export class AppModule {
         AuthModule,
         UsersModule,
         ProjectsModule,
+        StorageModule,
+        JobsModule,
+        RecordingsModule,
+        AnalysesModule,
+        NotesModule,
+        LimitsModule,
+        ReportsModule,
+        ...(config.worker === 'embedded' ? [WorkerModule] : []),
         HealthModule,
         HttpModule,
       ],

@@ -1,0 +1,14 @@
+import { Module } from '@nestjs/common';
+import { RecordingsModule } from '../recordings/recordings.module.js';
+import { AnalysesController } from './analyses.controller.js';
+import { AnalysesRepository } from './analyses.repository.js';
+import { AnalysesService } from './analyses.service.js';
+import { AnalyseRecordingHandler } from './computing/analyse-recording.handler.js';
+
+@Module({
+  imports: [RecordingsModule],
+  controllers: [AnalysesController],
+  providers: [AnalysesService, AnalysesRepository, AnalyseRecordingHandler],
+  exports: [AnalysesService, AnalyseRecordingHandler],
+})
+export class AnalysesModule {}

@@ -1,0 +1,63 @@
+import { importOptionsSchema, updateRecordingSchema } from '@overtally/contracts';
+import { createZodDto } from 'nestjs-zod';
+import { z } from 'zod';
+import { jsonText } from './json-text.js';
+
+const bench = updateRecordingSchema.omit({ channels: true }).shape;
+
+/** A form sends an empty text where nothing was filled in. */
+const filled = <T extends z.ZodType>(schema: T) =>
+  z.preprocess((value) => (value === '' ? undefined : value), schema);
+
+const uploadSchema = z.object({
+  name: filled(bench.name),
+  eut: filled(bench.eut),
+  measuringChain: filled(bench.measuringChain),
+  instrument: filled(bench.instrument),
+  capturedAt: filled(bench.capturedAt),
+  remark: filled(bench.remark),
+  import: jsonText(importOptionsSchema).optional(),
+});
+
+/** The text fields that go with an uploaded file. */
+export class UploadDto extends createZodDto(uploadSchema) {}
+export type UploadFields = z.output<typeof uploadSchema>;
+
+const previewSchema = z.object({
+  fileName: z.string().min(1).max(255),
+  sizeBytes: z.coerce.number().int().min(0),
+  import: jsonText(importOptionsSchema).optional(),
+});
+
+/** The text fields that go with the beginning of a file. */
+export class PreviewDto extends createZodDto(previewSchema) {}
+export type PreviewFields = z.output<typeof previewSchema>;
+
+const text = { type: 'string' } as const;
+
+/** The multipart bodies, for the OpenAPI document. */
+export const uploadBody = {
+  type: 'object',
+  required: ['file'],
+  properties: {
+    file: { type: 'string', format: 'binary', description: 'The capture, CSV or WAV' },
+    name: { ...text, description: 'File name without extension when absent' },
+    eut: text,
+    measuringChain: text,
+    instrument: text,
+    capturedAt: { ...text, format: 'date-time' },
+    remark: text,
+    import: { ...text, description: 'Import options as JSON; what is absent is detected' },
+  },
+};
+
+export const previewBody = {
+  type: 'object',
+  required: ['head', 'fileName', 'sizeBytes'],
+  properties: {
+    head: { type: 'string', format: 'binary', description: 'The first bytes of the file, up to 256 KiB' },
+    fileName: text,
+    sizeBytes: { type: 'integer', description: 'Size of the whole file' },
+    import: { ...text, description: 'Import options as JSON' },
+  },
+};

@@ -1,0 +1,161 @@
+import { Inject, Injectable } from '@nestjs/common';
+import type { Channel, ChannelSummary, Recording, RecordingQuery } from '@overtally/contracts';
+import { schema, type Database } from '@overtally/db';
+import { and, asc, desc, eq, getTableColumns, ilike, inArray, isNull, or, sql, type SQL } from 'drizzle-orm';
+import { z } from 'zod';
+import { decodeCursor, likePattern, pageOfRows } from '../common/paging.js';
+import { DATABASE } from '../database/database.tokens.js';
+import { grouped } from './grouped.js';
+import { toRecording, type RecordingRecord } from './recording-view.js';
+
+const { analyses, analysisChannels, channels, harmonics, recordings, users } = schema;
+
+const sortColumns = { number: recordings.number, name: recordings.name, createdAt: recordings.createdAt };
+type SortKey = keyof typeof sortColumns;
+const cursorShape = z.tuple([z.union([z.string(), z.number()]), z.uuid()]);
+
+/** Recordings as the outside sees them, a whole page in four queries. */
+@Injectable()
+export class RecordingViewsRepository {
+  constructor(@Inject(DATABASE) private readonly database: Database) {}
+
+  async one(id: string): Promise<Recording | undefined> {
+    const records = await this.records(eq(recordings.id, id));
+    return (await this.complete(records))[0];
+  }
+
+  async page(projectId: string, query: RecordingQuery) {
+    const descending = query.sort.startsWith('-');
+    const key = query.sort.replace('-', '') as SortKey;
+    const direction = descending ? desc : asc;
+    const records = await this.records(
+      and(eq(recordings.projectId, projectId), ...matches(query), after(query.cursor, key, descending)),
+      [direction(sortColumns[key]), direction(recordings.id)],
+      query.limit + 1,
+    );
+    const page = pageOfRows(
+      records,
+      query.limit,
+      (row) => [cursorValue(row, key), row.id],
+      (row) => row,
+    );
+    return { ...page, items: await this.complete(page.items) };
+  }
+
+  private async records(where: SQL | undefined, order: SQL[] = [], limit = 1): Promise<RecordingRecord[]> {
+    const earlier = sql<RecordingRecord['duplicateOf']>`(
+      select json_build_object('id', earlier.id, 'number', earlier.number)
+      from recordings earlier
+      where earlier.project_id = ${recordings.projectId} and earlier.file_sha256 = ${recordings.fileSha256}
+        and earlier.number < ${recordings.number}
+      order by earlier.number limit 1)`;
+    return this.database
+      .select({ ...getTableColumns(recordings), duplicateOf: earlier, uploaderName: users.name })
+      .from(recordings)
+      .innerJoin(users, eq(users.id, recordings.uploadedById))
+      .where(where)
+      .orderBy(...order)
+      .limit(limit);
+  }
+
+  private async complete(records: RecordingRecord[]): Promise<Recording[]> {
+    if (records.length === 0) return [];
+    const ids = records.map(({ id }) => id);
+    const [channelsById, latestById] = await Promise.all([this.channelsOf(ids), this.latestAnalyses(ids)]);
+    const summaries = await this.summariesOf([...latestById.values()]);
+    return records.map((record) => {
+      const latestAnalysisId = latestById.get(record.id) ?? null;
+      return toRecording(record, {
+        channels: channelsById.get(record.id) ?? [],
+        latestAnalysisId,
+        summaries: summaries.get(latestAnalysisId ?? '') ?? [],
+      });
+    });
+  }
+
+  private async channelsOf(ids: string[]): Promise<Map<string, Channel[]>> {
+    const { recordingId, index, name, quantity, unit, gain, offset } = channels;
+    const rows = await this.database
+      .select({ recordingId, index, name, quantity, unit, gain, offset })
+      .from(channels)
+      .where(inArray(channels.recordingId, ids))
+      .orderBy(channels.index);
+    return grouped(rows, (row) => row.recordingId);
+  }
+
+  private async latestAnalyses(ids: string[]): Promise<Map<string, string>> {
+    const rows = await this.database
+      .selectDistinctOn([analyses.recordingId], { recordingId: analyses.recordingId, id: analyses.id })
+      .from(analyses)
+      .where(
+        and(inArray(analyses.recordingId, ids), eq(analyses.status, 'done'), isNull(analyses.supersededById)),
+      )
+      .orderBy(analyses.recordingId, desc(analyses.createdAt), desc(analyses.id));
+    return new Map(rows.map((row) => [row.recordingId, row.id]));
+  }
+
+  private async summariesOf(analysisIds: string[]): Promise<Map<string, ChannelSummary[]>> {
+    if (analysisIds.length === 0) return new Map();
+    const harmonicRms = sql<number[]>`coalesce((
+      select array_agg(h.rms order by h."order") from ${harmonics} h
+      where h.analysis_id = ${analysisChannels.analysisId} and h.channel_index = ${analysisChannels.index}
+        and h."order" >= 1), '{}')`;
+    const { analysisId, index, name, quantity, unit, rms, fundamental, thdFPercent } = analysisChannels;
+    const rows = await this.database
+      .select({ analysisId, index, name, quantity, unit, rms, fundamental, thdFPercent, harmonicRms })
+      .from(analysisChannels)
+      .where(inArray(analysisChannels.analysisId, analysisIds))
+      .orderBy(analysisChannels.index);
+    const summaries = rows.flatMap((row) =>
+      row.rms === null
+        ? []
+        : [
+            {
+              ...row,
+              rms: row.rms,
+              channel: row.index,
+              fundamentalHz: row.fundamental?.frequencyHz ?? null,
+            },
+          ],
+    );
+    return grouped(summaries, (row) => row.analysisId);
+  }
+}
+
+function matches({ q, status }: RecordingQuery): SQL[] {
+  const conditions: SQL[] = [];
+  if (status !== undefined) conditions.push(eq(recordings.status, status));
+  if (q !== undefined && q !== '') {
+    const pattern = likePattern(q);
+    const written = sql`'R-' || lpad(${recordings.number}::text, greatest(4, length(${recordings.number}::text)), '0')`;
+    conditions.push(
+      or(
+        ilike(written, pattern),
+        ilike(recordings.name, pattern),
+        ilike(recordings.eut, pattern),
+        ilike(recordings.fileName, pattern),
+      )!,
+    );
+  }
+  return conditions;
+}
+
+/** Rows behind the cursor, in the order of sorting (keyset paging). */
+function after(cursor: string | undefined, key: SortKey, descending: boolean): SQL | undefined {
+  const place = decodeCursor(cursor, cursorShape);
+  if (place === undefined) return undefined;
+  const [value, id] = place;
+  const column = sortColumns[key];
+  const typed = {
+    number: sql`${value}::integer`,
+    name: sql`${value}::text`,
+    createdAt: sql`${value}::timestamptz`,
+  };
+  return descending
+    ? sql`(${column}, ${recordings.id}) < (${typed[key]}, ${id}::uuid)`
+    : sql`(${column}, ${recordings.id}) > (${typed[key]}, ${id}::uuid)`;
+}
+
+function cursorValue(row: RecordingRecord, key: SortKey): string | number {
+  return key === 'createdAt' ? row.createdAt.toISOString() : row[key];
+}

@@ -1,0 +1,24 @@
+import { Module } from '@nestjs/common';
+import { AnalysisRunsService } from './analysis-runs.service.js';
+import { ReadRecordingHandler } from './reading/read-recording.handler.js';
+import { RecordingDataController } from './recording-data.controller.js';
+import { RecordingViewsRepository } from './recording-views.repository.js';
+import { RecordingsController } from './recordings.controller.js';
+import { RecordingsRepository } from './recordings.repository.js';
+import { RecordingsService } from './recordings.service.js';
+import { UploadsController } from './uploads.controller.js';
+import { WaveformService } from './waveform.service.js';
+
+@Module({
+  controllers: [RecordingsController, UploadsController, RecordingDataController],
+  providers: [
+    RecordingsService,
+    RecordingsRepository,
+    RecordingViewsRepository,
+    AnalysisRunsService,
+    WaveformService,
+    ReadRecordingHandler,
+  ],
+  exports: [RecordingsService, AnalysisRunsService, ReadRecordingHandler],
+})
+export class RecordingsModule {}

@@ -1,0 +1,172 @@
+import { Inject, Injectable } from '@nestjs/common';
+import type { ImportOptions, Recording, RecordingQuery, UpdateRecording } from '@overtally/contracts';
+import type { Database, Tx } from '@overtally/db';
+import { randomUUID } from 'node:crypto';
+import { parse } from 'node:path';
+import { problem } from '../common/problem.js';
+import { DATABASE } from '../database/database.tokens.js';
+import { readRecordingJob } from '../jobs/definitions/read-recording.job.js';
+import { JobsService } from '../jobs/jobs.service.js';
+import { Storage, type StagedObject } from '../storage/storage.js';
+import { AnalysisRunsService } from './analysis-runs.service.js';
+import type { UploadFields } from './dto/upload.dto.js';
+import { recordingPrefix, sourceKey } from './recording-keys.js';
+import { RecordingViewsRepository } from './recording-views.repository.js';
+import { RecordingsRepository, type RecordingRow } from './recordings.repository.js';
+
+const maxNameLength = 160;
+const maxFileNameLength = 255;
+
+export interface Upload {
+  projectId: string;
+  uploadedById: string;
+  fileName: string;
+  staged: StagedObject;
+  fields: UploadFields;
+}
+
+/** Recordings: bringing them in, changing what is said of them, taking them away. */
+@Injectable()
+export class RecordingsService {
+  constructor(
+    @Inject(DATABASE) private readonly database: Database,
+    private readonly repository: RecordingsRepository,
+    private readonly views: RecordingViewsRepository,
+    private readonly runs: AnalysisRunsService,
+    private readonly jobs: JobsService,
+    private readonly storage: Storage,
+  ) {}
+
+  async get(id: string): Promise<Recording> {
+    const recording = await this.views.one(id);
+    if (recording === undefined) throw noSuchRecording();
+    return recording;
+  }
+
+  page(projectId: string, query: RecordingQuery) {
+    return this.views.page(projectId, query);
+  }
+
+  /** Keeps an uploaded file as a new recording and queues its reading. */
+  async upload({ projectId, uploadedById, fileName, staged, fields }: Upload): Promise<Recording> {
+    const { import: importOptions, capturedAt, name, ...bench } = fields;
+    const key = sourceKey(projectId, staged.sha256);
+    const id = await this.database.transaction(async (tx) => {
+      await this.repository.lockSource(tx, key);
+      // The row must not be seen before its file is there; bytes known already are stored once.
+      if (!(await this.storage.exists(key))) await staged.commit(key);
+      const recordingId = await this.repository.insert(tx, {
+        projectId,
+        uploadedById,
+        ...bench,
+        name: name ?? nameFrom(fileName),
+        capturedAt: toDate(capturedAt ?? null),
+        fileName: fileName.slice(0, maxFileNameLength),
+        fileSize: staged.size,
+        fileSha256: staged.sha256,
+        sourceKey: key,
+        importOptions: importOptions ?? {},
+      });
+      await this.jobs.enqueue(tx, readRecordingJob, { recordingId, readId: randomUUID() });
+      return recordingId;
+    });
+    return this.get(id);
+  }
+
+  /** Changes bench data; a change of channels is followed by a new analysis that supersedes the earlier ones. */
+  async update(id: string, userId: string, change: UpdateRecording): Promise<Recording> {
+    await this.database.transaction(async (tx) => {
+      const recording = await this.locked(tx, id);
+      const { channels, capturedAt, ...bench } = change;
+      const moment = capturedAt === undefined ? {} : { capturedAt: toDate(capturedAt) };
+      await this.repository.update(tx, id, { ...bench, ...moment });
+      if (channels !== undefined && channels.length > 0) await this.rescale(tx, recording, userId, channels);
+    });
+    return this.get(id);
+  }
+
+  /** Reads the source again under other options. What the earlier reading gave stands until the new one is done. */
+  async readAgain(id: string, options: ImportOptions): Promise<Recording> {
+    await this.database.transaction(async (tx) => {
+      const recording = await this.locked(tx, id);
+      if (isBeingRead(recording))
+        throw problem(409, 'being-read', 'The recording is being read; wait until it is done');
+      await this.runs.cancelAll(tx, id);
+      await this.repository.update(tx, id, {
+        importOptions: options,
+        status: 'received',
+        progress: 0,
+        problem: null,
+      });
+      await this.jobs.enqueue(tx, readRecordingJob, { recordingId: id, readId: randomUUID() });
+    });
+    return this.get(id);
+  }
+
+  /** Deletes a recording and all that was computed from it, unless a report refers to one of its verdicts. */
+  async delete(id: string): Promise<void> {
+    const key = await this.database.transaction(async (tx) => {
+      const recording = await this.locked(tx, id);
+      const titles = await this.repository.reportsWith(tx, id);
+      if (titles.length > 0) {
+        const named = titles.map((title) => `“${title}”`).join(', ');
+        throw problem(409, 'in-report', `A verdict on this recording stands in ${named}; take it out first`);
+      }
+      await this.repository.delete(tx, id);
+      return recording.sourceKey;
+    });
+    await this.storage.deleteAll(recordingPrefix(id));
+    await this.database.transaction(async (tx) => {
+      await this.repository.lockSource(tx, key);
+      if (!(await this.repository.isSourceUsed(tx, key))) await this.storage.delete(key);
+    });
+  }
+
+  private async locked(tx: Tx, id: string): Promise<RecordingRow> {
+    const recording = await this.repository.lock(tx, id);
+    if (recording === undefined) throw noSuchRecording();
+    return recording;
+  }
+
+  private async rescale(
+    tx: Tx,
+    recording: RecordingRow,
+    userId: string,
+    changes: NonNullable<UpdateRecording['channels']>,
+  ): Promise<void> {
+    const { id } = recording;
+    const known = new Set((await this.repository.channelsOf(tx, id)).map(({ index }) => index));
+    if (isBeingRead(recording) || known.size === 0) {
+      throw problem(409, 'not-read', 'The channels can be changed once the recording has been read');
+    }
+    const errors = changes.flatMap(({ index }, place) =>
+      known.has(index)
+        ? []
+        : [{ path: `channels.${place}.index`, message: `The recording has no channel ${index}` }],
+    );
+    if (errors.length > 0)
+      throw problem(400, 'invalid-request', 'A channel is not known; see errors', errors);
+    for (const { index, ...change } of changes) {
+      if (Object.keys(change).length > 0) await this.repository.updateChannel(tx, id, index, change);
+    }
+    const settings = await this.repository.settingsFor(tx, recording);
+    await this.runs.start(tx, { recordingId: id, settings, startedById: userId, replacesEarlier: true });
+  }
+}
+
+function isBeingRead({ status }: RecordingRow): boolean {
+  return status === 'received' || status === 'reading';
+}
+
+function toDate(moment: string | null): Date | null {
+  return moment === null ? null : new Date(moment);
+}
+
+function nameFrom(fileName: string): string {
+  const name = parse(fileName).name.trim().slice(0, maxNameLength);
+  return name === '' ? 'Unnamed' : name;
+}
+
+function noSuchRecording() {
+  return problem(404, 'not-found', 'There is no such recording');
+}

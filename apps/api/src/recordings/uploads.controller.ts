@@ -1,0 +1,65 @@
+import { Body, Controller, Param, Post, UploadedFile, UseInterceptors } from '@nestjs/common';
+import { FileInterceptor } from '@nestjs/platform-express';
+import { ApiBody, ApiConsumes, ApiOperation, ApiTags } from '@nestjs/swagger';
+import multer from 'multer';
+import { ZodResponse } from 'nestjs-zod';
+import { RequirePermission } from '../access/require-permission.decorator.js';
+import { ApiProblem } from '../common/api-problem.decorator.js';
+import { CurrentUser, type SignedInUser } from '../common/current-user.decorator.js';
+import { problem } from '../common/problem.js';
+import { ImportPreviewDto, RecordingDto } from './dto/recording.dto.js';
+import { PreviewDto, previewBody, uploadBody, UploadDto } from './dto/upload.dto.js';
+import { importPreview } from './import-preview.js';
+import { RecordingsService } from './recordings.service.js';
+import type { StagedFile } from './uploading/staging-engine.js';
+import { UploadInterceptor } from './uploading/upload.interceptor.js';
+
+const maxHeadBytes = 256 * 1024;
+
+@ApiTags('recordings')
+@Controller('projects/:id')
+export class UploadsController {
+  constructor(private readonly recordings: RecordingsService) {}
+
+  @Post('recordings')
+  @UseInterceptors(UploadInterceptor)
+  @RequirePermission('recording.upload', { resource: 'project' })
+  @ApiOperation({ summary: 'Upload a capture; it is read and analysed in the background' })
+  @ApiConsumes('multipart/form-data')
+  @ApiBody({ schema: uploadBody })
+  @ZodResponse({ status: 202, type: RecordingDto })
+  @ApiProblem(400, 'No file, or import options that are not valid')
+  @ApiProblem(413, 'The file is larger than the limit')
+  upload(
+    @Param('id') projectId: string,
+    @CurrentUser() user: SignedInUser,
+    @UploadedFile() file: StagedFile | undefined,
+    @Body() fields: UploadDto,
+  ) {
+    if (file === undefined) throw missing('file', 'Send the capture as a part named file');
+    const { originalname: fileName, staged } = file;
+    return this.recordings.upload({ projectId, uploadedById: user.id, fileName, staged, fields });
+  }
+
+  @Post('import-preview')
+  @UseInterceptors(
+    FileInterceptor('head', {
+      storage: multer.memoryStorage(),
+      limits: { fileSize: maxHeadBytes, files: 1 },
+    }),
+  )
+  @RequirePermission('recording.upload', { resource: 'project' })
+  @ApiOperation({ summary: 'How the beginning of a file would be read; nothing is kept' })
+  @ApiConsumes('multipart/form-data')
+  @ApiBody({ schema: previewBody })
+  @ZodResponse({ status: 200, type: ImportPreviewDto })
+  @ApiProblem(413, 'The beginning is longer than 256 KiB')
+  preview(@UploadedFile() head: Express.Multer.File | undefined, @Body() fields: PreviewDto) {
+    if (head === undefined) throw missing('head', 'Send the beginning of the file as a part named head');
+    return importPreview(head.buffer, fields);
+  }
+}
+
+function missing(path: string, message: string) {
+  return problem(400, 'invalid-request', message, [{ path, message }]);
+}

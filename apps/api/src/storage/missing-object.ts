@@ -1,0 +1,12 @@
+import { problem } from '../common/problem.js';
+import { StorageObjectMissing } from './storage.js';
+
+/** Turns the lack of a stored object into an answer that says what is wrong with the installation. */
+export async function present<T>(work: Promise<T>): Promise<T> {
+  try {
+    return await work;
+  } catch (error) {
+    if (!(error instanceof StorageObjectMissing)) throw error;
+    throw problem(500, 'stored-file-missing', 'A stored file is missing; have it restored from the backup');
+  }
+}

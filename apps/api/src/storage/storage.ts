@@ -1,0 +1,48 @@
+import type { Readable } from 'node:stream';
+
+/** A part of an object: first and last byte, both included, counted from 0. */
+export interface ByteRange {
+  start: number;
+  end: number;
+}
+
+/** Bytes that were received whole and wait for their name. */
+export interface StagedObject {
+  readonly size: number;
+  /** SHA-256 of the bytes, 64 lower-case hexadecimal digits. */
+  readonly sha256: string;
+  /** Puts the bytes under `key`. An object already there is replaced. */
+  commit(key: string): Promise<void>;
+  /** Drops the bytes; does nothing after `commit`. */
+  discard(): Promise<void>;
+}
+
+export type ByteInput = AsyncIterable<Uint8Array> | Uint8Array;
+
+/** Thrown when an object that ought to be there is not. */
+export class StorageObjectMissing extends Error {
+  constructor(readonly key: string) {
+    super(`The stored object ${key} is missing`);
+    this.name = 'StorageObjectMissing';
+  }
+}
+
+/**
+ * Where files lie. Keys are relative paths such as `recordings/<id>/channel-0.npy`; see `checkedKey`.
+ * An object appears whole or not at all. Reading a missing object fails with `StorageObjectMissing`.
+ */
+export abstract class Storage {
+  /** Receives bytes without a name yet; what was received of a source that fails is dropped. */
+  abstract stage(source: ByteInput): Promise<StagedObject>;
+  abstract put(key: string, source: ByteInput): Promise<{ size: number; sha256: string }>;
+  /** Takes over a local file as the object; the file is gone afterwards. */
+  abstract putFile(key: string, localPath: string): Promise<void>;
+  abstract read(key: string, range?: ByteRange): Promise<Readable>;
+  abstract readBytes(key: string, range?: ByteRange): Promise<Uint8Array>;
+  abstract exists(key: string): Promise<boolean>;
+  abstract size(key: string): Promise<number>;
+  /** Deletes the object if it is there. */
+  abstract delete(key: string): Promise<void>;
+  /** Deletes every object whose key begins with `prefix`, which ends in a slash. */
+  abstract deleteAll(prefix: string): Promise<void>;
+}
