@@ -47,7 +47,16 @@ export async function newNote(database: Database, analysisId: string, { userId }
   return made(row);
 }
 
+/** A verdict on channel 0, which is made where the analysis has none. */
 export async function newVerdict(database: Database, analysisId: string, { userId }: Owner) {
+  await database
+    .insert(schema.analysisChannels)
+    .values({
+      ...{ analysisId, index: 0, name: 'i', quantity: 'current', unit: 'A', thdMaxOrder: 40 },
+      ...{ spectrumKey: `analyses/${analysisId}/channel-0.npy`, spectrumWindow: 'hann' },
+      ...{ spectrumStartHz: 0, spectrumStepHz: 1 },
+    })
+    .onConflictDoNothing();
   const [row] = await database
     .insert(schema.verdicts)
     .values({

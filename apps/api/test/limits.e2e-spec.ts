@@ -1,0 +1,135 @@
+import { limitSetPageSchema, limitSetSchema, type LimitSet } from '@overtally/contracts';
+import { schema } from '@overtally/db';
+import { publishedLimitSets } from '@overtally/limits';
+import { eq } from 'drizzle-orm';
+import supertest from 'supertest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { newProject } from './support/factories.js';
+import { newLimitSet } from './support/project-contents.js';
+import { startTestApp, type TestApp } from './support/test-app.js';
+
+const customerLimits = {
+  title: 'Customer specification 7',
+  quantity: 'current',
+  unit: 'A',
+  basis: 'absolute',
+  orders: [
+    { order: 5, limit: 0.4 },
+    { order: 3, limit: 0.9 },
+  ],
+  source: 'Contract 2026-118, annex 2',
+};
+
+let test: TestApp;
+let foreign: { id: string };
+
+beforeAll(async () => {
+  test = await startTestApp();
+  foreign = await newProject(test.database);
+});
+afterAll(() => test.close());
+
+const projectPath = (suffix = ''): string => `/api/projects/${test.project.id}/limit-sets${suffix}`;
+const idsOf = (body: { items: LimitSet[] }): string[] => body.items.map((set) => set.id);
+
+async function createAsAnalyst(given: object = {}): Promise<LimitSet> {
+  const analyst = await test.signIn('analyst');
+  const reply = await analyst
+    .post(projectPath())
+    .send({ ...customerLimits, ...given })
+    .expect(201);
+  return limitSetSchema.parse(reply.body);
+}
+
+describe('limit sets', () => {
+  it('lists every published set to anyone signed in, and nothing to others', async () => {
+    const stranger = await test.signIn('stranger');
+    const { body } = await stranger.get('/api/limit-sets').expect(200);
+    expect(limitSetPageSchema.parse(body)).toEqual({ items: publishedLimitSets, nextCursor: null });
+    await supertest(test.http).get('/api/limit-sets').expect(401);
+  });
+
+  it('keeps a custom set in the order of its orders, with what it says of its source', async () => {
+    const set = await createAsAnalyst();
+    expect(set).toMatchObject({ projectId: test.project.id, version: 1, procedure: 'plain', unit: 'A' });
+    expect(set.orders).toEqual([
+      { order: 3, limit: 0.9 },
+      { order: 5, limit: 0.4 },
+    ]);
+    expect(set.source).toEqual(['Contract 2026-118, annex 2']);
+    const guest = await test.signIn('guest');
+    const listed = await guest.get(projectPath()).expect(200);
+    expect(idsOf(listed.body)).toContain(set.id);
+    expect(idsOf((await guest.get('/api/limit-sets').expect(200)).body)).toContain(set.id);
+  });
+
+  it('gives percent limits the percent sign and a TDD limit its parameter', async () => {
+    const set = await createAsAnalyst({
+      basis: 'percent-of-fundamental',
+      unit: '',
+      totals: [{ name: 'TDD', limit: 5, maxOrder: 40 }],
+    });
+    expect([set.unit, set.parameters]).toEqual(['%', ['ilA']]);
+  });
+
+  it('refuses what could not be judged by, naming the field', async () => {
+    const analyst = await test.signIn('analyst');
+    const twice = { ...customerLimits, orders: [customerLimits.orders[0], customerLimits.orders[0]] };
+    const doubled = await analyst.post(projectPath()).send(twice).expect(400);
+    expect(doubled.body.errors[0].path).toBe('orders');
+    const unitless = await analyst
+      .post(projectPath())
+      .send({ ...customerLimits, unit: '' })
+      .expect(422);
+    expect(unitless.body.errors[0].path).toBe('unit');
+  });
+
+  it('shows a custom set to members and administrators, and to strangers not even that it exists', async () => {
+    const { id } = await createAsAnalyst();
+    for (const role of ['guest', 'technician', 'administrator'] as const) {
+      await (await test.signIn(role)).get(`/api/limit-sets/${id}`).expect(200);
+    }
+    const stranger = await test.signIn('stranger');
+    await stranger.get(`/api/limit-sets/${id}`).expect(404);
+    await stranger.get('/api/limit-sets/iec61000-3-2.classA').expect(200);
+    await stranger.get('/api/limit-sets/iec61000-3-2.classZ').expect(404);
+    await stranger.get(`/api/limit-sets?projectId=${test.project.id}`).expect(404);
+  });
+
+  it('does not mix the sets of two projects', async () => {
+    const other = await newLimitSet(test.database, {
+      projectId: foreign.id,
+      userId: test.people.stranger.id,
+    });
+    const analyst = await test.signIn('analyst');
+    expect(idsOf((await analyst.get('/api/limit-sets')).body)).not.toContain(other.id);
+    await analyst.get(`/api/limit-sets?projectId=${foreign.id}`).expect(404);
+    await analyst.delete(`/api/limit-sets/${other.id}`).expect(404);
+    const administrator = await test.signIn('administrator');
+    const seen = await administrator.get(`/api/limit-sets?projectId=${foreign.id}`).expect(200);
+    expect(idsOf(seen.body)).toContain(other.id);
+  });
+
+  it('lets analysts and managers write, and nobody else', async () => {
+    for (const role of ['technician', 'guest', 'administrator'] as const) {
+      await (await test.signIn(role)).post(projectPath()).send(customerLimits).expect(403);
+    }
+    await (await test.signIn('stranger')).post(projectPath()).send(customerLimits).expect(404);
+  });
+
+  it('deletes a custom set and takes it from projects that compare with it', async () => {
+    const { id } = await createAsAnalyst();
+    const { projects } = schema;
+    await test.database
+      .update(projects)
+      .set({ comparisonLimitSetId: id })
+      .where(eq(projects.id, test.project.id));
+    await (await test.signIn('technician')).delete(`/api/limit-sets/${id}`).expect(403);
+    const manager = await test.signIn('manager');
+    await manager.delete(`/api/limit-sets/${id}`).expect(204);
+    await manager.get(`/api/limit-sets/${id}`).expect(404);
+    const [project] = await test.database.select().from(projects).where(eq(projects.id, test.project.id));
+    expect(project?.comparisonLimitSetId).toBeNull();
+    await manager.delete('/api/limit-sets/iec61000-3-2.classA').expect(404);
+  });
+});
