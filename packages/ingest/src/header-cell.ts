@@ -7,6 +7,7 @@ const NAMED: [RegExp, Quantity][] = [
   [/^(power|leistung|puissance)/i, 'power'],
   [/^(sound.?pressure|schalldruck|microphone|mic\b)/i, 'sound_pressure'],
   [/^(acc(el|eleration)?([^a-z]|$)|beschleunigung)/i, 'acceleration'],
+  [/^(codes?|counts?|adc|raw)(?![a-z])/i, 'dimensionless'],
   [/^(velocity|vibration.?velocity|schwinggeschwindigkeit)/i, 'velocity'],
   [/^[uv](l?\d{1,2}|[abcn]|ab|bc|ca|an|bn|cn|rms)?(?![a-z\d])/i, 'voltage'],
   [/^i(l?\d{1,2}|[abcn]|rms)?(?![a-z\d])/i, 'current'],

@@ -38,6 +38,11 @@ describe('time stamps', () => {
     expect(read.warnings).toEqual([expect.objectContaining({ code: 'gap', count: 1, firstLine: 21 })]);
   });
 
+  it('loses nothing of stamps in milliseconds since 1970', async () => {
+    const rows = Array.from({ length: 10 }, (_, i) => `${1711015200000 + i},${i}`);
+    expect((await readGood(`epoch_ms,u_V\n${rows.join('\n')}\n`)).sampleRateHz).toBeCloseTo(1000, 9);
+  });
+
   it('keeps a row whose time is missing', async () => {
     const read = await readGood(table(10, (lines) => (lines[4] = ',7')));
     expect(read.sampleCount).toBe(10);
@@ -151,6 +156,24 @@ describe('lines', () => {
     expect(problem).toMatchObject({ code: 'text-in-data', line: 6 });
   });
 
+  it('of statistics behind the record are left', async () => {
+    const read = await readGood(`${table(10)}\nStatistics\nMax,9.5\nMin,0.5\n`);
+    expect([read.sampleCount, codes(read)]).toEqual([10, ['trailing-text']]);
+  });
+
+  it('with a cell too many are refused, blank cells before it or not', async () => {
+    const problem = await readBad(table(10, (lines) => (lines[7] = '0.006,,3')));
+    expect(problem).toMatchObject({ code: 'too-many-cells', line: 8, column: 3 });
+  });
+
+  it('with a date, a clock and a state between the values', async () => {
+    const rows = Array.from({ length: 8 }, (_, i) => `2024-03-21,10:00:00.${i}00,${i},OK`);
+    const read = await readGood(`Date,Time,U [V],State\n${rows.join('\n')}\n`);
+    expect(read.sampleRateHz).toBeCloseTo(10, 6);
+    expect(read.channels.map(({ name }) => name)).toEqual(['U']);
+    expect(codes(read)).toEqual(['columns-left-out']);
+  });
+
   it('before the table give metadata and, without a time column, the rate', async () => {
     const read = await readGood('Model: R7\nSample Interval,1e-3\n\nu_mV,i_A\n1,2\n2,3\n4,5\n4,6\n');
     expect(read.sampleRateHz).toBeCloseTo(1000, 6);
@@ -201,7 +224,7 @@ describe('commas that may be either', () => {
   });
 
   it('stand between the cells where it names two', async () => {
-    const read = await readGood('u,i\n0,5\n0,7\n,5\n2,5\n', { sampleRateHz: 10 });
+    const read = await readGood('u_V,i_A\n0,5\n0,7\n,5\n2,5\n', { sampleRateHz: 10 });
     expect(read.samples).toHaveLength(2);
     expect(read.layout.confident).toBe(true);
   });

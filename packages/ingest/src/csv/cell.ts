@@ -2,12 +2,13 @@ import type { DecimalMark } from '../types.js';
 import { parseStamp } from './time-stamp.js';
 
 /** What a cell holds. `grouped`: a number with thousands separators; `other-mark`: one with the other decimal mark. */
-export type CellKind = 'number' | 'blank' | 'missing' | 'grouped' | 'other-mark' | 'stamp' | 'word';
+export type CellKind = 'number' | 'blank' | 'missing' | 'grouped' | 'other-mark' | 'stamp' | 'date' | 'word';
 
 const POINT_NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)([eEdD][+-]?\d+)?$/;
 const COMMA_NUMBER = /^[+-]?(\d+|\d*,\d+)([eEdD][+-]?\d+)?$/;
 const POINT_GROUPED = /^[+-]?\d{1,3}([,'’ \u00a0\u202f]\d{3})+(\.\d*)?$/;
 const COMMA_GROUPED = /^[+-]?\d{1,3}([.'’ \u00a0\u202f]\d{3})+(,\d*)?$/;
+const DATE = /^\d{1,4}([-/.])\d{1,2}\1\d{1,4}$/;
 const MISSING =
   /^(n\/?a|#n\/a|#?nan|nan\(.*\)|[+-]?inf(inity)?|null|none|nil|-+|\?+|\*+|[+-]?\d\.#\w+|#\w+[!?]?)$/i;
 
@@ -28,6 +29,7 @@ export function cellKind(cell: string, decimal: DecimalMark): CellKind {
   if ((point ? COMMA_NUMBER : POINT_NUMBER).test(cell)) return 'other-mark';
   if ((point ? COMMA_GROUPED : POINT_GROUPED).test(cell)) return 'other-mark';
   if (MISSING.test(cell)) return 'missing';
+  if (DATE.test(cell)) return 'date';
   return parseStamp(cell) === null ? 'word' : 'stamp';
 }
 

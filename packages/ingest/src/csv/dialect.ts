@@ -46,7 +46,8 @@ function dataShare(cells: string[], decimal: DecimalMark): number {
   let first = 0;
   cells.forEach((cell, i) => {
     const kind = cellKind(cell, decimal);
-    const weight = kind === 'number' || kind === 'stamp' ? 1 : kind === 'grouped' ? 0.5 : 0;
+    const weight =
+      kind === 'number' || kind === 'stamp' || kind === 'date' ? 1 : kind === 'grouped' ? 0.5 : 0;
     if (kind !== 'blank' && kind !== 'missing') filled += 1;
     numeric += weight;
     if (i === 0) first = kind === 'missing' || kind === 'blank' ? 0.5 : weight;
@@ -127,6 +128,11 @@ function evaluate(
   };
 }
 
+/** Blanks between cells include tabs, so a table with tabs reads the same under both. */
+function sameSplit(a: Dialect, b: Dialect): boolean {
+  return a.delimiter === b.delimiter || (a.delimiter === '\t' && b.delimiter === ' ');
+}
+
 /** Delimiters that occur in the lines, and one more that stands for a single column. */
 function delimitersIn(lines: string[]): Delimiter[] {
   const text = lines.join('\n');
@@ -158,8 +164,7 @@ export function sniffDialect(allLines: string[], options: ImportOptions): Dialec
   candidates.sort(byPreference);
   const [best, second] = candidates;
   if (best === undefined) return null;
-  const rival =
-    second !== undefined && second.delimiter !== best.delimiter && best.score - second.score <= TIE;
+  const rival = second !== undefined && !sameSplit(best, second) && best.score - second.score <= TIE;
   return { ...best, ambiguous: rival && (second.columnCount > 1 || !best.hasHeader) };
 }
 

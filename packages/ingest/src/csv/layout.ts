@@ -42,7 +42,7 @@ function isUnitsRow(cells: string[]): boolean {
 function isHeaderRow(cells: string[], dialect: Dialect): boolean {
   const filled = cells.filter((cell) => cell !== '');
   const words = filled.filter((cell) => cellKind(cell, dialect.decimal) !== 'number');
-  const fits = cells.length >= dialect.columnCount - 1 && filled.length <= dialect.columnCount;
+  const fits = cells.length >= dialect.columnCount - 1 && filled.length <= dialect.columnCount + 2;
   return words.length > 0 && (fits || (filled.length > 1 && 2 * filled.length - 1 <= dialect.columnCount));
 }
 

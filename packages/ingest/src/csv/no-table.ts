@@ -27,7 +27,7 @@ export function refuseNoTable(lines: string[], fileName: string, options: Import
     refuse('empty-file', `"${fileName}" is empty: it holds no data but blank lines.`, CURE_TABLE);
   }
   const [first = ''] = filled;
-  const isHeader = filled.length <= 2 && /[;,\t|]/.test(first) && !/[.!?]\s*$/.test(first);
+  const isHeader = filled.length <= 2 && /^[^{<]*[;,\t|]/.test(first) && !/[.!?]\s*$/.test(first);
   if (isHeader) {
     refuse(
       'no-samples',

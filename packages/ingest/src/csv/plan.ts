@@ -61,7 +61,10 @@ export function refuseNoSampleRate(message: string): never {
 }
 
 /** Describes the plan in the words of the public interface. */
-export function describeLayout({ layout, encoding }: CsvPlan): DetectedLayout {
+export function describeLayout({ layout, channels, encoding }: CsvPlan): DetectedLayout {
+  const unitless = channels.filter(({ unit, quantity }) => unit === '' && quantity !== 'dimensionless');
+  const names = unitless.map(({ name }) => `"${name}"`).join(', ');
+  const doubts = names === '' ? layout.doubts : [...layout.doubts, `No unit is known for ${names}.`];
   return {
     format: 'csv',
     encoding,
@@ -72,7 +75,7 @@ export function describeLayout({ layout, encoding }: CsvPlan): DetectedLayout {
     timeColumn: layout.time?.column ?? null,
     timeUnit: layout.time?.unit ?? null,
     columns: layout.columns,
-    confident: layout.doubts.length === 0,
-    doubts: layout.doubts,
+    confident: doubts.length === 0,
+    doubts,
   };
 }

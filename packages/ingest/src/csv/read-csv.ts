@@ -106,7 +106,7 @@ export async function readCsv(input: ByteSource, args: CsvArguments): Promise<Re
     sampleCount: collector.rowCount,
     channels,
     missingValues: collector.missing,
-    startTimeS: axis === null || Number.isNaN(axis.firstStampS) ? null : axis.firstStampS,
+    startTimeS: axis?.startS ?? null,
     warnings,
     metadata: start === null ? layout.metadata : { ...layout.metadata, startTime: start },
     layout: describeLayout(plan),

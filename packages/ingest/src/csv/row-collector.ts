@@ -40,7 +40,7 @@ export class RowCollector {
 
   /** Takes the row that `parser` holds. `unfinished`: it is the last line and has no line end. */
   take(parser: RowParser, line: number, unfinished: boolean): void {
-    if (parser.filledCount === 0 && (parser.cellCount <= 1 || this.axis !== null)) return;
+    if (parser.lastFilled < 0 && (parser.cellCount <= 1 || this.axis !== null)) return;
     if (unfinished && this.isCut(parser)) {
       this.partialLine = line;
       return;
@@ -98,12 +98,14 @@ export class RowCollector {
 
   /** A line of another shape without a single number is no row of the table. */
   private isText(parser: RowParser): boolean {
-    if (parser.kinds.includes(1)) return false;
     const { columnCount } = this.layout.dialect;
     const time = this.layout.time;
+    // After a line of text, rows that begin with a word belong to it: a table of statistics behind the record.
+    if (this.trailingTextLine !== 0 && time !== null && parser.kinds[time.column] !== 1) return true;
+    if (parser.kinds.includes(1)) return false;
     if (time !== null) return parser.kinds[time.column] === 2 || parser.cellCount < columnCount;
     return (
-      parser.cellCount < columnCount || (columnCount === 1 && parser.kinds[0] === 2 && parser.filledCount > 1)
+      parser.cellCount < columnCount || (columnCount === 1 && parser.kinds[0] === 2 && parser.cellCount > 1)
     );
   }
 
@@ -118,9 +120,7 @@ export class RowCollector {
 
   private checkWidth(parser: RowParser, line: number): void {
     const { length } = this.layout.columns;
-    if (parser.cellCount <= length || (parser.cellCount === length + 1 && parser.filledCount <= length))
-      return;
-    if (parser.filledCount <= length) return;
+    if (parser.lastFilled < length) return;
     refuse(
       'too-many-cells',
       `Line ${line} holds ${parser.cellCount} cells where the table has ${length} columns; a thousands separator or a decimal comma may have split a number.`,
@@ -148,13 +148,13 @@ export class RowCollector {
       this.axis.skip();
       return true;
     }
-    const stampS = (parser.cells[time.column] as number) * time.secondsPerUnit;
-    if (this.axis.repeats(stampS) && this.equalsPrevious(parser)) {
+    const stamp = parser.cells[time.column] as number;
+    if (this.axis.repeats(stamp) && this.equalsPrevious(parser)) {
       if (this.duplicates.count === 0) this.duplicates.firstLine = line;
       this.duplicates.count += 1;
       return false;
     }
-    this.axis.push(stampS, line);
+    this.axis.push(stamp, line);
     return true;
   }
 

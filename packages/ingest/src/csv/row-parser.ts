@@ -24,8 +24,8 @@ export class RowParser {
   readonly kinds: Uint8Array;
   /** Cells on the line parsed last, a trailing blank one included. */
   cellCount = 0;
-  /** Cells on the line that are not blank. */
-  filledCount = 0;
+  /** Index of the last cell on the line that is not blank, -1 when all are. */
+  lastFilled = -1;
   /** True when the last cell on the line is blank. */
   endsBlank = false;
   /** Offset of the byte after the line and its end. */
@@ -60,7 +60,7 @@ export class RowParser {
     kinds.fill(0);
     let p = from;
     let column = 0;
-    let filled = 0;
+    let lastFilled = -1;
     for (;;) {
       p = this.skipBlanks(bytes, p, end);
       if (blankRuns && (p >= end || bytes[p] === LF || bytes[p] === CR)) break;
@@ -80,13 +80,13 @@ export class RowParser {
         } else p = this.parseText(bytes, start, end, column, line);
       } else p = this.parseText(bytes, start, end, column, line);
       this.endsBlank = p === start;
-      if (!this.endsBlank) filled += 1;
+      if (!this.endsBlank) lastFilled = column;
       column += 1;
       if (p >= end || bytes[p] === LF || bytes[p] === CR) break;
       if (!blankRuns) p += 1;
     }
     this.cellCount = column;
-    this.filledCount = filled;
+    this.lastFilled = lastFilled;
     this.next = p >= end ? end : bytes[p] === CR && p + 1 < end && bytes[p + 1] === LF ? p + 2 : p + 1;
   }
 

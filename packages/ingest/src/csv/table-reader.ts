@@ -21,7 +21,7 @@ export class TableReader {
     private readonly sink: SampleSink,
   ) {
     const { layout, channels, encoding } = plan;
-    this.axis = layout.time === null ? null : new TimeAxis(layout.time.column);
+    this.axis = layout.time === null ? null : new TimeAxis(layout.time);
     this.stamps = layout.time !== null && layout.time.unit === null ? makeStampReader() : null;
     this.collector = new RowCollector(layout, channels, this.axis);
     const wanted = layout.columns.map(

@@ -1,5 +1,6 @@
 import { refuse } from '../refusal.js';
 import type { ReadWarning } from '../types.js';
+import type { TimeChoice } from './time-column.js';
 
 const SETTLE_AFTER = 256;
 const UNEVEN = 0.05;
@@ -20,7 +21,7 @@ function count(tally: Tally, line: number): void {
  * of the first intervals, and knows the sample rate at the end. Holds no stamps beyond the first few hundred.
  */
 export class TimeAxis {
-  firstStampS = NaN;
+  private firstStamp = NaN;
   private lastStamp = NaN;
   private rowsSinceLast = 0;
   private intervals = 0;
@@ -31,27 +32,33 @@ export class TimeAxis {
   private readonly uneven: Tally = { count: 0, firstLine: 0 };
   private readonly gaps: Tally = { count: 0, firstLine: 0 };
 
-  constructor(private readonly column: number) {}
+  /** Stamps stay in the unit of the file, so that no rounding comes into their differences. */
+  constructor(private readonly time: TimeChoice) {}
+
+  /** First time stamp in seconds, null when there is none. */
+  get startS(): number | null {
+    return Number.isNaN(this.firstStamp) ? null : this.firstStamp * this.time.secondsPerUnit;
+  }
 
   /** A row whose time stamp is missing stands in the record like any other. */
   skip(): void {
     this.rowsSinceLast += 1;
   }
 
-  /** True when `stampS` repeats the time of the row before. */
-  repeats(stampS: number): boolean {
-    return stampS === this.lastStamp && this.rowsSinceLast === 0;
+  /** True when `stamp` repeats the time of the row before. */
+  repeats(stamp: number): boolean {
+    return stamp === this.lastStamp && this.rowsSinceLast === 0;
   }
 
-  push(stampS: number, line: number): void {
+  push(stamp: number, line: number): void {
     const rows = this.rowsSinceLast + 1;
-    if (Number.isNaN(this.lastStamp)) this.firstStampS = stampS;
+    if (Number.isNaN(this.lastStamp)) this.firstStamp = stamp;
     else {
-      if (stampS <= this.lastStamp) this.refuseBackwards(stampS, line);
+      if (stamp <= this.lastStamp) this.refuseBackwards(stamp, line);
       this.intervals += rows;
-      this.measure((stampS - this.lastStamp) / rows, line);
+      this.measure((stamp - this.lastStamp) / rows, line);
     }
-    this.lastStamp = stampS;
+    this.lastStamp = stamp;
     this.rowsSinceLast = 0;
   }
 
@@ -60,9 +67,9 @@ export class TimeAxis {
     this.settle();
     if (this.intervals === 0) return null;
     if (this.gaps.count > 0 && this.uneven.count === 0 && this.regularCount > 0) {
-      return this.regularCount / this.regularTime;
+      return this.regularCount / (this.regularTime * this.time.secondsPerUnit);
     }
-    return this.intervals / (this.lastStamp - this.firstStampS);
+    return this.intervals / ((this.lastStamp - this.firstStamp) * this.time.secondsPerUnit);
   }
 
   warnings(): ReadWarning[] {
@@ -112,17 +119,18 @@ export class TimeAxis {
     if (Math.abs(step - this.interval) > UNEVEN * this.interval) count(this.uneven, line);
   }
 
-  private refuseBackwards(stampS: number, line: number): never {
-    const same = stampS === this.lastStamp;
+  private refuseBackwards(stamp: number, line: number): never {
+    const same = stamp === this.lastStamp;
+    const unit = this.time.unit ?? 's';
     refuse(
       same ? 'time-repeated' : 'time-not-increasing',
       same
-        ? `Line ${line} repeats the time ${stampS} s of the row before with different values: one time stamp stands twice.`
-        : `Line ${line}: the time runs backwards, ${stampS} s after ${this.lastStamp} s. Time stamps must be in increasing order.`,
+        ? `Line ${line} repeats the time ${stamp} ${unit} of the row before with different values: one time stamp stands twice.`
+        : `Line ${line}: the time runs backwards, ${stamp} ${unit} after ${this.lastStamp} ${unit}. Time stamps must be in increasing order.`,
       same
         ? 'Export the time with more digits; or state that there is no time column and give the sample rate.'
         : 'Export the record as one piece in the order of time; or state that there is no time column and give the sample rate.',
-      { line, column: this.column + 1 },
+      { line, column: this.time.column + 1 },
     );
   }
 }

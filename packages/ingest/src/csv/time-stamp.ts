@@ -9,7 +9,7 @@ const YEAR_FIRST = new RegExp(
   String.raw`^(\d{4})[-/.](\d{1,2})[-/.](\d{1,2})[T\s]+${CLOCK}\s*(?:Z|UTC|[+-]\d{2}:?\d{2})?$`,
   'i',
 );
-const DAY_FIRST = new RegExp(String.raw`^(\d{1,2})\.(\d{1,2})\.(\d{4})[T\s]+${CLOCK}$`, 'i');
+const YEAR_LAST = new RegExp(String.raw`^(\d{1,2})([./])(\d{1,2})\2(\d{4})[T\s]+${CLOCK}$`, 'i');
 const CLOCK_ONLY = new RegExp(String.raw`^${CLOCK}$`, 'i');
 
 function clockSeconds(parts: (string | undefined)[]): number {
@@ -19,21 +19,31 @@ function clockSeconds(parts: (string | undefined)[]): number {
   return hour * 3600 + Number(minutes) * 60 + Number(seconds);
 }
 
+/** Midnight of the day in seconds since 1970, and the parts of the clock; slashes with a possible month: month first. */
+function splitDay(text: string): { seconds: number; clock: (string | undefined)[] } | null {
+  const yearFirst = YEAR_FIRST.exec(text);
+  if (yearFirst !== null) {
+    const [, year, month, day] = yearFirst.map(Number) as [number, number, number, number];
+    return { seconds: Date.UTC(year, month - 1, day) / 1000, clock: yearFirst.slice(4) };
+  }
+  const yearLast = YEAR_LAST.exec(text);
+  if (yearLast === null) return null;
+  const [, first, , second, year] = yearLast.map(Number) as [number, number, number, number, number];
+  const [month, day] = yearLast[2] === '/' && first <= 12 ? [first, second] : [second, first];
+  return { seconds: Date.UTC(year, month - 1, day) / 1000, clock: yearLast.slice(5) };
+}
+
 /**
- * Reads `2024-03-21 10:00:00.25`, `2024-03-21T10:00:00Z`, `21.03.2024 10:00:00,25` or `10:00:00.25`. Zone marks are
- * ignored: only differences between the stamps of one file are used.
- * @returns null for anything else, dates written month first among it
+ * Reads `2024-03-21 10:00:00.25`, `2024-03-21T10:00:00Z`, `21.03.2024 10:00:00,25`, `03/21/2024 10:00:00 AM` or
+ * `10:00:00.25`. Zone marks are ignored: only differences between the stamps of one file are used.
+ * @returns null for anything else
  */
 export function parseStamp(text: string): Stamp | null {
-  const yearFirst = YEAR_FIRST.exec(text);
-  const match = yearFirst ?? DAY_FIRST.exec(text);
-  const clock = match === null ? CLOCK_ONLY.exec(text)?.slice(1) : match.slice(4);
+  const day = splitDay(text);
+  const clock = day?.clock ?? CLOCK_ONLY.exec(text)?.slice(1);
   if (clock === undefined) return null;
-  let wholeSeconds = clockSeconds(clock);
-  if (match !== null) {
-    const [first, month, last] = [Number(match[1]), Number(match[2]), Number(match[3])];
-    const [year, day] = yearFirst === null ? [last, first] : [first, last];
-    wholeSeconds += Date.UTC(year, month - 1, day) / 1000;
-  }
-  return { wholeSeconds, fraction: Number(`0.${clock[3] ?? '0'}`) };
+  return {
+    wholeSeconds: (day?.seconds ?? 0) + clockSeconds(clock),
+    fraction: Number(`0.${clock[3] ?? '0'}`),
+  };
 }
