@@ -13,9 +13,12 @@ import type { TestApp } from './test-app.js';
 /** One thing of each kind, all in the project of the test's people. */
 export type Examples = Record<ResourceKind, string>;
 
-/** Makes one thing of each kind. */
-export async function makeExamples({ database, people, project }: TestApp): Promise<Examples> {
-  const owner = { projectId: project.id, userId: people.analyst.id };
+/**
+ * Makes one thing of each kind.
+ * @param userId whose they are
+ */
+export async function makeExamples({ database, project }: TestApp, userId: string): Promise<Examples> {
+  const owner = { projectId: project.id, userId };
   const recording = await newRecording(database, owner);
   const analysis = await newAnalysis(database, recording.id, owner);
   const verdict = await newVerdict(database, analysis.id, owner);

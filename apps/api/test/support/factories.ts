@@ -15,7 +15,7 @@ export async function newPerson(
   database: Database,
   person: Partial<Omit<Person, 'id'>> = {},
 ): Promise<Person> {
-  passwordHash ??= argon2.hash(PASSWORD);
+  passwordHash ??= argon2.hash(PASSWORD, { memoryCost: 19 * 1024, timeCost: 2, parallelism: 1 });
   const email = person.email ?? `${randomUUID()}@example.com`;
   const [row] = await database
     .insert(schema.users)

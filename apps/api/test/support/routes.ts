@@ -18,12 +18,13 @@ export function declaredRoutes(app: NestExpressApplication): Route[] {
   return controllers.flatMap(({ metatype }) => (metatype ? routesOf(metatype) : []));
 }
 
-/** Every route that the server answers, read from its router: `METHOD path`. */
+/** Every route that the server answers, read from its router: `METHOD path`. Middleware answers all methods. */
 export function servedRoutes(app: NestExpressApplication): string[] {
   const { router } = app.getHttpAdapter().getInstance() as { router: { stack: Layer[] } };
-  return router.stack.flatMap(({ route }) =>
-    route ? Object.keys(route.methods).map((method) => `${method.toUpperCase()} ${route.path}`) : [],
-  );
+  return router.stack.flatMap(({ route }) => {
+    const methods = Object.keys(route?.methods ?? {});
+    return route && methods.length === 1 ? [`${methods[0]?.toUpperCase()} ${route.path}`] : [];
+  });
 }
 
 interface Layer {
