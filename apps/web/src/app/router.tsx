@@ -1,5 +1,5 @@
 import { createBrowserRouter, type RouteObject } from 'react-router-dom';
-import { RouteProblem } from './layouts/route-problem.js';
+import { BareProblem } from './layouts/bare-problem.js';
 import { StartingUp } from './layouts/starting-up.js';
 import { projectRoutes } from './project-routes.js';
 
@@ -9,13 +9,13 @@ export const routes: RouteObject[] = [
     path: '/sign-in',
     lazy: () => import('./routes/sign-in.js'),
     HydrateFallback: StartingUp,
-    ErrorBoundary: RouteProblem,
+    ErrorBoundary: BareProblem,
   },
   {
     path: '/',
     lazy: () => import('./layouts/signed-in.js'),
     HydrateFallback: StartingUp,
-    ErrorBoundary: RouteProblem,
+    ErrorBoundary: BareProblem,
     children: [
       { index: true, lazy: () => import('./routes/home.js') },
       {

@@ -34,10 +34,10 @@ export function AppShell({ homeTo, place, tabs, tabsLabel, tools, children }: Ap
       >
         <Link asChild aria-label="Overtally, all projects" flexShrink="0" color="ink">
           <RouterLink to={homeTo}>
-            <Box as="span" hideBelow="md">
+            <Box as="span" display={{ base: 'none', md: 'flex' }}>
               <BrandMark named />
             </Box>
-            <Box as="span" hideFrom="md">
+            <Box as="span" display={{ base: 'flex', md: 'none' }}>
               <BrandMark />
             </Box>
           </RouterLink>

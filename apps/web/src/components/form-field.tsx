@@ -33,12 +33,13 @@ export function FormField({ label, help, error, optional = false, children }: Fo
 type SelectProps = ComponentProps<typeof NativeSelect.Field> & {
   options: readonly { value: string; label: string }[];
   width?: string;
+  disabled?: boolean;
 };
 
 /** A drop-down of the platform; inside a `FormField` it takes its label. */
-export function SelectInput({ options, width, ...props }: SelectProps) {
+export function SelectInput({ options, width, disabled = false, ...props }: SelectProps) {
   return (
-    <NativeSelect.Root width={width ?? 'full'}>
+    <NativeSelect.Root width={width ?? 'full'} disabled={disabled}>
       <NativeSelect.Field {...props}>
         {options.map((option) => (
           <option key={option.value} value={option.value}>

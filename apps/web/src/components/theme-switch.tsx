@@ -7,6 +7,7 @@ export function ThemeSwitch() {
   return (
     <IconButton
       variant="ghost"
+      colorPalette="gray"
       aria-label={`Change to the ${other} theme`}
       title={`Change to the ${other} theme`}
       onClick={() => setPreference(other)}

@@ -1,23 +1,20 @@
 import { Outlet } from 'react-router-dom';
-import { AppShell } from '../../components/app-shell.js';
-import { useAccount } from '../../features/account/hooks/use-account.js';
-import { paths } from '../paths.js';
+import { GeneralFrame } from './general-frame.js';
 import { RouteProblem } from './route-problem.js';
-import { Tools } from './tools.js';
 
-/** Frame of the pages outside projects. */
 export function Component() {
-  const account = useAccount();
-  const tabs = [
-    { label: 'Projects', to: paths.projects() },
-    ...(account.isAdministrator ? [{ label: 'People', to: paths.people() }] : []),
-    { label: 'Account', to: paths.account() },
-  ];
   return (
-    <AppShell homeTo={paths.projects()} tabs={tabs} tabsLabel="Overtally" tools={<Tools account={account} />}>
+    <GeneralFrame>
       <Outlet />
-    </AppShell>
+    </GeneralFrame>
   );
 }
 
-export const ErrorBoundary = RouteProblem;
+/** A page that fails leaves the frame standing. */
+export function ErrorBoundary() {
+  return (
+    <GeneralFrame>
+      <RouteProblem />
+    </GeneralFrame>
+  );
+}

@@ -7,7 +7,6 @@ import { useProject } from '../../features/projects/hooks/use-project.js';
 import { queryClient } from '../../lib/query-client.js';
 import { paths } from '../paths.js';
 import { useProjectId } from '../use-project-id.js';
-import { RouteProblem } from './route-problem.js';
 import { Tools } from './tools.js';
 
 export async function loader({ params }: LoaderFunctionArgs): Promise<null> {
@@ -43,4 +42,4 @@ export function Component() {
   );
 }
 
-export const ErrorBoundary = RouteProblem;
+export { ErrorBoundary } from './general.js';

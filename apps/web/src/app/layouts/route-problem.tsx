@@ -12,7 +12,7 @@ export function RouteProblem() {
     (error instanceof ApiProblem && error.status === 404) ||
     (isRouteErrorResponse(error) && error.status === 404);
   return (
-    <Box py="6" px={{ base: '4', md: '7' }}>
+    <Box py="4">
       <title>Not shown · Overtally</title>
       {missing ? (
         <ErrorState

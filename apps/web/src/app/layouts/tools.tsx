@@ -1,4 +1,4 @@
-import { Box, Button, Menu, Portal } from '@chakra-ui/react';
+import { Box, Button, chakra, Menu, Portal } from '@chakra-ui/react';
 import type { Account } from '@overtally/contracts';
 import { useNavigate } from 'react-router-dom';
 import { ThemeSwitch } from '../../components/theme-switch.js';
@@ -18,6 +18,16 @@ export function Tools({ account }: { account: Account }) {
             <Box as="span" truncate>
               {account.name}
             </Box>
+            <chakra.svg
+              viewBox="0 0 10 6"
+              width="2.5"
+              height="1.5"
+              fill="none"
+              stroke="currentColor"
+              aria-hidden="true"
+            >
+              <path d="m1 1 4 4 4-4" />
+            </chakra.svg>
           </Button>
         </Menu.Trigger>
         <Portal>

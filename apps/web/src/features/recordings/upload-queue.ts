@@ -69,7 +69,12 @@ export class UploadQueue {
     this.fillLanes();
   }
 
-  /** Takes what has ended off the list. */
+  /** Takes one that has ended off the list. */
+  forget(id: number): void {
+    this.change(this.items.filter((item) => item.id !== id || isOpen(item)));
+  }
+
+  /** Takes all that have ended off the list. */
   clear(): void {
     this.change(this.items.filter(isOpen));
   }

@@ -12,7 +12,7 @@ export const recipes = {
         outline: {
           bg: 'sheet',
           borderColor: 'edge',
-          color: 'colorPalette.fg',
+          color: 'ink',
           _hover: { bg: 'wash' },
           _expanded: { bg: 'wash' },
         },
@@ -40,6 +40,22 @@ export const slotRecipes = {
     slots: ['root', 'field', 'indicator'],
     variants: { size: { sm: {} }, variant: { outline: { field: control } } },
     defaultVariants: { size: 'sm' },
+  }),
+  table: defineSlotRecipe({
+    slots: ['columnHeader', 'row', 'cell', 'body'],
+    base: {
+      columnHeader: { fontSize: 'xs', fontWeight: '400', color: 'inkSoft', whiteSpace: 'nowrap' },
+      body: { '& tr:last-of-type > *': { borderBottomWidth: '0' } },
+    },
+    variants: {
+      variant: {
+        line: { row: { bg: 'transparent' }, columnHeader: { borderColor: 'ruleStrong' } },
+      },
+      size: {
+        sm: { columnHeader: { px: '3', py: '1.5' }, cell: { px: '3', py: '1.5' } },
+        md: { columnHeader: { px: '3', py: '2' }, cell: { px: '3', py: '2.5' } },
+      },
+    },
   }),
   dialog: defineSlotRecipe({
     slots: ['backdrop', 'positioner', 'content', 'header', 'body', 'footer', 'title', 'closeTrigger'],

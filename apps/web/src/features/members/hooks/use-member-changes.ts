@@ -12,7 +12,7 @@ export function useMemberChanges(projectId: string) {
     Promise.all([
       queryClient.invalidateQueries({ queryKey: membersQuery(projectId).queryKey }),
       queryClient.invalidateQueries({ queryKey: ['projects', projectId], exact: true }),
-      queryClient.invalidateQueries({ queryKey: ['projects'], exact: true }),
+      queryClient.invalidateQueries({ queryKey: ['project-list'] }),
     ]);
   return {
     add: useMutation({ mutationFn: (member: AddMember) => addMember(projectId, member), onSettled }),

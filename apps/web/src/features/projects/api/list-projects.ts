@@ -1,10 +1,13 @@
-import { projectPageSchema } from '@overtally/contracts';
+import { projectPageSchema, type ProjectQuery } from '@overtally/contracts';
 import { queryOptions } from '@tanstack/react-query';
 import { listAll } from '../../../lib/list-all.js';
 
-/** Projects that the signed-in person may see. */
-export const projectsQuery = () =>
+/** Begins the key of every list of projects, to renew them together. */
+export const projectListsKey = ['project-list'] as const;
+
+/** Projects that the signed-in person may see, the newest first; archived ones left out, alone or too. */
+export const projectsQuery = (archived: ProjectQuery['archived'] = 'false') =>
   queryOptions({
-    queryKey: ['projects'],
-    queryFn: ({ signal }) => listAll(projectPageSchema, '/projects', { signal }),
+    queryKey: [...projectListsKey, archived],
+    queryFn: ({ signal }) => listAll(projectPageSchema, '/projects', { query: { archived }, signal }),
   });

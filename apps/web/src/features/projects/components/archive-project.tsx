@@ -35,7 +35,7 @@ export function ArchiveProject({ project }: { project: Project }) {
           Bring back
         </Button>
       ) : (
-        <Button colorPalette="over" onClick={() => setAsking(true)}>
+        <Button color="over" onClick={() => setAsking(true)}>
           Archive project
         </Button>
       )}

@@ -9,7 +9,7 @@ import { FormProblem } from '../../../components/form-problem.js';
 import { Modal } from '../../../components/modal.js';
 import { setFormProblem } from '../../../lib/form-errors.js';
 import { createProject } from '../api/create-project.js';
-import { projectsQuery } from '../api/list-projects.js';
+import { projectListsKey } from '../api/list-projects.js';
 
 interface CreateProjectDialogProps {
   open: boolean;
@@ -37,7 +37,7 @@ function CreateProjectForm({ onClose, onCreated }: Omit<CreateProjectDialogProps
   const create = useMutation({
     mutationFn: createProject,
     onSuccess: async (project) => {
-      await queryClient.invalidateQueries({ queryKey: projectsQuery().queryKey });
+      await queryClient.invalidateQueries({ queryKey: projectListsKey });
       onCreated(project);
     },
     onError: (error) => setFormProblem(form, error),

@@ -1,7 +1,7 @@
 import type { UpdateProject } from '@overtally/contracts';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { projectQuery } from '../api/get-project.js';
-import { projectsQuery } from '../api/list-projects.js';
+import { projectListsKey } from '../api/list-projects.js';
 import { updateProject } from '../api/update-project.js';
 
 /** Changes a project and what is shown of it. */
@@ -11,7 +11,7 @@ export function useUpdateProject(projectId: string) {
     mutationFn: (change: UpdateProject) => updateProject(projectId, change),
     onSuccess: (project) => {
       queryClient.setQueryData(projectQuery(projectId).queryKey, project);
-      return queryClient.invalidateQueries({ queryKey: projectsQuery().queryKey, exact: true });
+      return queryClient.invalidateQueries({ queryKey: projectListsKey });
     },
   });
 }

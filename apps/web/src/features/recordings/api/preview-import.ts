@@ -2,18 +2,19 @@ import { importPreviewSchema, type ImportOptions, type ImportPreview } from '@ov
 import { requestJson } from '../../../lib/http.js';
 
 /** As much of a file's beginning as a preview needs, in bytes. */
-const headBytes = 256 * 1024;
+export const headBytes = 256 * 1024;
 
-/** What reading `file` under `options` would give, judged by its first 256 KiB. */
+/** What reading `file` under `options` would give, judged by its first 256 KiB. `sizeBytes` is the whole size. */
 export function previewImport(
   projectId: string,
   file: File,
   options: ImportOptions,
   signal?: AbortSignal,
+  sizeBytes = file.size,
 ): Promise<ImportPreview> {
   const body = new FormData();
   body.set('fileName', file.name);
-  body.set('sizeBytes', String(file.size));
+  body.set('sizeBytes', String(sizeBytes));
   body.set('import', JSON.stringify(options));
   body.set('head', file.slice(0, headBytes), file.name);
   return requestJson(importPreviewSchema, `/projects/${projectId}/import-preview`, {

@@ -1,0 +1,38 @@
+import { formatSi } from '../../lib/format.js';
+
+/** Places and texts of an axis: 1 A, 100 mA, 10 mA. */
+export interface AxisTicks {
+  tickvals: number[];
+  ticktext: string[];
+}
+
+const label = (value: number, unit: string) => formatSi(value, unit, { digits: 4, trim: true });
+
+/** Step of 1, 2 or 5 times a power of ten that gives about `count` steps over `span`. */
+function niceStep(span: number, count: number): number {
+  const raw = span / count;
+  const power = 10 ** Math.floor(Math.log10(raw));
+  const factor = [1, 2, 5, 10].find((candidate) => candidate * power >= raw * (1 - 1e-9)) ?? 10;
+  return factor * power;
+}
+
+/** Ticks at round values within [from, to], labelled with SI prefixes; none when the range is empty. */
+export function linearTicks(from: number, to: number, unit: string, count = 4): AxisTicks {
+  if (!(to > from)) return { tickvals: [], ticktext: [] };
+  const step = niceStep(to - from, count);
+  const first = Math.ceil(from / step - 1e-9);
+  const last = Math.floor(to / step + 1e-9);
+  const tickvals = Array.from({ length: last - first + 1 }, (_, i) => (first + i) * step);
+  return { tickvals, ticktext: tickvals.map((value) => label(Number(value.toPrecision(12)), unit)) };
+}
+
+/** Ticks at whole powers of ten within [from, to]; every second one or fewer where there are many. */
+export function decadeTicks(from: number, to: number, unit: string, most = 6): AxisTicks {
+  if (!(from > 0 && to > from)) return { tickvals: [], ticktext: [] };
+  const first = Math.ceil(Math.log10(from) - 1e-9);
+  const last = Math.floor(Math.log10(to) + 1e-9);
+  const every = Math.max(1, Math.ceil((last - first + 1) / most));
+  const exponents = Array.from({ length: Math.max(0, last - first + 1) }, (_, i) => last - i);
+  const tickvals = exponents.filter((_, i) => i % every === 0).map((exponent) => 10 ** exponent);
+  return { tickvals, ticktext: tickvals.map((value) => label(value, unit)) };
+}

@@ -1,0 +1,56 @@
+import type { Waveform } from '@overtally/contracts';
+import { describe, expect, it } from 'vitest';
+import { light } from '../../../lib/theme/palette.js';
+import { spanOfRelayout, waveformChart, waveformPoints } from './waveform-chart.js';
+
+const samples: Waveform = {
+  channel: 0,
+  unit: 'A',
+  kind: 'samples',
+  fromS: 1,
+  toS: 1.003,
+  startS: 1,
+  stepS: 0.001,
+  values: [0, 2, null],
+  minimum: [],
+  maximum: [],
+};
+
+describe('waveform against time', () => {
+  it('keeps samples where they were taken and leaves missing ones open', () => {
+    const { x, y } = waveformPoints(samples, 1000);
+    expect(x).toEqual([1000, 1001, 1002].map((ms) => expect.closeTo(ms, 9)));
+    expect(y).toEqual([0, 2, null]);
+  });
+
+  it('draws each bin of an envelope as one stroke from minimum to maximum', () => {
+    const envelope: Waveform = {
+      ...samples,
+      kind: 'envelope',
+      values: [],
+      startS: 0,
+      stepS: 2,
+      minimum: [-1, null],
+      maximum: [1, null],
+    };
+    expect(waveformPoints(envelope, 1)).toEqual({ x: [1, 1, 3, 3], y: [-1, 1, null, null] });
+  });
+
+  it('shows the span in the unit that suits it', () => {
+    const { layout } = waveformChart(samples, { fromS: 1, toS: 1.08 }, light);
+    expect(layout.xaxis).toMatchObject({ range: [1000, 1080], ticksuffix: ' ms' });
+  });
+
+  it('stands for a record of missing samples alone', () => {
+    const empty = { ...samples, values: [null, null] };
+    expect(waveformChart(empty, { fromS: 0, toS: 1 }, light).layout.yaxis).toMatchObject({ range: [-1, 1] });
+  });
+
+  it('reads zooming back in seconds', () => {
+    const shown = { fromS: 0, toS: 0.08 };
+    const zoomed = spanOfRelayout({ 'xaxis.range[0]': 10, 'xaxis.range[1]': 30 }, shown);
+    expect(zoomed).toEqual({ fromS: 0.01, toS: 0.03 });
+    expect(spanOfRelayout({ 'xaxis.autorange': true }, shown)).toBe('whole');
+    expect(spanOfRelayout({ autosize: true }, shown)).toBeNull();
+  });
+});
