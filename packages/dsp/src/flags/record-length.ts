@@ -1,6 +1,6 @@
 import type { Flag } from '../types.js';
 
-/** `too-short-one-cycle` below one cycle of the nominal (or found) frequency, `too-short-ten-cycles` below ten. */
+/** `too-short-one-cycle` below one cycle of the found (or else nominal) frequency, `too-short-ten-cycles` below ten. */
 export function recordLengthFlag(durationS: number, frequencyHz: number): Flag | null {
   // A millionth of slack: a record of exactly ten cycles must not be refused by rounding.
   const cycles = durationS * frequencyHz * (1 + 1e-6);

@@ -8,7 +8,7 @@ export interface SynchronousWindows {
 
 export interface SynchronousWindowOptions {
   /** Called after each window with the share done; throws to stop. */
-  onWindow?: (fraction: number) => void;
+  onWindow?: ((fraction: number) => void) | undefined;
 }
 
 const PLAN_CACHE_SIZE = 4;

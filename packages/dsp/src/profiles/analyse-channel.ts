@@ -1,17 +1,15 @@
 import { thdF, thdR } from '../figures/distortion.js';
 import { formFactor } from '../figures/form-factor.js';
-import { toneFigures, type ToneResult } from '../figures/tone-figures.js';
+import { toneFigures } from '../figures/tone-figures.js';
 import { waveformFigures } from '../figures/waveform-figures.js';
-import { findFundamental } from '../fundamental/find-fundamental.js';
-import { frequencyTrack } from '../fundamental/frequency-track.js';
-import { synchronousWindows } from '../groups/synchronous-windows.js';
-import { windowBoundaries } from '../groups/window-boundaries.js';
+import { findFundamental, type FundamentalEstimate } from '../fundamental/find-fundamental.js';
+import { frequencyTrack, type FrequencyTrack } from '../fundamental/frequency-track.js';
 import { amplitudeSpectrum } from '../spectrum/amplitude-spectrum.js';
 import { segmentLength } from '../spectrum/segment-length.js';
-import type { ChannelAnalysis, ChannelInput, HarmonicResult, ResolvedSettings } from '../types.js';
+import type { ChannelAnalysis, ChannelInput, ResolvedSettings, ToneFigures } from '../types.js';
 import { collectFlags } from './collect-flags.js';
 import { harmonicResults } from './harmonic-results.js';
-import { interharmonicResults, withWindowFigures } from './mains-results.js';
+import { mainsResults } from './mains-results.js';
 import { cyclesFor } from './resolve-settings.js';
 
 /** Reports the share of the channel that is done; throws when the caller wants to stop. */
@@ -24,7 +22,7 @@ export function analyseChannel(
   settings: ResolvedSettings,
   checkpoint: Checkpoint,
 ): ChannelAnalysis {
-  const { samples } = channel;
+  const { index, name, quantity, unit, samples } = channel;
   const figures = waveformFigures(samples);
   const estimate = findFundamental(samples, sampleRateHz, settings);
   checkpoint(0.4);
@@ -36,30 +34,10 @@ export function analyseChannel(
   });
   const flags = collectFlags({ channel, sampleRateHz, settings, figures, estimate, track, spectrum });
   const steady = !flags.some((flag) => flag.code === 'frequency-drift');
-  let harmonics: HarmonicResult[] = estimate ? harmonicResults(estimate, samples.length, steady) : [];
-  let interharmonics: ChannelAnalysis['interharmonics'] = [];
-  let windows: ChannelAnalysis['windows'] = null;
-  let tone: ToneResult | null = null;
-  if (settings.profile === 'mains' && estimate) {
-    const cycles = settings.cyclesPerWindow ?? cyclesFor(estimate.frequencyHz);
-    const boundaries = windowBoundaries(samples.length, sampleRateHz, estimate.frequencyHz, cycles, track);
-    const count = boundaries.length - 1;
-    if (count > 0) {
-      const lines = synchronousWindows(samples, boundaries, cycles, harmonics.length, {
-        onWindow: (share) => checkpoint(0.6 + 0.4 * share),
-      });
-      const samplesPerWindow = boundaries[count]! / count;
-      harmonics = withWindowFigures(harmonics, lines, samplesPerWindow / sampleRateHz);
-      interharmonics = interharmonicResults(lines, harmonics.length);
-      windows = { cycles, count, samplesPerWindow };
-    }
-  }
-  if (settings.profile === 'tone' && estimate) {
-    tone = toneFigures(samples, sampleRateHz, estimate.frequencyHz, settings.thdMaxOrder);
-  }
+  const periodic = estimate
+    ? periodicResults(channel, sampleRateHz, settings, { estimate, track, steady, checkpoint })
+    : NOT_PERIODIC;
   checkpoint(1);
-  const harmonicRms = harmonics.map((h) => h.rms);
-  const { index, name, quantity, unit } = channel;
   return {
     ...{ index, name, quantity, unit },
     mean: estimate?.fit.dc ?? figures.mean,
@@ -67,25 +45,78 @@ export function analyseChannel(
     peak: figures.peak,
     crestFactor: figures.rms > 0 ? figures.peak / figures.rms : null,
     formFactor: formFactor(samples, estimate && sampleRateHz / estimate.frequencyHz),
-    fundamental: estimate && {
-      frequencyHz: estimate.frequencyHz,
-      rms: harmonics[0]!.rms,
-      phaseDeg: harmonics[0]!.phaseDeg,
-      frequencyUncertaintyHz: estimate.frequencyUncertaintyHz,
-    },
+    ...periodic,
+    thdMaxOrder: settings.thdMaxOrder,
+    flags,
+    spectrum,
+  };
+}
+
+type PeriodicResults = ToneFigures &
+  Pick<
+    ChannelAnalysis,
+    'fundamental' | 'thdFPercent' | 'thdRPercent' | 'harmonics' | 'interharmonics' | 'windows'
+  >;
+
+const NOT_PERIODIC: PeriodicResults = {
+  fundamental: null,
+  thdFPercent: null,
+  thdRPercent: null,
+  thdPlusNPercent: null,
+  sinadDb: null,
+  snrDb: null,
+  sfdrDb: null,
+  enobBits: null,
+  harmonics: [],
+  interharmonics: [],
+  windows: null,
+};
+
+interface PeriodicEvidence {
+  estimate: FundamentalEstimate;
+  track: FrequencyTrack | null;
+  steady: boolean;
+  checkpoint: Checkpoint;
+}
+
+/** What rests on the fundamental: orders, distortion, windows (mains) and tone figures (tone). */
+function periodicResults(
+  { samples }: ChannelInput,
+  sampleRateHz: number,
+  settings: ResolvedSettings,
+  { estimate, track, steady, checkpoint }: PeriodicEvidence,
+): PeriodicResults {
+  const { frequencyHz, frequencyUncertaintyHz } = estimate;
+  const fitted = harmonicResults(estimate, samples.length, steady);
+  const mains =
+    settings.profile === 'mains'
+      ? mainsResults(samples, fitted, {
+          sampleRateHz,
+          frequencyHz,
+          track,
+          cycles: settings.cyclesPerWindow ?? cyclesFor(frequencyHz),
+          onWindow: (share) => checkpoint(0.6 + 0.4 * share),
+        })
+      : null;
+  const harmonics = mains?.harmonics ?? fitted;
+  const tone =
+    settings.profile === 'tone'
+      ? toneFigures(samples, sampleRateHz, frequencyHz, settings.thdMaxOrder)
+      : null;
+  const harmonicRms = harmonics.map((h) => h.rms);
+  const { rms, phaseDeg } = harmonics[0]!;
+  return {
+    fundamental: { frequencyHz, rms, phaseDeg, frequencyUncertaintyHz },
+    thdFPercent: tone ? tone.thdFPercent : percent(thdF(harmonicRms, settings.thdMaxOrder)),
+    thdRPercent: tone ? tone.thdRPercent : percent(thdR(harmonicRms, settings.thdMaxOrder)),
     thdPlusNPercent: tone?.thdPlusNPercent ?? null,
     sinadDb: tone?.sinadDb ?? null,
     snrDb: tone?.snrDb ?? null,
     sfdrDb: tone?.sfdrDb ?? null,
     enobBits: tone?.enobBits ?? null,
-    thdFPercent: tone ? tone.thdFPercent : percent(thdF(harmonicRms, settings.thdMaxOrder)),
-    thdRPercent: tone ? tone.thdRPercent : percent(thdR(harmonicRms, settings.thdMaxOrder)),
-    thdMaxOrder: settings.thdMaxOrder,
     harmonics,
-    interharmonics,
-    windows,
-    flags,
-    spectrum,
+    interharmonics: mains?.interharmonics ?? [],
+    windows: mains?.windows ?? null,
   };
 }
 

@@ -25,13 +25,14 @@ export function collectFlags(evidence: FlagEvidence): Flag[] {
   const { channel, sampleRateHz, settings, figures, estimate, track, spectrum } = evidence;
   const { samples } = channel;
   const found = estimate?.frequencyHz ?? null;
-  const nominal = settings.nominalFrequencyHz === 'auto' ? found : settings.nominalFrequencyHz;
+  const nominal = settings.nominalFrequencyHz === 'auto' ? null : settings.nominalFrequencyHz;
+  const cycleHz = found ?? nominal;
   const acRms = Math.sqrt(Math.max(0, figures.rms ** 2 - figures.mean ** 2));
   const flags = [
-    nominal && recordLengthFlag(samples.length / sampleRateHz, nominal),
+    cycleHz && recordLengthFlag(samples.length / sampleRateHz, cycleHz),
     estimate ? null : noPeriodicComponent(settings),
     adcSaturatedFlag(channel),
-    clippedFlag(samples, figures, sampleRateHz, found && sampleRateHz / found),
+    clippedFlag(samples, figures, sampleRateHz),
     discontinuityFlag(samples, sampleRateHz, figures.highest - figures.lowest),
     found && frequencyDriftFlag(track, found),
     estimate && nearNyquistFlag(spectrum, sampleRateHz, estimate.fit.components[0]!.rms),

@@ -1,3 +1,4 @@
+import type { FrequencyTrack } from '../fundamental/frequency-track.js';
 import {
   centredSubgroups,
   harmonicGroups,
@@ -5,16 +6,53 @@ import {
   interharmonicGroups,
 } from '../groups/grouping.js';
 import { smooth, smoothingAlpha } from '../groups/smooth.js';
-import type { SynchronousWindows } from '../groups/synchronous-windows.js';
+import { synchronousWindows, type SynchronousWindows } from '../groups/synchronous-windows.js';
+import { windowBoundaries } from '../groups/window-boundaries.js';
 import type { HarmonicResult, InterharmonicResult } from '../types.js';
 
 type Grouping = (lineRms: Float64Array, cycles: number, maxOrder: number) => (number | null)[];
+
+export interface MainsResults {
+  harmonics: HarmonicResult[];
+  interharmonics: InterharmonicResult[];
+  windows: { cycles: number; count: number; samplesPerWindow: number };
+}
+
+export interface MainsOptions {
+  sampleRateHz: number;
+  frequencyHz: number;
+  cycles: number;
+  track: FrequencyTrack | null;
+  onWindow?: (fraction: number) => void;
+}
+
+/**
+ * The mains profile: whole-record orders completed by the figures of the synchronous windows.
+ *
+ * @returns null when the record holds no whole window; the whole-record figures then stand alone
+ */
+export function mainsResults(
+  samples: Float64Array,
+  fitted: HarmonicResult[],
+  { sampleRateHz, frequencyHz, cycles, track, onWindow }: MainsOptions,
+): MainsResults | null {
+  const boundaries = windowBoundaries(samples.length, sampleRateHz, frequencyHz, cycles, track);
+  const count = boundaries.length - 1;
+  if (count === 0) return null;
+  const windows = synchronousWindows(samples, boundaries, cycles, fitted.length, { onWindow });
+  const samplesPerWindow = boundaries[count]! / count;
+  return {
+    harmonics: withWindowFigures(fitted, windows, samplesPerWindow / sampleRateHz),
+    interharmonics: interharmonicResults(windows, fitted.length),
+    windows: { cycles, count, samplesPerWindow },
+  };
+}
 
 /**
  * Puts the figures of the synchronous windows into the list of orders: root mean square over the windows of the single
  * line, the group and the subgroup; mean and maximum of the smoothed group (IEC 61000-4-7, 5.5.1; IEC 61000-3-2, 6.2).
  */
-export function withWindowFigures(
+function withWindowFigures(
   harmonics: HarmonicResult[],
   windows: SynchronousWindows,
   windowS: number,
@@ -43,7 +81,7 @@ export function withWindowFigures(
 }
 
 /** Interharmonic groups and centred subgroups, root mean square over the windows, from "between 0 and 1" upwards. */
-export function interharmonicResults(windows: SynchronousWindows, maxOrder: number): InterharmonicResult[] {
+function interharmonicResults(windows: SynchronousWindows, maxOrder: number): InterharmonicResult[] {
   const groups = perOrder(windows, maxOrder, interharmonicGroups);
   const centred = perOrder(windows, maxOrder, centredSubgroups);
   return groups
