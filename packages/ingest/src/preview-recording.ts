@@ -2,7 +2,7 @@ import { bareCell, cellKind, cellNumber } from './csv/cell.js';
 import { decodeText, guessEncoding } from './csv/encoding.js';
 import { splitCells, splitLines } from './csv/lines.js';
 import { type CsvPlan, describeLayout, planCsv, requireSampleRate } from './csv/plan.js';
-import { parseStamp } from './csv/time-stamp.js';
+import { makeStampReader } from './csv/stamp-reader.js';
 import { refuseKnownBinary } from './known-binary.js';
 import { catchRefusal, refuse } from './refusal.js';
 import type { ImportOptions, PreviewArguments, PreviewOutcome, Problem } from './types.js';
@@ -25,18 +25,17 @@ function cellValue(cell: string, plan: CsvPlan): string | number | null {
   return cellKind(bare, decimal) === 'number' ? cellNumber(bare, decimal) : bare;
 }
 
-function stampSeconds(value: string | number | null | undefined, plan: CsvPlan): number {
-  if (typeof value === 'number') return value * (plan.layout.time?.secondsPerUnit ?? 1);
-  const stamp = typeof value === 'string' ? parseStamp(value) : null;
-  return stamp === null ? NaN : stamp.wholeSeconds + stamp.fraction;
-}
-
 /** Mean rate over the rows at hand; the rate of the whole file may differ in its last digits. */
 function rateOfRows(rows: (string | number | null)[][], plan: CsvPlan): number | null {
   const { time } = plan.layout;
-  if (time === null || rows.length < 2) return plan.layout.statedSampleRateHz;
-  const span = stampSeconds(rows.at(-1)?.[time.column], plan) - stampSeconds(rows[0]?.[time.column], plan);
-  return span > 0 ? (rows.length - 1) / span : null;
+  if (time === null) return plan.layout.statedSampleRateHz;
+  const { read } = makeStampReader();
+  const cells = rows.map((row) => row[time.column]);
+  const stamps = cells
+    .map((cell) => (typeof cell === 'number' ? cell : read(String(cell))))
+    .filter(Number.isFinite);
+  const span = ((stamps.at(-1) ?? 0) - (stamps[0] ?? 0)) * time.secondsPerUnit;
+  return span > 0 ? (stamps.length - 1) / span : null;
 }
 
 function previewCsv(head: Uint8Array, complete: boolean, args: PreviewArguments): PreviewOutcome {

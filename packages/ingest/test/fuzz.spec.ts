@@ -40,7 +40,8 @@ const edit = fc.record({
   kind: fc.constantFrom('set' as const, 'insert' as const, 'delete' as const, 'cut' as const),
 });
 
-describe('damaged files', () => {
+// Generous, so that a busy machine is not taken for a hang.
+describe('damaged files', { timeout: 30_000 }, () => {
   it.each(SEEDS)('give an outcome, never an exception: %s', async (name) => {
     const bytes = fixture(name);
     await fc.assert(

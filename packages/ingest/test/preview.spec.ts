@@ -34,6 +34,13 @@ describe('preview', () => {
     ]);
   });
 
+  it('has the rate from calendar stamps too', () => {
+    const rows = [0, 1, 2, 3].map((i) => `2024-03-21 10:00:00.00${i},${i}`);
+    const bytes = new TextEncoder().encode(`Date,u_V\n${rows.join('\n')}\nEnd of record\n`);
+    const shown = previewRecording(bytes, { fileName: 'a.csv', sizeBytes: bytes.length });
+    expect(shown.sampleRateHz).toBeCloseTo(1000, 6);
+  });
+
   it('asks for the sample rate and still shows the rows', () => {
     const shown = preview('F9-P30.csv');
     expect(shown.needs).toEqual(['sampleRateHz']);

@@ -4,7 +4,7 @@ import { fixture, inChunks, readAll } from './support.js';
 
 const sink = { begin: () => undefined, write: () => undefined };
 
-describe('streaming', () => {
+describe('streaming', { timeout: 30_000 }, () => {
   it.each([
     'F9-P03.csv',
     'F9-P11.csv',
