@@ -36,8 +36,7 @@ export function amplitudeRange(
 
 /** Axis entries of a Plotly layout for the range. */
 export function amplitudeAxis({ scale, bottom, top }: AmplitudeRange, unit: string): Record<string, unknown> {
-  const ticks: AxisTicks =
-    scale === 'log' ? decadeTicks(bottom, top, unit) : linearTicks(bottom, top, unit);
+  const ticks: AxisTicks = scale === 'log' ? decadeTicks(bottom, top, unit) : linearTicks(bottom, top, unit);
   return {
     type: scale,
     range: scale === 'log' ? [Math.log10(bottom), Math.log10(top)] : [bottom, top],

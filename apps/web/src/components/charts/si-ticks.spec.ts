@@ -24,7 +24,7 @@ describe('axis ticks', () => {
       tickvals: [1, 0.1, 0.01],
       ticktext: [`1${gap}A`, `100${gap}mA`, `10${gap}mA`],
     });
-    expect(decadeTicks(1e-9, 1, 'V', 5).tickvals).toEqual([1, 1e-2, 1e-4, 1e-6, 1e-8].map(Number));
+    expect(decadeTicks(1e-9, 1, 'V', 5).tickvals).toEqual([1, 1e-2, 1e-4, 1e-6, 1e-8]);
   });
 
   it('are absent for an empty or impossible range', () => {

@@ -33,6 +33,6 @@ export function decadeTicks(from: number, to: number, unit: string, most = 6): A
   const last = Math.floor(Math.log10(to) + 1e-9);
   const every = Math.max(1, Math.ceil((last - first + 1) / most));
   const exponents = Array.from({ length: Math.max(0, last - first + 1) }, (_, i) => last - i);
-  const tickvals = exponents.filter((_, i) => i % every === 0).map((exponent) => 10 ** exponent);
+  const tickvals = exponents.filter((_, i) => i % every === 0).map((exponent) => Number(`1e${exponent}`));
   return { tickvals, ticktext: tickvals.map((value) => label(value, unit)) };
 }

@@ -1,0 +1,149 @@
+import type { Spectrum } from '@overtally/contracts';
+import {
+  amplitudeAxis,
+  amplitudeRange,
+  raised,
+  type Scale,
+} from '../../../components/charts/amplitude-axis.js';
+import type { PlotLayout } from '../../../components/plot-layout.js';
+import type { PlotTrace } from '../../../components/plot.js';
+import type { Palette } from '../../../lib/theme/palette.js';
+import type { LetteredNote } from './note-letters.js';
+import { letterTrace } from './order-chart.js';
+import { isOver, type OrderRow } from './order-rows.js';
+
+export interface FrequencyChartInput {
+  spectrum: Spectrum;
+  rows: readonly OrderRow[];
+  scale: Scale;
+  relative: boolean;
+  /** Shows half the sample rate instead of ending after the last order. */
+  whole: boolean;
+  notes: readonly LetteredNote[];
+  selectedHz: number | null;
+  heightPx: number;
+}
+
+const margin = { l: 64, r: 12, t: 8, b: 40 };
+
+/** Unit of the frequency axis, with the factor from Hz. */
+export const frequencyUnit = (highestHz: number) =>
+  highestHz >= 10_000 ? { unit: 'kHz', factor: 1e-3 } : { unit: 'Hz', factor: 1 };
+
+/** The line spectrum with marks at the orders and the letters of notes on lines. */
+export function frequencyChart(
+  input: FrequencyChartInput,
+  palette: Palette,
+): { traces: PlotTrace[]; layout: PlotLayout; factor: number } {
+  const { spectrum, rows, scale, whole } = input;
+  const fundamental = rows.find((row) => row.order === 1);
+  const gain = input.relative && fundamental ? 100 / fundamental.rms : 1;
+  const unit = input.relative ? '%' : spectrum.unit;
+  const lastHz = spectrum.frequencyHz.at(-1) ?? 1;
+  const lastOrderHz = (rows.at(-1)?.frequencyHz ?? lastHz) + (fundamental?.frequencyHz ?? 0);
+  const endHz = whole ? lastHz : Math.min(lastHz, lastOrderHz);
+  const { unit: hertz, factor } = frequencyUnit(endHz);
+  const values = spectrum.rms.map((rms) => rms * gain);
+  const range = amplitudeRange(values, [], scale);
+  const marks = lettersAt(input, gain, factor, range, palette);
+  return {
+    factor,
+    traces: [
+      {
+        type: 'scatter',
+        mode: 'lines',
+        x: spectrum.frequencyHz.map((hz) => hz * factor),
+        y: values.map((value) => (value > 0 ? value : null)),
+        line: { color: palette.ink, width: 1 },
+        hovertemplate: `%{x:.6~g} ${hertz}<br>%{y:.4~g} ${unit}<extra></extra>`,
+      },
+      orderMarks(rows, gain, factor, unit, palette),
+      ...(marks.length > 0 ? [letterTrace(marks, palette)] : []),
+    ],
+    layout: {
+      margin,
+      xaxis: {
+        range: [0, endHz * factor],
+        title: { text: `Frequency in ${hertz}` },
+        exponentformat: 'none',
+        separatethousands: false,
+      },
+      yaxis: amplitudeAxis(range, unit),
+      shapes: input.selectedHz === null ? [] : [selectedLine(input.selectedHz * factor, palette)],
+    },
+  };
+}
+
+/** Small marks on the orders, filled in vermilion where the order is over. */
+function orderMarks(
+  rows: readonly OrderRow[],
+  gain: number,
+  factor: number,
+  unit: string,
+  palette: Palette,
+): PlotTrace {
+  return {
+    type: 'scatter',
+    mode: 'markers',
+    x: rows.map((row) => row.frequencyHz * factor),
+    y: rows.map((row) => (row.rms > 0 ? row.rms * gain : null)),
+    customdata: rows.map((row) => row.order),
+    marker: {
+      symbol: rows.map((row) => (isOver(row) ? 'circle' : 'circle-open')),
+      size: 6,
+      color: rows.map((row) => (isOver(row) ? palette.over : palette.act)),
+    },
+    hovertemplate: `Order %{customdata}<br>%{y:.4~g} ${unit}<extra></extra>`,
+  };
+}
+
+function selectedLine(x: number, palette: Palette) {
+  return {
+    type: 'line',
+    layer: 'below',
+    x0: x,
+    x1: x,
+    yref: 'paper',
+    y0: 0,
+    y1: 1,
+    line: { color: palette.act, width: 1, dash: 'dot' },
+  };
+}
+
+function lettersAt(
+  { spectrum, rows, notes, heightPx }: FrequencyChartInput,
+  gain: number,
+  factor: number,
+  range: ReturnType<typeof amplitudeRange>,
+  palette: Palette,
+) {
+  const plotHeight = heightPx - margin.t - margin.b;
+  return notes.flatMap(({ letter, note: { target } }) => {
+    if (target.kind === 'span') return [];
+    const row = target.kind === 'order' ? rows.find(({ order }) => order === target.order) : undefined;
+    const hz = target.kind === 'line' ? target.frequencyHz : row?.frequencyHz;
+    if (hz === undefined) return [];
+    const rms = row?.rms ?? spectrum.rms[nearestLine(spectrum, hz)] ?? 0;
+    const color = row && isOver(row) ? palette.over : palette.ink;
+    return [{ x: hz * factor, y: raised(rms * gain, 14, plotHeight, range), letter, color }];
+  });
+}
+
+/** Index of the line nearest to `hz`. */
+export function nearestLine({ frequencyHz }: Pick<Spectrum, 'frequencyHz'>, hz: number): number {
+  let nearest = 0;
+  frequencyHz.forEach((candidate, index) => {
+    if (Math.abs(candidate - hz) < Math.abs((frequencyHz[nearest] ?? Infinity) - hz)) nearest = index;
+  });
+  return nearest;
+}
+
+/** Index of the strongest line within `reachHz` of `hz`, since a pointer rarely meets the peak itself. */
+export function strongestNear(spectrum: Spectrum, hz: number, reachHz: number): number {
+  let best = nearestLine(spectrum, hz);
+  spectrum.frequencyHz.forEach((candidate, index) => {
+    if (Math.abs(candidate - hz) > reachHz) return;
+    if ((spectrum.rms[index] ?? 0) > (spectrum.rms[best] ?? 0)) best = index;
+  });
+  return best;
+}

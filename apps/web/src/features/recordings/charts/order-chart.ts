@@ -1,0 +1,162 @@
+import {
+  amplitudeAxis,
+  amplitudeRange,
+  raised,
+  type Scale,
+} from '../../../components/charts/amplitude-axis.js';
+import { ceilingTraces } from '../../../components/charts/limit-ceiling.js';
+import type { PlotLayout } from '../../../components/plot-layout.js';
+import type { PlotTrace } from '../../../components/plot.js';
+import { formatPercent, formatSi } from '../../../lib/format.js';
+import type { Palette } from '../../../lib/theme/palette.js';
+import type { LetteredNote } from './note-letters.js';
+import { isOver, resultWords, type OrderRow } from './order-rows.js';
+
+export interface OrderChartInput {
+  rows: readonly OrderRow[];
+  /** Unit of the channel. */
+  unit: string;
+  scale: Scale;
+  /** In percent of the fundamental instead of the channel's unit. */
+  relative: boolean;
+  notes: readonly LetteredNote[];
+  /** Order to be seen as selected. */
+  selected: number | null;
+  /** Orders between two labels of the axis: 2 labels odd orders. */
+  labelStep: number;
+  heightPx: number;
+}
+
+const margin = { l: 64, r: 12, t: 8, b: 30 };
+
+/** Bars by order under the limit as a ceiling, with the letters of notes over their orders. */
+export function orderChart(
+  input: OrderChartInput,
+  palette: Palette,
+): { traces: PlotTrace[]; layout: PlotLayout } {
+  const { rows, scale, relative, selected } = input;
+  const fundamental = rows.find((row) => row.order === 1)?.rms ?? null;
+  const factor = relative && fundamental ? 100 / fundamental : 1;
+  const unit = relative ? '%' : input.unit;
+  const limits = rows.flatMap(({ order, limit }) =>
+    limit === null ? [] : [{ order, limit: limit * factor }],
+  );
+  const values = rows.map((row) => row.compared * factor);
+  const range = amplitudeRange(
+    values,
+    limits.map(({ limit }) => limit),
+    scale,
+  );
+  const lastOrder = rows.reduce((last, { order }) => Math.max(last, order), 1);
+  return {
+    traces: [
+      ...ceilingTraces(limits, range.top, palette),
+      bars(rows, values, unit, palette),
+      ...letters(input, factor, range, palette),
+    ],
+    layout: {
+      margin,
+      bargap: 0.4,
+      hovermode: 'x',
+      xaxis: {
+        range: [0.3, lastOrder + 0.7],
+        fixedrange: true,
+        tickmode: 'array',
+        tickvals: labelledOrders(lastOrder, input.labelStep),
+        tickangle: 0,
+      },
+      yaxis: amplitudeAxis(range, unit),
+      shapes: selected === null ? [] : [selection(selected, palette)],
+    },
+  };
+}
+
+const labelledOrders = (last: number, step: number) =>
+  Array.from({ length: last }, (_, i) => i + 1).filter((order) =>
+    step === 2 ? order % 2 === 1 : order === 1 || order % step === 0,
+  );
+
+function barColor(row: OrderRow, palette: Palette): string {
+  if (row.order === 1) return palette.ruleStrong;
+  return isOver(row) ? palette.over : palette.ink;
+}
+
+function bars(
+  rows: readonly OrderRow[],
+  values: readonly number[],
+  unit: string,
+  palette: Palette,
+): PlotTrace {
+  return {
+    type: 'bar',
+    x: rows.map((row) => row.order),
+    // A logarithmic axis has no place for zero.
+    y: values.map((value) => (value > 0 ? value : null)),
+    marker: { color: rows.map((row) => barColor(row, palette)), line: { width: 0 } },
+    hovertemplate: '%{customdata}<extra></extra>',
+    customdata: rows.map((row, i) => hoverText(row, values[i] ?? 0, unit)),
+  };
+}
+
+function hoverText(row: OrderRow, value: number, unit: string): string {
+  const parts = [`Order ${row.order}`, formatSi(value, unit)];
+  if (row.order > 1 && unit !== '%') parts.push(`${formatPercent(row.percentOfFundamental, 2)} of order 1`);
+  if (row.sharePercent !== null) parts.push(`${formatPercent(row.sharePercent)} of its limit`);
+  if (row.result !== null) parts.push(resultWords[row.result]);
+  return parts.join('<br>');
+}
+
+function selection(order: number, palette: Palette) {
+  return {
+    type: 'rect',
+    layer: 'below',
+    x0: order - 0.5,
+    x1: order + 0.5,
+    yref: 'paper',
+    y0: 0,
+    y1: 1,
+    fillcolor: palette.wash,
+    line: { width: 0 },
+  };
+}
+
+/** Circled letters above their bars; several on one order stand over each other. */
+function letters(
+  { rows, notes, heightPx }: OrderChartInput,
+  factor: number,
+  range: ReturnType<typeof amplitudeRange>,
+  palette: Palette,
+): PlotTrace[] {
+  const plotHeight = heightPx - margin.t - margin.b;
+  const placed = new Map<number, number>();
+  const marks = notes.flatMap(({ letter, note }) => {
+    if (note.target.kind !== 'order') return [];
+    const { order } = note.target;
+    const row = rows.find((candidate) => candidate.order === order);
+    if (!row) return [];
+    const below = placed.get(order) ?? 0;
+    placed.set(order, below + 1);
+    const y = raised(row.compared * factor, 14 + 20 * below, plotHeight, range);
+    return [{ x: order, y, letter, color: isOver(row) ? palette.over : palette.ink }];
+  });
+  return marks.length === 0 ? [] : [letterTrace(marks, palette)];
+}
+
+/** Letters in circles at their places. */
+export function letterTrace(
+  marks: readonly { x: number; y: number; letter: string; color: string }[],
+  palette: Palette,
+): PlotTrace {
+  const colors = marks.map((mark) => mark.color);
+  return {
+    type: 'scatter',
+    mode: 'markers+text',
+    x: marks.map((mark) => mark.x),
+    y: marks.map((mark) => mark.y),
+    text: marks.map((mark) => `<b>${mark.letter}</b>`),
+    textfont: { size: 11, color: colors },
+    marker: { symbol: 'circle', size: 17, color: palette.sheet, line: { width: 1.2, color: colors } },
+    hoverinfo: 'skip',
+    cliponaxis: false,
+  };
+}
