@@ -124,7 +124,7 @@ describe('relations that hold for every record', () => {
       { order: 1, rms: 2, phaseDeg: -40 },
       { order: 7, rms: 0.5, phaseDeg: 100 },
     ];
-    const cycle = synthesise(recipe, 200, 1.5);
+    const cycle = synthesise(recipe, RATE / 50, 1.5);
     const fit = fitHarmonics(cycle, RATE, 50, 9);
     expect(fit.dc).toBeCloseTo(1.5, 10);
     expect(fit.harmonics[6]!.rms).toBeCloseTo(0.5, 10);

@@ -22,7 +22,7 @@ export function createComplexFftPlan(length: number): ComplexFftPlan {
     throw new RangeError(`FFT length must be a positive integer, got ${length}`);
   if (isRadixLength(length)) {
     const fft = new FFT(length);
-    return { length, transform: (input, output) => fft.transform(output as number[], input as number[]) };
+    return { length, transform: (input, output) => fft.transform(output, input) };
   }
   // n² is reduced modulo 2N before the trigonometric call, so that long transforms keep full precision.
   const chirp = createChirpPlan(length, length, (i) => (Math.PI * ((i * i) % (2 * length))) / length);

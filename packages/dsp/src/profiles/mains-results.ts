@@ -100,7 +100,7 @@ function perOrder(windows: SynchronousWindows, maxOrder: number, grouping: Group
 }
 
 function smoothedSeries(values: (number | null)[], alpha: number): Float64Array | null {
-  return values.every((x) => x !== null) && values.length > 0 ? smooth(values as number[], alpha) : null;
+  return values.every((x) => x !== null) && values.length > 0 ? smooth(values, alpha) : null;
 }
 
 function quadraticMean(values: (number | null)[]): number | null {
