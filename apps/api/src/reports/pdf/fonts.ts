@@ -1,5 +1,7 @@
+import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import type { TextStyle } from './theme.js';
+import { unpackWoff } from './woff.js';
 
 const require = createRequire(import.meta.url);
 
@@ -10,6 +12,17 @@ const files: Record<TextStyle['font'], string> = {
   mono: '@ibm/plex-mono/fonts/complete/woff/IBMPlexMono-Regular.woff',
   'mono-strong': '@ibm/plex-mono/fonts/complete/woff/IBMPlexMono-SemiBold.woff',
 };
+
+const unpacked = new Map<string, Buffer>();
+
+/** A font file as OpenType, unpacked on first use. */
+function fontData(file: string): Buffer {
+  const known = unpacked.get(file);
+  if (known) return known;
+  const data = unpackWoff(readFileSync(require.resolve(file)));
+  unpacked.set(file, data);
+  return data;
+}
 
 const inSans: Record<TextStyle['font'], TextStyle['font']> = {
   sans: 'sans',
@@ -33,7 +46,7 @@ export class Fonts {
 
   constructor(doc: PDFKit.PDFDocument) {
     for (const [name, file] of Object.entries(files)) {
-      doc.registerFont(name, require.resolve(file));
+      doc.registerFont(name, fontData(file));
       doc.font(name);
       this.sources.set(name, (doc as unknown as { _font: { font: GlyphSource } })._font.font);
     }

@@ -1,0 +1,214 @@
+import { reportPageSchema, reportSchema, type ReportListItem } from '@overtally/contracts';
+import { schema } from '@overtally/db';
+import { eq } from 'drizzle-orm';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { newProject } from './support/factories.js';
+import { newFinishedAnalysis } from './support/finished-analysis.js';
+import { newDraft, newInReview, newIssued, newJudged, type Judged } from './support/judged-reports.js';
+import { newNote, newVerdict, type Owner } from './support/project-contents.js';
+import { channelWith } from './support/report-example.js';
+import { startTestApp, type TestApp } from './support/test-app.js';
+
+let test: TestApp;
+let owner: Owner;
+let dimmer: Judged;
+let quiet: Judged;
+
+beforeAll(async () => {
+  test = await startTestApp();
+  owner = { projectId: test.project.id, userId: test.people.analyst.id };
+  dimmer = await newJudged(test);
+  quiet = await newJudged(test, channelWith([1, ...Array.from({ length: 39 }, () => 0.001)]));
+});
+afterAll(() => test.close());
+
+const reportsPath = (): string => `/api/projects/${test.project.id}/reports`;
+
+describe('a draft', () => {
+  it('shows what is stored, one section per verdict in the order asked for, and the worst result', async () => {
+    const note = await newNote(test.database, dimmer.analysisId, owner);
+    const report = await newDraft(test, [quiet.verdict.id, dimmer.verdict.id]);
+    expect(report).toMatchObject({ status: 'draft', number: null, revision: 0, pdfSha256: null });
+    expect(report.content.result).toBe('fail');
+    expect(report.content.sections.map((section) => section.verdict)).toEqual([
+      quiet.verdict,
+      dimmer.verdict,
+    ]);
+    expect(report.content.sections[1]!.notes.map(({ id }) => id)).toEqual([note.id]);
+    expect(report.content.sections[1]!.recording).toMatchObject({ id: dimmer.recordingId, durationS: 30 });
+    expect(report.preparedBy).toEqual({ id: owner.userId, name: test.people.analyst.name });
+  });
+
+  it('can be changed and deleted', async () => {
+    const { id } = await newDraft(test, [dimmer.verdict.id]);
+    const analyst = await test.signIn('analyst');
+    const change = { title: 'Second title', verdictIds: [quiet.verdict.id] };
+    const { body } = await analyst.patch(`/api/reports/${id}`).send(change).expect(200);
+    expect(reportSchema.parse(body)).toMatchObject({ ...change, summary: '', content: { result: 'pass' } });
+    expect(body.events.map((event: { kind: string }) => event.kind)).toEqual(['created', 'changed']);
+    await analyst.delete(`/api/reports/${id}`).expect(204);
+    await analyst.get(`/api/reports/${id}`).expect(404);
+  });
+
+  it('refuses verdicts of another project by their place', async () => {
+    const project = await newProject(test.database);
+    const foreign = { projectId: project.id, userId: owner.userId };
+    const { analysisId } = await newFinishedAnalysis(test.database, foreign);
+    const { id } = await newVerdict(test.database, analysisId, foreign);
+    const analyst = await test.signIn('analyst');
+    const body = { title: 'Mixed', verdictIds: [dimmer.verdict.id, id] };
+    const made = await analyst.post(reportsPath()).send(body).expect(422);
+    expect(made.body.errors).toEqual([{ path: 'verdictIds.1', message: 'The project has no such verdict' }]);
+    const draft = await newDraft(test, [dimmer.verdict.id]);
+    await analyst
+      .patch(`/api/reports/${draft.id}`)
+      .send({ verdictIds: [id] })
+      .expect(422);
+  });
+});
+
+describe('the way to an issued report', () => {
+  it('goes through review, back for mending, and to issue, with every step on record', async () => {
+    const { id } = await newInReview(test, [dimmer.verdict.id]);
+    const manager = await test.signIn('manager');
+    const analyst = await test.signIn('analyst');
+    const mute = await manager.post(`/api/reports/${id}/return`).send({ comment: ' ' }).expect(400);
+    expect(mute.body.errors[0].path).toBe('comment');
+    const returned = await manager
+      .post(`/api/reports/${id}/return`)
+      .send({ comment: 'Name the EUT' })
+      .expect(200);
+    expect(returned.body.status).toBe('draft');
+    await analyst.post(`/api/reports/${id}/submit`).send({}).expect(200);
+    const { body } = await manager.post(`/api/reports/${id}/issue`).send({}).expect(200);
+    const issued = reportSchema.parse(body);
+    expect(issued).toMatchObject({ status: 'issued', issuedBy: { id: test.people.manager.id } });
+    expect(issued.number).toMatch(/^HR-\d{4}$/);
+    expect(issued.events.map(({ kind, by, comment }) => [kind, by.name, comment])).toEqual([
+      ['created', 'Analyst', ''],
+      ['submitted', 'Analyst', ''],
+      ['returned', 'Manager', 'Name the EUT'],
+      ['submitted', 'Analyst', ''],
+      ['issued', 'Manager', ''],
+    ]);
+  });
+
+  it('says what is possible when a step does not fit the state', async () => {
+    const manager = await test.signIn('manager');
+    const draft = await newDraft(test, [dimmer.verdict.id]);
+    const early = await manager.post(`/api/reports/${draft.id}/issue`).send({}).expect(409);
+    expect(early.body.detail).toContain('submitted for review');
+    const review = await newInReview(test, [dimmer.verdict.id]);
+    const late = await manager.patch(`/api/reports/${review.id}`).send({ title: 'New' }).expect(409);
+    expect(late.body.detail).toContain('return or issue');
+    await manager.delete(`/api/reports/${review.id}`).expect(409);
+    await manager.post(`/api/reports/${review.id}/submit`).send({}).expect(409);
+    const issued = await newIssued(test, [dimmer.verdict.id]);
+    for (const step of ['submit', 'return', 'issue']) {
+      await manager.post(`/api/reports/${issued.id}/${step}`).send({ comment: 'Again' }).expect(409);
+    }
+    await manager.patch(`/api/reports/${issued.id}`).send({ title: 'New' }).expect(409);
+    await manager.delete(`/api/reports/${issued.id}`).expect(409);
+  });
+
+  it('asks for the role that each step needs', async () => {
+    const { id } = await newInReview(test, [dimmer.verdict.id]);
+    for (const role of ['analyst', 'technician', 'guest', 'administrator'] as const) {
+      const person = await test.signIn(role);
+      await person.post(`/api/reports/${id}/issue`).send({}).expect(403);
+      await person.get(`/api/reports/${id}`).expect(200);
+    }
+    const stranger = await test.signIn('stranger');
+    await stranger.post(`/api/reports/${id}/issue`).send({}).expect(404);
+    await stranger.get(`/api/reports/${id}/pdf`).expect(404);
+    const technician = await test.signIn('technician');
+    const body = { title: 'Mine', verdictIds: [dimmer.verdict.id] };
+    await technician.post(reportsPath()).send(body).expect(403);
+    const after = await (await test.signIn('manager')).get(`/api/reports/${id}`).expect(200);
+    expect(after.body.status).toBe('in-review');
+  });
+
+  it('hands out numbers without gap or double, also to reports issued at the same moment', async () => {
+    const before = await newIssued(test, [dimmer.verdict.id]);
+    const waiting = await Promise.all([1, 2, 3, 4].map(() => newInReview(test, [quiet.verdict.id])));
+    const manager = await test.signIn('manager');
+    const replies = await Promise.all(
+      waiting.flatMap(({ id }) => [
+        manager.post(`/api/reports/${id}/issue`).send({}),
+        manager.post(`/api/reports/${id}/issue`).send({}),
+      ]),
+    );
+    expect(replies.map(({ status }) => status).sort()).toEqual([200, 200, 200, 200, 409, 409, 409, 409]);
+    const numbers = replies.flatMap(({ status, body }) => (status === 200 ? [body.number] : [])).sort();
+    const first = Number(before.number!.slice(3));
+    expect(numbers).toEqual([1, 2, 3, 4].map((step) => `HR-${String(first + step).padStart(4, '0')}`));
+  });
+
+  it('freezes what it says, whatever becomes of the recording and its notes', async () => {
+    const own = await newJudged(test);
+    const issued = await newIssued(test, [own.verdict.id]);
+    await newNote(test.database, own.analysisId, owner);
+    await test.database
+      .update(schema.recordings)
+      .set({ name: 'Renamed', eut: 'Another' })
+      .where(eq(schema.recordings.id, own.recordingId));
+    const guest = await test.signIn('guest');
+    const { body } = await guest.get(`/api/reports/${issued.id}`).expect(200);
+    expect(body).toEqual(issued);
+  });
+});
+
+describe('the list of reports', () => {
+  it('can be narrowed by status and read page by page, the newest first', async () => {
+    const guest = await test.signIn('guest');
+    const ids = [await newDraft(test, [quiet.verdict.id]), await newDraft(test, [dimmer.verdict.id])].map(
+      ({ id }) => id,
+    );
+    const first = reportPageSchema.parse((await guest.get(`${reportsPath()}?limit=1`).expect(200)).body);
+    expect(first.items[0]).toMatchObject({ id: ids[1], result: 'fail', sections: 1 });
+    const next = await guest.get(`${reportsPath()}?limit=1&cursor=${first.nextCursor}`).expect(200);
+    expect(next.body.items[0]).toMatchObject({ id: ids[0], result: 'pass' });
+    const issued = await guest.get(`${reportsPath()}?status=issued`).expect(200);
+    const statuses = issued.body.items.map((item: ReportListItem) => item.status);
+    expect(new Set(statuses)).toEqual(new Set(['issued']));
+  });
+});
+
+describe('an issued report in the database', () => {
+  it('refuses every change and deletion, of its verdicts and events too', async () => {
+    const own = await newJudged(test);
+    const { id } = await newIssued(test, [own.verdict.id]);
+    const { reports, reportEvents, reportVerdicts, verdicts } = schema;
+    const { database } = test;
+    const refused = /issued report|is issued/;
+    const attempts = [
+      () => database.update(reports).set({ title: 'Other' }).where(eq(reports.id, id)),
+      () => database.update(reports).set({ number: 99 }).where(eq(reports.id, id)),
+      () => database.update(reports).set({ pdfSha256: '0' }).where(eq(reports.id, id)),
+      () => database.update(reports).set({ status: 'draft' }).where(eq(reports.id, id)),
+      () => database.delete(reports).where(eq(reports.id, id)),
+      () => database.update(verdicts).set({ result: 'pass' }).where(eq(verdicts.id, own.verdict.id)),
+      () => database.delete(verdicts).where(eq(verdicts.id, own.verdict.id)),
+      () => database.delete(reportVerdicts).where(eq(reportVerdicts.reportId, id)),
+      () => database.update(reportEvents).set({ comment: '' }).where(eq(reportEvents.reportId, id)),
+      () => database.delete(schema.recordings).where(eq(schema.recordings.id, own.recordingId)),
+    ];
+    for (const attempt of attempts) {
+      const error = await attempt().then(
+        () => null,
+        (thrown: Error) => thrown.cause as Error,
+      );
+      expect(error?.message).toMatch(refused);
+    }
+    const [row] = await database.select().from(reports).where(eq(reports.id, id));
+    expect(row?.status).toBe('issued');
+  });
+
+  it('can be superseded and not come back', async () => {
+    const { id } = await newIssued(test, [dimmer.verdict.id]);
+    const { reports } = schema;
+    await test.database.update(reports).set({ status: 'superseded' }).where(eq(reports.id, id));
+    const back = test.database.update(reports).set({ status: 'issued' }).where(eq(reports.id, id));
+    await expect(back).rejects.toThrow();
+  });
+});
