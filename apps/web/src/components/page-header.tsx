@@ -30,7 +30,7 @@ export function PageHeader({ title, subtitle, actions, crumb, documentTitle }: P
         ) : null}
       </Box>
       {actions ? (
-        <Flex gap="2" wrap="wrap">
+        <Flex gap="2" wrap="wrap" align="center">
           {actions}
         </Flex>
       ) : null}

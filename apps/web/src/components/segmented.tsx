@@ -29,7 +29,7 @@ const Choice = chakra('label', {
 export function Segmented<T extends string>({ label, value, options, onChange }: SegmentedProps<T>) {
   const name = useId();
   return (
-    <Flex role="radiogroup" aria-label={label} gap="1">
+    <Flex role="radiogroup" aria-label={label} gap="1" flexShrink="0">
       {options.map((option) => (
         <Choice key={option.value}>
           <input

@@ -23,9 +23,7 @@ export function SortButton({ column, sort, onSort, children }: SortButtonProps) 
       onClick={() => onSort({ key: column, descending: mine ? !mine.descending : false })}
     >
       {children}
-      <chakra.span aria-hidden="true" display="inline-block" w="1em" textAlign="center">
-        {mine ? (mine.descending ? '↓' : '↑') : ''}
-      </chakra.span>
+      {mine ? <span aria-hidden="true">{mine.descending ? ' ↓' : ' ↑'}</span> : null}
     </chakra.button>
   );
 }

@@ -90,6 +90,7 @@ function TwinRow<Row>({ row, columns, isSelected, onSelect }: TableTwinProps<Row
           key={column.key}
           textAlign={column.align === 'right' ? 'end' : 'start'}
           fontFamily={column.align === 'right' ? 'mono' : undefined}
+          fontSize={column.align === 'right' ? '13px' : undefined}
           color={column.tone?.(row)}
           fontWeight={column.tone?.(row) === 'over' ? '600' : undefined}
           whiteSpace="nowrap"

@@ -26,6 +26,7 @@ export function Component() {
   const [creating, setCreating] = useState(false);
   const [search, setSearch] = useState('');
   const projects = useQuery(projectsQuery(archived));
+  const isFilled = projects.isSuccess && projects.data.length > 0;
   const begin = (
     <Button variant="solid" onClick={() => setCreating(true)}>
       New project
@@ -44,15 +45,19 @@ export function Component() {
               options={shownOptions}
               onChange={setArchived}
             />
-            <Input
-              type="search"
-              aria-label="Search projects"
-              placeholder="Search name, customer"
-              width="52"
-              value={search}
-              onChange={(event) => setSearch(event.target.value)}
-            />
-            {begin}
+            {isFilled ? (
+              <>
+                <Input
+                  type="search"
+                  aria-label="Search projects"
+                  placeholder="Search name, customer"
+                  width="52"
+                  value={search}
+                  onChange={(event) => setSearch(event.target.value)}
+                />
+                {begin}
+              </>
+            ) : null}
           </>
         }
       />

@@ -1,4 +1,5 @@
 import { defineRecipe, defineSlotRecipe } from '@chakra-ui/react';
+import { dialogAnatomy, menuAnatomy, nativeSelectAnatomy, tableAnatomy } from '@chakra-ui/react/anatomy';
 
 const control = { bg: 'sheet', borderColor: 'edge' };
 
@@ -37,12 +38,12 @@ export const recipes = {
 
 export const slotRecipes = {
   nativeSelect: defineSlotRecipe({
-    slots: ['root', 'field', 'indicator'],
+    slots: nativeSelectAnatomy.keys(),
     variants: { size: { sm: {} }, variant: { outline: { field: control } } },
     defaultVariants: { size: 'sm' },
   }),
   table: defineSlotRecipe({
-    slots: ['columnHeader', 'row', 'cell', 'body'],
+    slots: tableAnatomy.keys(),
     base: {
       columnHeader: { fontSize: 'xs', fontWeight: '400', color: 'inkSoft', whiteSpace: 'nowrap' },
       body: { '& tr:last-of-type > *': { borderBottomWidth: '0' } },
@@ -58,7 +59,7 @@ export const slotRecipes = {
     },
   }),
   dialog: defineSlotRecipe({
-    slots: ['backdrop', 'positioner', 'content', 'header', 'body', 'footer', 'title', 'closeTrigger'],
+    slots: dialogAnatomy.keys(),
     base: {
       backdrop: { bg: 'ink/40', _dark: { bg: 'black/60' } },
       content: { bg: 'sheet', borderWidth: '1px', borderColor: 'ruleStrong', mx: '4' },
@@ -66,7 +67,7 @@ export const slotRecipes = {
     },
   }),
   menu: defineSlotRecipe({
-    slots: ['content', 'item'],
+    slots: menuAnatomy.keys(),
     base: {
       content: { bg: 'sheet', borderWidth: '1px', borderColor: 'ruleStrong', minW: '52' },
       item: { _highlighted: { bg: 'wash' } },

@@ -46,7 +46,7 @@ export function MemberActions({ projectId, member }: MemberActionsProps) {
       },
     });
   return (
-    <Flex gap="2" align="center">
+    <Flex gap={{ base: '1', md: '2' }} direction={{ base: 'column', md: 'row' }} align={{ md: 'center' }}>
       <SelectInput
         aria-label={`Role of ${member.name}`}
         width="9rem"

@@ -6,14 +6,14 @@ import { duties, roleLabels, roles } from '../role-words.js';
 /** What each role may do, from the same table that the server decides by. */
 export function RoleTable() {
   return (
-    <Sheet overflowX="auto">
+    <Sheet overflowX="auto" tabIndex={0} role="region" aria-label="What each role may do">
       <Table.Root size="sm">
         <Table.Caption srOnly>What each role may do</Table.Caption>
         <Table.Header>
           <Table.Row>
             <Table.ColumnHeader scope="col">May</Table.ColumnHeader>
             {roles.map((role) => (
-              <Table.ColumnHeader key={role} scope="col" textAlign="center" w="28">
+              <Table.ColumnHeader key={role} scope="col" textAlign="center" w={{ md: '28' }}>
                 {roleLabels[role]}
               </Table.ColumnHeader>
             ))}
