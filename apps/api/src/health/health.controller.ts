@@ -11,6 +11,9 @@ import { RequirePermission } from '../access/require-permission.decorator.js';
 import { POOL } from '../database/database.tokens.js';
 import { ApiProblem } from '../common/api-problem.decorator.js';
 
+/** A database that does not answer within this time counts as away. */
+const TIMEOUT_MS = 3_000;
+
 @ApiTags('system')
 @Controller('health')
 export class HealthController {
@@ -29,16 +32,9 @@ export class HealthController {
   })
   @ApiProblem(503, 'A part this service needs is not available')
   check(): Promise<HealthCheckResult> {
-    return this.health.check([() => this.database()]);
-  }
-
-  private async database() {
-    const indicator = this.indicators.check('database');
-    try {
-      await this.pool.query('select 1');
-      return indicator.up();
-    } catch (error) {
-      return indicator.down({ message: error instanceof Error ? error.message : String(error) });
-    }
+    const database = this.indicators.check('database');
+    return this.health.check([
+      () => database.attempt(async () => void (await this.pool.query('select 1'))).withTimeout(TIMEOUT_MS),
+    ]);
   }
 }

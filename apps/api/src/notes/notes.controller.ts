@@ -1,5 +1,5 @@
 import { Body, Controller, Delete, Get, HttpCode, Param, Patch, Post, Query } from '@nestjs/common';
-import { ApiOperation, ApiTags } from '@nestjs/swagger';
+import { ApiNoContentResponse, ApiOperation, ApiTags } from '@nestjs/swagger';
 import { ZodResponse } from 'nestjs-zod';
 import {
   ProjectAccess,
@@ -47,6 +47,7 @@ export class NotesController {
   @Delete('notes/:id')
   @HttpCode(204)
   @RequirePermission('note.write', { resource: 'note' })
+  @ApiNoContentResponse({ description: 'Deleted' })
   @ApiOperation({ summary: 'Delete a note; its author or a manager may' })
   async delete(
     @Param('id') id: string,

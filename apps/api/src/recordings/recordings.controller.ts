@@ -1,5 +1,5 @@
 import { Body, Controller, Delete, Get, HttpCode, Param, Patch, Post, Query } from '@nestjs/common';
-import { ApiOperation, ApiTags } from '@nestjs/swagger';
+import { ApiNoContentResponse, ApiOperation, ApiTags } from '@nestjs/swagger';
 import { ZodResponse } from 'nestjs-zod';
 import { RequirePermission } from '../access/require-permission.decorator.js';
 import { ApiProblem } from '../common/api-problem.decorator.js';
@@ -46,6 +46,7 @@ export class RecordingsController {
   @Delete('recordings/:id')
   @HttpCode(204)
   @RequirePermission('recording.delete', { resource: 'recording' })
+  @ApiNoContentResponse({ description: 'Deleted' })
   @ApiOperation({ summary: 'Delete a recording with all that was computed from it' })
   @ApiProblem(409, 'A report refers to it')
   async delete(@Param('id') id: string): Promise<void> {

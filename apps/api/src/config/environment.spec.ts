@@ -1,0 +1,45 @@
+import { describe, expect, it } from 'vitest';
+import { AppConfig } from './app-config.js';
+import { EnvironmentFaults, readEnvironment } from './environment.js';
+
+const needed = {
+  DATABASE_URL: 'postgresql://app@127.0.0.1:5432/app',
+  DATA_DIR: '/var/lib/overtally',
+  SESSION_SECRET: 'x'.repeat(32),
+};
+
+describe('the environment', () => {
+  it('needs three values and fills in the rest', () => {
+    const config = new AppConfig(readEnvironment(needed));
+    expect(config).toMatchObject({
+      port: 4310,
+      host: '127.0.0.1',
+      publicUrl: 'http://127.0.0.1:4310',
+      maxUploadBytes: 2048 * 1024 * 1024,
+      worker: 'embedded',
+      demo: false,
+      webDist: null,
+      storage: 'disk',
+    });
+    expect(config.isHttps).toBe(false);
+  });
+
+  it('takes an empty value for absent', () => {
+    expect(readEnvironment({ ...needed, PORT: '', WEB_DIST: '', ADMIN_EMAIL: '' }).PORT).toBe(4310);
+  });
+
+  it('names every fault together and repeats no value', () => {
+    const read = () =>
+      readEnvironment({ PORT: 'eighty', SESSION_SECRET: 'too short', ADMIN_EMAIL: 'a@example.com' });
+    expect(read).toThrow(EnvironmentFaults);
+    for (const name of ['PORT', 'DATABASE_URL', 'DATA_DIR', 'SESSION_SECRET', 'ADMIN_PASSWORD']) {
+      expect(read).toThrow(name);
+    }
+    expect(read).not.toThrow(/too short|eighty/);
+  });
+
+  it('knows TLS by the public address and drops the slash at its end', () => {
+    const config = new AppConfig(readEnvironment({ ...needed, PUBLIC_URL: 'https://lab.example/' }));
+    expect(config).toMatchObject({ publicUrl: 'https://lab.example', isHttps: true });
+  });
+});
