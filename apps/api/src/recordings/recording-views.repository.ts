@@ -96,16 +96,26 @@ export class RecordingViewsRepository {
 
   private async summariesOf(analysisIds: string[]): Promise<Map<string, ChannelSummary[]>> {
     if (analysisIds.length === 0) return new Map();
-    const harmonicRms = sql<number[]>`coalesce((
-      select array_agg(h.rms order by h."order") from ${harmonics} h
-      where h.analysis_id = ${analysisChannels.analysisId} and h.channel_index = ${analysisChannels.index}
-        and h."order" >= 1), '{}')`;
+    const orders = this.database
+      .select({
+        analysisId: harmonics.analysisId,
+        channelIndex: harmonics.channelIndex,
+        rms: sql<number[]>`array_agg(${harmonics.rms} order by ${harmonics.order})`.as('rms_by_order'),
+      })
+      .from(harmonics)
+      .where(inArray(harmonics.analysisId, analysisIds))
+      .groupBy(harmonics.analysisId, harmonics.channelIndex)
+      .as('orders');
     const { analysisId, index, name, quantity, unit, rms, fundamental, thdFPercent } = analysisChannels;
     const rows = await this.database
-      .select({ analysisId, index, name, quantity, unit, rms, fundamental, thdFPercent, harmonicRms })
+      .select({
+        ...{ analysisId, index, name, quantity, unit, rms, fundamental, thdFPercent },
+        harmonicRms: sql<number[]>`coalesce(${orders.rms}, '{}')`,
+      })
       .from(analysisChannels)
-      .where(inArray(analysisChannels.analysisId, analysisIds))
-      .orderBy(analysisChannels.index);
+      .leftJoin(orders, and(eq(orders.analysisId, analysisId), eq(orders.channelIndex, index)))
+      .where(inArray(analysisId, analysisIds))
+      .orderBy(index);
     const summaries = rows.flatMap((row) =>
       row.rms === null
         ? []
