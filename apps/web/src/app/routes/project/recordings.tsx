@@ -98,8 +98,8 @@ export function Component() {
           )}
           {limitSet ? (
             <Text color="inkSoft" fontSize="13px" mt="2">
-              Compared by value with {limitSet.standard} {limitSet.title}, {limitSet.edition}. A comparison is
-              not a verdict.
+              Compared by value with {limitSet.title}, edition {limitSet.edition}. A comparison is not a
+              verdict.
             </Text>
           ) : null}
         </>

@@ -57,7 +57,7 @@ export function ListToolbar({ filter, limitSets, limitSetId, onChange }: ListToo
           <SelectInput
             options={[
               { value: 'none', label: 'No limit set' },
-              ...limitSets.map((set) => ({ value: set.id, label: `${set.standard} ${set.title}`.trim() })),
+              ...limitSets.map((set) => ({ value: set.id, label: set.title })),
             ]}
             value={limitSetId || 'none'}
             onChange={(event) => onChange({ limits: event.target.value })}

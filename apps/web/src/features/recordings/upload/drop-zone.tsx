@@ -33,8 +33,8 @@ export function DropZone({ onFiles, checkFirst, onCheckFirst }: DropZoneProps) {
       py="3"
       mb="3"
     >
-      <input {...getInputProps({ 'aria-label': 'Capture files' })} />
       <Box flex="1 1 320px">
+        <input {...getInputProps({ 'aria-label': 'Capture files' })} />
         <Text>Drop CSV or WAV captures here. Sources are kept byte for byte.</Text>
         <Text fontSize="xs" color="inkSoft">
           Captures on mains: qualified persons, rated probes, isolation. Local codes decide.
