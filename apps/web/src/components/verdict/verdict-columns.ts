@@ -1,0 +1,101 @@
+import type { OrderVerdict, TotalVerdict } from '@overtally/contracts';
+import { formatPercent, formatSi, none } from '../../lib/format.js';
+import type { TableColumn } from '../table-column.js';
+import { partWords, verdictTone } from './verdict-words.js';
+
+const shareTone = ({ result }: Pick<OrderVerdict, 'result'>) =>
+  result === 'fail' || result === 'conditional-fail' ? ('over' as const) : undefined;
+
+/** Columns of a verdict order by order; amounts in `unit`. Uncertainties are shown where any is known. */
+export function orderColumns(orders: readonly OrderVerdict[], unit: string): TableColumn<OrderVerdict>[] {
+  const amount = (
+    key: 'mean' | 'uncertainty' | 'smoothedMax' | 'limit' | 'margin',
+    header: string,
+  ): TableColumn<OrderVerdict> => ({
+    key,
+    header,
+    fileHeader: unit ? `${header} (${unit})` : header,
+    align: 'right',
+    value: (row) => row[key],
+    show: (row) => formatSi(row[key], unit),
+  });
+  const has = (key: 'uncertainty' | 'smoothedMax') => orders.some((row) => row[key] !== null);
+  return [
+    { key: 'order', header: 'Order', fileHeader: 'Order', align: 'right', value: (row) => row.order },
+    amount('mean', 'Value'),
+    ...(has('uncertainty') ? [amount('uncertainty', '± U, k = 2')] : []),
+    ...(has('smoothedMax') ? [amount('smoothedMax', 'Highest, 1.5 s')] : []),
+    amount('limit', 'Limit'),
+    amount('margin', 'Margin'),
+    {
+      key: 'share',
+      header: 'Share',
+      fileHeader: 'Share of limit (%)',
+      align: 'right',
+      value: (row) => row.sharePercent,
+      show: (row) => formatPercent(row.sharePercent),
+      tone: shareTone,
+    },
+    {
+      key: 'result',
+      header: 'Result',
+      fileHeader: 'Result',
+      value: (row) => partWords[row.result],
+      tone: (row) => verdictTone(row.result) ?? 'inkSoft',
+    },
+    {
+      key: 'reason',
+      header: 'Reason',
+      fileHeader: 'Reason',
+      value: (row) => row.reason,
+      show: (row) => row.reason,
+    },
+  ];
+}
+
+/** Columns of the totals (THD, THC and their like); each has its own unit. */
+export function totalColumns(): TableColumn<TotalVerdict>[] {
+  return [
+    { key: 'name', header: 'Total', fileHeader: 'Total', value: (row) => row.name },
+    {
+      key: 'value',
+      header: 'Value',
+      fileHeader: 'Value',
+      align: 'right',
+      value: (row) => row.value,
+      show: (row) => formatSi(row.value, row.unit),
+    },
+    {
+      key: 'limit',
+      header: 'Limit',
+      fileHeader: 'Limit',
+      align: 'right',
+      value: (row) => row.limit,
+      show: (row) => (row.limit === null ? none : formatSi(row.limit, row.unit, { trim: true })),
+    },
+    { key: 'unit', header: 'Unit', fileHeader: 'Unit', value: (row) => row.unit },
+    {
+      key: 'share',
+      header: 'Share',
+      fileHeader: 'Share of limit (%)',
+      align: 'right',
+      value: (row) => row.sharePercent,
+      show: (row) => formatPercent(row.sharePercent),
+      tone: shareTone,
+    },
+    {
+      key: 'result',
+      header: 'Result',
+      fileHeader: 'Result',
+      value: (row) => partWords[row.result],
+      tone: (row) => verdictTone(row.result) ?? 'inkSoft',
+    },
+    {
+      key: 'reason',
+      header: 'Reason',
+      fileHeader: 'Reason',
+      value: (row) => row.reason,
+      show: (row) => row.reason,
+    },
+  ];
+}

@@ -1,0 +1,105 @@
+import { Stack, Text } from '@chakra-ui/react';
+import { decisionRuleSchema, type ChannelAnalysis, type LimitSet } from '@overtally/contracts';
+import { evaluate, measurementOfChannel } from '@overtally/limits';
+import { useMemo } from 'react';
+import { FormField, SelectInput } from '../../../components/form-field.js';
+import { decisionRuleNames, parameterWords } from '../../../components/verdict/verdict-words.js';
+import { limitSetName } from '../../../lib/limit-set-name.js';
+import { neededParameters, readParameters, setsForChannel, type JudgeDraft } from '../judge-draft.js';
+import { Judgement } from './judgement.js';
+import { LimitSetSelect } from './limit-set-select.js';
+import { ParameterFields } from './parameter-fields.js';
+
+interface JudgeFormProps {
+  channels: readonly ChannelAnalysis[];
+  limitSets: readonly LimitSet[];
+  draft: JudgeDraft;
+  onChange: (draft: JudgeDraft) => void;
+}
+
+const ruleOptions = decisionRuleSchema.options.map((value) => ({ value, label: decisionRuleNames[value] }));
+
+/** Channel, limit set, parameters and decision rule, with what they would lead to. */
+export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormProps) {
+  const channel = channels.find(({ index }) => index === draft.channel);
+  const set = limitSets.find(({ id }) => id === draft.limitSetId);
+  const { fitting, others } = setsForChannel(limitSets, channel);
+  const needed = useMemo(
+    () => (set ? neededParameters(set, draft.decisionRule) : []),
+    [set, draft.decisionRule],
+  );
+  const read = useMemo(() => readParameters(needed, draft.entries), [needed, draft.entries]);
+  const preview = useMemo(
+    () =>
+      set && channel
+        ? evaluate(set, measurementOfChannel(channel), {
+            parameters: read.parameters,
+            decisionRule: draft.decisionRule,
+          })
+        : null,
+    [set, channel, read, draft.decisionRule],
+  );
+  const choose = (index: number) => {
+    const next = channels.find((candidate) => candidate.index === index);
+    const first = setsForChannel(limitSets, next).fitting[0];
+    const keeps = set !== undefined && set.quantity === next?.quantity;
+    onChange({
+      ...draft,
+      channel: index,
+      limitSetId: keeps ? draft.limitSetId : (first?.id ?? draft.limitSetId),
+    });
+  };
+  return (
+    <Stack gap="4">
+      <Stack direction={{ base: 'column', sm: 'row' }} gap="4">
+        <FormField label="Channel">
+          <SelectInput
+            options={channels.map(({ index, name, unit }) => ({
+              value: String(index),
+              label: unit ? `${name} in ${unit}` : name,
+            }))}
+            value={String(draft.channel)}
+            onChange={(event) => choose(Number(event.target.value))}
+          />
+        </FormField>
+        <FormField label="Limit set" help={set ? `Edition ${set.edition || 'not stated'}` : undefined}>
+          <LimitSetSelect
+            fitting={fitting}
+            others={others}
+            value={draft.limitSetId}
+            onChange={(limitSetId) => onChange({ ...draft, limitSetId })}
+          />
+        </FormField>
+      </Stack>
+      <FormField label="Decision rule" help={preview?.decisionRuleText}>
+        <SelectInput
+          options={ruleOptions}
+          value={draft.decisionRule}
+          onChange={(event) =>
+            onChange({ ...draft, decisionRule: decisionRuleSchema.parse(event.target.value) })
+          }
+        />
+      </FormField>
+      <ParameterFields
+        needed={needed}
+        entries={draft.entries}
+        problems={read.problems}
+        onChange={(key, text) => onChange({ ...draft, entries: { ...draft.entries, [key]: text } })}
+      />
+      {read.missing.length > 0 ? (
+        <Text color="near">
+          {`Still needed: ${read.missing.map((key) => parameterWords[key].label).join(', ')}.`}
+        </Text>
+      ) : preview && set && channel ? (
+        <Judgement
+          preview
+          caption="Preview, not stored"
+          subject={`${limitSetName(set)}, ${channel.name}`}
+          unit={channel.unit}
+          fileName={`preview-${channel.name}`}
+          judgement={preview}
+        />
+      ) : null}
+    </Stack>
+  );
+}
