@@ -59,7 +59,9 @@ export function RecordingRow({ recording, limitSet, to, selected, selectable, on
         </Box>
       </Table.Cell>
       <Table.Cell color="inkSoft" whiteSpace="nowrap" hideBelow="xl">
-        {formatDateTime(recording.capturedAt ?? recording.createdAt)}
+        {recording.capturedAt
+          ? formatDateTime(recording.capturedAt)
+          : `received ${formatDateTime(recording.createdAt)}`}
       </Table.Cell>
       <Table.Cell {...figureCell} hideBelow="2xl">
         {formatSi(recording.sampleRateHz, 'Hz', { trim: true })}

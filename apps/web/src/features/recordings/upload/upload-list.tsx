@@ -1,4 +1,4 @@
-import { Box, Button, Flex, Link, Progress, Text } from '@chakra-ui/react';
+import { Box, Button, Flex, Grid, Link, Progress, Text } from '@chakra-ui/react';
 import { Link as RouterLink } from 'react-router-dom';
 import { Sheet } from '../../../components/sheet.js';
 import { problemText } from '../../../lib/api-problem.js';
@@ -35,29 +35,31 @@ export function UploadList({ queue, items, recordingTo, onRemoveCopy }: UploadLi
       </Flex>
       <Box as="ul" listStyleType="none">
         {items.map((item) => (
-          <Flex
+          <Grid
             as="li"
             key={item.id}
-            align="center"
+            templateColumns={{ base: 'minmax(0, 1fr) auto', md: 'minmax(0, 1fr) minmax(0, 2fr) 150px' }}
+            alignItems="center"
             columnGap="4"
             rowGap="1"
-            wrap="wrap"
             borderTopWidth="1px"
             borderColor="rule"
             mt="2"
             pt="2"
           >
-            <Text flex="1 1 220px" overflowWrap="anywhere">
+            <Text overflowWrap="anywhere">
               {item.file.name}{' '}
               <Box as="span" color="inkSoft" fontSize="13px">
                 {formatBytes(item.file.size)}
               </Box>
             </Text>
-            <Box flex="2 1 260px">
+            <Box gridColumn={{ base: '1 / -1', md: 'auto' }} gridRow={{ base: 2, md: 'auto' }}>
               <Outcome item={item} recordingTo={recordingTo} />
             </Box>
-            <Actions item={item} queue={queue} onRemoveCopy={onRemoveCopy} />
-          </Flex>
+            <Flex justify="flex-end">
+              <Actions item={item} queue={queue} onRemoveCopy={onRemoveCopy} />
+            </Flex>
+          </Grid>
         ))}
       </Box>
     </Sheet>
