@@ -30,6 +30,23 @@ function startVite(apiPort, webPort) {
   return startService(join(web, 'node_modules/.bin/vite'), args, { cwd: web, env });
 }
 
+/**
+ * Starts the server, and starts it anew after every change that compiles.
+ * @param {import('./src/api.mjs').ApiOptions} server
+ * @returns {Promise<never>}
+ */
+async function serveNewest(server) {
+  let api = startApi(server);
+  await waitUntilHealthy(localAddress(server.host, server.port), api);
+  for (let seen = sourceState(); ;) {
+    seen = await nextSourceState(seen);
+    if (!(await buildServer())) continue;
+    await api.stop();
+    api = startApi(server);
+    console.log('The server starts anew.');
+  }
+}
+
 /** @returns {Promise<never>} it ends by a signal or a failure */
 async function dev() {
   const { dataDirectory, host, port } = await setUp();
@@ -41,19 +58,11 @@ async function dev() {
   if (!(await buildServer())) throw new LauncherError('Mend the build and start again.');
 
   const databaseUrl = await productDatabase(dataDirectory);
-  const server = { databaseUrl, dataDirectory, host, port };
-  let api = startApi(server);
-  await waitUntilHealthy(localAddress(host, port), api);
-  void startVite(port, webPort).exited.then((code) => console.error(`Vite ended (exit code ${code}).`));
+  const serving = serveNewest({ databaseUrl, dataDirectory, host, port });
+  const vite = startVite(port, webPort);
   console.log(welcomeText(webAddress, await demoPeople()));
-
-  for (let seen = sourceState(); ;) {
-    seen = await nextSourceState(seen);
-    if (!(await buildServer())) continue;
-    await api.stop();
-    api = startApi(server);
-    console.log('The server starts anew.');
-  }
+  const code = await Promise.race([vite.exited, serving]);
+  throw new LauncherError(`Vite ended unexpectedly (exit code ${code}, see above).`);
 }
 
 runCommand(dev, { exitCodeOnSignal: 0 });

@@ -15,7 +15,7 @@ import { tallyOfReport } from './tally.mjs';
 export const tiers = ['checks', 'unit', 'integration', 'browser'];
 
 const scriptOfTier = { unit: 'test', integration: 'test:integration', browser: 'test:browser' };
-const timeoutMs = 8 * 60_000;
+const timeoutMs = 15 * 60_000;
 
 /** @returns {Step} counts as one test */
 export function buildStep() {
