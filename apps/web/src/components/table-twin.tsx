@@ -10,6 +10,8 @@ interface TableTwinProps<Row> {
   /** Names the table for screen readers. */
   caption: string;
   columns: readonly TableColumn<Row>[];
+  /** Columns of files and the clipboard, where they differ from those shown. */
+  fileColumns?: readonly TableColumn<Row>[];
   rows: readonly Row[];
   rowKey: (row: Row) => string | number;
   /** Name of the downloaded file without its ending. */
@@ -24,11 +26,20 @@ interface TableTwinProps<Row> {
 
 /** The numbers behind a figure: sortable, to copy as tab-separated text, to download as CSV. */
 export function TableTwin<Row>(props: TableTwinProps<Row>) {
-  const { caption, columns, rows, rowKey, fileName, initialSort = null, maxHeight } = props;
+  const {
+    caption,
+    columns,
+    fileColumns = columns,
+    rows,
+    rowKey,
+    fileName,
+    initialSort = null,
+    maxHeight,
+  } = props;
   const [sort, setSort] = useState<Sort>(initialSort);
   const sorted = useMemo(() => sortRows(rows, columns, sort), [rows, columns, sort]);
   const copy = () => {
-    navigator.clipboard.writeText(toTsv(tableRows(columns, sorted))).then(
+    navigator.clipboard.writeText(toTsv(tableRows(fileColumns, sorted))).then(
       () => notifyDone(`Copied ${sorted.length} rows`),
       (error: unknown) => notifyProblem('Not copied', error),
     );
@@ -43,7 +54,7 @@ export function TableTwin<Row>(props: TableTwinProps<Row>) {
           size="xs"
           variant="ghost"
           colorPalette="act"
-          onClick={() => saveText(`${fileName}.csv`, toCsv(tableRows(columns, sorted)))}
+          onClick={() => saveText(`${fileName}.csv`, toCsv(tableRows(fileColumns, sorted)))}
         >
           Download CSV
         </Button>

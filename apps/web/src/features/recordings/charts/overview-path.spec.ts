@@ -1,8 +1,12 @@
 import { describe, expect, it } from 'vitest';
 import { overviewPath } from './overview-path.js';
 
-const envelope = (minimum: (number | null)[], maximum: (number | null)[]) =>
-  ({ kind: 'envelope', values: [], minimum, maximum }) as const;
+const envelope = (minimum: (number | null)[], maximum: (number | null)[]) => ({
+  kind: 'envelope' as const,
+  values: [],
+  minimum,
+  maximum,
+});
 
 describe('overview of a record', () => {
   it('runs over the maxima and back under the minima', () => {

@@ -3,6 +3,8 @@ import { linearTicks } from '../../../components/charts/si-ticks.js';
 import type { PlotLayout } from '../../../components/plot-layout.js';
 import type { PlotRelayoutEvent, PlotTrace } from '../../../components/plot.js';
 import type { Palette } from '../../../lib/theme/palette.js';
+import type { LetteredNote } from './note-letters.js';
+import { letterTrace } from './order-chart.js';
 import { extremes } from './overview-path.js';
 import { timeUnit, type Span } from './span.js';
 
@@ -19,10 +21,11 @@ export function waveformPoints(waveform: Waveform, factor: number): { x: number[
   };
 }
 
-/** Trace and layout of the zoomed waveform over `span`. */
+/** Trace and layout of the zoomed waveform over `span`, with bands and letters where notes speak of a time span. */
 export function waveformChart(
   waveform: Waveform,
   span: Span,
+  notes: readonly LetteredNote[],
   palette: Palette,
 ): { traces: PlotTrace[]; layout: PlotLayout } {
   const { unit, factor } = timeUnit(span.toS - span.fromS);
@@ -31,7 +34,8 @@ export function waveformChart(
   const low = known.reduce((a, b) => Math.min(a, b), Infinity);
   const high = known.reduce((a, b) => Math.max(a, b), -Infinity);
   const pad = high > low ? (high - low) * 0.06 : Math.abs(high) * 0.1 || 1;
-  const range = known.length > 0 ? [low - pad, high + pad] : [-1, 1];
+  const [bottom, top] = known.length > 0 ? [low - pad, high + pad] : [-1, 1];
+  const spans = notedSpans(notes, span);
   return {
     traces: [
       {
@@ -42,6 +46,7 @@ export function waveformChart(
         line: { color: palette.ink, width: 1.4 },
         hovertemplate: `%{x:.6~g} ${unit}<br>%{y:.4~g} ${waveform.unit}<extra></extra>`,
       },
+      ...letters(spans, span, factor, top - (top - bottom) * 0.08, palette),
     ],
     layout: {
       margin: { l: 64, r: 12, t: 8, b: 30 },
@@ -54,12 +59,45 @@ export function waveformChart(
         nticks: 9,
       },
       yaxis: {
-        range,
+        range: [bottom, top],
         fixedrange: true,
         tickmode: 'array',
-        ...linearTicks(range[0] ?? -1, range[1] ?? 1, waveform.unit, 3),
+        ...linearTicks(bottom, top, waveform.unit, 3),
       },
+      shapes: spans.map(({ fromS, toS }) => band(fromS * factor, toS * factor, palette)),
     },
+  };
+}
+
+type NotedSpan = Span & { letter: string };
+
+/** Spans of notes that reach into the view. */
+function notedSpans(notes: readonly LetteredNote[], view: Span): NotedSpan[] {
+  return notes.flatMap(({ letter, note: { target } }) =>
+    target.kind === 'span' && target.fromS < view.toS && target.toS > view.fromS
+      ? [{ fromS: target.fromS, toS: target.toS, letter }]
+      : [],
+  );
+}
+
+function letters(spans: readonly NotedSpan[], view: Span, factor: number, y: number, palette: Palette) {
+  const middle = ({ fromS, toS }: Span) => (Math.max(fromS, view.fromS) + Math.min(toS, view.toS)) / 2;
+  const marks = spans.map((noted) => ({
+    x: middle(noted) * factor,
+    y,
+    letter: noted.letter,
+    color: palette.ink,
+  }));
+  return marks.length > 0 ? [letterTrace(marks, palette)] : [];
+}
+
+function band(x0: number, x1: number, palette: Palette) {
+  return {
+    type: 'rect',
+    layer: 'below',
+    ...{ x0, x1, yref: 'paper', y0: 0, y1: 1 },
+    fillcolor: palette.wash,
+    line: { width: 0 },
   };
 }
 

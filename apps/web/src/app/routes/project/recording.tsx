@@ -1,0 +1,76 @@
+import { Button } from '@chakra-ui/react';
+import { useQuery } from '@tanstack/react-query';
+import {
+  Link as RouterLink,
+  useNavigate,
+  useParams,
+  useSearchParams,
+  type LoaderFunctionArgs,
+} from 'react-router-dom';
+import { useAccount } from '../../../features/account/hooks/use-account.js';
+import { limitSetsQuery } from '../../../features/limits/api/list-limit-sets.js';
+import { useProject } from '../../../features/projects/hooks/use-project.js';
+import { recordingQuery } from '../../../features/recordings/api/get-recording.js';
+import { RecordingSheet, type SheetPlace } from '../../../features/recordings/sheet/recording-sheet.js';
+import { queryClient } from '../../../lib/query-client.js';
+import { paths } from '../../paths.js';
+import { useProjectId } from '../../use-project-id.js';
+
+export async function loader({ params }: LoaderFunctionArgs): Promise<null> {
+  await queryClient.ensureQueryData(recordingQuery(params.recordingId ?? ''));
+  return null;
+}
+
+export function Component() {
+  const navigate = useNavigate();
+  const account = useAccount();
+  const project = useProject(useProjectId());
+  const { recordingId = '' } = useParams();
+  const recording = useQuery(recordingQuery(recordingId));
+  const limitSets = useQuery(limitSetsQuery(project.id));
+  const place = useSheetPlace();
+  if (!recording.data) return null;
+  return (
+    <RecordingSheet
+      key={recordingId}
+      project={project}
+      account={account}
+      recording={recording.data}
+      limitSets={limitSets.data ?? []}
+      place={place}
+      slots={{
+        actions: ({ channel }) => (
+          <Button asChild>
+            <RouterLink to={paths.overlay(project.id, [`${recordingId}:${channel}`])}>
+              Add to overlay
+            </RouterLink>
+          </Button>
+        ),
+      }}
+      onReadAgain={() => undefined}
+      onDeleted={() => void navigate(paths.recordings(project.id))}
+    />
+  );
+}
+
+/** Analysis and channel stand in the address, so that a link shows what its sender saw. */
+function useSheetPlace(): SheetPlace {
+  const [search, setSearch] = useSearchParams();
+  const set = (name: string, value: string | null) =>
+    setSearch(
+      (current) => {
+        const next = new URLSearchParams(current);
+        if (value === null) next.delete(name);
+        else next.set(name, value);
+        return next;
+      },
+      { preventScrollReset: true },
+    );
+  const channel = search.get('channel');
+  return {
+    analysisId: search.get('analysis'),
+    channel: channel === null ? null : Number(channel),
+    onAnalysis: (id) => set('analysis', id),
+    onChannel: (index) => set('channel', String(index)),
+  };
+}

@@ -1,0 +1,42 @@
+import type { Recording, Settings, UpdateRecording } from '@overtally/contracts';
+import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { cancelAnalysis } from '../api/cancel-analysis.js';
+import { createAnalysis } from '../api/create-analysis.js';
+import { deleteRecording } from '../api/delete-recording.js';
+import { recordingQuery } from '../api/get-recording.js';
+import { updateRecording } from '../api/update-recording.js';
+
+/** What can be done to one recording, with what has to be fetched anew after it. */
+export function useRecordingChanges({ id, projectId }: Pick<Recording, 'id' | 'projectId'>) {
+  const queryClient = useQueryClient();
+  const refreshLists = () =>
+    queryClient.invalidateQueries({ queryKey: ['projects', projectId, 'recordings'] });
+  const refresh = () =>
+    Promise.all([queryClient.invalidateQueries({ queryKey: recordingQuery(id).queryKey }), refreshLists()]);
+  const update = useMutation({
+    mutationFn: (change: UpdateRecording) => updateRecording(id, change),
+    onSuccess: async (recording) => {
+      queryClient.setQueryData(recordingQuery(id).queryKey, recording);
+      await refresh();
+    },
+  });
+  const analyse = useMutation({
+    mutationFn: (settings: Settings) => createAnalysis(id, settings),
+    onSuccess: refresh,
+  });
+  const cancel = useMutation({
+    mutationFn: cancelAnalysis,
+    onSuccess: async (analysis) => {
+      await queryClient.invalidateQueries({ queryKey: ['analyses', analysis.id] });
+      await refresh();
+    },
+  });
+  const remove = useMutation({
+    mutationFn: () => deleteRecording(id),
+    onSuccess: async () => {
+      await refreshLists();
+      await queryClient.invalidateQueries({ queryKey: ['projects', projectId], exact: true });
+    },
+  });
+  return { update, analyse, cancel, remove };
+}

@@ -1,0 +1,70 @@
+import type { TableColumn } from '../../../components/table-column.js';
+import { formatFixed, formatHz, formatPercent, formatSi } from '../../../lib/format.js';
+import { isOver, resultWords, type OrderRow } from '../charts/order-rows.js';
+
+type Column = TableColumn<OrderRow>;
+
+function amount(key: keyof OrderRow & string, header: string, unit: string): Column {
+  const value = (row: OrderRow) => row[key] as number | null;
+  return {
+    key,
+    header,
+    fileHeader: unit ? `${header} (${unit})` : header,
+    align: 'right',
+    value,
+    show: (row) => formatSi(value(row), unit),
+  };
+}
+
+/** Columns of the orders; those that hold nothing for this channel are left out. */
+export function orderColumns(rows: readonly OrderRow[], unit: string, symbol: string): Column[] {
+  const columns: Column[] = [
+    { key: 'order', header: 'Order', fileHeader: 'Order', align: 'right', value: (row) => row.order },
+    {
+      key: 'frequencyHz',
+      header: 'Frequency',
+      fileHeader: 'Frequency (Hz)',
+      align: 'right',
+      value: (row) => row.frequencyHz,
+      show: (row) => formatHz(row.frequencyHz, 2),
+    },
+    amount('rms', 'rms', unit),
+    {
+      key: 'percentOfFundamental',
+      header: `of ${symbol}`,
+      fileHeader: 'Share of the fundamental (%)',
+      align: 'right',
+      value: (row) => row.percentOfFundamental,
+      show: (row) => formatPercent(row.percentOfFundamental, 2),
+    },
+    {
+      key: 'phaseDeg',
+      header: 'Phase',
+      fileHeader: 'Phase, cosine form (deg)',
+      align: 'right',
+      value: (row) => row.phaseDeg,
+      show: (row) => formatFixed(row.phaseDeg, 1, '°'),
+    },
+    amount('groupRms', 'Group', unit),
+    amount('subgroupRms', 'Subgroup', unit),
+    amount('smoothedMaxRms', 'Highest, 1.5 s', unit),
+    amount('limit', 'Limit', unit),
+    {
+      key: 'sharePercent',
+      header: 'Share',
+      fileHeader: 'Share of the limit (%)',
+      align: 'right',
+      value: (row) => row.sharePercent,
+      show: (row) => formatPercent(row.sharePercent),
+      tone: (row) => (isOver(row) ? 'over' : undefined),
+    },
+    {
+      key: 'result',
+      header: 'Result',
+      fileHeader: 'Result',
+      value: (row) => row.result && resultWords[row.result],
+      tone: (row) => (isOver(row) ? 'over' : row.result === 'pass' ? 'within' : 'inkSoft'),
+    },
+  ];
+  return columns.filter((column) => rows.some((row) => column.value(row) !== null));
+}
