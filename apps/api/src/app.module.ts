@@ -10,6 +10,7 @@ import { ProblemFilter } from './common/problem.filter.js';
 import { AppConfig } from './config/app-config.js';
 import { ConfigModule } from './config/config.module.js';
 import { DatabaseModule } from './database/database.module.js';
+import { DemoModule } from './demo/demo.module.js';
 import { HealthModule } from './health/health.module.js';
 import { HttpModule } from './http/http.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
@@ -44,6 +45,7 @@ export class AppModule {
         LimitsModule,
         ReportsModule,
         ...(config.worker === 'embedded' ? [WorkerModule] : []),
+        ...(config.demo ? [DemoModule] : []),
         HealthModule,
         HttpModule,
       ],

@@ -68,8 +68,13 @@ export class RecordingDataController {
   ): Promise<StreamableFile | undefined> {
     const recording = (await this.repository.find(id))!;
     const entityTag = `"${recording.fileSha256}"`;
-    response.attachment(recording.fileName).set({ ETag: entityTag, 'Accept-Ranges': 'bytes' });
-    response.set('Cache-Control', 'private, no-cache');
+    response.attachment(recording.fileName).set({
+      // Not the type the name suggests: compressed on the way, a range would no longer be one of the file.
+      'Content-Type': 'application/octet-stream',
+      'Cache-Control': 'private, no-cache',
+      'Accept-Ranges': 'bytes',
+      ETag: entityTag,
+    });
     if (request.get('if-none-match') === entityTag) {
       response.status(304);
       return undefined;

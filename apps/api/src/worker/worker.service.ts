@@ -25,7 +25,7 @@ import { matchHandlers, type AnyHandler } from './match-handlers.js';
 import { queueLogger } from './queue-logger.js';
 import { exhaustedJobs, releaseDeadWorkers, resumeInterrupted, WorkerLease } from './worker-lease.js';
 
-const sweepIntervalMs = 15_000;
+const sweepIntervalMs = 5_000;
 
 /** Runs the queue in this process and looks after what dead workers left behind. */
 @Injectable()

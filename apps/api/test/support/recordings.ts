@@ -21,8 +21,13 @@ export async function upload(
 }
 
 /** The answer of `path` once `done` holds for it. */
-export async function eventually<T>(agent: TestAgent, path: string, done: (body: T) => boolean): Promise<T> {
-  const end = Date.now() + patienceMs;
+export async function eventually<T>(
+  agent: TestAgent,
+  path: string,
+  done: (body: T) => boolean,
+  withinMs = patienceMs,
+): Promise<T> {
+  const end = Date.now() + withinMs;
   for (;;) {
     const { body } = (await agent.get(path).expect(200)) as { body: T };
     if (done(body)) return body;
@@ -32,9 +37,12 @@ export async function eventually<T>(agent: TestAgent, path: string, done: (body:
 }
 
 /** The recording once it is ready or has failed. */
-export function settled(agent: TestAgent, id: string): Promise<Recording> {
-  return eventually<Recording>(agent, `/api/recordings/${id}`, ({ status }) =>
-    ['ready', 'failed'].includes(status),
+export function settled(agent: TestAgent, id: string, withinMs = patienceMs): Promise<Recording> {
+  return eventually<Recording>(
+    agent,
+    `/api/recordings/${id}`,
+    ({ status }) => ['ready', 'failed'].includes(status),
+    withinMs,
   );
 }
 

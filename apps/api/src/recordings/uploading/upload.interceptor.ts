@@ -1,7 +1,7 @@
 import { Injectable, type CallHandler, type ExecutionContext, type NestInterceptor } from '@nestjs/common';
 import type { Response } from 'express';
 import multer, { MulterError } from 'multer';
-import { finalize, type Observable } from 'rxjs';
+import { from, lastValueFrom, type Observable } from 'rxjs';
 import { problem } from '../../common/problem.js';
 import type { AppRequest } from '../../common/request.js';
 import { AppConfig } from '../../config/app-config.js';
@@ -34,7 +34,8 @@ export class UploadInterceptor implements NestInterceptor {
         error === undefined ? resolve() : reject(this.refusal(error)),
       );
     });
-    return next.handle().pipe(finalize(() => void request.file?.staged.discard()));
+    const reply = lastValueFrom(next.handle(), { defaultValue: undefined });
+    return from(reply.finally(() => request.file?.staged.discard()));
   }
 
   private refusal(error: unknown): unknown {

@@ -1,0 +1,56 @@
+import {
+  Injectable,
+  Logger,
+  type BeforeApplicationShutdown,
+  type OnApplicationBootstrap,
+} from '@nestjs/common';
+import { demoCapturePath } from '@overtally/fixtures';
+import { createReadStream } from 'node:fs';
+import { RecordingsService } from '../recordings/recordings.service.js';
+import { Storage } from '../storage/storage.js';
+import { DemoAccounts, type PendingCapture } from './demo-accounts.js';
+
+/** Fills a new installation with people, projects and captures to look at. */
+@Injectable()
+export class DemoService implements OnApplicationBootstrap, BeforeApplicationShutdown {
+  private readonly logger = new Logger('Demo');
+  private uploading: Promise<void> = Promise.resolve();
+  private stopped = false;
+
+  constructor(
+    private readonly accounts: DemoAccounts,
+    private readonly recordings: RecordingsService,
+    private readonly storage: Storage,
+  ) {}
+
+  /** People can sign in as soon as the process answers; the captures come in meanwhile. */
+  async onApplicationBootstrap(): Promise<void> {
+    if (await this.accounts.make()) this.logger.log('People and projects of the demonstration were made');
+    this.uploading = this.uploadPending().catch((error: unknown) =>
+      this.logger.error({ err: error }, 'Uploading the captures of the demonstration failed'),
+    );
+  }
+
+  async beforeApplicationShutdown(): Promise<void> {
+    this.stopped = true;
+    await this.uploading;
+  }
+
+  private async uploadPending(): Promise<void> {
+    for (const pending of await this.accounts.pending()) {
+      if (this.stopped) return;
+      await this.upload(pending);
+    }
+  }
+
+  /** The same way as over HTTP: streamed into storage, then read and analysed by the queue. */
+  private async upload({ projectId, uploadedById, capture }: PendingCapture): Promise<void> {
+    const { fileName, ...fields } = capture;
+    const staged = await this.storage.stage(createReadStream(demoCapturePath(fileName)));
+    try {
+      await this.recordings.upload({ projectId, uploadedById, fileName, staged, fields });
+    } finally {
+      await staged.discard();
+    }
+  }
+}
