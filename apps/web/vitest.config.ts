@@ -7,5 +7,6 @@ export default defineConfig({
     environment: 'happy-dom',
     include: ['src/**/*.spec.{ts,tsx}'],
     setupFiles: ['src/testing/setup.ts'],
+    testTimeout: 40_000,
   },
 });

@@ -13,6 +13,7 @@ export const paths = {
   overlay: (projectId: string, recordingIds: readonly string[] = []) =>
     `${project(projectId)}/overlay${recordingIds.length > 0 ? `?r=${recordingIds.join(',')}` : ''}`,
   limits: (projectId: string) => `${project(projectId)}/limits`,
+  newLimitSet: (projectId: string) => `${project(projectId)}/limits/new`,
   limitSet: (projectId: string, limitSetId: string) =>
     `${project(projectId)}/limits/${encodeURIComponent(limitSetId)}`,
   reports: (projectId: string) => `${project(projectId)}/reports`,

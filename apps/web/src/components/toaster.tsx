@@ -1,4 +1,4 @@
-import { Button, CloseButton, Flex, Portal, Stack, Toast, Toaster as ChakraToaster } from '@chakra-ui/react';
+import { CloseButton, Flex, Portal, Stack, Toast, Toaster as ChakraToaster } from '@chakra-ui/react';
 import { toaster } from './notify.js';
 
 /** Where notices stand; render once. `notify.ts` creates them. */
@@ -20,17 +20,27 @@ export function Toaster() {
             <Stack gap="0.5" flex="1" maxW="100%">
               <Toast.Title>{toast.title}</Toast.Title>
               {toast.description ? (
-                <Toast.Description color="inkSoft">{toast.description}</Toast.Description>
+                <Toast.Description color="inkSoft" opacity="1">
+                  {toast.description}
+                </Toast.Description>
               ) : null}
             </Stack>
-            <Flex align="flex-start" gap="1">
+            <Flex align="flex-start" gap="2">
               {toast.action ? (
-                <Toast.ActionTrigger asChild>
-                  <Button size="xs">{toast.action.label}</Button>
+                <Toast.ActionTrigger
+                  color="act"
+                  borderWidth="1px"
+                  borderColor="edge"
+                  borderRadius="3px"
+                  px="2.5"
+                  h="7"
+                  cursor="pointer"
+                >
+                  {toast.action.label}
                 </Toast.ActionTrigger>
               ) : null}
               <Toast.CloseTrigger asChild position="static">
-                <CloseButton size="2xs" variant="ghost" aria-label="Close the notice" />
+                <CloseButton size="2xs" variant="ghost" colorPalette="gray" aria-label="Close the notice" />
               </Toast.CloseTrigger>
             </Flex>
           </Toast.Root>

@@ -43,6 +43,7 @@ export function amplitudeAxis({ scale, bottom, top }: AmplitudeRange, unit: stri
     fixedrange: true,
     tickmode: 'array',
     ...ticks,
+    ticklabelstandoff: 6,
   };
 }
 

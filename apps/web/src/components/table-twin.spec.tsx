@@ -1,0 +1,56 @@
+import { render, screen, within } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { expect, it, vi } from 'vitest';
+import { Providers } from '../app/providers.js';
+import { TableTwin } from './table-twin.js';
+
+interface Row {
+  order: number;
+  rms: number | null;
+}
+const rows: Row[] = [
+  { order: 3, rms: 0.02 },
+  { order: 5, rms: null },
+  { order: 11, rms: 0.5 },
+];
+
+function show() {
+  render(
+    <Providers>
+      <TableTwin
+        caption="Current by order"
+        fileName="orders"
+        rows={rows}
+        rowKey={(row) => row.order}
+        columns={[
+          { key: 'order', header: 'Order', fileHeader: 'order', value: (row) => row.order },
+          { key: 'rms', header: 'rms', fileHeader: 'rms (A)', align: 'right', value: (row) => row.rms },
+        ]}
+      />
+    </Providers>,
+  );
+}
+
+const orders = () =>
+  screen
+    .getAllByRole('row')
+    .slice(1)
+    .map((row) => within(row).getAllByRole('cell')[0]?.textContent);
+
+it('sorts up and down, with what is absent last both ways', async () => {
+  show();
+  const user = userEvent.setup();
+  await user.click(screen.getByRole('button', { name: 'rms' }));
+  expect(orders()).toEqual(['3', '11', '5']);
+  await user.click(screen.getByRole('button', { name: 'rms' }));
+  expect(orders()).toEqual(['11', '3', '5']);
+  expect(screen.getByRole('columnheader', { name: 'rms' }).getAttribute('aria-sort')).toBe('descending');
+});
+
+it('copies what is shown, in its order, with units in the heading', async () => {
+  const user = userEvent.setup();
+  show();
+  const write = vi.spyOn(navigator.clipboard, 'writeText');
+  await user.click(screen.getByRole('button', { name: 'Copy' }));
+  expect(write).toHaveBeenCalledWith('order\trms (A)\n3\t0.02\n5\t\n11\t0.5');
+});
