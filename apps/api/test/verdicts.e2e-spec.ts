@@ -1,4 +1,4 @@
-import { verdictPageSchema, verdictSchema, type Verdict } from '@overtally/contracts';
+import { problemDetailsSchema, verdictPageSchema, verdictSchema, type Verdict } from '@overtally/contracts';
 import { evaluate, findPublishedLimitSet, measurementOfChannel } from '@overtally/limits';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { newProject } from './support/factories.js';
@@ -74,7 +74,8 @@ describe('a verdict', () => {
     const analyst = await test.signIn('analyst');
     const body = classAVerdict({ channel: 7, limitSetId: set.id });
     const reply = await analyst.post(path()).send(body).expect(422);
-    expect(reply.body.errors.map((error: { path: string }) => error.path)).toEqual(['channel', 'limitSetId']);
+    const { errors } = problemDetailsSchema.parse(reply.body);
+    expect(errors?.map((error) => error.path)).toEqual(['channel', 'limitSetId']);
   });
 
   it('keeps its limit set when that is deleted', async () => {
@@ -118,7 +119,8 @@ describe('a verdict', () => {
     expect(second.nextCursor).toBeNull();
     const ofProject = `/api/projects/${test.project.id}/verdicts`;
     const filtered = await guest.get(`${ofProject}?recordingId=${own.recordingId}`).expect(200);
-    expect(filtered.body.items.map((verdict: Verdict) => verdict.id)).toEqual(newestFirst);
+    const { items } = verdictPageSchema.parse(filtered.body);
+    expect(items.map((verdict) => verdict.id)).toEqual(newestFirst);
     const all = verdictPageSchema.parse((await guest.get(ofProject).expect(200)).body);
     expect(all.items.length).toBeGreaterThan(3);
     await guest.get(`${ofProject}?cursor=nonsense`).expect(400);

@@ -1,4 +1,4 @@
-import type { ImportOptions, ReportSection, Settings } from '@overtally/contracts';
+import type { ImportOptions, LimitSet, ReportSection, Settings } from '@overtally/contracts';
 import { formatCount, formatGiven, formatMoment } from './format.js';
 import type { Sheet } from './sheet.js';
 import { drawTable, type Cell } from './table.js';
@@ -22,6 +22,9 @@ export function drawProvenance(sheet: Sheet, section: ReportSection): void {
   );
 }
 
+const confidenceWords = ({ confidence, evidence }: LimitSet): string =>
+  evidence === '' ? confidenceName(confidence) : `${confidenceName(confidence)}, evidence: ${evidence}`;
+
 type Row = [name: string, value: string, mono?: boolean];
 
 function provenanceRows({ recording, analysis, verdict }: ReportSection): Row[] {
@@ -44,10 +47,7 @@ function provenanceRows({ recording, analysis, verdict }: ReportSection): Row[] 
     ['Limit set', `${limitSet.title} (${limitSet.id}, version ${limitSet.version})`],
     ['Edition', edition === '' ? '–' : edition],
     ['Source of the limits', limitSet.source.join('; ') || '–'],
-    [
-      'Confidence in the limits',
-      `${confidenceName(limitSet.confidence)}${limitSet.evidence ? `: ${limitSet.evidence}` : ''}`,
-    ],
+    ['Confidence in the limits', confidenceWords(limitSet)],
     ...limitSet.notes.map((note): Row => ['Note to the limits', note]),
     ['Parameters', parameters.length === 0 ? 'none' : parameters.map(parameterWords).join(', ')],
   ];

@@ -118,8 +118,7 @@ export class Sheet {
 
   /** Begins a part of a section: a heading over the one bold line, kept together with `keep` points below. */
   heading(content: string, keep = 60, type = 'H3'): void {
-    this.room(30 + keep);
-    this.y += 14;
+    if (!this.room(30 + keep)) this.y += 14;
     this.paragraph(content, text.subheading, type);
     this.rule(this.y + 2, boldLine, colours.ink);
     this.y += 9;
