@@ -26,12 +26,16 @@ export function Component() {
     <>
       <PageHeader
         title="Limits"
-        subtitle={limitSets.isSuccess ? `${limitSets.data.length - own} published, ${own} of this project` : undefined}
+        subtitle={
+          limitSets.isSuccess ? `${limitSets.data.length - own} published, ${own} of this project` : undefined
+        }
         documentTitle={`Limits, ${project.name}`}
         actions={mayWrite ? create : undefined}
       />
       {limitSets.isPending ? <LoadingState label="Loading the limit sets" /> : null}
-      {limitSets.isError ? <ErrorState error={limitSets.error} onRetry={() => void limitSets.refetch()} /> : null}
+      {limitSets.isError ? (
+        <ErrorState error={limitSets.error} onRetry={() => void limitSets.refetch()} />
+      ) : null}
       {limitSets.isSuccess ? (
         <LimitSetList
           sets={limitSets.data}

@@ -29,10 +29,14 @@ describe('members', () => {
   });
 
   it('asks before a member is removed, and takes it back', async () => {
+    let members = [sampleMember(), ada];
     const seen = mockApi({
       ...answers('manager'),
-      'GET /projects': page([]),
-      [`DELETE /projects/${id}/members/${ada.userId}`]: noContent(),
+      [`GET /projects/${id}/members`]: (request) => page(members)(request),
+      [`DELETE /projects/${id}/members/${ada.userId}`]: (request) => {
+        members = [sampleMember()];
+        return noContent()(request);
+      },
       [`POST /projects/${id}/members`]: json(ada, 201),
     });
     const { user } = renderRoute(address);

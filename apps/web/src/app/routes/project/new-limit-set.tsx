@@ -29,7 +29,9 @@ export function Component() {
           onCancel={() => void navigate(paths.limits(project.id))}
         />
       ) : (
-        <EmptyState title="Only analysts and managers make limit sets">Ask one of them, named under Members.</EmptyState>
+        <EmptyState title="Only analysts and managers make limit sets">
+          Ask one of them, named under Members.
+        </EmptyState>
       )}
     </>
   );

@@ -34,17 +34,15 @@ export function MemberActions({ projectId, member }: MemberActionsProps) {
       () => notifyDone(`${member.name} is a member again`),
       (error: unknown) => notifyProblem(`${member.name} not brought back`, error),
     );
+  // A promise, since the row and its callbacks are gone once the list is renewed.
   const removeNow = () =>
-    remove.mutate(member, {
-      onSuccess: () => {
-        setAsking(false);
-        notifyDone(`${member.name} removed`, () => void bringBack());
-      },
-      onError: (error) => {
-        setAsking(false);
-        notifyProblem(`${member.name} not removed`, error);
-      },
-    });
+    void remove
+      .mutateAsync(member)
+      .then(
+        () => notifyDone(`${member.name} removed`, () => void bringBack()),
+        (error: unknown) => notifyProblem(`${member.name} not removed`, error),
+      )
+      .finally(() => setAsking(false));
   return (
     <Flex gap={{ base: '1', md: '2' }} direction={{ base: 'column', md: 'row' }} align={{ md: 'center' }}>
       <SelectInput
