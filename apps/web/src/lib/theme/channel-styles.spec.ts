@@ -79,7 +79,9 @@ describe('styles of overlaid channels', () => {
     for (const theme of ['light', 'dark'] as const) {
       for (const [a, b] of pairs) {
         const [p, q] = [a, b].map((style) => lab(seen(linear(style[theme]), matrix))) as [Triple, Triple];
-        expect(Math.hypot(p[0] - q[0], p[1] - q[1], p[2] - q[2]), `${a[theme]} ${b[theme]}`).toBeGreaterThan(4.6);
+        expect(Math.hypot(p[0] - q[0], p[1] - q[1], p[2] - q[2]), `${a[theme]} ${b[theme]}`).toBeGreaterThan(
+          4.6,
+        );
       }
     }
   });

@@ -37,7 +37,13 @@ export const channelStyles: readonly ChannelStyle[] = [
   { light: '#355047', dark: '#75EB88', dash: 'solid', dashArray: '', symbol: 'square' },
   { light: '#161698', dark: '#667F99', dash: 'dashdot', dashArray: '6 3 1.5 3', symbol: 'bowtie' },
   { light: '#380E62', dark: '#997766', dash: 'longdash', dashArray: '10 3', symbol: 'diamond' },
-  { light: '#341914', dark: '#DFDF20', dash: 'longdashdot', dashArray: '10 3 1.5 3', symbol: 'hourglass-open' },
+  {
+    light: '#341914',
+    dark: '#DFDF20',
+    dash: 'longdashdot',
+    dashArray: '10 3 1.5 3',
+    symbol: 'hourglass-open',
+  },
 ];
 
 /** Style of the channel at `index`; after the last one they repeat. */
