@@ -28,7 +28,7 @@ function cutConnectionsAfterGrace(server: Server): void {
 }
 
 async function start(): Promise<void> {
-  const config = new AppConfig(readEnvironment(process.env));
+  const config = new AppConfig(readEnvironment());
   await migrate(config.databaseUrl);
   const app = await NestFactory.create<NestExpressApplication>(AppModule.with(config), {
     bufferLogs: true,

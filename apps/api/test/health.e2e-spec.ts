@@ -18,9 +18,9 @@ describe('health', () => {
 
   it('is a 503 problem while it does not, and says no more than that', async () => {
     const pool = test.app.get<pg.Pool>(POOL);
-    const query = vi
-      .spyOn(pool, 'query')
-      .mockImplementation(() => Promise.reject(new Error('host db.internal is away')));
+    const query = vi.spyOn(pool, 'query').mockImplementation(() => {
+      throw new Error('host db.internal is away');
+    });
     try {
       const reply = await supertest(test.http).get('/api/health').expect(503);
       expect(reply.type).toBe('application/problem+json');

@@ -1,3 +1,4 @@
+import { userPageSchema } from '@overtally/contracts';
 import supertest from 'supertest';
 import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -11,6 +12,9 @@ beforeAll(async () => {
   administrator = await test.signIn('administrator');
 });
 afterAll(() => test.close());
+
+const people = (reply: { body: unknown }) => userPageSchema.parse(reply.body).items;
+const emails = (reply: { body: unknown }) => people(reply).map((user) => user.email);
 
 describe('people', () => {
   it('begin with the administrator named in the environment', async () => {
@@ -59,15 +63,15 @@ describe('people', () => {
     while (cursor !== null) {
       const page = await administrator.get('/api/users').query({ limit: 3, ...(cursor && { cursor }) });
       expect(page.status).toBe(200);
-      seen.push(...page.body.items.map((user: { email: string }) => user.email));
-      cursor = page.body.nextCursor;
+      seen.push(...emails(page));
+      cursor = userPageSchema.parse(page.body).nextCursor;
     }
     const all = await administrator.get('/api/users').query({ limit: 200 });
-    expect(seen).toEqual(all.body.items.map((user: { email: string }) => user.email));
+    expect(seen).toEqual(emails(all));
     expect(new Set(seen).size).toBe(seen.length);
 
     const found = await administrator.get('/api/users').query({ q: 'ann_' });
-    expect(found.body.items.map((user: { name: string }) => user.name)).toEqual(['Ann_Lee']);
+    expect(people(found).map((user) => user.name)).toEqual(['Ann_Lee']);
   });
 
   it('refuse a cursor of something else', async () => {

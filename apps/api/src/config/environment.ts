@@ -58,7 +58,7 @@ export class EnvironmentFaults extends Error {}
  * Reads and checks the whole environment at once.
  * @throws EnvironmentFaults naming each variable and its fault; values are not repeated.
  */
-export function readEnvironment(env: NodeJS.ProcessEnv): Environment {
+export function readEnvironment(env: NodeJS.ProcessEnv = process.env): Environment {
   const parsed = environmentSchema.safeParse(env);
   if (parsed.success) return parsed.data;
   const lines = parsed.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`);

@@ -1,7 +1,6 @@
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import compression from 'compression';
 import { Logger } from 'nestjs-pino';
-import type { Server } from 'node:http';
 import { AppConfig } from '../config/app-config.js';
 import { demandKnownContentType } from './content-type.middleware.js';
 import { usePlainMessages } from './plain-messages.js';
@@ -32,5 +31,5 @@ export function setUpApp(app: NestExpressApplication): void {
   app.useBodyParser('json', { limit: JSON_LIMIT });
   app.setGlobalPrefix('api');
   app.get(OpenApi).build(app);
-  app.getHttpServer<Server>().requestTimeout = REQUEST_TIMEOUT_MS;
+  app.getHttpServer().requestTimeout = REQUEST_TIMEOUT_MS;
 }

@@ -31,7 +31,7 @@ interface Layer {
   route?: { path: string; methods: Record<string, boolean> };
 }
 
-function routesOf(controller: Function): Route[] {
+function routesOf(controller: object & { prototype: object }): Route[] {
   const prefix = Reflect.getMetadata('path', controller) as string;
   const prototype = controller.prototype as Record<string, unknown>;
   return Object.getOwnPropertyNames(prototype).flatMap((name) => {
