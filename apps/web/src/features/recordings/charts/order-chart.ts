@@ -50,7 +50,8 @@ export function orderChart(
   const lastOrder = rows.reduce((last, { order }) => Math.max(last, order), 1);
   return {
     traces: [
-      ...ceilingTraces(limits, range.top, palette),
+      // The hatching lies behind the bars, the line of the limit and the letters before them.
+      ...ceilingTraces(limits, range.top, palette).map((trace, i) => ({ ...trace, zorder: i === 0 ? 0 : 2 })),
       bars(rows, values, unit, palette),
       ...letters(input, factor, range, palette),
     ],
@@ -89,6 +90,7 @@ function bars(
 ): PlotTrace {
   return {
     type: 'bar',
+    zorder: 1,
     x: rows.map((row) => row.order),
     // A logarithmic axis has no place for zero.
     y: values.map((value) => (value > 0 ? value : null)),
@@ -151,6 +153,7 @@ export function letterTrace(
   return {
     type: 'scatter',
     mode: 'markers+text',
+    zorder: 3,
     x: marks.map((mark) => mark.x),
     y: marks.map((mark) => mark.y),
     text: marks.map((mark) => `<b>${mark.letter}</b>`),

@@ -4,6 +4,7 @@ import { useMemo, useRef, type KeyboardEvent, type PointerEvent } from 'react';
 import { formatDuration } from '../../../lib/format.js';
 import { overviewPath } from './overview-path.js';
 import { clampSpan, moved, resized, type Span } from './span.js';
+import { draggedSpan, gripAt, type Held } from './strip-drag.js';
 
 interface OverviewStripProps {
   /** The whole record; null while it is fetched. */
@@ -93,14 +94,12 @@ function onKey(event: KeyboardEvent, view: Span, durationS: number, show: (span:
   show(wanted);
 }
 
-type Grip = 'from' | 'to' | 'window' | 'new';
-
 /** Pointer handlers of the strip; what was taken hold of decides what a drag does. */
 function useDrag(
   strip: { current: HTMLDivElement | null },
   { durationS, view, show }: { durationS: number; view: Span; show: (span: Span) => void },
 ) {
-  const held = useRef<{ grip: Grip; atS: number; view: Span } | null>(null);
+  const held = useRef<Held | null>(null);
   const place = (event: PointerEvent) => {
     const box = strip.current?.getBoundingClientRect();
     if (!box || box.width === 0) return { atS: 0, perPxS: 0 };
@@ -128,29 +127,4 @@ function useDrag(
       held.current = null;
     },
   };
-}
-
-/** What a pointer at `atS` takes hold of. A window too narrow for edges is moved as a whole. */
-export function gripAt(atS: number, view: Span, reachS: number): Grip {
-  const inside = atS >= view.fromS - reachS && atS <= view.toS + reachS;
-  if (!inside) return 'new';
-  if (view.toS - view.fromS < 4 * reachS) return 'window';
-  if (Math.abs(atS - view.fromS) <= reachS) return 'from';
-  if (Math.abs(atS - view.toS) <= reachS) return 'to';
-  return 'window';
-}
-
-/** The span after dragging to `atS`. */
-export function draggedSpan(held: { grip: Grip; atS: number; view: Span }, atS: number): Span {
-  const { grip, view } = held;
-  switch (grip) {
-    case 'from':
-      return { fromS: Math.min(atS, view.toS), toS: view.toS };
-    case 'to':
-      return { fromS: view.fromS, toS: Math.max(atS, view.fromS) };
-    case 'window':
-      return moved(view, atS - held.atS);
-    case 'new':
-      return { fromS: Math.min(held.atS, atS), toS: Math.max(held.atS, atS) };
-  }
 }

@@ -63,6 +63,7 @@ export function waveformChart(
         fixedrange: true,
         tickmode: 'array',
         ...linearTicks(bottom, top, waveform.unit, 3),
+        ticklabelstandoff: 6,
       },
       shapes: spans.map(({ fromS, toS }) => band(fromS * factor, toS * factor, palette)),
     },

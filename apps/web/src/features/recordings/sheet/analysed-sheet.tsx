@@ -127,6 +127,7 @@ function ChannelSheet(props: AnalysedSheetProps & { figures: ChannelAnalysis }) 
             recording={recording}
             analysisId={analysis.id}
             channel={figures}
+            set={set}
             comparison={comparison}
             notes={onChannel}
             target={target ?? marked}

@@ -21,12 +21,12 @@ export function ComparisonChooser({ sets, value, onChange }: ComparisonChooserPr
       </chakra.label>
       <SelectInput
         id={id}
-        width="56"
+        width="64"
         options={[
           { value: '', label: 'No limits' },
           ...sets.map((set) => ({
             value: set.id,
-            label: [set.title, set.edition].filter(Boolean).join(', '),
+            label: set.title,
           })),
         ]}
         value={value}

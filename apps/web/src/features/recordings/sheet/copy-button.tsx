@@ -9,7 +9,14 @@ export function CopyButton({ text, label }: { text: string; label: string }) {
       (error: unknown) => notifyProblem(`${label} not copied`, error),
     );
   return (
-    <Button size="2xs" variant="ghost" onClick={() => void copy()} aria-label={`Copy the ${label}`}>
+    <Button
+      size="2xs"
+      variant="ghost"
+      px="1"
+      mx="-1"
+      onClick={() => void copy()}
+      aria-label={`Copy the ${label}`}
+    >
       Copy
     </Button>
   );

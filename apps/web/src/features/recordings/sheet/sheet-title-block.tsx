@@ -2,17 +2,11 @@ import { Box, Flex } from '@chakra-ui/react';
 import type { ChannelAnalysis, LimitSet, Recording } from '@overtally/contracts';
 import { TallyStrip } from '../../../components/tally-strip.js';
 import { TitleBlock, type TitleCell } from '../../../components/title-block.js';
-import {
-  formatDuration,
-  formatHz,
-  formatSha256,
-  formatSi,
-  formatWithUncertainty,
-  none,
-} from '../../../lib/format.js';
+import { formatDuration, formatSha256, formatSi, none } from '../../../lib/format.js';
 import { formatDateTime, formatDateTimeFull } from '../../../lib/format-date.js';
 import type { ChannelComparison } from '../charts/order-rows.js';
 import { CopyButton } from './copy-button.js';
+import { fundamentalWords } from './fundamental-words.js';
 
 interface SheetTitleBlockProps {
   recording: Recording;
@@ -35,8 +29,8 @@ export function SheetTitleBlock({ recording, channel, set, comparison }: SheetTi
     },
     { caption: 'Rate', value: formatSi(recording.sampleRateHz, 'Hz', { digits: 6, trim: true }), mono: true },
     { caption: 'Length', value: formatDuration(recording.durationS), mono: true, grow: 0.8 },
-    { caption: 'Fundamental', value: fundamentalWords(channel), mono: true, grow: 1.5 },
-    { caption: 'Measuring chain', value: recording.measuringChain || none, grow: 1.4 },
+    { caption: 'Fundamental', value: fundamentalWords(channel), mono: true, grow: 2 },
+    { caption: 'Measuring chain', value: recording.measuringChain || none, grow: 2.2 },
     {
       caption: 'Source SHA-256',
       value: (
@@ -54,26 +48,13 @@ export function SheetTitleBlock({ recording, channel, set, comparison }: SheetTi
   return <TitleBlock label={`Title block of ${recording.number}`} cells={cells} />;
 }
 
-/** The engine gives one standard deviation; twice that is the expanded uncertainty (JCGM 100:2008, 6.2). */
-const coverage = 2;
-
-export function fundamentalWords(channel: ChannelAnalysis | null): string {
-  const fundamental = channel?.fundamental;
-  if (!fundamental) return none;
-  const { frequencyHz, frequencyUncertaintyHz } = fundamental;
-  if (frequencyUncertaintyHz === null) return formatHz(frequencyHz);
-  const expanded = coverage * frequencyUncertaintyHz;
-  // Beyond a millionth of the value the clock of the recorder rules, which the record cannot tell.
-  if (expanded < frequencyHz * 1e-6) return formatHz(frequencyHz, 4);
-  return formatWithUncertainty(frequencyHz, expanded, 'Hz');
-}
-
 function comparisonCell(set: LimitSet, { rows, words, tone }: ChannelComparison): TitleCell {
   const shares = rows.map(({ order, sharePercent }) => ({ order, sharePercent }));
   const judged = shares.some(({ sharePercent }) => sharePercent !== null);
   return {
-    caption: [set.title, set.edition].filter(Boolean).join(', '),
-    grow: 2.1,
+    caption: set.title,
+    title: [set.title, set.edition].filter(Boolean).join(', '),
+    grow: 2,
     ...(tone ? { tone } : {}),
     value: (
       <>

@@ -1,5 +1,5 @@
-import { useBreakpointValue } from '@chakra-ui/react';
-import type { ChannelAnalysis, Recording } from '@overtally/contracts';
+import { Text, useBreakpointValue } from '@chakra-ui/react';
+import type { ChannelAnalysis, LimitSet, Recording } from '@overtally/contracts';
 import { useMemo, useState } from 'react';
 import { FigureFrame } from '../../../components/figure-frame.js';
 import { Plot, type PlotPointEvent } from '../../../components/plot.js';
@@ -19,6 +19,8 @@ interface SpectrumFigureProps {
   recording: Recording;
   analysisId: string;
   channel: ChannelAnalysis;
+  /** Drawn as the ceiling; null: none. */
+  set: LimitSet | null;
   comparison: ChannelComparison;
   notes: readonly LetteredNote[];
   target: NoteTarget | null;
@@ -87,11 +89,22 @@ export function SpectrumFigure(props: SpectrumFigureProps) {
       }
     >
       {abscissa === 'order' ? (
-        <OrderView {...props} scale={scale} relative={relative} title={title} />
+        <>
+          <OrderView {...props} scale={scale} relative={relative} title={title} />
+          {props.set ? <LimitSource set={props.set} /> : null}
+        </>
       ) : (
         <FrequencyView {...props} scale={scale} relative={relative} title={title} height={height} />
       )}
     </FigureFrame>
+  );
+}
+
+function LimitSource({ set: { title, edition } }: { set: LimitSet }) {
+  return (
+    <Text fontSize="xs" color="inkSoft">
+      Limits: {[title, edition].filter(Boolean).join(', ')}. Check them against the current edition.
+    </Text>
   );
 }
 
