@@ -55,7 +55,8 @@ export type Permission = keyof typeof permissions;
 
 /** True when a member with `role` (null: not a member) holds a project permission. */
 export function holds(permission: Permission, role: ProjectRole | null, isAdministrator = false): boolean {
-  const entry: { allow: string | readonly ProjectRole[]; administratorToo?: boolean } = permissions[permission];
+  const entry: { allow: string | readonly ProjectRole[]; administratorToo?: boolean } =
+    permissions[permission];
   if (entry.allow === 'public' || entry.allow === 'signed-in') return true;
   if (entry.allow === 'administrator') return isAdministrator;
   if (entry.administratorToo && isAdministrator) return true;

@@ -22,10 +22,18 @@ export const settingsSchema = z.object({
   nominalFrequencyHz: z
     .union([z.literal('auto'), z.number().min(0.1).max(1e6)])
     .describe('Where to look for the fundamental, in Hz'),
-  window: windowNameSchema.optional().describe('Window of the drawn spectrum; mains windows stay rectangular'),
+  window: windowNameSchema
+    .optional()
+    .describe('Window of the drawn spectrum; mains windows stay rectangular'),
   maxOrder: z.number().int().min(2).max(200).optional().describe('Highest order listed, 50 when absent'),
   thdMaxOrder: z.number().int().min(2).max(200).optional().describe('Highest order in THD: 40, tone 10'),
-  cyclesPerWindow: z.number().int().min(1).max(100).optional().describe('10 at 50 Hz, 12 at 60 Hz when absent'),
+  cyclesPerWindow: z
+    .number()
+    .int()
+    .min(1)
+    .max(100)
+    .optional()
+    .describe('10 at 50 Hz, 12 at 60 Hz when absent'),
   span: z
     .object({ fromS: z.number().min(0), toS: z.number().positive() })
     .refine((span) => span.toS > span.fromS, { message: 'The span must end after it begins', path: ['toS'] })
@@ -50,7 +58,10 @@ export const harmonicSchema = z.object({
   rms: z.number(),
   percentOfFundamental: z.number().nullable(),
   phaseDeg: z.number().nullable().describe('Cosine form, zero time at the first sample'),
-  phaseZeroCrossingDeg: z.number().nullable().describe('Sine form, zero time at the rising zero crossing of order 1'),
+  phaseZeroCrossingDeg: z
+    .number()
+    .nullable()
+    .describe('Sine form, zero time at the rising zero crossing of order 1'),
   groupRms: z.number().nullable().describe('IEC 61000-4-7, 5.5.1'),
   subgroupRms: z.number().nullable().describe('IEC 61000-4-7, 5.6'),
   smoothedMeanRms: z.number().nullable().describe('Mean of the 1.5 s smoothed group values'),

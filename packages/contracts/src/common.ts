@@ -21,7 +21,9 @@ export const pageQuerySchema = z.object({
 
 /** Problem details, RFC 9457, media type application/problem+json. */
 export const problemDetailsSchema = z.object({
-  type: z.string().describe('URI reference of the kind of problem, `about:blank` when the status says it all'),
+  type: z
+    .string()
+    .describe('URI reference of the kind of problem, `about:blank` when the status says it all'),
   title: z.string(),
   status: z.number().int(),
   detail: z.string().optional().describe('What happened and what to do about it'),

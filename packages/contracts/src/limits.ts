@@ -70,7 +70,9 @@ export const limitSetSchema = z.object({
   quantity: quantitySchema,
   unit: z.string().describe('Unit of an absolute limit; `%` or `mA/W` otherwise'),
   basis: limitBasisSchema,
-  referenceParameter: parameterNameSchema.nullable().describe('Parameter that `percent-of-reference` refers to'),
+  referenceParameter: parameterNameSchema
+    .nullable()
+    .describe('Parameter that `percent-of-reference` refers to'),
   procedure: limitProcedureSchema,
   parameters: z.array(parameterNameSchema).describe('Parameters a verdict must be given'),
   orders: z.array(limitEntrySchema),
@@ -92,7 +94,10 @@ export const createLimitSetSchema = z
     quantity: quantitySchema,
     unit: z.string().trim().max(20),
     basis: z.enum(['absolute', 'percent-of-fundamental']),
-    orders: z.array(limitEntrySchema.omit({ capA: true })).min(1, 'Give at least one order').max(199),
+    orders: z
+      .array(limitEntrySchema.omit({ capA: true }))
+      .min(1, 'Give at least one order')
+      .max(199),
     totals: z.array(totalLimitSchema).max(5).default([]),
     source: z.string().trim().min(1, 'Say where the limits come from').max(500),
   })

@@ -21,7 +21,10 @@ export const importOptionsSchema = z.strictObject({
   delimiter: z.enum([',', ';', '\t', ' ', '|']).optional(),
   decimal: z.enum(['.', ',']).optional(),
   headerRows: z.number().int().min(0).max(1000).optional().describe('Lines before the first row of numbers'),
-  timeColumn: columnSchema.nullable().optional().describe('Index from 0 or header name; null: no time column'),
+  timeColumn: columnSchema
+    .nullable()
+    .optional()
+    .describe('Index from 0 or header name; null: no time column'),
   timeUnit: z.enum(['s', 'ms', 'us', 'ns']).optional(),
   channels: z
     .array(
