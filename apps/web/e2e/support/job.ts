@@ -1,0 +1,40 @@
+import { bandLimitedSquareCsv, demoCapturePath, demoExpectations } from '@overtally/fixtures';
+import { mkdtempSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { basename, join } from 'node:path';
+
+/** A capture to upload and the THD_F that it must show. */
+export interface KnownCapture {
+  path: string;
+  /** Name that the recording takes from its file. */
+  name: string;
+  thdFPercent: number;
+  /** In percentage points: what the shown digits and the noise of the capture allow. */
+  tolerance: number;
+}
+
+/** A band-limited square wave as CSV; its THD_F follows from b_h = 4/(πh) in closed form. */
+export function squareWaveCsv(): KnownCapture {
+  const square = bandLimitedSquareCsv({});
+  const path = join(mkdtempSync(join(tmpdir(), 'overtally-captures-')), 'bench-square.csv');
+  writeFileSync(path, square.text);
+  return { path, name: 'bench-square', thdFPercent: square.thdFPercent, tolerance: 0.01 };
+}
+
+/** A generated WAV whose distortion is known in closed form. */
+export function limitedToneWav(): KnownCapture {
+  const fileName = 'generator-square-250hz.wav';
+  const expectation = demoExpectations[fileName];
+  if (!expectation) throw new Error(`Nothing is known of ${fileName}`);
+  const { thdFPercent, tolerance } = expectation;
+  return { path: demoCapturePath(fileName), name: basename(fileName, '.wav'), thdFPercent, tolerance };
+}
+
+/** The phase-cut current that is over class A at several orders. */
+export function phaseCutCsv(): KnownCapture {
+  const fileName = 'dimmer-90deg.csv';
+  const expectation = demoExpectations[fileName];
+  if (!expectation) throw new Error(`Nothing is known of ${fileName}`);
+  const { thdFPercent, tolerance } = expectation;
+  return { path: demoCapturePath(fileName), name: basename(fileName, '.csv'), thdFPercent, tolerance };
+}

@@ -1,0 +1,126 @@
+import type { Browser, BrowserContext, Page } from 'playwright-core';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { expectAccessible, keepPicture, launchBrowser, signedInPage } from './support/browser.js';
+import { limitedToneWav, squareWaveCsv, type KnownCapture } from './support/job.js';
+import { personOf, startProduct, type Product } from './support/product.js';
+
+let product: Product;
+let browser: Browser;
+
+beforeAll(async () => {
+  [product, browser] = await Promise.all([startProduct(), launchBrowser()]);
+});
+
+afterAll(async () => {
+  await browser?.close();
+  await product?.stop();
+});
+
+/** Uploads a capture on the page of recordings and waits until its row is ready. */
+async function upload(page: Page, capture: KnownCapture): Promise<void> {
+  await page.getByLabel('Capture files').setInputFiles(capture.path);
+  await page.getByText(/received as/).waitFor();
+  await page
+    .getByRole('row')
+    .filter({ has: page.getByRole('link', { name: capture.name, exact: true }) })
+    .first()
+    .getByRole('checkbox', { disabled: false })
+    .waitFor({ timeout: 60_000 });
+}
+
+/** THD_F as the sheet's table of figures shows it, in percent. */
+async function shownThd(page: Page): Promise<number> {
+  const row = page.getByRole('row').filter({ hasText: 'THD, of the fundamental' });
+  const text = await row.getByRole('cell').nth(1).innerText();
+  return Number.parseFloat(text);
+}
+
+async function openProject(page: Page, name: RegExp): Promise<void> {
+  await page.goto('/projects');
+  await page.getByRole('link', { name }).click();
+  await page.getByRole('heading', { name: 'Recordings', level: 1 }).waitFor();
+}
+
+describe('a technician', () => {
+  let context: BrowserContext;
+  let page: Page;
+
+  beforeAll(async () => {
+    context = await browser.newContext({ baseURL: product.baseUrl, locale: 'en-GB' });
+    context.setDefaultTimeout(30_000);
+    page = await context.newPage();
+  });
+
+  it('is told plainly when the password is wrong, then signs in', async () => {
+    const { email, password } = personOf('technician');
+    await page.goto('/');
+    await page.getByLabel('E-mail').fill(email);
+    await page.getByLabel('Password').fill('not the password');
+    await page.getByRole('button', { name: 'Sign in' }).click();
+    await page.getByRole('alert').first().waitFor();
+    await expectAccessible(page);
+    await page.getByLabel('Password').fill(password);
+    await page.getByRole('button', { name: 'Sign in' }).click();
+    await page.getByRole('heading', { name: 'Projects', level: 1 }).waitFor();
+    await expectAccessible(page);
+  });
+
+  it('uploads a CSV and reads the THD of a square wave cut off at order 40', async () => {
+    const capture = squareWaveCsv();
+    await openProject(page, /Ostrel/);
+    await upload(page, capture);
+    await expectAccessible(page);
+    await page.getByRole('link', { name: capture.name, exact: true }).click();
+    await page.getByRole('heading', { name: capture.name, level: 1 }).waitFor();
+    await page.getByRole('row').filter({ hasText: 'THD, of the fundamental' }).waitFor();
+    // Closed form: sqrt(sum of 1/h², h = 3, 5 … 39).
+    expect(Math.abs((await shownThd(page)) - capture.thdFPercent)).toBeLessThanOrEqual(capture.tolerance);
+    await keepPicture(page, 'sheet');
+    await expectAccessible(page);
+  });
+
+  it('uploads a WAV, is told that it is there already, and reads its THD', async () => {
+    const capture = limitedToneWav();
+    await openProject(page, /Tollan/);
+    await upload(page, capture);
+    await page.getByText(/the same file as/).waitFor();
+    await page.getByRole('link', { name: capture.name, exact: true }).click();
+    await page.getByRole('row').filter({ hasText: 'THD, of the fundamental' }).waitFor();
+    expect(Math.abs((await shownThd(page)) - capture.thdFPercent)).toBeLessThanOrEqual(capture.tolerance);
+  });
+
+  it('is asked for what a file does not say, and told what is wrong with one that cannot be read', async () => {
+    await openProject(page, /Ostrel/);
+    await page.getByLabel('Capture files').setInputFiles({
+      name: 'no-rate.csv',
+      mimeType: 'text/csv',
+      buffer: Buffer.from(Array.from({ length: 4000 }, (_, i) => Math.sin(i / 10).toFixed(6)).join('\n')),
+    });
+    const dialog = page.getByRole('dialog');
+    await dialog.getByText('Needed to read this file').waitFor();
+    await expectAccessible(page);
+    await dialog.getByLabel('Sample rate in Hz').fill('5000');
+    await dialog.getByRole('button', { name: 'Read with these settings' }).click();
+    await page.getByRole('link', { name: 'no-rate', exact: true }).waitFor();
+
+    await page.getByLabel('Capture files').setInputFiles({
+      name: 'garbage.csv',
+      mimeType: 'text/csv',
+      buffer: Buffer.from(Array.from({ length: 3000 }, (_, i) => (i * 7919) % 256)),
+    });
+    await dialog.getByRole('button', { name: 'Read with these settings' }).click();
+    const row = page.getByRole('row').filter({ hasText: 'garbage' });
+    await row.getByText(/Not read:/).waitFor({ timeout: 60_000 });
+  });
+
+  it('finds no way to judge or to issue, and the server agrees', async () => {
+    const technician = await signedInPage(browser, product.baseUrl, personOf('technician'));
+    const answer = await technician.context.request.get('/api/projects');
+    const { items } = (await answer.json()) as { items: { id: string }[] };
+    const created = await technician.context.request.post(`/api/projects/${items[0]?.id}/reports`, {
+      data: { title: 'Mine', verdictIds: ['00000000-0000-4000-8000-000000000000'] },
+    });
+    expect(created.status()).toBe(403);
+    await technician.context.close();
+  });
+});
