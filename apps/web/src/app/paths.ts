@@ -17,6 +17,8 @@ export const paths = {
   limitSet: (projectId: string, limitSetId: string) =>
     `${project(projectId)}/limits/${encodeURIComponent(limitSetId)}`,
   reports: (projectId: string) => `${project(projectId)}/reports`,
+  newReport: (projectId: string, verdictIds: readonly string[] = []) =>
+    `${project(projectId)}/reports/new${verdictIds.length > 0 ? `?verdicts=${verdictIds.join(',')}` : ''}`,
   report: (projectId: string, reportId: string) => `${project(projectId)}/reports/${reportId}`,
   members: (projectId: string) => `${project(projectId)}/members`,
   projectSettings: (projectId: string) => `${project(projectId)}/settings`,

@@ -1,0 +1,80 @@
+import type { Report } from '@overtally/contracts';
+import { useQuery } from '@tanstack/react-query';
+import { useState } from 'react';
+import { useNavigate, useParams } from 'react-router-dom';
+import { ErrorState } from '../../../components/error-state.js';
+import { LoadingState } from '../../../components/loading-state.js';
+import { PageHeader } from '../../../components/page-header.js';
+import { useProject } from '../../../features/projects/hooks/use-project.js';
+import { reportQuery } from '../../../features/reports/api/get-report.js';
+import { ReportActions } from '../../../features/reports/components/report-actions.js';
+import { ReportForm } from '../../../features/reports/components/report-form.js';
+import { ReportSheet } from '../../../features/reports/components/report-sheet.js';
+import { useReportChanges } from '../../../features/reports/hooks/use-report-changes.js';
+import { paths } from '../../paths.js';
+import { useProjectId } from '../../use-project-id.js';
+import { useJudged } from './use-judged.js';
+
+export function Component() {
+  const { reportId = '' } = useParams();
+  const { data: report, ...query } = useQuery(reportQuery(reportId));
+  if (report) return <ReportPage report={report} />;
+  return query.isError ? (
+    <ErrorState error={query.error} onRetry={() => void query.refetch()} />
+  ) : (
+    <LoadingState label="Loading the report" lines={8} />
+  );
+}
+
+function ReportPage({ report }: { report: Report }) {
+  const project = useProject(useProjectId());
+  const navigate = useNavigate();
+  const [editing, setEditing] = useState(false);
+  const isEditing = editing && report.status === 'draft';
+  return (
+    <>
+      <PageHeader
+        title={report.title}
+        subtitle={
+          report.number ? `${report.number}, revision ${report.revision}` : `Revision ${report.revision}`
+        }
+        crumb={report.number ?? 'Draft'}
+        documentTitle={`${report.number ?? report.title}, ${project.name}`}
+        actions={
+          isEditing ? undefined : (
+            <ReportActions
+              report={report}
+              role={project.role}
+              onEdit={() => setEditing(true)}
+              onDeleted={() => void navigate(paths.reports(project.id))}
+            />
+          )
+        }
+      />
+      {isEditing ? (
+        <EditDraft report={report} onDone={() => setEditing(false)} />
+      ) : (
+        <ReportSheet report={report} />
+      )}
+    </>
+  );
+}
+
+function EditDraft({ report, onDone }: { report: Report; onDone: () => void }) {
+  const judged = useJudged(report.projectId);
+  const { update } = useReportChanges(report);
+  if (judged.error) return <ErrorState error={judged.error} onRetry={judged.refetch} />;
+  if (!judged.data) return <LoadingState label="Loading the verdicts" />;
+  const { title, summary, verdictIds } = report;
+  return (
+    <ReportForm
+      initial={{ title, summary, verdictIds }}
+      verdicts={judged.data.verdicts}
+      recordings={judged.data.recordings}
+      submitLabel="Save the draft"
+      save={update}
+      onSaved={onDone}
+      onCancel={onDone}
+    />
+  );
+}
