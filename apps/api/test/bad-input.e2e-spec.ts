@@ -1,4 +1,4 @@
-import type { ReadProblem } from '@overtally/contracts';
+import type { Project, ReadProblem } from '@overtally/contracts';
 import { readdir } from 'node:fs/promises';
 import { request as httpRequest } from 'node:http';
 import type { AddressInfo } from 'node:net';
@@ -138,7 +138,7 @@ describe('an upload that is refused', () => {
 
   async function rowCount(): Promise<number> {
     const { body } = await technician.get(`/api/projects/${test.project.id}`).expect(200);
-    return body.counts.recordings;
+    return (body as Project).counts.recordings;
   }
 });
 

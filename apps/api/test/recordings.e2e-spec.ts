@@ -3,6 +3,7 @@ import { createHash } from 'node:crypto';
 import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { csvOf, squareThdFPercent, squareWave, wavOf } from './support/captures.js';
+import { newAnalysis, newRecording, newReport, newVerdict } from './support/project-contents.js';
 import { settled, upload } from './support/recordings.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
 
@@ -71,7 +72,7 @@ describe('a capture on its way from upload to figures', () => {
 
   it('gives its source back byte for byte, whole and in parts', async () => {
     const whole = await technician.get(`/api/recordings/${recording.id}/source`).buffer().expect(200);
-    expect(whole.body.equals(squareCsv)).toBe(true);
+    expect(whole.body as Buffer).toEqual(squareCsv);
     expect(whole.headers).toMatchObject({
       etag: `"${recording.file.sha256}"`,
       'content-disposition': 'attachment; filename="Rectifier 3.csv"',
@@ -83,7 +84,7 @@ describe('a capture on its way from upload to figures', () => {
       .buffer()
       .expect(206);
     expect(part.headers['content-range']).toBe(`bytes 100-199/${squareCsv.length}`);
-    expect(part.body.equals(squareCsv.subarray(100, 200))).toBe(true);
+    expect(part.body as Buffer).toEqual(squareCsv.subarray(100, 200));
     await technician
       .get(`/api/recordings/${recording.id}/source`)
       .set('Range', 'bytes=99999999-')
@@ -339,6 +340,20 @@ describe('change of a recording', () => {
     const analyst = await test.signIn('analyst');
     await analyst.delete(`/api/recordings/${id}`).expect(204);
     await analyst.get(`/api/recordings/${id}`).expect(404);
+  });
+});
+
+describe('a recording that a report speaks of', () => {
+  it('is kept, and the report is named', async () => {
+    const owner = { projectId: test.project.id, userId: test.people.analyst.id };
+    const { id } = await newRecording(test.database, owner);
+    const analysis = await newAnalysis(test.database, id, owner);
+    const verdict = await newVerdict(test.database, analysis.id, owner);
+    await newReport(test.database, verdict.id, owner);
+    const analyst = await test.signIn('analyst');
+    const { body } = await analyst.delete(`/api/recordings/${id}`).expect(409);
+    expect(body).toMatchObject({ code: 'in-report', detail: expect.stringContaining('Harmonic currents') });
+    await analyst.get(`/api/recordings/${id}`).expect(200);
   });
 });
 

@@ -6,9 +6,9 @@ export interface ComputeContext {
   /** Folder for files that are still being written. */
   scratchFolder: string;
   /** Tells how much is done, 0 to 1. */
-  reportProgress(fraction: number): void;
+  reportProgress: (fraction: number) => void;
   /** True once the result is no longer wanted. */
-  shouldStop(): boolean;
+  shouldStop: () => boolean;
 }
 
 /** Thrown by a computation that was told to stop. */

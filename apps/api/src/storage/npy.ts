@@ -1,4 +1,5 @@
 import { decodeNpyHeader, encodeNpyHeader } from '@overtally/ingest';
+import { Readable } from 'node:stream';
 import type { Storage } from './storage.js';
 
 /** Bytes before the first value; the header that is written always has this length. */
@@ -7,13 +8,7 @@ const valueBytes = 8;
 
 /** Stores `values` as a one-dimensional .npy file of little-endian float64. */
 export async function putNpy(storage: Storage, key: string, values: Float64Array): Promise<void> {
-  const parts = [encodeNpyHeader(values.length), asBytes(values)];
-  await storage.put(
-    key,
-    (async function* () {
-      for (const part of parts) yield part;
-    })(),
-  );
+  await storage.put(key, Readable.from([encodeNpyHeader(values.length), asBytes(values)]));
 }
 
 /** Reads values `from` up to but not including `to` of an array that `putNpy` or the reader stored. */

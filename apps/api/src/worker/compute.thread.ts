@@ -1,9 +1,8 @@
 import { workerData } from 'node:worker_threads';
-import { analyseTask } from '../analyses/computing/analyse-task.js';
+import { analyseTask, type AnalyseTaskInput } from '../analyses/computing/analyse-task.js';
 import type { ComputeContext } from '../jobs/compute-task.js';
 import type { ComputeEnvironment, ComputeRequest } from '../jobs/compute-request.js';
 import { readTask, type ReadTaskInput } from '../recordings/reading/read-task.js';
-import type { AnalyseTaskInput } from '../analyses/computing/analyse-task.js';
 import { openStorage } from '../storage/storage-location.js';
 
 const progressIntervalMs = 100;

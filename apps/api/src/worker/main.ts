@@ -7,7 +7,7 @@ import { WorkerAppModule } from './worker-app.module.js';
 
 /** Starts a worker beside an API that runs with WORKER=off; the API keeps the database up to date. */
 async function start(): Promise<void> {
-  const config = new AppConfig(readEnvironment(process.env));
+  const config = new AppConfig(readEnvironment());
   const app = await NestFactory.createApplicationContext(WorkerAppModule.with(config), { bufferLogs: true });
   const logger = app.get(Logger);
   app.useLogger(logger);

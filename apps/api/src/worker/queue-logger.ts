@@ -4,13 +4,9 @@ import { Logger } from 'graphile-worker';
 const logger = new NestLogger('Queue');
 
 /** Passes the queue's words on to the log of the process. */
-export const queueLogger = new Logger(() => (level, message, meta) => {
-  switch (level) {
-    case 'error':
-      return logger.error(meta ?? {}, message);
-    case 'warning':
-      return logger.warn(meta ?? {}, message);
-    default:
-      return logger.debug(meta ?? {}, message);
-  }
+export const queueLogger = new Logger(() => (level: string, message, meta) => {
+  // A failed job has its own entry, with what is done about it.
+  if (level === 'error' && meta?.failure !== true) logger.error(meta ?? {}, message);
+  else if (level === 'warning') logger.warn(meta ?? {}, message);
+  else logger.debug(meta ?? {}, message);
 });

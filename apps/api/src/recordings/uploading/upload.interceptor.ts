@@ -38,7 +38,7 @@ export class UploadInterceptor implements NestInterceptor {
     return from(reply.finally(() => request.file?.staged.discard()));
   }
 
-  private refusal(error: unknown): unknown {
+  private refusal(error: unknown): Error {
     if (error instanceof MulterError && error.code === 'LIMIT_FILE_SIZE') {
       const limit = `${Math.floor(this.config.maxUploadBytes / (1024 * 1024))} MiB (${this.config.maxUploadBytes} bytes)`;
       return problem(
@@ -55,7 +55,7 @@ export class UploadInterceptor implements NestInterceptor {
     }
     return isBrokenMultipart(error)
       ? problem(400, 'invalid-upload', `The multipart body cannot be read: ${error.message}`)
-      : error;
+      : (error as Error);
   }
 }
 
