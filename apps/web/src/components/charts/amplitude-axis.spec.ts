@@ -2,19 +2,27 @@ import { describe, expect, it } from 'vitest';
 import { amplitudeAxis, amplitudeRange, raised } from './amplitude-axis.js';
 
 describe('axis of amplitudes', () => {
+  const of = (change: Partial<Parameters<typeof amplitudeRange>[0]>) =>
+    amplitudeRange({ values: [], limits: [], scale: 'log', faintest: null, ...change });
+
   it('ends a decade below the lowest limit when logarithmic', () => {
-    const range = amplitudeRange([2.2, 1.19, null, 0], [2.3, 0.0495], 'log');
+    const range = of({ values: [2.2, 1.19, null, 0], limits: [2.3, 0.0495] });
     expect(range.bottom).toBeCloseTo(0.00495, 12);
     expect(range.top).toBeGreaterThan(2.3);
   });
 
-  it('shows four decades without limits and begins at zero when linear', () => {
-    expect(amplitudeRange([10, 0.001], [], 'log').bottom).toBeCloseTo(0.001, 12);
-    expect(amplitudeRange([10], [], 'linear').bottom).toBe(0);
+  it('reaches to the faintest value that should be seen, within three to eight decades', () => {
+    expect(of({ values: [1], faintest: 3e-5 }).bottom).toBeCloseTo(1e-5, 12);
+    expect(of({ values: [1], faintest: 0.5 }).bottom).toBeCloseTo(1e-3, 12);
+    expect(of({ values: [1], faintest: 1e-30 }).bottom).toBeCloseTo(1e-8, 12);
+  });
+
+  it('begins at zero when linear', () => {
+    expect(of({ values: [10], scale: 'linear' }).bottom).toBe(0);
   });
 
   it('stands without any value', () => {
-    const { bottom, top } = amplitudeRange([null, 0], [], 'log');
+    const { bottom, top } = of({ values: [null, 0, Number.NaN] });
     expect(bottom).toBeGreaterThan(0);
     expect(top).toBeGreaterThan(bottom);
   });

@@ -9,28 +9,36 @@ export interface AmplitudeRange {
   top: number;
 }
 
-/** Decades shown below the highest value when nothing else says where to end. */
-const decadesShown = 4;
+/** A logarithmic axis without limits spans between three and eight decades. */
+const fewestDecades = 3;
+const mostDecades = 8;
 /** Room above the highest bar or limit. */
 const headroom = { log: 1.6, linear: 1.12 };
 
-/**
- * Range for `values` under `limits`. A logarithmic one ends one decade below the lowest limit, where what counts
- * has been seen, or four decades below the highest value. Values that are null, zero or not finite are left out.
- */
-export function amplitudeRange(
-  values: readonly (number | null)[],
-  limits: readonly number[],
-  scale: Scale,
-): AmplitudeRange {
-  const positive = [...values, ...limits].filter((value): value is number => value !== null && value > 0);
-  const highest = positive.length > 0 ? Math.max(...positive.filter(Number.isFinite)) : 1;
-  const top = highest * headroom[scale];
+interface AmplitudeRangeInput {
+  /** Null, zero and what is not finite is left out. */
+  values: readonly (number | null)[];
+  limits: readonly number[];
+  scale: Scale;
+  /** Value that should still be seen on a logarithmic axis: a weak harmonic, the noise. */
+  faintest: number | null;
+}
+
+/** Range of an axis of amplitudes. A logarithmic one ends a decade below the lowest limit, else below `faintest`. */
+export function amplitudeRange({ values, limits, scale, faintest }: AmplitudeRangeInput): AmplitudeRange {
+  const highest = [...values, ...limits].reduce<number>(
+    (most, value) => (value !== null && Number.isFinite(value) ? Math.max(most, value) : most),
+    0,
+  );
+  const reference = highest > 0 ? highest : 1;
+  const top = reference * headroom[scale];
   if (scale === 'linear') return { scale, bottom: 0, top };
   const lowestLimit = Math.min(...limits.filter((limit) => limit > 0));
-  const bottom = Number.isFinite(lowestLimit)
-    ? Math.max(lowestLimit / 10, highest * 1e-6)
-    : highest * 10 ** -decadesShown;
+  if (Number.isFinite(lowestLimit)) {
+    return { scale, bottom: Math.max(lowestLimit / 10, reference * 10 ** -mostDecades), top };
+  }
+  const wanted = (faintest ?? 0) / 3;
+  const bottom = Math.min(Math.max(wanted, reference * 10 ** -mostDecades), reference * 10 ** -fewestDecades);
   return { scale, bottom, top };
 }
 

@@ -6,13 +6,17 @@ const gap = '\u00a0';
 
 describe('axis ticks', () => {
   it('stand at round values with prefixes', () => {
-    expect(linearTicks(-6, 6, 'A')).toEqual({
+    expect(linearTicks(-6, 6, 'A', 3)).toEqual({
       tickvals: [-5, 0, 5],
       ticktext: [`\u22125${gap}A`, `0${gap}A`, `5${gap}A`],
     });
     expect(linearTicks(0, 0.35, 'V').ticktext).toEqual(
       ['0', '100', '200', '300'].map((text) => `${text}${gap}${text === '0' ? '' : 'm'}V`),
     );
+  });
+
+  it('show more than the zero of a mains voltage', () => {
+    expect(linearTicks(-350, 350, 'V', 3).tickvals).toEqual([-200, 0, 200]);
   });
 
   it('carry no rounding residue of the binary steps', () => {

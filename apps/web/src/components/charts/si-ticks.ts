@@ -8,11 +8,12 @@ export interface AxisTicks {
 
 const label = (value: number, unit: string) => formatSi(value, unit, { digits: 4, trim: true });
 
-/** Step of 1, 2 or 5 times a power of ten that gives about `count` steps over `span`. */
+/** Step of 1, 2 or 5 times a power of ten that comes nearest to `count` steps over `span`, on a scale of ratios. */
 function niceStep(span: number, count: number): number {
   const raw = span / count;
   const power = 10 ** Math.floor(Math.log10(raw));
-  const factor = [1, 2, 5, 10].find((candidate) => candidate * power >= raw * (1 - 1e-9)) ?? 10;
+  const excess = raw / power;
+  const factor = excess >= Math.sqrt(50) ? 10 : excess >= Math.sqrt(10) ? 5 : excess >= Math.sqrt(2) ? 2 : 1;
   return factor * power;
 }
 

@@ -1,5 +1,7 @@
 import { Button } from '@chakra-ui/react';
+import { holds, type Analysis, type Project } from '@overtally/contracts';
 import { useQuery } from '@tanstack/react-query';
+import { useState } from 'react';
 import {
   Link as RouterLink,
   useNavigate,
@@ -9,6 +11,8 @@ import {
 } from 'react-router-dom';
 import { useAccount } from '../../../features/account/hooks/use-account.js';
 import { limitSetsQuery } from '../../../features/limits/api/list-limit-sets.js';
+import { JudgeDialog } from '../../../features/limits/components/judge-dialog.js';
+import { VerdictList } from '../../../features/limits/components/verdict-list.js';
 import { useProject } from '../../../features/projects/hooks/use-project.js';
 import { recordingQuery } from '../../../features/recordings/api/get-recording.js';
 import { RecordingSheet, type SheetPlace } from '../../../features/recordings/sheet/recording-sheet.js';
@@ -30,6 +34,8 @@ export function Component() {
   const limitSets = useQuery(limitSetsQuery(project.id));
   const place = useSheetPlace();
   if (!recording.data) return null;
+  const mayJudge = holds('verdict.create', project.role, account.isAdministrator);
+  const named = { project, subject: recording.data.number };
   return (
     <RecordingSheet
       key={recordingId}
@@ -39,17 +45,50 @@ export function Component() {
       limitSets={limitSets.data ?? []}
       place={place}
       slots={{
-        actions: ({ channel }) => (
-          <Button asChild>
-            <RouterLink to={paths.overlay(project.id, [`${recordingId}:${channel}`])}>
-              Add to overlay
-            </RouterLink>
-          </Button>
+        actions: (shown) => (
+          <>
+            <Button asChild>
+              <RouterLink to={paths.overlay(project.id, [`${recordingId}:${shown.channel}`])}>
+                Add to overlay
+              </RouterLink>
+            </Button>
+            {shown.analysis && mayJudge ? (
+              <JudgeButton {...shown} analysis={shown.analysis} {...named} />
+            ) : null}
+          </>
         ),
+        verdicts: ({ id }) => <VerdictList analysisId={id} subject={recording.data.number} />,
       }}
-      onReadAgain={() => undefined}
       onDeleted={() => void navigate(paths.recordings(project.id))}
     />
+  );
+}
+
+interface JudgeButtonProps {
+  project: Project;
+  subject: string;
+  analysis: Analysis;
+  channel: number;
+}
+
+function JudgeButton({ project, subject, analysis, channel }: JudgeButtonProps) {
+  const [open, setOpen] = useState(false);
+  return (
+    <>
+      <Button variant="solid" onClick={() => setOpen(true)}>
+        Judge
+      </Button>
+      <JudgeDialog
+        open={open}
+        onClose={() => setOpen(false)}
+        projectId={project.id}
+        analysisId={analysis.id}
+        channels={analysis.channels}
+        channel={channel}
+        limitSetId={project.comparisonLimitSetId}
+        subject={subject}
+      />
+    </>
   );
 }
 

@@ -44,7 +44,7 @@ export function frequencyChart(
   const endHz = whole ? lastHz : Math.min(lastHz, lastOrderHz);
   const { unit: hertz, factor } = frequencyUnit(endHz);
   const values = spectrum.rms.map((rms) => rms * gain);
-  const range = amplitudeRange(values, [], scale);
+  const range = amplitudeRange({ values, limits: [], scale, faintest: median(values) });
   const marks = lettersAt(input, gain, factor, range, palette);
   return {
     factor,
@@ -73,6 +73,10 @@ export function frequencyChart(
     },
   };
 }
+
+/** Middle of the sorted values: the noise between the lines. */
+const median = (values: readonly number[]) =>
+  values.toSorted((a, b) => a - b)[Math.floor(values.length / 2)] ?? null;
 
 /** Small marks on the orders, filled in vermilion where the order is over. */
 function orderMarks(

@@ -27,6 +27,8 @@ export interface OrderChartInput {
   heightPx: number;
 }
 
+/** So many of the strongest orders are seen on a logarithmic axis, however weak. */
+const strongSeen = 5;
 const margin = { l: 64, r: 12, t: 8, b: 30 };
 
 /** Bars by order under the limit as a ceiling, with the letters of notes over their orders. */
@@ -42,11 +44,12 @@ export function orderChart(
     limit === null ? [] : [{ order, limit: limit * factor }],
   );
   const values = rows.map((row) => row.compared * factor);
-  const range = amplitudeRange(
+  const range = amplitudeRange({
     values,
-    limits.map(({ limit }) => limit),
+    limits: limits.map(({ limit }) => limit),
     scale,
-  );
+    faintest: values.toSorted((a, b) => b - a)[strongSeen - 1] ?? null,
+  });
   const lastOrder = rows.reduce((last, { order }) => Math.max(last, order), 1);
   return {
     traces: [

@@ -2,7 +2,7 @@ import type { Note, Waveform } from '@overtally/contracts';
 import { describe, expect, it } from 'vitest';
 import { light } from '../../../lib/theme/palette.js';
 import { withLetters } from './note-letters.js';
-import { spanOfRelayout, waveformChart, waveformPoints } from './waveform-chart.js';
+import { spanOfRelayout, waveformChart, waveformPoints, type WaveformChartInput } from './waveform-chart.js';
 
 const samples: Waveform = {
   channel: 0,
@@ -16,6 +16,14 @@ const samples: Waveform = {
   minimum: [],
   maximum: [],
 };
+
+const input = (change: Partial<WaveformChartInput>): WaveformChartInput => ({
+  waveform: samples,
+  span: { fromS: 1, toS: 1.08 },
+  notes: [],
+  labels: 9,
+  ...change,
+});
 
 describe('waveform against time', () => {
   it('keeps samples where they were taken and leaves missing ones open', () => {
@@ -38,13 +46,13 @@ describe('waveform against time', () => {
   });
 
   it('shows the span in the unit that suits it', () => {
-    const { layout } = waveformChart(samples, { fromS: 1, toS: 1.08 }, [], light);
+    const { layout } = waveformChart(input({}), light);
     expect(layout.xaxis).toMatchObject({ range: [1000, 1080], ticksuffix: ' ms' });
   });
 
   it('stands for a record of missing samples alone', () => {
     const empty = { ...samples, values: [null, null] };
-    expect(waveformChart(empty, { fromS: 0, toS: 1 }, [], light).layout.yaxis).toMatchObject({
+    expect(waveformChart(input({ waveform: empty }), light).layout.yaxis).toMatchObject({
       range: [-1, 1],
     });
   });
@@ -52,8 +60,12 @@ describe('waveform against time', () => {
   it('marks time spans of notes that reach into the view', () => {
     const note = (fromS: number, toS: number) => ({ target: { kind: 'span', fromS, toS } }) as Note;
     const notes = withLetters([note(0, 0.5), note(1.04, 2)]);
-    const { traces, layout } = waveformChart(samples, { fromS: 1, toS: 1.08 }, notes, light);
-    expect(layout.shapes).toMatchObject([{ x0: 1040, x1: 2000 }]);
+    const { traces, layout } = waveformChart(input({ notes }), light);
+    expect(layout.shapes).toMatchObject([
+      { x0: 1040, x1: 2000 },
+      { x0: 1040, x1: 1040 },
+      { x0: 2000, x1: 2000 },
+    ]);
     expect(traces.at(-1)).toMatchObject({ x: [expect.closeTo(1060, 9)], text: ['<b>b</b>'] });
   });
 

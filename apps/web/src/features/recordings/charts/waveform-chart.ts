@@ -21,11 +21,18 @@ export function waveformPoints(waveform: Waveform, factor: number): { x: number[
   };
 }
 
-/** Trace and layout of the zoomed waveform over `span`, with bands and letters where notes speak of a time span. */
+export interface WaveformChartInput {
+  waveform: Waveform;
+  /** Part of the record that the axis shows. */
+  span: Span;
+  notes: readonly LetteredNote[];
+  /** Labels of the time axis, at most. */
+  labels: number;
+}
+
+/** Trace and layout of the zoomed waveform with brackets and letters where notes speak of a time span. */
 export function waveformChart(
-  waveform: Waveform,
-  span: Span,
-  notes: readonly LetteredNote[],
+  { waveform, span, notes, labels }: WaveformChartInput,
   palette: Palette,
 ): { traces: PlotTrace[]; layout: PlotLayout } {
   const { unit, factor } = timeUnit(span.toS - span.fromS);
@@ -56,7 +63,8 @@ export function waveformChart(
         separatethousands: false,
         exponentformat: 'none',
         showline: false,
-        nticks: 9,
+        nticks: labels,
+        tickangle: 0,
       },
       yaxis: {
         range: [bottom, top],
@@ -65,7 +73,7 @@ export function waveformChart(
         ...linearTicks(bottom, top, waveform.unit, 3),
         ticklabelstandoff: 6,
       },
-      shapes: spans.map(({ fromS, toS }) => band(fromS * factor, toS * factor, palette)),
+      shapes: spans.flatMap(({ fromS, toS }) => bracket(fromS * factor, toS * factor, palette)),
     },
   };
 }
@@ -92,14 +100,15 @@ function letters(spans: readonly NotedSpan[], view: Span, factor: number, y: num
   return marks.length > 0 ? [letterTrace(marks, palette)] : [];
 }
 
-function band(x0: number, x1: number, palette: Palette) {
-  return {
-    type: 'rect',
+/** A line along the top from end to end, with a dotted one down from each end. */
+function bracket(from: number, to: number, palette: Palette) {
+  const line = (x0: number, x1: number, y0: number, dash: string) => ({
+    type: 'line',
     layer: 'below',
-    ...{ x0, x1, yref: 'paper', y0: 0, y1: 1 },
-    fillcolor: palette.wash,
-    line: { width: 0 },
-  };
+    ...{ x0, x1, yref: 'paper', y0, y1: 1 },
+    line: { color: palette.inkSoft, width: 1, dash },
+  });
+  return [line(from, to, 1, 'solid'), line(from, from, 0, 'dot'), line(to, to, 0, 'dot')];
 }
 
 /** The span that zooming in the chart asks for; `whole` after a double click, null for any other change. */

@@ -1,9 +1,10 @@
-import type { Recording, Settings, UpdateRecording } from '@overtally/contracts';
+import type { ImportOptions, Recording, Settings, UpdateRecording } from '@overtally/contracts';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { cancelAnalysis } from '../api/cancel-analysis.js';
 import { createAnalysis } from '../api/create-analysis.js';
 import { deleteRecording } from '../api/delete-recording.js';
 import { recordingQuery } from '../api/get-recording.js';
+import { readAgain } from '../api/read-again.js';
 import { updateRecording } from '../api/update-recording.js';
 
 /** What can be done to one recording, with what has to be fetched anew after it. */
@@ -15,6 +16,13 @@ export function useRecordingChanges({ id, projectId }: Pick<Recording, 'id' | 'p
     Promise.all([queryClient.invalidateQueries({ queryKey: recordingQuery(id).queryKey }), refreshLists()]);
   const update = useMutation({
     mutationFn: (change: UpdateRecording) => updateRecording(id, change),
+    onSuccess: async (recording) => {
+      queryClient.setQueryData(recordingQuery(id).queryKey, recording);
+      await refresh();
+    },
+  });
+  const read = useMutation({
+    mutationFn: (options: ImportOptions) => readAgain(id, options),
     onSuccess: async (recording) => {
       queryClient.setQueryData(recordingQuery(id).queryKey, recording);
       await refresh();
@@ -38,5 +46,5 @@ export function useRecordingChanges({ id, projectId }: Pick<Recording, 'id' | 'p
       await queryClient.invalidateQueries({ queryKey: ['projects', projectId], exact: true });
     },
   });
-  return { update, analyse, cancel, remove };
+  return { update, read, analyse, cancel, remove };
 }

@@ -19,7 +19,13 @@ export function ProvenanceSection({ analyses, shownId, latestId, onShow }: Prove
   if (analyses.length === 0) return null;
   return (
     <Section title="Analyses" lead="Never changed once made; a new one stands beside them." mt="8">
-      <Box overflowX="auto">
+      <Box
+        overflowX="auto"
+        position="relative"
+        tabIndex={0}
+        role="region"
+        aria-label="Analyses of this recording"
+      >
         <Table.Root size="sm">
           <Table.Caption srOnly>Analyses of this recording</Table.Caption>
           <Table.Header>

@@ -3,14 +3,18 @@ import {
   holds,
   type Account,
   type Analysis,
+  type Channel,
   type LimitSet,
   type Project,
   type Recording,
 } from '@overtally/contracts';
-import type { ReactNode } from 'react';
+import { useState, type ReactNode } from 'react';
 import { ErrorState } from '../../../components/error-state.js';
 import { LoadingState } from '../../../components/loading-state.js';
 import { PageHeader } from '../../../components/page-header.js';
+import { notifyDone, notifyProblem } from '../../../components/notify.js';
+import { useRecordingChanges } from '../hooks/use-recording-changes.js';
+import { ImportDialog } from '../import/import-dialog.js';
 import { isBusy } from '../recording-status.js';
 import { AnalysedSheet } from './analysed-sheet.js';
 import { FailNotice, RunNotice } from './run-notice.js';
@@ -44,17 +48,19 @@ export interface RecordingSheetProps {
   limitSets: readonly LimitSet[];
   place: SheetPlace;
   slots: SheetSlots;
-  onReadAgain: () => void;
   onDeleted: () => void;
 }
 
 /** The sheet of one recording: what it is, what was computed from it, and what was noted in its margin. */
 export function RecordingSheet(props: RecordingSheetProps) {
-  const { project, account, recording, place, slots, onReadAgain } = props;
+  const { project, account, recording, place, slots } = props;
+  const [reading, setReading] = useState(false);
+  const { read } = useRecordingChanges(recording);
+  const onReadAgain = () => setReading(true);
   const { list, shownId, shown, running } = useShownAnalysis(recording, place.analysisId);
   const analysis = shown.data?.status === 'done' ? shown.data : null;
   const channels = analysis?.channels ?? recording.channels;
-  const channel = (channels.find(({ index }) => index === place.channel) ?? channels[0])?.index ?? 0;
+  const channel = chosenChannel(props, channels);
   const may = {
     update: holds('recording.update', project.role, account.isAdministrator),
     delete: holds('recording.delete', project.role, account.isAdministrator),
@@ -73,7 +79,7 @@ export function RecordingSheet(props: RecordingSheetProps) {
         actions={
           <>
             {slots.actions?.({ analysis, channel })}
-            <SheetMenu {...props} channel={channel} may={may} />
+            <SheetMenu {...props} channel={channel} may={may} onReadAgain={onReadAgain} />
           </>
         }
       />
@@ -94,6 +100,23 @@ export function RecordingSheet(props: RecordingSheetProps) {
       {shownId !== null && !analysis && !shown.isPending ? (
         <SheetTitleBlock recording={recording} channel={null} set={null} comparison={null} />
       ) : null}
+      <ImportDialog
+        open={reading}
+        projectId={project.id}
+        source={{ kind: 'recording', recording }}
+        pending={read.isPending}
+        onClose={() => setReading(false)}
+        onRead={(options) =>
+          read.mutate(options, {
+            onSuccess: () => {
+              setReading(false);
+              place.onAnalysis(null);
+              notifyDone(`${recording.number} is read again`);
+            },
+            onError: (error) => notifyProblem('It is not read again', error),
+          })
+        }
+      />
       <ProvenanceSection
         analyses={list}
         shownId={shownId}
@@ -102,6 +125,19 @@ export function RecordingSheet(props: RecordingSheetProps) {
       />
     </>
   );
+}
+
+/** The channel of the address, else the first that the project's limits are for, else the first. */
+function chosenChannel(
+  { project, limitSets, place }: RecordingSheetProps,
+  channels: readonly Pick<Channel, 'index' | 'quantity'>[],
+): number {
+  const set = limitSets.find(({ id }) => id === project.comparisonLimitSetId);
+  const channel =
+    channels.find(({ index }) => index === place.channel) ??
+    channels.find(({ quantity }) => quantity === set?.quantity) ??
+    channels[0];
+  return channel?.index ?? 0;
 }
 
 function subtitle({ channels, format, file, remark }: Recording): string {

@@ -19,18 +19,23 @@ interface SheetTitleBlockProps {
 export function SheetTitleBlock({ recording, channel, set, comparison }: SheetTitleBlockProps) {
   const { file } = recording;
   const cells: TitleCell[] = [
-    { caption: 'Number', value: recording.number, mono: true, grow: 0.7 },
-    { caption: 'EUT', value: recording.eut || none, grow: 1.6 },
+    { caption: 'Number', value: recording.number, mono: true, grow: 0.65 },
+    { caption: 'EUT', value: recording.eut || none, grow: 1.5 },
     {
       caption: 'Captured',
       value: formatDateTime(recording.capturedAt),
       title: formatDateTimeFull(recording.capturedAt),
-      grow: 1.2,
+      grow: 1.1,
     },
-    { caption: 'Rate', value: formatSi(recording.sampleRateHz, 'Hz', { digits: 6, trim: true }), mono: true },
-    { caption: 'Length', value: formatDuration(recording.durationS), mono: true, grow: 0.8 },
-    { caption: 'Fundamental', value: fundamentalWords(channel), mono: true, grow: 2 },
-    { caption: 'Measuring chain', value: recording.measuringChain || none, grow: 2.2 },
+    {
+      caption: 'Rate',
+      value: formatSi(recording.sampleRateHz, 'Hz', { digits: 6, trim: true }),
+      mono: true,
+      grow: 0.85,
+    },
+    { caption: 'Length', value: formatDuration(recording.durationS), mono: true, grow: 0.75 },
+    { caption: 'Fundamental', value: fundamentalWords(channel), mono: true, grow: 1.9 },
+    { caption: 'Measuring chain', value: recording.measuringChain || none, grow: 1.7 },
     {
       caption: 'Source SHA-256',
       value: (
@@ -41,7 +46,7 @@ export function SheetTitleBlock({ recording, channel, set, comparison }: SheetTi
       ),
       mono: true,
       title: file.sha256,
-      grow: 1.8,
+      grow: 1.6,
     },
   ];
   if (set && comparison) cells.push(comparisonCell(set, comparison));
@@ -54,7 +59,7 @@ function comparisonCell(set: LimitSet, { rows, words, tone }: ChannelComparison)
   return {
     caption: set.title,
     title: [set.title, set.edition].filter(Boolean).join(', '),
-    grow: 2,
+    grow: 1.9,
     ...(tone ? { tone } : {}),
     value: (
       <>

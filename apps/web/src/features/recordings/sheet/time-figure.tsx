@@ -1,4 +1,4 @@
-import { Box, Button, Text } from '@chakra-ui/react';
+import { Box, Button, Text, useBreakpointValue } from '@chakra-ui/react';
 import type { Channel, ChannelAnalysis, Recording } from '@overtally/contracts';
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
@@ -39,14 +39,15 @@ const settleMs = 120;
 export function TimeFigure(props: TimeFigureProps) {
   const { recording, channel, figures, notes = noNotes, view, onView, onNote } = props;
   const palette = usePalette();
+  const labels = useBreakpointValue({ base: 4, md: 9 }, { ssr: false }) ?? 9;
   const durationS = recording.durationS ?? 0;
   const leastS = Math.min(durationS, samplesAtLeast / (recording.sampleRateHz ?? 1));
   const settled = useSettled(view, settleMs);
   const overview = useQuery(waveformQuery(recording.id, { channel: channel.index, points: 1200 }));
   const part = useQuery(waveformQuery(recording.id, { channel: channel.index, ...settled, points: 2400 }));
   const chart = useMemo(
-    () => (part.data ? waveformChart(part.data, view, notes, palette) : null),
-    [part.data, view, notes, palette],
+    () => (part.data ? waveformChart({ waveform: part.data, span: view, notes, labels }, palette) : null),
+    [part.data, view, notes, labels, palette],
   );
   const zoom = (event: PlotRelayoutEvent) => {
     const wanted = spanOfRelayout(event, view);
