@@ -2,27 +2,28 @@ import { describe, expect, it } from 'vitest';
 import { amplitudeAxis, amplitudeRange, raised } from './amplitude-axis.js';
 
 describe('axis of amplitudes', () => {
-  const of = (change: Partial<Parameters<typeof amplitudeRange>[0]>) =>
-    amplitudeRange({ values: [], limits: [], scale: 'log', faintest: null, ...change });
-
   it('ends a decade below the lowest limit when logarithmic', () => {
-    const range = of({ values: [2.2, 1.19, null, 0], limits: [2.3, 0.0495] });
+    const range = amplitudeRange([2.2, 1.19, null, 0], [2.3, 0.0495], 'log');
     expect(range.bottom).toBeCloseTo(0.00495, 12);
     expect(range.top).toBeGreaterThan(2.3);
   });
 
   it('reaches to the faintest value that should be seen, within three to eight decades', () => {
-    expect(of({ values: [1], faintest: 3e-5 }).bottom).toBeCloseTo(1e-5, 12);
-    expect(of({ values: [1], faintest: 0.5 }).bottom).toBeCloseTo(1e-3, 12);
-    expect(of({ values: [1], faintest: 1e-30 }).bottom).toBeCloseTo(1e-8, 12);
+    expect(amplitudeRange([1], [], 'log', 3e-5).bottom).toBeCloseTo(1e-5, 12);
+    expect(amplitudeRange([1], [], 'log', 0.5).bottom).toBeCloseTo(1e-3, 12);
+    expect(amplitudeRange([1], [], 'log', 1e-30).bottom).toBeCloseTo(1e-8, 12);
+  });
+
+  it('shows four decades when nothing is said', () => {
+    expect(amplitudeRange([10], [], 'log').bottom).toBeCloseTo(0.001, 12);
   });
 
   it('begins at zero when linear', () => {
-    expect(of({ values: [10], scale: 'linear' }).bottom).toBe(0);
+    expect(amplitudeRange([10], [], 'linear').bottom).toBe(0);
   });
 
   it('stands without any value', () => {
-    const { bottom, top } = of({ values: [null, 0, Number.NaN] });
+    const { bottom, top } = amplitudeRange([null, 0, Number.NaN], [], 'log');
     expect(bottom).toBeGreaterThan(0);
     expect(top).toBeGreaterThan(bottom);
   });

@@ -15,17 +15,17 @@ const mostDecades = 8;
 /** Room above the highest bar or limit. */
 const headroom = { log: 1.6, linear: 1.12 };
 
-interface AmplitudeRangeInput {
-  /** Null, zero and what is not finite is left out. */
-  values: readonly (number | null)[];
-  limits: readonly number[];
-  scale: Scale;
-  /** Value that should still be seen on a logarithmic axis: a weak harmonic, the noise. */
-  faintest: number | null;
-}
-
-/** Range of an axis of amplitudes. A logarithmic one ends a decade below the lowest limit, else below `faintest`. */
-export function amplitudeRange({ values, limits, scale, faintest }: AmplitudeRangeInput): AmplitudeRange {
+/**
+ * Range for `values` under `limits`; what is null, zero or not finite is left out. A logarithmic one ends a decade
+ * below the lowest limit; without limits below `faintest`, a value that should still be seen (a weak harmonic, the
+ * noise), or four decades below the highest when none is named.
+ */
+export function amplitudeRange(
+  values: readonly (number | null)[],
+  limits: readonly number[],
+  scale: Scale,
+  faintest: number | null = null,
+): AmplitudeRange {
   const highest = [...values, ...limits].reduce<number>(
     (most, value) => (value !== null && Number.isFinite(value) ? Math.max(most, value) : most),
     0,
@@ -37,7 +37,7 @@ export function amplitudeRange({ values, limits, scale, faintest }: AmplitudeRan
   if (Number.isFinite(lowestLimit)) {
     return { scale, bottom: Math.max(lowestLimit / 10, reference * 10 ** -mostDecades), top };
   }
-  const wanted = (faintest ?? 0) / 3;
+  const wanted = faintest === null ? reference * 1e-4 : faintest / 3;
   const bottom = Math.min(Math.max(wanted, reference * 10 ** -mostDecades), reference * 10 ** -fewestDecades);
   return { scale, bottom, top };
 }

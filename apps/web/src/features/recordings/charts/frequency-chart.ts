@@ -44,7 +44,7 @@ export function frequencyChart(
   const endHz = whole ? lastHz : Math.min(lastHz, lastOrderHz);
   const { unit: hertz, factor } = frequencyUnit(endHz);
   const values = spectrum.rms.map((rms) => rms * gain);
-  const range = amplitudeRange({ values, limits: [], scale, faintest: median(values) });
+  const range = amplitudeRange(values, [], scale, median(values));
   const marks = lettersAt(input, gain, factor, range, palette);
   return {
     factor,

@@ -44,12 +44,9 @@ export function orderChart(
     limit === null ? [] : [{ order, limit: limit * factor }],
   );
   const values = rows.map((row) => row.compared * factor);
-  const range = amplitudeRange({
-    values,
-    limits: limits.map(({ limit }) => limit),
-    scale,
-    faintest: values.toSorted((a, b) => b - a)[strongSeen - 1] ?? null,
-  });
+  const ceiling = limits.map(({ limit }) => limit);
+  const weak = values.toSorted((a, b) => b - a)[strongSeen - 1] ?? null;
+  const range = amplitudeRange(values, ceiling, scale, weak);
   const lastOrder = rows.reduce((last, { order }) => Math.max(last, order), 1);
   return {
     traces: [
