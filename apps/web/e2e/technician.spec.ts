@@ -110,7 +110,10 @@ describe('a technician', () => {
     });
     await dialog.getByRole('button', { name: 'Read with these settings' }).click();
     const row = page.getByRole('row').filter({ hasText: 'garbage' });
-    await row.getByText(/Not read:/).filter({ visible: true }).waitFor({ timeout: 60_000 });
+    await row
+      .getByText(/Not read:/)
+      .filter({ visible: true })
+      .waitFor({ timeout: 60_000 });
   });
 
   it('finds no way to judge or to issue, and the server agrees', async () => {

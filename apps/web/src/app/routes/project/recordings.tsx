@@ -48,6 +48,13 @@ export function Component() {
       else next.delete(recordingId);
       return next;
     });
+  /** The chosen recordings, each with the channel that its row speaks of. */
+  const overlaid = () =>
+    [...selection].map((id) => {
+      const recording = shown.find((candidate) => candidate.id === id);
+      const channel = recording ? compareRecording(recording, limitSet).channel : null;
+      return channel ? `${id}:${channel.channel}` : id;
+    });
   const filtered = filter.q !== '' || filter.status !== null;
   return (
     <>
@@ -58,7 +65,7 @@ export function Component() {
         actions={
           <Button
             disabled={selection.size < 2}
-            onClick={() => void navigate(paths.overlay(project.id, [...selection]))}
+            onClick={() => void navigate(paths.overlay(project.id, overlaid()))}
           >
             {selection.size < 2 ? 'Choose two or more to overlay' : `Overlay ${selection.size} recordings`}
           </Button>
