@@ -43,7 +43,7 @@ export function Modal({
             <Dialog.Body>{children}</Dialog.Body>
             {footer ? <Dialog.Footer>{footer}</Dialog.Footer> : null}
             <Dialog.CloseTrigger asChild>
-              <CloseButton size="sm" variant="ghost" aria-label="Close" />
+              <CloseButton size="sm" variant="ghost" colorPalette="gray" aria-label="Close" />
             </Dialog.CloseTrigger>
           </Dialog.Content>
         </Dialog.Positioner>

@@ -1,7 +1,8 @@
+import { ChakraProvider } from '@chakra-ui/react';
 import { render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { expect, it, vi } from 'vitest';
-import { Providers } from '../app/providers.js';
+import { system } from '../lib/theme/system.js';
 import { TableTwin } from './table-twin.js';
 
 interface Row {
@@ -16,7 +17,7 @@ const rows: Row[] = [
 
 function show() {
   render(
-    <Providers>
+    <ChakraProvider value={system}>
       <TableTwin
         caption="Current by order"
         fileName="orders"
@@ -27,7 +28,7 @@ function show() {
           { key: 'rms', header: 'rms', fileHeader: 'rms (A)', align: 'right', value: (row) => row.rms },
         ]}
       />
-    </Providers>,
+    </ChakraProvider>,
   );
 }
 

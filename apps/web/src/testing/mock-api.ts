@@ -35,7 +35,7 @@ export const problem =
  */
 export function mockApi(answers: Record<string, Answer>): SeenRequest[] {
   const seen: SeenRequest[] = [];
-  vi.stubGlobal('fetch', async (input: string, init: RequestInit = {}) => {
+  vi.stubGlobal('fetch', (input: string, init: RequestInit = {}): Promise<Response> => {
     const url = new URL(input, 'http://localhost');
     const path = url.pathname.replace(/^\/api/, '');
     const method = init.method ?? 'GET';
@@ -44,7 +44,7 @@ export function mockApi(answers: Record<string, Answer>): SeenRequest[] {
     const body: unknown = typeof init.body === 'string' ? JSON.parse(init.body) : init.body;
     const request = { method, path: `${path}${url.search}`, body };
     seen.push(request);
-    return answer(request);
+    return Promise.resolve(answer(request));
   });
   return seen;
 }

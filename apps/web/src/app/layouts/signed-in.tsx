@@ -5,14 +5,14 @@ import { queryClient } from '../../lib/query-client.js';
 import { paths } from '../paths.js';
 
 /** Sends whoever is not signed in to the sign-in page, which leads back here. */
-export async function loader({ request }: LoaderFunctionArgs): Promise<null> {
+export async function loader({ request }: LoaderFunctionArgs): Promise<Response | null> {
   try {
     await queryClient.ensureQueryData(accountQuery());
     return null;
   } catch (error) {
     if (!(error instanceof ApiProblem) || error.status !== 401) throw error;
     const { pathname, search } = new URL(request.url);
-    throw redirect(paths.signIn(`${pathname}${search}`));
+    return redirect(paths.signIn(`${pathname}${search}`));
   }
 }
 

@@ -48,7 +48,7 @@ export function ArchiveProject({ project }: { project: Project }) {
         pending={update.isPending}
         onConfirm={() => setArchived(true)}
       >
-        It leaves the list for all {project.counts.members} members. A manager can bring it back.
+        It leaves the list for everyone. A manager can bring it back.
       </ConfirmDialog>
     </Section>
   );
