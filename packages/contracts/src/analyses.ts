@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { idSchema, pageOf, personRefSchema, timestampSchema } from './common.js';
+import { idSchema, maxChannelIndex, pageOf, personRefSchema, timestampSchema } from './common.js';
 import { quantitySchema, readProblemSchema } from './recordings.js';
 
 export const profileSchema = z.enum(['mains', 'tone', 'general']);
@@ -16,30 +16,46 @@ export const windowNameSchema = z.enum([
   'kaiser',
 ]);
 
+const defaultMaxOrder = 50;
+
 /** Settings of one analysis. */
-export const settingsSchema = z.object({
-  profile: profileSchema,
-  nominalFrequencyHz: z
-    .union([z.literal('auto'), z.number().min(0.1).max(1e6)])
-    .describe('Where to look for the fundamental, in Hz'),
-  window: windowNameSchema
-    .optional()
-    .describe('Window of the drawn spectrum; mains windows stay rectangular'),
-  maxOrder: z.number().int().min(2).max(200).optional().describe('Highest order listed, 50 when absent'),
-  thdMaxOrder: z.number().int().min(2).max(200).optional().describe('Highest order in THD: 40, tone 10'),
-  cyclesPerWindow: z
-    .number()
-    .int()
-    .min(1)
-    .max(100)
-    .optional()
-    .describe('10 at 50 Hz, 12 at 60 Hz when absent'),
-  span: z
-    .object({ fromS: z.number().min(0), toS: z.number().positive() })
-    .refine((span) => span.toS > span.fromS, { message: 'The span must end after it begins', path: ['toS'] })
-    .optional()
-    .describe('Part of the record, in seconds from its first sample'),
-});
+export const settingsSchema = z
+  .object({
+    profile: profileSchema,
+    nominalFrequencyHz: z
+      .union([z.literal('auto'), z.number().min(0.1).max(1e6)])
+      .describe('Where to look for the fundamental, in Hz'),
+    window: windowNameSchema
+      .optional()
+      .describe('Window of the drawn spectrum; mains windows stay rectangular'),
+    maxOrder: z.number().int().min(2).max(200).optional().describe('Highest order listed, 50 when absent'),
+    thdMaxOrder: z
+      .number()
+      .int()
+      .min(2)
+      .max(200)
+      .optional()
+      .describe('Highest order in THD, at most maxOrder; 40, tone 10 when absent'),
+    cyclesPerWindow: z
+      .number()
+      .int()
+      .min(2)
+      .max(200_000)
+      .optional()
+      .describe('10 at 50 Hz, 12 at 60 Hz when absent'),
+    span: z
+      .object({ fromS: z.number().min(0), toS: z.number().positive() })
+      .refine((span) => span.toS > span.fromS, {
+        message: 'The span must end after it begins',
+        path: ['toS'],
+      })
+      .optional()
+      .describe('Part of the record, in seconds from its first sample'),
+  })
+  .refine(({ thdMaxOrder = 0, maxOrder = defaultMaxOrder }) => thdMaxOrder <= maxOrder, {
+    message: 'THD cannot count orders above the highest order listed (maxOrder, 50 when absent)',
+    path: ['thdMaxOrder'],
+  });
 export type Settings = z.infer<typeof settingsSchema>;
 
 export const createAnalysisSchema = z.object({ settings: settingsSchema });
@@ -135,7 +151,7 @@ export type Analysis = z.infer<typeof analysisSchema>;
 export const analysisPageSchema = pageOf(analysisSchema.omit({ channels: true, power: true }));
 
 export const spectrumQuerySchema = z.object({
-  channel: z.coerce.number().int().min(0).default(0),
+  channel: z.coerce.number().int().min(0).max(maxChannelIndex).default(0),
   maxPoints: z.coerce.number().int().min(16).max(20000).default(4000),
 });
 
@@ -156,15 +172,18 @@ const noteTarget = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('span'), fromS: z.number().min(0), toS: z.number().positive() }),
 ]);
 
+const noteText = z.string().trim().min(1, 'Write the note').max(2000);
+const noteCause = z.string().trim().max(200).describe('What is thought to cause it');
+
 export const createNoteSchema = z.object({
-  channel: z.number().int().min(0),
+  channel: z.number().int().min(0).max(maxChannelIndex),
   target: noteTarget.describe('What the note speaks of'),
-  text: z.string().trim().min(1, 'Write the note').max(2000),
-  cause: z.string().trim().max(200).default('').describe('What is thought to cause it'),
+  text: noteText,
+  cause: noteCause.default(''),
 });
 export type CreateNote = z.infer<typeof createNoteSchema>;
 
-export const updateNoteSchema = createNoteSchema.pick({ text: true, cause: true }).partial();
+export const updateNoteSchema = z.object({ text: noteText, cause: noteCause }).partial();
 export type UpdateNote = z.infer<typeof updateNoteSchema>;
 
 export const noteSchema = createNoteSchema.extend({

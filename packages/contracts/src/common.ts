@@ -1,7 +1,10 @@
 import { z } from 'zod';
 
-/** Identifier of a stored thing (UUID). */
-export const idSchema = z.uuid().describe('Identifier, a UUID');
+/** Identifier of a stored thing (UUID), in lower case as it is stored. */
+export const idSchema = z.uuid().toLowerCase().describe('Identifier, a UUID');
+
+/** Highest index of a channel that a request may name; recordings have fewer channels. */
+export const maxChannelIndex = 1023;
 
 /** Moment in UTC as ISO 8601. */
 export const timestampSchema = z.iso.datetime({ offset: true }).describe('Moment, ISO 8601 UTC');
@@ -15,7 +18,7 @@ export const pageOf = <T extends z.ZodType>(item: T) =>
 
 /** Paging parameters of every list. */
 export const pageQuerySchema = z.object({
-  cursor: z.string().max(200).optional().describe('`nextCursor` of the page before'),
+  cursor: z.string().max(2000).optional().describe('`nextCursor` of the page before'),
   limit: z.coerce.number().int().min(1).max(200).default(50).describe('Items per page'),
 });
 

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { idSchema, pageOf, personRefSchema, timestampSchema } from './common.js';
+import { idSchema, maxChannelIndex, pageOf, personRefSchema, timestampSchema } from './common.js';
 import { quantitySchema } from './recordings.js';
 
 export const confidenceSchema = z.enum(['high', 'medium', 'low']);
@@ -116,7 +116,7 @@ export type DecisionRule = z.infer<typeof decisionRuleSchema>;
 
 export const createVerdictSchema = z.object({
   limitSetId: z.string().min(1).max(80),
-  channel: z.number().int().min(0),
+  channel: z.number().int().min(0).max(maxChannelIndex),
   parameters: verdictParametersSchema.default({}),
   decisionRule: decisionRuleSchema.default('simple-acceptance'),
 });

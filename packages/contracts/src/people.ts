@@ -33,6 +33,35 @@ export type Account = z.infer<typeof accountSchema>;
 export const updateAccountSchema = z.object({ name: z.string().trim().min(1).max(120) });
 export type UpdateAccount = z.infer<typeof updateAccountSchema>;
 
+/** A personal access key, as its owner sees it later on; the secret is shown once. */
+export const accessKeySchema = z.object({
+  id: idSchema,
+  name: z.string(),
+  prefix: z.string().describe('First characters of the secret, to tell keys apart'),
+  createdAt: timestampSchema,
+  lastUsedAt: timestampSchema.nullable().describe('To the minute'),
+  expiresAt: timestampSchema.nullable().describe('Null: until it is removed'),
+});
+export type AccessKey = z.infer<typeof accessKeySchema>;
+export const accessKeyPageSchema = pageOf(accessKeySchema);
+
+export const createAccessKeySchema = z.object({
+  name: z.string().trim().min(1, 'Name the key').max(80).describe('What the key is for'),
+  expiresInDays: z
+    .number()
+    .int()
+    .min(1)
+    .max(3650)
+    .optional()
+    .describe('Days until it expires; absent: until it is removed'),
+});
+export type CreateAccessKey = z.infer<typeof createAccessKeySchema>;
+
+export const createdAccessKeySchema = accessKeySchema.extend({
+  secret: z.string().describe('Send it as `Authorization: Bearer …`; it cannot be read again'),
+});
+export type CreatedAccessKey = z.infer<typeof createdAccessKeySchema>;
+
 /** A person as an administrator sees them. */
 export const userSchema = accountSchema.extend({
   disabledAt: timestampSchema.nullable(),

@@ -1,5 +1,12 @@
 import { z } from 'zod';
-import { idSchema, pageOf, pageQuerySchema, personRefSchema, timestampSchema } from './common.js';
+import {
+  idSchema,
+  maxChannelIndex,
+  pageOf,
+  pageQuerySchema,
+  personRefSchema,
+  timestampSchema,
+} from './common.js';
 
 export const quantitySchema = z.enum([
   'voltage',
@@ -175,7 +182,7 @@ export const importPreviewSchema = z.object({
 export type ImportPreview = z.infer<typeof importPreviewSchema>;
 
 export const waveformQuerySchema = z.object({
-  channel: z.coerce.number().int().min(0).default(0),
+  channel: z.coerce.number().int().min(0).max(maxChannelIndex).default(0),
   fromS: z.coerce.number().min(0).optional(),
   toS: z.coerce.number().positive().optional(),
   points: z.coerce.number().int().min(2).max(8000).default(2000),

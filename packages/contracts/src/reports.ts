@@ -7,18 +7,20 @@ import { recordingSchema } from './recordings.js';
 export const reportStatusSchema = z.enum(['draft', 'in-review', 'issued', 'superseded']);
 export type ReportStatus = z.infer<typeof reportStatusSchema>;
 
-export const createReportSchema = z.object({
+const fields = {
   title: z.string().trim().min(1, 'Name the report').max(200),
   verdictIds: z
     .array(idSchema)
     .min(1, 'Choose at least one verdict')
     .max(50)
     .refine((ids) => new Set(ids).size === ids.length, { message: 'Each verdict may stand once' }),
-  summary: z.string().trim().max(4000).default('').describe('What the reader needs to know first'),
-});
+  summary: z.string().trim().max(4000).describe('What the reader needs to know first'),
+};
+
+export const createReportSchema = z.object({ ...fields, summary: fields.summary.default('') });
 export type CreateReport = z.infer<typeof createReportSchema>;
 
-export const updateReportSchema = createReportSchema.partial();
+export const updateReportSchema = z.object(fields).partial();
 export type UpdateReport = z.infer<typeof updateReportSchema>;
 
 /** Comment that goes with a step; needed when a report is returned. */
@@ -62,7 +64,7 @@ export const reportSectionSchema = z.object({
 });
 export type ReportSection = z.infer<typeof reportSectionSchema>;
 
-/** Everything an issued report says, frozen when it is issued. */
+/** Everything a report says, frozen from submission on, so that what was reviewed is what is issued. */
 export const reportContentSchema = z.object({
   project: z.object({ id: idSchema, name: z.string(), customer: z.string() }),
   sections: z.array(reportSectionSchema),
@@ -79,7 +81,7 @@ export const reportSchema = z.object({
   summary: z.string(),
   status: reportStatusSchema,
   verdictIds: z.array(idSchema),
-  content: reportContentSchema.describe('Live for a draft, frozen once issued'),
+  content: reportContentSchema.describe('Live for a draft, frozen while in review and once issued'),
   events: z.array(reportEventSchema),
   preparedBy: personRefSchema,
   issuedBy: personRefSchema.nullable(),

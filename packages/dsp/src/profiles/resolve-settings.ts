@@ -4,6 +4,8 @@ import type { WindowName } from '../windows/window-samples.js';
 
 const DEFAULT_MAX_ORDER = 50;
 const HIGHEST_MAX_ORDER = 200;
+/** 200 ms at 1 MHz, the highest nominal frequency that is asked for. */
+const MOST_CYCLES_PER_WINDOW = 200_000;
 const DEFAULT_THD_ORDER = { mains: 40, general: 40, tone: 10 } as const;
 const DEFAULT_WINDOW: Record<AnalysisSettings['profile'], WindowName> = {
   mains: 'hann',
@@ -24,7 +26,7 @@ export function resolveSettings(settings: AnalysisSettings): ResolvedSettings {
   requireInteger('The highest order', maxOrder, 1, HIGHEST_MAX_ORDER);
   requireInteger('The highest order of THD', thdMaxOrder, 1, maxOrder);
   if (settings.cyclesPerWindow !== undefined) {
-    requireInteger('The number of cycles per window', settings.cyclesPerWindow, 2, 1000);
+    requireInteger('The number of cycles per window', settings.cyclesPerWindow, 2, MOST_CYCLES_PER_WINDOW);
   }
   return {
     profile,

@@ -40,6 +40,7 @@ describe('settings of an analysis', () => {
     expect(fields({ nominal: 'other', nominalOtherHz: '' })).toEqual(['nominalOtherHz']);
     expect(fields({ maxOrder: '1' })).toEqual(['maxOrder']);
     expect(fields({ extent: 'part', fromS: '2', toS: '1' })).toEqual(['toS']);
+    expect(fields({ thdMaxOrder: '60' })).toEqual(['thdMaxOrder']);
     expect(fields({ maxOrder: '' })).toBeUndefined();
   });
 });

@@ -33,6 +33,10 @@ export const settingsFormSchema = z
     if (values.nominal === 'other' && !(hz !== undefined && hz >= 0.1 && hz <= 1e6)) {
       issue('nominalOtherHz', 'Give a frequency from 0.1 Hz to 1 MHz');
     }
+    const highest = numberOf(values.maxOrder) ?? 50;
+    if ((numberOf(values.thdMaxOrder) ?? 0) > highest) {
+      issue('thdMaxOrder', `Give at most ${highest}, the highest order listed`);
+    }
     if (values.extent === 'whole') return;
     const from = numberOf(values.fromS) ?? Number.NaN;
     const to = numberOf(values.toS) ?? Number.NaN;
