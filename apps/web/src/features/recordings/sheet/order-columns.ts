@@ -4,7 +4,7 @@ import { isOver, resultWords, type OrderRow } from '../charts/order-rows.js';
 
 type Column = TableColumn<OrderRow>;
 
-function amount(key: keyof OrderRow & string, header: string, unit: string): Column {
+function amount(key: keyof OrderRow, header: string, unit: string): Column {
   const value = (row: OrderRow) => row[key] as number | null;
   return {
     key,

@@ -28,15 +28,14 @@ export function NoteForm({ channel, target, view, orders, pending, error, onAdd,
   const [cause, setCause] = useState('');
   const [tried, setTried] = useState(false);
   const field = useRef<HTMLTextAreaElement>(null);
+  const [filledFrom, setFilledFrom] = useState(target);
+  // A click in a figure while the form is open changes what the note speaks of, and leaves its text.
+  if (target !== filledFrom) {
+    setFilledFrom(target);
+    if (target) setValues(toTargetValues(target, view));
+  }
   useEffect(() => {
-    if (!target) return;
-    setValues((current) => ({
-      ...current,
-      ...toTargetValues(target, current.kind === 'span' ? (target as Span) : view),
-    }));
-    field.current?.focus({ preventScroll: true });
-    // The part in view fills the fields when the form opens; moving it later must not overwrite them.
-    // eslint-disable-next-line react-hooks/exhaustive-deps
+    if (target) field.current?.focus({ preventScroll: true });
   }, [target]);
   const chosen = toTarget(values);
   const problem = 'problem' in chosen ? chosen.problem : undefined;

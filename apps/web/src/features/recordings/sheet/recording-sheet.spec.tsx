@@ -1,0 +1,207 @@
+import {
+  analysisSchema,
+  noteSchema,
+  recordingSchema,
+  type Analysis,
+  type Note,
+  type Recording,
+} from '@overtally/contracts';
+import { ChakraProvider } from '@chakra-ui/react';
+import { QueryClientProvider } from '@tanstack/react-query';
+import { render, screen, waitFor, within } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { describe, expect, it, vi } from 'vitest';
+import { Toaster } from '../../../components/toaster.js';
+import { queryClient } from '../../../lib/query-client.js';
+import { system } from '../../../lib/theme/system.js';
+import { json, mockApi, noContent, page } from '../../../testing/mock-api.js';
+import { sampleAccount, sampleId, sampleLimitSet, sampleProject } from '../../../testing/samples.js';
+import { RecordingSheet } from './recording-sheet.js';
+
+vi.mock('../../../components/plot.js', () => ({
+  Plot: ({ label }: { label: string }) => <div role="figure" aria-label={label} />,
+}));
+
+const moment = '2026-11-26T13:20:00Z';
+const person = { id: sampleId(1), name: 'Mara Lind' };
+const recordingId = sampleId(147);
+const analysisId = sampleId(500);
+
+const sampleRecording = (change: Partial<Recording> = {}): Recording =>
+  recordingSchema.parse({
+    ...{ id: recordingId, projectId: sampleId(10), number: 'R-0147', name: 'Bench dimmer' },
+    ...{ eut: 'DM-4', measuringChain: '', instrument: '', capturedAt: moment, remark: '' },
+    ...{ status: 'ready', progress: 1, problem: null, warnings: [], duplicateOf: null },
+    file: { name: 'dimmer.csv', size: 1000, sha256: '9f3c1ad0'.padEnd(64, '0') },
+    ...{ format: 'csv', metadata: {}, import: {}, sampleRateHz: 10_000, sampleCount: 20_000, durationS: 2 },
+    channels: [{ index: 0, name: 'i', quantity: 'current', unit: 'A', gain: 1, offset: 0 }],
+    ...{ latestAnalysisId: analysisId, summaries: [], uploadedBy: person, createdAt: moment },
+    ...change,
+  });
+
+const harmonic = (order: number, rms: number) => ({
+  ...{ order, frequencyHz: 50 * order, rms, percentOfFundamental: 50 * rms, phaseDeg: 0 },
+  ...{ phaseZeroCrossingDeg: 0, groupRms: rms, subgroupRms: rms, smoothedMeanRms: rms, smoothedMaxRms: rms },
+});
+
+const sampleAnalysis = (change: Partial<Analysis> = {}): Analysis =>
+  analysisSchema.parse({
+    ...{ id: analysisId, recordingId, projectId: sampleId(10), status: 'done', progress: 1, problem: null },
+    ...{
+      engineVersion: '0.1.0',
+      settings: { profile: 'mains', nominalFrequencyHz: 50 },
+      supersededById: null,
+    },
+    channels: [
+      {
+        ...{ index: 0, name: 'i', quantity: 'current', unit: 'A', mean: 0, rms: 3.2, peak: 6 },
+        ...{ crestFactor: 2, formFactor: 1.5, thdFPercent: 120, thdRPercent: 77, thdMaxOrder: 40 },
+        fundamental: { frequencyHz: 50, rms: 2, phaseDeg: 0, frequencyUncertaintyHz: 0.001 },
+        ...{ thdPlusNPercent: null, sinadDb: null, snrDb: null, sfdrDb: null, enobBits: null },
+        harmonics: [harmonic(1, 2), harmonic(3, 2.4)],
+        interharmonics: [],
+        windows: { cycles: 10, count: 9, samplesPerWindow: 2000 },
+        flags: [{ code: 'clipped', severity: 'error', message: 'The waveform stays flat at its limit.' }],
+      },
+    ],
+    ...{ power: [], startedBy: person, createdAt: moment, finishedAt: moment },
+    ...change,
+  });
+
+const sampleNote = (number: number, change: Partial<Note> = {}): Note =>
+  noteSchema.parse({
+    ...{ id: sampleId(number), analysisId, channel: 0, target: { kind: 'order', order: 3 } },
+    ...{ text: 'Follows the firing angle', cause: '', author: person, createdAt: moment, updatedAt: moment },
+    ...change,
+  });
+
+const waveform = {
+  ...{ channel: 0, unit: 'A', kind: 'samples', fromS: 0, toS: 1, startS: 0, stepS: 0.5 },
+  ...{ values: [0, 1], minimum: [], maximum: [] },
+};
+
+const answers = (analysis = sampleAnalysis(), notes: Note[] = []) => ({
+  [`GET /recordings/${recordingId}/analyses`]: page([analysis]),
+  [`GET /recordings/${recordingId}/waveform`]: json(waveform),
+  [`GET /analyses/${analysisId}`]: json(analysis),
+  [`GET /analyses/${analysisId}/notes`]: page(notes),
+});
+
+function show(recording: Recording, role: 'manager' | 'guest' = 'manager') {
+  render(
+    <ChakraProvider value={system}>
+      <QueryClientProvider client={queryClient}>
+        <RecordingSheet
+          project={sampleProject({ role, comparisonLimitSetId: sampleId(30) })}
+          account={sampleAccount()}
+          recording={recording}
+          limitSets={[sampleLimitSet()]}
+          place={{ analysisId: null, channel: null, onAnalysis: () => undefined, onChannel: () => undefined }}
+          slots={{}}
+          onDeleted={() => undefined}
+        />
+        <Toaster />
+      </QueryClientProvider>
+    </ChakraProvider>,
+  );
+  return userEvent.setup();
+}
+
+describe('sheet of a recording', () => {
+  it('shows the comparison in words, flags with their severity, and figures that apply', async () => {
+    mockApi(answers());
+    show(sampleRecording());
+    expect(await screen.findByText('over at 3')).toBeTruthy();
+    expect(screen.getByText('Waveform clipped')).toBeTruthy();
+    expect(screen.getByText('error')).toBeTruthy();
+    expect(screen.getByText('Crest factor')).toBeTruthy();
+    expect(screen.queryByText('SINAD')).toBeNull();
+  });
+
+  it('says what failed, where, and what to do', () => {
+    mockApi({ [`GET /recordings/${recordingId}/analyses`]: page([]) });
+    const problem = { code: 'bad-cell', message: '“n/a” is no number', cure: 'Leave the row out.', line: 12 };
+    show(sampleRecording({ status: 'failed', problem, channels: [], latestAnalysisId: null }));
+    const alert = screen.getByRole('alert');
+    expect(within(alert).getByText('This file was not read')).toBeTruthy();
+    expect(within(alert).getByText('line 12')).toBeTruthy();
+    expect(within(alert).getByText('Leave the row out.')).toBeTruthy();
+    expect(within(alert).getByRole('button', { name: 'Read again with other settings' })).toBeTruthy();
+  });
+
+  it('shows how far an analysis is and calls it off', async () => {
+    const running = sampleAnalysis({ status: 'running', progress: 0.4, channels: [] });
+    const seen = mockApi({
+      ...answers(running),
+      [`POST /analyses/${analysisId}/cancel`]: json(running, 202),
+      [`GET /recordings/${recordingId}`]: json(sampleRecording()),
+    });
+    const user = show(sampleRecording({ status: 'analysing', progress: 0.4, latestAnalysisId: null }));
+    expect(screen.getByText('40%')).toBeTruthy();
+    await user.click(await screen.findByRole('button', { name: 'Cancel' }));
+    await waitFor(() => expect(seen.map(({ method }) => method)).toContain('POST'));
+  });
+
+  it('lets a guest read and change nothing', async () => {
+    mockApi(answers(sampleAnalysis(), [sampleNote(1)]));
+    const user = show(sampleRecording(), 'guest');
+    expect(await screen.findByText('Follows the firing angle')).toBeTruthy();
+    for (const name of ['Edit note a', 'Add a note', 'Analyse again', 'Note on this part']) {
+      expect(screen.queryByRole('button', { name })).toBeNull();
+    }
+    await user.click(screen.getByRole('button', { name: 'More' }));
+    expect(await screen.findByRole('menuitem', { name: /Download the source/ })).toBeTruthy();
+    expect(screen.queryByRole('menuitem', { name: 'Delete' })).toBeNull();
+  });
+});
+
+describe('notes in the margin', () => {
+  it('are lettered in the order of writing and say what they speak of', async () => {
+    const span = { kind: 'span', fromS: 0.5, toS: 0.75 } as const;
+    mockApi(answers(sampleAnalysis(), [sampleNote(1), sampleNote(2, { target: span, text: 'A dip' })]));
+    show(sampleRecording());
+    expect(await screen.findByText(/Order 3, 104/)).toBeTruthy();
+    expect(screen.getByText('a')).toBeTruthy();
+    expect(screen.getByText('b')).toBeTruthy();
+  });
+
+  it('are written for an order chosen by keyboard', async () => {
+    const seen = mockApi({
+      ...answers(),
+      [`POST /analyses/${analysisId}/notes`]: json(sampleNote(1), 201),
+    });
+    const user = show(sampleRecording());
+    await user.click(await screen.findByRole('button', { name: 'Add a note' }));
+    const form = within(screen.getByRole('form', { name: 'New note' }));
+    await user.click(form.getByRole('button', { name: 'Add note' }));
+    expect(form.getByText('Choose an order')).toBeTruthy();
+    await user.selectOptions(form.getByLabelText('Order'), '3');
+    await user.type(form.getByLabelText('Note'), 'Third');
+    await user.click(form.getByRole('button', { name: 'Add note' }));
+    await waitFor(() =>
+      expect(seen.find(({ method }) => method === 'POST')?.body).toEqual({
+        channel: 0,
+        target: { kind: 'order', order: 3 },
+        text: 'Third',
+        cause: '',
+      }),
+    );
+  });
+
+  it('are deleted, and written back by undo', async () => {
+    const seen = mockApi({
+      ...answers(sampleAnalysis(), [sampleNote(1)]),
+      [`DELETE /notes/${sampleId(1)}`]: noContent(),
+      [`POST /analyses/${analysisId}/notes`]: json(sampleNote(2), 201),
+    });
+    const user = show(sampleRecording());
+    await user.click(await screen.findByRole('button', { name: 'Delete note a' }));
+    await user.click(await screen.findByRole('button', { name: 'Undo' }));
+    await waitFor(() =>
+      expect(seen.find(({ method }) => method === 'POST')?.body).toMatchObject({
+        target: { kind: 'order', order: 3 },
+        text: 'Follows the firing angle',
+      }),
+    );
+  });
+});
