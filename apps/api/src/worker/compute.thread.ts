@@ -4,8 +4,11 @@ import type { ComputeContext } from '../jobs/compute-task.js';
 import type { ComputeEnvironment, ComputeRequest } from '../jobs/compute-request.js';
 import { readTask, type ReadTaskInput } from '../recordings/reading/read-task.js';
 import { openStorage } from '../storage/storage-location.js';
+import { lowerThreadPriority } from './lower-priority.js';
 
 const progressIntervalMs = 100;
+
+lowerThreadPriority();
 
 /** Entry point of a compute thread: runs one task at a time. */
 export default async function compute(request: ComputeRequest): Promise<unknown> {
