@@ -47,11 +47,13 @@ export function Component() {
       slots={{
         actions: (shown) => (
           <>
-            <Button asChild>
-              <RouterLink to={paths.overlay(project.id, [`${recordingId}:${shown.channel}`])}>
-                Add to overlay
-              </RouterLink>
-            </Button>
+            {shown.analysis ? (
+              <Button asChild>
+                <RouterLink to={paths.overlay(project.id, [`${recordingId}:${shown.channel}`])}>
+                  Add to overlay
+                </RouterLink>
+              </Button>
+            ) : null}
             {shown.analysis && mayJudge ? (
               <JudgeButton {...shown} analysis={shown.analysis} {...named} />
             ) : null}

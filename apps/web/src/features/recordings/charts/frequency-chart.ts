@@ -11,6 +11,7 @@ import type { Palette } from '../../../lib/theme/palette.js';
 import type { LetteredNote } from './note-letters.js';
 import { letterTrace } from './order-chart.js';
 import { isOver, type OrderRow } from './order-rows.js';
+import { digitSeparators } from './waveform-chart.js';
 
 export interface FrequencyChartInput {
   spectrum: Spectrum;
@@ -24,7 +25,7 @@ export interface FrequencyChartInput {
   heightPx: number;
 }
 
-const margin = { l: 64, r: 12, t: 8, b: 40 };
+const margin = { l: 64, r: 12, t: 8, b: 30 };
 
 /** Unit of the frequency axis, with the factor from Hz. */
 export const frequencyUnit = (highestHz: number) =>
@@ -62,9 +63,10 @@ export function frequencyChart(
     ],
     layout: {
       margin,
+      separators: digitSeparators,
       xaxis: {
         range: [0, endHz * factor],
-        title: { text: `Frequency in ${hertz}` },
+        ticksuffix: ` ${hertz}`,
         exponentformat: 'none',
         separatethousands: false,
       },

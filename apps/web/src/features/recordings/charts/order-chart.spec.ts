@@ -77,9 +77,9 @@ describe('bars by order', () => {
     expect(barsOf(orderChart(input(), light))).toMatchObject({ x: [1, 2, 3, 15], y: [2, null, 1.19, 0.17] });
   });
 
-  it('tell the fundamental, orders within and orders over apart', () => {
+  it('tell the fundamental, orders disregarded, within and over apart', () => {
     expect(barsOf(orderChart(input(), light))?.marker).toMatchObject({
-      color: [light.ruleStrong, light.ink, light.ink, light.over],
+      color: [light.ruleStrong, light.inkSoft, light.ink, light.over],
     });
   });
 

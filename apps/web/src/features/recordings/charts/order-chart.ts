@@ -79,6 +79,7 @@ const labelledOrders = (last: number, step: number) =>
 
 function barColor(row: OrderRow, palette: Palette): string {
   if (row.order === 1) return palette.ruleStrong;
+  if (row.result === 'disregarded') return palette.inkSoft;
   return isOver(row) ? palette.over : palette.ink;
 }
 

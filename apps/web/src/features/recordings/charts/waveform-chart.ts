@@ -21,6 +21,9 @@ export function waveformPoints(waveform: Waveform, factor: number): { x: number[
   };
 }
 
+/** Decimal point, and a narrow no-break space between groups of digits (ISO 80000-1, 7.3.1). */
+export const digitSeparators = '.\u202f';
+
 export interface WaveformChartInput {
   waveform: Waveform;
   /** Part of the record that the axis shows. */
@@ -56,6 +59,7 @@ export function waveformChart(
       ...letters(spans, span, factor, top - (top - bottom) * 0.08, palette),
     ],
     layout: {
+      separators: digitSeparators,
       margin: { l: 64, r: 12, t: 8, b: 30 },
       xaxis: {
         range: [span.fromS * factor, span.toS * factor],

@@ -32,13 +32,14 @@ function waveform(channel: ChannelAnalysis): Entry[] {
     ...{ name, value, unit: '', basis },
     shown: formatFixed(value, 3),
   });
+  const frequency = fundamentalWords(channel);
   return [
     {
       name: 'Fundamental frequency',
-      shown: fundamentalWords(channel),
+      shown: frequency,
       value: fundamental?.frequencyHz ?? null,
       unit: 'Hz',
-      basis: 'k = 2, from the residual of the fit',
+      basis: frequency.includes('±') ? 'k = 2, from the residual of the fit' : 'from the fit over the record',
     },
     amount(`Fundamental ${fundamentalSymbol(channel.quantity)}`, fundamental?.rms ?? null, 'rms of order 1'),
     amount('rms', channel.rms, 'all of the record, DC included'),

@@ -54,7 +54,11 @@ export function SheetTitleBlock({ recording, channel, set, comparison }: SheetTi
 }
 
 function comparisonCell(set: LimitSet, { rows, words, tone }: ChannelComparison): TitleCell {
-  const shares = rows.map(({ order, sharePercent }) => ({ order, sharePercent }));
+  // What the standard disregards is not judged, however much of its limit it uses.
+  const shares = rows.map(({ order, sharePercent, result }) => ({
+    order,
+    sharePercent: result === 'disregarded' ? null : sharePercent,
+  }));
   const judged = shares.some(({ sharePercent }) => sharePercent !== null);
   return {
     caption: set.title,

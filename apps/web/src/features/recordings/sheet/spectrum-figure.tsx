@@ -9,7 +9,7 @@ import type { Scale } from '../../../components/charts/amplitude-axis.js';
 import { usePalette } from '../../../lib/theme/use-palette.js';
 import type { LetteredNote } from '../charts/note-letters.js';
 import { orderChart } from '../charts/order-chart.js';
-import type { ChannelComparison } from '../charts/order-rows.js';
+import type { ChannelComparison, OrderRow } from '../charts/order-rows.js';
 import { fundamentalSymbol, quantityTitle } from '../charts/words.js';
 import { FrequencyView } from './frequency-view.js';
 import type { NoteTarget } from './note-target.js';
@@ -91,7 +91,7 @@ export function SpectrumFigure(props: SpectrumFigureProps) {
       {abscissa === 'order' ? (
         <>
           <OrderView {...props} scale={scale} relative={relative} title={title} />
-          {props.set ? <LimitSource set={props.set} /> : null}
+          {props.set ? <LimitSource set={props.set} rows={rows} /> : null}
         </>
       ) : (
         <FrequencyView {...props} scale={scale} relative={relative} title={title} height={height} />
@@ -100,10 +100,14 @@ export function SpectrumFigure(props: SpectrumFigureProps) {
   );
 }
 
-function LimitSource({ set: { title, edition } }: { set: LimitSet }) {
+function LimitSource({ set: { title, edition }, rows }: { set: LimitSet; rows: readonly OrderRow[] }) {
+  const spared = rows.filter((row) => row.result === 'disregarded' && (row.sharePercent ?? 0) > 100).length;
   return (
     <Text fontSize="xs" color="inkSoft">
       Limits: {[title, edition].filter(Boolean).join(', ')}. Check them against the current edition.
+      {spared > 0
+        ? ` Grey bars over the line, ${spared} of them, are too small to be judged; see the table.`
+        : ''}
     </Text>
   );
 }
