@@ -87,6 +87,10 @@ describe('a technician', () => {
     await page.getByRole('link', { name: capture.name, exact: true }).click();
     await page.getByRole('row').filter({ hasText: 'THD, of the fundamental' }).waitFor();
     expect(Math.abs((await shownThd(page)) - capture.thdFPercent)).toBeLessThanOrEqual(capture.tolerance);
+    await page.goBack();
+    await page.getByRole('button', { name: 'Remove this copy' }).click();
+    await page.getByText(/removed$/).waitFor();
+    await page.getByText('3 recordings').waitFor();
   });
 
   it('is asked for what a file does not say, and told what is wrong with one that cannot be read', async () => {

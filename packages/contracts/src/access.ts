@@ -31,7 +31,7 @@ export const permissions = {
   'recording.read': { allow: everyMember, administratorToo: true },
   'recording.upload': { allow: bench },
   'recording.update': { allow: bench },
-  'recording.delete': { allow: analysis },
+  'recording.delete': { allow: bench },
   'analysis.read': { allow: everyMember, administratorToo: true },
   'analysis.run': { allow: bench },
   'note.read': { allow: everyMember, administratorToo: true },

@@ -3,11 +3,13 @@ import {
   limitSetSchema,
   memberSchema,
   projectSchema,
+  recordingSchema,
   userSchema,
   type Account,
   type LimitSet,
   type Member,
   type Project,
+  type Recording,
   type User,
 } from '@overtally/contracts';
 
@@ -76,5 +78,18 @@ export const sampleLimitSet = (change: Partial<LimitSet> = {}): LimitSet =>
     confidence: 'high',
     evidence: '',
     notes: [],
+    ...change,
+  });
+
+export const sampleRecording = (change: Partial<Recording> = {}): Recording =>
+  recordingSchema.parse({
+    ...{ id: sampleId(147), projectId: sampleId(10), number: 'R-0147', name: 'Bench dimmer' },
+    ...{ eut: 'DM-4', measuringChain: '', instrument: '', capturedAt: moment, remark: '' },
+    ...{ status: 'ready', progress: 1, problem: null, warnings: [], duplicateOf: null },
+    file: { name: 'dimmer.csv', size: 1000, sha256: '9f3c1ad0'.padEnd(64, '0') },
+    ...{ format: 'csv', metadata: {}, import: {}, sampleRateHz: 10_000, sampleCount: 20_000, durationS: 2 },
+    channels: [{ index: 0, name: 'i', quantity: 'current', unit: 'A', gain: 1, offset: 0 }],
+    ...{ latestAnalysisId: sampleId(500), summaries: [], createdAt: moment },
+    uploadedBy: { id: sampleId(1), name: 'Mara Lind' },
     ...change,
   });

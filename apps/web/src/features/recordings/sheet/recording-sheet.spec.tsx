@@ -1,11 +1,4 @@
-import {
-  analysisSchema,
-  noteSchema,
-  recordingSchema,
-  type Analysis,
-  type Note,
-  type Recording,
-} from '@overtally/contracts';
+import { analysisSchema, noteSchema, type Analysis, type Note, type Recording } from '@overtally/contracts';
 import { ChakraProvider } from '@chakra-ui/react';
 import { QueryClientProvider } from '@tanstack/react-query';
 import { render, screen, waitFor, within } from '@testing-library/react';
@@ -15,7 +8,13 @@ import { Toaster } from '../../../components/toaster.js';
 import { queryClient } from '../../../lib/query-client.js';
 import { system } from '../../../lib/theme/system.js';
 import { json, mockApi, noContent, page } from '../../../testing/mock-api.js';
-import { sampleAccount, sampleId, sampleLimitSet, sampleProject } from '../../../testing/samples.js';
+import {
+  sampleAccount,
+  sampleId,
+  sampleLimitSet,
+  sampleProject,
+  sampleRecording,
+} from '../../../testing/samples.js';
 import { RecordingSheet } from './recording-sheet.js';
 
 vi.mock('../../../components/plot.js', () => ({
@@ -26,18 +25,6 @@ const moment = '2026-11-26T13:20:00Z';
 const person = { id: sampleId(1), name: 'Mara Lind' };
 const recordingId = sampleId(147);
 const analysisId = sampleId(500);
-
-const sampleRecording = (change: Partial<Recording> = {}): Recording =>
-  recordingSchema.parse({
-    ...{ id: recordingId, projectId: sampleId(10), number: 'R-0147', name: 'Bench dimmer' },
-    ...{ eut: 'DM-4', measuringChain: '', instrument: '', capturedAt: moment, remark: '' },
-    ...{ status: 'ready', progress: 1, problem: null, warnings: [], duplicateOf: null },
-    file: { name: 'dimmer.csv', size: 1000, sha256: '9f3c1ad0'.padEnd(64, '0') },
-    ...{ format: 'csv', metadata: {}, import: {}, sampleRateHz: 10_000, sampleCount: 20_000, durationS: 2 },
-    channels: [{ index: 0, name: 'i', quantity: 'current', unit: 'A', gain: 1, offset: 0 }],
-    ...{ latestAnalysisId: analysisId, summaries: [], uploadedBy: person, createdAt: moment },
-    ...change,
-  });
 
 const harmonic = (order: number, rms: number) => ({
   ...{ order, frequencyHz: 50 * order, rms, percentOfFundamental: 50 * rms, phaseDeg: 0 },
