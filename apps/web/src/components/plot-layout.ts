@@ -34,6 +34,15 @@ function axis(palette: Palette): Record<string, unknown> {
   };
 }
 
+/** `overrides` over an axis; the font of its title stays. */
+function over(
+  base: Record<string, unknown>,
+  overrides: Record<string, unknown> = {},
+): Record<string, unknown> {
+  const title = { ...(base.title as object), ...(overrides.title as object | undefined) };
+  return { ...base, ...overrides, title };
+}
+
 /** Layout of a chart on a sheet: Plex, hairline grid, no frame; `overrides` are laid over it axis by axis. */
 export function plotLayout(palette: Palette, overrides: PlotLayout = {}): PlotLayout {
   const base = axis(palette);
@@ -53,7 +62,7 @@ export function plotLayout(palette: Palette, overrides: PlotLayout = {}): PlotLa
       font: { family: font, size: 12, color: palette.ink },
     },
     ...overrides,
-    xaxis: { ...base, showgrid: false, showline: true, ...overrides.xaxis },
-    yaxis: { ...base, ...overrides.yaxis },
+    xaxis: over({ ...base, showgrid: false, showline: true }, overrides.xaxis),
+    yaxis: over(base, overrides.yaxis),
   };
 }

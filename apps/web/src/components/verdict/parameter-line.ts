@@ -10,5 +10,6 @@ export function parameterLine(parameters: VerdictParameters): string {
     const { label, unit } = parameterWords[key];
     return `${label} ${formatSi(parameters[key], unit, { trim: true })}`;
   });
-  return `${parts.join(', ')}.`;
+  const [first = '', ...rest] = parts;
+  return `${[first, ...rest.map((part) => part.charAt(0).toLowerCase() + part.slice(1))].join(', ')}.`;
 }

@@ -34,7 +34,7 @@ export function VerdictTables({ subject, orders, totals, unit, fileName, maxHeig
         <Box mt="3">
           <TableTwin
             caption={`Totals of ${subject}`}
-            columns={totalColumns()}
+            columns={totalColumns(totals)}
             rows={totals}
             rowKey={(row) => row.name}
             fileName={`${fileName}-totals`}

@@ -18,7 +18,7 @@ export const partWords: Record<OrderVerdict['result'], string> = {
   fail: 'over',
   'conditional-pass': 'within, uncertain',
   'conditional-fail': 'over, uncertain',
-  'not-applicable': 'no limit',
+  'not-applicable': 'not applied',
   'not-decidable': 'not decidable',
   disregarded: 'too small to count',
 };

@@ -15,7 +15,7 @@ export function Component() {
     <>
       <PageHeader
         title="New limit set"
-        subtitle={`Only ${project.name} can judge by it`}
+        subtitle="For this project alone"
         crumb="New limit set"
         documentTitle={`New limit set, ${project.name}`}
       />

@@ -11,6 +11,7 @@ import { ReportActions } from '../../../features/reports/components/report-actio
 import { ReportForm } from '../../../features/reports/components/report-form.js';
 import { ReportSheet } from '../../../features/reports/components/report-sheet.js';
 import { useReportChanges } from '../../../features/reports/hooks/use-report-changes.js';
+import { statusWords } from '../../../features/reports/report-words.js';
 import { paths } from '../../paths.js';
 import { useProjectId } from '../../use-project-id.js';
 import { useJudged } from './use-judged.js';
@@ -38,7 +39,7 @@ function ReportPage({ report }: { report: Report }) {
         subtitle={
           report.number ? `${report.number}, revision ${report.revision}` : `Revision ${report.revision}`
         }
-        crumb={report.number ?? 'Draft'}
+        crumb={report.number ?? statusWords[report.status]}
         documentTitle={`${report.number ?? report.title}, ${project.name}`}
         actions={
           isEditing ? undefined : (

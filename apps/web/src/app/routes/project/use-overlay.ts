@@ -51,11 +51,18 @@ export function useOverlayLink() {
 
 /** The recordings of the entries, and their spectra where the view needs them. */
 export function useOverlayData(entries: readonly OverlayEntry[], by: OverlayView['by']) {
-  const recordings = useQueries({ queries: entries.map(({ recordingId }) => recordingQuery(recordingId)) });
-  const found = entries.map((entry, index) => {
-    const query = recordings[index];
+  const ids = [...new Set(entries.map(({ recordingId }) => recordingId))];
+  const recordings = useQueries({ queries: ids.map(recordingQuery) });
+  const resolved = entries.map((entry) => {
+    const query = recordings[ids.indexOf(entry.recordingId)];
     const recording = query?.data ?? null;
-    return { entry, query, recording, series: recording && seriesOf(entry, recording) };
+    return { entry, query, recording, own: recording && seriesOf(entry, recording) };
+  });
+  const found = resolved.map(({ own, ...rest }, index) => {
+    const isRepeated = resolved
+      .slice(0, index)
+      .some((earlier) => earlier.own && earlier.own.key === own?.key);
+    return { ...rest, isRepeated, series: isRepeated ? null : own };
   });
   const series = found.flatMap((one) => (one.series ? [one.series] : []));
   const spectra = useQueries({
@@ -65,7 +72,7 @@ export function useOverlayData(entries: readonly OverlayEntry[], by: OverlayView
     })),
   });
   const spectrumAt = (key: string | undefined) => spectra[series.findIndex((one) => one.key === key)];
-  const items = found.map(({ entry, query, recording, series: one }): LegendItem => {
+  const items = found.map(({ entry, query, recording, isRepeated, series: one }): LegendItem => {
     const spectrum = by === 'frequency' ? spectrumAt(one?.key) : undefined;
     const failed = query?.isError ? query : spectrum?.isError ? spectrum : undefined;
     return {

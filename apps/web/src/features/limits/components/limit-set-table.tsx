@@ -19,14 +19,16 @@ export function LimitSetTable({ label, sets, setTo }: LimitSetTableProps) {
         <Table.Header>
           <Table.Row>
             <Table.ColumnHeader scope="col">Limit set</Table.ColumnHeader>
-            <Table.ColumnHeader scope="col">Quantity</Table.ColumnHeader>
-            <Table.ColumnHeader scope="col" hideBelow="md">
+            <Table.ColumnHeader scope="col" w="13%">
+              Quantity
+            </Table.ColumnHeader>
+            <Table.ColumnHeader scope="col" w="19%" hideBelow="md">
               Limits in
             </Table.ColumnHeader>
-            <Table.ColumnHeader scope="col" hideBelow="sm">
+            <Table.ColumnHeader scope="col" w="14%" hideBelow="sm">
               Orders
             </Table.ColumnHeader>
-            <Table.ColumnHeader scope="col" hideBelow="lg">
+            <Table.ColumnHeader scope="col" w="18%" hideBelow="lg">
               Confidence
             </Table.ColumnHeader>
           </Table.Row>

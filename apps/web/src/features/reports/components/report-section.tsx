@@ -23,7 +23,7 @@ export function ReportSection({ section, place }: { section: Content; place: num
   const { verdict, recording, analysis, notes } = section;
   const set = limitSetName(verdict.limitSet);
   return (
-    <Section title={`${place}. ${recording.number} ${recording.name}: ${verdict.channelName}`} mt="6">
+    <Section title={`${place}. ${recording.number} ${recording.name}, channel ${verdict.channelName}`} mt="3">
       <TitleBlock label={`Section ${place}`} cells={titleCells(section)} />
       <Flex columnGap="6" rowGap="3" wrap="wrap" align="flex-start" justify="space-between" mb="2">
         <Box flex="1 1 320px" minW="0">
@@ -72,11 +72,11 @@ function titleCells({ recording, analysis: { channel } }: Content): TitleCell[] 
       caption: 'Fundamental',
       value: formatWithUncertainty(fundamental?.frequencyHz, fundamental?.frequencyUncertaintyHz, 'Hz'),
       mono: true,
-      grow: 1.5,
+      grow: 2.5,
     },
     { caption: 'rms', value: formatSi(channel.rms, channel.unit), mono: true },
     {
-      caption: `THD to order ${channel.thdMaxOrder}`,
+      caption: `THD, to ${channel.thdMaxOrder}`,
       value: formatPercent(channel.thdFPercent, 2),
       mono: true,
     },

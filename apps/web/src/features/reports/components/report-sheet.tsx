@@ -39,7 +39,7 @@ function titleCells(report: Report): TitleCell[] {
   const { content } = report;
   const tone = verdictTone(content.result);
   return [
-    { caption: 'Number', value: report.number ?? 'given when issued', mono: report.number !== null },
+    { caption: 'Number', value: report.number ?? 'none yet', mono: report.number !== null },
     { caption: 'Revision', value: String(report.revision), mono: true },
     { caption: 'Customer', value: content.project.customer || 'not stated', grow: 1.5 },
     { caption: 'Project', value: content.project.name, grow: 2 },

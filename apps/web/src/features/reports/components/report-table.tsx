@@ -18,7 +18,9 @@ export function ReportTable({ reports, reportTo }: ReportTableProps) {
       <Table.Root size="md" aria-label="Reports">
         <Table.Header>
           <Table.Row>
-            <Table.ColumnHeader scope="col">No.</Table.ColumnHeader>
+            <Table.ColumnHeader scope="col" w="24">
+              No.
+            </Table.ColumnHeader>
             <Table.ColumnHeader scope="col">Report</Table.ColumnHeader>
             <Table.ColumnHeader scope="col">State</Table.ColumnHeader>
             <Table.ColumnHeader scope="col">Result</Table.ColumnHeader>
@@ -43,7 +45,7 @@ export function ReportTable({ reports, reportTo }: ReportTableProps) {
 function Row({ report, to }: { report: ReportListItem; to: string }) {
   return (
     <Table.Row>
-      <Table.Cell fontFamily="mono" whiteSpace="nowrap" verticalAlign="top">
+      <Table.Cell whiteSpace="nowrap" fontFamily={report.number ? 'mono' : undefined}>
         {report.number ?? <Text color="inkSoft">none yet</Text>}
       </Table.Cell>
       <Table.Cell>

@@ -1,3 +1,4 @@
+import { Text } from '@chakra-ui/react';
 import type { OrderVerdict, TotalVerdict } from '@overtally/contracts';
 import { formatPercent, formatSi, none } from '../../lib/format.js';
 import type { TableColumn } from '../table-column.js';
@@ -5,6 +6,24 @@ import { partWords, verdictTone } from './verdict-words.js';
 
 const shareTone = ({ result }: Pick<OrderVerdict, 'result'>) =>
   result === 'fail' || result === 'conditional-fail' ? ('over' as const) : undefined;
+
+/** Why a result is what it is; left out where no row needs a reason. */
+function reasonColumn<Row extends { reason: string | null }>(rows: readonly Row[]): TableColumn<Row>[] {
+  if (rows.every(({ reason }) => reason === null)) return [];
+  return [
+    {
+      key: 'reason',
+      header: 'Reason',
+      fileHeader: 'Reason',
+      value: (row) => row.reason,
+      show: ({ reason }) => (
+        <Text as="span" display="block" fontSize="xs" color="inkSoft" whiteSpace="normal" minW="44" maxW="md">
+          {reason}
+        </Text>
+      ),
+    },
+  ];
+}
 
 /** Columns of a verdict order by order; amounts in `unit`. Uncertainties are shown where any is known. */
 export function orderColumns(orders: readonly OrderVerdict[], unit: string): TableColumn<OrderVerdict>[] {
@@ -43,20 +62,20 @@ export function orderColumns(orders: readonly OrderVerdict[], unit: string): Tab
       value: (row) => partWords[row.result],
       tone: (row) => verdictTone(row.result) ?? 'inkSoft',
     },
-    {
-      key: 'reason',
-      header: 'Reason',
-      fileHeader: 'Reason',
-      value: (row) => row.reason,
-      show: (row) => row.reason,
-    },
+    ...reasonColumn(orders),
   ];
 }
 
 /** Columns of the totals (THD, THC and their like); each has its own unit. */
-export function totalColumns(): TableColumn<TotalVerdict>[] {
+export function totalColumns(totals: readonly TotalVerdict[]): TableColumn<TotalVerdict>[] {
   return [
-    { key: 'name', header: 'Total', fileHeader: 'Total', value: (row) => row.name },
+    {
+      key: 'name',
+      header: 'Total',
+      fileHeader: 'Total',
+      value: ({ name, unit }) => (unit ? `${name} (${unit})` : name),
+      show: (row) => row.name,
+    },
     {
       key: 'value',
       header: 'Value',
@@ -73,7 +92,6 @@ export function totalColumns(): TableColumn<TotalVerdict>[] {
       value: (row) => row.limit,
       show: (row) => (row.limit === null ? none : formatSi(row.limit, row.unit, { trim: true })),
     },
-    { key: 'unit', header: 'Unit', fileHeader: 'Unit', value: (row) => row.unit },
     {
       key: 'share',
       header: 'Share',
@@ -90,12 +108,6 @@ export function totalColumns(): TableColumn<TotalVerdict>[] {
       value: (row) => partWords[row.result],
       tone: (row) => verdictTone(row.result) ?? 'inkSoft',
     },
-    {
-      key: 'reason',
-      header: 'Reason',
-      fileHeader: 'Reason',
-      value: (row) => row.reason,
-      show: (row) => row.reason,
-    },
+    ...reasonColumn(totals),
   ];
 }

@@ -1,0 +1,72 @@
+import { ChakraProvider } from '@chakra-ui/react';
+import { QueryClientProvider } from '@tanstack/react-query';
+import { render, screen, waitFor, within } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { findPublishedLimitSet } from '@overtally/limits';
+import { describe, expect, it } from 'vitest';
+import { queryClient } from '../../../lib/query-client.js';
+import { system } from '../../../lib/theme/system.js';
+import { json, mockApi, page } from '../../../testing/mock-api.js';
+import { sampleChannel, sampleVerdict } from '../../../testing/sample-verdicts.js';
+import { sampleId, sampleLimitSet } from '../../../testing/samples.js';
+import { JudgeDialog } from './judge-dialog.js';
+
+const analysisId = sampleId(500);
+const sets = [sampleLimitSet(), findPublishedLimitSet('iec61000-3-2.classD')!];
+
+function open() {
+  const seen = mockApi({
+    'GET /limit-sets': page(sets),
+    [`POST /analyses/${analysisId}/verdicts`]: json(sampleVerdict(), 201),
+  });
+  render(
+    <ChakraProvider value={system}>
+      <QueryClientProvider client={queryClient}>
+        <JudgeDialog
+          open
+          onClose={() => undefined}
+          projectId={sampleId(10)}
+          analysisId={analysisId}
+          channels={[sampleChannel()]}
+          subject="R-0147"
+        />
+      </QueryClientProvider>
+    </ChakraProvider>,
+  );
+  return { seen, user: userEvent.setup() };
+}
+
+describe('judging a channel', () => {
+  it('shows where it leads before anything is stored: 2.4 A against 2.3 A fails', async () => {
+    const { seen, user } = open();
+    expect(await screen.findByText('Preview, not stored')).toBeTruthy();
+    expect(screen.getByRole('status').textContent).toBe('Fail. Over at 3.');
+    await user.click(screen.getByRole('button', { name: 'Store the verdict' }));
+    expect(await screen.findByRole('dialog', { name: 'Verdict on R-0147' })).toBeTruthy();
+    expect(seen.at(-1)?.body).toEqual({
+      ...{ limitSetId: sampleId(30), channel: 0, parameters: {}, decisionRule: 'simple-acceptance' },
+    });
+  });
+
+  it('asks for what the set and the rule need, with units, before it can be stored', async () => {
+    const { seen, user } = open();
+    await user.selectOptions(await screen.findByLabelText('Limit set'), 'iec61000-3-2.classD');
+    await user.selectOptions(screen.getByLabelText('Decision rule'), 'guarded-acceptance');
+    const store = screen.getByRole<HTMLButtonElement>('button', { name: 'Store the verdict' });
+    expect(store.disabled).toBe(true);
+    const dialog = within(screen.getByRole('dialog'));
+    await user.type(dialog.getByLabelText('Active power in W'), '-5');
+    expect(await dialog.findByText('Must be above zero')).toBeTruthy();
+    await user.clear(dialog.getByLabelText('Active power in W'));
+    await user.type(dialog.getByLabelText('Active power in W'), '500');
+    await user.type(dialog.getByLabelText(/Expanded uncertainty/), '2,5');
+    await waitFor(() => expect(store.disabled).toBe(false));
+    await user.click(store);
+    await waitFor(() =>
+      expect(seen.at(-1)?.body).toMatchObject({
+        parameters: { powerW: 500, expandedUncertaintyPercent: 2.5 },
+        decisionRule: 'guarded-acceptance',
+      }),
+    );
+  });
+});

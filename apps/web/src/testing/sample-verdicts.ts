@@ -1,0 +1,82 @@
+import {
+  channelAnalysisSchema,
+  reportSchema,
+  verdictSchema,
+  type ChannelAnalysis,
+  type Report,
+  type ReportStatus,
+  type Verdict,
+} from '@overtally/contracts';
+import { sampleId, sampleLimitSet, sampleProject, sampleRecording } from './samples.js';
+
+const moment = '2026-11-27T09:00:00Z';
+const analyst = { id: sampleId(2), name: 'Ada Berg' };
+
+const harmonic = (order: number, rms: number) => ({
+  ...{ order, frequencyHz: 50 * order, rms, percentOfFundamental: 50 * rms, phaseDeg: 0 },
+  ...{ phaseZeroCrossingDeg: 0, groupRms: rms, subgroupRms: rms, smoothedMeanRms: rms, smoothedMaxRms: rms },
+});
+
+/** A current of 2 A with 2.4 A in order 3: above 2.3 A, where the sample set limits it. */
+export const sampleChannel = (change: Partial<ChannelAnalysis> = {}): ChannelAnalysis =>
+  channelAnalysisSchema.parse({
+    ...{ index: 0, name: 'i', quantity: 'current', unit: 'A', mean: 0, rms: 3.2, peak: 6 },
+    ...{ crestFactor: 2, formFactor: 1.5, thdFPercent: 120, thdRPercent: 77, thdMaxOrder: 40 },
+    fundamental: { frequencyHz: 50, rms: 2, phaseDeg: 0, frequencyUncertaintyHz: 0.001 },
+    ...{ thdPlusNPercent: null, sinadDb: null, snrDb: null, sfdrDb: null, enobBits: null },
+    harmonics: [harmonic(1, 2), harmonic(3, 2.4)],
+    interharmonics: [],
+    windows: { cycles: 10, count: 9, samplesPerWindow: 2000 },
+    flags: [],
+    ...change,
+  });
+
+export const sampleVerdict = (change: Partial<Verdict> = {}): Verdict =>
+  verdictSchema.parse({
+    ...{ id: sampleId(700), analysisId: sampleId(500), recordingId: sampleId(147), channel: 0 },
+    ...{ channelName: 'i', unit: 'A', limitSetId: sampleId(30), limitSet: sampleLimitSet(), parameters: {} },
+    decisionRule: 'simple-acceptance',
+    decisionRuleText: 'Simple acceptance.',
+    result: 'fail',
+    reason: 'Over at 3',
+    orders: [
+      {
+        ...{ order: 3, mean: 2.4, smoothedMax: 2.4, uncertainty: null, limit: 2.3, margin: -0.1 },
+        ...{ sharePercent: 104.3, result: 'fail', reason: 'Mean above the limit' },
+      },
+    ],
+    totals: [],
+    author: analyst,
+    createdAt: moment,
+    ...change,
+  });
+
+export function sampleReport(status: ReportStatus, change: Partial<Report> = {}): Report {
+  const isIssued = status === 'issued';
+  const verdict = sampleVerdict();
+  return reportSchema.parse({
+    ...{ id: sampleId(800), projectId: sampleProject().id, revision: 0, title: 'Dimmer, type test', status },
+    ...{ summary: 'Over at order 3.', number: isIssued ? 'HR-0001' : null, verdictIds: [verdict.id] },
+    content: {
+      project: sampleProject(),
+      sections: [
+        {
+          verdict,
+          recording: sampleRecording(),
+          analysis: {
+            ...{ id: sampleId(500), engineVersion: '0.1.0', finishedAt: moment },
+            settings: { profile: 'mains', nominalFrequencyHz: 50 },
+            channel: sampleChannel(),
+          },
+          notes: [],
+        },
+      ],
+      result: 'fail',
+    },
+    events: [{ kind: 'created', by: analyst, at: moment, comment: '' }],
+    ...{ preparedBy: analyst, issuedBy: isIssued ? analyst : null, issuedAt: isIssued ? moment : null },
+    pdfSha256: isIssued ? 'ab'.repeat(32) : null,
+    ...{ createdAt: moment, updatedAt: moment },
+    ...change,
+  });
+}
