@@ -20,11 +20,16 @@ export const quantitySchema = z.enum([
 ]);
 export type Quantity = z.infer<typeof quantitySchema>;
 
+const scaleLimit = 1e12;
+
+/** Gain or offset: large enough for any transducer, small enough that every figure stays finite. */
+const scaleSchema = z.number().min(-scaleLimit).max(scaleLimit);
+
 const columnSchema = z.union([z.number().int().min(0), z.string().min(1).max(200)]);
 
 /** How a file is to be read; what is absent is detected. */
 export const importOptionsSchema = z.strictObject({
-  sampleRateHz: z.number().positive().finite().optional().describe('Sample rate in Hz'),
+  sampleRateHz: z.number().min(1e-3).max(1e10).optional().describe('Sample rate in Hz'),
   delimiter: z.enum([',', ';', '\t', ' ', '|']).optional(),
   decimal: z.enum(['.', ',']).optional(),
   headerRows: z.number().int().min(0).max(1000).optional().describe('Lines before the first row of numbers'),
@@ -40,8 +45,8 @@ export const importOptionsSchema = z.strictObject({
         name: z.string().trim().min(1).max(80).optional(),
         quantity: quantitySchema.optional(),
         unit: z.string().trim().max(20).optional(),
-        gain: z.number().finite().optional().describe('Engineering value = gain x stored value + offset'),
-        offset: z.number().finite().optional(),
+        gain: scaleSchema.optional().describe('Engineering value = gain x stored value + offset'),
+        offset: scaleSchema.optional(),
       }),
     )
     .min(1)
@@ -114,8 +119,8 @@ export const updateRecordingSchema = z
           name: z.string().trim().min(1).max(80).optional(),
           quantity: quantitySchema.optional(),
           unit: z.string().trim().max(20).optional(),
-          gain: z.number().finite().optional(),
-          offset: z.number().finite().optional(),
+          gain: scaleSchema.optional(),
+          offset: scaleSchema.optional(),
         }),
       )
       .describe('Scaling changes are followed by a new analysis'),

@@ -34,6 +34,21 @@ describe('analyseRecord', () => {
     expect(() => analyse(broken)).toThrow("Channel 'L1' has no number at sample 250 (0.025 s)");
   });
 
+  it('refuses values whose squares would be no finite numbers, and stands the largest it takes', () => {
+    const broken = SINE.slice();
+    broken[250] = -1e101;
+    expect(() => analyse(broken)).toThrow("Channel 'L1' holds -1e+101 at sample 250 (0.025 s)");
+    for (const profile of ['mains', 'tone', 'general'] as const) {
+      const { channels } = analyse(
+        SINE.map((x) => x * 1e99),
+        { profile },
+      );
+      // JSON writes null for what is not finite; everything else comes back as it was.
+      expect(JSON.parse(JSON.stringify(channels[0]!.harmonics))).toEqual(channels[0]!.harmonics);
+      expect(channels[0]!.rms / 1e99).toBeCloseTo(10 / Math.SQRT2, 6);
+    }
+  });
+
   it.each([0, -1, Number.NaN, Infinity])('refuses the sample rate %d', (rate) => {
     expect(() => analyse(SINE, {}, rate)).toThrow(AnalysisInputError);
   });

@@ -2,6 +2,9 @@ import { refuse } from './refusal.js';
 import type { ChannelOptions, ImportOptions, LayoutColumn, ReadChannel } from './types.js';
 import { unitMeaning } from './units.js';
 
+/** Most channels of one recording; each is a file of its own while it is read. */
+const MAX_CHANNELS = 512;
+
 /** Raw ends of an integer sample format. */
 export interface CodeRange {
   lowest: number;
@@ -78,6 +81,13 @@ export function selectChannels(
   range: CodeRange | null,
 ): ReadChannel[] {
   if (options.channels === undefined || options.channels.length === 0) {
+    if (byDefault.length > MAX_CHANNELS) {
+      refuse(
+        'too-many-channels',
+        `The file holds ${byDefault.length} channels; up to ${MAX_CHANNELS} are read at a time.`,
+        `Choose up to ${MAX_CHANNELS} of them, or check the delimiter when the file has fewer.`,
+      );
+    }
     return byDefault.map((column, index) =>
       makeChannel(index, columns[column] as LayoutColumn, undefined, range),
     );
@@ -88,13 +98,18 @@ export function selectChannels(
   });
 }
 
+/** True for a sample rate that a capture can have; from it follow durations and frequencies that are finite. */
+export function isUsableRate(rateHz: number): boolean {
+  return rateHz >= 1e-3 && rateHz <= 1e10;
+}
+
 /** Refuses a sample rate that cannot be one. */
 export function checkSampleRateOption(options: ImportOptions): void {
   const rate = options.sampleRateHz;
-  if (rate === undefined || (Number.isFinite(rate) && rate > 0)) return;
+  if (rate === undefined || isUsableRate(rate)) return;
   refuse(
     'bad-sample-rate',
-    `The sample rate given, ${rate} Hz, is not a positive number.`,
+    `The sample rate given, ${rate} Hz, is not a number from 0.001 Hz to 10 GHz.`,
     'Give the sample rate in hertz, for example 50000.',
   );
 }

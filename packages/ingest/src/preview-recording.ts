@@ -1,3 +1,4 @@
+import { isUsableRate } from './channels.js';
 import { bareCell, cellKind, cellNumber } from './csv/cell.js';
 import { decodeText, guessEncoding } from './csv/encoding.js';
 import { splitCells, splitLines } from './csv/lines.js';
@@ -60,7 +61,8 @@ function previewCsv(head: Uint8Array, complete: boolean, args: PreviewArguments)
         },
         (found) => found,
       );
-      const sampleRateHz = options.sampleRateHz ?? rateOfRows(rows, plan);
+      const rate = options.sampleRateHz ?? rateOfRows(rows, plan);
+      const sampleRateHz = rate !== null && isUsableRate(rate) ? rate : null;
       const needs = problem === null ? [] : ['sampleRateHz'];
       return {
         layout: describeLayout(plan),

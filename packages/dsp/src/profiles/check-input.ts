@@ -1,6 +1,9 @@
 import { AnalysisInputError } from '../errors.js';
 import type { RecordInput } from '../types.js';
 
+/** Beyond it, the squares of a long record and of its spectrum would no longer be finite numbers. */
+const largestValue = 1e100;
+
 /** Refuses what cannot be analysed, naming the channel and the sample. */
 export function checkInput({ sampleRateHz, channels }: RecordInput): void {
   if (!(sampleRateHz > 0 && Number.isFinite(sampleRateHz))) {
@@ -17,6 +20,13 @@ export function checkInput({ sampleRateHz, channels }: RecordInput): void {
       throw new AnalysisInputError(
         `Channel '${name}' has no number at sample ${bad} (${bad / sampleRateHz} s). ` +
           'Choose a span without missing values.',
+      );
+    }
+    const large = samples.findIndex((x) => Math.abs(x) > largestValue);
+    if (large >= 0) {
+      throw new AnalysisInputError(
+        `Channel '${name}' holds ${samples[large]} at sample ${large} (${large / sampleRateHz} s), which no quantity has. ` +
+          'Check the file for damage and the gain, or choose a span without it.',
       );
     }
   }

@@ -44,6 +44,12 @@ export function decodeText(bytes: Uint8Array, encoding: TextEncoding): string {
   return new TextDecoder(encoding).decode(bytes, { stream: true });
 }
 
+/** `text` without the control characters with which some instruments pad their cells; tab and line ends stay. */
+export function withoutControls(text: string): string {
+  // eslint-disable-next-line no-control-regex
+  return text.replace(/[\u0000-\u0008\u000b\u000e-\u001f\u007f]/g, '');
+}
+
 /**
  * True when text holds characters that no table holds: control characters other than tab, line ends, form feed and
  * the end-of-file mark of old systems.

@@ -1,7 +1,7 @@
 import { checkSampleRateOption, selectChannels } from '../channels.js';
 import { refuse } from '../refusal.js';
 import type { DetectedLayout, ImportOptions, ReadChannel } from '../types.js';
-import { looksBinary, type TextEncoding } from './encoding.js';
+import { looksBinary, type TextEncoding, withoutControls } from './encoding.js';
 import { type CsvLayout, detectLayout } from './layout.js';
 import { splitLines } from './lines.js';
 
@@ -35,7 +35,7 @@ export function planCsv(
   const { options, fileName } = args;
   checkSampleRateOption(options);
   refuseBinary(text, fileName);
-  const lines = splitLines(text);
+  const lines = splitLines(withoutControls(text));
   if (!complete && lines.length > 1) lines.pop();
   const layout = detectLayout(lines, fileName, options);
   const channels = selectChannels(options, layout.columns, layout.headerCells, layout.valueColumns, null);

@@ -1,4 +1,5 @@
 import { ByteSource } from '../byte-source.js';
+import { isUsableRate } from '../channels.js';
 import { refuse } from '../refusal.js';
 import type { ImportOptions, ReadSuccess, ReadWarning, SampleSink } from '../types.js';
 import { decodeText, guessEncoding, utf16ToUtf8 } from './encoding.js';
@@ -54,8 +55,15 @@ function chooseRate(
   const measured = reader.axis?.sampleRateHz() ?? layout.statedSampleRateHz;
   const stated = options.sampleRateHz;
   if (stated === undefined) {
-    if (measured !== null && Number.isFinite(measured)) return measured;
-    refuseNoSampleRate('No sample rate can be had from the time stamps of the file.');
+    if (measured === null || !Number.isFinite(measured)) {
+      refuseNoSampleRate('No sample rate can be had from the time stamps of the file.');
+    }
+    if (isUsableRate(measured)) return measured;
+    refuse(
+      'bad-sample-rate',
+      `The file gives a sample rate of ${measured} Hz, which is outside 0.001 Hz to 10 GHz.`,
+      'Check the unit of the time column, or give the sample rate in hertz.',
+    );
   }
   if (measured !== null && Math.abs(stated - measured) > 0.01 * measured) {
     const message = `The sample rate given, ${stated} Hz, is used; the file itself says ${Number(measured.toPrecision(6))} Hz.`;

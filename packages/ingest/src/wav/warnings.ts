@@ -18,7 +18,8 @@ export function collectWarnings(header: WavHeader, counts: Counts): ReadWarning[
   const found: ReadWarning[] = [];
   if (claimed !== null && frames < claimed) {
     const message = `The header claims ${claimed} samples per channel but the file ends after ${frames}; what is there was read.`;
-    found.push({ code: 'truncated', message, count: claimed - frames });
+    // A 64-bit size may claim more than an exact integer can say.
+    found.push({ code: 'truncated', message, count: Math.min(claimed - frames, Number.MAX_SAFE_INTEGER) });
   } else if (leftover > 0) {
     found.push({
       code: 'truncated',
