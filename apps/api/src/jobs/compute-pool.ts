@@ -1,24 +1,24 @@
 import { Injectable, type OnApplicationShutdown } from '@nestjs/common';
-import { mkdir, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { MessageChannel } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 import { AppConfig } from '../config/app-config.js';
+import { makePrivateFolder } from '../storage/private-folder.js';
+import { removeStale } from '../storage/stale-files.js';
 import type { ComputeEnvironment, ComputeRequest } from './compute-request.js';
 
 const threadFile = fileURLToPath(new URL('../worker/compute.thread.js', import.meta.url));
 const idleTimeoutMs = 60_000;
+/** Files of a reading are written to all the time; these were left by a process that was killed. */
+const staleAfterMs = 3600 * 1000;
 
 /** Runs computations in threads of their own, so that requests are answered meanwhile. */
 @Injectable()
 export class ComputePool implements OnApplicationShutdown {
   private pool: Promise<Piscina> | undefined;
-  private readonly scratchFolder: string;
 
-  constructor(private readonly config: AppConfig) {
-    this.scratchFolder = join(config.dataDir, 'scratch', String(process.pid));
-  }
+  constructor(private readonly config: AppConfig) {}
 
   /**
    * Runs the named task. `stop` asks it to end early, upon which it fails with an error named `ComputeStopped`;
@@ -49,14 +49,16 @@ export class ComputePool implements OnApplicationShutdown {
   async onApplicationShutdown(): Promise<void> {
     if (this.pool === undefined) return;
     await (await this.pool).destroy();
-    await rm(this.scratchFolder, { recursive: true, force: true });
   }
 
   private async open(): Promise<Piscina> {
-    await mkdir(this.scratchFolder, { recursive: true });
+    // One folder for all processes that share the data: every file in it has a name of its own.
+    const scratchFolder = join(this.config.dataDir, 'scratch');
+    await makePrivateFolder(scratchFolder);
+    await removeStale(scratchFolder, staleAfterMs);
     const workerData: ComputeEnvironment = {
       storage: { kind: 'disk', folder: join(this.config.dataDir, 'storage') },
-      scratchFolder: this.scratchFolder,
+      scratchFolder,
     };
     return new Piscina({
       filename: threadFile,

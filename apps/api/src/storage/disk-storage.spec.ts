@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { mkdtemp, readdir, readFile, rm, utimes, writeFile } from 'node:fs/promises';
+import { chmod, mkdtemp, readdir, readFile, rm, stat, utimes, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Readable } from 'node:stream';
@@ -29,6 +29,12 @@ function pieces(failure?: Error): Readable {
 }
 
 describe('disk storage', () => {
+  it('keeps other accounts of the machine out, of a folder that was open before too', async () => {
+    await chmod(folder, 0o755);
+    await storage.prepare();
+    expect((await stat(folder)).mode & 0o777).toBe(0o700);
+  });
+
   it('keeps bytes and tells their size and SHA-256', async () => {
     const stored = await storage.put('a/b.bin', pieces());
     expect(stored).toEqual({ size: 10, sha256: createHash('sha256').update(bytes).digest('hex') });

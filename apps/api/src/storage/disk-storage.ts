@@ -1,8 +1,11 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { createReadStream } from 'node:fs';
-import { mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises';
+import { mkdir, open, rename, rm, stat } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import type { Readable } from 'node:stream';
+import { makePrivateFolder } from './private-folder.js';
+import { readWhole } from './read-whole.js';
+import { removeStale } from './stale-files.js';
 import { checkedKey } from './storage-key.js';
 import {
   Storage,
@@ -25,12 +28,9 @@ export class DiskStorage extends Storage {
 
   /** Makes the folders and removes what an interrupted process left in `.part` a day or more ago. */
   async prepare(now = Date.now()): Promise<void> {
+    await makePrivateFolder(this.root);
     await mkdir(this.partFolder, { recursive: true });
-    for (const name of await readdir(this.partFolder)) {
-      const path = join(this.partFolder, name);
-      const { mtimeMs } = await stat(path);
-      if (now - mtimeMs > staleAfterMs) await rm(path, { force: true });
-    }
+    await removeStale(this.partFolder, staleAfterMs, now);
   }
 
   async stage(source: ByteInput): Promise<StagedObject> {
@@ -73,12 +73,7 @@ export class DiskStorage extends Storage {
       const { size } = await handle.stat();
       const start = range?.start ?? 0;
       const bytes = new Uint8Array(Math.max(0, Math.min(range?.end ?? size - 1, size - 1) + 1 - start));
-      let filled = 0;
-      while (filled < bytes.length) {
-        const { bytesRead } = await handle.read(bytes, filled, bytes.length - filled, start + filled);
-        if (bytesRead === 0) throw new Error(`The stored object ${key} ends early`);
-        filled += bytesRead;
-      }
+      await readWhole(handle, bytes, start);
       return bytes;
     } finally {
       await handle.close();
