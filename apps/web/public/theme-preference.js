@@ -1,6 +1,6 @@
 // Runs before the first paint so that a chosen theme does not flash; lib/theme/preference.ts does the rest.
 (function () {
-  let stored = null;
+  let stored;
   try {
     stored = localStorage.getItem('overtally.theme');
   } catch {

@@ -73,7 +73,7 @@ describe('recordings', () => {
   it('lets only what is ready be chosen for an overlay, from two on', async () => {
     mockApi(answers('technician', [over, { ...over, id: sampleId(104), name: 'Capture 4' }, reading]));
     const { user, router } = renderRoute(address);
-    expect(((await row('Capture 2')).getByRole('checkbox') as HTMLInputElement).disabled).toBe(true);
+    expect((await row('Capture 2')).getByRole<HTMLInputElement>('checkbox').disabled).toBe(true);
     await user.click((await row('Capture 3')).getByRole('checkbox'));
     await user.click((await row('Capture 4')).getByRole('checkbox'));
     await user.click(screen.getByRole('button', { name: 'Overlay 2 recordings' }));
