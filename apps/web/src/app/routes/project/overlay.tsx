@@ -83,7 +83,7 @@ export function Component() {
               limitSets={limitSets.data ?? []}
               onChange={setView}
             />
-          ) : data.pendingRecordings > 0 ? (
+          ) : data.isPending ? (
             <LoadingState label="Loading the channels" lines={8} />
           ) : (
             <EmptyState title="No figures to draw" actions={<Button onClick={pick}>Add channels</Button>}>

@@ -1,3 +1,4 @@
+import type { RecordingStatus } from '@overtally/contracts';
 import { useQueries } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import { useSearchParams } from 'react-router-dom';
@@ -49,41 +50,38 @@ export function useOverlayLink() {
   return { entries, leftOut, view, setEntries, setView };
 }
 
-/** The recordings of the entries, and their spectra where the view needs them. */
-export function useOverlayData(entries: readonly OverlayEntry[], by: OverlayView['by']) {
+/** Entries with their recordings; a channel that stands there already is not drawn again. */
+function useResolved(entries: readonly OverlayEntry[]) {
   const ids = [...new Set(entries.map(({ recordingId }) => recordingId))];
   const recordings = useQueries({ queries: ids.map(recordingQuery) });
-  const resolved = entries.map((entry) => {
+  const keys = new Set<string>();
+  return entries.map((entry) => {
     const query = recordings[ids.indexOf(entry.recordingId)];
     const recording = query?.data ?? null;
-    return { entry, query, recording, own: recording && seriesOf(entry, recording) };
+    const series = recording && seriesOf(entry, recording);
+    const isRepeated = series !== null && keys.has(series.key);
+    if (series) keys.add(series.key);
+    return { entry, query, recording, isRepeated, series: isRepeated ? null : series };
   });
-  const found = resolved.map(({ own, ...rest }, index) => {
-    const isRepeated = resolved
-      .slice(0, index)
-      .some((earlier) => earlier.own && earlier.own.key === own?.key);
-    return { ...rest, isRepeated, series: isRepeated ? null : own };
-  });
-  const series = found.flatMap((one) => (one.series ? [one.series] : []));
+}
+
+/** The recordings of the entries, and their spectra where the view needs them. */
+export function useOverlayData(entries: readonly OverlayEntry[], by: OverlayView['by']) {
+  const resolved = useResolved(entries);
+  const series = resolved.flatMap((one) => (one.series ? [one.series] : []));
   const spectra = useQueries({
     queries: series.map(({ analysisId, summary }) => ({
       ...spectrumQuery(analysisId, summary.channel),
       enabled: by === 'frequency',
     })),
   });
-  const spectrumAt = (key: string | undefined) => spectra[series.findIndex((one) => one.key === key)];
-  const items = found.map(({ entry, query, recording, isRepeated, series: one }): LegendItem => {
-    const spectrum = by === 'frequency' ? spectrumAt(one?.key) : undefined;
-    const failed = query?.isError ? query : spectrum?.isError ? spectrum : undefined;
+  const items = resolved.map(({ entry, query, recording, isRepeated, series: own }): LegendItem => {
+    const spectrum = own && by === 'frequency' ? spectra[series.indexOf(own)] : undefined;
+    const failed = [query, spectrum].find((each) => each?.isError);
+    const missing = recording && !own ? withoutFigures(recording.status, isRepeated) : null;
     return {
-      entry,
-      recording,
-      series: one,
-      problem: failed
-        ? problemText(failed.error)
-        : recording && !one
-          ? withoutFigures(recording.status)
-          : null,
+      ...{ entry, recording, series: own },
+      problem: failed ? problemText(failed.error) : missing,
       ...(failed ? { onRetry: () => void failed.refetch() } : {}),
     };
   });
@@ -94,12 +92,13 @@ export function useOverlayData(entries: readonly OverlayEntry[], by: OverlayView
       const spectrum = spectra[index]?.data;
       return spectrum ? [{ series: one, spectrum }] : [];
     }),
-    pendingRecordings: recordings.filter((query) => query.isPending).length,
+    isPending: resolved.some(({ query }) => query?.isPending),
     pendingSpectra: by === 'frequency' ? spectra.filter((query) => query.isPending).length : 0,
   };
 }
 
-function withoutFigures(status: string): string {
+function withoutFigures(status: RecordingStatus, isRepeated: boolean): string {
+  if (isRepeated) return 'This channel is in the overlay already.';
   if (status === 'ready') return 'It has no such channel.';
   return status === 'failed' ? 'It could not be read: see its sheet.' : 'It is being analysed.';
 }

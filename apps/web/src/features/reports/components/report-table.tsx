@@ -1,4 +1,4 @@
-import { Link, Table, Text } from '@chakra-ui/react';
+import { Box, Link, Table, Text } from '@chakra-ui/react';
 import type { ReportListItem } from '@overtally/contracts';
 import { Link as RouterLink } from 'react-router-dom';
 import { Sheet } from '../../../components/sheet.js';
@@ -18,7 +18,7 @@ export function ReportTable({ reports, reportTo }: ReportTableProps) {
       <Table.Root size="md" aria-label="Reports">
         <Table.Header>
           <Table.Row>
-            <Table.ColumnHeader scope="col" w="24">
+            <Table.ColumnHeader scope="col" w="24" hideBelow="sm">
               No.
             </Table.ColumnHeader>
             <Table.ColumnHeader scope="col">Report</Table.ColumnHeader>
@@ -45,7 +45,7 @@ export function ReportTable({ reports, reportTo }: ReportTableProps) {
 function Row({ report, to }: { report: ReportListItem; to: string }) {
   return (
     <Table.Row>
-      <Table.Cell whiteSpace="nowrap" fontFamily={report.number ? 'mono' : undefined}>
+      <Table.Cell hideBelow="sm" whiteSpace="nowrap" fontFamily={report.number ? 'mono' : undefined}>
         {report.number ?? <Text color="inkSoft">none yet</Text>}
       </Table.Cell>
       <Table.Cell>
@@ -53,6 +53,9 @@ function Row({ report, to }: { report: ReportListItem; to: string }) {
           <RouterLink to={to}>{report.title}</RouterLink>
         </Link>
         <Text color="inkSoft" fontSize="13px">
+          <Box as="span" hideFrom="sm">
+            {report.number ? `${report.number}, ` : ''}
+          </Box>
           Revision {report.revision}, prepared by {report.preparedBy.name}
         </Text>
       </Table.Cell>
