@@ -54,7 +54,9 @@ describe('notes', () => {
     await agents.analyst.patch(one).send({ text: 'Second' }).expect(403);
     await agents.analyst.delete(one).expect(403);
     await agents.guest.patch(one).send({ text: 'Second' }).expect(403);
-    await agents.technician.patch(one).send({ text: 'Second' }).expect(200);
+    await agents.technician.patch(one).send({ text: 'Second', cause: 'Drive' }).expect(200);
+    const { body: kept } = await agents.technician.patch(one).send({ text: 'Second' }).expect(200);
+    expect(kept.cause).toBe('Drive');
     const { body: changed } = await agents.manager.patch(one).send({ cause: 'Line' }).expect(200);
     expect(changed).toMatchObject({
       text: 'Second',

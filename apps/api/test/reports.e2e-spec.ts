@@ -3,9 +3,9 @@ import { schema } from '@overtally/db';
 import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { newProject } from './support/factories.js';
-import { newFinishedAnalysis } from './support/finished-analysis.js';
+import { classAVerdict, newFinishedAnalysis } from './support/finished-analysis.js';
 import { newDraft, newInReview, newIssued, newJudged, type Judged } from './support/judged-reports.js';
-import { newNote, newVerdict, type Owner } from './support/project-contents.js';
+import { newAnalysis, newNote, newVerdict, type Owner } from './support/project-contents.js';
 import { channelWith } from './support/report-example.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
 
@@ -40,15 +40,20 @@ describe('a draft', () => {
   });
 
   it('can be changed and deleted', async () => {
-    const { id } = await newDraft(test, [dimmer.verdict.id]);
+    const { id } = await newDraft(test, [dimmer.verdict.id], { summary: 'Order 3 is over' });
     const analyst = await test.signIn('analyst');
     const change = { title: 'Second title', verdictIds: [quiet.verdict.id] };
     const { body } = await analyst.patch(`/api/reports/${id}`).send(change).expect(200);
     const changed = reportSchema.parse(body);
-    expect(changed).toMatchObject({ ...change, summary: '', content: { result: 'pass' } });
+    expect(changed).toMatchObject({ ...change, summary: 'Order 3 is over', content: { result: 'pass' } });
     expect(changed.events.map(({ kind }) => kind)).toEqual(['created', 'changed']);
     await analyst.delete(`/api/reports/${id}`).expect(204);
     await analyst.get(`/api/reports/${id}`).expect(404);
+  });
+
+  it('takes the ids of verdicts in either case', async () => {
+    const { verdictIds } = await newDraft(test, [dimmer.verdict.id.toUpperCase()]);
+    expect(verdictIds).toEqual([dimmer.verdict.id]);
   });
 
   it('refuses verdicts of another project by their place', async () => {
@@ -146,6 +151,29 @@ describe('the way to an issued report', () => {
     expect(numbers).toEqual([1, 2, 3, 4].map((step) => `HR-${String(first + step).padStart(4, '0')}`));
   });
 
+  it('issues what was reviewed; a return makes it live again', async () => {
+    const own = await newJudged(test);
+    const { id, content } = await newInReview(test, [own.verdict.id]);
+    await newNote(test.database, own.analysisId, owner);
+    await test.database
+      .update(schema.recordings)
+      .set({ eut: 'Another' })
+      .where(eq(schema.recordings.id, own.recordingId));
+    const manager = await test.signIn('manager');
+    const { body: reviewed } = await manager.get(`/api/reports/${id}`).expect(200);
+    expect(reviewed.content).toEqual(content);
+    const { body: returned } = await manager
+      .post(`/api/reports/${id}/return`)
+      .send({ comment: 'Say what EUT it was' })
+      .expect(200);
+    expect(returned.content.sections[0]).toMatchObject({ recording: { eut: 'Another' }, notes: [{}] });
+    const analyst = await test.signIn('analyst');
+    const { body: again } = await analyst.post(`/api/reports/${id}/submit`).send({}).expect(200);
+    const { body: issued } = await manager.post(`/api/reports/${id}/issue`).send({}).expect(200);
+    expect(issued.content).toEqual(again.content);
+    expect(issued.content).toEqual(returned.content);
+  });
+
   it('freezes what it says, whatever becomes of the recording and its notes', async () => {
     const own = await newJudged(test);
     const issued = await newIssued(test, [own.verdict.id]);
@@ -157,6 +185,59 @@ describe('the way to an issued report', () => {
     const guest = await test.signIn('guest');
     const { body } = await guest.get(`/api/reports/${issued.id}`).expect(200);
     expect(body).toEqual(issued);
+  });
+});
+
+describe('a verdict on a recording that was read or scaled anew', () => {
+  /** Puts an analysis of a new reading in the place of the judged one. */
+  async function readAnew({ analysisId, recordingId }: Judged): Promise<void> {
+    const { id } = await newAnalysis(test.database, recordingId, owner);
+    await test.database
+      .update(schema.analyses)
+      .set({ supersededById: id })
+      .where(eq(schema.analyses.id, analysisId));
+  }
+
+  it('is neither made nor put into a report, and the report is not submitted', async () => {
+    const own = await newJudged(test);
+    const draft = await newDraft(test, [quiet.verdict.id, own.verdict.id]);
+    await readAnew(own);
+    const analyst = await test.signIn('analyst');
+    const verdictPath = `/api/analyses/${own.analysisId}/verdicts`;
+    const judged = await analyst.post(verdictPath).send(classAVerdict()).expect(409);
+    expect(judged.body.code).toBe('analysis-superseded');
+    const verdictIds = [quiet.verdict.id, own.verdict.id];
+    const refused = [
+      analyst.post(reportsPath()).send({ title: 'Late', verdictIds }),
+      analyst.patch(`/api/reports/${draft.id}`).send({ verdictIds }),
+      analyst.post(`/api/reports/${draft.id}/submit`).send({}),
+    ];
+    for (const request of refused) {
+      const { body } = await request.expect(409);
+      expect(body).toMatchObject({ code: 'verdict-outdated', errors: [{ path: 'verdictIds.1' }] });
+      expect(body.detail).toContain('newest analysis');
+    }
+    await analyst
+      .patch(`/api/reports/${draft.id}`)
+      .send({ verdictIds: [quiet.verdict.id] })
+      .expect(200);
+    await analyst.post(`/api/reports/${draft.id}/submit`).send({}).expect(200);
+  });
+
+  it('is not issued after the review either, and goes back for mending', async () => {
+    const own = await newJudged(test);
+    const { id } = await newInReview(test, [own.verdict.id]);
+    await readAnew(own);
+    const manager = await test.signIn('manager');
+    const { body } = await manager.post(`/api/reports/${id}/issue`).send({}).expect(409);
+    expect(body.code).toBe('verdict-outdated');
+    await manager.post(`/api/reports/${id}/return`).send({ comment: 'Judge anew' }).expect(200);
+  });
+
+  it('stands when the same samples are only analysed under other settings', async () => {
+    const own = await newJudged(test);
+    await newAnalysis(test.database, own.recordingId, owner);
+    expect((await newIssued(test, [own.verdict.id])).status).toBe('issued');
   });
 });
 

@@ -19,7 +19,7 @@ import { projects } from './projects.js';
 
 export const reportStatus = pgEnum('report_status', ['draft', 'in-review', 'issued', 'superseded']);
 
-/** A report; once issued its content, number and PDF are frozen. */
+/** A report; its content is kept from submission on, and once issued it is frozen with number and PDF. */
 export const reports = pgTable(
   'reports',
   {

@@ -22,7 +22,7 @@ export class VerdictsController {
   @Post('analyses/:id/verdicts')
   @RequirePermission('verdict.create', { resource: 'analysis' })
   @ZodResponse({ status: 201, type: VerdictDto })
-  @ApiProblem(409, 'The analysis is not done')
+  @ApiProblem(409, 'The analysis is not done, or the recording was read or scaled anew since')
   @ApiProblem(422, 'The analysis has no such channel, or the project no such limit set')
   create(
     @CurrentUser() user: SignedInUser,

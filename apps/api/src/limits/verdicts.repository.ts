@@ -1,7 +1,7 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { Verdict } from '@overtally/contracts';
 import { schema, type Database, type Tx } from '@overtally/db';
-import { and, desc, eq, getTableColumns, inArray, sql, type SQL } from 'drizzle-orm';
+import { and, desc, eq, getTableColumns, inArray, isNotNull, sql, type SQL } from 'drizzle-orm';
 import { DATABASE } from '../database/database.tokens.js';
 
 const { analyses, analysisChannels, recordings, users, verdicts } = schema;
@@ -27,6 +27,16 @@ export class VerdictsRepository {
   /** Those of the ids that belong to the project, in no order. */
   async findMany(projectId: string, ids: readonly string[]) {
     return this.select(and(inArray(verdicts.id, [...ids]), eq(recordings.projectId, projectId)));
+  }
+
+  /** Those of the ids whose recording was read or scaled anew since, with its number. */
+  async outdated(tx: Tx, ids: readonly string[]) {
+    return tx
+      .select({ id: verdicts.id, number: recordings.number })
+      .from(verdicts)
+      .innerJoin(analyses, eq(analyses.id, verdicts.analysisId))
+      .innerJoin(recordings, eq(recordings.id, analyses.recordingId))
+      .where(and(inArray(verdicts.id, [...ids]), isNotNull(analyses.supersededById)));
   }
 
   /** The newest first, from behind `after`. */

@@ -1,6 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { ChannelAnalysis, CreateVerdict, LimitSet, Verdict } from '@overtally/contracts';
-import type { Database } from '@overtally/db';
+import type { Database, Tx } from '@overtally/db';
 import { evaluate, measurementOfChannel } from '@overtally/limits';
 import { z } from 'zod';
 import { AnalysesService } from '../analyses/analyses.service.js';
@@ -8,9 +8,11 @@ import { decodeCursor, pageOfRows } from '../common/paging.js';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
+import { recordingNumber } from '../recordings/recording-number.js';
 import { LimitSetsService } from './limit-sets.service.js';
 import { toVerdict, VerdictsRepository, type VerdictFilter } from './verdicts.repository.js';
 
+const cure = 'judge its newest analysis';
 const placeSchema = z.tuple([z.iso.datetime(), z.uuid()]);
 
 interface Paging {
@@ -68,6 +70,23 @@ export class VerdictsService {
     return ids.map((id) => byId.get(id));
   }
 
+  /**
+   * Refuses verdicts on samples that were read or scaled anew since. One on an earlier analysis of the same
+   * samples, under other settings, stands.
+   * @throws 409 naming the place of each outdated verdict among the ids
+   */
+  async requireCurrent(tx: Tx, ids: readonly string[]): Promise<void> {
+    const outdated = await this.repository.outdated(tx, ids);
+    if (outdated.length === 0) return;
+    const numbers = [...new Set(outdated.map((row) => recordingNumber(row.number)))].sort().join(', ');
+    const detail = `${numbers} was read or scaled anew since the verdict; ${cure}, and put that in its place`;
+    const errors = outdated.map(({ id }) => ({
+      path: `verdictIds.${ids.indexOf(id)}`,
+      message: `The recording was read or scaled anew since; ${cure}`,
+    }));
+    throw problem(409, 'verdict-outdated', detail, errors);
+  }
+
   private async subject(
     analysisId: string,
     { channel: index, limitSetId }: CreateVerdict,
@@ -76,6 +95,10 @@ export class VerdictsService {
     if (analysis.status !== 'done') {
       const detail = `The analysis is ${analysis.status}; a verdict needs one that is done`;
       throw problem(409, 'analysis-not-done', detail);
+    }
+    if (analysis.supersededById !== null) {
+      const detail = `The recording was read or scaled anew since this analysis; ${cure}`;
+      throw problem(409, 'analysis-superseded', detail);
     }
     const limitSet = await this.limitSets.resolve(analysis.projectId, limitSetId);
     const channel = analysis.channels.find((each) => each.index === index);

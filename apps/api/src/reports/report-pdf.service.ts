@@ -14,7 +14,7 @@ export interface ReportPdf {
   sha256: string | null;
 }
 
-/** A report as PDF: an issued one byte for byte as stored, any other drawn from what is there now. */
+/** A report as PDF: an issued one byte for byte as stored, any other drawn anew from what it says. */
 @Injectable()
 export class ReportPdfService {
   constructor(

@@ -16,7 +16,7 @@ export class ReportStepsController {
   @Post('submit')
   @RequirePermission('report.submit', { resource: 'report' })
   @ZodResponse({ status: 200, type: ReportDto, description: 'Now in review' })
-  @ApiProblem(409, 'The report is not a draft')
+  @ApiProblem(409, 'The report is not a draft, or the recording of a verdict was read or scaled anew')
   submit(@CurrentUser() user: SignedInUser, @Param('id') id: string, @Body() { comment }: ReportStepDto) {
     return this.steps.submit(user, id, comment);
   }
@@ -32,7 +32,7 @@ export class ReportStepsController {
   @Post('issue')
   @RequirePermission('report.decide', { resource: 'report' })
   @ZodResponse({ status: 200, type: ReportDto, description: 'Issued and frozen' })
-  @ApiProblem(409, 'The report is not in review')
+  @ApiProblem(409, 'The report is not in review, or the recording of a verdict was read or scaled anew')
   issue(@CurrentUser() user: SignedInUser, @Param('id') id: string, @Body() { comment }: ReportStepDto) {
     return this.steps.issue(user, id, comment);
   }

@@ -1,7 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { Report } from '@overtally/contracts';
 import type { Database } from '@overtally/db';
-import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { Storage } from '../storage/storage.js';
@@ -21,10 +20,13 @@ export class ReportStepsService {
     private readonly storage: Storage,
   ) {}
 
+  /** Into review, with what it says kept, so that what is reviewed is what will be issued. */
   async submit(user: SignedInUser, id: string, comment: string): Promise<Report> {
+    const draft = await this.reports.get(id);
+    requireAction(draft.status, 'submit');
     await this.database.transaction(async (tx) => {
-      await this.reports.lockFor(tx, id, 'submit');
-      await this.repository.update(tx, id, { status: 'in-review' });
+      await this.reports.lockAsRead(tx, draft, 'submit');
+      await this.repository.update(tx, id, { status: 'in-review', content: draft.content });
       await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'submitted', comment });
     });
     return this.reports.get(id);
@@ -34,14 +36,14 @@ export class ReportStepsService {
   async return(user: SignedInUser, id: string, comment: string): Promise<Report> {
     await this.database.transaction(async (tx) => {
       await this.reports.lockFor(tx, id, 'return');
-      await this.repository.update(tx, id, { status: 'draft' });
+      await this.repository.update(tx, id, { status: 'draft', content: null });
       await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'returned', comment });
     });
     return this.reports.get(id);
   }
 
   /**
-   * Gives the report its number, freezes what it says and keeps its PDF with the SHA-256.
+   * Gives the report as reviewed its number and keeps its PDF with the SHA-256.
    *
    * The PDF is stored before the commit, so that an issued report always has one; a number whose transaction
    * fails is given out again, so that numbers have no gaps.
@@ -50,14 +52,7 @@ export class ReportStepsService {
     const reviewed = await this.reports.get(id);
     requireAction(reviewed.status, 'issue');
     await this.database.transaction(async (tx) => {
-      const row = await this.reports.lockFor(tx, id, 'issue');
-      if (row.updatedAt.toISOString() !== reviewed.updatedAt) {
-        throw problem(
-          409,
-          'changed-meanwhile',
-          'The report was changed just now; read it again, then issue it',
-        );
-      }
+      const row = await this.reports.lockAsRead(tx, reviewed, 'issue');
       const number = await this.repository.nextNumber(tx, row.projectId);
       const issuedAt = new Date();
       const pdf = await renderReportPdf({

@@ -22,6 +22,7 @@ export class ReportsController {
   @Post('projects/:id/reports')
   @RequirePermission('report.write', { resource: 'project' })
   @ZodResponse({ status: 201, type: ReportDto, description: 'The new draft' })
+  @ApiProblem(409, 'The recording of a verdict was read or scaled anew since')
   @ApiProblem(422, 'A verdict that is not one of the project')
   create(@CurrentUser() user: SignedInUser, @Param('id') projectId: string, @Body() input: CreateReportDto) {
     return this.reports.create(user, projectId, input);
@@ -44,7 +45,7 @@ export class ReportsController {
   @Patch('reports/:id')
   @RequirePermission('report.write', { resource: 'report' })
   @ZodResponse({ status: 200, type: ReportDto })
-  @ApiProblem(409, 'The report is not a draft')
+  @ApiProblem(409, 'The report is not a draft, or the recording of a verdict was read or scaled anew')
   @ApiProblem(422, 'A verdict that is not one of the project')
   update(
     @CurrentUser() user: SignedInUser,

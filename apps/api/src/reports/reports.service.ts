@@ -30,7 +30,7 @@ export class ReportsService {
     private readonly contents: ReportContentService,
   ) {}
 
-  /** A report with its content: live for a draft, as frozen for an issued one. */
+  /** A report with its content: live for a draft, as frozen by submission for any other. */
   async get(id: string): Promise<Report> {
     const [row, events] = await Promise.all([this.repository.find(id), this.repository.eventsOf(id)]);
     if (!row) throw noSuchReport();
@@ -51,6 +51,7 @@ export class ReportsService {
     const { verdictIds, ...words } = input;
     await this.requireVerdicts(projectId, verdictIds);
     const id = await this.database.transaction(async (tx) => {
+      await this.verdicts.requireCurrent(tx, verdictIds);
       const made = await this.repository.insert(tx, { ...words, projectId, preparedById: user.id });
       await this.repository.setVerdicts(tx, made, verdictIds);
       await this.repository.addEvent(tx, { reportId: made, byId: user.id, kind: 'created' });
@@ -64,7 +65,10 @@ export class ReportsService {
     if (verdictIds) await this.requireVerdicts(projectId, verdictIds);
     await this.database.transaction(async (tx) => {
       await this.lockFor(tx, id, 'change');
-      if (verdictIds) await this.repository.setVerdicts(tx, id, verdictIds);
+      if (verdictIds) {
+        await this.verdicts.requireCurrent(tx, verdictIds);
+        await this.repository.setVerdicts(tx, id, verdictIds);
+      }
       await this.repository.update(tx, id, words);
       await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'changed' });
     });
@@ -76,6 +80,20 @@ export class ReportsService {
       await this.lockFor(tx, id, 'delete');
       await this.repository.delete(tx, id);
     });
+  }
+
+  /**
+   * Holds a report as it was read for a step towards its issue.
+   * @throws 409 when its state does not allow the step, it was changed since, or a verdict is outdated
+   */
+  async lockAsRead(tx: Tx, read: Report, action: ReportAction): Promise<LockedReport> {
+    const row = await this.lockFor(tx, read.id, action);
+    if (row.updatedAt.toISOString() !== read.updatedAt) {
+      const detail = `The report was changed just now; read it again, then ${action} it`;
+      throw problem(409, 'changed-meanwhile', detail);
+    }
+    await this.verdicts.requireCurrent(tx, read.verdictIds);
+    return row;
   }
 
   /** The report's row, held for an action that its state allows. */
