@@ -13,6 +13,8 @@ export class AppConfig {
   readonly sessionSecret: string;
   /** Address people use, without a slash at the end. */
   readonly publicUrl: string;
+  /** Proxies that are believed who the caller is: a number of hops, or addresses; false: none. */
+  readonly trustProxy: number | string[] | false;
   readonly maxUploadBytes: number;
   readonly worker: 'embedded' | 'off';
   readonly demo: boolean;
@@ -30,7 +32,9 @@ export class AppConfig {
     this.dataDir = resolve(env.DATA_DIR);
     this.webDist = env.WEB_DIST === undefined ? null : resolve(env.WEB_DIST);
     this.sessionSecret = env.SESSION_SECRET;
-    this.publicUrl = (env.PUBLIC_URL ?? `http://${env.HOST}:${env.PORT}`).replace(/\/+$/, '');
+    this.publicUrl = (env.PUBLIC_URL ?? ownAddress(env.HOST, env.PORT)).replace(/\/+$/, '');
+    // Behind TLS there is a proxy; one elsewhere than on this machine must be named, as anybody could be one.
+    this.trustProxy = env.TRUST_PROXY ?? (this.isHttps ? ['loopback'] : false);
     this.maxUploadBytes = Math.floor(env.MAX_UPLOAD_MB * 1024 * 1024);
     this.worker = env.WORKER;
     this.demo = env.DEMO === 'on';
@@ -46,4 +50,9 @@ export class AppConfig {
   get isHttps(): boolean {
     return this.publicUrl.startsWith('https:');
   }
+}
+
+/** The address of the server itself; an IPv6 host stands in brackets (RFC 3986, 3.2.2). */
+function ownAddress(host: string, port: number): string {
+  return `http://${host.includes(':') ? `[${host}]` : host}:${port}`;
 }

@@ -38,6 +38,29 @@ describe('the environment', () => {
     expect(read).not.toThrow(/too short|eighty/);
   });
 
+  it('puts an IPv6 host in brackets', () => {
+    const config = new AppConfig(readEnvironment({ ...needed, HOST: '::' }));
+    expect(config.publicUrl).toBe('http://[::]:4310');
+    expect(new URL(config.publicUrl).port).toBe('4310');
+  });
+
+  it.each([
+    [{}, false],
+    [{ PUBLIC_URL: 'https://lab.example' }, ['loopback']],
+    [{ PUBLIC_URL: 'https://lab.example', TRUST_PROXY: '0' }, 0],
+    [{ TRUST_PROXY: '2' }, 2],
+    [{ TRUST_PROXY: 'loopback, 10.0.0.2,fd00::/8' }, ['loopback', '10.0.0.2', 'fd00::/8']],
+  ])('trusts a proxy that is named, or behind TLS one on this machine: %j', (given, trusted) => {
+    expect(new AppConfig(readEnvironment({ ...needed, ...given })).trustProxy).toEqual(trusted);
+  });
+
+  it.each(['everybody', '10.0.0.2/33', '10.0.0.2/8/8', '-1', '10.0.0'])(
+    'refuses the proxy %s',
+    (TRUST_PROXY) => {
+      expect(() => readEnvironment({ ...needed, TRUST_PROXY })).toThrow(/TRUST_PROXY: give the number/);
+    },
+  );
+
   it('knows TLS by the public address and drops the slash at its end', () => {
     const config = new AppConfig(readEnvironment({ ...needed, PUBLIC_URL: 'https://lab.example/' }));
     expect(config).toMatchObject({ publicUrl: 'https://lab.example', isHttps: true });

@@ -1,8 +1,29 @@
+import { isIP } from 'node:net';
 import { availableParallelism } from 'node:os';
 import { z } from 'zod';
 
 const absent = (value: unknown) => (value === '' ? undefined : value);
 const optional = <T extends z.ZodType>(schema: T) => z.preprocess(absent, schema.optional());
+
+const RANGE_NAMES = ['loopback', 'linklocal', 'uniquelocal'];
+
+function isAddressOrRange(text: string): boolean {
+  if (RANGE_NAMES.includes(text)) return true;
+  const [address = '', prefix = '0', ...rest] = text.split('/');
+  const bits = { 4: 32, 6: 128 }[isIP(address) as 4 | 6] as number | undefined;
+  return bits !== undefined && /^\d{1,3}$/.test(prefix) && Number(prefix) <= bits && rest.length === 0;
+}
+
+const isHopCount = (entries: string[]): boolean => entries.length === 1 && /^\d{1,2}$/.test(entries[0] ?? '');
+
+/** Reverse proxies that are believed what they say of the caller: how many hops, or whose addresses. */
+const trustProxySchema = z
+  .string()
+  .transform((text) => text.split(',').map((entry) => entry.trim()))
+  .refine((entries) => isHopCount(entries) || entries.every(isAddressOrRange), {
+    error: 'give the number of proxies in front, or their addresses such as 10.0.0.2, 172.18.0.0/16',
+  })
+  .transform((entries) => (isHopCount(entries) ? Number(entries[0]) : entries));
 
 /** The environment of a process. An empty value counts as absent. */
 export const environmentSchema = z
@@ -22,6 +43,7 @@ export const environmentSchema = z
         .min(32, 'use at least 32 characters'),
     ),
     PUBLIC_URL: optional(z.url({ protocol: /^https?$/, error: 'give an http:// or https:// address' })),
+    TRUST_PROXY: optional(trustProxySchema),
     MAX_UPLOAD_MB: z.preprocess(absent, z.coerce.number().positive().default(2048)),
     WORKER: z.preprocess(absent, z.enum(['embedded', 'off']).default('embedded')),
     DEMO: z.preprocess(absent, z.enum(['on', 'off']).default('off')),
