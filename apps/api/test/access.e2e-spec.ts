@@ -1,8 +1,11 @@
 import { holds, permissions, projectRoleSchema, type Permission } from '@overtally/contracts';
 import supertest from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { recordingPrefix } from '../dist/recordings/recording-keys.js';
+import { Storage } from '../dist/storage/storage.js';
 import { makeExamples, makeOtherParameters, type Examples } from './support/examples.js';
 import { ROLES, type Role } from './support/people.js';
+import { newRecording } from './support/project-contents.js';
 import { declaredRoutes, servedRoutes, type Route } from './support/routes.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
 
@@ -80,6 +83,18 @@ describe('access to every route', () => {
       wanted[name] = Object.fromEntries(EVERYONE.map((who) => [who ?? 'nobody', expected(route, who)]));
     }
     expect(found).toEqual(wanted);
+  });
+
+  // RFC 9562, 4: a UUID is the same in either case.
+  it('takes an id in upper case for the same thing, down to its files', async () => {
+    const owner = { projectId: test.project.id, userId: test.people.analyst.id };
+    const { id } = await newRecording(test.database, owner);
+    const storage = test.app.get(Storage, { strict: false });
+    const key = `${recordingPrefix(id)}samples.npy`;
+    await storage.put(key, new Uint8Array(8));
+    const analyst = await test.signIn('analyst');
+    await analyst.delete(`/api/recordings/${id.toUpperCase()}`).expect(204);
+    expect(await storage.exists(key)).toBe(false);
   });
 
   it('answers a stranger the same for a thing of others, a thing that is not, and a malformed id', async () => {

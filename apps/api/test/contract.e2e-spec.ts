@@ -58,16 +58,18 @@ describe('the OpenAPI document', () => {
     expect(without.map(({ name }) => name)).toEqual([]);
   });
 
-  it('says which routes need the session cookie', () => {
+  it('says which routes need the session cookie or an access key', () => {
     expect(document.components?.securitySchemes).toEqual({
       session: { type: 'apiKey', in: 'cookie', name: 'overtally_session' },
+      bearer: { type: 'http', scheme: 'bearer', description: 'Personal access key' },
     });
+    const either = [{ session: [] }, { bearer: [] }];
     for (const route of routes) {
       const operation = operations().find(
         ({ name }) => name === `${route.method} ${pathOf(route)}`,
       )?.operation;
       const isPublic = route.access && permissions[route.access.permission].allow === 'public';
-      expect(operation?.security, route.path).toEqual(isPublic ? undefined : [{ session: [] }]);
+      expect(operation?.security, route.path).toEqual(isPublic ? undefined : either);
     }
   });
 

@@ -164,6 +164,13 @@ describe('guessing passwords', () => {
     await signIn('guest@example.com', PASSWORD, from('203.0.113.1')).expect(200);
   });
 
+  it('is not helped by a forged chain of addresses from the own network', async () => {
+    const { email } = await newPerson(test.database);
+    const forged = (attempt: number) => `203.0.113.${100 + attempt}, 192.168.1.5`;
+    for (let attempt = 0; attempt < 10; attempt += 1) await guess(email, forged(attempt)).expect(401);
+    await guess(email, forged(10)).expect(429);
+  });
+
   it('counts failures alone: a success clears them', async () => {
     const { email } = await newPerson(test.database);
     for (let round = 0; round < 2; round += 1) {

@@ -47,6 +47,28 @@ export const sessions = pgTable(
   ],
 );
 
+/** Keys with which a person's scripts act as that person. The secret itself is not kept, only its hash. */
+export const accessKeys = pgTable(
+  'access_keys',
+  {
+    id: uuid().primaryKey().defaultRandom(),
+    userId: uuid()
+      .notNull()
+      .references(() => users.id),
+    name: text().notNull(),
+    prefix: text().notNull(),
+    secretSha256: text().notNull(),
+    createdAt,
+    lastUsedAt: moment(),
+    expiresAt: moment(),
+  },
+  (table) => [
+    uniqueIndex('access_keys_secret_key').on(table.secretSha256),
+    index('access_keys_user_index').on(table.userId, table.createdAt),
+    check('access_keys_sha256_form', sql`${table.secretSha256} ~ '^[0-9a-f]{64}$'`),
+  ],
+);
+
 /**
  * Failed sign-ins within a time window, by hashed e-mail and address and by address alone.
  * The limiter inserts by position, so the order of the columns matters; `expire` is in ms since 1970.

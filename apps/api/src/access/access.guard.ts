@@ -1,13 +1,11 @@
 import { Injectable, type CanActivate, type ExecutionContext } from '@nestjs/common';
 import { Reflector } from '@nestjs/core';
-import { holds, permissions } from '@overtally/contracts';
-import { z } from 'zod';
-import { problem } from '../common/problem.js';
+import { holds, idSchema, permissions } from '@overtally/contracts';
+import { problem, ProblemException } from '../common/problem.js';
 import type { AppRequest, ProjectAccess, SignedInUser } from '../common/request.js';
+import { bearerSecret, hashOfSecret } from './access-key.js';
 import { AccessRepository } from './access.repository.js';
 import { ROUTE_ACCESS, type ResourceKind, type RouteAccess } from './require-permission.decorator.js';
-
-const uuid = z.uuid();
 
 /** Decides on every route by the permission table; a route that names no permission stays closed. */
 @Injectable()
@@ -25,7 +23,7 @@ export class AccessGuard implements CanActivate {
     const request = context.switchToHttp().getRequest<AppRequest>();
     request.user = await this.signedInUser(request);
     if (route.resource) {
-      request.access = await this.projectAccess(route.resource, request.params[route.param], request.user);
+      request.access = await this.projectAccess(request, route.resource, route.param, request.user);
     }
     if (!holds(route.permission, request.access?.role ?? null, request.user.isAdministrator)) {
       throw problem(403, 'role-too-low', 'Your role does not allow this');
@@ -33,21 +31,34 @@ export class AccessGuard implements CanActivate {
     return true;
   }
 
+  /** The holder of the key that the request carries, else the person of its session. */
   private async signedInUser(request: AppRequest): Promise<SignedInUser> {
+    const secret = bearerSecret(request);
+    if (secret !== undefined) return this.keyHolder(secret);
     const userId = request.session.userId;
     const user = userId === undefined ? undefined : await this.repository.findSignedInUser(userId);
-    if (!user) throw problem(401, 'not-signed-in', 'Sign in first');
+    if (!user) throw unauthorised('not-signed-in', 'Sign in first', 'Bearer');
     return user;
   }
 
+  private async keyHolder(secret: string): Promise<SignedInUser> {
+    const user = await this.repository.findKeyHolder(hashOfSecret(secret));
+    if (user) return user;
+    const detail = 'The access key is not known or has expired; make a new one on the account page';
+    throw unauthorised('invalid-access-key', detail, 'Bearer error="invalid_token"');
+  }
+
+  /** Finds the project of the thing in the path, whose id is brought to the form in which ids are stored. */
   private async projectAccess(
+    request: AppRequest,
     resource: ResourceKind,
-    id: unknown,
+    param: string,
     user: SignedInUser,
   ): Promise<ProjectAccess> {
-    const known = uuid.safeParse(id);
-    const access = known.success
-      ? await this.repository.findProjectAccess(resource, known.data, user.id)
+    const id = idSchema.safeParse(request.params[param]);
+    if (id.success) request.params[param] = id.data;
+    const access = id.success
+      ? await this.repository.findProjectAccess(resource, id.data, user.id)
       : undefined;
     // A stranger gets the same answer whether the thing exists or not.
     if (!access || (access.role === null && !user.isAdministrator)) {
@@ -55,4 +66,9 @@ export class AccessGuard implements CanActivate {
     }
     return access;
   }
+}
+
+/** A 401 names the way to sign a request (RFC 9110, 15.5.2; RFC 6750, 3). */
+function unauthorised(code: string, detail: string, challenge: string): ProblemException {
+  return new ProblemException(401, code, detail, undefined, { 'WWW-Authenticate': challenge });
 }

@@ -1,11 +1,17 @@
 import { Inject, Injectable } from '@nestjs/common';
 import { schema, type Database } from '@overtally/db';
-import { and, eq, isNull } from 'drizzle-orm';
+import { and, eq, gt, isNull, or } from 'drizzle-orm';
 import type { ProjectAccess, SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import type { ResourceKind } from './require-permission.decorator.js';
 
-const { users, members, projects, recordings, analyses, notes, verdicts, reports, limitSets } = schema;
+const { accessKeys, users, members, projects, recordings, analyses, notes, verdicts, reports, limitSets } =
+  schema;
+
+const person = { id: users.id, email: users.email, name: users.name, isAdministrator: users.isAdministrator };
+
+/** A script may ask many times a second; when a key was last used is kept to the minute. */
+const USE_RECORDED_EVERY_MS = 60_000;
 
 @Injectable()
 export class AccessRepository {
@@ -14,15 +20,31 @@ export class AccessRepository {
   /** The person of a session; undefined once disabled. */
   async findSignedInUser(userId: string): Promise<SignedInUser | undefined> {
     const [user] = await this.database
-      .select({
-        id: users.id,
-        email: users.email,
-        name: users.name,
-        isAdministrator: users.isAdministrator,
-      })
+      .select(person)
       .from(users)
       .where(and(eq(users.id, userId), isNull(users.disabledAt)));
     return user;
+  }
+
+  /** The person a key belongs to; undefined for an unknown or expired key and once the person is disabled. */
+  async findKeyHolder(secretSha256: string): Promise<SignedInUser | undefined> {
+    const now = new Date();
+    const [row] = await this.database
+      .select({ person, keyId: accessKeys.id, lastUsedAt: accessKeys.lastUsedAt })
+      .from(accessKeys)
+      .innerJoin(users, eq(users.id, accessKeys.userId))
+      .where(
+        and(
+          eq(accessKeys.secretSha256, secretSha256),
+          or(isNull(accessKeys.expiresAt), gt(accessKeys.expiresAt, now)),
+          isNull(users.disabledAt),
+        ),
+      );
+    if (row === undefined) return undefined;
+    if (now.getTime() - (row.lastUsedAt?.getTime() ?? 0) > USE_RECORDED_EVERY_MS) {
+      await this.database.update(accessKeys).set({ lastUsedAt: now }).where(eq(accessKeys.id, row.keyId));
+    }
+    return row.person;
   }
 
   /** The project a thing belongs to and the person's role there; undefined when there is no such thing. */

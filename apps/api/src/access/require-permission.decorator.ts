@@ -1,5 +1,5 @@
 import { applyDecorators, createParamDecorator, SetMetadata, type ExecutionContext } from '@nestjs/common';
-import { ApiCookieAuth, ApiExtension } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiCookieAuth, ApiExtension } from '@nestjs/swagger';
 import { permissions, type Permission } from '@overtally/contracts';
 import type { AppRequest, ProjectAccess as Access } from '../common/request.js';
 import { ApiProblem } from '../common/api-problem.decorator.js';
@@ -53,7 +53,7 @@ function documentation({ permission, resource }: RouteAccess): MethodDecorator[]
   ];
   const { allow } = permissions[permission];
   if (allow === 'public') return all;
-  all.push(ApiCookieAuth('session'), ApiProblem(401, 'Nobody is signed in'));
+  all.push(ApiCookieAuth('session'), ApiBearerAuth('bearer'), ApiProblem(401, 'Nobody is signed in'));
   if (allow !== 'signed-in') all.push(ApiProblem(403, 'The role of the person who asks is too low'));
   if (resource) all.push(ApiProblem(404, 'No such thing, or not in a project of the person who asks'));
   return all;

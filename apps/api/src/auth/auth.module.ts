@@ -8,6 +8,9 @@ import {
 import type pg from 'pg';
 import { AppConfig } from '../config/app-config.js';
 import { POOL } from '../database/database.tokens.js';
+import { AccessKeysController } from './access-keys.controller.js';
+import { AccessKeysRepository } from './access-keys.repository.js';
+import { AccessKeysService } from './access-keys.service.js';
 import { AccountSessions } from './account-sessions.js';
 import { AccountsRepository } from './accounts.repository.js';
 import { AuthController } from './auth.controller.js';
@@ -17,8 +20,16 @@ import { SignInLimits } from './sign-in-limits.js';
 import { makeSessionStore, sessionMiddleware } from './session.middleware.js';
 
 @Module({
-  controllers: [AuthController],
-  providers: [AuthService, AccountsRepository, AccountSessions, PasswordHasher, SignInLimits],
+  controllers: [AuthController, AccessKeysController],
+  providers: [
+    AuthService,
+    AccountsRepository,
+    AccountSessions,
+    PasswordHasher,
+    SignInLimits,
+    AccessKeysService,
+    AccessKeysRepository,
+  ],
   exports: [AccountSessions, PasswordHasher],
 })
 export class AuthModule implements NestModule, OnModuleDestroy {

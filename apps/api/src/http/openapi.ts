@@ -7,6 +7,7 @@ import { SESSION_COOKIE } from '../auth/session.middleware.js';
 const DESCRIPTION = [
   'From a bench capture to a signed harmonic report.',
   'SI units in field names, times ISO 8601 in UTC, ids are UUIDs; a figure that does not apply is null.',
+  'Sign in with a session cookie, or send a personal access key as `Authorization: Bearer …`.',
   'Lists are pages: pass `nextCursor` as `cursor` to get the next one.',
   'Refusals are problem details (RFC 9457) with `code` for programs and `errors` for invalid fields.',
 ].join('\n');
@@ -24,6 +25,7 @@ export class OpenApi {
       .setDescription(DESCRIPTION)
       .setVersion('1')
       .addCookieAuth(SESSION_COOKIE, { type: 'apiKey', in: 'cookie', name: SESSION_COOKIE }, 'session')
+      .addSecurity('bearer', { type: 'http', scheme: 'bearer', description: 'Personal access key' })
       .build();
     const document = SwaggerModule.createDocument(app, base, {
       operationIdFactory: (controller, method) => `${controller.replace(/Controller$/, '')}_${method}`,

@@ -1,7 +1,21 @@
-import { accountSchema, changePasswordSchema, signInSchema, updateAccountSchema } from '@overtally/contracts';
+import {
+  accessKeyPageSchema,
+  accountSchema,
+  changePasswordSchema,
+  createAccessKeySchema,
+  createdAccessKeySchema,
+  pageQuerySchema,
+  signInSchema,
+  updateAccountSchema,
+} from '@overtally/contracts';
 import { createZodDto } from 'nestjs-zod';
 
 export class SignInDto extends createZodDto(signInSchema) {}
 export class AccountDto extends createZodDto(accountSchema) {}
 export class UpdateAccountDto extends createZodDto(updateAccountSchema) {}
 export class ChangePasswordDto extends createZodDto(changePasswordSchema) {}
+
+export class AccessKeyPageDto extends createZodDto(accessKeyPageSchema) {}
+export class AccessKeyQueryDto extends createZodDto(pageQuerySchema) {}
+export class CreateAccessKeyDto extends createZodDto(createAccessKeySchema) {}
+export class CreatedAccessKeyDto extends createZodDto(createdAccessKeySchema) {}
