@@ -2,7 +2,7 @@ import { accountSchema, memberPageSchema, projectPageSchema, projectSchema } fro
 import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { newPerson, newProject } from './support/factories.js';
-import { newRecording } from './support/project-contents.js';
+import { newLimitSet, newRecording } from './support/project-contents.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
 
 let test: TestApp;
@@ -88,6 +88,29 @@ describe('projects', () => {
     expect(names(await manager.get('/api/projects'))).toContain('Old work');
   });
 
+  it('compare with a published limit set or one of their own', async () => {
+    const other = await newProject(test.database);
+    const userId = test.people.manager.id;
+    const own = await newLimitSet(test.database, { projectId: test.project.id, userId });
+    const foreign = await newLimitSet(test.database, { projectId: other.id, userId });
+    const path = `/api/projects/${test.project.id}`;
+    for (const id of ['iec61000-3-2.classA', null, own.id]) {
+      const { body } = await manager.patch(path).send({ comparisonLimitSetId: id }).expect(200);
+      expect(body.comparisonLimitSetId).toBe(id);
+    }
+    const upper = { comparisonLimitSetId: own.id.toUpperCase() };
+    expect((await manager.patch(path).send(upper)).body.comparisonLimitSetId).toBe(own.id);
+    for (const id of ['no-such-set', foreign.id]) {
+      const change = { comparisonLimitSetId: id };
+      const refused = await manager.patch(path).send(change).expect(422);
+      expect(refused.body.errors[0].path).toBe('comparisonLimitSetId');
+      await manager
+        .post('/api/projects')
+        .send({ name: 'New', ...change })
+        .expect(422);
+    }
+  });
+
   it('keep what a change does not name', async () => {
     const { body } = await manager
       .post('/api/projects')
@@ -131,6 +154,14 @@ describe('members', () => {
     expect(changed.body.role).toBe('analyst');
     await manager.delete(`${address()}/${person.id}`).expect(204);
     await manager.delete(`${address()}/${person.id}`).expect(404);
+  });
+
+  it('are named by an id, and a malformed one is said to be so', async () => {
+    const path = `/api/projects/${test.project.id}/members/someone`;
+    for (const request of [manager.patch(path).send({ role: 'guest' }), manager.delete(path)]) {
+      const { body } = await request.expect(400);
+      expect(body).toMatchObject({ code: 'invalid-request', errors: [{ path: 'userId' }] });
+    }
   });
 
   it('keep one manager: the last can neither step down nor leave', async () => {

@@ -1,15 +1,4 @@
-import {
-  Body,
-  Controller,
-  Delete,
-  Get,
-  HttpCode,
-  Param,
-  ParseUUIDPipe,
-  Patch,
-  Post,
-  Query,
-} from '@nestjs/common';
+import { Body, Controller, Delete, Get, HttpCode, Param, Patch, Post, Query } from '@nestjs/common';
 import { ApiNoContentResponse, ApiTags } from '@nestjs/swagger';
 import { ZodResponse } from 'nestjs-zod';
 import { RequirePermission } from '../access/require-permission.decorator.js';
@@ -18,6 +7,7 @@ import {
   AddMemberDto,
   MemberDto,
   MemberPageDto,
+  MemberParams,
   MemberQueryDto,
   UpdateMemberDto,
 } from './dto/projects.dto.js';
@@ -48,11 +38,7 @@ export class MembersController {
   @RequirePermission('member.manage', { resource: 'project' })
   @ZodResponse({ status: 200, type: MemberDto })
   @ApiProblem(409, 'No manager would be left')
-  setRole(
-    @Param('id') id: string,
-    @Param('userId', ParseUUIDPipe) userId: string,
-    @Body() input: UpdateMemberDto,
-  ) {
+  setRole(@Param() { id, userId }: MemberParams, @Body() input: UpdateMemberDto) {
     return this.members.setRole(id, userId, input);
   }
 
@@ -61,7 +47,7 @@ export class MembersController {
   @RequirePermission('member.manage', { resource: 'project' })
   @ApiNoContentResponse({ description: 'The person is no member any more' })
   @ApiProblem(409, 'No manager would be left')
-  remove(@Param('id') id: string, @Param('userId', ParseUUIDPipe) userId: string): Promise<void> {
+  remove(@Param() { id, userId }: MemberParams): Promise<void> {
     return this.members.remove(id, userId);
   }
 }

@@ -2,6 +2,7 @@ import { Body, Controller, Get, Param, Patch, Post, Query } from '@nestjs/common
 import { ApiTags } from '@nestjs/swagger';
 import { ZodResponse } from 'nestjs-zod';
 import { RequirePermission } from '../access/require-permission.decorator.js';
+import { ApiProblem } from '../common/api-problem.decorator.js';
 import { CurrentUser } from '../common/current-user.decorator.js';
 import type { SignedInUser } from '../common/request.js';
 import {
@@ -28,6 +29,7 @@ export class ProjectsController {
   @Post()
   @RequirePermission('project.create')
   @ZodResponse({ status: 201, type: ProjectDto, description: 'The new project, managed by who made it' })
+  @ApiProblem(422, 'The limit set to compare with is not a published one')
   create(@CurrentUser() user: SignedInUser, @Body() input: CreateProjectDto) {
     return this.projects.create(user, input);
   }
@@ -42,6 +44,7 @@ export class ProjectsController {
   @Patch(':id')
   @RequirePermission('project.update', { resource: 'project' })
   @ZodResponse({ status: 200, type: ProjectDto })
+  @ApiProblem(422, 'The limit set to compare with is neither published nor one of the project')
   update(@CurrentUser() user: SignedInUser, @Param('id') id: string, @Body() input: UpdateProjectDto) {
     return this.projects.update(user, id, input);
   }

@@ -6,7 +6,7 @@ import { likePattern } from '../common/paging.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 
-const { projects, members, recordings, reports } = schema;
+const { projects, limitSets, members, recordings, reports } = schema;
 
 export type NewProject = typeof projects.$inferInsert;
 export type ProjectChange = Partial<
@@ -74,6 +74,12 @@ export class ProjectsRepository {
   /** Makes changes of one project's members wait for one another. */
   async lock(tx: Tx, id: string): Promise<void> {
     await tx.select({ id: projects.id }).from(projects).where(eq(projects.id, id)).for('update');
+  }
+
+  /** Whether a custom limit set is one of the project. */
+  async hasLimitSet(projectId: string, id: string): Promise<boolean> {
+    const ownSet = and(eq(limitSets.projectId, projectId), eq(limitSets.id, id));
+    return (await this.database.$count(limitSets, ownSet)) > 0;
   }
 
   private selectFor(userId: string) {

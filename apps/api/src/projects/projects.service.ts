@@ -1,6 +1,13 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { CreateProject, Project, ProjectQuery, UpdateProject } from '@overtally/contracts';
+import {
+  idSchema,
+  type CreateProject,
+  type Project,
+  type ProjectQuery,
+  type UpdateProject,
+} from '@overtally/contracts';
 import type { Database } from '@overtally/db';
+import { findPublishedLimitSet } from '@overtally/limits';
 import { z } from 'zod';
 import { decodeCursor, pageOfRows } from '../common/paging.js';
 import { problem } from '../common/problem.js';
@@ -27,10 +34,14 @@ export class ProjectsService {
     return pageOfRows(rows, limit, (row) => [row.createdAt.toISOString(), row.id], toProject);
   }
 
-  /** Makes a project with the person as its manager. */
+  /**
+   * Makes a project with the person as its manager.
+   * @throws 422 for a limit set to compare with that is not a published one
+   */
   async create(user: SignedInUser, input: CreateProject): Promise<Project> {
+    const comparisonLimitSetId = await this.comparison(null, input.comparisonLimitSetId);
     const id = await this.database.transaction(async (tx) => {
-      const made = await this.repository.insert(tx, { ...input, createdById: user.id });
+      const made = await this.repository.insert(tx, { ...input, comparisonLimitSetId, createdById: user.id });
       await this.members.insert(tx, made, user.id, 'manager');
       return made;
     });
@@ -43,16 +54,30 @@ export class ProjectsService {
     return toProject(row);
   }
 
+  /** @throws 422 for a limit set to compare with that is neither a published one nor of the project */
   async update(user: SignedInUser, id: string, { archived, ...change }: UpdateProject): Promise<Project> {
     const { archivedAt } = await this.get(user, id);
+    const setId = change.comparisonLimitSetId;
+    const comparison = setId !== undefined && { comparisonLimitSetId: await this.comparison(id, setId) };
     const isChanged = archived !== undefined && archived !== (archivedAt !== null);
     await this.database.transaction((tx) =>
       this.repository.update(tx, id, {
         ...change,
+        ...comparison,
         ...(isChanged && { archivedAt: archived ? new Date() : null }),
       }),
     );
     return this.get(user, id);
+  }
+
+  /** The id of a limit set in the form in which it is stored; the project is null until it is made. */
+  private async comparison(projectId: string | null, id: string | null): Promise<string | null> {
+    if (id === null || findPublishedLimitSet(id)) return id;
+    const custom = idSchema.safeParse(id).data;
+    const isOwn = projectId && custom && (await this.repository.hasLimitSet(projectId, custom));
+    if (isOwn) return custom;
+    const message = 'Choose a published limit set or one of this project';
+    throw problem(422, 'limit-set-unknown', message, [{ path: 'comparisonLimitSetId', message }]);
   }
 }
 

@@ -1,6 +1,7 @@
 import {
   addMemberSchema,
   createProjectSchema,
+  idSchema,
   memberPageSchema,
   memberSchema,
   pageQuerySchema,
@@ -11,6 +12,7 @@ import {
   updateProjectSchema,
 } from '@overtally/contracts';
 import { createZodDto } from 'nestjs-zod';
+import { z } from 'zod';
 
 export class ProjectDto extends createZodDto(projectSchema) {}
 export class ProjectPageDto extends createZodDto(projectPageSchema) {}
@@ -18,6 +20,7 @@ export class ProjectQueryDto extends createZodDto(projectQuerySchema) {}
 export class CreateProjectDto extends createZodDto(createProjectSchema) {}
 export class UpdateProjectDto extends createZodDto(updateProjectSchema) {}
 
+export class MemberParams extends createZodDto(z.object({ id: idSchema, userId: idSchema })) {}
 export class MemberDto extends createZodDto(memberSchema) {}
 export class MemberPageDto extends createZodDto(memberPageSchema) {}
 export class MemberQueryDto extends createZodDto(pageQuerySchema) {}
