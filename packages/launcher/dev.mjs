@@ -60,7 +60,7 @@ async function dev() {
   const databaseUrl = await productDatabase(dataDirectory);
   const serving = serveNewest({ databaseUrl, dataDirectory, host, port });
   const vite = startVite(port, webPort);
-  console.log(welcomeText(webAddress, await demoPeople()));
+  console.log(welcomeText(webAddress, await demoPeople(host)));
   const code = await Promise.race([vite.exited, serving]);
   throw new LauncherError(`Vite ended unexpectedly (exit code ${code}, see above).`);
 }

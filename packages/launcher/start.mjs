@@ -14,7 +14,7 @@ async function start() {
   const api = startApi({ databaseUrl, dataDirectory, host, port });
   const address = localAddress(host, port);
   await waitUntilHealthy(address, api);
-  console.log(welcomeText(address, await demoPeople()));
+  console.log(welcomeText(address, await demoPeople(host)));
 
   const code = await api.exited;
   throw new LauncherError(`The server ended unexpectedly (exit code ${code}, see above).`);

@@ -1,6 +1,7 @@
 /** The server process: its environment, its start and the moment it is ready. */
 import { join } from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
+import { demoSetting } from './demo-setting.mjs';
 import { LauncherError } from './lifecycle.mjs';
 import { rootDirectory } from './paths.mjs';
 import { startService } from './processes.mjs';
@@ -28,7 +29,7 @@ export function startApi({ databaseUrl, dataDirectory, host, port }) {
     PORT: String(port),
     PUBLIC_URL: process.env.PUBLIC_URL || localAddress(host, port),
     WEB_DIST: process.env.WEB_DIST || join(rootDirectory, 'apps/web/dist'),
-    DEMO: process.env.DEMO || 'on',
+    DEMO: demoSetting(process.env, host),
     LOG_FORMAT: process.env.LOG_FORMAT || 'pretty',
     SESSION_SECRET: sessionSecret(dataDirectory),
   };

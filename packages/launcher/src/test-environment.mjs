@@ -9,7 +9,7 @@ import { dataDirectory, rootDirectory } from './paths.mjs';
 
 /** Settings of an installation, which must not reach a test. */
 const productSettings =
-  /^(DATABASE_URL|DATA_DIR|PORT|HOST|STORAGE|S3_.*|SMTP_URL|WORKER|DEMO|SESSION_SECRET|PUBLIC_URL|ADMIN_.*)$/;
+  /^(DATABASE_URL|DATA_DIR|PORT|HOST|STORAGE|S3_.*|SMTP_URL|WORKER|DEMO|SESSION_SECRET|PUBLIC_URL|TRUST_PROXY|ADMIN_.*)$/;
 
 /** @returns {string} the folder that takes the reports of a test run (REPORT_DIR) */
 export function reportDirectory() {
