@@ -59,7 +59,13 @@ export function Component() {
             ) : null}
           </>
         ),
-        verdicts: ({ id }) => <VerdictList analysisId={id} subject={recording.data.number} />,
+        verdicts: ({ id }) => (
+          <VerdictList
+            analysisId={id}
+            subject={recording.data.number}
+            verdictActions={({ id: verdictId }) => <PutIntoReport project={project} verdictId={verdictId} />}
+          />
+        ),
       }}
       onDeleted={() => void navigate(paths.recordings(project.id))}
     />
@@ -89,8 +95,19 @@ function JudgeButton({ project, subject, analysis, channel }: JudgeButtonProps) 
         channel={channel}
         limitSetId={project.comparisonLimitSetId}
         subject={subject}
+        verdictActions={({ id }) => <PutIntoReport project={project} verdictId={id} />}
       />
     </>
+  );
+}
+
+/** The way from a verdict to a new report that begins with it. */
+function PutIntoReport({ project, verdictId }: { project: Project; verdictId: string }) {
+  if (!holds('report.write', project.role)) return null;
+  return (
+    <Button asChild variant="solid">
+      <RouterLink to={paths.newReport(project.id, [verdictId])}>Put into a report</RouterLink>
+    </Button>
   );
 }
 

@@ -17,9 +17,9 @@ import { useProjectId } from '../../use-project-id.js';
 
 type Shown = ReportStatus | 'all';
 
-const shownOptions = [
-  { value: 'all' as Shown, label: 'All' },
-  ...reportStatusSchema.options.map((value) => ({ value: value as Shown, label: statusWords[value] })),
+const shownOptions: readonly { value: Shown; label: string }[] = [
+  { value: 'all', label: 'All' },
+  ...reportStatusSchema.options.map((value) => ({ value, label: statusWords[value] })),
 ];
 
 export function Component() {

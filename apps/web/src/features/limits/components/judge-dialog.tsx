@@ -1,7 +1,7 @@
 import { Button } from '@chakra-ui/react';
 import type { ChannelAnalysis, LimitSet, Verdict } from '@overtally/contracts';
 import { useQuery } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { EmptyState } from '../../../components/empty-state.js';
 import { ErrorState } from '../../../components/error-state.js';
 import { LoadingState } from '../../../components/loading-state.js';
@@ -26,7 +26,8 @@ interface JudgeDialogProps {
   channel?: number;
   /** Set to begin with, where it fits the channel. */
   limitSetId?: string | null;
-  onJudged?: (verdict: Verdict) => void;
+  /** What can be done with the verdict once it is stored. */
+  verdictActions?: (verdict: Verdict) => ReactNode;
 }
 
 /** Applies a limit set to a channel by a decision rule: choose, see what it leads to, store the verdict. */
@@ -55,7 +56,7 @@ function Judging({
   limitSets,
   ...props
 }: Omit<JudgeDialogProps, 'open'> & { limitSets: readonly LimitSet[] }) {
-  const { onClose, projectId, analysisId, channels, subject, onJudged } = props;
+  const { onClose, projectId, analysisId, channels, subject, verdictActions } = props;
   const [draft, setDraft] = useState(() => firstDraft(props, limitSets));
   const create = useCreateVerdict(projectId, analysisId);
   const set = limitSets.find(({ id }) => id === draft.limitSetId);
@@ -63,15 +64,12 @@ function Judging({
   const complete = set !== undefined && read.missing.length === 0 && Object.keys(read.problems).length === 0;
   const verdict = create.data;
   const judge = () =>
-    create.mutate(
-      {
-        limitSetId: draft.limitSetId,
-        channel: draft.channel,
-        decisionRule: draft.decisionRule,
-        parameters: read.parameters,
-      },
-      { onSuccess: (made) => onJudged?.(made) },
-    );
+    create.mutate({
+      limitSetId: draft.limitSetId,
+      channel: draft.channel,
+      decisionRule: draft.decisionRule,
+      parameters: read.parameters,
+    });
   return (
     <Modal
       open
@@ -82,9 +80,8 @@ function Judging({
         verdict ? (
           <>
             <Button onClick={() => create.reset()}>Judge again</Button>
-            <Button variant="solid" onClick={onClose}>
-              Close
-            </Button>
+            <Button onClick={onClose}>Close</Button>
+            {verdictActions?.(verdict)}
           </>
         ) : (
           <>

@@ -20,10 +20,12 @@ interface VerdictListProps {
   subject: string;
   /** The way to judge, where the reader may. */
   actions?: ReactNode;
+  /** What can be done with an opened verdict. */
+  verdictActions?: (verdict: Verdict) => ReactNode;
 }
 
 /** Verdicts on an analysis, the newest first; each opens with its numbers. */
-export function VerdictList({ analysisId, subject, actions }: VerdictListProps) {
+export function VerdictList({ analysisId, subject, actions, verdictActions }: VerdictListProps) {
   const verdicts = useQuery(analysisVerdictsQuery(analysisId));
   const [opened, setOpened] = useState<Verdict | null>(null);
   return (
@@ -42,7 +44,13 @@ export function VerdictList({ analysisId, subject, actions }: VerdictListProps) 
         <VerdictTable verdicts={verdicts.data} onOpen={setOpened} />
       ) : null}
       {opened ? (
-        <Modal open onClose={() => setOpened(null)} title={`Verdict on ${subject}`} size="xl">
+        <Modal
+          open
+          onClose={() => setOpened(null)}
+          title={`Verdict on ${subject}`}
+          size="xl"
+          footer={verdictActions?.(opened)}
+        >
           <VerdictView verdict={opened} subject={subject} />
         </Modal>
       ) : null}
