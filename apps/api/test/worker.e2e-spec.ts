@@ -59,7 +59,10 @@ describe('a worker beside the API', () => {
     const jobs = test.app.get(JobsService);
     const repeat = () =>
       test.database.transaction((tx) =>
-        jobs.enqueue(tx, readRecordingJob, { recordingId: id, readId: randomUUID() }),
+        jobs.enqueue(tx, readRecordingJob, {
+          ...{ recordingId: id, readId: randomUUID(), options: {} },
+          requestedById: test.people.technician.id,
+        }),
       );
     await repeat();
     const workers = await Promise.all([startWorker(test), startWorker(test)]);

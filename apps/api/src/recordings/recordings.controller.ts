@@ -58,7 +58,7 @@ export class RecordingsController {
   @ApiOperation({ summary: 'Read the source again under other import options; supersedes earlier analyses' })
   @ZodResponse({ status: 202, type: RecordingDto })
   @ApiProblem(409, 'It is being read')
-  readAgain(@Param('id') id: string, @Body() options: ImportOptionsDto) {
-    return this.recordings.readAgain(id, options);
+  readAgain(@Param('id') id: string, @CurrentUser() user: SignedInUser, @Body() options: ImportOptionsDto) {
+    return this.recordings.readAgain(id, user.id, options);
   }
 }

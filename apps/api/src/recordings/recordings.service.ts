@@ -48,7 +48,8 @@ export class RecordingsService {
   }
 
   /** Keeps an uploaded file as a new recording and queues its reading. */
-  async upload({ projectId, uploadedById, fileName, staged, fields }: Upload): Promise<Recording> {
+  async upload({ projectId, uploadedById, staged, fields, ...upload }: Upload): Promise<Recording> {
+    const fileName = upload.fileName.replace(/\p{Cc}/gu, '');
     const { import: importOptions, capturedAt, name, ...bench } = fields;
     const key = sourceKey(projectId, staged.sha256);
     const id = await this.database.transaction(async (tx) => {
@@ -67,7 +68,7 @@ export class RecordingsService {
         sourceKey: key,
         importOptions: importOptions ?? {},
       });
-      await this.jobs.enqueue(tx, readRecordingJob, { recordingId, readId: randomUUID() });
+      await this.queueReading(tx, recordingId, importOptions ?? {}, uploadedById);
       return recordingId;
     });
     return this.get(id);
@@ -86,40 +87,47 @@ export class RecordingsService {
   }
 
   /** Reads the source again under other options. What the earlier reading gave stands until the new one is done. */
-  async readAgain(id: string, options: ImportOptions): Promise<Recording> {
+  async readAgain(id: string, userId: string, options: ImportOptions): Promise<Recording> {
     await this.database.transaction(async (tx) => {
       const recording = await this.locked(tx, id);
       if (isBeingRead(recording))
         throw problem(409, 'being-read', 'The recording is being read; wait until it is done');
       await this.runs.cancelAll(tx, id);
-      await this.repository.update(tx, id, {
-        importOptions: options,
-        status: 'received',
-        progress: 0,
-        problem: null,
-      });
-      await this.jobs.enqueue(tx, readRecordingJob, { recordingId: id, readId: randomUUID() });
+      await this.repository.update(tx, id, { status: 'received', progress: 0, problem: null });
+      await this.queueReading(tx, recording.id, options, userId);
     });
     return this.get(id);
   }
 
   /** Deletes a recording and all that was computed from it, unless a report refers to one of its verdicts. */
   async delete(id: string): Promise<void> {
-    const key = await this.database.transaction(async (tx) => {
-      const recording = await this.locked(tx, id);
+    const recording = await this.database.transaction(async (tx) => {
+      const row = await this.locked(tx, id);
       const titles = await this.repository.reportsWith(tx, id);
       if (titles.length > 0) {
         const named = titles.map((title) => `“${title}”`).join(', ');
         throw problem(409, 'in-report', `A verdict on this recording stands in ${named}; take it out first`);
       }
       await this.repository.delete(tx, id);
-      return recording.sourceKey;
+      return row;
     });
-    await this.storage.deleteAll(recordingPrefix(id));
+    // Keys are spelled as the row has them, which an id in a path need not be.
+    await this.storage.deleteAll(recordingPrefix(recording.id));
     await this.database.transaction(async (tx) => {
-      await this.repository.lockSource(tx, key);
-      if (!(await this.repository.isSourceUsed(tx, key))) await this.storage.delete(key);
+      await this.repository.lockSource(tx, recording.sourceKey);
+      const isUsed = await this.repository.isSourceUsed(tx, recording.sourceKey);
+      if (!isUsed) await this.storage.delete(recording.sourceKey);
     });
+  }
+
+  private queueReading(
+    tx: Tx,
+    recordingId: string,
+    options: ImportOptions,
+    requestedById: string,
+  ): Promise<void> {
+    const readId = randomUUID();
+    return this.jobs.enqueue(tx, readRecordingJob, { recordingId, readId, options, requestedById });
   }
 
   private async locked(tx: Tx, id: string): Promise<RecordingRow> {

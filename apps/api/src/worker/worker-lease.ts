@@ -1,4 +1,7 @@
+import { Logger } from '@nestjs/common';
 import type { Pool, PoolClient } from 'pg';
+
+const logger = new Logger('Worker');
 
 /** First key of the advisory locks by which workers show that they live. */
 const lockClass = 4311;
@@ -12,21 +15,29 @@ const graceS = 5;
 export class WorkerLease {
   private client: PoolClient | undefined;
 
+  /** @param answerMs time after which a connection that does not answer counts as lost */
   constructor(
     private readonly pool: Pool,
     private readonly workerId: string,
+    private readonly answerMs = 3_000,
   ) {}
 
-  /** Takes the lock, also again after the connection was lost. */
+  /** Takes the lock, also again after the connection was lost, with or without a word. */
   async hold(): Promise<void> {
-    if (this.client !== undefined) return;
+    if (this.client !== undefined && (await this.answers(this.client))) return;
+    this.release();
     const client = await this.pool.connect();
     client.once('error', () => {
-      this.client = undefined;
+      if (this.client === client) this.release();
     });
     try {
-      await client.query('select pg_advisory_lock($1, hashtext($2))', [lockClass, this.workerId]);
-      this.client = client;
+      // The server may not have noticed the end of the connection before; the next call then takes the lock.
+      const { rows } = await client.query<{ isHeld: boolean }>(
+        'select pg_try_advisory_lock($1, hashtext($2)) as "isHeld"',
+        [lockClass, this.workerId],
+      );
+      if (rows[0]?.isHeld) this.client = client;
+      else client.release(true);
     } catch (error) {
       client.release(true);
       throw error;
@@ -35,8 +46,22 @@ export class WorkerLease {
 
   /** Ends the connection and the lock with it. */
   release(): void {
-    this.client?.release(true);
+    const { client } = this;
     this.client = undefined;
+    client?.release(true);
+  }
+
+  /** Whether the connection, and with it the lock, is still there. */
+  private async answers(client: PoolClient): Promise<boolean> {
+    // The types of the driver leave out the time limit of a query.
+    const question = { text: 'select 1', query_timeout: this.answerMs };
+    try {
+      await client.query(question);
+      return true;
+    } catch (error) {
+      logger.warn({ err: error }, 'The connection by which a worker shows that it lives was lost');
+      return false;
+    }
   }
 }
 

@@ -31,23 +31,22 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
     private readonly pool: ComputePool,
   ) {}
 
-  async run({ recordingId, readId }: Payload, context: JobContext): Promise<void> {
-    const recording = await this.begin(recordingId);
+  async run(payload: Payload, context: JobContext): Promise<void> {
+    const recording = await this.begin(payload.recordingId);
     if (recording === undefined) return;
-    const prefix = readPrefix(recordingId, readId);
-    const result = await this.read(recording, prefix, context);
+    const result = await this.read(recording, payload, context);
     if (result === undefined) {
-      await this.storage.deleteAll(`${prefix}/`);
+      await this.discard(payload);
     } else if (result.ok) {
-      await this.keep(recordingId, prefix, result);
+      await this.keep(payload, result);
     } else {
-      await this.fail(recordingId, result.problem);
+      await this.fail(recording.id, result.problem);
     }
   }
 
-  async giveUp({ recordingId, readId }: Payload, problem: ReadProblem): Promise<void> {
-    await this.fail(recordingId, problem);
-    await this.storage.deleteAll(`${readPrefix(recordingId, readId)}/`);
+  async giveUp(payload: Payload, problem: ReadProblem): Promise<void> {
+    await this.fail(payload.recordingId, problem);
+    await this.discard(payload);
   }
 
   /** Marks the reading as begun; undefined when there is nothing left to read. */
@@ -63,15 +62,15 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
   /** The outcome of reading; undefined when the recording was deleted meanwhile. */
   private async read(
     recording: RecordingRow,
-    prefix: string,
+    { readId, options: importOptions }: Payload,
     context: JobContext,
   ): Promise<ReadTaskResult | undefined> {
     const input: ReadTaskInput = {
       sourceKey: recording.sourceKey,
       fileName: recording.fileName,
       sizeBytes: recording.fileSize,
-      options: recording.importOptions,
-      outputPrefix: prefix,
+      options: importOptions,
+      outputPrefix: readPrefix(recording.id, readId),
     };
     try {
       return await watched(
@@ -85,10 +84,11 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
     }
   }
 
-  private async keep(recordingId: string, prefix: string, result: ReadOk): Promise<void> {
+  private async keep(payload: Payload, result: ReadOk): Promise<void> {
+    const { recordingId, options: importOptions, requestedById: startedById } = payload;
     const outdated = await this.database.transaction(async (tx) => {
       const recording = await this.repository.lock(tx, recordingId);
-      if (recording?.status !== 'reading') return [`${prefix}/`];
+      if (recording?.status !== 'reading') return undefined;
       const earlier = await this.repository.channelsOf(tx, recordingId);
       await this.repository.replaceChannels(
         tx,
@@ -97,6 +97,7 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
       );
       const { format, metadata, sampleRateHz, sampleCount, warnings } = result;
       await this.repository.update(tx, recordingId, {
+        importOptions,
         format,
         metadata,
         sampleRateHz,
@@ -104,11 +105,22 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
         warnings,
       });
       const settings = await this.repository.projectSettings(tx, recording.projectId);
-      const startedById = recording.uploadedById;
       await this.runs.start(tx, { recordingId, settings, startedById, replacesEarlier: true });
       return [...new Set(earlier.map(({ samplesKey }) => `${dirname(samplesKey)}/`))];
     });
-    for (const folder of outdated) await this.storage.deleteAll(folder);
+    if (outdated === undefined) await this.discard(payload);
+    for (const folder of outdated ?? []) await this.storage.deleteAll(folder);
+  }
+
+  /** Removes what a reading stored, unless the same reading, run twice, was kept the other time. */
+  private async discard({ recordingId, readId }: Payload): Promise<void> {
+    const folder = `${readPrefix(recordingId, readId)}/`;
+    await this.database.transaction(async (tx) => {
+      await this.repository.lock(tx, recordingId);
+      const current = await this.repository.channelsOf(tx, recordingId);
+      if (current.some(({ samplesKey }) => samplesKey.startsWith(folder))) return;
+      await this.storage.deleteAll(folder);
+    });
   }
 
   private async fail(recordingId: string, problem: ReadProblem): Promise<void> {
