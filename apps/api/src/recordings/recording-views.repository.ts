@@ -12,7 +12,13 @@ const { analyses, analysisChannels, channels, harmonics, recordings, users } = s
 
 const sortColumns = { number: recordings.number, name: recordings.name, createdAt: recordings.createdAt };
 type SortKey = keyof typeof sortColumns;
-const cursorShape = z.tuple([z.union([z.string(), z.number()]), z.uuid()]);
+
+/** What a cursor holds under each order: the value sorted by, and the id that tells equal ones apart. */
+const cursorShapes = {
+  number: z.tuple([z.int32(), z.uuid()]),
+  name: z.tuple([z.string().refine((name) => !name.includes('\0')), z.uuid()]),
+  createdAt: z.tuple([z.iso.datetime(), z.uuid()]),
+};
 
 /** Recordings as the outside sees them, a whole page in four queries. */
 @Injectable()
@@ -152,7 +158,7 @@ function matches({ q, status }: RecordingQuery): SQL[] {
 
 /** Rows behind the cursor, in the order of sorting (keyset paging). */
 function after(cursor: string | undefined, key: SortKey, descending: boolean): SQL | undefined {
-  const place = decodeCursor(cursor, cursorShape);
+  const place = decodeCursor<z.ZodType<[string | number, string]>>(cursor, cursorShapes[key]);
   if (place === undefined) return undefined;
   const [value, id] = place;
   const column = sortColumns[key];
