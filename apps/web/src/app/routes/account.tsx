@@ -1,6 +1,7 @@
 import { PageHeader } from '../../components/page-header.js';
 import { Section } from '../../components/section.js';
 import { ThemeChoice } from '../../components/theme-choice.js';
+import { AccessKeys } from '../../features/account/components/access-keys.js';
 import { NameForm } from '../../features/account/components/name-form.js';
 import { PasswordForm } from '../../features/account/components/password-form.js';
 import { useAccount } from '../../features/account/hooks/use-account.js';
@@ -17,6 +18,7 @@ export function Component() {
       <Section title="Password">
         <PasswordForm />
       </Section>
+      <AccessKeys />
       <Section title="Theme" lead="Kept in this browser.">
         <ThemeChoice />
       </Section>
