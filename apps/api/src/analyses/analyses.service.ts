@@ -39,12 +39,13 @@ export class AnalysesService {
 
   /** An analysis with all its figures. */
   async get(id: string): Promise<Analysis> {
-    const [row, channels, harmonics] = await Promise.all([
-      this.repository.find(id),
+    const row = await this.repository.find(id);
+    if (row === undefined) throw noSuchAnalysis();
+    // After the state: an analysis that is done has its figures, whereas those read before may lack them.
+    const [channels, harmonics] = await Promise.all([
       this.repository.channelsOf(id),
       this.repository.harmonicsOf(id),
     ]);
-    if (row === undefined) throw noSuchAnalysis();
     return toAnalysis(row, channels, harmonics);
   }
 

@@ -9,6 +9,7 @@ import {
 import { ComputeStopped, type ComputeContext } from '../../jobs/compute-task.js';
 import { putNpy, readNpy } from '../../storage/npy.js';
 import { missingValuesProblem } from './missing-values.js';
+import { tooLongProblem } from './record-length.js';
 
 export interface AnalyseTaskChannel {
   index: number;
@@ -56,6 +57,8 @@ export async function analyseTask(
   const { settings, sampleRateHz } = input;
   const { first, end } = spanInSamples(input);
   if (end - first < 2) return { ok: false, problem: spanProblem(input) };
+  const tooLong = tooLongProblem(end - first, input.channels.length, sampleRateHz);
+  if (tooLong !== null) return { ok: false, problem: tooLong };
   const channels: ChannelInput[] = [];
   for (const channel of input.channels) {
     const samples = await loadScaled(channel, first, end, context);
