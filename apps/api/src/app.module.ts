@@ -1,12 +1,13 @@
 import { Module, type DynamicModule } from '@nestjs/common';
 import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE } from '@nestjs/core';
 import { LoggerModule } from 'nestjs-pino';
-import { ZodSerializerInterceptor, ZodValidationPipe } from 'nestjs-zod';
+import { ZodSerializerInterceptor } from 'nestjs-zod';
 import { AccessModule } from './access/access.module.js';
 import { AnalysesModule } from './analyses/analyses.module.js';
 import { AuthModule } from './auth/auth.module.js';
 import { loggerParams } from './common/logging.js';
 import { ProblemFilter } from './common/problem.filter.js';
+import { ValidationPipe } from './common/validation.pipe.js';
 import { AppConfig } from './config/app-config.js';
 import { ConfigModule } from './config/config.module.js';
 import { DatabaseModule } from './database/database.module.js';
@@ -51,7 +52,7 @@ export class AppModule {
       ],
       providers: [
         { provide: APP_FILTER, useClass: ProblemFilter },
-        { provide: APP_PIPE, useClass: ZodValidationPipe },
+        { provide: APP_PIPE, useClass: ValidationPipe },
         { provide: APP_INTERCEPTOR, useClass: ZodSerializerInterceptor },
       ],
     };

@@ -11,6 +11,7 @@ import { ImportPreviewDto, RecordingDto } from './dto/recording.dto.js';
 import { PreviewDto, previewBody, uploadBody, UploadDto } from './dto/upload.dto.js';
 import { importPreview } from './import-preview.js';
 import { RecordingsService } from './recordings.service.js';
+import { formLimits } from './uploading/form-limits.js';
 import type { StagedFile } from './uploading/staging-engine.js';
 import { UploadInterceptor } from './uploading/upload.interceptor.js';
 
@@ -45,7 +46,7 @@ export class UploadsController {
   @UseInterceptors(
     FileInterceptor('head', {
       storage: multer.memoryStorage(),
-      limits: { fileSize: maxHeadBytes, files: 1 },
+      limits: { ...formLimits, fileSize: maxHeadBytes },
     }),
   )
   @RequirePermission('recording.upload', { resource: 'project' })

@@ -91,8 +91,12 @@ export class WaveformService {
   }
 }
 
+/** Values in the channel's unit; null where none is stored, or where a damaged one is beyond all numbers. */
 function scaler({ gain, offset }: ChannelRow): (raw: number) => number | null {
-  return (raw) => (Number.isNaN(raw) ? null : raw * gain + offset);
+  return (raw) => {
+    const value = raw * gain + offset;
+    return Number.isFinite(value) ? value : null;
+  };
 }
 
 function scaled(stream: Readable, channel: ChannelRow): Readable {

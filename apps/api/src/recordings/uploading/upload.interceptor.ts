@@ -6,9 +6,8 @@ import { problem } from '../../common/problem.js';
 import type { AppRequest } from '../../common/request.js';
 import { AppConfig } from '../../config/app-config.js';
 import { Storage } from '../../storage/storage.js';
+import { formLimits } from './form-limits.js';
 import { StagingEngine, type StagedFile } from './staging-engine.js';
-
-const textLimitBytes = 256 * 1024;
 
 /** Receives the field `file` of a multipart request into storage; whatever is not put to use is dropped again. */
 @Injectable()
@@ -22,7 +21,7 @@ export class UploadInterceptor implements NestInterceptor {
     this.receive = multer({
       storage: new StagingEngine(storage),
       defParamCharset: 'utf8',
-      limits: { fileSize: config.maxUploadBytes, files: 1, fields: 20, fieldSize: textLimitBytes },
+      limits: { ...formLimits, fileSize: config.maxUploadBytes },
     }).single('file');
   }
 
