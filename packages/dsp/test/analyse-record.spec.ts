@@ -45,7 +45,7 @@ describe('analyseRecord', () => {
       );
       // JSON writes null for what is not finite; everything else comes back as it was.
       expect(JSON.parse(JSON.stringify(channels[0]!.harmonics))).toEqual(channels[0]!.harmonics);
-      expect(channels[0]!.rms / 1e99).toBeCloseTo(10 / Math.SQRT2, 6);
+      expect((channels[0]!.rms ?? 0) / 1e99).toBeCloseTo(10 / Math.SQRT2, 6);
     }
   });
 
