@@ -6,41 +6,47 @@ import {
 } from '@nestjs/common';
 import { demoCapturePath } from '@overtally/fixtures';
 import { createReadStream } from 'node:fs';
+import { setTimeout as wait } from 'node:timers/promises';
 import { RecordingsService } from '../recordings/recordings.service.js';
 import { Storage } from '../storage/storage.js';
 import { DemoAccounts, type PendingCapture } from './demo-accounts.js';
+import { DemoJudgements } from './demo-judgements.js';
+
+const askAgainMs = 1_000;
 
 /** Fills a new installation with people, projects and captures to look at. */
 @Injectable()
 export class DemoService implements OnApplicationBootstrap, BeforeApplicationShutdown {
   private readonly logger = new Logger('Demo');
-  private uploading: Promise<void> = Promise.resolve();
+  private filling: Promise<void> = Promise.resolve();
   private stopped = false;
 
   constructor(
     private readonly accounts: DemoAccounts,
+    private readonly judgements: DemoJudgements,
     private readonly recordings: RecordingsService,
     private readonly storage: Storage,
   ) {}
 
-  /** People can sign in as soon as the process answers; the captures come in meanwhile. */
+  /** People can sign in as soon as the process answers; captures and verdicts come in meanwhile. */
   async onApplicationBootstrap(): Promise<void> {
     if (await this.accounts.make()) this.logger.log('People and projects of the demonstration were made');
-    this.uploading = this.uploadPending().catch((error: unknown) =>
-      this.logger.error({ err: error }, 'Uploading the captures of the demonstration failed'),
+    this.filling = this.fill().catch((error: unknown) =>
+      this.logger.error({ err: error }, 'Filling the projects of the demonstration failed'),
     );
   }
 
   async beforeApplicationShutdown(): Promise<void> {
     this.stopped = true;
-    await this.uploading;
+    await this.filling;
   }
 
-  private async uploadPending(): Promise<void> {
+  private async fill(): Promise<void> {
     for (const pending of await this.accounts.pending()) {
       if (this.stopped) return;
       await this.upload(pending);
     }
+    while (!this.stopped && !(await this.judgements.make())) await wait(askAgainMs);
   }
 
   /** The same way as over HTTP: streamed into storage, then read and analysed by the queue. */
