@@ -331,15 +331,15 @@ describe('change of a recording', () => {
     expect(after.latestAnalysisId).not.toBe(before.latestAnalysisId);
   });
 
-  it('is deleted by an analyst with all its files, and not by a technician', async () => {
+  it('is deleted by who works at the bench with all its files, and not by a guest', async () => {
     const { body: page } = await technician
       .get(`/api/projects/${test.project.id}/recordings?q=R-0001`)
       .expect(200);
     const { id } = page.items[0] as Recording;
-    await technician.delete(`/api/recordings/${id}`).expect(403);
-    const analyst = await test.signIn('analyst');
-    await analyst.delete(`/api/recordings/${id}`).expect(204);
-    await analyst.get(`/api/recordings/${id}`).expect(404);
+    const guest = await test.signIn('guest');
+    await guest.delete(`/api/recordings/${id}`).expect(403);
+    await technician.delete(`/api/recordings/${id}`).expect(204);
+    await technician.get(`/api/recordings/${id}`).expect(404);
   });
 });
 
