@@ -14,8 +14,8 @@ import { expectAccessible, keepPicture, launchBrowser, signedInPage } from './su
 import { phaseCutCsv } from './support/job.js';
 import { personOf, startProduct, type Product } from './support/product.js';
 
-const title = 'Harmonic currents of the hood module';
-const noteText = 'Follows the firing angle';
+const title = 'Hood module at phase control, browser check';
+const noteText = 'Rises with the firing angle; checked at 60 degrees';
 
 let product: Product;
 let browser: Browser;
@@ -105,7 +105,11 @@ describe('from a recording to an issued report', () => {
     await page.getByRole('link', { name: 'New report' }).click();
     await page.getByLabel('Title').fill(title);
     await page.getByLabel('Summary').fill('Type test at phase control of 90 degrees.');
-    await page.getByRole('checkbox', { name: /class A/ }).check({ force: true });
+    // The demonstration may have judged this channel too: the newest verdict stands first.
+    await page
+      .getByRole('checkbox', { name: /R-0008 I, .*class A/ })
+      .first()
+      .check({ force: true });
     await page.getByRole('button', { name: 'Create the draft' }).click();
     await page.getByRole('heading', { name: title, level: 1 }).waitFor();
     await expectAccessible(page);
