@@ -54,7 +54,7 @@ export function Component() {
                 </RouterLink>
               </Button>
             ) : null}
-            {shown.analysis && mayJudge ? (
+            {shown.analysis?.supersededById === null && mayJudge ? (
               <JudgeButton {...shown} analysis={shown.analysis} {...named} />
             ) : null}
           </>
