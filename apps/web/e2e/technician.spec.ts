@@ -41,6 +41,15 @@ async function openProject(page: Page, name: RegExp): Promise<void> {
   await page.getByRole('heading', { name: 'Recordings', level: 1 }).waitFor();
 }
 
+/** A second of samples whose time runs back near the end, far behind what a preview sees. */
+function backwardsRows(): string {
+  const rows = Array.from(
+    { length: 30_000 },
+    (_, i) => `${(i / 30_000).toFixed(6)},${Math.sin(i / 95).toFixed(6)}`,
+  );
+  return [...rows, '0.5,0.1'].join('\n');
+}
+
 describe('a technician', () => {
   let context: BrowserContext;
   let page: Page;
@@ -112,8 +121,19 @@ describe('a technician', () => {
       mimeType: 'text/csv',
       buffer: Buffer.from(Array.from({ length: 3000 }, (_, i) => (i * 7919) % 256)),
     });
-    await dialog.getByRole('button', { name: 'Read with these settings' }).click();
-    const row = page.getByRole('row').filter({ hasText: 'garbage' });
+    await dialog.getByText(/not/).first().waitFor();
+    const read = dialog.getByRole('button', { name: 'Read with these settings' });
+    await read.and(page.locator(':disabled')).waitFor();
+    await dialog.getByRole('button', { name: 'Leave this file out' }).click();
+    await page.getByText('left out, not sent').waitFor();
+
+    // What the first 256 KiB do not show comes out when the file is read; the recording says it.
+    await page.getByLabel('Capture files').setInputFiles({
+      name: 'backwards.csv',
+      mimeType: 'text/csv',
+      buffer: Buffer.from(`t_s,u_V\n${backwardsRows()}`),
+    });
+    const row = page.getByRole('row').filter({ hasText: 'backwards' });
     await row
       .getByText(/Not read:/)
       .filter({ visible: true })

@@ -45,6 +45,16 @@ describe('upload queue', () => {
     expect(states(queue)).toEqual(['stopped', 'stopped', 'stopped']);
   });
 
+  it('remembers a file that was left out and sends nothing of it', () => {
+    const { open, send } = heldSender();
+    const queue = new UploadQueue('p', () => undefined, send);
+    queue.leaveOut(file('a.csv'));
+    expect(states(queue)).toEqual(['left-out']);
+    expect(open.size).toBe(0);
+    queue.forget(1);
+    expect(queue.snapshot()).toEqual([]);
+  });
+
   it('says why an upload failed and sends it again on request', async () => {
     const { open, send } = heldSender();
     const queue = new UploadQueue('p', () => undefined, send);

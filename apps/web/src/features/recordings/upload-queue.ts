@@ -5,7 +5,7 @@ export interface UploadItem {
   id: number;
   file: File;
   options: ImportOptions;
-  state: 'waiting' | 'sending' | 'done' | 'failed' | 'stopped';
+  state: 'waiting' | 'sending' | 'done' | 'failed' | 'stopped' | 'left-out';
   sentBytes: number;
   recording: Recording | null;
   error: unknown;
@@ -40,17 +40,18 @@ export class UploadQueue {
   readonly snapshot = (): readonly UploadItem[] => this.items;
 
   add(files: readonly { file: File; options: ImportOptions }[]): void {
-    const added = files.map(({ file, options }) => ({
-      id: this.nextId++,
-      file,
-      options,
-      state: 'waiting' as const,
-      sentBytes: 0,
-      recording: null,
-      error: null,
-    }));
+    const added = files.map(({ file, options }) => this.item(file, options, 'waiting'));
     this.change([...this.items, ...added]);
     this.fillLanes();
+  }
+
+  /** Remembers a file that was looked into and not sent, so that it does not vanish without a trace. */
+  leaveOut(file: File): void {
+    this.change([...this.items, this.item(file, {}, 'left-out')]);
+  }
+
+  private item(file: File, options: ImportOptions, state: UploadItem['state']): UploadItem {
+    return { id: this.nextId++, file, options, state, sentBytes: 0, recording: null, error: null };
   }
 
   /** Stops an upload that waits or is under way; the server drops what it has of it. */

@@ -29,7 +29,7 @@ const over = recording(3, {
       fundamentalHz: 50,
       rms: 5.6,
       thdFPercent: 50,
-      harmonicRms: [5, 0, 2.5],
+      harmonicRms: [5, 0, 2.5, ...Array.from({ length: 37 }, () => 0)],
     },
   ],
 });

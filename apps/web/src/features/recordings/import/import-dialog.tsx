@@ -16,6 +16,18 @@ import { useImportPreview } from './use-import-preview.js';
 /** A file about to be sent, or a recording whose kept source is to be read again. */
 export type ImportSource = { kind: 'file'; file: File } | { kind: 'recording'; recording: Recording };
 
+/** Problems that no setting of the form can mend. */
+const unreadable = new Set([
+  'empty-file',
+  'not-a-capture',
+  'not-riff',
+  'no-format-chunk',
+  'no-data-chunk',
+  'bad-format-chunk',
+  'header-cut',
+  'unsupported-encoding',
+]);
+
 interface ImportDialogProps {
   open: boolean;
   projectId: string;
@@ -50,7 +62,8 @@ function ImportForm({ projectId, source, pending = false, onClose, onRead }: Imp
   const shown = preview.data ?? null;
   const change = (part: Partial<typeof draft>) => setDraft((before) => ({ ...before, ...part }));
   const needsSampleRate = shown?.problem?.code === 'needs-sample-rate';
-  const blocked = Object.keys(faults).length > 0 || (needsSampleRate && !draft.sampleRateHz);
+  const hopeless = unreadable.has(shown?.problem?.code ?? '');
+  const blocked = hopeless || Object.keys(faults).length > 0 || (needsSampleRate && !draft.sampleRateHz);
   return (
     <Stack gap="5">
       {head.isError ? <ErrorState error={head.error} onRetry={() => void head.refetch()} /> : null}

@@ -14,7 +14,7 @@ function current(channel: number, thirdOrderA: number): ChannelSummary {
     fundamentalHz: 50,
     rms: 5,
     thdFPercent: 10,
-    harmonicRms: [5, 0.01, thirdOrderA],
+    harmonicRms: [5, 0.01, thirdOrderA, ...Array.from({ length: 37 }, () => 0.001)],
   };
 }
 
@@ -32,6 +32,15 @@ describe('comparison of a recording with a limit set', () => {
     expect(compareRecording({ summaries: [current(0, 2.3)] }, classA)).toMatchObject({
       words: 'within',
       tone: 'within',
+    });
+  });
+
+  it('calls nothing within that was not measured', () => {
+    // 1 kHz of sample rate reaches order 9 of 50 Hz; class A limits orders to 40.
+    const short = { ...current(0, 1), harmonicRms: [5, 0, 1, 0, 0, 0, 0, 0, 0] };
+    expect(compareRecording({ summaries: [short] }, classA)).toMatchObject({
+      words: 'within to order 9, the rest not measured',
+      tone: 'inkSoft',
     });
   });
 

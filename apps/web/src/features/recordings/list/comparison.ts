@@ -32,10 +32,13 @@ export function compareRecording(recording: Pick<Recording, 'summaries'>, set: L
     .toSorted((a, b) => worst(b.shares) - worst(a.shares));
   if (!nearest) return without(first, '');
   const over = worst(nearest.shares) > 100;
+  const measured = nearest.channel.harmonicRms.length;
+  const unmeasured = set.orders.some(({ order }) => order > measured);
+  const words = tallyWords(nearest.shares);
   return {
     ...nearest,
     compared: fitting.length,
-    words: tallyWords(nearest.shares),
-    tone: worst(nearest.shares) < 0 ? 'inkSoft' : over ? 'over' : 'within',
+    words: unmeasured ? `${words} to order ${measured}, the rest not measured` : words,
+    tone: over ? 'over' : unmeasured || worst(nearest.shares) < 0 ? 'inkSoft' : 'within',
   };
 }

@@ -25,7 +25,7 @@ const sortOptions = [
   { value: '-name', label: 'Name, Z to A' },
 ];
 
-/** Search, state, order and the limit set the rows are compared with. */
+/** Search, state, sorting and the limit set the rows are compared with. */
 export function ListToolbar({ filter, limitSets, limitSetId, onChange }: ListToolbarProps) {
   return (
     <Flex gap="3" wrap="wrap" align="flex-end" mb="3">
@@ -44,7 +44,7 @@ export function ListToolbar({ filter, limitSets, limitSetId, onChange }: ListToo
         </FormField>
       </Flex>
       <Flex flex="0 1 150px">
-        <FormField label="Order">
+        <FormField label="Sort by">
           <SelectInput
             options={sortOptions}
             value={filter.sort}

@@ -29,6 +29,10 @@ export function Intake({ projectId, recordingTo, onRemoveCopy }: IntakeProps) {
         queue={queue}
         items={items}
         recordingTo={recordingTo}
+        onLookAgain={(item) => {
+          queue.forget(item.id);
+          intake.hold(item.file);
+        }}
         onRemoveCopy={(item) => {
           if (!item.recording) return;
           queue.forget(item.id);
@@ -40,7 +44,10 @@ export function Intake({ projectId, recordingTo, onRemoveCopy }: IntakeProps) {
           open
           projectId={projectId}
           source={{ kind: 'file', file: inQuestion }}
-          onClose={intake.release}
+          onClose={() => {
+            queue.leaveOut(inQuestion);
+            intake.release();
+          }}
           onRead={(options) => {
             queue.add([{ file: inQuestion, options }]);
             intake.release();

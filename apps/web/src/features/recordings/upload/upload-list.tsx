@@ -9,12 +9,14 @@ interface UploadListProps {
   queue: UploadQueue;
   items: readonly UploadItem[];
   recordingTo: (recordingId: string) => string;
+  /** Opens the import form for a file that was left out. */
+  onLookAgain: (item: UploadItem) => void;
   /** Removes a recording that turned out to be a copy. */
   onRemoveCopy: (item: UploadItem) => void;
 }
 
 /** Uploads under way and just ended, each with its progress, its way out, and what came of it. */
-export function UploadList({ queue, items, recordingTo, onRemoveCopy }: UploadListProps) {
+export function UploadList({ queue, items, recordingTo, onLookAgain, onRemoveCopy }: UploadListProps) {
   if (items.length === 0) return null;
   const open = items.filter(isOpen);
   return (
@@ -57,7 +59,7 @@ export function UploadList({ queue, items, recordingTo, onRemoveCopy }: UploadLi
               <Outcome item={item} recordingTo={recordingTo} />
             </Box>
             <Flex justify="flex-end">
-              <Actions item={item} queue={queue} onRemoveCopy={onRemoveCopy} />
+              <Actions item={item} queue={queue} onLookAgain={onLookAgain} onRemoveCopy={onRemoveCopy} />
             </Flex>
           </Grid>
         ))}
@@ -68,6 +70,7 @@ export function UploadList({ queue, items, recordingTo, onRemoveCopy }: UploadLi
 
 function Outcome({ item, recordingTo }: { item: UploadItem; recordingTo: UploadListProps['recordingTo'] }) {
   if (item.state === 'waiting') return <Text color="inkSoft">waits for its turn</Text>;
+  if (item.state === 'left-out') return <Text color="near">left out, not sent</Text>;
   if (item.state === 'stopped') return <Text color="inkSoft">stopped, nothing was kept</Text>;
   if (item.state === 'failed') {
     return (
@@ -109,12 +112,20 @@ function Outcome({ item, recordingTo }: { item: UploadItem; recordingTo: UploadL
 function Actions({
   item,
   queue,
+  onLookAgain,
   onRemoveCopy,
-}: Pick<UploadListProps, 'queue' | 'onRemoveCopy'> & { item: UploadItem }) {
+}: Pick<UploadListProps, 'queue' | 'onLookAgain' | 'onRemoveCopy'> & { item: UploadItem }) {
   if (isOpen(item)) {
     return (
       <Button size="xs" aria-label={`Stop ${item.file.name}`} onClick={() => queue.stop(item.id)}>
         Stop
+      </Button>
+    );
+  }
+  if (item.state === 'left-out') {
+    return (
+      <Button size="xs" aria-label={`Look into ${item.file.name} again`} onClick={() => onLookAgain(item)}>
+        Look again
       </Button>
     );
   }

@@ -32,5 +32,6 @@ export function useIntake(projectId: string, queue: UploadQueue) {
         Promise.resolve(),
       ),
     release,
+    hold,
   };
 }
