@@ -1,7 +1,7 @@
 import type { ChannelAnalysis } from '@overtally/contracts';
 import { formatCount, formatDb, formatFixed, formatPercent, formatSi } from '../../../lib/format.js';
+import { fundamentalWords } from '../../../lib/fundamental-words.js';
 import { fundamentalSymbol } from '../charts/words.js';
-import { fundamentalWords } from './fundamental-words.js';
 
 /** One figure of a channel, as shown and as exported. */
 export interface FigureRow {

@@ -3,10 +3,10 @@ import type { ChannelAnalysis, LimitSet, Recording } from '@overtally/contracts'
 import { TallyStrip } from '../../../components/tally-strip.js';
 import { TitleBlock, type TitleCell } from '../../../components/title-block.js';
 import { formatDuration, formatSha256, formatSi, none } from '../../../lib/format.js';
+import { fundamentalWords } from '../../../lib/fundamental-words.js';
 import { formatDateTime, formatDateTimeFull } from '../../../lib/format-date.js';
 import type { ChannelComparison } from '../charts/order-rows.js';
 import { CopyButton } from './copy-button.js';
-import { fundamentalWords } from './fundamental-words.js';
 
 interface SheetTitleBlockProps {
   recording: Recording;

@@ -7,14 +7,8 @@ import { parameterLine } from '../../../components/verdict/parameter-line.js';
 import { ResultWords } from '../../../components/verdict/result-words.js';
 import { VerdictTables } from '../../../components/verdict/verdict-tables.js';
 import { formatDateTime } from '../../../lib/format-date.js';
-import {
-  formatDuration,
-  formatPercent,
-  formatSha256,
-  formatSi,
-  formatWithUncertainty,
-  none,
-} from '../../../lib/format.js';
+import { formatDuration, formatPercent, formatSha256, formatSi, none } from '../../../lib/format.js';
+import { fundamentalWords } from '../../../lib/fundamental-words.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
 import { settingsWords, targetWords } from '../report-words.js';
 
@@ -62,7 +56,6 @@ export function ReportSection({ section, place }: { section: Content; place: num
 }
 
 function titleCells({ recording, analysis: { channel } }: Content): TitleCell[] {
-  const { fundamental } = channel;
   return [
     { caption: 'EUT', value: recording.eut || 'not stated', grow: 2 },
     { caption: 'Captured', value: formatDateTime(recording.capturedAt) },
@@ -70,7 +63,7 @@ function titleCells({ recording, analysis: { channel } }: Content): TitleCell[] 
     { caption: 'Length', value: formatDuration(recording.durationS), mono: true },
     {
       caption: 'Fundamental',
-      value: formatWithUncertainty(fundamental?.frequencyHz, fundamental?.frequencyUncertaintyHz, 'Hz'),
+      value: fundamentalWords(channel),
       mono: true,
       grow: 2.5,
     },
