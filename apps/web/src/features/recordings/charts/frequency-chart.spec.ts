@@ -39,6 +39,12 @@ describe('spectrum by frequency', () => {
     expect((line?.y as number[])[3]).toBeCloseTo(1, 12);
   });
 
+  it('keeps the unit of the channel where no fundamental gives the reference', () => {
+    const { traces } = frequencyChart(input({ rows: [], relative: true, scale: 'linear' }), light);
+    expect(traces[0]?.y).toEqual([null, 230, 0.5, 2.3, 0.1]);
+    expect(traces[0]?.hovertemplate).toContain(' V<extra>');
+  });
+
   it('puts letters on lines and orders, not on time spans', () => {
     const target = (note: Note['target']) => ({ target: note }) as Note;
     const notes = withLetters([

@@ -38,8 +38,9 @@ export function frequencyChart(
 ): { traces: PlotTrace[]; layout: PlotLayout; factor: number } {
   const { spectrum, rows, scale, whole } = input;
   const fundamental = rows.find((row) => row.order === 1);
-  const gain = input.relative && fundamental ? 100 / fundamental.rms : 1;
-  const unit = input.relative ? '%' : spectrum.unit;
+  const reference = input.relative ? fundamental : undefined;
+  const gain = reference ? 100 / reference.rms : 1;
+  const unit = reference ? '%' : spectrum.unit;
   const lastHz = spectrum.frequencyHz.at(-1) ?? 1;
   const lastOrderHz = (rows.at(-1)?.frequencyHz ?? lastHz) + (fundamental?.frequencyHz ?? 0);
   const endHz = whole ? lastHz : Math.min(lastHz, lastOrderHz);
