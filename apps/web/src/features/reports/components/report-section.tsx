@@ -59,7 +59,7 @@ function titleCells({ recording, analysis: { channel } }: Content): TitleCell[] 
   return [
     { caption: 'EUT', value: recording.eut || 'not stated', grow: 2 },
     { caption: 'Captured', value: formatDateTime(recording.capturedAt) },
-    { caption: 'Rate', value: formatSi(recording.sampleRateHz, 'Sa/s', { trim: true }), mono: true },
+    { caption: 'Rate', value: formatSi(recording.sampleRateHz, 'Hz', { digits: 6, trim: true }), mono: true },
     { caption: 'Length', value: formatDuration(recording.durationS), mono: true },
     {
       caption: 'Fundamental',
