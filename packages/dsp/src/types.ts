@@ -87,8 +87,8 @@ export interface FundamentalResult {
   rms: number;
   /** Cosine form, zero time = first sample; null when the frequency drifts. */
   phaseDeg: number | null;
-  /** One standard deviation (Cramér-Rao, from the residual of the fit). */
-  frequencyUncertaintyHz: number;
+  /** One standard deviation (Cramér-Rao, from the residual of the fit); null when the frequency drifts. */
+  frequencyUncertaintyHz: number | null;
 }
 
 export interface SpectrumResult {

@@ -112,5 +112,7 @@ describe('analyseRecord', () => {
     expect(Math.abs(channel.harmonics[24]!.rms - 2)).toBeLessThan(0.002);
     expect(channel.flags.map((flag) => flag.code)).toContain('frequency-drift');
     expect(channel.harmonics[0]!.phaseDeg).toBeNull();
+    // The bound is that of a constant frequency; it says nothing of one that moves.
+    expect(channel.fundamental!.frequencyUncertaintyHz).toBeNull();
   });
 });

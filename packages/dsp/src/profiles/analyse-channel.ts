@@ -86,7 +86,8 @@ function periodicResults(
   settings: ResolvedSettings,
   { estimate, track, steady, checkpoint }: PeriodicEvidence,
 ): PeriodicResults {
-  const { frequencyHz, frequencyUncertaintyHz } = estimate;
+  const { frequencyHz } = estimate;
+  const frequencyUncertaintyHz = steady ? estimate.frequencyUncertaintyHz : null;
   const fitted = harmonicResults(estimate, samples.length, steady);
   const mains =
     settings.profile === 'mains'
