@@ -5,11 +5,18 @@ const LIMIT = 0.5;
 /** |DC| above half of the AC rms. */
 export function dcHeavyFlag(mean: number, acRms: number, unit: string): Flag | null {
   if (!(acRms > 0) || Math.abs(mean) <= LIMIT * acRms) return null;
+  const amount = (value: number): string => `${inDigits(value)} ${unit}`.trimEnd();
   return {
     code: 'dc-heavy',
     severity: 'warning',
     message:
-      `The DC component of ${mean.toPrecision(4)} ${unit} is ${(Math.abs(mean) / acRms).toPrecision(3)} times the AC rms of ` +
-      `${acRms.toPrecision(4)} ${unit}. Check the offset of the probe or channel, or whether DC belongs to the signal.`,
+      `The DC component of ${amount(mean)} is ${inDigits(Math.abs(mean) / acRms, 3)} times the AC rms of ` +
+      `${amount(acRms)}. Check the offset of the probe or channel, or whether DC belongs to the signal.`,
   };
+}
+
+/** A number to significant digits, with an exponent from a million on alone. */
+function inDigits(value: number, digits = 4): string {
+  const text = value.toPrecision(digits);
+  return text.includes('e+') && Math.abs(Number(text)) < 1e6 ? Number(text).toFixed(0) : text;
 }
