@@ -4,6 +4,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { recordingPrefix } from '../dist/recordings/recording-keys.js';
 import { Storage } from '../dist/storage/storage.js';
 import { makeExamples, makeOtherParameters, type Examples } from './support/examples.js';
+import { newIssued, newJudged } from './support/judged-reports.js';
 import { ROLES, type Role } from './support/people.js';
 import { newRecording } from './support/project-contents.js';
 import { declaredRoutes, servedRoutes, type Route } from './support/routes.js';
@@ -76,7 +77,10 @@ describe('access to every route', () => {
   it('follows the permission table for everyone', { timeout: 180_000 }, async () => {
     const found: Record<string, Record<string, Expected>> = {};
     const wanted: Record<string, Record<string, Expected>> = {};
-    const shared = await makeExamples(test, test.people.analyst.id);
+    const { verdict } = await newJudged(test);
+    // Guests read a report once it is issued.
+    const { id: report } = await newIssued(test, [verdict.id]);
+    const shared = { ...(await makeExamples(test, test.people.analyst.id)), report };
     for (const route of routes) {
       const name = `${route.method} ${route.path}`;
       found[name] = await walk(route, shared);

@@ -37,8 +37,8 @@ afterAll(async () => {
 });
 
 async function pdfOf(report: Report): Promise<Buffer> {
-  const guest = await test.signIn('guest');
-  const reply = await guest.get(`/api/reports/${report.id}/pdf`).responseType('blob').expect(200);
+  const technician = await test.signIn('technician');
+  const reply = await technician.get(`/api/reports/${report.id}/pdf`).responseType('blob').expect(200);
   expect(reply.headers['content-type']).toBe('application/pdf');
   return reply.body as Buffer;
 }

@@ -122,7 +122,7 @@ describe('the way to an issued report', () => {
     for (const role of ['analyst', 'technician', 'guest', 'administrator'] as const) {
       const person = await test.signIn(role);
       await person.post(`/api/reports/${id}/issue`).send({}).expect(403);
-      await person.get(`/api/reports/${id}`).expect(200);
+      await person.get(`/api/reports/${id}`).expect(role === 'guest' ? 404 : 200);
     }
     const stranger = await test.signIn('stranger');
     await stranger.post(`/api/reports/${id}/issue`).send({}).expect(404);
@@ -243,17 +243,35 @@ describe('a verdict on a recording that was read or scaled anew', () => {
 
 describe('the list of reports', () => {
   it('can be narrowed by status and read page by page, the newest first', async () => {
-    const guest = await test.signIn('guest');
+    const technician = await test.signIn('technician');
     const ids = [await newDraft(test, [quiet.verdict.id]), await newDraft(test, [dimmer.verdict.id])].map(
       ({ id }) => id,
     );
-    const first = reportPageSchema.parse((await guest.get(`${reportsPath()}?limit=1`).expect(200)).body);
+    const first = reportPageSchema.parse((await technician.get(`${reportsPath()}?limit=1`).expect(200)).body);
     expect(first.items[0]).toMatchObject({ id: ids[1], result: 'fail', sections: 1 });
-    const next = await guest.get(`${reportsPath()}?limit=1&cursor=${first.nextCursor}`).expect(200);
+    const next = await technician.get(`${reportsPath()}?limit=1&cursor=${first.nextCursor}`).expect(200);
     expect(next.body.items[0]).toMatchObject({ id: ids[0], result: 'pass' });
-    const { body } = await guest.get(`${reportsPath()}?status=issued`).expect(200);
+    const { body } = await technician.get(`${reportsPath()}?status=issued`).expect(200);
     const statuses = reportPageSchema.parse(body).items.map((item) => item.status);
     expect(new Set(statuses)).toEqual(new Set(['issued']));
+  });
+
+  it('hides drafts and reports in review from guests, their PDF too', async () => {
+    const hidden = [await newDraft(test, [quiet.verdict.id]), await newInReview(test, [quiet.verdict.id])];
+    const issued = await newIssued(test, [quiet.verdict.id]);
+    const guest = await test.signIn('guest');
+    const { items } = reportPageSchema.parse((await guest.get(reportsPath()).expect(200)).body);
+    expect(items.map(({ id }) => id)).toContain(issued.id);
+    expect(new Set(items.map(({ status }) => status))).toEqual(new Set(['issued']));
+    const { body: drafts } = await guest.get(`${reportsPath()}?status=draft`).expect(200);
+    expect(drafts).toEqual({ items: [], nextCursor: null });
+    for (const { id } of hidden) {
+      await guest.get(`/api/reports/${id}`).expect(404);
+      await guest.get(`/api/reports/${id}/pdf`).expect(404);
+    }
+    await guest.get(`/api/reports/${issued.id}/pdf`).expect(200);
+    const administrator = await test.signIn('administrator');
+    await administrator.get(`/api/reports/${hidden[0]!.id}/pdf`).expect(200);
   });
 });
 

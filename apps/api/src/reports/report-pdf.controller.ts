@@ -1,14 +1,18 @@
 import { Controller, Get, Param, Req, Res, StreamableFile } from '@nestjs/common';
 import { ApiOkResponse, ApiProduces, ApiTags } from '@nestjs/swagger';
 import type { Response } from 'express';
-import { RequirePermission } from '../access/require-permission.decorator.js';
-import type { AppRequest } from '../common/request.js';
+import { ProjectAccess, RequirePermission } from '../access/require-permission.decorator.js';
+import type { AppRequest, ProjectAccess as Access } from '../common/request.js';
 import { ReportPdfService } from './report-pdf.service.js';
+import { ReportsService } from './reports.service.js';
 
 @ApiTags('reports')
 @Controller('reports/:id/pdf')
 export class ReportPdfController {
-  constructor(private readonly pdfs: ReportPdfService) {}
+  constructor(
+    private readonly pdfs: ReportPdfService,
+    private readonly reports: ReportsService,
+  ) {}
 
   @Get()
   @RequirePermission('report.read', { resource: 'report' })
@@ -20,8 +24,10 @@ export class ReportPdfController {
   async read(
     @Req() request: AppRequest,
     @Res({ passthrough: true }) response: Response,
+    @ProjectAccess() { role }: Access,
     @Param('id') id: string,
   ): Promise<StreamableFile | undefined> {
+    await this.reports.requireVisible(id, role);
     const { bytes, fileName, sha256 } = await this.pdfs.get(id);
     if (sha256 === null) {
       response.setHeader('Cache-Control', 'no-store');

@@ -1,4 +1,9 @@
-import type { ReportStatus, VerdictResult } from '@overtally/contracts';
+import {
+  reportStatusSchema,
+  type ProjectRole,
+  type ReportStatus,
+  type VerdictResult,
+} from '@overtally/contracts';
 import { problem } from '../common/problem.js';
 
 /** What can be done with a report in a state. */
@@ -31,6 +36,12 @@ export function requireAction(status: ReportStatus, action: ReportAction): void 
   const detail = `The report is ${statusWords[status]}: ${sentence[status]}`;
   throw problem(409, 'wrong-state', detail);
 }
+
+const settled: readonly ReportStatus[] = ['issued', 'superseded'];
+
+/** States in which a person sees a report: guests read for the customer and see what was issued alone. */
+export const visibleStatuses = (role: ProjectRole | null): readonly ReportStatus[] =>
+  role === 'guest' ? settled : reportStatusSchema.options;
 
 const severity: readonly VerdictResult[] = [
   'fail',

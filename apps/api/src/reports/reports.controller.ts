@@ -30,15 +30,20 @@ export class ReportsController {
 
   @Get('projects/:id/reports')
   @RequirePermission('report.read', { resource: 'project' })
-  @ZodResponse({ status: 200, type: ReportPageDto, description: 'The newest first' })
-  list(@Param('id') projectId: string, @Query() query: ReportQueryDto) {
-    return this.reports.list(projectId, query);
+  @ZodResponse({
+    status: 200,
+    type: ReportPageDto,
+    description: 'The newest first; to guests, those that were issued',
+  })
+  list(@ProjectAccess() { projectId, role }: Access, @Query() query: ReportQueryDto) {
+    return this.reports.list(projectId, role, query);
   }
 
   @Get('reports/:id')
   @RequirePermission('report.read', { resource: 'report' })
   @ZodResponse({ status: 200, type: ReportDto })
-  read(@Param('id') id: string) {
+  async read(@ProjectAccess() { role }: Access, @Param('id') id: string) {
+    await this.reports.requireVisible(id, role);
     return this.reports.get(id);
   }
 

@@ -1,7 +1,7 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { ReportEvent, ReportStatus, VerdictResult } from '@overtally/contracts';
 import { schema, type Database, type Tx } from '@overtally/db';
-import { and, asc, desc, eq, getTableColumns, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, getTableColumns, inArray, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import { DATABASE } from '../database/database.tokens.js';
 
@@ -44,10 +44,18 @@ export class ReportsRepository {
     return row;
   }
 
+  async statusOf(id: string): Promise<ReportStatus | undefined> {
+    const [row] = await this.database
+      .select({ status: reports.status })
+      .from(reports)
+      .where(eq(reports.id, id));
+    return row?.status;
+  }
+
   /** The newest first, from behind `after`, without contents. */
   async list(
     projectId: string,
-    status: ReportStatus | undefined,
+    statuses: readonly ReportStatus[],
     after: { createdAt: string; id: string } | undefined,
     limit: number,
   ) {
@@ -60,7 +68,7 @@ export class ReportsRepository {
       .innerJoin(projects, eq(projects.id, reports.projectId))
       .innerJoin(preparers, eq(preparers.id, reports.preparedById))
       .leftJoin(issuers, eq(issuers.id, reports.issuedById))
-      .where(and(eq(reports.projectId, projectId), status && eq(reports.status, status), behind))
+      .where(and(eq(reports.projectId, projectId), inArray(reports.status, statuses), behind))
       .orderBy(desc(reports.createdAt), desc(reports.id))
       .limit(limit);
   }

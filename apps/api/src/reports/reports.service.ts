@@ -1,5 +1,5 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { CreateReport, Report, ReportStatus, UpdateReport } from '@overtally/contracts';
+import type { CreateReport, ProjectRole, Report, ReportStatus, UpdateReport } from '@overtally/contracts';
 import type { Database, Tx } from '@overtally/db';
 import { z } from 'zod';
 import { decodeCursor, pageOfRows } from '../common/paging.js';
@@ -8,7 +8,7 @@ import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { VerdictsService } from '../limits/verdicts.service.js';
 import { ReportContentService } from './report-content.service.js';
-import { requireAction, type ReportAction } from './report-state.js';
+import { requireAction, visibleStatuses, type ReportAction } from './report-state.js';
 import { toListItem, toReport } from './report-view.js';
 import { ReportsRepository, type LockedReport } from './reports.repository.js';
 
@@ -39,11 +39,18 @@ export class ReportsService {
     return toReport(row, content, events);
   }
 
-  /** Reports of a project, the newest first. */
-  async list(projectId: string, { status, cursor, limit }: ReportQuery) {
+  /** @throws 404 when there is no such report for a person of this role */
+  async requireVisible(id: string, role: ProjectRole | null): Promise<void> {
+    const status = await this.repository.statusOf(id);
+    if (!status || !visibleStatuses(role).includes(status)) throw noSuchReport();
+  }
+
+  /** Reports of a project that a person of this role sees, the newest first. */
+  async list(projectId: string, role: ProjectRole | null, { status, cursor, limit }: ReportQuery) {
     const place = decodeCursor(cursor, placeSchema);
     const after = place && { createdAt: place[0], id: place[1] };
-    const rows = await this.repository.list(projectId, status, after, limit + 1);
+    const statuses = visibleStatuses(role).filter((visible) => status === undefined || visible === status);
+    const rows = await this.repository.list(projectId, statuses, after, limit + 1);
     return pageOfRows(rows, limit, (row) => [row.createdAt.toISOString(), row.id], toListItem);
   }
 
