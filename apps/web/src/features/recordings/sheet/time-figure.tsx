@@ -43,8 +43,8 @@ export function TimeFigure(props: TimeFigureProps) {
   const durationS = recording.durationS ?? 0;
   const leastS = Math.min(durationS, samplesAtLeast / (recording.sampleRateHz ?? 1));
   const settled = useSettled(view, settleMs);
-  const overview = useQuery(waveformQuery(recording.id, { channel: channel.index, points: 1200 }));
-  const part = useQuery(waveformQuery(recording.id, { channel: channel.index, ...settled, points: 2400 }));
+  const overview = useQuery(waveformQuery(recording, { channel: channel.index, points: 1200 }));
+  const part = useQuery(waveformQuery(recording, { channel: channel.index, ...settled, points: 2400 }));
   const chart = useMemo(
     () => (part.data ? waveformChart({ waveform: part.data, span: view, notes, labels }, palette) : null),
     [part.data, view, notes, labels, palette],
