@@ -1,4 +1,4 @@
-import type { ParameterName, Quantity } from '@overtally/contracts';
+import type { Channel, ParameterName, Quantity } from '@overtally/contracts';
 
 /** "3", "3 and 5", "3, 5 and 7". */
 export function joined(words: readonly string[]): string {
@@ -40,9 +40,8 @@ const symbols: Partial<Record<Quantity, string>> = {
 /** Symbol of the rms of order 1, with its subscript: I₁. */
 export const fundamentalSymbol = (quantity: Quantity): string => `${symbols[quantity] ?? 'X'}₁`;
 
-/** Begins a title: "Sound pressure against time"; a dimensionless channel is called by its name. */
-export function quantityTitle(quantity: Quantity, name: string): string {
+/** Begins a title: "VA_G1, voltage against time"; a channel of no known quantity is called by its name alone. */
+export function channelTitle({ quantity, name }: Pick<Channel, 'quantity' | 'name'>): string {
   if (quantity === 'dimensionless' || quantity === 'other') return name;
-  const words = quantityWords[quantity];
-  return words.charAt(0).toUpperCase() + words.slice(1);
+  return `${name}, ${quantityWords[quantity]}`;
 }

@@ -10,7 +10,7 @@ import { usePalette } from '../../../lib/theme/use-palette.js';
 import type { LetteredNote } from '../charts/note-letters.js';
 import { orderChart } from '../charts/order-chart.js';
 import type { ChannelComparison, OrderRow } from '../charts/order-rows.js';
-import { fundamentalSymbol, quantityTitle } from '../charts/words.js';
+import { fundamentalSymbol, channelTitle } from '../charts/words.js';
 import { FrequencyView } from './frequency-view.js';
 import type { NoteTarget } from './note-target.js';
 import { orderColumns } from './order-columns.js';
@@ -38,7 +38,7 @@ export function SpectrumFigure(props: SpectrumFigureProps) {
   const [scale, setScale] = useState<Scale>('log');
   const [relative, setRelative] = useState(false);
   const abscissa = rows.length > 0 ? chosen : 'frequency';
-  const title = `${quantityTitle(channel.quantity, channel.name)} by ${abscissa}`;
+  const title = `${channelTitle(channel)} by ${abscissa}`;
   const symbol = fundamentalSymbol(channel.quantity);
   const columns = useMemo(() => orderColumns(rows, channel.unit, symbol), [rows, channel.unit, symbol]);
   const selectedOrder = target?.kind === 'order' ? target.order : null;

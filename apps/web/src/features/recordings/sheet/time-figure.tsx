@@ -13,7 +13,7 @@ import type { LetteredNote } from '../charts/note-letters.js';
 import { OverviewStrip } from '../charts/overview-strip.js';
 import { clampSpan, type Span } from '../charts/span.js';
 import { spanOfRelayout, waveformChart } from '../charts/waveform-chart.js';
-import { quantityTitle } from '../charts/words.js';
+import { channelTitle } from '../charts/words.js';
 import { useSettled } from './use-settled.js';
 import { WaveformTable } from './waveform-table.js';
 
@@ -54,7 +54,7 @@ export function TimeFigure(props: TimeFigureProps) {
     if (wanted === 'whole') onView({ fromS: 0, toS: durationS });
     else if (wanted) onView(clampSpan(wanted, durationS, leastS));
   };
-  const title = `${quantityTitle(channel.quantity, channel.name)} against time`;
+  const title = `${channelTitle(channel)} against time`;
   return (
     <FigureFrame
       title={title}
