@@ -34,9 +34,8 @@ export function WarningItems({ warnings }: { warnings: readonly ReadWarning[] })
   ));
 }
 
-function warningPlace({ count, firstLine }: ReadWarning): string {
+function warningPlace({ firstLine }: ReadWarning): string {
   const parts = ['from reading the file'];
-  if (count !== undefined && count > 1) parts.push(`${count} times`);
   if (firstLine !== undefined) parts.push(`first in line ${firstLine}`);
   return parts.join(', ');
 }
