@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { parsePastedLimits } from './paste-limits.js';
+import { parsePastedLimits, pasteWords } from './paste-limits.js';
 
 const pairs = (text: string) => parsePastedLimits(text).rows.map(({ order, limit }) => [order, limit]);
 
@@ -41,5 +41,12 @@ describe('limits pasted from a spreadsheet', () => {
 
   it('finds nothing in empty text', () => {
     expect(parsePastedLimits(' \n')).toEqual({ rows: [], problems: [] });
+  });
+
+  it('say how many lines are left out', () => {
+    const words = (text: string) => pasteWords(parsePastedLimits(text));
+    expect(words('')).toBe('Use these orders');
+    expect(words('3\t2.30\n5\t1.14')).toBe('Use 2 orders in place of the rows');
+    expect(words('3\t2.30\n5\tmuch\nseven\t1')).toBe('Use 1 order, leave out 2 lines');
   });
 });

@@ -10,6 +10,14 @@ export interface PastedLimits {
   problems: { line: number; message: string }[];
 }
 
+/** What taking over the pasted lines will do; lines that were not understood are left out openly. */
+export function pasteWords({ rows, problems }: PastedLimits): string {
+  if (rows.length === 0) return 'Use these orders';
+  const orders = rows.length === 1 ? '1 order' : `${rows.length} orders`;
+  if (problems.length === 0) return `Use ${orders} in place of the rows`;
+  return `Use ${orders}, leave out ${problems.length === 1 ? '1 line' : `${problems.length} lines`}`;
+}
+
 const number = /^[+-]?(\d+([.,]\d*)?|[.,]\d+)(e[+-]?\d+)?$/i;
 const range = /^(\d+)\s*(?:-|–|\.\.|to)\s*(\d+)$/i;
 

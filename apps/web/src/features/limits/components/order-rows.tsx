@@ -4,7 +4,7 @@ import { useFieldArray } from 'react-hook-form';
 import { FormField } from '../../../components/form-field.js';
 import { Section } from '../../../components/section.js';
 import type { LimitSetForm } from '../limit-set-form.js';
-import { parsePastedLimits } from '../paste-limits.js';
+import { parsePastedLimits, pasteWords } from '../paste-limits.js';
 
 /** Limits by order: one row each, or many at once from a spreadsheet. */
 export function OrderRows({ form, unit }: { form: LimitSetForm; unit: string }) {
@@ -86,7 +86,8 @@ function OrderRow({ form, index, onRemove }: { form: LimitSetForm; index: number
 
 function PasteRows({ onRows }: { onRows: (rows: { order: string; limit: string }[]) => void }) {
   const [text, setText] = useState('');
-  const { rows, problems } = parsePastedLimits(text);
+  const pasted = parsePastedLimits(text);
+  const { rows, problems } = pasted;
   return (
     <Stack gap="2" align="flex-start" w="full" maxW="sm">
       <FormField
@@ -115,7 +116,7 @@ function PasteRows({ onRows }: { onRows: (rows: { order: string; limit: string }
           setText('');
         }}
       >
-        {rows.length === 0 ? 'Use these orders' : `Use these ${rows.length} orders in place of the rows`}
+        {pasteWords(pasted)}
       </Button>
     </Stack>
   );
