@@ -32,6 +32,13 @@ describe('settings of an analysis', () => {
     expect(toSettings({ ...form, profile: 'tone' }, earlier)).not.toHaveProperty('cyclesPerWindow', 12);
   });
 
+  it('leave the highest order in THD to the profile where it is its default', () => {
+    // Order 40: IEC 61000-3-2, harmonic currents to order 40; ten orders for tones are common practice.
+    expect(toSettingsForm({ ...plain, thdMaxOrder: 40 }, view).thdMaxOrder).toBe('');
+    expect(toSettingsForm({ ...plain, profile: 'tone', thdMaxOrder: 10 }, view).thdMaxOrder).toBe('');
+    expect(toSettingsForm({ ...plain, profile: 'tone', thdMaxOrder: 40 }, view).thdMaxOrder).toBe('40');
+  });
+
   it('name the field that is wrong', () => {
     const fields = (change: object) =>
       settingsFormSchema

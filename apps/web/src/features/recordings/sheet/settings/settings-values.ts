@@ -47,6 +47,9 @@ export type SettingsForm = z.infer<typeof settingsFormSchema>;
 
 const text = (value: number | undefined) => (value === undefined ? '' : String(value));
 
+/** Orders that THD counts where none is stated: a stored default is left to the engine, so that it follows the profile. */
+const thdDefault: Record<Settings['profile'], number> = { mains: 40, general: 40, tone: 10 };
+
 /** Form values of earlier settings; the part in view is offered as the span. */
 export function toSettingsForm(settings: Settings, view: { fromS: number; toS: number }): SettingsForm {
   const known = nominalChoices.find((choice) => choice === String(settings.nominalFrequencyHz));
@@ -56,7 +59,7 @@ export function toSettingsForm(settings: Settings, view: { fromS: number; toS: n
     nominal: known ?? 'other',
     nominalOtherHz: known ? '' : String(settings.nominalFrequencyHz),
     maxOrder: text(settings.maxOrder),
-    thdMaxOrder: text(settings.thdMaxOrder),
+    thdMaxOrder: settings.thdMaxOrder === thdDefault[settings.profile] ? '' : text(settings.thdMaxOrder),
     window: settings.window ?? '',
     extent: settings.span ? 'part' : 'whole',
     fromS: String(Number(span.fromS.toPrecision(9))),
