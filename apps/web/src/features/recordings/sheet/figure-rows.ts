@@ -1,7 +1,8 @@
 import type { ChannelAnalysis } from '@overtally/contracts';
-import { formatCount, formatDb, formatFixed, formatPercent, formatSi } from '../../../lib/format.js';
+import { formatCount, formatDb, formatFixed, formatSi } from '../../../lib/format.js';
 import { fundamentalWords } from '../../../lib/fundamental-words.js';
 import { fundamentalSymbol } from '../charts/words.js';
+import { percentWords } from './percent-words.js';
 
 /** One figure of a channel, as shown and as exported. */
 export interface FigureRow {
@@ -51,10 +52,11 @@ function waveform(channel: ChannelAnalysis): Entry[] {
 }
 
 function distortion(channel: ChannelAnalysis): Entry[] {
-  const orders = `orders 2 to ${channel.thdMaxOrder}`;
+  const highest = channel.harmonics.at(-1)?.order ?? channel.thdMaxOrder;
+  const orders = `orders 2 to ${Math.min(channel.thdMaxOrder, highest)}`;
   const percent = (name: string, value: number | null, basis: string): Entry => ({
     ...{ name, value, unit: '%', basis },
-    shown: formatPercent(value, value !== null && value < 1 ? 4 : 2),
+    shown: percentWords(value, value !== null && value < 1 ? 4 : 2),
   });
   const level = (name: string, value: number | null, basis: string): Entry => ({
     ...{ name, value, unit: 'dB', basis },
@@ -63,7 +65,7 @@ function distortion(channel: ChannelAnalysis): Entry[] {
   return [
     percent('THD, of the fundamental', channel.thdFPercent, `THD_F, ${orders}`),
     percent('THD, of the rms', channel.thdRPercent, `THD_R, ${orders}`),
-    percent('THD+N', channel.thdPlusNPercent, 'distortion and noise'),
+    percent('THD+N', channel.thdPlusNPercent, 'distortion and noise, of the total AC rms'),
     level('SINAD', channel.sinadDb, 'signal to noise and distortion'),
     level('SNR', channel.snrDb, 'signal to noise without harmonics'),
     level('SFDR', channel.sfdrDb, 'to the largest other line'),

@@ -1,6 +1,7 @@
 import type { TableColumn } from '../../../components/table-column.js';
-import { formatFixed, formatHz, formatPercent, formatSi } from '../../../lib/format.js';
+import { formatFixed, formatHz, formatSi } from '../../../lib/format.js';
 import { isOver, resultWords, type OrderRow } from '../charts/order-rows.js';
+import { percentWords } from './percent-words.js';
 
 type Column = TableColumn<OrderRow>;
 
@@ -35,7 +36,7 @@ export function orderColumns(rows: readonly OrderRow[], unit: string, symbol: st
       fileHeader: 'Share of the fundamental (%)',
       align: 'right',
       value: (row) => row.percentOfFundamental,
-      show: (row) => formatPercent(row.percentOfFundamental, 2),
+      show: (row) => percentWords(row.percentOfFundamental, 2),
     },
     {
       key: 'phaseDeg',
@@ -55,7 +56,7 @@ export function orderColumns(rows: readonly OrderRow[], unit: string, symbol: st
       fileHeader: 'Share of the limit (%)',
       align: 'right',
       value: (row) => row.sharePercent,
-      show: (row) => formatPercent(row.sharePercent),
+      show: (row) => percentWords(row.sharePercent),
       tone: (row) => (isOver(row) ? 'over' : undefined),
     },
     {
