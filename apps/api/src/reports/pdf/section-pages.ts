@@ -1,5 +1,6 @@
 import type { ReportSection } from '@overtally/contracts';
 import { formatFigure, formatMoment, formatPercent, formatQuantity, formatText } from './format.js';
+import { frequencyWords } from './frequency-words.js';
 import { drawFlags, drawNotes } from './notes-and-flags.js';
 import { drawOrderChart } from './order-chart.js';
 import { drawOrderTable, drawTotals } from './order-table.js';
@@ -46,7 +47,8 @@ function drawSectionHead(
 
 function drawSectionBlock(sheet: Sheet, { recording, analysis, verdict }: ReportSection): void {
   const { channel } = analysis;
-  const { fundamental, windows } = channel;
+  const { windows } = channel;
+  const [frequencyCaption, frequency] = frequencyWords(channel.fundamental);
   drawTitleBlock(sheet, [
     [
       { caption: 'Equipment under test', value: formatText(recording.eut), share: 1.4 },
@@ -60,7 +62,7 @@ function drawSectionBlock(sheet: Sheet, { recording, analysis, verdict }: Report
       { caption: 'Channel', value: channel.name },
     ],
     [
-      { caption: 'Fundamental', value: frequencyWords(fundamental), mono: true, share: 1.4 },
+      { caption: frequencyCaption, value: frequency, mono: true, share: 1.4 },
       { caption: 'rms', value: formatQuantity(channel.rms, channel.unit), mono: true },
       {
         caption: `THD-F, orders 2 to ${channel.thdMaxOrder}`,
@@ -79,15 +81,6 @@ function drawSectionBlock(sheet: Sheet, { recording, analysis, verdict }: Report
       { caption: 'Result', value: resultName(verdict.result), colour: resultColour(verdict.result) },
     ],
   ]);
-}
-
-function frequencyWords(fundamental: ReportSection['analysis']['channel']['fundamental']): string {
-  if (fundamental === null) return '–';
-  const value = formatQuantity(fundamental.frequencyHz, 'Hz', 5);
-  const { frequencyUncertaintyHz } = fundamental;
-  return frequencyUncertaintyHz === null
-    ? value
-    : `${value} ± ${formatQuantity(frequencyUncertaintyHz, 'Hz', 1)}`;
 }
 
 function drawVerdict(sheet: Sheet, { verdict }: ReportSection): void {
