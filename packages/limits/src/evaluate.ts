@@ -2,6 +2,7 @@ import type {
   DecisionRule,
   LimitSet,
   OrderVerdict,
+  Quantity,
   TotalVerdict,
   VerdictParameters,
   VerdictResult,
@@ -29,10 +30,21 @@ export interface Evaluation {
 /** Only class A allows single values up to 200 % (IEC 61000-3-2, 6.2.3). */
 const setsWithShortExcursion: readonly string[] = ['iec61000-3-2.classA'];
 
+const quantityNames: Readonly<Record<Quantity, string>> = {
+  voltage: 'voltage',
+  current: 'current',
+  power: 'power',
+  sound_pressure: 'sound pressure',
+  acceleration: 'acceleration',
+  velocity: 'velocity',
+  dimensionless: 'a quantity without dimension',
+  other: 'another quantity',
+};
+
 /** Why the set cannot be applied to the channel at all; null when it can. */
 function mismatch(set: LimitSet, measurement: Measurement): string | null {
   if (set.quantity !== measurement.quantity) {
-    return `The limits are for a ${set.quantity}; the channel is a ${measurement.quantity}`;
+    return `The set limits ${quantityNames[set.quantity]}; the channel holds ${quantityNames[measurement.quantity]}`;
   }
   const unit = limitUnit(set);
   if (unit !== null && unitRatio(unit, measurement.unit) === null) {

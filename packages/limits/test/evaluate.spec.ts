@@ -66,9 +66,12 @@ describe('what cannot be judged', () => {
   it('a channel of another quantity or unit is not applicable', () => {
     expect(judge(en50160, measured({ 1: 1 }))).toMatchObject({
       result: 'not-applicable',
-      reason: 'The limits are for a voltage; the channel is a current',
+      reason: 'The set limits voltage; the channel holds current',
       orders: [],
     });
+    expect(judge(classA, measured({ 1: 1 }, { quantity: 'dimensionless', unit: '' })).reason).toBe(
+      'The set limits current; the channel holds a quantity without dimension',
+    );
     expect(judge(classA, measured({ 1: 1 }, { unit: '' })).reason).toMatch(/has no unit: set the unit/);
   });
 
