@@ -48,7 +48,10 @@ describe('time stamps', () => {
     expect(read.sampleCount).toBe(10);
     expect(read.sampleRateHz).toBeCloseTo(1000, 6);
     expect(read.warnings).toEqual([
-      expect.objectContaining({ code: 'missing-values', count: 1, firstLine: 5 }),
+      expect.objectContaining({
+        ...{ code: 'missing-values', count: 1, firstLine: 5 },
+        message: '1 cell holds no number, at line 5; it is kept as missing, not as zero.',
+      }),
     ]);
   });
 

@@ -48,12 +48,12 @@ describe('sample rates no capture has', () => {
   });
 });
 
-it('counts no more missing samples than an exact integer can say', async () => {
+it('counts a cut file once, however many samples its header claims', async () => {
   // ds64 with a data size of 2^64 - 1 (EBU Tech 3306, 3.3).
   const sizes = new Uint8Array(28).fill(255, 8, 16);
   const data = chunk('data', new Uint8Array([1, 0, 2, 0]), 0xffffffff);
   const body = join(text('WAVE'), chunk('ds64', sizes), formatChunk(), data);
   const { warnings, sampleCount } = await readGood(chunk('RF64', body, 0xffffffff));
   expect(sampleCount).toBe(2);
-  expect(warnings).toEqual([expect.objectContaining({ code: 'truncated', count: Number.MAX_SAFE_INTEGER })]);
+  expect(warnings).toEqual([expect.objectContaining({ code: 'truncated', count: 1 })]);
 });

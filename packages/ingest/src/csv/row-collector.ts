@@ -63,7 +63,10 @@ export class RowCollector {
     if (missing > 0) {
       found.push({
         code: 'missing-values',
-        message: `${missing} cells hold no number, first at line ${this.missingLine}; they are kept as missing, not as zero.`,
+        message:
+          missing === 1
+            ? `1 cell holds no number, at line ${this.missingLine}; it is kept as missing, not as zero.`
+            : `${missing} cells hold no number, first at line ${this.missingLine}; they are kept as missing, not as zero.`,
         count: missing,
         firstLine: this.missingLine,
       });

@@ -18,8 +18,7 @@ export function collectWarnings(header: WavHeader, counts: Counts): ReadWarning[
   const found: ReadWarning[] = [];
   if (claimed !== null && frames < claimed) {
     const message = `The header claims ${claimed} samples per channel but the file ends after ${frames}; what is there was read.`;
-    // A 64-bit size may claim more than an exact integer can say.
-    found.push({ code: 'truncated', message, count: Math.min(claimed - frames, Number.MAX_SAFE_INTEGER) });
+    found.push({ code: 'truncated', message, count: 1 });
   } else if (leftover > 0) {
     found.push({
       code: 'truncated',
@@ -42,7 +41,10 @@ export function collectWarnings(header: WavHeader, counts: Counts): ReadWarning[
   if (total > 0) {
     found.push({
       code: 'missing-values',
-      message: `${total} samples are not finite numbers; they are kept as missing, not as zero.`,
+      message:
+        total === 1
+          ? '1 sample is not a finite number; it is kept as missing, not as zero.'
+          : `${total} samples are not finite numbers; they are kept as missing, not as zero.`,
       count: total,
     });
   }
