@@ -41,6 +41,11 @@ const quantityNames: Readonly<Record<Quantity, string>> = {
   other: 'another quantity',
 };
 
+/** Sets of voltages that are judged by 95 % of the 10 min means of one week (as their notes say). */
+const setsOfWeeks: readonly string[] = ['en50160.lv', 'iec61000-2-2.lv'];
+const weekCondition =
+  'The standard takes 10 min values of one week; a short record is compared with its values, which states no conformity';
+
 /** Why the set cannot be applied to the channel at all; null when it can. */
 function mismatch(set: LimitSet, measurement: Measurement): string | null {
   if (set.quantity !== measurement.quantity) {
@@ -109,9 +114,11 @@ export function evaluate(
     judgeTotal(total, set, measurement, args.parameters, decision, gap),
   );
   const result = worst([...judged.orders, ...totals].map((row) => row.result));
+  const reason = overallReason(result, judged.orders, totals);
+  const isConditional = setsOfWeeks.includes(set.id) && result !== 'not-decidable';
   return {
     result,
-    reason: overallReason(result, judged.orders, totals),
+    reason: isConditional ? `${reason}. ${weekCondition}` : reason,
     decisionRuleText,
     orders: judged.orders,
     totals: [...judged.totals, ...totals],

@@ -1,6 +1,6 @@
 import type { DecisionRule } from '@overtally/contracts';
 import { describe, expect, it } from 'vitest';
-import { classA, en50160, failing, judge, measured, orderOf } from './measured.js';
+import { classA, en50160, failing, judge, measured, orderOf, setOf } from './measured.js';
 
 describe('voltage sets', () => {
   const voltage = (percent: Record<number, number>, fundamental = 230) =>
@@ -24,7 +24,17 @@ describe('voltage sets', () => {
     expect(failing(evaluation)).toEqual([]);
     expect(evaluation.totals[0]).toMatchObject({ name: 'THD', unit: '%', limit: 8, result: 'fail' });
     expect(evaluation.totals[0]?.value).toBeCloseTo(Math.sqrt(66), 9);
-    expect(evaluation.reason).toBe('Over at THD');
+    expect(evaluation.reason).toMatch(/^Over at THD\. /);
+  });
+
+  // EN 50160, 4.2.5: 95 % of the 10 min mean values of each week; clause from memory.
+  it('says with each decision that the standard takes a week', () => {
+    const condition = /10 min values of one week; .* states no conformity$/;
+    for (const id of ['en50160.lv', 'iec61000-2-2.lv']) {
+      expect(judge(setOf(id), voltage({ 3: 1 })).reason).toMatch(condition);
+      expect(judge(setOf(id), voltage({ 3: 40 })).reason).toMatch(condition);
+    }
+    expect(judge(classA, measured({ 1: 1 })).reason).not.toMatch(condition);
   });
 
   it('leaves single smoothed values out of account', () => {
