@@ -1,4 +1,4 @@
-import { Box, Checkbox, Flex, Input, Stack, Text } from '@chakra-ui/react';
+import { Box, Checkbox, Flex, Input, Stack, Text, VisuallyHidden } from '@chakra-ui/react';
 import type { Verdict } from '@overtally/contracts';
 import { useState } from 'react';
 import { TallyStrip } from '../../../components/tally-strip.js';
@@ -94,9 +94,10 @@ function VerdictChoice(props: {
       checked={place > 0}
       onCheckedChange={({ checked }) => props.onChange(checked === true)}
     >
-      <Checkbox.HiddenInput aria-label={props.label} />
+      <Checkbox.HiddenInput />
       <Checkbox.Control mt="0.5" />
       <Checkbox.Label fontWeight="400" flex="1" minW="0">
+        <VisuallyHidden>{props.label}. </VisuallyHidden>
         <Flex columnGap="5" rowGap="1" wrap="wrap" align="center">
           <Box flex="1 1 240px" minW="0">
             <Text>
