@@ -1,5 +1,5 @@
 export { evaluate, type Evaluation } from './evaluate.js';
 export { limitForOrder, type LimitContext } from './limit-for-order.js';
-export { measurementOfChannel, type Measurement } from './measurement.js';
+export { basisOfChannel, measurementOfChannel, type Measurement } from './measurement.js';
 export { findPublishedLimitSet, publishedLimitSets } from './sets/index.js';
 export { sharesOfSummary } from './shares.js';

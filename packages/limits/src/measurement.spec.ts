@@ -1,6 +1,6 @@
 import type { ChannelAnalysis, Harmonic } from '@overtally/contracts';
 import { describe, expect, it } from 'vitest';
-import { measurementOfChannel } from './measurement.js';
+import { basisOfChannel, measurementOfChannel } from './measurement.js';
 
 const harmonic = (rest: Partial<Harmonic>): Harmonic => ({
   order: 3,
@@ -29,17 +29,26 @@ const channel = (rest: Partial<ChannelAnalysis>): ChannelAnalysis => ({
 const meanOf = (quantity: 'current' | 'voltage', rest: Partial<Harmonic>) =>
   measurementOfChannel(channel({ quantity, harmonics: [harmonic(rest)] })).harmonics[0]?.mean;
 
+const basisOf = (quantity: 'current' | 'voltage', rest: Partial<Harmonic>) =>
+  basisOfChannel(channel({ quantity, harmonics: [harmonic(rest)] }));
+
 describe('measurementOfChannel', () => {
   it('takes the smoothed mean, the group or the line for a current (IEC 61000-4-7, 5.5.1)', () => {
     const all = { groupRms: 2, subgroupRms: 3, smoothedMeanRms: 4 };
     expect(meanOf('current', all)).toBe(4);
     expect(meanOf('current', { ...all, smoothedMeanRms: null })).toBe(2);
     expect(meanOf('current', {})).toBe(1);
+    const bases = [all, { ...all, smoothedMeanRms: null }, {}].map((rest) => basisOf('current', rest));
+    expect(bases).toEqual(['smoothed groups', 'groups', 'single lines']);
   });
 
   it('takes the subgroup or the line for a voltage (IEC 61000-4-30)', () => {
     expect(meanOf('voltage', { groupRms: 2, subgroupRms: 3, smoothedMeanRms: 4 })).toBe(3);
     expect(meanOf('voltage', { groupRms: 2 })).toBe(1);
+    const bases = [{ subgroupRms: 3, smoothedMeanRms: 4 }, { groupRms: 2 }].map((rest) =>
+      basisOf('voltage', rest),
+    );
+    expect(bases).toEqual(['subgroups', 'single lines']);
   });
 
   it('counts orders below half the sample rate as measurable: 2000 samples in 10 cycles reach order 99', () => {

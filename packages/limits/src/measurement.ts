@@ -22,6 +22,15 @@ const meanOfCurrent = (harmonic: Harmonic): number =>
   harmonic.smoothedMeanRms ?? harmonic.groupRms ?? harmonic.rms;
 const meanOfOther = (harmonic: Harmonic): number => harmonic.subgroupRms ?? harmonic.rms;
 
+/** What the orders and totals of a judged channel are made of, in words; see `measurementOfChannel`. */
+export function basisOfChannel({ quantity, harmonics }: ChannelAnalysis): string {
+  const has = (figure: 'smoothedMeanRms' | 'groupRms' | 'subgroupRms') =>
+    harmonics.some((harmonic) => harmonic[figure] !== null);
+  if (quantity !== 'current') return has('subgroupRms') ? 'subgroups' : 'single lines';
+  if (has('smoothedMeanRms')) return 'smoothed groups';
+  return has('groupRms') ? 'groups' : 'single lines';
+}
+
 /**
  * The measurement that limits are applied to, from the analysis of a channel.
  *

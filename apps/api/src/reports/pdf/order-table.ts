@@ -1,4 +1,5 @@
 import type { OrderVerdict, ReportSection, TotalVerdict } from '@overtally/contracts';
+import { basisOfChannel } from '@overtally/limits';
 import { formatList, formatPercent, formatQuantity, formatShare } from './format.js';
 import type { Sheet } from './sheet.js';
 import { drawTable, type Cell, type Column } from './table.js';
@@ -100,14 +101,14 @@ const totalNames: Record<string, string> = {
   TDD: 'TDD, total demand distortion',
 };
 
-/** Totals such as THD against their limits. */
-export function drawTotals(sheet: Sheet, totals: readonly TotalVerdict[]): void {
+/** Totals such as THD against their limits, with what they are summed from. */
+export function drawTotals(sheet: Sheet, { verdict: { totals }, analysis }: ReportSection): void {
   if (totals.length === 0) return;
   sheet.heading('Totals', 40);
   drawTable(
     sheet,
     [
-      { header: 'Total', share: 3.2 },
+      { header: `Total of ${basisOfChannel(analysis.channel)}`, share: 3.2 },
       { header: 'Value', share: 1.3, align: 'right' },
       { header: 'Limit', share: 1.3, align: 'right' },
       { header: 'Share', share: 1.2, align: 'right' },

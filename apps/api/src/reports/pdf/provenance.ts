@@ -86,10 +86,14 @@ function settingsWords(settings: Settings): string {
 
 const delimiterNames = { ',': 'comma', ';': 'semicolon', '\t': 'tab', ' ': 'space', '|': 'bar' } as const;
 
+/** A column by its name, or by its place counted from 1. */
+const columnWords = (column: number | string): string =>
+  typeof column === 'number' ? String(column + 1) : column;
+
 function importWords(options: ImportOptions): string {
   const columns = options.channels?.map(
     ({ column, gain, offset, unit }) =>
-      `column ${column}${gain === undefined ? '' : ` × ${formatGiven(gain)}`}${
+      `column ${columnWords(column)}${gain === undefined ? '' : ` × ${formatGiven(gain)}`}${
         offset === undefined ? '' : ` + ${formatGiven(offset)}`
       }${unit ? ` in ${unit}` : ''}`,
   );
@@ -99,7 +103,7 @@ function importWords(options: ImportOptions): string {
     options.decimal && `decimal ${options.decimal === ',' ? 'comma' : 'point'}`,
     options.headerRows !== undefined && `${options.headerRows} header rows`,
     options.timeColumn !== undefined &&
-      (options.timeColumn === null ? 'no time column' : `time in column ${options.timeColumn}`),
+      (options.timeColumn === null ? 'no time column' : `time in column ${columnWords(options.timeColumn)}`),
     options.timeUnit && `time in ${options.timeUnit}`,
     columns?.join(', '),
   ].filter((part) => typeof part === 'string');

@@ -64,6 +64,17 @@ describe('a printed report', { timeout: 30_000 }, () => {
     expect(text).toContain('all detected');
   });
 
+  it('tells a THD of single lines from the judged one of subgroups, and counts columns from 1', async () => {
+    // IEC 61000-4-7, 3.3 (from memory): THD of lines, of groups and of subgroups are three figures.
+    const channel = channelWith([230, 4, 8], { quantity: 'voltage', unit: 'V' });
+    const section = exampleSection({ limitSetId: 'en50160.lv', channel });
+    section.recording.import = { timeColumn: 0, channels: [{ column: 1, unit: 'V' }] };
+    const text = (await pagesOf(exampleReport([section]))).join('\n');
+    expect(text).toContain('THD-F, single lines, orders 2 to 3');
+    expect(text).toMatch(/Total of subgroups +Value +Limit +Share +Result\n+ *THD,/);
+    expect(text).toMatch(/time in column 1; column 2 in V/);
+  });
+
   it('shows what was measured when the limits are for another quantity', async () => {
     const section = exampleSection({ limitSetId: 'en50160.lv' });
     const text = (await pagesOf(exampleReport([section]))).join('\n');

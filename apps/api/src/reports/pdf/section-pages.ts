@@ -22,7 +22,7 @@ export function drawSection(sheet: Sheet, section: ReportSection, index: number,
     drawVerdict(sheet, section);
     sheet.heading(`${section.verdict.channelName} by order`, 210);
     drawOrderChart(sheet, section);
-    drawTotals(sheet, section.verdict.totals);
+    drawTotals(sheet, section);
     drawFlags(sheet, section.analysis.channel.flags);
     drawNotes(sheet, section);
     drawOrderTable(sheet, section);
@@ -48,6 +48,7 @@ function drawSectionHead(
 function drawSectionBlock(sheet: Sheet, { recording, analysis, verdict }: ReportSection): void {
   const { channel } = analysis;
   const { windows } = channel;
+  const highest = channel.harmonics.at(-1)?.order ?? channel.thdMaxOrder;
   const [frequencyCaption, frequency] = frequencyWords(channel.fundamental);
   drawTitleBlock(sheet, [
     [
@@ -65,9 +66,10 @@ function drawSectionBlock(sheet: Sheet, { recording, analysis, verdict }: Report
       { caption: frequencyCaption, value: frequency, mono: true, share: 1.4 },
       { caption: 'rms', value: formatQuantity(channel.rms, channel.unit), mono: true },
       {
-        caption: `THD-F, orders 2 to ${channel.thdMaxOrder}`,
+        caption: `THD-F, single lines, orders 2 to ${Math.min(channel.thdMaxOrder, highest)}`,
         value: formatPercent(channel.thdFPercent),
         mono: true,
+        share: 1.5,
       },
       { caption: 'Crest factor', value: formatFigure(channel.crestFactor), mono: true },
     ],
