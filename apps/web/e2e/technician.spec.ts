@@ -47,7 +47,7 @@ function backwardsRows(): string {
     { length: 30_000 },
     (_, i) => `${(i / 30_000).toFixed(6)},${Math.sin(i / 95).toFixed(6)}`,
   );
-  return [...rows, '0.5,0.1'].join('\n');
+  return [...rows, '0.500000,0.100000', ''].join('\n');
 }
 
 describe('a technician', () => {
