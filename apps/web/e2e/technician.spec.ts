@@ -121,7 +121,7 @@ describe('a technician', () => {
       mimeType: 'text/csv',
       buffer: Buffer.from(Array.from({ length: 3000 }, (_, i) => (i * 7919) % 256)),
     });
-    await dialog.getByText(/not/).first().waitFor();
+    await dialog.getByText(/holds binary data that is not recognised/).waitFor();
     const read = dialog.getByRole('button', { name: 'Read with these settings' });
     await read.and(page.locator(':disabled')).waitFor();
     await dialog.getByRole('button', { name: 'Leave this file out' }).click();

@@ -11,7 +11,7 @@ const file = (status: string, ...tests: string[]) => ({
 describe('tallyOfReport', () => {
   it('counts passed, failed and skipped tests', () => {
     const report = {
-      testResults: [file('failed', 'passed', 'failed'), file('passed', 'passed', 'pending', 'todo')],
+      testResults: [file('failed', 'passed', 'failed'), file('passed', 'passed', 'pending', 'skipped')],
     };
     expect(tallyOfReport(report, 1)).toEqual({ passed: 2, failed: 1, skipped: 2 });
   });
