@@ -1,5 +1,16 @@
 import { z } from 'zod';
 import { idSchema, maxChannelIndex, pageOf, personRefSchema, timestampSchema } from './common.js';
+import {
+  bandSchema,
+  countedFrequencySchema,
+  flagEvidenceSchema,
+  harmonicFamilySchema,
+  spectralLineSchema,
+  statisticsSchema,
+  toneSchema,
+  uncertaintySchema,
+} from './figures.js';
+import { pairsSettingSchema, powerPairSchema, threePhaseSchema, threePhaseSettingSchema } from './power.js';
 import { quantitySchema, readProblemSchema } from './recordings.js';
 
 export const profileSchema = z.enum(['mains', 'tone', 'general']);
@@ -43,6 +54,52 @@ export const settingsSchema = z
       .max(200_000)
       .optional()
       .describe('10 at 50 Hz, 12 at 60 Hz when absent'),
+    kaiserBeta: z.number().min(0).max(40).optional().describe('Shape β of the Kaiser window, 9 when absent'),
+    segmentLength: z
+      .number()
+      .int()
+      .min(16)
+      .max(4_194_304)
+      .optional()
+      .describe('General: samples per averaged segment; follows from the record when absent'),
+    overlapPercent: z
+      .number()
+      .min(0)
+      .max(95)
+      .optional()
+      .describe('General: overlap of segments, 50 when absent'),
+    bandHz: z
+      .object({ fromHz: z.number().min(0), toHz: z.number().positive() })
+      .refine((band) => band.toHz > band.fromHz, {
+        message: 'The band must end above its start',
+        path: ['toHz'],
+      })
+      .optional()
+      .describe('Tone: band of the band-limited THD+N'),
+    pairs: pairsSettingSchema.optional().describe('Voltage and current channels that make a power'),
+    threePhase: threePhaseSettingSchema.optional().describe('Sets of three phases'),
+    ratedCurrentA: z.number().positive().optional().describe('Rated current for the K-factor of nameplates'),
+    accuracy: z
+      .array(
+        z.object({
+          channel: z.number().int().min(0).max(maxChannelIndex),
+          readingPercent: z
+            .number()
+            .min(0)
+            .max(100)
+            .default(0)
+            .describe('± limits of the instrument, of reading'),
+          calibrationPercent: z
+            .number()
+            .min(0)
+            .max(100)
+            .default(0)
+            .describe('Expanded uncertainty (k = 2) of the calibration, of reading'),
+        }),
+      )
+      .max(maxChannelIndex + 1)
+      .optional()
+      .describe('What is known of the measuring chain of a channel, for the uncertainties'),
     span: z
       .object({ fromS: z.number().min(0), toS: z.number().positive() })
       .refine((span) => span.toS > span.fromS, {
@@ -65,6 +122,7 @@ export const flagSchema = z.object({
   code: z.string(),
   severity: z.enum(['info', 'warning', 'error']),
   message: z.string(),
+  evidence: flagEvidenceSchema.nullable(),
 });
 export type Flag = z.infer<typeof flagSchema>;
 
@@ -82,6 +140,9 @@ export const harmonicSchema = z.object({
   subgroupRms: z.number().nullable().describe('IEC 61000-4-7, 5.6'),
   smoothedMeanRms: z.number().nullable().describe('Mean of the 1.5 s smoothed group values'),
   smoothedMaxRms: z.number().nullable().describe('Largest 1.5 s smoothed group value'),
+  uncertainty: z.number().nullable().describe('Expanded uncertainty of `rms`, k = 2'),
+  groupStatistics: statisticsSchema.nullable().describe('Group rms over the windows'),
+  subgroupStatistics: statisticsSchema.nullable().describe('Subgroup rms over the windows'),
 });
 export type Harmonic = z.infer<typeof harmonicSchema>;
 
@@ -119,10 +180,40 @@ export const channelAnalysisSchema = z.object({
   snrDb: figure,
   sfdrDb: figure,
   enobBits: figure,
+  tone: toneSchema.nullable().describe('Further figures of the tone profile'),
+  distortion: z
+    .object({
+      thd: statisticsSchema,
+      thdg: statisticsSchema.nullable(),
+      thds: statisticsSchema.nullable(),
+      pwhd: statisticsSchema.nullable(),
+    })
+    .nullable()
+    .describe('Mains: distortion over the windows in % (IEC 61000-4-7, 3.3)'),
+  bands: z.array(bandSchema).describe('Mains: 200 Hz bands from 2 kHz to 9 kHz where the sample rate allows'),
+  countedFrequency: z.array(countedFrequencySchema).describe('Mains: frequency per 10 s'),
+  lines: z.array(spectralLineSchema).describe('Largest peaks of the spectrum'),
+  families: z.array(harmonicFamilySchema).describe('Harmonic series found among the peaks'),
+  uncertainty: z
+    .record(z.string(), uncertaintySchema)
+    .describe('By the name of the figure: rms, fundamental.rms, fundamental.frequencyHz, thdFPercent, …'),
   harmonics: z.array(harmonicSchema),
   interharmonics: z.array(interharmonicSchema),
   windows: z
-    .object({ cycles: z.number().int(), count: z.number().int(), samplesPerWindow: z.number() })
+    .object({
+      cycles: z.number().int(),
+      count: z.number().int(),
+      samplesPerWindow: z.number(),
+      flaggedCount: z
+        .number()
+        .int()
+        .describe('Windows with a gap, a step or clipping, kept out of statistics'),
+      synchronisationErrorPercent: z
+        .number()
+        .nullable()
+        .describe('Largest deviation of a window from whole cycles'),
+      gridChannel: z.number().int().describe('Channel whose fundamental sets the windows of all channels'),
+    })
     .nullable()
     .describe('Synchronous windows of the mains profile'),
   flags: z.array(flagSchema),
@@ -142,17 +233,21 @@ export const analysisSchema = z.object({
   settings: settingsSchema,
   supersededById: idSchema.nullable(),
   channels: z.array(channelAnalysisSchema),
-  power: z.array(z.never()).describe('Voltage and current pairs; empty until power figures are computed'),
+  power: z.array(powerPairSchema).describe('One entry per voltage with its current'),
+  threePhase: z.array(threePhaseSchema).describe('One entry per set of three phases'),
   startedBy: personRefSchema,
   createdAt: timestampSchema,
   finishedAt: timestampSchema.nullable(),
 });
 export type Analysis = z.infer<typeof analysisSchema>;
-export const analysisPageSchema = pageOf(analysisSchema.omit({ channels: true, power: true }));
+export const analysisPageSchema = pageOf(
+  analysisSchema.omit({ channels: true, power: true, threePhase: true }),
+);
 
 export const spectrumQuerySchema = z.object({
   channel: z.coerce.number().int().min(0).max(maxChannelIndex).default(0),
   maxPoints: z.coerce.number().int().min(16).max(20000).default(4000),
+  scaling: z.enum(['spectrum', 'density']).default('spectrum').describe('rms per line, or rms per √Hz'),
 });
 
 /** One-sided rms amplitude spectrum; when thinned, each point is the largest line of its bin. */
@@ -161,6 +256,9 @@ export const spectrumSchema = z.object({
   unit: z.string(),
   window: windowNameSchema,
   resolutionHz: z.number().describe('Spacing of the computed lines'),
+  noiseBandwidthHz: z.number().describe('Equivalent noise bandwidth of a line'),
+  segments: z.number().int().describe('How many segments were averaged'),
+  scaling: z.enum(['spectrum', 'density']),
   frequencyHz: z.array(z.number()),
   rms: z.array(z.number()),
 });
