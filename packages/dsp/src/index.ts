@@ -1,6 +1,7 @@
 export { analyseRecord, engineVersion } from './analyse-record.js';
 export { AnalysisInputError, AnalysisStopped } from './errors.js';
 export type * from './types.js';
+export type * from './power/types.js';
 export { createComplexFftPlan, type ComplexFftPlan } from './fft/complex-fft-plan.js';
 export { createRealFftPlan, type RealFftPlan } from './fft/real-fft-plan.js';
 export { windowSamples, type WindowName } from './windows/window-samples.js';
