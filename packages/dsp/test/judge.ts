@@ -1,4 +1,4 @@
-import type { Expected, Nested } from './reference-cases.js';
+import type { ComplexPair, Expected, Nested } from './reference-cases.js';
 
 /** What is wrong with a result, or null: the comparison that fixtures/reference/SOURCE.md describes. */
 export function judge(expected: Expected, got: unknown): string | null {
@@ -12,7 +12,18 @@ export function judge(expected: Expected, got: unknown): string | null {
     case 'angles':
       return judgeArray(expected, got, true);
     case 'integer':
+    case 'bool':
       return got === expected.value ? null : `expected ${String(expected.value)}, got ${String(got)}`;
+    case 'text':
+      return String(got).toLowerCase() === String(expected.value).toLowerCase()
+        ? null
+        : `expected ${String(expected.value)}, got ${String(got)}`;
+    case 'one_of':
+      return expected.values!.includes(got)
+        ? null
+        : `expected one of ${expected.values!.join()}, got ${String(got)}`;
+    case 'poles':
+      return judgePoles(expected, got as ComplexPair[]);
     case 'flags':
       return judgeFlags(expected, got as string[]);
   }
@@ -42,6 +53,25 @@ function judgeArray(expected: Expected, got: unknown, angle: boolean): string | 
     return miss === null ? [] : [`[${i}] ${miss}`];
   });
   return misses.length === 0 ? null : misses.join('; ');
+}
+
+/** Every expected root has a partner of its own within the tolerance, in any order. */
+function judgePoles(expected: Expected, got: ComplexPair[]): string | null {
+  const want = expected.value as ComplexPair[];
+  const left = [...got];
+  for (const [re, im] of want) {
+    const distance = ([a, b]: ComplexPair): number => Math.hypot(a - re, b - im);
+    const nearest = left.reduce(
+      (best, root, i) => (best < 0 || distance(root) < distance(left[best]!) ? i : best),
+      -1,
+    );
+    const limit = Math.max(expected.tol_abs ?? 0, (expected.tol_rel ?? 0) * Math.hypot(re, im));
+    if (nearest < 0 || !(distance(left[nearest]!) <= limit)) {
+      return `no root within ${limit} of ${re}, ${im} among ${left.join('; ')}`;
+    }
+    left.splice(nearest, 1);
+  }
+  return left.length === 0 ? null : `roots too many: ${left.join('; ')}`;
 }
 
 function judgeFlags(expected: Expected, got: string[]): string | null {

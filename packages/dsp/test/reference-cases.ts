@@ -3,8 +3,9 @@ import { readFileSync } from 'node:fs';
 const ROOT = new URL('../../../fixtures/reference/', import.meta.url);
 
 export interface Expected {
-  kind: 'number' | 'angle' | 'array' | 'angles' | 'integer' | 'flags';
-  value?: number | Nested;
+  kind: 'number' | 'angle' | 'array' | 'angles' | 'integer' | 'text' | 'bool' | 'one_of' | 'poles' | 'flags';
+  value?: number | string | boolean | Nested | ComplexPair[];
+  values?: unknown[];
   tol_abs?: number;
   tol_rel?: number;
   tol_abs_each?: number[];
@@ -13,6 +14,8 @@ export interface Expected {
   need?: string;
 }
 export type Nested = (number | null)[];
+/** [real part, imaginary part] */
+export type ComplexPair = [number, number];
 
 export interface ReferenceFile {
   name: string;
@@ -27,6 +30,8 @@ export interface ReferenceCase {
   title: string;
   files: ReferenceFile[];
   analysis: Record<string, unknown>;
+  /** Families 7 and 8: the input of a case without a record. */
+  generator?: Record<string, unknown>;
   expected: Record<string, Expected>;
 }
 
@@ -58,6 +63,25 @@ export function readRecord({ files }: ReferenceCase): ReferenceRecord {
   const ends =
     wav.bits === null ? {} : { lowestCode: -scale, highestCode: scale * (1 - 2 ** (1 - wav.bits)) };
   return { ...base, samples: wav.samples.map((x) => x * scale), ...ends };
+}
+
+/** All channels of the CSV record of a case by name, in engineering values. */
+export function readChannels({ files }: ReferenceCase): {
+  sampleRateHz: number;
+  samples: Record<string, Float64Array>;
+} {
+  const file = files[0]!;
+  const text = readFileSync(new URL(`records/${file.name}`, ROOT), 'utf8');
+  const [header, ...rows] = text.trim().split(/\r?\n/);
+  const cells = rows.map((row) => row.split(','));
+  const samples = file.channels.map(({ name, scale }) => {
+    const at = header!.split(',').indexOf(name);
+    return [name, Float64Array.from(cells, (row) => Number(row[at]) * scale)];
+  });
+  return {
+    sampleRateHz: file.sample_rate_hz,
+    samples: Object.fromEntries(samples) as Record<string, Float64Array>,
+  };
 }
 
 function lastColumn(text: string): Float64Array {
