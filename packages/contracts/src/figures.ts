@@ -40,7 +40,7 @@ export type FlagEvidence = z.infer<typeof flagEvidenceSchema>;
 export const spectralLineSchema = z.object({
   frequencyHz: z.number(),
   rms: z.number(),
-  family: z.number().int().nullable().describe('Index into `families`'),
+  familyIndex: z.number().int().nullable().describe('Index into `families`'),
   order: z.number().int().nullable().describe('Order within its family'),
 });
 export type SpectralLine = z.infer<typeof spectralLineSchema>;
@@ -49,7 +49,7 @@ export type SpectralLine = z.infer<typeof spectralLineSchema>;
 export const harmonicFamilySchema = z.object({
   fundamentalHz: z.number(),
   orders: z.array(z.number().int()),
-  powerSharePercent: z.number().describe('Its share of the power of all peaks'),
+  shareOfPower: z.number().min(0).max(1).describe('Its share of the power of all listed lines'),
 });
 export type HarmonicFamily = z.infer<typeof harmonicFamilySchema>;
 

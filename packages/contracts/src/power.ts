@@ -10,6 +10,8 @@ export const powerOrderSchema = z.object({
   voltageRms: z.number(),
   currentRms: z.number(),
   phaseDifferenceDeg: figure.describe('Voltage minus current, positive when the current lags'),
+  voltagePhaseZeroCrossingDeg: figure.describe('Sine form, zero time = rising zero crossing of the voltage'),
+  currentPhaseZeroCrossingDeg: figure,
   P: figure.describe('W, positive into the load'),
   Q: figure.describe('var, positive when the current lags'),
   direction: z.enum(['into-load', 'from-load']).nullable(),
@@ -17,6 +19,7 @@ export const powerOrderSchema = z.object({
 
 /** Factors for transformers and their derating (IEEE C57.110, UL 1561, EN 50541). */
 export const transformerFactorsSchema = z.object({
+  maxOrder: z.number().int().describe('Highest order that counts'),
   kFactorMeasured: figure,
   kFactorRated: figure.describe('By the rated current of the settings; null without it'),
   fhl: figure.describe('Harmonic loss factor F_HL'),
@@ -24,12 +27,8 @@ export const transformerFactorsSchema = z.object({
   factorKEn: figure.describe('Derating factor K, e = 0.1, q = 1.7'),
 });
 
-/** A voltage with its current: the quantities of IEEE 1459 under their symbols, in V, A, W, var and VA. */
-export const powerPairSchema = z.object({
-  voltageChannel: channelIndex,
-  currentChannel: channelIndex,
-  phase: z.number().int().nullable(),
-  frequencyHz: z.number(),
+/** The quantities of IEEE 1459 under their symbols, in V, A, W, var and VA; ratios are plain numbers. */
+const powerFigures = {
   V: figure,
   I: figure,
   V1: figure,
@@ -53,6 +52,15 @@ export const powerPairSchema = z.object({
   harmonicPollution: figure.describe('SN/S1'),
   thdV: figure.describe('VH/V1, DC included'),
   thdI: figure.describe('IH/I1, DC included'),
+};
+
+/** A voltage with its current: the quantities of IEEE 1459 under their symbols, in V, A, W, var and VA. */
+export const powerPairSchema = z.object({
+  voltageChannel: channelIndex,
+  currentChannel: channelIndex,
+  phase: z.number().int().nullable(),
+  frequencyHz: z.number(),
+  ...powerFigures,
   orders: z.array(powerOrderSchema),
   transformer: transformerFactorsSchema,
 });
@@ -80,9 +88,12 @@ export const threePhaseSchema = z.object({
   currentChannels: three,
   wires: z.enum(['3w', '4w']),
   frequencyHz: z.number(),
+  phases: z.array(z.object(powerFigures)).length(3),
   P: figure,
   Ve: figure,
   Ie: figure,
+  Ve1: figure,
+  Ie1: figure,
   Se: figure,
   Se1: figure,
   SeN: figure,
@@ -94,7 +105,7 @@ export const threePhaseSchema = z.object({
   Sarithmetic: figure,
   lineToLineRms: z.array(z.number()).describe('1–2, 2–3, 3–1'),
   neutralRms: figure.describe('rms of the sum of the currents'),
-  neutralOrders: z.array(z.object({ order: z.number().int(), rms: z.number() })),
+  neutralOrders: z.array(z.object({ order: z.number().int(), rms: z.number(), phaseDeg: figure })),
   voltageSequences: z.array(sequenceOrderSchema),
   currentSequences: z.array(sequenceOrderSchema),
   voltageUnbalance: unbalance,

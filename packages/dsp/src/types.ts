@@ -1,6 +1,30 @@
+import type { HarmonicFamily, SpectralLine } from './peaks/types.js';
+import type { PowerPairResult, ThreePhaseResult } from './power/types.js';
 import type { WindowName } from './windows/window-samples.js';
 
 export type ProfileName = 'mains' | 'tone' | 'general';
+
+/** What is known of the measuring chain of a channel, for the uncertainties. */
+export interface ChannelAccuracy {
+  /** Index of the channel. */
+  channel: number;
+  /** ± limits of the instrument in percent of reading (rectangular distribution). */
+  readingPercent: number;
+  /** Expanded uncertainty (k = 2) of its calibration in percent of reading. */
+  calibrationPercent: number;
+}
+
+export interface PowerPairSetting {
+  voltage: number;
+  current: number;
+  phase?: 1 | 2 | 3 | undefined;
+}
+
+export interface ThreePhaseSetting {
+  voltages: [number, number, number];
+  currents: [number, number, number];
+  wires: '3w' | '4w';
+}
 
 export interface AnalysisSettings {
   profile: ProfileName;
@@ -13,7 +37,19 @@ export interface AnalysisSettings {
   /** Highest order in THD, default 40 (mains, general) or 10 (tone). */
   thdMaxOrder?: number;
   /** Mains: cycles per window, default 10 at 50 Hz, 12 at 60 Hz, otherwise the even number next to 200 ms. */
-  cyclesPerWindow?: number;
+  cyclesPerWindow?: number | undefined;
+  /** Shape β of the Kaiser window, default 9. */
+  kaiserBeta?: number | undefined;
+  /** General: samples per averaged segment and their overlap in percent (default 50). */
+  segmentLength?: number | undefined;
+  overlapPercent?: number | undefined;
+  /** Tone: band of the band-limited THD+N. */
+  bandHz?: { fromHz: number; toHz: number } | undefined;
+  /** Guessed from names and quantities when absent. */
+  pairs?: PowerPairSetting[] | undefined;
+  threePhase?: ThreePhaseSetting[] | undefined;
+  ratedCurrentA?: number | undefined;
+  accuracy?: ChannelAccuracy[] | undefined;
 }
 
 export interface ResolvedSettings {
@@ -24,6 +60,14 @@ export interface ResolvedSettings {
   thdMaxOrder: number;
   /** null: follows from the fundamental that is found. */
   cyclesPerWindow: number | null;
+  kaiserBeta?: number | undefined;
+  segmentLength?: number | undefined;
+  overlapPercent?: number | undefined;
+  bandHz?: { fromHz: number; toHz: number } | undefined;
+  pairs?: PowerPairSetting[] | undefined;
+  threePhase?: ThreePhaseSetting[] | undefined;
+  ratedCurrentA?: number | undefined;
+  accuracy?: ChannelAccuracy[] | undefined;
 }
 
 export interface ChannelInput {
@@ -53,10 +97,43 @@ export interface AnalyseOptions {
 
 export type FlagSeverity = 'info' | 'warning' | 'error';
 
+/** What a flag rests on. */
+export interface FlagEvidence {
+  /** How often it was seen. */
+  count: number;
+  /** The first places (at most 20), seconds from the first sample. */
+  timesS: number[];
+  /** The figure that was compared, with what, and their unit. */
+  value: number | null;
+  limit: number | null;
+  unit: string | null;
+}
+
 export interface Flag {
   code: string;
   severity: FlagSeverity;
   message: string;
+  evidence: FlagEvidence | null;
+}
+
+export type UncertaintySource =
+  'calibration' | 'accuracy' | 'quantisation' | 'noise' | 'synchronisation' | 'fit';
+
+/** Expanded uncertainty of a figure by the GUM (JCGM 100), in the unit of the figure. */
+export interface Uncertainty {
+  expanded: number;
+  /** k, 2 for about 95 %. */
+  coverageFactor: number;
+  /** Standard uncertainties, combined by root sum of squares, the largest first. */
+  contributors: { source: UncertaintySource; standard: number }[];
+}
+
+/** Over the windows of a record; flagged windows are left out. */
+export interface Statistics {
+  mean: number;
+  max: number;
+  p95: number;
+  p99: number;
 }
 
 export interface HarmonicResult {
@@ -74,6 +151,10 @@ export interface HarmonicResult {
   /** Mean and largest of the 1.5 s smoothed group values. */
   smoothedMeanRms: number | null;
   smoothedMaxRms: number | null;
+  /** Expanded uncertainty (k = 2) of `rms`. */
+  uncertainty: number | null;
+  groupStatistics: Statistics | null;
+  subgroupStatistics: Statistics | null;
 }
 
 export interface InterharmonicResult {
@@ -91,12 +172,28 @@ export interface FundamentalResult {
   frequencyUncertaintyHz: number | null;
 }
 
+/** The synchronous windows of the mains profile. */
+export interface WindowsResult {
+  cycles: number;
+  count: number;
+  samplesPerWindow: number;
+  flaggedCount: number;
+  /** Largest deviation of a window from whole cycles; null without a frequency track. */
+  synchronisationErrorPercent: number | null;
+  /** Channel whose fundamental sets the windows of all channels. */
+  gridChannel: number;
+}
+
 export interface SpectrumResult {
   startHz: number;
   stepHz: number;
   /** One-sided rms amplitude spectrum from DC to half the sample rate. */
   rms: Float64Array;
   window: WindowName;
+  /** Equivalent noise bandwidth of a line. */
+  noiseBandwidthHz: number;
+  /** Segments averaged. */
+  segments: number;
 }
 
 export interface ToneFigures {
@@ -105,6 +202,71 @@ export interface ToneFigures {
   snrDb: number | null;
   sfdrDb: number | null;
   enobBits: number | null;
+}
+
+/** Figures of the tone profile beside `ToneFigures` (IEEE 1241, IEC 60268-3). */
+export interface ToneDetails {
+  levelDbfs: number | null;
+  enobFullScaleBits: number | null;
+  /** Unit of the channel per √Hz. */
+  noiseDensity: number | null;
+  thdPlusNBandPercent: number | null;
+  bandHz: { fromHz: number; toHz: number } | null;
+  /** Orders 2, 3, … relative to the tone. */
+  harmonicsDbc: (number | null)[];
+}
+
+/** A band of 200 Hz between 2 kHz and 9 kHz (IEC 61000-4-7, annex B). */
+export interface BandResult {
+  centreHz: number;
+  /** Root mean square and maximum over the windows. */
+  rms: number;
+  maxRms: number;
+}
+
+/** Frequency by counted cycles over 10 s (IEC 61000-4-30, 5.1). */
+export interface CountedFrequency {
+  startS: number;
+  frequencyHz: number;
+  cycles: number;
+}
+
+/** Percent, over the windows. */
+export interface DistortionStatistics {
+  thd: Statistics;
+  thdg: Statistics | null;
+  thds: Statistics | null;
+  pwhd: Statistics | null;
+}
+
+/** Figures of a channel window by window (mains). Two-dimensional arrays hold one row of `count` windows per order. */
+export interface WindowSeries {
+  count: number;
+  intervalS: number;
+  startS: Float64Array;
+  /** 1 where the window holds a gap, a step or a clipped crest. */
+  flagged: Uint8Array;
+  /** Of the channel that sets the windows, per window. */
+  frequencyHz: Float64Array;
+  rms: Float64Array;
+  /** Percent. NaN where it does not apply. */
+  thd: Float64Array;
+  thdg: Float64Array;
+  thds: Float64Array;
+  pwhd: Float64Array;
+  /** Orders 1.. (rows). NaN where the record ends below the group. */
+  orders: number;
+  line: Float64Array;
+  group: Float64Array;
+  subgroup: Float64Array;
+  /** Cosine-form phase of each order at the start of its window, degrees. */
+  phaseDeg: Float64Array;
+  /** Between orders 0 and 1, 1 and 2, … (rows). */
+  interharmonicGroup: Float64Array;
+  centredSubgroup: Float64Array;
+  /** Rows of the 200 Hz bands with these centres; empty where the sample rate does not allow them. */
+  bandCentresHz: Float64Array;
+  band: Float64Array;
 }
 
 export interface ChannelAnalysis extends ToneFigures {
@@ -125,7 +287,16 @@ export interface ChannelAnalysis extends ToneFigures {
   harmonics: HarmonicResult[];
   /** mains only. */
   interharmonics: InterharmonicResult[];
-  windows: { cycles: number; count: number; samplesPerWindow: number } | null;
+  windows: WindowsResult | null;
+  tone: ToneDetails | null;
+  distortion: DistortionStatistics | null;
+  bands: BandResult[];
+  countedFrequency: CountedFrequency[];
+  lines: SpectralLine[];
+  families: HarmonicFamily[];
+  /** By the name of the figure: rms, fundamental.rms, fundamental.frequencyHz, thdFPercent, … */
+  uncertainty: Record<string, Uncertainty>;
+  series: WindowSeries | null;
   flags: Flag[];
   spectrum: SpectrumResult;
 }
@@ -134,4 +305,6 @@ export interface RecordAnalysis {
   engineVersion: string;
   settings: ResolvedSettings;
   channels: ChannelAnalysis[];
+  power: PowerPairResult[];
+  threePhase: ThreePhaseResult[];
 }
