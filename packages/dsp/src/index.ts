@@ -6,6 +6,19 @@ export { createComplexFftPlan, type ComplexFftPlan } from './fft/complex-fft-pla
 export { createRealFftPlan, type RealFftPlan } from './fft/real-fft-plan.js';
 export { windowSamples, type WindowName } from './windows/window-samples.js';
 export { windowFigures, type WindowFigures } from './windows/window-figures.js';
+export {
+  amplitudeCorrection,
+  powerCorrection,
+  windowGains,
+  type WindowGains,
+} from './windows/window-gains.js';
+export {
+  createWelch,
+  welch,
+  type PowerSpectrum,
+  type WelchAverage,
+  type WelchOptions,
+} from './spectrum/welch.js';
 export { amplitudeSpectrum, type SpectrumOptions } from './spectrum/amplitude-spectrum.js';
 export {
   findFundamental,
@@ -21,6 +34,7 @@ export { crestFactor } from './figures/crest-factor.js';
 export { formFactor } from './figures/form-factor.js';
 export { thdF, thdR } from './figures/distortion.js';
 export { toneFigures, type ToneResult } from './figures/tone-figures.js';
+export type { FrequencyBand, ToneOptions, TonePowers } from './tone/tone-result.js';
 export { waveformFigures, type WaveformFigures } from './figures/waveform-figures.js';
 export { windowBoundaries } from './groups/window-boundaries.js';
 export {

@@ -1,24 +1,7 @@
 import { besselI0 } from './bessel-i0.js';
+import { COSINE_TERMS, DEFAULT_KAISER_BETA, type WindowName } from './window-terms.js';
 
-export type WindowName =
-  'rectangular' | 'hann' | 'hamming' | 'blackman' | 'blackman-harris' | 'nuttall' | 'flat-top' | 'kaiser';
-
-/**
- * Coefficients a_k of w[n] = Σ (−1)^k a_k cos(2πkn/N).
- * Hann to Blackman-Harris (4 terms, minimum side lobe): F. J. Harris, Proc. IEEE 66(1), 1978, table 1.
- * Nuttall: A. H. Nuttall, IEEE Trans. ASSP-29(1), 1981, minimum 4-term. Flat-top: the usual five-term library form.
- */
-const COSINE_TERMS: Record<Exclude<WindowName, 'kaiser'>, readonly number[]> = {
-  rectangular: [1],
-  hann: [0.5, 0.5],
-  hamming: [0.54, 0.46],
-  blackman: [0.42, 0.5, 0.08],
-  'blackman-harris': [0.35875, 0.48829, 0.14128, 0.01168],
-  nuttall: [0.3635819, 0.4891775, 0.1365995, 0.0106411],
-  'flat-top': [0.21557895, 0.41663158, 0.277263158, 0.083578947, 0.006947368],
-};
-
-const DEFAULT_KAISER_BETA = 9;
+export type { WindowName };
 
 /**
  * The samples of a periodic ("DFT-even") window, as spectral analysis needs it.
@@ -29,22 +12,36 @@ const DEFAULT_KAISER_BETA = 9;
 export function windowSamples(name: WindowName, length: number, beta = DEFAULT_KAISER_BETA): Float64Array {
   if (!Number.isInteger(length) || length < 1)
     throw new RangeError(`Window length must be a positive integer, got ${length}`);
+  const valueAt = name === 'kaiser' ? kaiserValue(length, beta) : cosineValue(COSINE_TERMS[name], length);
   const out = new Float64Array(length);
-  if (name === 'kaiser') {
-    const scale = besselI0(beta);
-    for (let n = 0; n < length; n++) {
-      const x = (2 * n) / length - 1;
-      out[n] = besselI0(beta * Math.sqrt(Math.max(0, 1 - x * x))) / scale;
-    }
-    return out;
-  }
-  const terms = COSINE_TERMS[name];
-  for (let n = 0; n < length; n++) {
-    let value = 0;
-    for (let k = terms.length - 1; k >= 0; k--) {
-      value += (k % 2 === 0 ? 1 : -1) * terms[k]! * Math.cos((2 * Math.PI * ((k * n) % length)) / length);
-    }
+  for (let n = 0; 2 * n <= length; n++) {
+    const value = valueAt(n);
     out[n] = value;
+    if (n > 0) out[length - n] = value;
   }
   return out;
+}
+
+function kaiserValue(length: number, beta: number): (n: number) => number {
+  const scale = besselI0(beta);
+  return (n) => {
+    const x = (2 * n) / length - 1;
+    return besselI0(beta * Math.sqrt(Math.max(0, 1 - x * x))) / scale;
+  };
+}
+
+/** Σ (−1)^k a_k cos(kx) by the recurrence of C. W. Clenshaw (1955): one cosine per sample whatever the number of terms. */
+function cosineValue(terms: readonly number[], length: number): (n: number) => number {
+  const step = (2 * Math.PI) / length;
+  return (n) => {
+    const minusCosine = -Math.cos(step * n);
+    let next = 0;
+    let afterNext = 0;
+    for (let k = terms.length - 1; k > 0; k--) {
+      const here = terms[k]! + 2 * minusCosine * next - afterNext;
+      afterNext = next;
+      next = here;
+    }
+    return terms[0]! + minusCosine * next - afterNext;
+  };
 }

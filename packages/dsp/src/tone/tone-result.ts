@@ -1,0 +1,47 @@
+import type { ToneDetails, ToneFigures } from '../types.js';
+
+/** A band of frequencies with sharp edges, both ends included. */
+export interface FrequencyBand {
+  fromHz: number;
+  toHz: number;
+}
+
+export interface ToneOptions {
+  /** Harmonics 2..maxOrder belong to the distortion; default 10 (IEEE 1241). */
+  maxOrder?: number | undefined;
+  /** Peak amplitude of a full-scale sine in units of the samples; without it nothing is referred to full scale. */
+  fullScalePeak?: number | undefined;
+  /** Band of a second THD+N that counts nothing outside it. */
+  band?: FrequencyBand | undefined;
+}
+
+/** Mean powers (squares of rms values) of a stretch; those of several stretches can be combined. */
+export interface TonePowers {
+  sampleCount: number;
+  dc: number;
+  tone: number;
+  /** Orders 2, 3, … where they appear after sampling; null where an order cannot be told from another line or DC. */
+  harmonics: (number | null)[];
+  /** Everything but tone and DC. */
+  noiseAndDistortion: number;
+  /** The same within the band that was asked for; null without one. */
+  bandNoiseAndDistortion: number | null;
+  /** Square of the median noise density, unit²/Hz. */
+  noiseDensity: number;
+  /** The largest line besides tone and DC; null when there is none. */
+  spur: { frequencyHz: number; power: number } | null;
+}
+
+/** Single-tone quality figures. Levels are null when the power they compare with is mere rounding. */
+export interface ToneResult extends ToneFigures, ToneDetails {
+  frequencyHz: number;
+  /** rms value of the tone. */
+  rms: number;
+  dc: number;
+  thdFPercent: number | null;
+  thdRPercent: number | null;
+  /** Frequency of the largest line besides the tone. */
+  spurFrequencyHz: number | null;
+  /** What the figures rest on, for combining stretches of a long record. */
+  powers: TonePowers;
+}
