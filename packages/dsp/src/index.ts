@@ -49,3 +49,10 @@ export {
   interharmonicGroups,
 } from './groups/grouping.js';
 export { smooth, smoothingAlpha } from './groups/smooth.js';
+export { fitPhasorSet } from './power/fit-phasor-set.js';
+export { powerFigures } from './power/power-figures.js';
+export { orderPowers } from './power/order-powers.js';
+export { threePhaseFigures, type ThreePhaseResults } from './power/three-phase-figures.js';
+export { symmetricalComponents, unbalance } from './power/symmetrical-components.js';
+export { transformerFactors, type TransformerOptions } from './power/transformer-factors.js';
+export { recordPower, type PowerChannel, type RecordPowerInput } from './power/record-power.js';
