@@ -1,4 +1,13 @@
-import type { ChannelAnalysis, Flag, Quantity, ReadProblem, Settings } from '@overtally/contracts';
+import type {
+  ChannelAnalysis,
+  Flag,
+  PowerPair,
+  Quantity,
+  ReadProblem,
+  Settings,
+  Statistics,
+  ThreePhase,
+} from '@overtally/contracts';
 import {
   doublePrecision,
   foreignKey,
@@ -31,6 +40,8 @@ export const analyses = pgTable(
     problem: jsonb().$type<ReadProblem>(),
     engineVersion: text(),
     settings: jsonb().$type<Settings>().notNull(),
+    power: jsonb().$type<PowerPair[]>().notNull().default([]),
+    threePhase: jsonb().$type<ThreePhase[]>().notNull().default([]),
     supersededById: uuid().references((): AnyPgColumn => analyses.id, { onDelete: 'set null' }),
     cancelRequestedAt: moment(),
     startedById: uuid()
@@ -42,7 +53,23 @@ export const analyses = pgTable(
   (table) => [index('analyses_recording_index').on(table.recordingId, table.createdAt)],
 );
 
-/** Figures of one channel of an analysis; the spectrum lies in storage. */
+/** What the stored series of a channel hold, one value a window; see `seriesLayout` of the API for their places. */
+export interface StoredSeries {
+  /** Windows. */
+  count: number;
+  intervalS: number;
+  /** Orders 1.. followed. */
+  orders: number;
+  /** Gaps between orders 0 and 1, 1 and 2, … followed. */
+  interharmonics: number;
+  /** Centres of the 200 Hz bands followed. */
+  bandCentresHz: number[];
+}
+
+/**
+ * Figures of one channel of an analysis; spectrum and series lie in storage. Columns that may be null or empty also
+ * stand for figures that were not yet computed when the analysis was made.
+ */
 export const analysisChannels = pgTable(
   'analysis_channels',
   {
@@ -67,6 +94,13 @@ export const analysisChannels = pgTable(
     snrDb: doublePrecision(),
     sfdrDb: doublePrecision(),
     enobBits: doublePrecision(),
+    tone: jsonb().$type<NonNullable<ChannelAnalysis['tone']>>(),
+    distortion: jsonb().$type<NonNullable<ChannelAnalysis['distortion']>>(),
+    bands: jsonb().$type<ChannelAnalysis['bands']>().notNull().default([]),
+    countedFrequency: jsonb().$type<ChannelAnalysis['countedFrequency']>().notNull().default([]),
+    lines: jsonb().$type<ChannelAnalysis['lines']>().notNull().default([]),
+    families: jsonb().$type<ChannelAnalysis['families']>().notNull().default([]),
+    uncertainty: jsonb().$type<ChannelAnalysis['uncertainty']>().notNull().default({}),
     interharmonics: jsonb().$type<ChannelAnalysis['interharmonics']>().notNull().default([]),
     windows: jsonb().$type<NonNullable<ChannelAnalysis['windows']>>(),
     flags: jsonb().$type<Flag[]>().notNull().default([]),
@@ -74,6 +108,10 @@ export const analysisChannels = pgTable(
     spectrumWindow: text().notNull(),
     spectrumStartHz: doublePrecision().notNull(),
     spectrumStepHz: doublePrecision().notNull(),
+    spectrumNoiseBandwidthHz: doublePrecision(),
+    spectrumSegments: integer(),
+    seriesKey: text(),
+    series: jsonb().$type<StoredSeries>(),
   },
   (table) => [primaryKey({ columns: [table.analysisId, table.index] })],
 );
@@ -94,6 +132,9 @@ export const harmonics = pgTable(
     subgroupRms: doublePrecision(),
     smoothedMeanRms: doublePrecision(),
     smoothedMaxRms: doublePrecision(),
+    uncertainty: doublePrecision(),
+    groupStatistics: jsonb().$type<Statistics>(),
+    subgroupStatistics: jsonb().$type<Statistics>(),
   },
   (table) => [
     primaryKey({ columns: [table.analysisId, table.channelIndex, table.order] }),

@@ -256,8 +256,15 @@ export const spectrumSchema = z.object({
   unit: z.string(),
   window: windowNameSchema,
   resolutionHz: z.number().describe('Spacing of the computed lines'),
-  noiseBandwidthHz: z.number().describe('Equivalent noise bandwidth of a line'),
-  segments: z.number().int().describe('How many segments were averaged'),
+  noiseBandwidthHz: z
+    .number()
+    .nullable()
+    .describe('Equivalent noise bandwidth of a line; null in analyses made before it was kept'),
+  segments: z
+    .number()
+    .int()
+    .nullable()
+    .describe('How many segments were averaged; null in analyses made before it was kept'),
   scaling: z.enum(['spectrum', 'density']),
   frequencyHz: z.array(z.number()),
   rms: z.array(z.number()),
