@@ -48,6 +48,7 @@ export {
   harmonicSubgroups,
   interharmonicGroups,
 } from './groups/grouping.js';
+export { createWindowLines, lineRms, type WindowLinePlan } from './groups/window-lines.js';
 export { smooth, smoothingAlpha } from './groups/smooth.js';
 export { fitPhasorSet } from './power/fit-phasor-set.js';
 export { powerFigures } from './power/power-figures.js';

@@ -1,4 +1,4 @@
-import { createWindowLines, type WindowLines } from './window-lines.js';
+import { createWindowLines, lineRms, type WindowLinePlan } from './window-lines.js';
 
 export interface SynchronousWindows {
   cycles: number;
@@ -26,8 +26,8 @@ export function synchronousWindows(
   maxOrder: number,
   options: SynchronousWindowOptions = {},
 ): SynchronousWindows {
-  const plans = new Map<string, WindowLines>();
-  const lineRms: Float64Array[] = [];
+  const plans = new Map<string, WindowLinePlan>();
+  const windows: Float64Array[] = [];
   const count = boundaries.length - 1;
   for (let j = 0; j < count; j++) {
     const start = Math.round(boundaries[j]!);
@@ -39,8 +39,11 @@ export function synchronousWindows(
       if (plans.size >= PLAN_CACHE_SIZE) plans.clear();
       plans.set(key, plan);
     }
-    lineRms.push(plan(samples, start));
+    const cosine = new Float64Array(plan.lineCount);
+    const sine = new Float64Array(plan.lineCount);
+    plan.amplitudes(samples, start, cosine, sine);
+    windows.push(lineRms(cosine, sine));
     options.onWindow?.((j + 1) / count);
   }
-  return { cycles, lineRms };
+  return { cycles, lineRms: windows };
 }
