@@ -71,6 +71,13 @@ export const readWarningSchema = z.object({
   message: z.string(),
   count: z.number().int().optional(),
   firstLine: z.number().int().optional(),
+  samples: z
+    .array(z.number().int())
+    .optional()
+    .describe('The first samples it happened before, counted from 0'),
+  value: z.number().optional().describe('The largest figure that was compared'),
+  limit: z.number().optional().describe('What it was compared with'),
+  unit: z.string().optional().describe('Unit of value and limit'),
 });
 export type ReadWarning = z.infer<typeof readWarningSchema>;
 

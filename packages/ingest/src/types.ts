@@ -77,6 +77,12 @@ export interface ReadWarning {
   message: string;
   count?: number;
   firstLine?: number;
+  /** The first samples it happened before, at most 20, counted from 0. */
+  samples?: number[];
+  /** The largest figure that was compared, with what, and their unit. */
+  value?: number;
+  limit?: number;
+  unit?: string;
 }
 
 /** A column as the file names it; `unit` is the unit as written, prefix included. */

@@ -29,13 +29,25 @@ describe('time stamps', () => {
       { length: 40 },
       (_, i) => `${((i + (i % 3 === 1 ? off : 0)) / 1000).toFixed(7)},${i}`,
     );
-    expect(codes(await readGood(`t,u\n${rows.join('\n')}\n`))).toEqual(warnings);
+    const read = await readGood(`t,u\n${rows.join('\n')}\n`);
+    expect(codes(read)).toEqual(warnings);
+    for (const { samples, value } of read.warnings) {
+      // Every third stamp is late: the step to it is long, the one after it short. Twenty places are named.
+      expect(samples).toEqual(Array.from({ length: 20 }, (_, i) => 1 + 3 * (i >> 1) + (i % 2)));
+      expect(value).toBeCloseTo(100 * off, 3);
+    }
   });
 
   it('keeps the rate of the regular intervals over a gap, and says where it is', async () => {
     const read = await readGood(table(50, (lines) => lines.splice(20, 5)));
     expect(read.sampleRateHz).toBeCloseTo(1000, 6);
-    expect(read.warnings).toEqual([expect.objectContaining({ code: 'gap', count: 1, firstLine: 21 })]);
+    // Rows 19 to 23 are gone: the next one, sample 19 now, comes six intervals after the one before.
+    expect(read.warnings).toEqual([
+      expect.objectContaining({
+        ...{ code: 'gap', count: 1, firstLine: 21, samples: [19] },
+        ...{ value: expect.closeTo(6, 6), limit: 1.5, unit: 'sample intervals' },
+      }),
+    ]);
   });
 
   it('loses nothing of stamps in milliseconds since 1970', async () => {

@@ -80,7 +80,8 @@ export class RowCollector {
     }
     if (this.partialLine > 0) {
       const message = `The last line, ${this.partialLine}, is cut off and was dropped.`;
-      found.push({ code: 'partial-row', message, count: 1, firstLine: this.partialLine });
+      const place = { firstLine: this.partialLine, samples: [this.rowCount] };
+      found.push({ code: 'partial-row', message, count: 1, ...place });
     }
     if (this.trailingTextLine > 0) {
       const message = `Text follows the numbers from line ${this.trailingTextLine} on; it was not read.`;
@@ -157,7 +158,7 @@ export class RowCollector {
       this.duplicates.count += 1;
       return false;
     }
-    this.axis.push(stamp, line);
+    this.axis.push(stamp, line, this.rowCount);
     return true;
   }
 

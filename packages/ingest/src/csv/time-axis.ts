@@ -6,15 +6,32 @@ const SETTLE_AFTER = 256;
 const UNEVEN = 0.05;
 const GAP = 1.5;
 
+/** Places that are told one by one. */
+const PLACES = 20;
+
 interface Tally {
   count: number;
   firstLine: number;
+  samples: number[];
+  /** Largest value that was counted. */
+  value: number;
 }
 
-function count(tally: Tally, line: number): void {
-  if (tally.count === 0) tally.firstLine = line;
-  tally.count += 1;
+/** A step of the time from the row before to the row of `sample`. */
+interface Step {
+  step: number;
+  line: number;
+  sample: number;
 }
+
+function count(tally: Tally, { line, sample }: Step, value: number): void {
+  if (tally.count === 0) tally.firstLine = line;
+  if (tally.samples.length < PLACES) tally.samples.push(sample);
+  tally.count += 1;
+  tally.value = Math.max(tally.value, value);
+}
+
+const emptyTally = (): Tally => ({ count: 0, firstLine: 0, samples: [], value: 0 });
 
 /**
  * Watches the time stamps go by: refuses time that runs backwards, counts uneven intervals and gaps against the median
@@ -26,11 +43,11 @@ export class TimeAxis {
   private rowsSinceLast = 0;
   private intervals = 0;
   private interval = 0;
-  private early: { step: number; line: number }[] | null = [];
+  private early: Step[] | null = [];
   private regularTime = 0;
   private regularCount = 0;
-  private readonly uneven: Tally = { count: 0, firstLine: 0 };
-  private readonly gaps: Tally = { count: 0, firstLine: 0 };
+  private readonly uneven = emptyTally();
+  private readonly gaps = emptyTally();
 
   /** Stamps stay in the unit of the file, so that no rounding comes into their differences. */
   constructor(private readonly time: TimeChoice) {}
@@ -50,13 +67,14 @@ export class TimeAxis {
     return stamp === this.lastStamp && this.rowsSinceLast === 0;
   }
 
-  push(stamp: number, line: number): void {
+  /** The stamp of the row that becomes sample number `sample`, counted from 0. */
+  push(stamp: number, line: number, sample: number): void {
     const rows = this.rowsSinceLast + 1;
     if (Number.isNaN(this.lastStamp)) this.firstStamp = stamp;
     else {
       if (stamp <= this.lastStamp) this.refuseBackwards(stamp, line);
       this.intervals += rows;
-      this.measure((stamp - this.lastStamp) / rows, line);
+      this.measure({ step: (stamp - this.lastStamp) / rows, line, sample });
     }
     this.lastStamp = stamp;
     this.rowsSinceLast = 0;
@@ -80,6 +98,8 @@ export class TimeAxis {
         code: 'uneven-sampling',
         message: `${this.uneven.count} intervals between time stamps differ by more than 5 % from the usual one, first at line ${this.uneven.firstLine}; the samples are treated as evenly spaced at the mean rate.`,
         ...this.uneven,
+        limit: 100 * UNEVEN,
+        unit: '%',
       });
     }
     if (this.gaps.count > 0) {
@@ -87,15 +107,17 @@ export class TimeAxis {
         code: 'gap',
         message: `The time jumps by more than 1.5 sample intervals in ${this.gaps.count} places, first before line ${this.gaps.firstLine}${this.uneven.count > 0 ? '' : '; samples are missing there'}.`,
         ...this.gaps,
+        limit: GAP,
+        unit: 'sample intervals',
       });
     }
     return found;
   }
 
-  private measure(step: number, line: number): void {
-    if (this.early === null) this.judge(step, line);
+  private measure(step: Step): void {
+    if (this.early === null) this.judge(step);
     else {
-      this.early.push({ step, line });
+      this.early.push(step);
       if (this.early.length === SETTLE_AFTER) this.settle();
     }
   }
@@ -106,17 +128,19 @@ export class TimeAxis {
     this.early = null;
     const steps = early.map(({ step }) => step).sort((a, b) => a - b);
     this.interval = steps[steps.length >> 1] ?? 0;
-    for (const { step, line } of early) this.judge(step, line);
+    for (const step of early) this.judge(step);
   }
 
-  private judge(step: number, line: number): void {
+  private judge(place: Step): void {
+    const { step } = place;
     if (step > GAP * this.interval) {
-      count(this.gaps, line);
+      count(this.gaps, place, step / this.interval);
       return;
     }
     this.regularTime += step;
     this.regularCount += 1;
-    if (Math.abs(step - this.interval) > UNEVEN * this.interval) count(this.uneven, line);
+    const deviation = Math.abs(step - this.interval) / this.interval;
+    if (deviation > UNEVEN) count(this.uneven, place, 100 * deviation);
   }
 
   private refuseBackwards(stamp: number, line: number): never {

@@ -18,12 +18,13 @@ export function collectWarnings(header: WavHeader, counts: Counts): ReadWarning[
   const found: ReadWarning[] = [];
   if (claimed !== null && frames < claimed) {
     const message = `The header claims ${claimed} samples per channel but the file ends after ${frames}; what is there was read.`;
-    found.push({ code: 'truncated', message, count: 1 });
+    found.push({ code: 'truncated', message, count: 1, samples: [frames] });
   } else if (leftover > 0) {
     found.push({
       code: 'truncated',
       message: 'The last frame of samples is not whole and was dropped.',
       count: 1,
+      samples: [frames],
     });
   }
   if (header.sizeWasZero) {
