@@ -33,8 +33,9 @@ export { synthesise, type SynthesisComponent } from './harmonics/synthesise.js';
 export { crestFactor } from './figures/crest-factor.js';
 export { formFactor } from './figures/form-factor.js';
 export { thdF, thdR } from './figures/distortion.js';
-export { toneFigures, type ToneResult } from './figures/tone-figures.js';
-export type { FrequencyBand, ToneOptions, TonePowers } from './tone/tone-result.js';
+export { combineToneFigures, toneFigures } from './tone/tone-figures.js';
+export { longestToneStretch } from './tone/combine-tone-powers.js';
+export type { FrequencyBand, Spur, ToneOptions, TonePowers, ToneResult } from './tone/tone-result.js';
 export { waveformFigures, type WaveformFigures } from './figures/waveform-figures.js';
 export { windowBoundaries } from './groups/window-boundaries.js';
 export {
@@ -57,3 +58,9 @@ export { threePhaseFigures, type ThreePhaseResults } from './power/three-phase-f
 export { symmetricalComponents, unbalance } from './power/symmetrical-components.js';
 export { transformerFactors, type TransformerOptions } from './power/transformer-factors.js';
 export { recordPower, type PowerChannel, type RecordPowerInput } from './power/record-power.js';
+export {
+  proposePowerPairs,
+  type DescribedChannel,
+  type PowerProposal,
+  type ProposedThreePhaseSet,
+} from './power/propose-power-pairs.js';
