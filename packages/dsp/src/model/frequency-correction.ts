@@ -1,3 +1,4 @@
+import { dirichletSlope } from './dirichlet-slope.js';
 import type { TimedProjections } from './projections.js';
 import type { SinusoidSolution } from './sinusoid-solver.js';
 
@@ -38,12 +39,5 @@ export function frequencyCorrection(
 
 /** d/dφ [sin(Nφ/2)/sin(φ/2)] at φ = mθ, m = 0..2·size − 2. */
 function kernelSlopes(angle: number, size: number, sampleCount: number): Float64Array {
-  return Float64Array.from({ length: 2 * size - 1 }, (_, m) => {
-    const half = (m * angle) / 2;
-    const sine = Math.sin(half);
-    if (Math.abs(sine) < 1e-12) return 0;
-    const numerator =
-      sampleCount * Math.cos(sampleCount * half) * sine - Math.sin(sampleCount * half) * Math.cos(half);
-    return numerator / (2 * sine * sine);
-  });
+  return Float64Array.from({ length: 2 * size - 1 }, (_, m) => dirichletSlope(m * angle, sampleCount));
 }

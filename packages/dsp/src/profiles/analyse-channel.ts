@@ -1,11 +1,11 @@
 import { thdF, thdR } from '../figures/distortion.js';
 import { formFactor } from '../figures/form-factor.js';
-import { toneFigures } from '../figures/tone-figures.js';
 import { waveformFigures } from '../figures/waveform-figures.js';
 import { findFundamental, type FundamentalEstimate } from '../fundamental/find-fundamental.js';
 import { frequencyTrack, type FrequencyTrack } from '../fundamental/frequency-track.js';
 import { amplitudeSpectrum } from '../spectrum/amplitude-spectrum.js';
 import { segmentLength } from '../spectrum/segment-length.js';
+import { toneFigures } from '../tone/tone-figures.js';
 import type { ChannelAnalysis, ChannelInput, ResolvedSettings, ToneFigures } from '../types.js';
 import { collectFlags } from './collect-flags.js';
 import { harmonicResults } from './harmonic-results.js';
@@ -102,7 +102,7 @@ function periodicResults(
   const harmonics = mains?.harmonics ?? fitted;
   const tone =
     settings.profile === 'tone'
-      ? toneFigures(samples, sampleRateHz, frequencyHz, settings.thdMaxOrder)
+      ? toneFigures(samples, sampleRateHz, frequencyHz, { maxOrder: settings.thdMaxOrder })
       : null;
   const harmonicRms = harmonics.map((h) => h.rms);
   const { rms, phaseDeg } = harmonics[0]!;

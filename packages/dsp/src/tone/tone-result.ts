@@ -15,21 +15,29 @@ export interface ToneOptions {
   band?: FrequencyBand | undefined;
 }
 
-/** Mean powers (squares of rms values) of a stretch; those of several stretches can be combined. */
+/** A line besides tone and DC. */
+export interface Spur {
+  frequencyHz: number;
+  power: number;
+}
+
+/** Mean powers (squares of rms values) of a stretch, in the squared unit of the samples. */
 export interface TonePowers {
   sampleCount: number;
+  sampleRateHz: number;
+  frequencyHz: number;
   dc: number;
   tone: number;
-  /** Orders 2, 3, … where they appear after sampling; null where an order cannot be told from another line or DC. */
-  harmonics: (number | null)[];
+  /** Orders 2, 3, …, folded ones where they appear; null where an order cannot be told from another line or DC. */
+  harmonics: (Spur | null)[];
   /** Everything but tone and DC. */
   noiseAndDistortion: number;
   /** The same within the band that was asked for; null without one. */
   bandNoiseAndDistortion: number | null;
   /** Square of the median noise density, unit²/Hz. */
-  noiseDensity: number;
-  /** The largest line besides tone and DC; null when there is none. */
-  spur: { frequencyHz: number; power: number } | null;
+  noiseDensitySquared: number;
+  /** The largest lines besides tone, harmonics and DC, largest first. */
+  spurs: Spur[];
 }
 
 /** Single-tone quality figures. Levels are null when the power they compare with is mere rounding. */
