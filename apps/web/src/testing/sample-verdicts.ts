@@ -1,35 +1,15 @@
 import {
-  channelAnalysisSchema,
   reportSchema,
   verdictSchema,
-  type ChannelAnalysis,
   type Report,
   type ReportStatus,
   type Verdict,
 } from '@overtally/contracts';
+import { sampleChannel } from './sample-analyses.js';
 import { sampleId, sampleLimitSet, sampleProject, sampleRecording } from './samples.js';
 
 const moment = '2026-11-27T09:00:00Z';
 const analyst = { id: sampleId(2), name: 'Ada Berg' };
-
-const harmonic = (order: number, rms: number) => ({
-  ...{ order, frequencyHz: 50 * order, rms, percentOfFundamental: 50 * rms, phaseDeg: 0 },
-  ...{ phaseZeroCrossingDeg: 0, groupRms: rms, subgroupRms: rms, smoothedMeanRms: rms, smoothedMaxRms: rms },
-});
-
-/** A current of 2 A with 2.4 A in order 3: above 2.3 A, where the sample set limits it. */
-export const sampleChannel = (change: Partial<ChannelAnalysis> = {}): ChannelAnalysis =>
-  channelAnalysisSchema.parse({
-    ...{ index: 0, name: 'i', quantity: 'current', unit: 'A', mean: 0, rms: 3.2, peak: 6 },
-    ...{ crestFactor: 2, formFactor: 1.5, thdFPercent: 120, thdRPercent: 77, thdMaxOrder: 40 },
-    fundamental: { frequencyHz: 50, rms: 2, phaseDeg: 0, frequencyUncertaintyHz: 0.001 },
-    ...{ thdPlusNPercent: null, sinadDb: null, snrDb: null, sfdrDb: null, enobBits: null },
-    harmonics: [harmonic(1, 2), harmonic(3, 2.4)],
-    interharmonics: [],
-    windows: { cycles: 10, count: 9, samplesPerWindow: 2000 },
-    flags: [],
-    ...change,
-  });
 
 export const sampleVerdict = (change: Partial<Verdict> = {}): Verdict =>
   verdictSchema.parse({

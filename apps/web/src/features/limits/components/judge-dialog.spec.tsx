@@ -7,7 +7,8 @@ import { describe, expect, it } from 'vitest';
 import { queryClient } from '../../../lib/query-client.js';
 import { system } from '../../../lib/theme/system.js';
 import { json, mockApi, page } from '../../../testing/mock-api.js';
-import { sampleChannel, sampleVerdict } from '../../../testing/sample-verdicts.js';
+import { sampleChannel } from '../../../testing/sample-analyses.js';
+import { sampleVerdict } from '../../../testing/sample-verdicts.js';
 import { sampleId, sampleLimitSet } from '../../../testing/samples.js';
 import { JudgeDialog } from './judge-dialog.js';
 

@@ -59,6 +59,7 @@ it('spectra end after the last order and have their markers at the orders', () =
     unit: 'A',
     window: 'rectangular' as const,
     resolutionHz: 50,
+    ...{ noiseBandwidthHz: 7.5, segments: 1, scaling: 'spectrum' as const },
     frequencyHz: [0, 50, 100, 150, 10_000],
     rms: [0, 4, 0.2, 1, 0.001],
   };

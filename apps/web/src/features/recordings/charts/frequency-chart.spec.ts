@@ -10,6 +10,7 @@ const spectrum: Spectrum = {
   unit: 'V',
   window: 'hann',
   resolutionHz: 5,
+  ...{ noiseBandwidthHz: 7.5, segments: 1, scaling: 'spectrum' as const },
   frequencyHz: [0, 50, 75, 100, 1000],
   rms: [0, 230, 0.5, 2.3, 0.1],
 };

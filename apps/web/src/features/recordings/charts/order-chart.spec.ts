@@ -1,23 +1,13 @@
-import type { ChannelAnalysis, Harmonic, LimitSet, Note } from '@overtally/contracts';
+import type { ChannelAnalysis, LimitSet, Note } from '@overtally/contracts';
 import { findPublishedLimitSet } from '@overtally/limits';
 import { describe, expect, it } from 'vitest';
+import { sampleHarmonic } from '../../../testing/sample-analyses.js';
 import { light } from '../../../lib/theme/palette.js';
 import { withLetters } from './note-letters.js';
 import { orderChart, type OrderChartInput } from './order-chart.js';
 import { compareChannel } from './order-rows.js';
 
-const harmonic = (order: number, rms: number): Harmonic => ({
-  order,
-  frequencyHz: 50 * order,
-  rms,
-  percentOfFundamental: (100 * rms) / 2,
-  phaseDeg: null,
-  phaseZeroCrossingDeg: null,
-  groupRms: rms,
-  subgroupRms: rms,
-  smoothedMeanRms: rms,
-  smoothedMaxRms: rms,
-});
+const harmonic = (order: number, rms: number) => sampleHarmonic(order, rms, { phaseDeg: null });
 
 /** Order 3 under and order 15 over class A: IEC 61000-3-2, table 1, 2.30 A and 0.15 A. */
 const channel = {

@@ -5,7 +5,7 @@ import { none } from '../../../lib/format.js';
 import { formatDateTime, formatDateTimeFull } from '../../../lib/format-date.js';
 import { settingsWords } from './settings/settings-words.js';
 
-type AnalysisHead = Omit<Analysis, 'channels' | 'power'>;
+type AnalysisHead = Omit<Analysis, 'channels' | 'power' | 'threePhase'>;
 
 interface ProvenanceSectionProps {
   analyses: readonly AnalysisHead[];

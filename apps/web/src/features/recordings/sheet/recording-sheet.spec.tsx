@@ -1,4 +1,4 @@
-import { analysisSchema, noteSchema, type Analysis, type Note, type Recording } from '@overtally/contracts';
+import { noteSchema, type Analysis, type Note, type Recording } from '@overtally/contracts';
 import { ChakraProvider } from '@chakra-ui/react';
 import { QueryClientProvider } from '@tanstack/react-query';
 import { render, screen, waitFor, within } from '@testing-library/react';
@@ -15,6 +15,7 @@ import {
   sampleProject,
   sampleRecording,
 } from '../../../testing/samples.js';
+import { sampleAnalysis, sampleChannel } from '../../../testing/sample-analyses.js';
 import { RecordingSheet } from './recording-sheet.js';
 
 vi.mock('../../../components/plot.js', () => ({
@@ -26,32 +27,19 @@ const person = { id: sampleId(1), name: 'Mara Lind' };
 const recordingId = sampleId(147);
 const analysisId = sampleId(500);
 
-const harmonic = (order: number, rms: number) => ({
-  ...{ order, frequencyHz: 50 * order, rms, percentOfFundamental: 50 * rms, phaseDeg: 0 },
-  ...{ phaseZeroCrossingDeg: 0, groupRms: rms, subgroupRms: rms, smoothedMeanRms: rms, smoothedMaxRms: rms },
-});
-
-const sampleAnalysis = (change: Partial<Analysis> = {}): Analysis =>
-  analysisSchema.parse({
-    ...{ id: analysisId, recordingId, projectId: sampleId(10), status: 'done', progress: 1, problem: null },
-    ...{
-      engineVersion: '0.1.0',
-      settings: { profile: 'mains', nominalFrequencyHz: 50 },
-      supersededById: null,
-    },
+/** One channel of current, clipped. */
+const clippedAnalysis = (change: Partial<Analysis> = {}): Analysis =>
+  sampleAnalysis({
     channels: [
-      {
-        ...{ index: 0, name: 'i', quantity: 'current', unit: 'A', mean: 0, rms: 3.2, peak: 6 },
-        ...{ crestFactor: 2, formFactor: 1.5, thdFPercent: 120, thdRPercent: 77, thdMaxOrder: 40 },
-        fundamental: { frequencyHz: 50, rms: 2, phaseDeg: 0, frequencyUncertaintyHz: 0.001 },
-        ...{ thdPlusNPercent: null, sinadDb: null, snrDb: null, sfdrDb: null, enobBits: null },
-        harmonics: [harmonic(1, 2), harmonic(3, 2.4)],
-        interharmonics: [],
-        windows: { cycles: 10, count: 9, samplesPerWindow: 2000 },
-        flags: [{ code: 'clipped', severity: 'error', message: 'The waveform stays flat at its limit.' }],
-      },
+      sampleChannel({
+        flags: [
+          {
+            ...{ code: 'clipped', severity: 'error', message: 'The waveform stays flat at its limit.' },
+            evidence: null,
+          },
+        ],
+      }),
     ],
-    ...{ power: [], startedBy: person, createdAt: moment, finishedAt: moment },
     ...change,
   });
 
@@ -67,7 +55,7 @@ const waveform = {
   ...{ values: [0, 1], minimum: [], maximum: [] },
 };
 
-const answers = (analysis = sampleAnalysis(), notes: Note[] = []) => ({
+const answers = (analysis = clippedAnalysis(), notes: Note[] = []) => ({
   [`GET /recordings/${recordingId}/analyses`]: page([analysis]),
   [`GET /recordings/${recordingId}/waveform`]: json(waveform),
   [`GET /analyses/${analysisId}`]: json(analysis),
@@ -130,7 +118,7 @@ describe('sheet of a recording', () => {
   });
 
   it('lets a guest read and change nothing', async () => {
-    mockApi(answers(sampleAnalysis(), [sampleNote(1)]));
+    mockApi(answers(clippedAnalysis(), [sampleNote(1)]));
     const user = show(sampleRecording(), 'guest');
     expect(await screen.findByText('Follows the firing angle')).toBeTruthy();
     for (const name of ['Edit note a', 'Add a note', 'Analyse again', 'Note on this part']) {
@@ -145,7 +133,7 @@ describe('sheet of a recording', () => {
 describe('notes in the margin', () => {
   it('are lettered in the order of writing and say what they speak of', async () => {
     const span = { kind: 'span', fromS: 0.5, toS: 0.75 } as const;
-    mockApi(answers(sampleAnalysis(), [sampleNote(1), sampleNote(2, { target: span, text: 'A dip' })]));
+    mockApi(answers(clippedAnalysis(), [sampleNote(1), sampleNote(2, { target: span, text: 'A dip' })]));
     show(sampleRecording());
     expect(await screen.findByText(/Order 3, 104/)).toBeTruthy();
     expect(screen.getByText('a')).toBeTruthy();
@@ -177,7 +165,7 @@ describe('notes in the margin', () => {
 
   it('are deleted, and written back by undo', async () => {
     const seen = mockApi({
-      ...answers(sampleAnalysis(), [sampleNote(1)]),
+      ...answers(clippedAnalysis(), [sampleNote(1)]),
       [`DELETE /notes/${sampleId(1)}`]: noContent(),
       [`POST /analyses/${analysisId}/notes`]: json(sampleNote(2), 201),
     });
