@@ -1,6 +1,9 @@
 export { analyseRecord, engineVersion } from './analyse-record.js';
 export { AnalysisInputError, AnalysisStopped } from './errors.js';
 export type * from './types.js';
+export type { AnalysisPart, AnalyseSourceOptions, PartResult, RunPart } from './parts/part-types.js';
+export type { ReadSamples } from './parts/reading.js';
+export { computePart } from './parts/run-part.js';
 export type * from './power/types.js';
 export { createComplexFftPlan, type ComplexFftPlan } from './fft/complex-fft-plan.js';
 export { createRealFftPlan, type RealFftPlan } from './fft/real-fft-plan.js';

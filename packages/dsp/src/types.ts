@@ -70,21 +70,36 @@ export interface ResolvedSettings {
   accuracy?: ChannelAccuracy[] | undefined;
 }
 
-export interface ChannelInput {
+/** A channel without its samples. */
+export interface ChannelDescription {
+  /** Names the channel within its record. */
   index: number;
   name: string;
   quantity: string;
   unit: string;
-  /** Engineering values. */
-  samples: Float64Array;
   /** Full-scale ends of an integer format, in engineering values. */
-  lowestCode?: number;
-  highestCode?: number;
+  lowestCode?: number | undefined;
+  highestCode?: number | undefined;
 }
 
+export interface ChannelInput extends ChannelDescription {
+  /** Engineering values. */
+  samples: Float64Array;
+}
+
+/** A record in memory; all channels have the same number of samples. */
 export interface RecordInput {
   sampleRateHz: number;
   channels: ChannelInput[];
+  settings: AnalysisSettings;
+}
+
+/** A record whose samples are read when they are needed. */
+export interface RecordSource {
+  sampleRateHz: number;
+  /** Samples of each channel. */
+  sampleCount: number;
+  channels: ChannelDescription[];
   settings: AnalysisSettings;
 }
 

@@ -7,31 +7,49 @@
 
 type Lines = ArrayLike<number>;
 
+/** A group of one order. */
+export type Group = (lineRms: Lines, cycles: number, order: number) => number | null;
+
 /** Y_g,h: the lines around order h up to half-way to its neighbours, those half-way with half their square. */
-export function harmonicGroups(lineRms: Lines, cycles: number, maxOrder: number): (number | null)[] {
+export const harmonicGroup: Group = (lineRms, cycles, order) => {
   const half = cycles / 2;
-  return orders(1, maxOrder, (h) => {
-    const centre = cycles * h;
-    const inner = sumOfSquares(lineRms, centre - Math.ceil(half) + 1, centre + Math.ceil(half) - 1);
-    if (inner === null || centre + Math.floor(half) >= lineRms.length) return null;
-    const edges = cycles % 2 === 0 ? (lineRms[centre - half]! ** 2 + lineRms[centre + half]! ** 2) / 2 : 0;
-    return Math.sqrt(inner + edges);
-  });
-}
+  const centre = cycles * order;
+  const inner = sumOfSquares(lineRms, centre - Math.ceil(half) + 1, centre + Math.ceil(half) - 1);
+  if (inner === null || centre + Math.floor(half) >= lineRms.length) return null;
+  const edges = cycles % 2 === 0 ? (lineRms[centre - half]! ** 2 + lineRms[centre + half]! ** 2) / 2 : 0;
+  return Math.sqrt(inner + edges);
+};
 
 /** Y_sg,h: order h and one line to each side. */
+export const harmonicSubgroup: Group = (lineRms, cycles, order) =>
+  root(sumOfSquares(lineRms, cycles * order - 1, cycles * order + 1));
+
+/** Y_ig,h: all lines between orders h and h + 1. */
+export const interharmonicGroup: Group = (lineRms, cycles, order) =>
+  root(sumOfSquares(lineRms, cycles * order + 1, cycles * (order + 1) - 1));
+
+/** Y_isg,h: the lines between orders h and h + 1 without those next to the orders. */
+export const centredSubgroup: Group = (lineRms, cycles, order) =>
+  root(sumOfSquares(lineRms, cycles * order + 2, cycles * (order + 1) - 2));
+
+/** Y_g,h of the orders 1..maxOrder. */
+export function harmonicGroups(lineRms: Lines, cycles: number, maxOrder: number): (number | null)[] {
+  return orders(1, maxOrder, (h) => harmonicGroup(lineRms, cycles, h));
+}
+
+/** Y_sg,h of the orders 1..maxOrder. */
 export function harmonicSubgroups(lineRms: Lines, cycles: number, maxOrder: number): (number | null)[] {
-  return orders(1, maxOrder, (h) => root(sumOfSquares(lineRms, cycles * h - 1, cycles * h + 1)));
+  return orders(1, maxOrder, (h) => harmonicSubgroup(lineRms, cycles, h));
 }
 
-/** Y_ig,h: all lines between orders h and h + 1, h = 0..maxOrder. */
+/** Y_ig,h, h = 0..maxOrder. */
 export function interharmonicGroups(lineRms: Lines, cycles: number, maxOrder: number): (number | null)[] {
-  return orders(0, maxOrder, (h) => root(sumOfSquares(lineRms, cycles * h + 1, cycles * (h + 1) - 1)));
+  return orders(0, maxOrder, (h) => interharmonicGroup(lineRms, cycles, h));
 }
 
-/** Y_isg,h: the lines between orders h and h + 1 without those next to the orders, h = 0..maxOrder. */
+/** Y_isg,h, h = 0..maxOrder. */
 export function centredSubgroups(lineRms: Lines, cycles: number, maxOrder: number): (number | null)[] {
-  return orders(0, maxOrder, (h) => root(sumOfSquares(lineRms, cycles * h + 2, cycles * (h + 1) - 2)));
+  return orders(0, maxOrder, (h) => centredSubgroup(lineRms, cycles, h));
 }
 
 function orders(first: number, last: number, value: (order: number) => number | null): (number | null)[] {

@@ -1,0 +1,199 @@
+import {
+  centredSubgroup,
+  harmonicGroup,
+  harmonicSubgroup,
+  interharmonicGroup,
+  type Group,
+} from '../groups/grouping.js';
+import { highFrequencyBand, linesForBands } from '../groups/high-frequency-bands.js';
+import { createWindowLines, type WindowLinePlan } from '../groups/window-lines.js';
+import { wrapDegrees } from '../model/fit-sinusoids.js';
+import type { PartContext } from './part-types.js';
+import { readStretches, type Reading } from './reading.js';
+
+/** A range of successive synchronous windows. */
+export interface WindowPlan {
+  /** Positions in samples, one more than windows; may be fractional. */
+  boundaries: Float64Array;
+  cycles: number;
+  /** Orders listed, from 1. */
+  orders: number;
+  /** Bands of 200 Hz to compute beside them, by their centres. */
+  bandCentresHz: Float64Array;
+}
+
+/**
+ * Figures of successive windows. Two-dimensional arrays hold one row of `count` windows per order, interharmonic group or
+ * band, as in `WindowSeries`; NaN where the record ends below a group in frequency.
+ */
+export interface WindowChunk {
+  count: number;
+  /** Of all samples of the window. */
+  rms: Float64Array;
+  /** DC component, line 0 with its sign. */
+  dc: Float64Array;
+  line: Float64Array;
+  phaseDeg: Float64Array;
+  group: Float64Array;
+  subgroup: Float64Array;
+  interharmonicGroup: Float64Array;
+  centredSubgroup: Float64Array;
+  band: Float64Array;
+}
+
+const PLAN_CACHE_SIZE = 4;
+
+/** Lines, groups and bands of a range of windows (IEC 61000-4-7, 4.4.1, 5.5, 5.6, annexes A and B). */
+export function* computeWindows(
+  plan: WindowPlan,
+  { sampleRateHz, sampleCount }: PartContext,
+): Reading<WindowChunk> {
+  const { boundaries } = plan;
+  const count = boundaries.length - 1;
+  const chunk = emptyChunk(count, plan.orders, plan.bandCentresHz.length);
+  const linesOf = createLineAnalysis(plan, sampleRateHz);
+  const stretchOf = (window: number) => ({
+    from: Math.round(boundaries[window]!),
+    to: Math.min(sampleCount, Math.round(boundaries[window + 1]!)),
+  });
+  yield* readStretches({ from: 0, to: count }, stretchOf, (window, samples, offset) => {
+    const { from, to } = stretchOf(window);
+    const windowSamples = boundaries[window + 1]! - boundaries[window]!;
+    const lines = linesOf(samples, offset, to - from, windowSamples);
+    chunk.rms[window] = rmsOf(samples, offset, to - from);
+    chunk.dc[window] = lines.cosine[0]!;
+    writePhases(chunk, window, plan, lines, boundaries[window]! - from);
+    writeGroups(chunk, window, plan, lines.rms);
+    const lineHz = sampleRateHz / windowSamples;
+    plan.bandCentresHz.forEach((centreHz, band) => {
+      chunk.band[band * count + window] = highFrequencyBand(lines.rms, lineHz, centreHz);
+    });
+  });
+  return chunk;
+}
+
+/** Puts the chunks of successive ranges of windows together. */
+export function joinChunks(chunks: readonly WindowChunk[], orders: number, bands: number): WindowChunk {
+  if (chunks.length === 1) return chunks[0]!;
+  const count = chunks.reduce((sum, chunk) => sum + chunk.count, 0);
+  const whole = emptyChunk(count, orders, bands);
+  let at = 0;
+  for (const chunk of chunks) {
+    for (const name of CHUNK_ROWS) {
+      const rows = chunk[name].length / chunk.count;
+      for (let row = 0; row < rows; row++) {
+        whole[name].set(chunk[name].subarray(row * chunk.count, (row + 1) * chunk.count), row * count + at);
+      }
+    }
+    at += chunk.count;
+  }
+  return whole;
+}
+
+const CHUNK_ROWS = [
+  ...(['rms', 'dc', 'line', 'phaseDeg', 'group', 'subgroup'] as const),
+  ...(['interharmonicGroup', 'centredSubgroup', 'band'] as const),
+];
+
+function emptyChunk(count: number, orders: number, bands: number): WindowChunk {
+  const rows = (number: number) => new Float64Array(number * count);
+  return {
+    count,
+    ...{ rms: rows(1), dc: rows(1), line: rows(orders), phaseDeg: rows(orders) },
+    ...{ group: rows(orders), subgroup: rows(orders) },
+    ...{ interharmonicGroup: rows(orders + 1), centredSubgroup: rows(orders + 1), band: rows(bands) },
+  };
+}
+
+interface Lines {
+  plan: WindowLinePlan;
+  cosine: Float64Array;
+  sine: Float64Array;
+  rms: Float64Array;
+}
+
+type LineAnalysis = (
+  samples: Float64Array,
+  start: number,
+  sampleCount: number,
+  windowSamples: number,
+) => Lines;
+
+/** Line analysis with plans kept for the window lengths that came last; the arrays hold until the next call. */
+function createLineAnalysis(
+  { cycles, orders, bandCentresHz }: WindowPlan,
+  sampleRateHz: number,
+): LineAnalysis {
+  const plans = new Map<string, Lines>();
+  return (samples, start, sampleCount, windowSamples) => {
+    const key = `${sampleCount} ${windowSamples.toPrecision(10)}`;
+    let lines = plans.get(key);
+    if (!lines) {
+      const wanted = Math.max(
+        cycles * (orders + 1),
+        linesForBands(bandCentresHz, sampleRateHz / windowSamples),
+      );
+      const plan = createWindowLines(sampleCount, windowSamples, cycles, orders, wanted);
+      const array = () => new Float64Array(plan.lineCount);
+      lines = { plan, cosine: array(), sine: array(), rms: array() };
+      if (plans.size >= PLAN_CACHE_SIZE) plans.clear();
+      plans.set(key, lines);
+    }
+    const { plan, cosine, sine, rms } = lines;
+    plan.amplitudes(samples, start, cosine, sine);
+    rms[0] = Math.abs(cosine[0]!);
+    for (let k = 1; k < rms.length; k++) {
+      rms[k] = Math.sqrt((cosine[k]! * cosine[k]! + sine[k]! * sine[k]!) / 2);
+    }
+    return lines;
+  };
+}
+
+/**
+ * Phases of the orders where the window begins.
+ *
+ * @param start exact beginning of the window, in samples from its first sample
+ */
+function writePhases(
+  chunk: WindowChunk,
+  window: number,
+  { cycles, orders }: WindowPlan,
+  { plan, cosine, sine, rms }: Lines,
+  start: number,
+): void {
+  const turn = ((2 * Math.PI) / plan.windowSamples) * (start - (plan.sampleCount - 1) / 2);
+  for (let order = 1; order <= orders; order++) {
+    const k = cycles * order;
+    const at = (order - 1) * chunk.count + window;
+    if (k < plan.lineCount) {
+      chunk.line[at] = rms[k]!;
+      chunk.phaseDeg[at] = wrapDegrees(((Math.atan2(-sine[k]!, cosine[k]!) + k * turn) * 180) / Math.PI);
+    } else {
+      chunk.line[at] = NaN;
+      chunk.phaseDeg[at] = NaN;
+    }
+  }
+}
+
+function writeGroups(
+  chunk: WindowChunk,
+  window: number,
+  { cycles, orders }: WindowPlan,
+  rms: Float64Array,
+): void {
+  const write = (into: Float64Array, group: Group, first: number) => {
+    for (let order = first; order <= orders; order++) {
+      into[(order - first) * chunk.count + window] = group(rms, cycles, order) ?? NaN;
+    }
+  };
+  write(chunk.group, harmonicGroup, 1);
+  write(chunk.subgroup, harmonicSubgroup, 1);
+  write(chunk.interharmonicGroup, interharmonicGroup, 0);
+  write(chunk.centredSubgroup, centredSubgroup, 0);
+}
+
+function rmsOf(samples: Float64Array, from: number, count: number): number {
+  let sum = 0;
+  for (let i = from; i < from + count; i++) sum += samples[i]! * samples[i]!;
+  return Math.sqrt(sum / count);
+}
