@@ -37,6 +37,7 @@ export { crestFactor } from './figures/crest-factor.js';
 export { formFactor } from './figures/form-factor.js';
 export { thdF, thdR } from './figures/distortion.js';
 export { combineToneFigures, toneFigures } from './tone/tone-figures.js';
+export { sineFit3, sineFit4, type SineFit } from './tone/sine-fit.js';
 export { longestToneStretch } from './tone/combine-tone-powers.js';
 export type { FrequencyBand, Spur, ToneOptions, TonePowers, ToneResult } from './tone/tone-result.js';
 export { waveformFigures, type WaveformFigures } from './figures/waveform-figures.js';
@@ -67,3 +68,9 @@ export {
   type PowerProposal,
   type ProposedThreePhaseSet,
 } from './power/propose-power-pairs.js';
+export { createFlagScan, type FlagScan, type FlagScanOptions, type ScanFindings } from './flags/flag-scan.js';
+export { badRanges } from './flags/bad-ranges.js';
+export { type SampleRange } from './flags/bounded-ranges.js';
+export { qualityFlags, type FlagContext } from './flags/quality-flags.js';
+export { type WindowSynchronism } from './flags/not-synchronous.js';
+export { countedFrequency } from './fundamental/counted-frequency.js';

@@ -4,8 +4,10 @@ import type { Spur, ToneOptions, TonePowers, ToneResult } from './tone-result.js
 
 const FULL_SCALE_SINE_DB = 10 * Math.log10(1.5);
 const DB_PER_BIT = 20 * Math.log10(2);
-/** Power ratios below this are rounding of double precision, not a measurement. */
-const SMALLEST_RATIO = 1e-28;
+/** Relative rounding of the phase of a tone in double precision, per cycle: its square is what remains of a perfect tone. */
+const ROUNDING_PER_CYCLE = 2 * Math.PI * Number.EPSILON;
+/** Power ratio of the rounding of the samples themselves. */
+const ROUNDING_OF_SAMPLES = 1e-28;
 
 /**
  * Single-tone quality figures of a stretch (IEEE 1241-2010 and IEEE 1057-2017, sine-wave tests; IEC 60268-3 for THD+N):
@@ -43,9 +45,10 @@ function figuresOf(powers: TonePowers, options: ToneOptions): ToneResult {
   const { fullScalePeak, band = null, maxOrder = DEFAULT_TONE_ORDER } = options;
   const { tone, noiseAndDistortion: nad, harmonics } = powers;
   const distortion = harmonics.reduce((sum, h) => sum + (h?.power ?? 0), 0);
-  const sinadDb = ratioDb(tone, nad);
+  const sinadDb = overTone(powers, nad);
   const levelDbfs = fullScalePeak ? 10 * Math.log10((2 * tone) / fullScalePeak ** 2) : null;
-  const spur = largestSpur(powers);
+  // Where the rest is mere rounding, so is its largest line.
+  const spur = sinadDb === null ? null : largestSpur(powers);
   const toneInBand = band !== null && inBand(powers.frequencyHz, band);
   return {
     frequencyHz: powers.frequencyHz,
@@ -58,13 +61,13 @@ function figuresOf(powers: TonePowers, options: ToneOptions): ToneResult {
     thdPlusNBandPercent: toneInBand ? bandPercent(tone, powers.bandNoiseAndDistortion) : null,
     bandHz: band,
     sinadDb,
-    snrDb: ratioDb(tone, nad - distortion),
-    sfdrDb: spur && ratioDb(tone, spur.power),
-    spurFrequencyHz: spur && ratioDb(tone, spur.power) !== null ? spur.frequencyHz : null,
+    snrDb: overTone(powers, nad - distortion),
+    sfdrDb: spur && overTone(powers, spur.power),
+    spurFrequencyHz: spur && spur.frequencyHz,
     enobBits: bits(sinadDb),
     enobFullScaleBits: sinadDb === null || levelDbfs === null ? null : bits(sinadDb - levelDbfs),
-    noiseDensity: ratioDb(tone, nad) === null ? null : Math.sqrt(powers.noiseDensitySquared),
-    harmonicsDbc: Array.from({ length: maxOrder - 1 }, (_, i) => harmonicDbc(tone, harmonics[i] ?? null)),
+    noiseDensity: sinadDb === null ? null : Math.sqrt(powers.noiseDensitySquared),
+    harmonicsDbc: Array.from({ length: maxOrder - 1 }, (_, i) => harmonicDbc(powers, harmonics[i] ?? null)),
     powers,
   };
 }
@@ -80,8 +83,8 @@ function bandPercent(tone: number, bandNoise: number | null): number | null {
   return bandNoise === null ? null : 100 * Math.sqrt(bandNoise / (tone + bandNoise));
 }
 
-function harmonicDbc(tone: number, harmonic: Spur | null): number | null {
-  const level = harmonic && ratioDb(tone, harmonic.power);
+function harmonicDbc(powers: TonePowers, harmonic: Spur | null): number | null {
+  const level = harmonic && overTone(powers, harmonic.power);
   return level === null ? null : -level;
 }
 
@@ -89,6 +92,12 @@ function bits(sinadDb: number | null): number | null {
   return sinadDb === null ? null : (sinadDb - FULL_SCALE_SINE_DB) / DB_PER_BIT;
 }
 
-function ratioDb(power: number, other: number): number | null {
-  return other > SMALLEST_RATIO * power ? 10 * Math.log10(power / other) : null;
+/** Level of the tone over another power; null where that is no more than rounding. */
+function overTone(
+  { tone, frequencyHz, sampleCount, sampleRateHz }: TonePowers,
+  other: number,
+): number | null {
+  const cycles = (frequencyHz * sampleCount) / sampleRateHz;
+  const rounding = ROUNDING_OF_SAMPLES + (ROUNDING_PER_CYCLE * cycles) ** 2;
+  return other > rounding * tone ? 10 * Math.log10(tone / other) : null;
 }
