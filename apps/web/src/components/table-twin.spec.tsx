@@ -4,6 +4,7 @@ import userEvent from '@testing-library/user-event';
 import { expect, it, vi } from 'vitest';
 import { system } from '../lib/theme/system.js';
 import { TableTwin } from './table-twin.js';
+import { hiddenWords } from './use-hidden-rows.js';
 
 interface Row {
   order: number;
@@ -23,6 +24,11 @@ function show() {
         fileName="orders"
         rows={rows}
         rowKey={(row) => row.order}
+        detail={{
+          label: 'Budget',
+          name: (row) => `Budget of order ${row.order}`,
+          of: (row) => (row.rms === null ? null : `made of ${row.rms}`),
+        }}
         columns={[
           { key: 'order', header: 'Order', fileHeader: 'order', value: (row) => row.order },
           { key: 'rms', header: 'rms', fileHeader: 'rms (A)', align: 'right', value: (row) => row.rms },
@@ -54,4 +60,23 @@ it('copies what is shown, in its order, with units in the heading', async () => 
   const write = vi.spyOn(navigator.clipboard, 'writeText');
   await user.click(screen.getByRole('button', { name: 'Copy' }));
   expect(write).toHaveBeenCalledWith('order\trms (A)\n3\t0.02\n5\t\n11\t0.5');
+});
+
+it('opens what stands behind a row under it, where there is something', async () => {
+  show();
+  const user = userEvent.setup();
+  expect(screen.queryByRole('button', { name: 'Budget of order 5' })).toBeNull();
+  const button = screen.getByRole('button', { name: 'Budget of order 3' });
+  await user.click(button);
+  expect(button.getAttribute('aria-expanded')).toBe('true');
+  expect(screen.getByText('made of 0.02')).toBeTruthy();
+});
+
+it('says how many rows there are, and how many are out of sight', () => {
+  show();
+  expect(screen.getByText('3 rows')).toBeTruthy();
+  expect(hiddenWords({ rowsBelow: 36, columnsRight: true })).toBe(
+    '36 more rows below, more columns to the right',
+  );
+  expect(hiddenWords({ rowsBelow: 0, columnsRight: false })).toBeNull();
 });

@@ -1,8 +1,9 @@
-import { Box, Button, Flex, Table } from '@chakra-ui/react';
-import { useMemo, useState } from 'react';
+import { Box, Button, Flex, Table, Text } from '@chakra-ui/react';
+import { useId, useMemo, useRef, useState, type ReactNode } from 'react';
 import { toCsv, toTsv } from '../lib/delimited.js';
 import { saveText } from '../lib/save-file.js';
 import { notifyDone, notifyProblem } from './notify.js';
+import { hiddenWords, useHiddenRows } from './use-hidden-rows.js';
 import { SortButton, type Sort } from './sort-button.js';
 import { compareCells, tableRows, type TableColumn } from './table-column.js';
 
@@ -22,6 +23,14 @@ interface TableTwinProps<Row> {
   onSelect?: (row: Row) => void;
   /** Largest height before the rows scroll under their heading. */
   maxHeight?: string;
+  /** What opens under a row, behind a button in its last cell; `of` null: nothing for this row. */
+  detail?: {
+    /** Word on the button. */
+    label: string;
+    /** Name of the button for screen readers. */
+    name: (row: Row) => string;
+    of: (row: Row) => ReactNode | null;
+  };
 }
 
 /** The numbers behind a figure: sortable, to copy as tab-separated text, to download as CSV. */
@@ -35,9 +44,12 @@ export function TableTwin<Row>(props: TableTwinProps<Row>) {
     fileName,
     initialSort = null,
     maxHeight,
+    detail,
   } = props;
+  const box = useRef<HTMLDivElement>(null);
   const [sort, setSort] = useState<Sort>(initialSort);
   const sorted = useMemo(() => sortRows(rows, columns, sort), [rows, columns, sort]);
+  const hidden = hiddenWords(useHiddenRows(box, sorted.length));
   const copy = () => {
     navigator.clipboard.writeText(toTsv(tableRows(fileColumns, sorted))).then(
       () => notifyDone(`Copied ${sorted.length} rows`),
@@ -46,7 +58,10 @@ export function TableTwin<Row>(props: TableTwinProps<Row>) {
   };
   return (
     <Box>
-      <Flex justify="flex-end" gap="2" mb="1">
+      <Flex justify="flex-end" align="center" gap="2" mb="1">
+        <Text fontSize="xs" color="inkSoft" mr="auto">
+          {sorted.length === 1 ? '1 row' : `${sorted.length} rows`}
+        </Text>
         <Button size="xs" variant="ghost" colorPalette="act" onClick={copy}>
           Copy
         </Button>
@@ -59,7 +74,7 @@ export function TableTwin<Row>(props: TableTwinProps<Row>) {
           Download CSV
         </Button>
       </Flex>
-      <Box overflow="auto" maxH={maxHeight} tabIndex={0} role="region" aria-label={caption}>
+      <Box ref={box} overflow="auto" maxH={maxHeight} tabIndex={0} role="region" aria-label={caption}>
         <Table.Root size="sm" stickyHeader={maxHeight !== undefined}>
           <Table.Caption srOnly>{caption}</Table.Caption>
           <Table.Header>
@@ -76,6 +91,7 @@ export function TableTwin<Row>(props: TableTwinProps<Row>) {
                   </SortButton>
                 </Table.ColumnHeader>
               ))}
+              {detail ? <Table.ColumnHeader scope="col" aria-label={detail.label} /> : null}
             </Table.Row>
           </Table.Header>
           <Table.Body>
@@ -85,31 +101,73 @@ export function TableTwin<Row>(props: TableTwinProps<Row>) {
           </Table.Body>
         </Table.Root>
       </Box>
+      {hidden ? (
+        <Text
+          fontSize="xs"
+          color="inkSoft"
+          textAlign="center"
+          borderTopWidth="1px"
+          borderColor="rule"
+          pt="1"
+          aria-hidden="true"
+        >
+          {hidden}
+        </Text>
+      ) : null}
     </Box>
   );
 }
 
-function TwinRow<Row>({ row, columns, isSelected, onSelect }: TableTwinProps<Row> & { row: Row }) {
+function TwinRow<Row>(props: TableTwinProps<Row> & { row: Row }) {
+  const { row, columns, detail, isSelected, onSelect } = props;
+  const [open, setOpen] = useState(false);
+  const id = useId();
+  const content = detail?.of(row) ?? null;
   return (
-    <Table.Row
-      bg={isSelected?.(row) ? 'wash' : undefined}
-      cursor={onSelect ? 'pointer' : undefined}
-      onClick={onSelect ? () => onSelect(row) : undefined}
-    >
-      {columns.map((column) => (
-        <Table.Cell
-          key={column.key}
-          textAlign={column.align === 'right' ? 'end' : 'start'}
-          fontFamily={column.align === 'right' ? 'mono' : undefined}
-          fontSize={column.align === 'right' ? '13px' : undefined}
-          color={column.tone?.(row)}
-          fontWeight={column.tone?.(row) === 'over' ? '600' : undefined}
-          whiteSpace="nowrap"
-        >
-          {column.show ? column.show(row) : (column.value(row) ?? '–')}
-        </Table.Cell>
-      ))}
-    </Table.Row>
+    <>
+      <Table.Row
+        bg={isSelected?.(row) ? 'wash' : undefined}
+        cursor={onSelect ? 'pointer' : undefined}
+        onClick={onSelect ? () => onSelect(row) : undefined}
+      >
+        {columns.map((column) => (
+          <Table.Cell
+            key={column.key}
+            textAlign={column.align === 'right' ? 'end' : 'start'}
+            fontFamily={column.align === 'right' ? 'mono' : undefined}
+            fontSize={column.align === 'right' ? '13px' : undefined}
+            color={column.tone?.(row)}
+            fontWeight={column.tone?.(row) === 'over' ? '600' : undefined}
+            whiteSpace="nowrap"
+          >
+            {column.show ? column.show(row) : (column.value(row) ?? '–')}
+          </Table.Cell>
+        ))}
+        {detail ? (
+          <Table.Cell textAlign="end" py="0">
+            {content === null ? null : (
+              <Button
+                size="2xs"
+                variant="ghost"
+                aria-label={detail.name(row)}
+                aria-expanded={open}
+                aria-controls={id}
+                onClick={() => setOpen(!open)}
+              >
+                {detail.label}
+              </Button>
+            )}
+          </Table.Cell>
+        ) : null}
+      </Table.Row>
+      {open && content !== null ? (
+        <Table.Row id={id}>
+          <Table.Cell colSpan={columns.length + 1} bg="paper">
+            {content}
+          </Table.Cell>
+        </Table.Row>
+      ) : null}
+    </>
   );
 }
 

@@ -19,7 +19,8 @@ export function TitleBlock({ cells, label }: { cells: readonly TitleCell[]; labe
     <Box
       as="dl"
       aria-label={label}
-      display="flex"
+      display={{ base: 'grid', sm: 'flex' }}
+      gridTemplateColumns="1fr 1fr"
       flexWrap="wrap"
       gap="1px"
       bg="rule"
@@ -29,14 +30,16 @@ export function TitleBlock({ cells, label }: { cells: readonly TitleCell[]; labe
       overflow="hidden"
       mb="4"
     >
-      {cells.map((cell) => (
+      {cells.map((cell, index) => (
         <Box
           key={cell.caption}
           bg="sheet"
           px="3"
           py="2"
           flexGrow={cell.grow ?? 1}
-          flexBasis={{ base: '40%', sm: `${(cell.grow ?? 1) * 104}px` }}
+          flexBasis={`${(cell.grow ?? 1) * 104}px`}
+          // Two columns on a narrow screen: an odd last cell takes the whole line, so that the rules meet.
+          gridColumn={index === cells.length - 1 && index % 2 === 0 ? 'span 2' : undefined}
           minW="0"
         >
           <chakra.dt fontSize="xs" color="inkSoft">

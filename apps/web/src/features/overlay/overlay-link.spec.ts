@@ -43,12 +43,12 @@ describe('channels of an overlay in its address', () => {
   });
 });
 
-it('a view begins with orders, logarithmic, absolute, odd ones', () => {
+it('a view begins with orders, logarithmic, absolute, all of them', () => {
   expect(readView(new URLSearchParams('as=relative&scale=nonsense'))).toEqual({
     by: 'order',
     scale: 'log',
     amplitude: 'relative',
-    orders: 'odd',
+    orders: 'all',
     limitSetId: null,
   });
 });

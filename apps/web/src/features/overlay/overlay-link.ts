@@ -16,7 +16,7 @@ export interface OverlayView {
   by: 'order' | 'frequency';
   scale: Scale;
   amplitude: 'absolute' | 'relative';
-  orders: 'odd' | 'all';
+  orders: 'all' | 'odd';
   limitSetId: string | null;
 }
 
@@ -120,7 +120,7 @@ export function readView(search: URLSearchParams): OverlayView {
     by: oneOf(search.get('by'), ['order', 'frequency']),
     scale: oneOf(search.get('scale'), ['log', 'linear']),
     amplitude: oneOf(search.get('as'), ['absolute', 'relative']),
-    orders: oneOf(search.get('orders'), ['odd', 'all']),
+    orders: oneOf(search.get('orders'), ['all', 'odd']),
     limitSetId: search.get('limits'),
   };
 }

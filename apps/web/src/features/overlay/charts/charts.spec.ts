@@ -7,7 +7,7 @@ import type { OverlaySeries } from '../series.js';
 import { orderLines } from './order-lines.js';
 import { spectrumLines } from './spectrum-lines.js';
 
-const view = readView(new URLSearchParams());
+const view = readView(new URLSearchParams('orders=odd'));
 const summary: ChannelSummary = {
   channel: 0,
   name: 'i',

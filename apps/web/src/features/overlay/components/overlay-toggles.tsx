@@ -23,8 +23,8 @@ export function OverlayToggles({ view, onChange }: OverlayTogglesProps) {
         label="Orders shown"
         value={view.orders}
         options={[
-          { value: 'odd', label: 'Odd' },
           { value: 'all', label: 'All' },
+          { value: 'odd', label: 'Odd' },
         ]}
         onChange={(orders) => onChange({ orders })}
       />

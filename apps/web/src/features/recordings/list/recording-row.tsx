@@ -1,5 +1,5 @@
 import { Box, Checkbox, Link, Progress, Table, Text } from '@chakra-ui/react';
-import type { LimitSet, Recording } from '@overtally/contracts';
+import type { ChannelSummary, LimitSet, Recording } from '@overtally/contracts';
 import { Link as RouterLink } from 'react-router-dom';
 import { TallyStrip } from '../../../components/tally-strip.js';
 import { formatDateTime } from '../../../lib/format-date.js';
@@ -54,6 +54,11 @@ export function RecordingRow({ recording, limitSet, to, selected, selectable, on
           </Box>
           {recording.eut}
         </Text>
+        {channel ? (
+          <Text hideFrom="md" fontFamily="mono" fontSize="xs" mt="1">
+            {figureWords(channel)}
+          </Text>
+        ) : null}
         <Box hideFrom="lg" mt="1.5">
           <Standing recording={recording} comparison={comparison} />
         </Box>
@@ -69,7 +74,7 @@ export function RecordingRow({ recording, limitSet, to, selected, selectable, on
       <Table.Cell {...figureCell} hideBelow="xl">
         {formatDuration(recording.durationS)}
       </Table.Cell>
-      <Table.Cell {...figureCell} hideBelow="lg">
+      <Table.Cell {...figureCell} hideBelow="md">
         {formatHz(channel?.fundamentalHz ?? null)}
       </Table.Cell>
       <Table.Cell {...figureCell} hideBelow="md">
@@ -83,6 +88,14 @@ export function RecordingRow({ recording, limitSet, to, selected, selectable, on
       </Table.Cell>
     </Table.Row>
   );
+}
+
+/** The figures of the hidden columns in a line, for narrow screens. */
+function figureWords({ fundamentalHz, rms, unit, thdFPercent }: ChannelSummary): string {
+  const parts = [formatSi(rms, unit)];
+  if (fundamentalHz !== null) parts.unshift(formatHz(fundamentalHz, 2));
+  if (thdFPercent !== null) parts.push(`THD ${formatPercent(thdFPercent)}`);
+  return parts.join('  ');
 }
 
 /** The tally strip with its words; before there is one, how far the work is or why it failed. */

@@ -42,7 +42,7 @@ export function RecordingTable({
             <Table.ColumnHeader scope="col" textAlign="end" hideBelow="xl">
               Length
             </Table.ColumnHeader>
-            <Table.ColumnHeader scope="col" textAlign="end" hideBelow="lg">
+            <Table.ColumnHeader scope="col" textAlign="end" hideBelow="md">
               f<sub>1</sub>
             </Table.ColumnHeader>
             <Table.ColumnHeader scope="col" textAlign="end" hideBelow="md">
