@@ -1,23 +1,26 @@
-import type { ChannelInput, Flag } from '../types.js';
-import { runsAt } from './runs-at.js';
+import type { Flag } from '../types.js';
+import { firstTimes } from './evidence.js';
+import type { ScanFindings } from './flag-scan.js';
 
 const MIN_RUN = 2;
 
 /** Runs of samples at the lowest or highest code of an integer format. Needs the full-scale ends of the channel. */
-export function adcSaturatedFlag(channel: ChannelInput): Flag | null {
-  const { samples, lowestCode, highestCode } = channel;
-  if (lowestCode === undefined || highestCode === undefined) return null;
-  const low = Math.min(lowestCode, highestCode);
-  const high = Math.max(lowestCode, highestCode);
-  const tolerance = 1e-10 * (high - low);
-  const top = runsAt(samples, high - tolerance, Infinity, MIN_RUN);
-  const bottom = runsAt(samples, -Infinity, low + tolerance, MIN_RUN);
-  if (top.count + bottom.count === 0) return null;
+export function adcSaturatedFlag({ top, bottom }: ScanFindings, sampleRateHz: number): Flag | null {
+  const count = top.saturated.count + bottom.saturated.count;
+  if (count === 0) return null;
   return {
     code: 'adc-saturated',
     severity: 'error',
     message:
-      `The converter stood at its highest code for ${top.samples} samples in ${top.count} runs and at its lowest code ` +
-      `for ${bottom.samples} samples in ${bottom.count} runs. Choose a larger input range and record again.`,
+      `The converter stood at its highest code for ${top.saturated.samples} samples in ${top.saturated.count} runs and ` +
+      `at its lowest code for ${bottom.saturated.samples} samples in ${bottom.saturated.count} runs. ` +
+      'Choose a larger input range and record again.',
+    evidence: {
+      count,
+      timesS: firstTimes([...top.saturated.positions, ...bottom.saturated.positions], sampleRateHz),
+      value: Math.max(top.saturated.longest, bottom.saturated.longest),
+      limit: MIN_RUN,
+      unit: 'samples',
+    },
   };
 }

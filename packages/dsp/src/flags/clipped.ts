@@ -1,8 +1,10 @@
-import type { WaveformFigures } from '../figures/waveform-figures.js';
 import type { Flag } from '../types.js';
-import { flatCrests } from './flat-crests.js';
+import type { CrestFindings, RunFindings } from './crest-watch.js';
+import { firstTimes } from './evidence.js';
+import type { ScanFindings } from './flag-scan.js';
 
-const SAME_LEVEL = 1e-6;
+const MIN_CRESTS = 2;
+const MIN_RUN = 3;
 /** A flat stretch at this share of the span around zero is a rectifier's pause, not a limit. */
 const ZERO_LEVEL = 1e-3;
 
@@ -10,41 +12,41 @@ const ZERO_LEVEL = 1e-3;
  * Three or more successive samples at the highest (or lowest) value of the record, to 1e-6 of the peak-to-peak value, in
  * at least two separate crests with sharp edges.
  */
-export function clippedFlag(
-  samples: Float64Array,
-  { lowest, highest }: WaveformFigures,
-  sampleRateHz: number,
-): Flag | null {
-  const span = highest - lowest;
-  if (span === 0) return null;
-  const tolerance = SAME_LEVEL * span;
-  const step = smallestStep(samples, span);
-  const crests = [lowest, highest].map((level) =>
-    Math.abs(level) <= ZERO_LEVEL * span ? [] : flatCrests(samples, level, tolerance, step),
-  );
-  const [bottom, top] = crests.map((found) => (found.length >= 2 ? found : []));
-  if (bottom!.length + top!.length === 0) return null;
+export function clippedFlag(findings: ScanFindings, sampleRateHz: number): Flag | null {
+  const { top, bottom } = clippedCrests(findings);
+  const found = [top, bottom].filter((crests) => crests !== null);
+  if (found.length === 0) return null;
   const where = [
-    top!.length > 0 ? `${top!.length} crests at the top` : '',
-    bottom!.length > 0 ? `${bottom!.length} crests at the bottom` : '',
+    top === null ? '' : `${top.count} crests at the top`,
+    bottom === null ? '' : `${bottom.count} crests at the bottom`,
   ].filter((text) => text !== '');
-  const firstS = Math.min(...top!, ...bottom!) / sampleRateHz;
+  const timesS = firstTimes(
+    found.flatMap((crests) => crests.positions),
+    sampleRateHz,
+  );
   return {
     code: 'clipped',
     severity: 'error',
     message:
-      `The waveform stays flat at its limit in ${where.join(' and ')}, first at ${firstS.toPrecision(4)} s. ` +
+      `The waveform stays flat at its limit in ${where.join(' and ')}, first at ${timesS[0]!.toPrecision(4)} s. ` +
       'Harmonics of a clipped record are wrong: choose a larger range and record again, ' +
       'or confirm that the signal itself has flat tops.',
+    evidence: {
+      count: found.reduce((sum, crests) => sum + crests.count, 0),
+      timesS,
+      value: Math.max(...found.map((crests) => crests.longest)),
+      limit: MIN_RUN,
+      unit: 'samples',
+    },
   };
 }
 
-/** The smallest change between successive samples: the converter step of a quantised record, nearly 0 otherwise. */
-function smallestStep(samples: Float64Array, span: number): number {
-  let step = span;
-  for (let i = 1; i < samples.length; i++) {
-    const change = Math.abs(samples[i]! - samples[i - 1]!);
-    if (change > 1e-9 * span && change < step) step = change;
-  }
-  return step;
+/** The flat crests that count as clipped, by the end they stand at; null where there are none. */
+export function clippedCrests({ top, bottom, lowest, highest }: ScanFindings): {
+  top: RunFindings | null;
+  bottom: RunFindings | null;
+} {
+  const clipped = ({ level, flat }: CrestFindings): RunFindings | null =>
+    flat.count >= MIN_CRESTS && Math.abs(level) > ZERO_LEVEL * (highest - lowest) ? flat : null;
+  return { top: clipped(top), bottom: clipped(bottom) };
 }

@@ -1,4 +1,5 @@
 import type { Flag } from '../types.js';
+import { wholeRecordEvidence } from './evidence.js';
 
 const LIMIT = 0.5;
 
@@ -12,6 +13,7 @@ export function dcHeavyFlag(mean: number, acRms: number, unit: string): Flag | n
     message:
       `The DC component of ${amount(mean)} is ${inDigits(Math.abs(mean) / acRms, 3)} times the AC rms of ` +
       `${amount(acRms)}. Check the offset of the probe or channel, or whether DC belongs to the signal.`,
+    evidence: wholeRecordEvidence((100 * Math.abs(mean)) / acRms, 100 * LIMIT, '%'),
   };
 }
 
