@@ -74,3 +74,12 @@ export { type SampleRange } from './flags/bounded-ranges.js';
 export { qualityFlags, type FlagContext } from './flags/quality-flags.js';
 export { type WindowSynchronism } from './flags/not-synchronous.js';
 export { countedFrequency } from './fundamental/counted-frequency.js';
+export type { FourierSeries, SeriesComponent } from './fourier/types.js';
+export { oneCycle, partialSum } from './fourier/partial-sum.js';
+export {
+  ordersForResidual,
+  residualRmsByOrder,
+  type OrdersForResidual,
+  type ResidualByOrder,
+} from './fourier/residual-by-order.js';
+export { harmonicTable, type HarmonicRow } from './fourier/harmonic-table.js';
