@@ -8,6 +8,12 @@ describe('axis of amplitudes', () => {
     expect(range.top).toBeGreaterThan(2.3);
   });
 
+  it('goes below that for a fainter value, within the decades it is given', () => {
+    expect(amplitudeRange([2.2], [2.3, 0.05], 'log', 0.003).bottom).toBeCloseTo(0.001, 12);
+    expect(amplitudeRange([2.2], [2.3, 0.05], 'log', 1e-9, 6).bottom).toBeCloseTo(2.3e-6, 12);
+    expect(amplitudeRange([2.2], [2.3, 0.05], 'log', 1).bottom).toBeCloseTo(0.005, 12);
+  });
+
   it('reaches to the faintest value that should be seen, within three to eight decades', () => {
     expect(amplitudeRange([1], [], 'log', 3e-5).bottom).toBeCloseTo(1e-5, 12);
     expect(amplitudeRange([1], [], 'log', 0.5).bottom).toBeCloseTo(1e-3, 12);

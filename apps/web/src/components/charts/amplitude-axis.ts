@@ -17,14 +17,15 @@ const headroom = { log: 1.6, linear: 1.12 };
 
 /**
  * Range for `values` under `limits`; what is null, zero or not finite is left out. A logarithmic one ends a decade
- * below the lowest limit; without limits below `faintest`, a value that should still be seen (a weak harmonic, the
- * noise), or four decades below the highest when none is named.
+ * below the lowest limit, and below `faintest`, a value that should still be seen (a weak harmonic, the noise); without
+ * either four decades below the highest. It never spans more than `decades`.
  */
 export function amplitudeRange(
   values: readonly (number | null)[],
   limits: readonly number[],
   scale: Scale,
   faintest: number | null = null,
+  decades = mostDecades,
 ): AmplitudeRange {
   const highest = [...values, ...limits].reduce<number>(
     (most, value) => (value !== null && Number.isFinite(value) ? Math.max(most, value) : most),
@@ -33,12 +34,14 @@ export function amplitudeRange(
   const reference = highest > 0 ? highest : 1;
   const top = reference * headroom[scale];
   if (scale === 'linear') return { scale, bottom: 0, top };
+  const deepest = reference * 10 ** -decades;
   const lowestLimit = Math.min(...limits.filter((limit) => limit > 0));
+  const seen = faintest === null ? reference * 1e-4 : faintest / 3;
   if (Number.isFinite(lowestLimit)) {
-    return { scale, bottom: Math.max(lowestLimit / 10, reference * 10 ** -mostDecades), top };
+    const wanted = Math.min(lowestLimit / 10, faintest === null ? Infinity : seen);
+    return { scale, bottom: Math.max(wanted, deepest), top };
   }
-  const wanted = faintest === null ? reference * 1e-4 : faintest / 3;
-  const bottom = Math.min(Math.max(wanted, reference * 10 ** -mostDecades), reference * 10 ** -fewestDecades);
+  const bottom = Math.min(Math.max(seen, deepest), reference * 10 ** -fewestDecades);
   return { scale, bottom, top };
 }
 

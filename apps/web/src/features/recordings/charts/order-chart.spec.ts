@@ -63,8 +63,35 @@ describe('a channel beside a limit set', () => {
 });
 
 describe('bars by order', () => {
-  it('leave a value of zero open, since a logarithmic axis has no place for it', () => {
-    expect(barsOf(orderChart(input(), light))).toMatchObject({ x: [1, 2, 3, 15], y: [2, null, 1.19, 0.17] });
+  it('leave a value of zero open, since a logarithmic axis has no place for it, and mark it at the foot', () => {
+    const chart = orderChart(input(), light);
+    expect(barsOf(chart)).toMatchObject({ x: [1, 2, 3, 15], y: [2, null, 1.19, 0.17] });
+    const marks = chart.traces.find(({ marker }) =>
+      JSON.stringify(marker ?? {}).includes('triangle-down-open'),
+    );
+    expect(marks?.x).toEqual([2]);
+    expect(chart.belowAxis).toBe(1);
+  });
+
+  it('reach down to weak orders, six decades at most', () => {
+    const weak = Array.from({ length: 18 }, (_, i) => harmonic(i + 21, i === 0 ? 1e-9 : 1e-4));
+    const { rows } = compareChannel({ ...channel, harmonics: [...channel.harmonics, ...weak] }, classA);
+    const chart = orderChart(input({ rows }), light);
+    expect(chart.layout.yaxis?.range).toMatchObject([
+      expect.closeTo(Math.log10(1e-4 / 3), 9),
+      expect.anything(),
+    ]);
+    // The zero of order 2 and the picoamperes of order 21.
+    expect(chart.belowAxis).toBe(2);
+  });
+
+  it('are scaled to the orders from 2 on a linear axis, with order 1 broken and its value beside it', () => {
+    const { rows } = compareChannel(channel, null);
+    const { layout } = orderChart(input({ rows, scale: 'linear' }), light);
+    expect(layout.yaxis?.range).toEqual([0, expect.closeTo(1.19 * 1.12, 9)]);
+    expect(layout.annotations).toMatchObject([{ text: '2.000\u00a0A' }]);
+    // Class A limits order 3 to 2.3 A, which leaves room for the 2 A of order 1.
+    expect(orderChart(input({ scale: 'linear' }), light).layout.annotations).toEqual([]);
   });
 
   it('tell the fundamental, orders disregarded, within and over apart', () => {

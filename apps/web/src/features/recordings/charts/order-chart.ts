@@ -2,6 +2,7 @@ import {
   amplitudeAxis,
   amplitudeRange,
   raised,
+  type AmplitudeRange,
   type Scale,
 } from '../../../components/charts/amplitude-axis.js';
 import { ceilingTraces } from '../../../components/charts/limit-ceiling.js';
@@ -9,6 +10,7 @@ import type { PlotLayout } from '../../../components/plot-layout.js';
 import type { PlotTrace } from '../../../components/plot.js';
 import { formatPercent, formatSi } from '../../../lib/format.js';
 import type { Palette } from '../../../lib/theme/palette.js';
+import { brokenBarShapes, brokenLabel } from './broken-bar.js';
 import type { LetteredNote } from './note-letters.js';
 import { isOver, resultWords, type OrderRow } from './order-rows.js';
 
@@ -27,15 +29,55 @@ export interface OrderChartInput {
   heightPx: number;
 }
 
-/** So many of the strongest orders are seen on a logarithmic axis, however weak. */
-const strongSeen = 5;
+/** Share of the orders that should be seen on a logarithmic axis, and the decades it spans at most. */
+const shareSeen = 0.9;
+const mostDecades = 6;
 const margin = { l: 64, r: 12, t: 8, b: 30 };
+/** Room above the plot for the value of a broken bar. */
+const labelRoom = 20;
+
+interface OrderScale {
+  range: AmplitudeRange;
+  /** Order 1 is longer than the axis and drawn broken. */
+  isBroken: boolean;
+}
+
+/**
+ * Range of the axis. A linear one is made for the orders from 2, since order 1 would flatten all others; order 1 is
+ * broken where it does not fit.
+ */
+function orderScale(
+  rows: readonly OrderRow[],
+  values: readonly number[],
+  limits: readonly number[],
+  scale: Scale,
+): OrderScale {
+  if (scale === 'log') {
+    const strongest = values.filter((value) => value > 0).toSorted((a, b) => b - a);
+    const faintest = strongest[Math.ceil(shareSeen * strongest.length) - 1] ?? null;
+    return { range: amplitudeRange(values, limits, scale, faintest, mostDecades), isBroken: false };
+  }
+  const others = values.filter((_, i) => rows[i]?.order !== 1);
+  const isAlone = !others.some((value) => value > 0) && limits.length === 0;
+  const range = amplitudeRange(isAlone ? values : others, limits, scale);
+  const first = values[rows.findIndex((row) => row.order === 1)] ?? 0;
+  return { range, isBroken: first > range.top };
+}
+
+/** Orders that lie below the axis, for the mark that says so. */
+function isBelowAxis(value: number, { scale, bottom }: AmplitudeRange): boolean {
+  return scale === 'log' && value < bottom;
+}
+
+export interface OrderChart {
+  traces: PlotTrace[];
+  layout: PlotLayout;
+  /** Orders that are marked as lying below the axis. */
+  belowAxis: number;
+}
 
 /** Bars by order under the limit as a ceiling, with the letters of notes over their orders. */
-export function orderChart(
-  input: OrderChartInput,
-  palette: Palette,
-): { traces: PlotTrace[]; layout: PlotLayout } {
+export function orderChart(input: OrderChartInput, palette: Palette): OrderChart {
   const { rows, scale, relative, selected } = input;
   const fundamental = rows.find((row) => row.order === 1)?.rms ?? null;
   const factor = relative && fundamental ? 100 / fundamental : 1;
@@ -45,18 +87,22 @@ export function orderChart(
   );
   const values = rows.map((row) => row.compared * factor);
   const ceiling = limits.map(({ limit }) => limit);
-  const weak = values.toSorted((a, b) => b - a)[strongSeen - 1] ?? null;
-  const range = amplitudeRange(values, ceiling, scale, weak);
+  const { range, isBroken } = orderScale(rows, values, ceiling, scale);
   const lastOrder = rows.reduce((last, { order }) => Math.max(last, order), 1);
+  const plotMargin = { ...margin, t: margin.t + (isBroken ? labelRoom : 0) };
+  const below = rows.filter((_, i) => isBelowAxis(values[i] ?? 0, range));
+  const first = values[rows.findIndex((row) => row.order === 1)] ?? 0;
   return {
+    belowAxis: below.length,
     traces: [
       // The hatching lies behind the bars, the line of the limit and the letters before them.
       ...ceilingTraces(limits, range.top, palette).map((trace, i) => ({ ...trace, zorder: i === 0 ? 0 : 2 })),
-      bars(rows, values, unit, palette),
-      ...letters(input, factor, range, palette),
+      bars(rows, values, unit, range, palette),
+      ...(below.length > 0 ? [belowMarks(below, factor, unit, range, palette)] : []),
+      ...letters(input, factor, range, plotMargin, palette),
     ],
     layout: {
-      margin,
+      margin: plotMargin,
       bargap: 0.4,
       hovermode: 'x',
       xaxis: {
@@ -67,8 +113,32 @@ export function orderChart(
         tickangle: 0,
       },
       yaxis: amplitudeAxis(range, unit),
-      shapes: selected === null ? [] : [selection(selected, palette)],
+      shapes: [
+        ...(selected === null ? [] : [selection(selected, palette)]),
+        ...(isBroken ? brokenBarShapes(1, false, palette) : []),
+      ],
+      annotations: isBroken ? [brokenLabel(1, formatSi(first, unit), false, palette)] : [],
     },
+  };
+}
+
+/** Small open marks at the foot of the axis for orders that lie below it. */
+function belowMarks(
+  rows: readonly OrderRow[],
+  factor: number,
+  unit: string,
+  range: AmplitudeRange,
+  palette: Palette,
+): PlotTrace {
+  return {
+    type: 'scatter',
+    mode: 'markers',
+    zorder: 1,
+    x: rows.map((row) => row.order),
+    y: rows.map(() => raised(range.bottom, 5, 240, range)),
+    marker: { symbol: 'triangle-down-open', size: 7, color: palette.inkSoft },
+    hovertemplate: '%{customdata}<extra></extra>',
+    customdata: rows.map((row) => hoverText(row, row.compared * factor, unit)),
   };
 }
 
@@ -87,14 +157,14 @@ function bars(
   rows: readonly OrderRow[],
   values: readonly number[],
   unit: string,
+  range: AmplitudeRange,
   palette: Palette,
 ): PlotTrace {
   return {
     type: 'bar',
     zorder: 1,
     x: rows.map((row) => row.order),
-    // A logarithmic axis has no place for zero.
-    y: values.map((value) => (value > 0 ? value : null)),
+    y: values.map((value) => (value > 0 && !isBelowAxis(value, range) ? value : null)),
     marker: { color: rows.map((row) => barColor(row, palette)), line: { width: 0 } },
     hovertemplate: '%{customdata}<extra></extra>',
     customdata: rows.map((row, i) => hoverText(row, values[i] ?? 0, unit)),
@@ -127,10 +197,11 @@ function selection(order: number, palette: Palette) {
 function letters(
   { rows, notes, heightPx }: OrderChartInput,
   factor: number,
-  range: ReturnType<typeof amplitudeRange>,
+  range: AmplitudeRange,
+  plotMargin: { t: number; b: number },
   palette: Palette,
 ): PlotTrace[] {
-  const plotHeight = heightPx - margin.t - margin.b;
+  const plotHeight = heightPx - plotMargin.t - plotMargin.b;
   const placed = new Map<number, number>();
   const marks = notes.flatMap(({ letter, note }) => {
     if (note.target.kind !== 'order') return [];

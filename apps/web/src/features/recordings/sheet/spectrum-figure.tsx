@@ -146,12 +146,20 @@ function OrderView({
     if (order) onTarget({ kind: 'order', order });
   };
   return (
-    <Plot
-      label={`${title}: ${comparison.words}`}
-      height={height}
-      traces={chart.traces}
-      layout={chart.layout}
-      onClick={select}
-    />
+    <>
+      <Plot
+        label={`${title}: ${comparison.words}`}
+        height={height}
+        traces={chart.traces}
+        layout={chart.layout}
+        onClick={select}
+      />
+      {chart.belowAxis > 0 ? (
+        <Text fontSize="xs" color="inkSoft">
+          ▽ {chart.belowAxis === 1 ? '1 order lies' : `${chart.belowAxis} orders lie`} below the axis; the
+          table has {chart.belowAxis === 1 ? 'it' : 'them'}.
+        </Text>
+      ) : null}
+    </>
   );
 }
