@@ -1,4 +1,4 @@
 export { transform } from './transform';
 export { chirpTransform } from './chirp';
 export { separate, unpackEven, unpackOdd } from './real-spectrum';
-export { addPowerEven, addPowerOdd, windowInto } from './power';
+export { addPowerEven, addPowerOdd, mean, pairSegments } from './power';

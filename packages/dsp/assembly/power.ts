@@ -23,12 +23,33 @@ function addPower<T>(z: usize, length: i32, sum: usize): void {
   }
 }
 
-/** Puts (samples − mean)·window of `length` samples into every other number from `to`. */
-export function windowInto(samples: usize, window: usize, length: i32, mean: f64, to: usize): void {
-  for (let i = 0; i < length; i++) {
-    store<f64>(to, (load<f64>(samples) - mean) * load<f64>(window));
-    samples += 8;
-    window += 8;
-    to += 16;
+/**
+ * Puts (a − meanA)·window + j (b − meanB)·window as re, im, … to `to`. An odd length reads and writes one number more.
+ */
+export function pairSegments(
+  a: usize,
+  b: usize,
+  window: usize,
+  length: i32,
+  meanA: f64,
+  meanB: f64,
+  to: usize,
+): void {
+  for (let i = 0; i < length; i += 2) {
+    const at: usize = i << 3;
+    const w = v128.load(window + at);
+    const re = f64x2.mul(w, f64x2.sub(v128.load(a + at), f64x2.splat(meanA)));
+    const im = f64x2.mul(w, f64x2.sub(v128.load(b + at), f64x2.splat(meanB)));
+    v128.store(to + 2 * at, v128.shuffle<f64>(re, im, 0, 2));
+    v128.store(to + 2 * at, v128.shuffle<f64>(re, im, 1, 3), 16);
   }
+}
+
+/** Mean of `length` numbers. */
+export function mean(from: usize, length: i32): f64 {
+  let sums = f64x2.splat(0);
+  const pairs: usize = length >> 1;
+  for (let i: usize = 0; i < pairs; i++) sums = f64x2.add(sums, v128.load(from + (i << 4)));
+  const rest = (length & 1) === 1 ? load<f64>(from + ((length - 1) << 3)) : 0;
+  return (f64x2.extract_lane(sums, 0) + f64x2.extract_lane(sums, 1) + rest) / length;
 }

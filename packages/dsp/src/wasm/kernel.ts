@@ -10,7 +10,16 @@ export interface KernelFunctions {
   separate: (z: number, count: number, re: number, im: number) => void;
   addPowerEven: (z: number, length: number, sum: number) => void;
   addPowerOdd: (z: number, length: number, sum: number) => void;
-  windowInto: (samples: number, window: number, length: number, mean: number, to: number) => void;
+  pairSegments: (
+    a: number,
+    b: number,
+    window: number,
+    length: number,
+    meanA: number,
+    meanB: number,
+    to: number,
+  ) => void;
+  mean: (from: number, length: number) => number;
 }
 
 /** One instance of the compiled kernels with a memory of its own, which lives as long as its plan. */
