@@ -1,4 +1,6 @@
-export { analyseRecord, engineVersion } from './analyse-record.js';
+export { analyseRecord } from './analyse-record.js';
+export { analyseSource } from './analyse-source.js';
+export { engineVersion } from './stages/record-stages.js';
 export { AnalysisInputError, AnalysisStopped } from './errors.js';
 export type * from './types.js';
 export type { AnalysisPart, AnalyseSourceOptions, PartResult, RunPart } from './parts/part-types.js';
@@ -54,7 +56,21 @@ export {
   interharmonicGroups,
 } from './groups/grouping.js';
 export { createWindowLines, lineRms, type WindowLinePlan } from './groups/window-lines.js';
+export {
+  aggregateSeries,
+  WINDOWS_PER_10_MIN,
+  WINDOWS_PER_3_S,
+  type AggregatedSeries,
+} from './groups/aggregate-series.js';
+export { weightedDistortion } from './groups/weighted-distortion.js';
+export { statistics } from './figures/statistics.js';
 export { smooth, smoothingAlpha } from './groups/smooth.js';
+export {
+  aggregateSeries,
+  WINDOWS_PER_10_MIN,
+  WINDOWS_PER_3_S,
+  type AggregatedSeries,
+} from './groups/aggregate-series.js';
 export { fitPhasorSet } from './power/fit-phasor-set.js';
 export { powerFigures } from './power/power-figures.js';
 export { orderPowers } from './power/order-powers.js';
@@ -83,3 +99,17 @@ export {
   type ResidualByOrder,
 } from './fourier/residual-by-order.js';
 export { harmonicTable, type HarmonicRow } from './fourier/harmonic-table.js';
+export {
+  dcGain,
+  poles,
+  transferFunction,
+  zeros,
+  type TransferFunction,
+} from './transfer/transfer-function.js';
+export { expandRoots, polynomialRoots, type Root } from './transfer/polynomial-roots.js';
+export { frequencyResponse, type ResponsePoint } from './transfer/frequency-response.js';
+export { stability, type Stability, type StabilityVerdict } from './transfer/stability.js';
+export { steadyStateOf, type SteadyState } from './transfer/steady-state.js';
+export { twoLevelSeries, type TwoLevelWave } from './transfer/two-level-wave.js';
+export { twoLevelSteadyState, type TwoLevelSteadyState } from './transfer/two-level-steady-state.js';
+export { routhTable, type RouthElement, type RouthRow, type RouthTable } from './transfer/routh-table.js';

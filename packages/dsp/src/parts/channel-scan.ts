@@ -1,19 +1,17 @@
 import type { WaveformFigures } from '../figures/waveform-figures.js';
-import { adcSaturatedFlag } from '../flags/adc-saturated.js';
-import { clippedFlag } from '../flags/clipped.js';
-import { discontinuityFlag } from '../flags/discontinuity.js';
-import type { Flag } from '../types.js';
+import { createFlagScan, type ScanFindings } from '../flags/flag-scan.js';
 import type { PartContext } from './part-types.js';
-import type { Reading } from './reading.js';
+import { BLOCK_SAMPLES, type Reading } from './reading.js';
 import { requireNumbers } from './require-numbers.js';
 import { createWaveformScan } from './waveform-scan.js';
 
 /** What one pass over all samples of a channel gives. */
 export interface ChannelScan {
   figures: WaveformFigures;
+  /** rms/mean|x|, DC included; null for a record of zeros. */
   formFactor: number | null;
-  /** Flags that rest on the samples alone. */
-  flags: Flag[];
+  /** What the quality flags rest on. */
+  findings: ScanFindings;
 }
 
 /**
@@ -26,20 +24,24 @@ export function* scanChannel(
   { channel, sampleRateHz, sampleCount }: PartContext,
   fundamentalHz: number | null,
 ): Reading<ChannelScan> {
-  const samples = yield { from: 0, to: sampleCount };
-  requireNumbers(samples, 0, channel.name, sampleRateHz);
   const waveform = createWaveformScan();
+  const flags = createFlagScan(channel);
   const periodic = wholePeriods(sampleCount, fundamentalHz && sampleRateHz / fundamentalHz);
-  waveform.push(samples.subarray(0, periodic));
-  const formFactor = waveform.formFactor();
-  waveform.push(samples.subarray(periodic));
-  const figures = waveform.figures();
-  const flags = [
-    adcSaturatedFlag({ ...channel, samples }),
-    clippedFlag(samples, figures, sampleRateHz),
-    discontinuityFlag(samples, sampleRateHz, figures.highest - figures.lowest),
-  ].filter((flag) => flag !== null);
-  return { figures, formFactor, flags };
+  let formFactor: number | null = null;
+  for (let from = 0; from < sampleCount; from += BLOCK_SAMPLES) {
+    const to = Math.min(sampleCount, from + BLOCK_SAMPLES);
+    const block = yield { from, to };
+    requireNumbers(block, from, channel.name, sampleRateHz);
+    flags.push(block, from);
+    if (from < periodic && periodic <= to) {
+      waveform.push(block.subarray(0, periodic - from));
+      formFactor = waveform.formFactor();
+      waveform.push(block.subarray(periodic - from));
+    } else {
+      waveform.push(block);
+    }
+  }
+  return { figures: waveform.figures(), formFactor, findings: flags.finish() };
 }
 
 /** Samples of the whole periods that fit into a record; all samples when no period is known. */

@@ -55,7 +55,7 @@ export function partSamples(part: AnalysisPart): number {
     case 'tone':
       return part.stretch.to - part.stretch.from;
     case 'windows':
-      return part.plan.boundaries.at(-1)! - part.plan.boundaries[0]!;
+      return part.plan.boundaries.at(-1) - part.plan.boundaries[0]!;
     case 'locate':
     case 'scan':
     case 'orders':

@@ -1,33 +1,33 @@
 import { AnalysisInputError } from '../errors.js';
-import type { RecordInput } from '../types.js';
+import type { RecordInput, RecordSource } from '../types.js';
 
-/** Beyond it, the squares of a long record and of its spectrum would no longer be finite numbers. */
-const largestValue = 1e100;
-
-/** Refuses what cannot be analysed, naming the channel and the sample. */
-export function checkInput({ sampleRateHz, channels }: RecordInput): void {
+/** Refuses a record that cannot be analysed whatever its samples are. */
+export function checkRecord({ sampleRateHz, sampleCount, channels }: RecordSource): void {
   if (!(sampleRateHz > 0 && Number.isFinite(sampleRateHz))) {
     throw new AnalysisInputError(`The sample rate must be a positive number of hertz, got ${sampleRateHz}.`);
   }
-  for (const { name, samples } of channels) {
-    if (samples.length < 2) {
+  channels.forEach(({ index, name }, i) => {
+    if (sampleCount < 2) {
       throw new AnalysisInputError(
-        `Channel '${name}' holds ${samples.length} samples; an analysis needs at least 2.`,
+        `Channel '${name}' holds ${sampleCount} samples; an analysis needs at least 2.`,
       );
     }
-    const bad = samples.findIndex((x) => !Number.isFinite(x));
-    if (bad >= 0) {
-      throw new AnalysisInputError(
-        `Channel '${name}' has no number at sample ${bad} (${bad / sampleRateHz} s). ` +
-          'Choose a span without missing values.',
-      );
+    if (channels.findIndex((other) => other.index === index) !== i) {
+      throw new AnalysisInputError(`Two channels have the index ${index}; '${name}' is one of them.`);
     }
-    const large = samples.findIndex((x) => Math.abs(x) > largestValue);
-    if (large >= 0) {
-      throw new AnalysisInputError(
-        `Channel '${name}' holds ${samples[large]} at sample ${large} (${large / sampleRateHz} s), which no quantity has. ` +
-          'Check the file for damage and the gain, or choose a span without it.',
-      );
-    }
+  });
+}
+
+/** The record that samples in memory make; refuses channels of different lengths. */
+export function sourceOf({ sampleRateHz, channels, settings }: RecordInput): RecordSource {
+  const sampleCount = channels[0]?.samples.length ?? 0;
+  const other = channels.find(({ samples }) => samples.length !== sampleCount);
+  if (other) {
+    throw new AnalysisInputError(
+      `Channel '${other.name}' holds ${other.samples.length} samples, '${channels[0]!.name}' ${sampleCount}; ` +
+        'all channels of a record must be of the same length.',
+    );
   }
+  const described = channels.map(({ samples: _, ...channel }) => channel);
+  return { sampleRateHz, sampleCount, channels: described, settings };
 }

@@ -1,113 +1,90 @@
-import type { FrequencyTrack } from '../fundamental/frequency-track.js';
-import {
-  centredSubgroups,
-  harmonicGroups,
-  harmonicSubgroups,
-  interharmonicGroups,
-} from '../groups/grouping.js';
+import { statistics } from '../figures/statistics.js';
 import { smooth, smoothingAlpha } from '../groups/smooth.js';
-import { synchronousWindows, type SynchronousWindows } from '../groups/synchronous-windows.js';
-import { windowBoundaries } from '../groups/window-boundaries.js';
-import type { HarmonicResult, InterharmonicResult } from '../types.js';
-
-type Grouping = (lineRms: Float64Array, cycles: number, maxOrder: number) => (number | null)[];
-
-export interface MainsResults {
-  harmonics: HarmonicResult[];
-  interharmonics: InterharmonicResult[];
-  windows: { cycles: number; count: number; samplesPerWindow: number };
-}
-
-export interface MainsOptions {
-  sampleRateHz: number;
-  frequencyHz: number;
-  cycles: number;
-  track: FrequencyTrack | null;
-  onWindow?: (fraction: number) => void;
-}
+import type {
+  BandResult,
+  DistortionStatistics,
+  HarmonicResult,
+  InterharmonicResult,
+  WindowSeries,
+} from '../types.js';
 
 /**
- * The mains profile: whole-record orders completed by the figures of the synchronous windows.
- *
- * @returns null when the record holds no whole window; the whole-record figures then stand alone
+ * Puts the figures of the synchronous windows into the list of orders: root mean square over all windows of the single
+ * line, the group and the subgroup; mean and maximum of the smoothed group (IEC 61000-4-7, 5.5.1; IEC 61000-3-2, 6.2);
+ * statistics over the windows that are not flagged.
  */
-export function mainsResults(
-  samples: Float64Array,
-  fitted: HarmonicResult[],
-  { sampleRateHz, frequencyHz, cycles, track, onWindow }: MainsOptions,
-): MainsResults | null {
-  const boundaries = windowBoundaries(samples.length, sampleRateHz, frequencyHz, cycles, track);
-  const count = boundaries.length - 1;
-  if (count === 0) return null;
-  const windows = synchronousWindows(samples, boundaries, cycles, fitted.length, { onWindow });
-  const samplesPerWindow = boundaries[count]! / count;
-  return {
-    harmonics: withWindowFigures(fitted, windows, samplesPerWindow / sampleRateHz),
-    interharmonics: interharmonicResults(windows, fitted.length),
-    windows: { cycles, count, samplesPerWindow },
-  };
-}
-
-/**
- * Puts the figures of the synchronous windows into the list of orders: root mean square over the windows of the single
- * line, the group and the subgroup; mean and maximum of the smoothed group (IEC 61000-4-7, 5.5.1; IEC 61000-3-2, 6.2).
- */
-function withWindowFigures(
-  harmonics: HarmonicResult[],
-  windows: SynchronousWindows,
-  windowS: number,
+export function withWindowFigures(
+  harmonics: readonly HarmonicResult[],
+  series: WindowSeries,
+  periodic: boolean,
 ): HarmonicResult[] {
-  const { cycles, lineRms } = windows;
-  const count = harmonics.length;
-  const groups = perOrder(windows, count, harmonicGroups);
-  const subgroups = perOrder(windows, count, harmonicSubgroups);
-  const lines = harmonics.map(({ order }) =>
-    quadraticMean(lineRms.map((line) => line[cycles * order] ?? null)),
-  );
-  const fundamentalRms = lines[0] ?? harmonics[0]?.rms ?? 0;
+  const { intervalS, flagged } = series;
+  const lines = harmonics.map((harmonic, i) => quadraticMean(row(series, 'line', i)) ?? harmonic.rms);
   return harmonics.map((harmonic, i) => {
-    const rms = lines[i] ?? harmonic.rms;
-    const smoothed = smoothedSeries(groups[i]!, smoothingAlpha(windowS));
+    const group = row(series, 'group', i);
+    const subgroup = row(series, 'subgroup', i);
+    const smoothed = group.some(Number.isNaN) ? null : smooth(group, smoothingAlpha(intervalS));
     return {
       ...harmonic,
-      rms,
-      percentOfFundamental: fundamentalRms > 0 ? (100 * rms) / fundamentalRms : null,
-      groupRms: quadraticMean(groups[i]!),
-      subgroupRms: quadraticMean(subgroups[i]!),
+      rms: lines[i]!,
+      percentOfFundamental: periodic && lines[0]! > 0 ? (100 * lines[i]!) / lines[0]! : null,
+      groupRms: quadraticMean(group),
+      subgroupRms: quadraticMean(subgroup),
       smoothedMeanRms: smoothed && smoothed.reduce((sum, x) => sum + x, 0) / smoothed.length,
       smoothedMaxRms: smoothed && smoothed.reduce((max, x) => Math.max(max, x), 0),
+      groupStatistics: statistics(group, flagged),
+      subgroupStatistics: statistics(subgroup, flagged),
     };
   });
 }
 
 /** Interharmonic groups and centred subgroups, root mean square over the windows, from "between 0 and 1" upwards. */
-function interharmonicResults(windows: SynchronousWindows, maxOrder: number): InterharmonicResult[] {
-  const groups = perOrder(windows, maxOrder, interharmonicGroups);
-  const centred = perOrder(windows, maxOrder, centredSubgroups);
-  return groups
-    .map((values, order): InterharmonicResult => ({
-      betweenOrders: [order, order + 1],
-      groupRms: quadraticMean(values),
-      centredSubgroupRms: quadraticMean(centred[order]!),
-    }))
-    .filter((result) => result.groupRms !== null);
+export function interharmonicResults(series: WindowSeries): InterharmonicResult[] {
+  return Array.from({ length: series.orders + 1 }, (_, order): InterharmonicResult => ({
+    betweenOrders: [order, order + 1],
+    groupRms: quadraticMean(row(series, 'interharmonicGroup', order)),
+    centredSubgroupRms: quadraticMean(row(series, 'centredSubgroup', order)),
+  })).filter((result) => result.groupRms !== null);
 }
 
-/** Values per order, each over all windows. */
-function perOrder(windows: SynchronousWindows, maxOrder: number, grouping: Grouping): (number | null)[][] {
-  const perWindow = windows.lineRms.map((line) => grouping(line, windows.cycles, maxOrder));
-  return (perWindow[0] ?? []).map((_, i) => perWindow.map((values) => values[i] ?? null));
+/** The 200 Hz bands over the windows that are not flagged; none when all are. */
+export function bandResults(series: WindowSeries): BandResult[] {
+  return Array.from(series.bandCentresHz).flatMap((centreHz, i) => {
+    const kept = row(series, 'band', i).filter((_, j) => series.flagged[j] !== 1);
+    const rms = quadraticMean(kept);
+    return rms === null ? [] : [{ centreHz, rms, maxRms: kept.reduce((max, x) => Math.max(max, x), 0) }];
+  });
 }
 
-function smoothedSeries(values: (number | null)[], alpha: number): Float64Array | null {
-  return values.every((x) => x !== null) && values.length > 0 ? smooth(values, alpha) : null;
+/** Distortion over the windows that are not flagged; null when all are, or without a fundamental. */
+export function distortionStatistics({
+  thd,
+  thdg,
+  thds,
+  pwhd,
+  flagged,
+}: WindowSeries): DistortionStatistics | null {
+  const ofLines = statistics(thd, flagged);
+  return (
+    ofLines && {
+      thd: ofLines,
+      thdg: statistics(thdg, flagged),
+      thds: statistics(thds, flagged),
+      pwhd: statistics(pwhd, flagged),
+    }
+  );
 }
 
-function quadraticMean(values: (number | null)[]): number | null {
+type TwoDimensional =
+  'line' | 'group' | 'subgroup' | 'phaseDeg' | 'interharmonicGroup' | 'centredSubgroup' | 'band';
+
+function row(series: WindowSeries, name: TwoDimensional, index: number): Float64Array {
+  return series[name].subarray(index * series.count, (index + 1) * series.count);
+}
+
+/** null when there is no value, or one is no number. */
+function quadraticMean(values: Float64Array): number | null {
   let sum = 0;
-  for (const value of values) {
-    if (value === null) return null;
-    sum += value * value;
-  }
-  return values.length > 0 ? Math.sqrt(sum / values.length) : null;
+  for (const value of values) sum += value * value;
+  return values.length > 0 && !Number.isNaN(sum) ? Math.sqrt(sum / values.length) : null;
 }

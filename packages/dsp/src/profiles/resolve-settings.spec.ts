@@ -8,8 +8,8 @@ describe('resolved settings', () => {
     [10_000, 2000],
     [1e6, 200_000],
   ])('can be given again, at %s Hz too', (nominalFrequencyHz, cycles) => {
-    const first = resolveSettings({ profile: 'tone', nominalFrequencyHz });
+    const first = resolveSettings({ profile: 'tone', nominalFrequencyHz }, []);
     expect(first.cyclesPerWindow).toBe(cycles);
-    expect(resolveSettings({ ...first, cyclesPerWindow: cycles })).toEqual(first);
+    expect(resolveSettings({ ...first, cyclesPerWindow: cycles }, [])).toEqual(first);
   });
 });

@@ -1,6 +1,7 @@
 import { AnalysisInputError } from '../errors.js';
-import type { AnalysisSettings, ResolvedSettings } from '../types.js';
+import type { AnalysisSettings, ChannelDescription, ResolvedSettings } from '../types.js';
 import type { WindowName } from '../windows/window-samples.js';
+import { checkChannelSettings } from './check-channel-settings.js';
 
 const DEFAULT_MAX_ORDER = 50;
 const HIGHEST_MAX_ORDER = 200;
@@ -12,10 +13,21 @@ const DEFAULT_WINDOW: Record<AnalysisSettings['profile'], WindowName> = {
   general: 'hann',
   tone: 'blackman-harris',
 };
+const LARGEST_KAISER_BETA = 40;
+const SEGMENT_LENGTHS = { shortest: 16, longest: 2 ** 22 };
+const LARGEST_OVERLAP_PERCENT = 95;
 
-/** Fills in the defaults; throws AnalysisInputError for settings that make no sense. */
-export function resolveSettings(settings: AnalysisSettings): ResolvedSettings {
-  const { profile, nominalFrequencyHz } = settings;
+/**
+ * Fills in the defaults. Settings that have none and are not given stay out.
+ *
+ * @param channels of the record, which settings of single channels must name
+ * @throws AnalysisInputError for settings that make no sense
+ */
+export function resolveSettings(
+  settings: AnalysisSettings,
+  channels: readonly ChannelDescription[],
+): ResolvedSettings {
+  const { profile, nominalFrequencyHz, cyclesPerWindow, bandHz } = settings;
   if (nominalFrequencyHz !== 'auto' && !(nominalFrequencyHz > 0 && Number.isFinite(nominalFrequencyHz))) {
     throw new AnalysisInputError(
       `The nominal frequency must be a positive number of hertz or 'auto', got ${nominalFrequencyHz}.`,
@@ -25,9 +37,19 @@ export function resolveSettings(settings: AnalysisSettings): ResolvedSettings {
   const thdMaxOrder = settings.thdMaxOrder ?? Math.min(DEFAULT_THD_ORDER[profile], maxOrder);
   requireInteger('The highest order', maxOrder, 1, HIGHEST_MAX_ORDER);
   requireInteger('The highest order of THD', thdMaxOrder, 1, maxOrder);
-  if (settings.cyclesPerWindow !== undefined) {
-    requireInteger('The number of cycles per window', settings.cyclesPerWindow, 2, MOST_CYCLES_PER_WINDOW);
+  if (cyclesPerWindow !== undefined) {
+    requireInteger('The number of cycles per window', cyclesPerWindow, 2, MOST_CYCLES_PER_WINDOW);
   }
+  checkSpectrumSettings(settings);
+  if (
+    bandHz !== undefined &&
+    !(bandHz.fromHz >= 0 && bandHz.toHz > bandHz.fromHz && bandHz.toHz < Infinity)
+  ) {
+    throw new AnalysisInputError(
+      `The band must run upwards from 0 Hz or above, got ${bandHz.fromHz} Hz to ${bandHz.toHz} Hz.`,
+    );
+  }
+  checkChannelSettings(settings, channels);
   return {
     profile,
     nominalFrequencyHz,
@@ -35,7 +57,8 @@ export function resolveSettings(settings: AnalysisSettings): ResolvedSettings {
     maxOrder,
     thdMaxOrder,
     cyclesPerWindow:
-      settings.cyclesPerWindow ?? (nominalFrequencyHz === 'auto' ? null : cyclesFor(nominalFrequencyHz)),
+      cyclesPerWindow ?? (nominalFrequencyHz === 'auto' ? null : cyclesFor(nominalFrequencyHz)),
+    ...givenOnly(settings),
   };
 }
 
@@ -44,7 +67,32 @@ export function cyclesFor(frequencyHz: number): number {
   return Math.max(2, 2 * Math.round(0.1 * frequencyHz));
 }
 
+function checkSpectrumSettings({ kaiserBeta, segmentLength, overlapPercent }: AnalysisSettings): void {
+  requireBetween('The β of the Kaiser window', kaiserBeta, 0, LARGEST_KAISER_BETA);
+  requireBetween('The overlap of segments in percent', overlapPercent, 0, LARGEST_OVERLAP_PERCENT);
+  if (segmentLength !== undefined) {
+    const { shortest, longest } = SEGMENT_LENGTHS;
+    requireInteger('The number of samples per segment', segmentLength, shortest, longest);
+  }
+}
+
+const OPTIONAL_SETTINGS = [
+  ...(['kaiserBeta', 'segmentLength', 'overlapPercent', 'bandHz'] as const),
+  ...(['pairs', 'threePhase', 'ratedCurrentA', 'accuracy'] as const),
+];
+
+function givenOnly(settings: AnalysisSettings): Pick<ResolvedSettings, (typeof OPTIONAL_SETTINGS)[number]> {
+  return Object.fromEntries(
+    OPTIONAL_SETTINGS.flatMap((name) => (settings[name] === undefined ? [] : [[name, settings[name]]])),
+  );
+}
+
 function requireInteger(what: string, value: number, from: number, to: number): void {
   if (Number.isInteger(value) && value >= from && value <= to) return;
   throw new AnalysisInputError(`${what} must be a whole number from ${from} to ${to}, got ${value}.`);
+}
+
+function requireBetween(what: string, value: number | undefined, from: number, to: number): void {
+  if (value === undefined || (value >= from && value <= to)) return;
+  throw new AnalysisInputError(`${what} must lie between ${from} and ${to}, got ${value}.`);
 }

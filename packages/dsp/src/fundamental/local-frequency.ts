@@ -1,0 +1,64 @@
+import { deviationAt, type FrequencyTrack } from './frequency-track.js';
+
+const FEWEST_FRAMES = 3;
+
+/**
+ * Mean frequency between two positions: slope of the straight line through the phases of the frames around them (from
+ * one frame before to one frame behind), which averages the noise of single frames.
+ *
+ * @param from position in samples
+ * @param to position in samples, behind `from`
+ */
+export function meanFrequencyHz(
+  track: FrequencyTrack,
+  sampleRateHz: number,
+  from: number,
+  to: number,
+): number {
+  const { centres, deviation, carrierHz } = track;
+  const first = Math.max(0, firstAtOrBehind(centres, from) - 1);
+  const end = Math.min(centres.length, firstAtOrBehind(centres, to) + 1);
+  const slope =
+    end - first < FEWEST_FRAMES
+      ? (deviationAt(track, to) - deviationAt(track, from)) / (to - from)
+      : slopeOf(centres, deviation, first, end);
+  return carrierHz + (slope * sampleRateHz) / (2 * Math.PI);
+}
+
+/**
+ * Mean frequency over a whole track by linear regression of its phase: the frequency estimate of S. A. Tretter (IEEE
+ * Trans. Information Theory 31, 1985), with frames in place of single samples.
+ */
+export function regressedFrequencyHz(track: FrequencyTrack, sampleRateHz: number): number {
+  const slope = slopeOf(track.centres, track.deviation, 0, track.centres.length);
+  return track.carrierHz + (slope * sampleRateHz) / (2 * Math.PI);
+}
+
+/** Slope of the least-squares line through points from up to but not including end. */
+function slopeOf(x: Float64Array, y: Float64Array, from: number, end: number): number {
+  const count = end - from;
+  let meanX = 0;
+  let meanY = 0;
+  for (let i = from; i < end; i++) {
+    meanX += x[i]! / count;
+    meanY += y[i]! / count;
+  }
+  let product = 0;
+  let square = 0;
+  for (let i = from; i < end; i++) {
+    product += (x[i]! - meanX) * (y[i]! - meanY);
+    square += (x[i]! - meanX) ** 2;
+  }
+  return product / square;
+}
+
+function firstAtOrBehind(values: Float64Array, limit: number): number {
+  let low = 0;
+  let high = values.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (values[middle]! < limit) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}

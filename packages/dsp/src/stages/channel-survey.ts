@@ -1,0 +1,87 @@
+import type { FundamentalEstimate } from '../fundamental/find-fundamental.js';
+import { assembleTrack, trackLayout, type FrequencyTrack } from '../fundamental/frequency-track.js';
+import { regressedFrequencyHz } from '../fundamental/local-frequency.js';
+import type { ChannelScan } from '../parts/channel-scan.js';
+import { fitsAsWhole } from '../parts/locate-fundamental.js';
+import type { PartContext } from '../parts/part-types.js';
+import { finishSpectrum, planSpectrum } from '../parts/spectrum-segments.js';
+import type { SpectrumResult } from '../types.js';
+import { PartBatch, type Batches } from './part-batch.js';
+import { splitItems } from './split.js';
+
+/** What is known of a channel before windows are laid. */
+export interface ChannelSurvey {
+  context: PartContext;
+  scan: ChannelScan;
+  spectrum: SpectrumResult;
+  /** null when none stands out. */
+  fundamental: SurveyedFundamental | null;
+  track: FrequencyTrack | null;
+}
+
+export interface SurveyedFundamental {
+  /** Over the whole record. */
+  frequencyHz: number;
+  /** Of the record, or of the stretch that was fitted of a long one. */
+  estimate: FundamentalEstimate;
+}
+
+/** Everything about the channels of a record that one of them tells without the others. */
+export function* surveyChannels(contexts: readonly PartContext[]): Batches<ChannelSurvey[]> {
+  const locating = new PartBatch();
+  const located = contexts.map((context) => locating.add({ ...context, kind: 'locate' }));
+  yield* locating.run();
+  const batch = new PartBatch();
+  const surveys = contexts.map((context, i) => surveyChannel(context, located[i]!(), batch));
+  yield* batch.run();
+  return surveys.map((survey) => survey());
+}
+
+function surveyChannel(
+  context: PartContext,
+  estimate: FundamentalEstimate | null,
+  batch: PartBatch,
+): () => ChannelSurvey {
+  const { sampleRateHz, sampleCount } = context;
+  const scan = batch.add({ ...context, kind: 'scan', fundamentalHz: estimate?.frequencyHz ?? null });
+  const track = estimate && trackParts(context, estimate.frequencyHz, batch);
+  const plan = planSpectrum(sampleCount, context.settings);
+  const sums = splitItems(plan.segments, plan.segmentLength).map((segments) =>
+    batch.add({ ...context, kind: 'spectrum', plan, segments }),
+  );
+  return () => {
+    const wholeTrack = track?.() ?? null;
+    return {
+      context,
+      scan: scan(),
+      spectrum: finishSpectrum(
+        plan,
+        sums.map((sum) => sum()),
+        sampleRateHz,
+      ),
+      fundamental: estimate && {
+        frequencyHz:
+          wholeTrack === null || fitsAsWhole(context)
+            ? estimate.frequencyHz
+            : regressedFrequencyHz(wholeTrack, sampleRateHz),
+        estimate,
+      },
+      track: wholeTrack,
+    };
+  };
+}
+
+function trackParts(context: PartContext, carrierHz: number, batch: PartBatch): () => FrequencyTrack | null {
+  const { sampleRateHz, sampleCount } = context;
+  const layout = trackLayout(sampleCount, sampleRateHz, carrierHz);
+  const frames = splitItems(layout.frames, layout.hopSamples).map((range) =>
+    batch.add({ ...context, kind: 'track', carrierHz, frames: range }),
+  );
+  return () =>
+    assembleTrack(
+      layout,
+      sampleRateHz,
+      carrierHz,
+      frames.map((part) => part()),
+    );
+}

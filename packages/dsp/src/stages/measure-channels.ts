@@ -1,0 +1,115 @@
+import { joinChunks, type WindowChunk } from '../parts/window-chunk.js';
+import { fitsAsWhole } from '../parts/locate-fundamental.js';
+import { longestToneStretch } from '../tone/combine-tone-powers.js';
+import { combineToneFigures } from '../tone/tone-figures.js';
+import { toneOptions } from '../parts/tone-options.js';
+import type { ToneResult } from '../tone/tone-result.js';
+import type { ChannelSurvey } from './channel-survey.js';
+import { fittedOrders, ordersOfPhasors, windowOrders, type OrderSet } from './order-set.js';
+import { PartBatch, type Batches } from './part-batch.js';
+import { splitItems } from './split.js';
+import { windowCount, type WindowGrid } from './window-grid.js';
+
+/** A channel with the windows it is taken in. */
+export interface GriddedChannel {
+  survey: ChannelSurvey;
+  /** null when the channel has no fundamental and follows none. */
+  grid: WindowGrid | null;
+}
+
+export interface MeasuredChannel extends GriddedChannel {
+  /** null when no whole window fits, or windows are not asked for. */
+  windows: WindowChunk | null;
+  orders: OrderSet | null;
+  tone: ToneResult | null;
+}
+
+/** Windows, orders and tone figures of all channels. */
+export function* measureChannels(channels: readonly GriddedChannel[]): Batches<MeasuredChannel[]> {
+  const batch = new PartBatch();
+  const pending = channels.map((channel) => ({
+    channel,
+    windows: windowParts(channel, batch),
+    fit: fitPart(channel, batch),
+    tone: toneParts(channel.survey, batch),
+  }));
+  yield* batch.run();
+  const chunks = pending.map(({ windows }) => windows?.() ?? null);
+  return pending.map(({ channel, fit, tone }, i) => {
+    const setter = channels.findIndex((other) => isSetter(other) && other.grid === channel.grid);
+    return {
+      ...channel,
+      windows: chunks[i]!,
+      orders: fit?.() ?? ordersWithoutFit(channel, chunks[i]!, chunks[setter] ?? null),
+      tone: tone?.() ?? null,
+    };
+  });
+}
+
+/** Whether the fundamental of the channel itself sets its windows. */
+function isSetter({ survey, grid }: GriddedChannel): boolean {
+  return grid !== null && grid.channel === survey.context.channel.index;
+}
+
+function windowParts(
+  { survey: { context }, grid }: GriddedChannel,
+  batch: PartBatch,
+): (() => WindowChunk) | null {
+  if (grid === null || windowCount(grid) === 0) return null;
+  if (context.settings.profile !== 'mains' && fitsAsWhole(context)) return null;
+  const { boundaries, cycles, orders, bandCentresHz } = grid;
+  const samplesPerWindow = boundaries.at(-1) / windowCount(grid);
+  const chunks = splitItems(windowCount(grid), samplesPerWindow).map(({ from, to }) => {
+    const plan = { boundaries: boundaries.slice(from, to + 1), cycles, orders, bandCentresHz };
+    return batch.add({ ...context, kind: 'windows', plan });
+  });
+  return () =>
+    joinChunks(
+      chunks.map((chunk) => chunk()),
+      orders,
+      bandCentresHz.length,
+    );
+}
+
+/** Orders at a fundamental that another channel set, or of a long record that holds no whole window. */
+function fitPart(channel: GriddedChannel, batch: PartBatch): (() => OrderSet) | null {
+  const { survey, grid } = channel;
+  if (grid === null) return null;
+  const wanted = fitsAsWhole(survey.context) ? !isSetter(channel) : windowCount(grid) === 0;
+  if (!wanted) return null;
+  const phasors = batch.add({ ...survey.context, kind: 'orders', fundamentalHz: grid.frequencyHz });
+  return () => ordersOfPhasors(phasors(), grid.frequencyHz);
+}
+
+function ordersWithoutFit(
+  { survey: { context, fundamental, scan }, grid }: GriddedChannel,
+  windows: WindowChunk | null,
+  reference: WindowChunk | null,
+): OrderSet | null {
+  if (grid === null) return null;
+  const { sampleCount, sampleRateHz } = context;
+  if (fitsAsWhole(context)) return fittedOrders(fundamental!.estimate, sampleCount);
+  return windowOrders(windows!, reference!, grid, {
+    totalRms: scan.figures.rms,
+    sampleCount,
+    sampleRateHz,
+  });
+}
+
+function toneParts({ context, fundamental }: ChannelSurvey, batch: PartBatch): (() => ToneResult) | null {
+  if (context.settings.profile !== 'tone' || fundamental === null) return null;
+  const { sampleCount } = context;
+  const count = Math.ceil(sampleCount / longestToneStretch);
+  const stretches = Array.from({ length: count }, (_, i) => {
+    const stretch = {
+      from: Math.floor((i * sampleCount) / count),
+      to: Math.floor(((i + 1) * sampleCount) / count),
+    };
+    return batch.add({ ...context, kind: 'tone', fundamentalHz: fundamental.frequencyHz, stretch });
+  });
+  return () =>
+    combineToneFigures(
+      stretches.map((result) => result()),
+      toneOptions(context),
+    );
+}
