@@ -65,12 +65,6 @@ export {
 export { weightedDistortion } from './groups/weighted-distortion.js';
 export { statistics } from './figures/statistics.js';
 export { smooth, smoothingAlpha } from './groups/smooth.js';
-export {
-  aggregateSeries,
-  WINDOWS_PER_10_MIN,
-  WINDOWS_PER_3_S,
-  type AggregatedSeries,
-} from './groups/aggregate-series.js';
 export { fitPhasorSet } from './power/fit-phasor-set.js';
 export { powerFigures } from './power/power-figures.js';
 export { orderPowers } from './power/order-powers.js';
