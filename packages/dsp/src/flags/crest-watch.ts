@@ -41,6 +41,8 @@ const MAX_WIDENING = 1.7;
 export class CrestWatch {
   /** Samples at or above the gate must be shown to `see`. */
   gate = Infinity;
+  /** The last sample was one of these. */
+  entered = false;
   private level = -Infinity;
   private flatFrom = Infinity;
   private start = -1;
@@ -57,15 +59,17 @@ export class CrestWatch {
   ) {}
 
   /**
-   * Prepares for a block with the given largest value.
+   * Turns to a new extreme. Runs at the one before are dropped when they lie below it by more than the tolerance; a
+   * crest that is going on is then judged with the width it has so far, which can only let it pass as smooth.
    *
+   * @param extreme largest value so far
    * @param tolerance how far below the extreme a sample still lies on the flat
    * @param depth how deep the second look at a crest goes
    */
-  expect(largest: number, tolerance: number, depth: number): void {
-    if (largest > this.level + tolerance) {
-      if (largest - this.level > depth) this.start = -1;
-      this.level = largest;
+  aim(extreme: number, tolerance: number, depth: number): void {
+    if (extreme > this.level + tolerance) {
+      if (extreme - this.level > depth) this.entered = false;
+      this.level = extreme;
       this.run = 0;
       this.longest = 0;
       this.flat.clear();
@@ -74,28 +78,27 @@ export class CrestWatch {
     this.gate = Math.min(this.level - depth, this.endCode);
   }
 
+  /** Takes a sample at or above the gate. */
   see(value: number, at: number): void {
+    if (!this.entered) {
+      this.entered = true;
+      this.start = at;
+    }
+    if (value < this.flatFrom) this.run = 0;
+    else if (++this.run > this.longest) this.longest = this.run;
     if (value >= this.endCode) {
       if (this.saturatedStart < 0) this.saturatedStart = at;
     } else if (this.saturatedStart >= 0) this.endSaturated(at);
-    if (value < this.gate) {
-      this.leave(at);
-      return;
-    }
-    if (this.start < 0) this.start = at;
-    if (value < this.flatFrom) this.run = 0;
-    else if (++this.run > this.longest) this.longest = this.run;
   }
 
   /** The samples went below the gate, or the record ended, at `at`. */
   leave(at: number): void {
     if (this.saturatedStart >= 0) this.endSaturated(at);
-    if (this.start < 0) return;
     const width = at - this.start;
     if (this.longest >= MIN_FLAT_RUN && width <= MAX_WIDENING * this.longest) {
       this.flat.add(this.start, at, this.longest);
     }
-    this.start = -1;
+    this.entered = false;
     this.run = 0;
     this.longest = 0;
   }

@@ -54,7 +54,7 @@ export function isolatedJumps(
   const cycles = frequencyHz === null ? null : (sampleCount * frequencyHz) / sampleRateHz;
   const most = Math.min(
     jumps.length - 1,
-    cycles === null ? MOST_WITHOUT_CYCLE : Math.max(1, Math.floor(cycles / CYCLES_PER_JUMP)),
+    cycles === null ? MOST_WITHOUT_CYCLE : Math.floor(cycles / CYCLES_PER_JUMP),
     MAX_TIMES,
   );
   for (let i = 0; i < most; i++) {

@@ -63,6 +63,7 @@ class Scan implements FlagScan {
   private jumpGate = 0;
   private readonly top: CrestWatch;
   private readonly bottom: CrestWatch;
+  /** The last sample lay at or beyond a gate of `top` or `bottom`. */
   private nearEnd = false;
   /** The last three samples; no third difference before there are as many. */
   private last: [number, number, number] = [NaN, NaN, NaN];
@@ -79,8 +80,9 @@ class Scan implements FlagScan {
         `The scan stands at sample ${this.count}; a block from sample ${first} on does not follow.`,
       );
     }
-    if (block.length === 0) return;
-    this.prepare(block);
+    this.grid.push(block);
+    if (first === 0) this.lookAhead(block);
+    this.aim();
     this.walk(block, first);
     this.count += block.length;
   }
@@ -100,49 +102,79 @@ class Scan implements FlagScan {
     };
   }
 
-  /** The extremes are known before the samples are looked at one by one. */
-  private prepare(block: Float64Array): void {
-    let low = Infinity;
-    let high = -Infinity;
-    for (let i = 0; i < block.length; i++) {
-      const x = block[i]!;
-      if (x < low) low = x;
-      if (x > high) high = x;
+  /** With the extremes of the first block known, its first crests are judged like all others. */
+  private lookAhead(block: Float64Array): void {
+    for (const x of block) {
+      if (x < this.lowest) this.lowest = x;
+      if (x > this.highest) this.highest = x;
     }
-    this.lowest = Math.min(this.lowest, low);
-    this.highest = Math.max(this.highest, high);
-    this.grid.push(block, Math.max(Math.abs(low), Math.abs(high)));
-    const tolerance = SAME_LEVEL * (this.highest - this.lowest);
-    const depth = DEPTH_IN_TOLERANCES * tolerance + DEPTH_IN_STEPS * (this.grid.step ?? 0);
-    this.top.expect(high, tolerance, depth);
-    this.bottom.expect(-low, tolerance, depth);
   }
 
+  /** Passes over samples in fours, as long as none of them is near an end of the range or behind a large jump. */
   private walk(block: Float64Array, first: number): void {
-    const { top, bottom, jumps } = this;
-    const topGate = top.gate;
-    const bottomGate = -bottom.gate;
-    let { jumpGate, nearEnd } = this;
+    const fours = block.length - (block.length % 4);
     let [a, b, c] = this.last;
-    for (let i = 0; i < block.length; i++) {
+    let { jumpGate } = this;
+    let topGate = this.top.gate;
+    let bottomGate = -this.bottom.gate;
+    let i = 0;
+    for (; i < fours; i += 4) {
+      const x0 = block[i]!;
+      const x1 = block[i + 1]!;
+      const x2 = block[i + 2]!;
+      const x3 = block[i + 3]!;
+      const size0 = Math.abs(x0 - a - 3 * (c - b));
+      const size1 = Math.abs(x1 - b - 3 * (x0 - c));
+      const size2 = Math.abs(x2 - c - 3 * (x1 - x0));
+      const size3 = Math.abs(x3 - x0 - 3 * (x2 - x1));
+      a = x1;
+      b = x2;
+      c = x3;
+      const calm = size0 <= jumpGate && size1 <= jumpGate && size2 <= jumpGate && size3 <= jumpGate;
+      const low = x0 < topGate && x1 < topGate && x2 < topGate && x3 < topGate;
+      const high = x0 > bottomGate && x1 > bottomGate && x2 > bottomGate && x3 > bottomGate;
+      if (calm && low && high && !this.nearEnd) continue;
+      this.inspect(x0, size0, first + i);
+      this.inspect(x1, size1, first + i + 1);
+      this.inspect(x2, size2, first + i + 2);
+      this.inspect(x3, size3, first + i + 3);
+      jumpGate = this.jumpGate;
+      topGate = this.top.gate;
+      bottomGate = -this.bottom.gate;
+    }
+    for (; i < block.length; i++) {
       const x = block[i]!;
-      const size = Math.abs(x - a - 3 * (c - b));
-      if (size > jumpGate) jumpGate = jumps.note(first + i, size);
-      if (x >= topGate || x <= bottomGate) {
-        top.see(x, first + i);
-        bottom.see(-x, first + i);
-        nearEnd = true;
-      } else if (nearEnd) {
-        top.leave(first + i);
-        bottom.leave(first + i);
-        nearEnd = false;
-      }
+      this.inspect(x, Math.abs(x - a - 3 * (c - b)), first + i);
       a = b;
       b = c;
       c = x;
     }
     this.last = [a, b, c];
-    this.jumpGate = jumpGate;
-    this.nearEnd = nearEnd;
+  }
+
+  /** @param size third difference at the sample; NaN at the first three */
+  private inspect(x: number, size: number, at: number): void {
+    const { top, bottom } = this;
+    if (size > this.jumpGate) this.jumpGate = this.jumps.note(at, size);
+    if (x > this.highest || x < this.lowest) {
+      this.lowest = Math.min(this.lowest, x);
+      this.highest = Math.max(this.highest, x);
+      this.aim();
+    }
+    if (x >= top.gate) top.see(x, at);
+    else if (top.entered) top.leave(at);
+    if (-x >= bottom.gate) bottom.see(-x, at);
+    else if (bottom.entered) bottom.leave(at);
+    this.nearEnd = top.entered || bottom.entered;
+  }
+
+  /** Turns both watches to the extremes and the converter step that are known by now. */
+  private aim(): void {
+    const span = this.highest - this.lowest;
+    if (!(span >= 0)) return;
+    const tolerance = SAME_LEVEL * span;
+    const depth = DEPTH_IN_TOLERANCES * tolerance + DEPTH_IN_STEPS * (this.grid.step ?? 0);
+    this.top.aim(this.highest, tolerance, depth);
+    this.bottom.aim(-this.lowest, tolerance, depth);
   }
 }
