@@ -1,9 +1,12 @@
 import { waveformFigures } from '../figures/waveform-figures.js';
+import { harmonicAngles, highestOrder } from '../harmonics/harmonic-orders.js';
 import { toFit, type SinusoidFit } from '../model/fit-sinusoids.js';
+import { projections } from '../model/projections.js';
+import { createSinusoidSolver } from '../model/sinusoid-solver.js';
 import { coarseSearch } from './coarse-search.js';
-import { combCandidate } from './comb-candidate.js';
-import { refineFrequency, type RefinedFrequency } from './refine-frequency.js';
-import { spectralPeaks } from './spectral-peaks.js';
+import { combFundamental } from './comb-fundamental.js';
+import { refineFrequency } from './refine-frequency.js';
+import { tellingOrders } from './telling-orders.js';
 
 export interface FundamentalOptions {
   /** Where to look: ±15 % around this frequency, or 'auto' for the whole range from 1 Hz. */
@@ -22,67 +25,92 @@ export interface FundamentalEstimate {
   residualRms: number;
 }
 
+/** A frequency and the length of the stretch on which it is right to a fraction of a line. */
+interface Start {
+  frequencyHz: number;
+  length: number;
+}
+
+interface Range {
+  lowHz: number;
+  highHz: number;
+}
+
+const LOWEST_HZ = 1;
 const SEARCH_SPAN = 0.15;
 const FIRST_STAGE_CYCLES = 8;
 const STAGE_GROWTH = 4;
+/** Cycles from which the spectrum tells the orders apart. */
+const SPECTRUM_CYCLES = 8;
+/** Share of a line of the first stage by which the strongest orders may be off. */
+const START_LINES = 0.25;
 /** A noise line exceeds this many times its mean power with probability e^−25. */
 const SIGNIFICANCE = 25;
+/** The same for the fundamental alone, once its place is known from stronger orders. */
+const KNOWN_PLACE_SIGNIFICANCE = 9;
 
 /**
- * Finds the fundamental of a record and fits its harmonic series: coarse search over a short stretch, then nonlinear
- * least squares on stretches that grow around the middle up to the whole record.
+ * Finds the fundamental of a stretch and fits its harmonic series: a first value from the peaks of the spectrum (or, for
+ * a few cycles around a nominal frequency, from a search over a short stretch), then nonlinear least squares on stretches
+ * that grow around the middle up to all samples.
  *
+ * @param samples some 2^20 at the most; of a longer record a stretch of it
  * @returns null when no fundamental stands out of the noise, or less than one cycle was recorded
  */
 export function findFundamental(
   samples: Float64Array,
   sampleRateHz: number,
-  options: FundamentalOptions,
+  { nominalFrequencyHz, maxOrder = 50 }: FundamentalOptions,
 ): FundamentalEstimate | null {
   const { mean, rms } = waveformFigures(samples);
   const acPower = rms * rms - mean * mean;
   if (samples.length < 8 || !(acPower > 1e-20 * rms * rms)) return null;
-  const ac = samples.map((x) => x - mean);
-  const range = searchRange(ac, sampleRateHz, options.nominalFrequencyHz);
-  if (range === null || samples.length * range.lowHz < sampleRateHz * 0.98) return null;
-  const coarse = coarseSearch(ac, sampleRateHz, range.lowHz, range.highHz);
-  const refined = growSegments(ac, sampleRateHz, coarse, options.maxOrder ?? 50);
-  if (!(refined.frequencyHz > 0.9 * range.lowHz && refined.frequencyHz < 1.1 * range.highHz)) return null;
-  return assess(ac, sampleRateHz, refined, mean);
+  const ac = new Float64Array(samples.length);
+  for (let n = 0; n < ac.length; n++) ac[n] = samples[n]! - mean;
+  const range = searchRange(ac.length, sampleRateHz, nominalFrequencyHz);
+  if (range === null) return null;
+  const start = findStart(ac, sampleRateHz, range, nominalFrequencyHz !== 'auto');
+  if (start === null || start.frequencyHz * samples.length < 0.98 * sampleRateHz) return null;
+  const frequencyHz = growSegments(ac, sampleRateHz, start, maxOrder);
+  if (!(frequencyHz > 0.9 * range.lowHz && frequencyHz < 1.1 * range.highHz)) return null;
+  return assess(ac, sampleRateHz, frequencyHz, maxOrder, mean);
 }
 
-function searchRange(
-  ac: Float64Array,
-  sampleRateHz: number,
-  nominal: number | 'auto',
-): { lowHz: number; highHz: number } | null {
-  const lineHz = sampleRateHz / ac.length;
+function searchRange(sampleCount: number, sampleRateHz: number, nominal: number | 'auto'): Range | null {
+  const lineHz = sampleRateHz / sampleCount;
   const ceilingHz = sampleRateHz / 2 - 0.7 * lineHz;
-  if (nominal !== 'auto') {
-    // A record of hardly more than one cycle of the nominal frequency is searched from one whole cycle upwards.
-    const lowHz = Math.max(nominal * (1 - SEARCH_SPAN), Math.min(lineHz, nominal));
-    const highHz = Math.min(nominal * (1 + SEARCH_SPAN), ceilingHz);
-    return highHz > lowHz ? { lowHz, highHz } : null;
-  }
-  const candidate = combCandidate(spectralPeaks(ac, sampleRateHz), Math.max(lineHz, sampleRateHz / 2 ** 18));
-  if (candidate === null) return null;
-  const width = Math.max(0.01 * candidate, 0.3 * lineHz);
-  return { lowHz: candidate - width, highHz: Math.min(candidate + width, ceilingHz) };
+  if (nominal === 'auto') return { lowHz: Math.max(LOWEST_HZ, 2 * lineHz), highHz: ceilingHz };
+  // A record of hardly more than one cycle of the nominal frequency is searched from one whole cycle upwards.
+  const lowHz = Math.max(nominal * (1 - SEARCH_SPAN), Math.min(lineHz, nominal));
+  const highHz = Math.min(nominal * (1 + SEARCH_SPAN), ceilingHz);
+  return highHz > lowHz ? { lowHz, highHz } : null;
 }
 
-function growSegments(
-  ac: Float64Array,
-  sampleRateHz: number,
-  coarseHz: number,
-  maxOrder: number,
-): RefinedFrequency {
-  let length = Math.min(ac.length, Math.ceil((FIRST_STAGE_CYCLES * sampleRateHz) / coarseHz));
-  let frequencyHz = coarseHz;
+function findStart(ac: Float64Array, sampleRateHz: number, range: Range, hinted: boolean): Start | null {
+  const cycles = (range.lowHz * ac.length) / sampleRateHz;
+  const candidate = hinted && cycles < SPECTRUM_CYCLES ? null : combFundamental(ac, sampleRateHz, range);
+  if (candidate) {
+    const { frequencyHz, uncertaintyHz, typicalOrder } = candidate;
+    const sharp = (START_LINES * sampleRateHz) / (typicalOrder * uncertaintyHz);
+    return { frequencyHz, length: Math.max(sharp, firstStage(frequencyHz, sampleRateHz)) };
+  }
+  if (!hinted) return null;
+  const frequencyHz = coarseSearch(ac, sampleRateHz, range.lowHz, range.highHz);
+  return { frequencyHz, length: firstStage(frequencyHz, sampleRateHz) };
+}
+
+function firstStage(frequencyHz: number, sampleRateHz: number): number {
+  return (FIRST_STAGE_CYCLES * sampleRateHz) / frequencyHz;
+}
+
+function growSegments(ac: Float64Array, sampleRateHz: number, start: Start, maxOrder: number): number {
+  let length = Math.min(ac.length, Math.ceil(start.length));
+  let { frequencyHz } = start;
   for (;;) {
-    const start = Math.floor((ac.length - length) / 2);
-    const refined = refineFrequency({ samples: ac, sampleRateHz, start, length }, frequencyHz, maxOrder);
-    if (length === ac.length) return refined;
-    frequencyHz = refined.frequencyHz;
+    const segment = { samples: ac, sampleRateHz, start: Math.floor((ac.length - length) / 2), length };
+    const orders = tellingOrders(segment, frequencyHz, maxOrder);
+    frequencyHz = refineFrequency(segment, frequencyHz, orders).frequencyHz;
+    if (length === ac.length) return frequencyHz;
     length = Math.min(ac.length, STAGE_GROWTH * length);
   }
 }
@@ -90,26 +118,29 @@ function growSegments(
 function assess(
   ac: Float64Array,
   sampleRateHz: number,
-  refined: RefinedFrequency,
+  frequencyHz: number,
+  maxOrder: number,
   mean: number,
 ): FundamentalEstimate | null {
   const n = ac.length;
-  const fit = toFit(refined.solution, refined.angles, n, sampleRateHz);
+  const angles = harmonicAngles(
+    frequencyHz,
+    sampleRateHz,
+    highestOrder(frequencyHz, sampleRateHz, n, maxOrder),
+  );
+  const solution = createSinusoidSolver(angles, n)(projections(ac, 0, n, angles));
+  const fit = toFit(solution, angles, n, sampleRateHz);
   fit.dc += mean;
   let total = 0;
   for (const x of ac) total += x * x;
-  const freedom = Math.max(1, n - 2 * refined.angles.length);
-  const variance = Math.max(total - refined.solution.explained, 1e-18 * total) / freedom;
-  const fundamental = fit.components[0];
-  if (!fundamental || (fundamental.rms ** 2 * n) / (2 * variance) < SIGNIFICANCE) return null;
+  const freedom = Math.max(1, n - 2 * angles.length);
+  const variance = Math.max(total - solution.explained, 1e-18 * total) / freedom;
+  const significance = fit.components.map(({ rms }) => (rms ** 2 * n) / (2 * variance));
+  if (!(Math.max(...significance) >= SIGNIFICANCE && significance[0]! >= KNOWN_PLACE_SIGNIFICANCE))
+    return null;
   // Kay, "Fundamentals of Statistical Signal Processing", vol. 1, 3.11, extended to Σ h² A_h² for a harmonic series.
   const weighted = fit.components.reduce((sum, c, i) => sum + 2 * ((i + 1) * c.rms) ** 2, 0);
   const deviation =
     (sampleRateHz / (2 * Math.PI)) * Math.sqrt((24 * variance) / (weighted * n * (n * n - 1)));
-  return {
-    frequencyHz: refined.frequencyHz,
-    frequencyUncertaintyHz: deviation,
-    fit,
-    residualRms: Math.sqrt(variance),
-  };
+  return { frequencyHz, frequencyUncertaintyHz: deviation, fit, residualRms: Math.sqrt(variance) };
 }

@@ -1,13 +1,6 @@
-import { harmonicAngles, highestOrder } from '../harmonics/harmonic-orders.js';
 import { frequencyCorrection } from '../model/frequency-correction.js';
 import { timedProjections } from '../model/projections.js';
 import { createSinusoidSolver, type SinusoidSolution } from '../model/sinusoid-solver.js';
-
-export interface RefinedFrequency {
-  frequencyHz: number;
-  angles: Float64Array;
-  solution: SinusoidSolution;
-}
 
 /** A stretch of a record: samples [start, start + length). */
 export interface Segment {
@@ -17,23 +10,37 @@ export interface Segment {
   length: number;
 }
 
+export interface RefinedFrequency {
+  frequencyHz: number;
+  /** Radians per sample of the components, DC first. */
+  angles: Float64Array;
+  solution: SinusoidSolution;
+}
+
 const MAX_STEPS = 20;
-/** Share of a spectrum line below which a correction no longer matters. */
-const CONVERGED_LINES = 1e-7;
+/** Over many cycles each step squares what is left in lines, so that the error is then far below any noise. */
+const TOLERANCE_LINES = 1e-5;
 
 /**
  * Nonlinear least squares for the frequency of a harmonic series: Gauss-Newton on f0 with the linear amplitudes of DC and
- * the orders 1..maxOrder solved exactly at each step. A step that explains less power is halved.
+ * the given orders solved exactly at each step. A step that explains less power is halved.
  *
  * @param frequencyHz start value, within about half a line of the segment (divided by the dominant order) of f0
+ * @param orders of the model, ascending, from 1; all below half the sample rate
+ * @param toleranceLines ends with a step below this share of a spectrum line of the segment
  */
-export function refineFrequency(segment: Segment, frequencyHz: number, maxOrder: number): RefinedFrequency {
-  const { sampleRateHz, length } = segment;
-  const lineHz = sampleRateHz / length;
-  let best = fitAt(segment, frequencyHz, maxOrder);
+export function refineFrequency(
+  segment: Segment,
+  frequencyHz: number,
+  orders: readonly number[],
+  toleranceLines = TOLERANCE_LINES,
+): RefinedFrequency {
+  const withDc = [0, ...orders];
+  const lineHz = segment.sampleRateHz / segment.length;
+  let best = fitAt(segment, frequencyHz, withDc);
   let stepHz = best.correctionHz;
-  for (let i = 0; i < MAX_STEPS && Math.abs(stepHz) > CONVERGED_LINES * lineHz; i++) {
-    const next = fitAt(segment, best.frequencyHz + stepHz, maxOrder);
+  for (let i = 0; i < MAX_STEPS && Math.abs(stepHz) > toleranceLines * lineHz; i++) {
+    const next = fitAt(segment, best.frequencyHz + stepHz, withDc);
     if (next.solution.explained >= best.solution.explained) {
       best = next;
       stepHz = next.correctionHz;
@@ -41,18 +48,26 @@ export function refineFrequency(segment: Segment, frequencyHz: number, maxOrder:
       stepHz /= 2;
     }
   }
-  return best;
+  // The last small step does not touch the amplitudes, which are those at the centre of the segment.
+  const refinedHz = best.frequencyHz + stepHz;
+  return { frequencyHz: refinedHz, angles: anglesOf(segment, refinedHz, withDc), solution: best.solution };
 }
 
 function fitAt(
-  { samples, sampleRateHz, start, length }: Segment,
+  segment: Segment,
   frequencyHz: number,
-  maxOrder: number,
-): RefinedFrequency & { correctionHz: number } {
-  const count = highestOrder(frequencyHz, sampleRateHz, length, maxOrder);
-  const angles = harmonicAngles(frequencyHz, sampleRateHz, count);
+  orders: readonly number[],
+): { frequencyHz: number; solution: SinusoidSolution; correctionHz: number } {
+  const { samples, sampleRateHz, start, length } = segment;
+  const angles = anglesOf(segment, frequencyHz, orders);
   const sums = timedProjections(samples, start, length, angles);
   const solution = createSinusoidSolver(angles, length)(sums);
-  const correction = frequencyCorrection(angles, length, sums, solution);
-  return { frequencyHz, angles, solution, correctionHz: (correction * sampleRateHz) / (2 * Math.PI) };
+  const angle = (2 * Math.PI * frequencyHz) / sampleRateHz;
+  const correction = frequencyCorrection(angle, orders, length, sums, solution);
+  return { frequencyHz, solution, correctionHz: (correction * sampleRateHz) / (2 * Math.PI) };
+}
+
+function anglesOf({ sampleRateHz }: Segment, frequencyHz: number, orders: readonly number[]): Float64Array {
+  const angle = (2 * Math.PI * frequencyHz) / sampleRateHz;
+  return Float64Array.from(orders, (order) => order * angle);
 }

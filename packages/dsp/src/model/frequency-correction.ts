@@ -7,37 +7,40 @@ import type { SinusoidSolution } from './sinusoid-solver.js';
  * IEEE 1057 sine fit, for a whole series): the residual of the linear fit projected on the derivative of the model with
  * respect to the fundamental frequency. Sums of model terms are derivatives of Dirichlet kernels in closed form.
  *
- * @param angles h·θ for h = 0..H, component by component as in `solution`
- * @returns the change of θ in radians per sample; 0 when the series has no power
+ * @param angle of the fundamental, radians per sample
+ * @param orders of the fitted components, ascending, from 0 for DC
+ * @returns the change of the angle; 0 when the series has no power
  */
 export function frequencyCorrection(
-  angles: Float64Array,
+  angle: number,
+  orders: readonly number[],
   sampleCount: number,
   sums: TimedProjections,
   solution: SinusoidSolution,
 ): number {
-  const size = angles.length;
-  const slope = kernelSlopes(angles[1] ?? 0, size, sampleCount);
+  const slope = kernelSlopes(angle, 2 * (orders.at(-1) ?? 0), sampleCount);
   let gradient = 0;
   let weighted = 0;
-  for (let h = 1; h < size; h++) {
-    let timeCosine = sums.timeCosine[h]!;
-    let timeSine = sums.timeSine[h]!;
-    for (let k = 0; k < size; k++) {
+  for (let i = 0; i < orders.length; i++) {
+    const h = orders[i]!;
+    let timeCosine = sums.timeCosine[i]!;
+    let timeSine = sums.timeSine[i]!;
+    for (let k = 0; k < orders.length; k++) {
       // Σ t sin(mθt) = −(kernel slope at m), odd in m.
-      const sum = slope[h + k]!;
-      const difference = k >= h ? slope[k - h]! : -slope[h - k]!;
+      const sum = slope[h + orders[k]!]!;
+      const apart = orders[k]! - h;
+      const difference = apart >= 0 ? slope[apart]! : -slope[-apart]!;
       timeCosine += 0.5 * solution.sine[k]! * (sum + difference);
       timeSine += 0.5 * solution.cosine[k]! * (sum - difference);
     }
-    gradient += h * (solution.sine[h]! * timeCosine - solution.cosine[h]! * timeSine);
-    weighted += h * h * (solution.cosine[h]! ** 2 + solution.sine[h]! ** 2);
+    gradient += h * (solution.sine[i]! * timeCosine - solution.cosine[i]! * timeSine);
+    weighted += h * h * (solution.cosine[i]! ** 2 + solution.sine[i]! ** 2);
   }
   const curvature = (weighted * sampleCount * (sampleCount * sampleCount - 1)) / 24;
   return curvature > 0 ? gradient / curvature : 0;
 }
 
-/** d/dφ [sin(Nφ/2)/sin(φ/2)] at φ = mθ, m = 0..2·size − 2. */
-function kernelSlopes(angle: number, size: number, sampleCount: number): Float64Array {
-  return Float64Array.from({ length: 2 * size - 1 }, (_, m) => dirichletSlope(m * angle, sampleCount));
+/** d/dφ [sin(Nφ/2)/sin(φ/2)] at φ = mθ, m = 0..highest. */
+function kernelSlopes(angle: number, highest: number, sampleCount: number): Float64Array {
+  return Float64Array.from({ length: highest + 1 }, (_, m) => dirichletSlope(m * angle, sampleCount));
 }

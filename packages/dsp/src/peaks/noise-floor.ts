@@ -1,0 +1,56 @@
+import { median } from '../figures/median.js';
+
+/** Median of an exponentially distributed power, as a line of noise has it, relative to its mean. */
+const MEDIAN_OF_NOISE = Math.LN2;
+const SHORTEST_BLOCK = 64;
+/** Blocks grow with frequency, so that noise that falls with frequency is followed where it is steep. */
+const BLOCK_SHARE = 0.25;
+
+/**
+ * Mean noise power per line: medians over blocks of lines, which peaks do not move as long as they take up less than half
+ * of a block, joined by straight lines between the logarithms (background estimates of this kind are compared by
+ * W. A. Struzinski and E. D. Lowe, J. Acoust. Soc. Am. 76(6), 1984).
+ *
+ * @param power of the lines from DC; DC itself is left out
+ * @param averages periodograms averaged in each line; the median of a mean of many is the mean itself
+ */
+export function noiseFloor(power: Float64Array, averages = 1): Float64Array {
+  const blocks = blockFloors(power, medianShare(averages));
+  const floor = new Float64Array(power.length);
+  let b = 0;
+  for (let k = 0; k < floor.length; k++) {
+    while (b < blocks.length - 2 && k > blocks[b + 1]!.centre) b++;
+    floor[k] = between(blocks[b]!, blocks[Math.min(b + 1, blocks.length - 1)]!, k);
+  }
+  return floor;
+}
+
+interface Block {
+  centre: number;
+  power: number;
+}
+
+function blockFloors(power: Float64Array, share: number): Block[] {
+  const blocks: Block[] = [];
+  let from = Math.min(1, power.length - 1);
+  while (from < power.length) {
+    let to = from + Math.max(SHORTEST_BLOCK, Math.floor(BLOCK_SHARE * from));
+    // A last block too short for a median joins the one before it.
+    if (power.length - to < SHORTEST_BLOCK) to = power.length;
+    blocks.push({ centre: (from + to - 1) / 2, power: median(power.subarray(from, to)) / share });
+    from = to;
+  }
+  return blocks;
+}
+
+function between(left: Block, right: Block, k: number): number {
+  if (k <= left.centre || right.centre === left.centre || !(left.power > 0 && right.power > 0))
+    return left.power;
+  const share = Math.min(1, (k - left.centre) / (right.centre - left.centre));
+  return left.power * (right.power / left.power) ** share;
+}
+
+/** Median over mean of an average of n exponentially distributed powers (E. B. Wilson, M. M. Hilferty, 1931). */
+function medianShare(averages: number): number {
+  return averages === 1 ? MEDIAN_OF_NOISE : (1 - 1 / (9 * averages)) ** 3;
+}
