@@ -1,0 +1,68 @@
+import { AnalysisInputError } from '../errors.js';
+import { rootsAtOrigin, trimLeadingZeros } from './polynomial.js';
+import { polynomialRoots, type Root } from './polynomial-roots.js';
+
+/** H(s) = numerator/denominator of a linear, time-invariant stage; real coefficients in descending powers of s (1/s). */
+export interface TransferFunction {
+  numerator: readonly number[];
+  denominator: readonly number[];
+}
+
+const MAX_DEGREE = 50;
+
+/**
+ * A checked transfer function without leading zeros.
+ *
+ * @throws AnalysisInputError when a coefficient is no finite number, the denominator is zero, or the degree exceeds 50
+ */
+export function transferFunction(
+  numerator: readonly number[],
+  denominator: readonly number[],
+): TransferFunction {
+  const checked = {
+    numerator: checkedPolynomial(numerator, 'numerator'),
+    denominator: checkedPolynomial(denominator, 'denominator'),
+  };
+  if (checked.denominator.length === 0) {
+    throw new AnalysisInputError('The denominator of the transfer function is zero.');
+  }
+  return checked;
+}
+
+function checkedPolynomial(coefficients: readonly number[], where: string): readonly number[] {
+  const wrong = coefficients.findIndex((c) => !Number.isFinite(c));
+  if (wrong >= 0) {
+    throw new AnalysisInputError(`Coefficient ${wrong + 1} of the ${where} is not a finite number.`);
+  }
+  const polynomial = trimLeadingZeros(coefficients);
+  if (polynomial.length > MAX_DEGREE + 1) {
+    throw new AnalysisInputError(
+      `The ${where} has degree ${polynomial.length - 1}; up to ${MAX_DEGREE} can be computed.`,
+    );
+  }
+  return polynomial;
+}
+
+/** Roots of the denominator; common factors with the numerator are not cancelled. */
+export function poles(h: TransferFunction): Root[] {
+  return polynomialRoots(h.denominator);
+}
+
+/** Roots of the numerator. */
+export function zeros(h: TransferFunction): Root[] {
+  return polynomialRoots(h.numerator);
+}
+
+/**
+ * H(0), a common factor s cancelled.
+ *
+ * @returns null when a pole lies at the origin
+ */
+export function dcGain(h: TransferFunction): number | null {
+  const numerator = trimLeadingZeros(h.numerator);
+  const denominator = trimLeadingZeros(h.denominator);
+  if (numerator.length === 0) return 0;
+  const common = Math.min(rootsAtOrigin(numerator), rootsAtOrigin(denominator));
+  const divisor = denominator[denominator.length - 1 - common]!;
+  return divisor === 0 ? null : numerator[numerator.length - 1 - common]! / divisor;
+}
