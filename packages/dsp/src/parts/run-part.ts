@@ -54,8 +54,10 @@ export function partSamples(part: AnalysisPart): number {
       return part.plan.segmentLength * (part.segments.to - part.segments.from);
     case 'tone':
       return part.stretch.to - part.stretch.from;
-    case 'windows':
-      return part.plan.boundaries.at(-1) - part.plan.boundaries[0]!;
+    case 'windows': {
+      const { boundaries } = part.plan;
+      return boundaries[boundaries.length - 1]! - boundaries[0]!;
+    }
     case 'locate':
     case 'scan':
     case 'orders':

@@ -58,7 +58,7 @@ function windowParts(
   if (grid === null || windowCount(grid) === 0) return null;
   if (context.settings.profile !== 'mains' && fitsAsWhole(context)) return null;
   const { boundaries, cycles, orders, bandCentresHz } = grid;
-  const samplesPerWindow = boundaries.at(-1) / windowCount(grid);
+  const samplesPerWindow = boundaries[windowCount(grid)]! / windowCount(grid);
   const chunks = splitItems(windowCount(grid), samplesPerWindow).map(({ from, to }) => {
     const plan = { boundaries: boundaries.slice(from, to + 1), cycles, orders, bandCentresHz };
     return batch.add({ ...context, kind: 'windows', plan });
