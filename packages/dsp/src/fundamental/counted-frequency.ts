@@ -34,13 +34,14 @@ export function countedFrequency(
   const cyclesAt = (position: number): number =>
     (track.carrierHz * position) / sampleRateHz + deviationAt(track, position) / (2 * Math.PI) - RISING;
   const length = INTERVAL_S * sampleRateHz;
+  const holes = holesIn(track);
   const out: CountedFrequency[] = [];
   // A record of whole intervals must not lose the last one by rounding.
   for (let k = 0; (k + 1) * length <= sampleCount * (1 + 1e-12); k++) {
     const [from, to] = [k * length, (k + 1) * length];
     const first = Math.ceil(cyclesAt(from));
     const last = Math.floor(cyclesAt(to));
-    if (last <= first || hasHole(track, from, to)) continue;
+    if (last <= first || holes.some((hole) => hole.from < to && hole.to > from)) continue;
     const duration = crossing(cyclesAt, last, from, to) - crossing(cyclesAt, first, from, to);
     const cycles = last - first;
     out.push({ startS: k * INTERVAL_S, frequencyHz: (cycles * sampleRateHz) / duration, cycles });
@@ -59,13 +60,17 @@ function crossing(cyclesAt: (position: number) => number, whole: number, from: n
   return (low + high) / 2;
 }
 
-function hasHole({ centres }: FrequencyTrack, from: number, to: number): boolean {
+/** Stretches of the record, in samples, over which the track says nothing. */
+function holesIn({ centres }: FrequencyTrack): { from: number; to: number }[] {
   const steps = Float64Array.from({ length: centres.length - 1 }, (_, i) => centres[i + 1]! - centres[i]!);
   const usual = Float64Array.from(steps).sort()[steps.length >> 1]!;
-  const gone = (i: number): boolean => centres[i]! < to && centres[i + 1]! > from;
-  return (
-    steps.some((step, i) => step > HOLE * usual && gone(i)) ||
-    centres[0]! - from > HOLE * usual ||
-    to - centres[centres.length - 1]! > HOLE * usual
-  );
+  const last = centres[centres.length - 1]!;
+  const holes = [
+    { from: -Infinity, to: centres[0]! - HOLE * usual },
+    { from: last + HOLE * usual, to: Infinity },
+  ];
+  steps.forEach((step, i) => {
+    if (step > HOLE * usual) holes.push({ from: centres[i]!, to: centres[i + 1]! });
+  });
+  return holes;
 }
