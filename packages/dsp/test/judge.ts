@@ -26,6 +26,8 @@ export function judge(expected: Expected, got: unknown): string | null {
       return judgePoles(expected, got as ComplexPair[]);
     case 'flags':
       return judgeFlags(expected, got as string[]);
+    case 'mention':
+      return judgeMention(expected, String(got));
   }
 }
 
@@ -80,4 +82,12 @@ function judgeFlags(expected: Expected, got: string[]): string | null {
   return missing.length + wrong.length === 0
     ? null
     : `missing ${missing.join()}, wrong ${wrong.join()}, got ${got.join()}`;
+}
+
+function judgeMention(expected: Expected, got: string): string | null {
+  const text = got.toLowerCase();
+  const missing = expected.groups!.filter(
+    (words) => !words.some((word) => text.includes(word.toLowerCase())),
+  );
+  return missing.length === 0 ? null : `no word of ${missing.join(' / ')} in "${got}"`;
 }

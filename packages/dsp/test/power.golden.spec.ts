@@ -26,13 +26,17 @@ interface Channels {
   currents: string[];
 }
 
+function channelsOf(analysis: ReferenceCase['analysis']): Channels {
+  return analysis.voltages === undefined
+    ? { voltages: [analysis.voltage as string], currents: [analysis.current as string] }
+    : { voltages: analysis.voltages as string[], currents: analysis.currents as string[] };
+}
+
 /** The voltage gives the fundamental; all channels are fitted at it. */
 function measure(reference: ReferenceCase): Record<string, unknown> {
   const { analysis } = reference;
   const { sampleRateHz, samples } = readChannels(reference);
-  const { voltages, currents } = (
-    'voltages' in analysis ? analysis : { voltages: [analysis.voltage], currents: [analysis.current] }
-  ) as Channels;
+  const { voltages, currents } = channelsOf(analysis);
   const names = [...voltages, ...currents];
   const frequencyHz = findFundamental(samples[voltages[0]!]!, sampleRateHz, {
     nominalFrequencyHz: analysis.nominal_hz as number,

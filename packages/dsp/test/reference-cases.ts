@@ -3,7 +3,18 @@ import { readFileSync } from 'node:fs';
 const ROOT = new URL('../../../fixtures/reference/', import.meta.url);
 
 export interface Expected {
-  kind: 'number' | 'angle' | 'array' | 'angles' | 'integer' | 'text' | 'bool' | 'one_of' | 'poles' | 'flags';
+  kind:
+    | 'number'
+    | 'angle'
+    | 'array'
+    | 'angles'
+    | 'integer'
+    | 'text'
+    | 'bool'
+    | 'one_of'
+    | 'poles'
+    | 'flags'
+    | 'mention';
   value?: number | string | boolean | Nested | ComplexPair[];
   values?: unknown[];
   tol_abs?: number;
@@ -11,6 +22,7 @@ export interface Expected {
   tol_abs_each?: number[];
   must?: (string | string[])[];
   must_not?: string[];
+  groups?: string[][];
   need?: string;
 }
 export type Nested = (number | null)[];

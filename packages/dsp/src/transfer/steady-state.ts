@@ -16,7 +16,13 @@ export type SteadyState =
  */
 export function steadyStateOf(series: FourierSeries, h: TransferFunction): SteadyState {
   const { verdict, reason } = stability(h);
-  if (verdict !== 'stable') return { isDefined: false, verdict, reason };
+  if (verdict !== 'stable') {
+    return {
+      isDefined: false,
+      verdict,
+      reason: `There is no steady state: the stage is ${verdict}. ${reason}`,
+    };
+  }
   // A stable stage has no pole on the imaginary axis, so the response is finite everywhere on it.
   return {
     isDefined: true,
