@@ -45,11 +45,6 @@ export type { FrequencyBand, Spur, ToneOptions, TonePowers, ToneResult } from '.
 export { waveformFigures, type WaveformFigures } from './figures/waveform-figures.js';
 export { windowBoundaries } from './groups/window-boundaries.js';
 export {
-  synchronousWindows,
-  type SynchronousWindowOptions,
-  type SynchronousWindows,
-} from './groups/synchronous-windows.js';
-export {
   centredSubgroups,
   harmonicGroups,
   harmonicSubgroups,
