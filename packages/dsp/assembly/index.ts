@@ -2,3 +2,5 @@ export { transform } from './transform';
 export { chirpTransform } from './chirp';
 export { separate, unpackEven, unpackOdd } from './real-spectrum';
 export { addPowerEven, addPowerOdd, mean, pairSegments } from './power';
+export { decimate, gatherLines, mirror, weigh } from './lines';
+export { fitOrders, removeLeakage } from './leakage';

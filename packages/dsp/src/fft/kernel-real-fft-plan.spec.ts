@@ -47,7 +47,7 @@ describe('createPlanCache', () => {
     const cache = createPlanCache<object>();
     const made = new Map<number, object>();
     const ask = (length: number) => {
-      const plan = cache.get(length, () => ({}));
+      const plan = cache.get(`${length}`, length, () => ({}));
       const known = made.get(length) === plan;
       made.set(length, plan);
       return known;
@@ -61,10 +61,10 @@ describe('createPlanCache', () => {
 
   it('keeps long plans one at a time', () => {
     const cache = createPlanCache<object>();
-    const first = cache.get(2 ** 21, () => ({}));
-    expect(cache.get(2 ** 21, () => ({}))).toBe(first);
-    cache.get(16, () => ({}));
-    expect(cache.get(2 ** 21, () => ({}))).not.toBe(first);
+    const first = cache.get('long', 2 ** 21, () => ({}));
+    expect(cache.get('long', 2 ** 21, () => ({}))).toBe(first);
+    cache.get('short', 16, () => ({}));
+    expect(cache.get('long', 2 ** 21, () => ({}))).not.toBe(first);
   });
 });
 

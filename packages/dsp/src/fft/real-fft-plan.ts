@@ -25,7 +25,7 @@ export function createRealFftPlan(length: number): RealFftPlan {
   if (!Number.isInteger(length) || length < 1)
     throw new RangeError(`FFT length must be a positive integer, got ${length}`);
   if (length < SHORTEST_KERNEL_REAL_LENGTH) return createPlainRealFftPlan(length);
-  return plans.get(length, () => {
+  return plans.get(`${length}`, length, () => {
     const kernel = createKernel();
     return kernel === null ? createPlainRealFftPlan(length) : createKernelRealFftPlan(kernel, length);
   });

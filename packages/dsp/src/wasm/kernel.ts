@@ -20,6 +20,46 @@ export interface KernelFunctions {
     to: number,
   ) => void;
   mean: (from: number, length: number) => number;
+  weigh: (x: number, weights: number, count: number, out: number) => void;
+  decimate: (
+    x: number,
+    factor: number,
+    taps: number,
+    tapCount: number,
+    weights: number,
+    count: number,
+    out: number,
+  ) => void;
+  mirror: (re: number, im: number, count: number, step: number) => void;
+  gatherLines: (
+    re: number,
+    im: number,
+    starts: number,
+    weights: number,
+    taps: number,
+    factors: number,
+    count: number,
+    cosine: number,
+    sine: number,
+  ) => void;
+  fitOrders: (
+    lines: number,
+    cycles: number,
+    orders: number,
+    matrix: number,
+    scratch: number,
+    fitted: number,
+  ) => void;
+  removeLeakage: (
+    kernel: number,
+    cycles: number,
+    orders: number,
+    orderCosine: number,
+    orderSine: number,
+    count: number,
+    cosine: number,
+    sine: number,
+  ) => void;
 }
 
 /** One instance of the compiled kernels with a memory of its own, which lives as long as its plan. */
