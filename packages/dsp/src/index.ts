@@ -102,3 +102,12 @@ export { steadyStateOf, type SteadyState } from './transfer/steady-state.js';
 export { twoLevelSeries, type TwoLevelWave } from './transfer/two-level-wave.js';
 export { twoLevelSteadyState, type TwoLevelSteadyState } from './transfer/two-level-steady-state.js';
 export { routhTable, type RouthElement, type RouthRow, type RouthTable } from './transfer/routh-table.js';
+export {
+  channelUncertainty,
+  type ChannelUncertainty,
+  type UncertaintyInput,
+  type WindowsBehindFigures,
+} from './uncertainty/channel-uncertainty.js';
+export { toneUncertainty } from './uncertainty/tone-uncertainty.js';
+export { combineUncertainty, type Contribution } from './uncertainty/combine.js';
+export { roundToUncertainty, type RoundedFigure } from './uncertainty/round-to-uncertainty.js';
