@@ -68,8 +68,8 @@ function quadraticRoots(polynomial: Polynomial): Complex[] {
   if (discriminant < 0) {
     const im = Math.sqrt(-discriminant) / 2;
     return [
-      { re: -b / 2, im },
-      { re: -b / 2, im: -im },
+      { re: 0 - b / 2, im },
+      { re: 0 - b / 2, im: -im },
     ];
   }
   const larger = -(b + (b < 0 ? -1 : 1) * Math.sqrt(discriminant)) / 2;

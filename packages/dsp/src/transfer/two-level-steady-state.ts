@@ -38,15 +38,14 @@ export function twoLevelSteadyState(wave: TwoLevelWave, timeConstantS: number): 
   const whole = -Math.expm1(-period);
   const atFallingEdge = (high * rise + low * fall * (1 - rise)) / whole;
   const atRisingEdge = (low * fall + high * rise * (1 - fall)) / whole;
-  const meanSquare =
-    (arcEnergy(high, atRisingEdge, onTime) + arcEnergy(low, atFallingEdge, offTime)) / period;
+  const mean = low + duty * (high - low);
   return {
     atFallingEdge,
     atRisingEdge,
     peak: Math.max(atFallingEdge, atRisingEdge),
     minimum: Math.min(atFallingEdge, atRisingEdge),
-    mean: low + duty * (high - low),
-    rms: Math.sqrt(meanSquare),
+    mean,
+    rms: Math.sqrt(mean ** 2 + (high - low) ** 2 * acShare(onTime / 2, offTime / 2)),
     waveform: (pointCount) =>
       Float64Array.from({ length: pointCount }, (_, n) => {
         const share = n / pointCount;
@@ -57,12 +56,18 @@ export function twoLevelSteadyState(wave: TwoLevelWave, timeConstantS: number): 
   };
 }
 
-/** ∫ (level + (start − level) e^(−x))² dx from 0 to the duration, both in units of τ. */
-function arcEnergy(level: number, start: number, duration: number): number {
-  const step = start - level;
-  return (
-    level * level * duration -
-    2 * level * step * Math.expm1(-duration) -
-    (step * step * Math.expm1(-2 * duration)) / 2
-  );
+/**
+ * Mean square of the AC part over (high − low)²: D(1 − D) − (τ/T)(1 − e1)(1 − e2)/(1 − e1 e2), from τy' = u − y and the
+ * period of y, written with a = DT/(2τ), b = (1 − D)T/(2τ) and the Langevin function so that nothing cancels.
+ */
+function acShare(a: number, b: number): number {
+  const cothSum = 1 / Math.tanh(a) + 1 / Math.tanh(b);
+  return (langevin(a) + langevin(b)) / ((a + b) * (1 / a + 1 / b) * cothSum);
+}
+
+/** coth x − 1/x, by its power series where the two nearly cancel. */
+function langevin(x: number): number {
+  if (x > 0.2) return 1 / Math.tanh(x) - 1 / x;
+  const square = x * x;
+  return x * (1 / 3 - square * (1 / 45 - square * (2 / 945 - square * (1 / 4725 - square * (2 / 93555)))));
 }
