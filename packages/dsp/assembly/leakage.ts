@@ -4,29 +4,47 @@
  */
 
 /**
- * fitted[h] = Σ_i matrix[h][i]·lines[cycles·i], h, i < orders.
+ * Amplitudes of the orders h < `orders` from the lines at their places cycles·h: solves L Lᵀ x = b.
  *
- * @param matrix rows of `orders` numbers, rounded up to an even number
- * @param scratch room for one row
+ * @param doubling factor of the line of order 0 in b
+ * @param factor rows of L, each `orders` numbers rounded up to an even number; what is above the diagonal is 0
+ * @param fitted receives x, with room for an even number of orders
  */
 export function fitOrders(
   lines: usize,
   cycles: i32,
   orders: i32,
-  matrix: usize,
-  scratch: usize,
+  doubling: f64,
+  factor: usize,
   fitted: usize,
 ): void {
   const rowBytes: usize = ((orders + 1) & ~1) << 3;
-  for (let h = 0; h < orders; h++) store<f64>(scratch + (h << 3), load<f64>(lines + ((cycles * h) << 3)));
-  if ((orders & 1) === 1) store<f64>(scratch + (orders << 3), 0);
+  v128.store(fitted + rowBytes - 16, f64x2.splat(0));
+  for (let h = 0; h < orders; h++) store<f64>(fitted + (h << 3), load<f64>(lines + ((cycles * h) << 3)));
+  store<f64>(fitted, doubling * load<f64>(fitted));
   for (let h = 0; h < orders; h++) {
+    const row = factor + h * rowBytes;
     let sums = f64x2.splat(0);
-    for (let at: usize = 0; at < rowBytes; at += 16) {
-      sums = f64x2.add(sums, f64x2.mul(v128.load(matrix + at), v128.load(scratch + at)));
+    let own: f64 = 0;
+    const pairs: usize = (h & ~1) << 3;
+    for (let at: usize = 0; at < pairs; at += 16) {
+      sums = f64x2.add(sums, f64x2.mul(v128.load(row + at), v128.load(fitted + at)));
     }
-    store<f64>(fitted + (h << 3), f64x2.extract_lane(sums, 0) + f64x2.extract_lane(sums, 1));
-    matrix += rowBytes;
+    if ((h & 1) === 1) own = load<f64>(row + pairs) * load<f64>(fitted + pairs);
+    const known = own + f64x2.extract_lane(sums, 0) + f64x2.extract_lane(sums, 1);
+    const at: usize = h << 3;
+    store<f64>(fitted + at, (load<f64>(fitted + at) - known) / load<f64>(row + at));
+  }
+  for (let h = orders - 1; h >= 0; h--) {
+    const row = factor + h * rowBytes;
+    const at: usize = h << 3;
+    const solved = load<f64>(fitted + at) / load<f64>(row + at);
+    const all = f64x2.splat(solved);
+    for (let before: usize = 0; before < at; before += 16) {
+      const rest = f64x2.sub(v128.load(fitted + before), f64x2.mul(all, v128.load(row + before)));
+      v128.store(fitted + before, rest);
+    }
+    store<f64>(fitted + at, solved);
   }
 }
 

@@ -62,10 +62,9 @@ function createBench(
   const starts = kernel.allocate(Math.ceil(lineCount / 2));
   const weights = kernel.allocate(lineCount * GATHERED_LINES);
   const factors = kernel.allocate(2 * lineCount);
-  const cosineFit = kernel.allocate(rowLength * orderCount);
-  const sineFit = kernel.allocate(rowLength * orderCount);
+  const cosineFactor = kernel.allocate(rowLength * orderCount);
+  const sineFactor = kernel.allocate(rowLength * orderCount);
   const leakageKernel = kernel.allocate(2 * reach + padded);
-  const scratch = kernel.allocate(rowLength);
   const orderCosine = kernel.allocate(rowLength);
   const orderSine = kernel.allocate(rowLength);
   const cosineAt = kernel.allocate(padded);
@@ -84,16 +83,21 @@ function createBench(
       kernel.floats(weights, tables.weights.length).set(tables.weights);
       kernel.floats(factors, tables.factors.length).set(tables.factors);
       if (leakage === null) return;
-      layRows(kernel.floats(cosineFit, rowLength * orderCount), leakage.cosineFit, orderCount, rowLength);
-      layRows(kernel.floats(sineFit, rowLength * orderCount), leakage.sineFit, orderCount, rowLength);
+      layRows(
+        kernel.floats(cosineFactor, rowLength * orderCount),
+        leakage.cosineFactor,
+        orderCount,
+        rowLength,
+      );
+      layRows(kernel.floats(sineFactor, rowLength * orderCount), leakage.sineFactor, orderCount, rowLength);
       const symmetric = kernel.floats(leakageKernel, 2 * reach + padded);
       for (let i = 0; i < symmetric.length; i++) symmetric[i] = leakage.kernel[Math.abs(i - reach)] ?? 0;
     },
     writeLines(withLeakage) {
       gatherLines(frame.re, frame.im, starts, weights, GATHERED_LINES, factors, lineCount, cosineAt, sineAt);
       if (!withLeakage) return;
-      fitOrders(cosineAt, cycles, orderCount, cosineFit, scratch, orderCosine);
-      fitOrders(sineAt, cycles, orderCount, sineFit, scratch, orderSine);
+      fitOrders(cosineAt, cycles, orderCount, 2, cosineFactor, orderCosine);
+      fitOrders(sineAt, cycles, orderCount, 1, sineFactor, orderSine);
       const centre = leakageKernel + 8 * reach;
       removeLeakage(centre, cycles, orderCount, orderCosine, orderSine, lineCount, cosineAt, sineAt);
     },

@@ -1,20 +1,26 @@
-import { createSinusoidSolver } from '../model/sinusoid-solver.js';
+import { choleskyFactor, choleskySolve } from '../linear/cholesky.js';
 
 /** Kernel values below this are rounding: the lines are orthogonal then. */
 const ROUNDING = 1e-10;
+/** Least pivot of a fit, of 1: orders next to half the sample rate hardly show in one of cosine and sine. */
+const LEAST_PIVOT = 2e-9;
 
-/** What the orders of a window of a broken number of samples leak into its lines. */
+/**
+ * What the orders of a window of a broken number of samples leak into its lines. With amplitudes a_h, b_h of the orders
+ * h < orderCount (DC is order 0, order h is line ch), line k has the cosine amplitude Σ_h a_h (d(k − ch) + d(k + ch)), half
+ * of that for k = 0, and the sine amplitude Σ_h b_h (d(k − ch) − d(k + ch)).
+ */
 export interface Leakage {
-  /** Orders fitted, DC (order 0) included; order h is line cycles·h. */
   readonly orderCount: number;
-  /** d(q), q = 0, 1, …: what a line of amplitude 1 leaks into a line q lines away. */
+  /** d(q), q = 0, 1, …; even in q. */
   readonly kernel: Float64Array;
   /**
-   * Rows of orderCount numbers: amplitudes of the orders, fitted by least squares, from the amplitudes that the lines have
-   * at their places. Separately for cosines and sines, which are orthogonal about the centre of the window.
+   * Factors (linear/cholesky.ts) of the two systems that give a_h and b_h from the lines ch, that of DC doubled. These are
+   * the normal equations of the least-squares fit of all orders: about the centre of the window cosines and sines are
+   * orthogonal, and the lines are the projections.
    */
-  readonly cosineFit: Float64Array;
-  readonly sineFit: Float64Array;
+  readonly cosineFactor: Float64Array;
+  readonly sineFactor: Float64Array;
 }
 
 /**
@@ -29,39 +35,48 @@ export function windowLeakage(
   maxOrder: number,
   lineCount: number,
 ): Leakage | null {
-  const spacing = (2 * Math.PI) / windowSamples;
-  const kernel = Float64Array.from({ length: 2 * lineCount }, (_, q) =>
-    q === 0 ? 1 : Math.sin((sampleCount * q * spacing) / 2) / Math.sin((q * spacing) / 2) / sampleCount,
-  );
-  if (kernel.every((value, q) => q === 0 || Math.abs(value) < ROUNDING)) return null;
+  const kernel = new Float64Array(2 * lineCount);
+  const excess = (sampleCount - windowSamples) / windowSamples;
+  let largest = 0;
+  kernel[0] = 1;
+  for (let q = 1; q < kernel.length; q++) {
+    // sin(πq(1 + excess)) without the rounding of its whole turns.
+    const numerator = Math.sin(Math.PI * q * excess) / sampleCount;
+    kernel[q] = ((q % 2 === 0 ? 1 : -1) * numerator) / Math.sin((Math.PI * q) / windowSamples);
+    largest = Math.max(largest, Math.abs(kernel[q]!));
+  }
+  if (largest < ROUNDING) return null;
   const orderCount = Math.min(maxOrder, Math.floor((lineCount - 1) / cycles)) + 1;
-  const angles = Float64Array.from({ length: orderCount }, (_, h) => h * cycles * spacing);
-  const solve = createSinusoidSolver(angles, sampleCount);
-  const cosineFit = new Float64Array(orderCount * orderCount);
-  const sineFit = new Float64Array(orderCount * orderCount);
-  const unit = new Float64Array(orderCount);
-  for (let i = 0; i < orderCount; i++) {
-    // Σ x cos(θ(n − c)) of a line of amplitude 1.
-    unit.fill(0)[i] = i === 0 ? sampleCount : sampleCount / 2;
-    const { cosine, sine } = solve({ cosine: unit, sine: unit });
-    for (let h = 0; h < orderCount; h++) {
-      cosineFit[h * orderCount + i] = cosine[h]!;
-      sineFit[h * orderCount + i] = sine[h]!;
+  const cosineFactor = new Float64Array(orderCount * orderCount);
+  const sineFactor = new Float64Array(orderCount * orderCount);
+  for (let h = 0; h < orderCount; h++) {
+    for (let i = 0; i <= h; i++) {
+      const near = kernel[cycles * (h - i)]!;
+      const far = kernel[cycles * (h + i)]!;
+      cosineFactor[h * orderCount + i] = near + far;
+      sineFactor[h * orderCount + i] = near - far;
     }
   }
-  return { orderCount, kernel, cosineFit, sineFit };
+  sineFactor[0] = 1;
+  choleskyFactor(cosineFactor, orderCount, LEAST_PIVOT);
+  choleskyFactor(sineFactor, orderCount, LEAST_PIVOT);
+  return { orderCount, kernel, cosineFactor, sineFactor };
 }
 
 /** Takes the leakage of the orders out of line amplitudes about the centre of the window, in place. */
 export function removeLeakage(
-  { orderCount, kernel, cosineFit, sineFit }: Leakage,
+  { orderCount, kernel, cosineFactor, sineFactor }: Leakage,
   cycles: number,
   cosine: Float64Array,
   sine: Float64Array,
 ): void {
-  const orderCosine = fitOrders(cosineFit, orderCount, cosine, cycles);
-  const orderSine = fitOrders(sineFit, orderCount, sine, cycles);
-  for (let h = 0; h < orderCount; h++) {
+  const orders = Array.from({ length: orderCount }, (_, h) => h);
+  const projected = (lines: Float64Array) => Float64Array.from(orders, (h) => lines[h * cycles]!);
+  const cosines = projected(cosine);
+  cosines[0]! *= 2;
+  const orderCosine = choleskySolve(cosineFactor, orderCount, cosines);
+  const orderSine = choleskySolve(sineFactor, orderCount, projected(sine));
+  for (const h of orders) {
     const line = h * cycles;
     for (let k = 0; k < cosine.length; k++) {
       const near = kernel[Math.abs(k - line)]!;
@@ -73,12 +88,4 @@ export function removeLeakage(
     cosine[line]! += orderCosine[h]!;
     sine[line]! += orderSine[h]!;
   }
-}
-
-function fitOrders(matrix: Float64Array, size: number, lines: Float64Array, cycles: number): Float64Array {
-  const fitted = new Float64Array(size);
-  for (let h = 0; h < size; h++) {
-    for (let i = 0; i < size; i++) fitted[h]! += matrix[h * size + i]! * lines[i * cycles]!;
-  }
-  return fitted;
 }

@@ -1,14 +1,21 @@
 import { deviationAt, type FrequencyTrack } from '../fundamental/frequency-track.js';
+import { meanFrequencyHz } from '../fundamental/local-frequency.js';
 
-/** Local frequency differences below this share are met by windows of constant length (0.03 % is the tolerance). */
-const STEADY_SHARE = 2e-4;
 /** Synchronism tolerance of IEC 61000-4-7, 4.4.1. */
 const SYNC_TOLERANCE = 3e-4;
+/** Windows that follow the frequency are whole multiples of this share of the mean window long. */
+const LENGTH_STEP = 2e-5;
+/** Differences within this many standard deviations of the noise of the track do not count … */
+const NOISE_DEVIATIONS = 4;
+/** … as long as they stay below this share of the frequency. */
+const LARGEST_STEADY_SHARE = 2e-4;
 
 /**
  * Positions (in samples, fractional) of the boundaries of back-to-back windows of `cycles` periods, the first one at
- * the first sample; a last incomplete window is dropped (IEC 61000-4-7, 4.4.1). A drifting fundamental is followed by
- * its phase, so the windows stay gapless and hold whole cycles.
+ * the first sample; a last incomplete window is dropped (IEC 61000-4-7, 4.4.1). While the frequency is steady within the
+ * noise of its track, all windows have the length of its mean. Otherwise the windows follow the phase of the fundamental,
+ * so that they stay gapless and hold whole cycles: each ends where the phase asks for it within 1e-5 of its length, a
+ * thirtieth of the tolerance, so that few different lengths occur (each needs tables of its own).
  *
  * @returns windows + 1 positions; a single 0 when no whole window fits
  */
@@ -21,15 +28,48 @@ export function windowBoundaries(
 ): Float64Array {
   const length = (cycles * sampleRateHz) / frequencyHz;
   const end = sampleCount + Math.max(0.5, SYNC_TOLERANCE * length);
-  const steady =
-    track === null || track.localHz.every((f) => Math.abs(f - frequencyHz) <= STEADY_SHARE * frequencyHz);
+  const followed = track !== null && !isSteady(track, sampleRateHz, frequencyHz, length) ? track : null;
+  const step = LENGTH_STEP * length;
   const out = [0];
   for (let j = 1; ; j++) {
-    const next = steady ? j * length : trackedPosition(track, j * cycles, sampleRateHz, out[j - 1]! + length);
-    if (!(next <= end) || next - out[j - 1]! < length / 2) break;
+    const last = out[j - 1]!;
+    const asked =
+      followed === null ? j * length : trackedPosition(followed, j * cycles, sampleRateHz, last + length);
+    const next = followed === null ? asked : last + step * Math.round((asked - last) / step);
+    if (!(next <= end) || next - last < length / 2) break;
     out.push(next);
   }
   return Float64Array.from(out);
+}
+
+function isSteady(
+  track: FrequencyTrack,
+  sampleRateHz: number,
+  frequencyHz: number,
+  windowSamples: number,
+): boolean {
+  // Phase noise of a frame that puts a window off by so much of its cycles.
+  const noise = phaseNoise(track) / ((2 * Math.PI * frequencyHz * windowSamples) / sampleRateHz);
+  const limit = Math.min(LARGEST_STEADY_SHARE, Math.max(LENGTH_STEP, NOISE_DEVIATIONS * noise));
+  const last = track.centres[track.centres.length - 1]!;
+  for (let from = 0; from < last; from += windowSamples) {
+    const local = meanFrequencyHz(track, sampleRateHz, from, from + windowSamples);
+    if (Math.abs(local - frequencyHz) > limit * frequencyHz) return false;
+  }
+  return true;
+}
+
+/**
+ * Standard deviation of the phases of single frames in radians, from their second differences, which a slow drift hardly
+ * enters: the variance of x₁ − 2x₂ + x₃ is six times that of x.
+ */
+function phaseNoise({ deviation }: FrequencyTrack): number {
+  const count = deviation.length - 2;
+  let squares = 0;
+  for (let i = 0; i < count; i++) {
+    squares += (deviation[i]! - 2 * deviation[i + 1]! + deviation[i + 2]!) ** 2;
+  }
+  return count > 0 ? Math.sqrt(squares / (6 * count)) : 0;
 }
 
 function trackedPosition(track: FrequencyTrack, cycles: number, sampleRateHz: number, guess: number): number {

@@ -20,7 +20,9 @@ function shape(oversampling: number): number {
 export function gatheringKernel(distance: number, oversampling: number): number {
   const root = Math.sqrt(Math.max(0, (GATHERED_LINES / 2) ** 2 - distance * distance));
   const b = shape(oversampling);
-  return root === 0 ? b / Math.PI : Math.sinh(b * root) / (Math.PI * root);
+  if (root === 0) return b / Math.PI;
+  const grown = Math.exp(b * root);
+  return (grown - 1 / grown) / (2 * Math.PI * root);
 }
 
 /** The weight of a sample `position` samples from the centre. @param size length of the transform */

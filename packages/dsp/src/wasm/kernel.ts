@@ -46,8 +46,8 @@ export interface KernelFunctions {
     lines: number,
     cycles: number,
     orders: number,
-    matrix: number,
-    scratch: number,
+    doubling: number,
+    factor: number,
     fitted: number,
   ) => void;
   removeLeakage: (
