@@ -21,7 +21,8 @@ let judged: Judged;
 beforeAll(async () => {
   test = await startTestApp();
   folder = await mkdtemp(join(tmpdir(), 'overtally-pdf-'));
-  const flags = [{ code: 'dip', severity: 'warning' as const, message: 'Two windows left out: supply dip' }];
+  const message = 'Two windows left out: supply dip';
+  const flags = [{ code: 'dip', severity: 'warning' as const, message, evidence: null }];
   judged = await newJudged(test, dimmerChannel({ flags }), {
     ...{ name: 'Bench dimmer, 40 % setting', eut: 'DM-4 dimmer, no. 0031', fileName: 'dimmer-40.csv' },
     fileSha256: createHash('sha256').update('dimmer').digest('hex'),

@@ -62,8 +62,8 @@ export class AnalysesController {
   @RequirePermission('analysis.read', { resource: 'analysis' })
   @ApiOperation({ summary: 'One-sided rms amplitude spectrum of a channel, thinned by the largest line' })
   @ZodResponse({ status: 200, type: SpectrumDto })
-  @ApiProblem(409, 'The analysis is not done')
-  spectrum(@Param('id') id: string, @Query() { channel, maxPoints }: SpectrumQueryDto) {
-    return present(this.analyses.spectrum(id, channel, maxPoints));
+  @ApiProblem(409, 'The analysis is not done, or too old to know its noise bandwidth')
+  spectrum(@Param('id') id: string, @Query() query: SpectrumQueryDto) {
+    return present(this.analyses.spectrum(id, query));
   }
 }

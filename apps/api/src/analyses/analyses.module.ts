@@ -4,11 +4,13 @@ import { AnalysesController } from './analyses.controller.js';
 import { AnalysesRepository } from './analyses.repository.js';
 import { AnalysesService } from './analyses.service.js';
 import { AnalyseRecordingHandler } from './computing/analyse-recording.handler.js';
+import { SeriesController } from './series/series.controller.js';
+import { SeriesService } from './series/series.service.js';
 
 @Module({
   imports: [RecordingsModule],
-  controllers: [AnalysesController],
-  providers: [AnalysesService, AnalysesRepository, AnalyseRecordingHandler],
+  controllers: [AnalysesController, SeriesController],
+  providers: [AnalysesService, AnalysesRepository, SeriesService, AnalyseRecordingHandler],
   exports: [AnalysesService, AnalyseRecordingHandler],
 })
 export class AnalysesModule {}

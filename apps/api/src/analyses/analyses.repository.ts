@@ -13,7 +13,7 @@ export type AnalysisChannelRow = typeof analysisChannels.$inferSelect;
 export type HarmonicRow = typeof harmonics.$inferSelect;
 type Results = Extract<AnalyseTaskResult, { ok: true }>;
 
-/** PostgreSQL takes at most 65535 parameters in one statement; a row of harmonics has 12. */
+/** PostgreSQL takes at most 65535 parameters in one statement; a row of harmonics has 15. */
 const harmonicsPerInsert = 2000;
 
 /** Rows of analyses and their figures. */
@@ -103,10 +103,14 @@ export class AnalysesRepository {
   }
 
   /** Writes the figures of a finished analysis. */
-  async finish(tx: Tx, id: string, { engineVersion, settings, channels: figures }: Results): Promise<void> {
+  async finish(tx: Tx, id: string, { channels: figures, ...results }: Results): Promise<void> {
+    const { engineVersion, settings, power, threePhase } = results;
     await tx
       .update(analyses)
-      .set({ status: 'done', progress: 1, engineVersion, settings, finishedAt: new Date() })
+      .set({
+        ...{ status: 'done', progress: 1, finishedAt: new Date() },
+        ...{ engineVersion, settings, power, threePhase },
+      })
       .where(eq(analyses.id, id));
     await tx
       .insert(analysisChannels)

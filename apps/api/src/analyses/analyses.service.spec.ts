@@ -12,7 +12,7 @@ class RepositoryDuringTheEnd {
     return { id: 'a', status: 'done', createdAt: new Date(0), finishedAt: new Date(1) };
   }
 
-  channelsOf = () => Promise.resolve(this.isDone ? [{ index: 0 }] : []);
+  channelsOf = () => Promise.resolve(this.isDone ? [{ index: 0, windows: null, flags: [] }] : []);
   harmonicsOf = () => Promise.resolve(this.isDone ? [{ channelIndex: 0, order: 1 }] : []);
 }
 

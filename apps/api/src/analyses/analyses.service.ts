@@ -5,6 +5,7 @@ import {
   type ReadProblem,
   type Settings,
   type Spectrum,
+  type spectrumQuerySchema,
 } from '@overtally/contracts';
 import type { Database } from '@overtally/db';
 import { z } from 'zod';
@@ -14,7 +15,7 @@ import { DATABASE } from '../database/database.tokens.js';
 import { AnalysisRunsService } from '../recordings/analysis-runs.service.js';
 import { npyCount, readNpy } from '../storage/npy.js';
 import { Storage } from '../storage/storage.js';
-import { AnalysesRepository } from './analyses.repository.js';
+import { AnalysesRepository, type AnalysisChannelRow } from './analyses.repository.js';
 import { toAnalysis, toAnalysisHead } from './analysis-view.js';
 import { thinned } from './spectrum.js';
 
@@ -89,22 +90,37 @@ export class AnalysesService {
     return this.get(id);
   }
 
-  /** The spectrum of one channel in at most `maxPoints` lines. */
-  async spectrum(id: string, index: number, maxPoints: number): Promise<Spectrum> {
+  /**
+   * Stored figures of one channel of an analysis that is done.
+   * @throws 404 for a channel that is not there, 409 until the analysis is done
+   */
+  async channel(id: string, index: number): Promise<AnalysisChannelRow> {
     const channel = (await this.repository.channelsOf(id)).find((row) => row.index === index);
-    if (channel === undefined) {
-      const analysis = await this.repository.find(id);
-      throw analysis?.status === 'done'
-        ? problem(404, 'no-such-channel', `The analysis has no channel ${index}`)
-        : problem(409, 'not-done', 'The analysis has no spectrum until it is done');
-    }
-    const { spectrumKey, spectrumStartHz, spectrumStepHz, spectrumWindow, unit } = channel;
+    if (channel !== undefined) return channel;
+    const analysis = await this.repository.find(id);
+    throw analysis?.status === 'done'
+      ? problem(404, 'no-such-channel', `The analysis has no channel ${index}`)
+      : problem(409, 'not-done', 'The analysis has no figures until it is done');
+  }
+
+  /** The spectrum of one channel in at most `maxPoints` lines, as rms of a line or per root of the bandwidth. */
+  async spectrum(
+    id: string,
+    { channel: index, maxPoints, scaling }: z.infer<typeof spectrumQuerySchema>,
+  ): Promise<Spectrum> {
+    const channel = await this.channel(id, index);
+    const { spectrumKey, spectrumStartHz, spectrumStepHz, spectrumNoiseBandwidthHz, unit } = channel;
+    const divisor = scaling === 'density' ? Math.sqrt(knownBandwidth(channel)) : 1;
     const rms = await readNpy(this.storage, spectrumKey, 0, await npyCount(this.storage, spectrumKey));
+    for (let k = 0; k < rms.length; k += 1) rms[k]! /= divisor;
     return {
       channel: index,
-      unit,
-      window: windowNameSchema.parse(spectrumWindow),
+      unit: scaling === 'density' ? `${unit}/√Hz` : unit,
+      window: windowNameSchema.parse(channel.spectrumWindow),
       resolutionHz: spectrumStepHz,
+      noiseBandwidthHz: spectrumNoiseBandwidthHz,
+      segments: channel.spectrumSegments,
+      scaling,
       ...thinned(rms, spectrumStartHz, spectrumStepHz, maxPoints),
     };
   }
@@ -112,4 +128,10 @@ export class AnalysesService {
 
 function noSuchAnalysis() {
   return problem(404, 'not-found', 'There is no such analysis');
+}
+
+function knownBandwidth({ spectrumNoiseBandwidthHz }: AnalysisChannelRow): number {
+  if (spectrumNoiseBandwidthHz !== null) return spectrumNoiseBandwidthHz;
+  const detail = 'This analysis was made before the noise bandwidth was kept; analyse the recording again';
+  throw problem(409, 'no-noise-bandwidth', detail);
 }

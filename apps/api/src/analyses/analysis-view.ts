@@ -1,9 +1,10 @@
 import type { Analysis, ChannelAnalysis } from '@overtally/contracts';
 import { grouped } from '../recordings/grouped.js';
+import { completed } from './completed-channel.js';
 import type { AnalysisChannelRow, AnalysisRecord, HarmonicRow } from './analyses.repository.js';
 
 /** The analysis as the contract words it, without its figures. */
-export function toAnalysisHead(row: AnalysisRecord): Omit<Analysis, 'channels' | 'power'> {
+export function toAnalysisHead(row: AnalysisRecord): Omit<Analysis, 'channels' | 'power' | 'threePhase'> {
   return {
     id: row.id,
     recordingId: row.recordingId,
@@ -30,15 +31,18 @@ export function toAnalysis(
   return {
     ...toAnalysisHead(row),
     channels: channels.map((channel) => toChannel(channel, byChannel.get(channel.index) ?? [])),
-    power: [],
+    power: row.power,
+    threePhase: row.threePhase,
   };
 }
 
 function toChannel(row: AnalysisChannelRow, orders: HarmonicRow[]): ChannelAnalysis {
-  const { analysisId: _id, spectrumKey: _key, spectrumWindow: _window, ...figures } = row;
-  const { spectrumStartHz: _start, spectrumStepHz: _step, ...channel } = figures;
-  return {
+  const { analysisId: _id, seriesKey: _seriesKey, series: _series, ...figures } = row;
+  const { spectrumKey: _spectrumKey, spectrumWindow: _window, ...rest } = figures;
+  const { spectrumStartHz: _start, spectrumStepHz: _step, ...others } = rest;
+  const { spectrumNoiseBandwidthHz: _bandwidth, spectrumSegments: _segments, ...channel } = others;
+  return completed({
     ...channel,
     harmonics: orders.map(({ analysisId: _analysis, channelIndex: _channel, ...order }) => order),
-  };
+  });
 }

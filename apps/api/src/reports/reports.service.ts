@@ -1,7 +1,15 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { CreateReport, ProjectRole, Report, ReportStatus, UpdateReport } from '@overtally/contracts';
+import type {
+  CreateReport,
+  ProjectRole,
+  Report,
+  ReportContent,
+  ReportStatus,
+  UpdateReport,
+} from '@overtally/contracts';
 import type { Database, Tx } from '@overtally/db';
 import { z } from 'zod';
+import { completed } from '../analyses/completed-channel.js';
 import { decodeCursor, pageOfRows } from '../common/paging.js';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
@@ -35,7 +43,8 @@ export class ReportsService {
     const [row, events] = await Promise.all([this.repository.find(id), this.repository.eventsOf(id)]);
     if (!row) throw noSuchReport();
     const project = { id: row.projectId, name: row.projectName, customer: row.customer };
-    const content = row.content ?? (await this.contents.gather(project, row.verdictIds));
+    const frozen = row.content && withCompletedChannels(row.content);
+    const content = frozen ?? (await this.contents.gather(project, row.verdictIds));
     return toReport(row, content, events);
   }
 
@@ -127,3 +136,12 @@ export class ReportsService {
 }
 
 const noSuchReport = () => problem(404, 'not-found', 'There is no such report');
+
+/** Frozen content may be older than the engine of today, whose figures it then lacks. */
+function withCompletedChannels(content: ReportContent): ReportContent {
+  const sections = content.sections.map((section) => ({
+    ...section,
+    analysis: { ...section.analysis, channel: completed(section.analysis.channel) },
+  }));
+  return { ...content, sections };
+}

@@ -1,7 +1,17 @@
 import { workerData } from 'node:worker_threads';
+import { move, transferableSymbol, valueSymbol } from 'piscina';
 import { analyseTask, type AnalyseTaskInput } from '../analyses/computing/analyse-task.js';
+import { partTask, type PartTaskInput } from '../analyses/computing/part-task.js';
+import { arrayMemory } from '../jobs/array-memory.js';
+import type {
+  ComputeEnvironment,
+  ComputeOutcome,
+  ComputeRequest,
+  FromThread,
+} from '../jobs/compute-request.js';
 import type { ComputeContext } from '../jobs/compute-task.js';
-import type { ComputeEnvironment, ComputeRequest } from '../jobs/compute-request.js';
+import { Delegation } from '../jobs/delegation.js';
+import { toPlainError } from '../jobs/plain-error.js';
 import { readTask, type ReadTaskInput } from '../recordings/reading/read-task.js';
 import { openStorage } from '../storage/storage-location.js';
 import { lowerThreadPriority } from './lower-priority.js';
@@ -12,26 +22,47 @@ lowerThreadPriority();
 
 /** Entry point of a compute thread: runs one task at a time. */
 export default async function compute(request: ComputeRequest): Promise<unknown> {
-  const { storage, scratchFolder } = workerData as ComputeEnvironment;
+  const outcome = await outcomeOf(request);
+  // Long arrays are handed over, not copied.
+  return move({ [valueSymbol]: outcome, [transferableSymbol]: arrayMemory(outcome) });
+}
+
+async function outcomeOf(request: ComputeRequest): Promise<ComputeOutcome> {
+  try {
+    return { ok: true, result: await perform(request, contextOf(request)) };
+  } catch (error) {
+    return { ok: false, error: toPlainError(error) };
+  } finally {
+    request.port.close();
+  }
+}
+
+function perform({ task, input }: ComputeRequest, context: ComputeContext): Promise<unknown> {
+  switch (task) {
+    case 'read':
+      return readTask(input as ReadTaskInput, context);
+    case 'analyse':
+      return analyseTask(input as AnalyseTaskInput, context);
+    case 'analysis-part':
+      return partTask(input as PartTaskInput, context);
+  }
+}
+
+function contextOf({ stopFlag, port }: ComputeRequest): ComputeContext {
+  const { storage, scratchFolder, workers } = workerData as ComputeEnvironment;
+  const delegation = new Delegation(port);
   let reportedAt = 0;
-  const context: ComputeContext = {
+  return {
     storage: openStorage(storage),
     scratchFolder,
+    workers,
     reportProgress: (fraction) => {
       if (Date.now() - reportedAt < progressIntervalMs) return;
       reportedAt = Date.now();
-      request.progressPort.postMessage(Math.min(1, Math.max(0, fraction)));
+      const message: FromThread = { kind: 'progress', fraction: Math.min(1, Math.max(0, fraction)) };
+      port.postMessage(message);
     },
-    shouldStop: () => Atomics.load(request.stopFlag, 0) === 1,
+    shouldStop: () => Atomics.load(stopFlag, 0) === 1,
+    delegate: (task, input, onProgress) => delegation.run(task, input, onProgress),
   };
-  try {
-    switch (request.task) {
-      case 'read':
-        return await readTask(request.input as ReadTaskInput, context);
-      case 'analyse':
-        return await analyseTask(request.input as AnalyseTaskInput, context);
-    }
-  } finally {
-    request.progressPort.close();
-  }
 }

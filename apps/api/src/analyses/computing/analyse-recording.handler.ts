@@ -63,7 +63,9 @@ export class AnalyseRecordingHandler implements JobHandler<Payload> {
       await this.repository.begin(tx, id);
       const channels = await this.repository.recordedChannels(tx, recording.id);
       const outputPrefix = analysisPrefix(recording.id, id);
-      const input = { channels, sampleRateHz, sampleCount, settings: analysis.settings, outputPrefix };
+      const { settings } = analysis;
+      const { warnings } = recording;
+      const input = { channels, sampleRateHz, sampleCount, warnings, settings, outputPrefix };
       return { recordingId: recording.id, input };
     });
   }

@@ -1,15 +1,27 @@
-import type { ChannelAnalysis, Quantity, ReadProblem, Settings } from '@overtally/contracts';
+import type {
+  ChannelAnalysis,
+  Flag,
+  PowerPair,
+  Quantity,
+  ReadProblem,
+  ReadWarning,
+  Settings,
+  ThreePhase,
+} from '@overtally/contracts';
 import {
   AnalysisInputError,
-  analyseRecord,
-  AnalysisStopped,
-  type ChannelAnalysis as EngineChannel,
-  type ChannelInput,
+  analyseSource,
+  type AnalysisPart,
+  type ChannelDescription,
+  type PartResult,
+  type RecordAnalysis,
 } from '@overtally/dsp';
 import { ComputeStopped, type ComputeContext } from '../../jobs/compute-task.js';
-import { putNpy, readNpy } from '../../storage/npy.js';
-import { missingValuesProblem } from './missing-values.js';
-import { tooLongProblem } from './record-length.js';
+import { findMissingValues } from './find-missing-values.js';
+import type { PartTaskInput } from './part-task.js';
+import { readingFlags } from './reading-flags.js';
+import { spanInSamples, spanProblem, type SampleSpan } from './span.js';
+import { storeChannel, type StoredArrays } from './store-channel.js';
 
 export interface AnalyseTaskChannel {
   index: number;
@@ -20,6 +32,8 @@ export interface AnalyseTaskChannel {
   offset: number;
   lowestCode: number | null;
   highestCode: number | null;
+  /** Of the whole recording. */
+  missingValues: number;
   samplesKey: string;
 }
 
@@ -27,16 +41,11 @@ export interface AnalyseTaskInput {
   channels: AnalyseTaskChannel[];
   sampleRateHz: number;
   sampleCount: number;
+  /** What the reader noticed. */
+  warnings: ReadWarning[];
   settings: Settings;
-  /** Prefix of the keys under which the spectra are stored. */
+  /** Prefix of the keys under which spectra and series are stored. */
   outputPrefix: string;
-}
-
-export interface StoredSpectrum {
-  spectrumKey: string;
-  spectrumWindow: string;
-  spectrumStartHz: number;
-  spectrumStepHz: number;
 }
 
 export type AnalyseTaskResult =
@@ -45,115 +54,90 @@ export type AnalyseTaskResult =
       engineVersion: string;
       /** The settings with every default filled in. */
       settings: Settings;
-      channels: (ChannelAnalysis & StoredSpectrum)[];
+      channels: (ChannelAnalysis & StoredArrays)[];
+      power: PowerPair[];
+      threePhase: ThreePhase[];
     }
   | { ok: false; problem: ReadProblem };
 
-/** Analyses stored samples and stores the spectra; samples that cannot be analysed are a result, not an error. */
+/**
+ * Analyses stored samples and stores spectra and series; samples that cannot be analysed are a result, not an error. The
+ * parts of the analysis are computed by other threads, each of which reads the samples it needs.
+ */
 export async function analyseTask(
   input: AnalyseTaskInput,
   context: ComputeContext,
 ): Promise<AnalyseTaskResult> {
-  const { settings, sampleRateHz } = input;
-  const { first, end } = spanInSamples(input);
-  if (end - first < 2) return { ok: false, problem: spanProblem(input) };
-  const tooLong = tooLongProblem(end - first, input.channels.length, sampleRateHz);
-  if (tooLong !== null) return { ok: false, problem: tooLong };
-  const channels: ChannelInput[] = [];
-  for (const channel of input.channels) {
-    const samples = await loadScaled(channel, first, end, context);
-    const problem = missingValuesProblem(channel.name, samples, first, sampleRateHz);
-    if (problem !== null) return { ok: false, problem };
-    channels.push({ ...channel, samples, ...codesInUnit(channel) });
-  }
+  const span = spanInSamples(input);
+  if (span.end - span.first < 2) return { ok: false, problem: spanProblem(input) };
+  const missing = await findMissingValues(input.channels, span, input.sampleRateHz, context);
+  if (missing !== null) return { ok: false, problem: missing };
   try {
-    const result = analyseRecord(
-      { sampleRateHz, channels, settings },
-      { onProgress: context.reportProgress, shouldStop: context.shouldStop },
-    );
-    const stored = [];
-    for (const channel of result.channels)
-      stored.push(await storeSpectrum(channel, input.outputPrefix, context));
-    const { cyclesPerWindow, ...resolved } = result.settings;
-    const used = { ...resolved, ...(cyclesPerWindow !== null && { cyclesPerWindow }) };
-    return {
-      ok: true,
-      engineVersion: result.engineVersion,
-      settings: { ...used, ...(settings.span && { span: settings.span }) },
-      channels: stored,
-    };
+    return await store(input, span, await analyse(input, span, context), context);
   } catch (error) {
-    if (error instanceof AnalysisStopped) throw new ComputeStopped();
-    if (error instanceof AnalysisInputError) return { ok: false, problem: inputProblem(error) };
+    if (hasName(error, 'AnalysisStopped')) throw new ComputeStopped();
+    if (hasName(error, 'AnalysisInputError')) return { ok: false, problem: inputProblem(error) };
     throw error;
   }
 }
 
-function spanInSamples({ settings: { span }, sampleRateHz, sampleCount }: AnalyseTaskInput) {
-  if (span === undefined) return { first: 0, end: sampleCount };
-  return {
-    first: Math.min(sampleCount, Math.round(span.fromS * sampleRateHz)),
-    end: Math.min(sampleCount, Math.round(span.toS * sampleRateHz)),
+function analyse(
+  { settings, sampleRateHz, channels }: AnalyseTaskInput,
+  { first, end }: SampleSpan,
+  { reportProgress, shouldStop, delegate, workers }: ComputeContext,
+): Promise<RecordAnalysis> {
+  const stored = new Map(
+    channels.map(({ index, samplesKey, gain, offset }) => [index, { samplesKey, gain, offset, first }]),
+  );
+  const runPart = async (part: AnalysisPart, onProgress: (fraction: number) => void): Promise<PartResult> => {
+    const task: PartTaskInput = { part, samples: stored.get(part.channel.index)! };
+    return (await delegate('analysis-part', task, onProgress)) as PartResult;
   };
+  const source = { sampleRateHz, sampleCount: end - first, channels: channels.map(described), settings };
+  return analyseSource(source, { runPart, parallel: workers, onProgress: reportProgress, shouldStop });
 }
 
-/** A channel's part in its unit. */
-async function loadScaled(
-  { samplesKey, gain, offset }: AnalyseTaskChannel,
-  first: number,
-  end: number,
-  { storage, shouldStop }: ComputeContext,
-): Promise<Float64Array> {
-  if (shouldStop()) throw new ComputeStopped();
-  const samples = await readNpy(storage, samplesKey, first, end);
-  for (let i = 0; i < samples.length; i += 1) samples[i] = samples[i]! * gain + offset;
-  return samples;
-}
-
-function codesInUnit({ lowestCode, highestCode, gain, offset }: AnalyseTaskChannel) {
-  if (lowestCode === null || highestCode === null) return { lowestCode: undefined, highestCode: undefined };
+function described(channel: AnalyseTaskChannel): ChannelDescription {
+  const { index, name, quantity, unit, lowestCode, highestCode, gain, offset } = channel;
+  if (lowestCode === null || highestCode === null) return { index, name, quantity, unit };
   const ends = [lowestCode * gain + offset, highestCode * gain + offset];
-  return { lowestCode: Math.min(...ends), highestCode: Math.max(...ends) };
+  return { index, name, quantity, unit, lowestCode: Math.min(...ends), highestCode: Math.max(...ends) };
 }
 
-async function storeSpectrum(
-  channel: EngineChannel,
-  prefix: string,
-  { storage }: ComputeContext,
-): Promise<ChannelAnalysis & StoredSpectrum> {
-  const { spectrum, ...figures } = channel;
-  const spectrumKey = `${prefix}/spectrum-${channel.index}.npy`;
-  await putNpy(storage, spectrumKey, spectrum.rms);
+async function store(
+  { settings, warnings, sampleRateHz, outputPrefix }: AnalyseTaskInput,
+  span: SampleSpan,
+  analysis: RecordAnalysis,
+  { storage, shouldStop }: ComputeContext,
+): Promise<AnalyseTaskResult> {
+  const flags = readingFlags(warnings, span, sampleRateHz);
+  const channels: (ChannelAnalysis & StoredArrays)[] = [];
+  for (const channel of analysis.channels) {
+    if (shouldStop()) throw new ComputeStopped();
+    const stored = await storeChannel(storage, outputPrefix, channel);
+    channels.push({ ...stored, flags: bySeverity([...stored.flags, ...flags]) });
+  }
+  const { engineVersion, power, threePhase } = analysis;
+  const { cyclesPerWindow, ...resolved } = analysis.settings;
+  const used = { ...resolved, ...(cyclesPerWindow !== null && { cyclesPerWindow }) };
   return {
-    ...figures,
-    quantity: channel.quantity as Quantity,
-    interharmonics: channel.interharmonics.flatMap(({ betweenOrders, groupRms, centredSubgroupRms }) =>
-      groupRms === null || centredSubgroupRms === null
-        ? []
-        : [{ betweenOrders, groupRms, centredSubgroupRms }],
-    ),
-    spectrumKey,
-    spectrumWindow: spectrum.window,
-    spectrumStartHz: spectrum.startHz,
-    spectrumStepHz: spectrum.stepHz,
+    ok: true,
+    ...{ engineVersion, channels, power, threePhase },
+    settings: { ...used, ...(settings.span && { span: settings.span }) },
   };
 }
 
-function spanProblem({ settings: { span }, sampleRateHz, sampleCount }: AnalyseTaskInput): ReadProblem {
-  const duration = `${sampleCount / sampleRateHz} s`;
-  return span === undefined
-    ? {
-        code: 'record-too-short',
-        message: `The record holds ${sampleCount} ${sampleCount === 1 ? 'sample' : 'samples'}; an analysis needs at least 2.`,
-        cure: 'Capture a longer record; for the mains profile at least 10 cycles.',
-      }
-    : {
-        code: 'span-outside-record',
-        message: `From ${span.fromS} s to ${span.toS} s the record of ${duration} holds fewer than 2 samples.`,
-        cure: `Choose a span within 0 s and ${duration}.`,
-      };
+const severities: Flag['severity'][] = ['error', 'warning', 'info'];
+
+function bySeverity(flags: Flag[]): Flag[] {
+  return flags.sort((a, b) => severities.indexOf(a.severity) - severities.indexOf(b.severity));
 }
 
-function inputProblem({ message }: AnalysisInputError): ReadProblem {
+/** By name: an error that comes from another thread keeps its name but not its class. */
+function hasName(error: unknown, name: string): error is Error {
+  return error instanceof Error && error.name === name;
+}
+
+function inputProblem({ message }: Pick<AnalysisInputError, 'message'>): ReadProblem {
   return { code: 'cannot-be-analysed', message, cure: 'Change the settings or the span and analyse again.' };
 }

@@ -3,6 +3,8 @@ import {
   analysisSchema,
   createAnalysisSchema,
   pageQuerySchema,
+  seriesQuerySchema,
+  seriesSchema,
   spectrumQuerySchema,
   spectrumSchema,
 } from '@overtally/contracts';
@@ -14,3 +16,5 @@ export class AnalysesQueryDto extends createZodDto(pageQuerySchema) {}
 export class CreateAnalysisDto extends createZodDto(createAnalysisSchema) {}
 export class SpectrumQueryDto extends createZodDto(spectrumQuerySchema) {}
 export class SpectrumDto extends createZodDto(spectrumSchema) {}
+export class SeriesQueryDto extends createZodDto(seriesQuerySchema) {}
+export class SeriesDto extends createZodDto(seriesSchema) {}
