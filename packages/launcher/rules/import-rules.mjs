@@ -1,6 +1,7 @@
 /**
  * Which part of the product may import what. Arrows go one way:
- * web -> contracts, dsp, limits; api -> contracts, db, ingest, dsp, limits; packages never import apps.
+ * web -> contracts, dsp, limits; api -> contracts, db, ingest, dsp, limits; cases -> dsp, ingest; packages never
+ * import apps.
  */
 import { readdirSync } from 'node:fs';
 import { join } from 'node:path';
@@ -25,6 +26,7 @@ const rooms = [
   { folder: 'packages/dsp', ours: [], onlyOutside: ['fft.js'] },
   { folder: 'packages/limits', ours: ['contracts'], typesOnly: ['contracts'], onlyOutside: [] },
   { folder: 'packages/ingest', ours: ['contracts'], typesOnly: ['contracts'], forbidden: fileAndNetwork },
+  { folder: 'packages/cases', ours: ['dsp', 'ingest'] },
   { folder: 'db', ours: ['contracts'] },
   { folder: 'fixtures', ours: [] },
   { folder: 'apps/web', ours: ['contracts', 'dsp', 'limits'], forbidden: ['pg', 'drizzle-orm'] },
