@@ -1,6 +1,7 @@
 export { analyseRecord } from './analyse-record.js';
 export { analyseSource } from './analyse-source.js';
 export { engineVersion } from './stages/record-stages.js';
+export { DEFAULT_MAX_ORDER, DEFAULT_THD_ORDER } from './profiles/resolve-settings.js';
 export { AnalysisInputError, AnalysisStopped } from './errors.js';
 export type * from './types.js';
 export type { AnalysisPart, AnalyseSourceOptions, PartResult, RunPart } from './parts/part-types.js';

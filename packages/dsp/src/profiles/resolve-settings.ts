@@ -3,11 +3,13 @@ import type { AnalysisSettings, ChannelDescription, ResolvedSettings } from '../
 import type { WindowName } from '../windows/window-samples.js';
 import { checkChannelSettings } from './check-channel-settings.js';
 
-const DEFAULT_MAX_ORDER = 50;
+/** Highest order listed where none is stated. */
+export const DEFAULT_MAX_ORDER = 50;
 const HIGHEST_MAX_ORDER = 200;
 /** 200 ms at 1 MHz, the highest nominal frequency that is asked for. */
 const MOST_CYCLES_PER_WINDOW = 200_000;
-const DEFAULT_THD_ORDER = { mains: 40, general: 40, tone: 10 } as const;
+/** Highest order in THD where none is stated: 40 as IEC 61000-3-2 lists, 10 for tones by common practice. */
+export const DEFAULT_THD_ORDER = { mains: 40, general: 40, tone: 10 } as const;
 const DEFAULT_WINDOW: Record<AnalysisSettings['profile'], WindowName> = {
   mains: 'hann',
   general: 'hann',
