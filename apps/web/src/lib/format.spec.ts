@@ -22,6 +22,7 @@ describe('quantities with SI prefixes (SI brochure, 9th ed., table 7)', () => {
     [50_000, 'Hz', { trim: true }, '50 kHz'],
     [44_100, 'Hz', { trim: true }, '44.1 kHz'],
     [-0.00000215, 'V', { digits: 3 }, '-2.15 µV'],
+    [1.3e-7, 'V/√Hz', { digits: 2 }, '130 nV/√Hz'],
     [4.7e-12, 'F', { digits: 2 }, '4.7 pF'],
     [0, 'A', undefined, '0 A'],
     [0.99996, 'A', undefined, '1.000 A'],

@@ -42,6 +42,9 @@ const prefixable = new Set([
   'Sa/s',
 ]);
 
+/** A density per root hertz takes the prefix of its quantity: 130 nV/√Hz. */
+const takesPrefix = (unit: string) => prefixable.has(unit.replace(/\/√Hz$/, ''));
+
 function signed(text: string): string {
   return text.startsWith('-') ? minus + text.slice(1) : text;
 }
@@ -80,7 +83,7 @@ export interface SiOptions {
  */
 export function formatSi(value: Figure, unit: string, { digits = 4, trim = false }: SiOptions = {}): string {
   if (absent(value)) return none;
-  const prefix = prefixable.has(unit) ? prefixFor(value, digits) : { exponent: 0, sign: '' };
+  const prefix = takesPrefix(unit) ? prefixFor(value, digits) : { exponent: 0, sign: '' };
   // Dividing by a whole power keeps the decimal that was meant (0.001 is not exact in binary).
   const scaled = prefix.exponent < 0 ? value * 10 ** -prefix.exponent : value / 10 ** prefix.exponent;
   const text = toDigits(scaled, digits);
@@ -118,7 +121,7 @@ export function formatHz(value: Figure, decimals = 3): string {
 export function formatWithUncertainty(value: Figure, uncertainty: Figure, unit: string): string {
   if (absent(value)) return none;
   if (absent(uncertainty) || uncertainty <= 0) return formatSi(value, unit);
-  const prefix = prefixable.has(unit)
+  const prefix = takesPrefix(unit)
     ? prefixFor(Math.max(Math.abs(value), uncertainty), 4)
     : { exponent: 0, sign: '' };
   const scale = 10 ** -prefix.exponent;

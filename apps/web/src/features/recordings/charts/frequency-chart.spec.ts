@@ -1,7 +1,15 @@
 import type { Note, Spectrum } from '@overtally/contracts';
 import { describe, expect, it } from 'vitest';
 import { light } from '../../../lib/theme/palette.js';
-import { frequencyChart, nearestLine, strongestNear, type FrequencyChartInput } from './frequency-chart.js';
+import {
+  frequencyChart,
+  nearestLine,
+  orderRange,
+  rangeOfRelayout,
+  strongestNear,
+  wholeRange,
+  type FrequencyChartInput,
+} from './frequency-chart.js';
 import { letterOf, withLetters } from './note-letters.js';
 import type { OrderRow } from './order-rows.js';
 
@@ -22,7 +30,10 @@ const input = (over: Partial<FrequencyChartInput> = {}): FrequencyChartInput => 
   rows: [row(1, 230), row(2, 2.3)],
   scale: 'log',
   relative: false,
-  whole: false,
+  lines: [],
+  families: [],
+  marks: 'orders',
+  range: { fromHz: 0, toHz: 150 },
   notes: [],
   selectedHz: null,
   heightPx: 260,
@@ -30,9 +41,45 @@ const input = (over: Partial<FrequencyChartInput> = {}): FrequencyChartInput => 
 });
 
 describe('spectrum by frequency', () => {
-  it('ends one order after the last, or at half the sample rate on request', () => {
-    expect(frequencyChart(input(), light).layout.xaxis?.range).toEqual([0, 150]);
-    expect(frequencyChart(input({ whole: true }), light).layout.xaxis?.range).toEqual([0, 1000]);
+  it('ends one order after the last, or at its own end where there are no orders', () => {
+    const { rows } = input();
+    expect(orderRange(spectrum, rows)).toEqual({ fromHz: 0, toHz: 150 });
+    expect(orderRange(spectrum, [])).toEqual(wholeRange(spectrum));
+    expect(wholeRange(spectrum)).toEqual({ fromHz: 0, toHz: 1000 });
+  });
+
+  it('shows the range it is given, with amplitudes to suit the lines in it', () => {
+    const { layout } = frequencyChart(input({ range: { fromHz: 60, toHz: 110 }, scale: 'linear' }), light);
+    expect(layout.xaxis?.range).toEqual([60, 110]);
+    expect(layout.yaxis?.range).toEqual([0, expect.closeTo(2.3 * 1.12, 9)]);
+  });
+
+  it('hears of a range dragged in the chart, in the unit of its axis', () => {
+    expect(rangeOfRelayout({ 'xaxis.range[0]': 1.5, 'xaxis.range[1]': 12 }, 1e-3)).toEqual({
+      fromHz: 1500,
+      toHz: 12_000,
+    });
+    expect(rangeOfRelayout({ 'xaxis.autorange': true }, 1)).toBe('whole');
+    expect(rangeOfRelayout({ autosize: true }, 1)).toBeNull();
+  });
+
+  it('marks the largest lines by the harmonic series they belong to', () => {
+    const families = [{ fundamentalHz: 50, orders: [1, 2], shareOfPower: 0.99 }];
+    const lines = [
+      { frequencyHz: 50, rms: 230, familyIndex: 0, order: 1 },
+      { frequencyHz: 75, rms: 0.5, familyIndex: null, order: null },
+    ];
+    const marked = frequencyChart(input({ marks: 'lines', lines, families }), light).traces.at(-1);
+    expect(marked).toMatchObject({ x: [50, 75], marker: { symbol: ['circle', 'x-thin'] } });
+    const words = (marked?.customdata as string[]).map((text) => text.split('<br>').at(-1));
+    expect(words).toEqual(['order 1 of the series of 50.00\u00a0Hz', 'in no harmonic series']);
+  });
+
+  it('marks nothing on a density and names its unit', () => {
+    const density = { ...spectrum, scaling: 'density' as const };
+    const { traces } = frequencyChart(input({ spectrum: density }), light);
+    expect(traces).toHaveLength(1);
+    expect(traces[0]?.hovertemplate).toContain(' V/√Hz<extra>');
   });
 
   it('is told in percent of the fundamental on request', () => {

@@ -1,4 +1,4 @@
-import type { Spectrum } from '@overtally/contracts';
+import type { HarmonicFamily, SpectralLine, Spectrum } from '@overtally/contracts';
 import {
   amplitudeAxis,
   amplitudeRange,
@@ -6,20 +6,31 @@ import {
   type Scale,
 } from '../../../components/charts/amplitude-axis.js';
 import type { PlotLayout } from '../../../components/plot-layout.js';
-import type { PlotTrace } from '../../../components/plot.js';
+import type { PlotRelayoutEvent, PlotTrace } from '../../../components/plot.js';
 import type { Palette } from '../../../lib/theme/palette.js';
+import { lineMarks } from './family-marks.js';
 import type { LetteredNote } from './note-letters.js';
 import { letterTrace } from './order-chart.js';
 import { isOver, type OrderRow } from './order-rows.js';
 import { digitSeparators } from './waveform-chart.js';
 
+/** A part of the frequency axis. */
+export interface FrequencyRange {
+  fromHz: number;
+  toHz: number;
+}
+
 export interface FrequencyChartInput {
   spectrum: Spectrum;
   rows: readonly OrderRow[];
+  /** Largest lines of the spectrum with the harmonic series among them. */
+  lines: readonly SpectralLine[];
+  families: readonly HarmonicFamily[];
+  /** What is marked on the lines; a density has no lines to mark. */
+  marks: 'orders' | 'lines';
   scale: Scale;
   relative: boolean;
-  /** Shows half the sample rate instead of ending after the last order. */
-  whole: boolean;
+  range: FrequencyRange;
   notes: readonly LetteredNote[];
   selectedHz: number | null;
   heightPx: number;
@@ -31,23 +42,38 @@ const margin = { l: 64, r: 12, t: 8, b: 30 };
 export const frequencyUnit = (highestHz: number) =>
   highestHz >= 10_000 ? { unit: 'kHz', factor: 1e-3 } : { unit: 'Hz', factor: 1 };
 
-/** The line spectrum with marks at the orders and the letters of notes on lines. */
+/** All of a spectrum. */
+export const wholeRange = ({ frequencyHz }: Pick<Spectrum, 'frequencyHz'>): FrequencyRange => ({
+  fromHz: 0,
+  toHz: frequencyHz.at(-1) ?? 1,
+});
+
+/** From zero to one order beyond the last; all of the spectrum where there are no orders. */
+export function orderRange(spectrum: Spectrum, rows: readonly OrderRow[]): FrequencyRange {
+  const whole = wholeRange(spectrum);
+  const [last, first] = [rows.at(-1), rows.find((row) => row.order === 1)];
+  if (!last) return whole;
+  return { fromHz: 0, toHz: Math.min(whole.toHz, last.frequencyHz + (first?.frequencyHz ?? 0)) };
+}
+
+/** Unit of the values: of the channel, or of a density per root hertz. */
+const spectrumUnit = ({ unit, scaling }: Spectrum) => (scaling === 'density' ? densityUnit(unit) : unit);
+export const densityUnit = (unit: string) => `${unit || '1'}/√Hz`;
+
+/** The line spectrum with marks at the orders or the largest lines, and the letters of notes on lines. */
 export function frequencyChart(
   input: FrequencyChartInput,
   palette: Palette,
 ): { traces: PlotTrace[]; layout: PlotLayout; factor: number } {
-  const { spectrum, rows, scale, whole } = input;
-  const fundamental = rows.find((row) => row.order === 1);
-  const reference = input.relative ? fundamental : undefined;
+  const { spectrum, rows, scale, range } = input;
+  const reference = input.relative ? rows.find((row) => row.order === 1) : undefined;
   const gain = reference ? 100 / reference.rms : 1;
-  const unit = reference ? '%' : spectrum.unit;
-  const lastHz = spectrum.frequencyHz.at(-1) ?? 1;
-  const lastOrderHz = (rows.at(-1)?.frequencyHz ?? lastHz) + (fundamental?.frequencyHz ?? 0);
-  const endHz = whole ? lastHz : Math.min(lastHz, lastOrderHz);
-  const { unit: hertz, factor } = frequencyUnit(endHz);
+  const unit = reference ? '%' : spectrumUnit(spectrum);
+  const { unit: hertz, factor } = frequencyUnit(range.toHz);
   const values = spectrum.rms.map((rms) => rms * gain);
-  const range = amplitudeRange(values, [], scale, median(values));
-  const marks = lettersAt(input, gain, factor, range, palette);
+  const shown = values.filter((_, i) => isWithin(spectrum.frequencyHz[i] ?? 0, range));
+  const amplitudes = amplitudeRange(shown.length > 0 ? shown : values, [], scale, median(values));
+  const letters = lettersAt(input, gain, factor, amplitudes, palette);
   return {
     factor,
     traces: [
@@ -59,22 +85,43 @@ export function frequencyChart(
         line: { color: palette.ink, width: 1 },
         hovertemplate: `%{x:.6~g} ${hertz}<br>%{y:.4~g} ${unit}<extra></extra>`,
       },
-      orderMarks(rows, gain, factor, unit, palette),
-      ...(marks.length > 0 ? [letterTrace(marks, palette)] : []),
+      ...marksOf(input, { factor, gain, unit }, palette),
+      ...(letters.length > 0 ? [letterTrace(letters, palette)] : []),
     ],
     layout: {
       margin,
       separators: digitSeparators,
       xaxis: {
-        range: [0, endHz * factor],
+        range: [range.fromHz * factor, range.toHz * factor],
         ticksuffix: ` ${hertz}`,
         exponentformat: 'none',
         separatethousands: false,
       },
-      yaxis: amplitudeAxis(range, unit),
+      yaxis: amplitudeAxis(amplitudes, unit),
       shapes: input.selectedHz === null ? [] : [selectedLine(input.selectedHz * factor, palette)],
     },
   };
+}
+
+const isWithin = (hz: number, { fromHz, toHz }: FrequencyRange) => hz >= fromHz && hz <= toHz;
+
+function marksOf(
+  { spectrum, rows, lines, families, marks }: FrequencyChartInput,
+  scale: { factor: number; gain: number; unit: string },
+  palette: Palette,
+): PlotTrace[] {
+  if (spectrum.scaling === 'density') return [];
+  if (marks === 'lines') return [lineMarks(lines, families, scale, palette)];
+  return [orderMarks(rows, scale.gain, scale.factor, scale.unit, palette)];
+}
+
+/** The range that zooming in the chart asks for; `whole` after a double click, null for any other change. */
+export function rangeOfRelayout(event: PlotRelayoutEvent, factor: number): FrequencyRange | 'whole' | null {
+  if (event['xaxis.autorange'] === true) return 'whole';
+  const from = event['xaxis.range[0]'];
+  const to = event['xaxis.range[1]'];
+  if (typeof from !== 'number' || typeof to !== 'number') return null;
+  return { fromHz: Math.max(0, from / factor), toHz: to / factor };
 }
 
 /** Middle of the sorted values: the noise between the lines. */

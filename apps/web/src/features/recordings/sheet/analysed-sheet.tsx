@@ -126,6 +126,7 @@ function ChannelSheet(props: AnalysedSheetProps & { figures: ChannelAnalysis }) 
           <SpectrumFigure
             recording={recording}
             analysisId={analysis.id}
+            settings={analysis.settings}
             channel={figures}
             set={set}
             comparison={comparison}

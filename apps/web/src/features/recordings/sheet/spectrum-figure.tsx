@@ -1,23 +1,23 @@
-import { Text, useBreakpointValue } from '@chakra-ui/react';
-import type { ChannelAnalysis, LimitSet, Recording } from '@overtally/contracts';
+import type { ChannelAnalysis, LimitSet, Recording, Settings } from '@overtally/contracts';
 import { useMemo, useState } from 'react';
 import { FigureFrame } from '../../../components/figure-frame.js';
-import { Plot, type PlotPointEvent } from '../../../components/plot.js';
 import { Segmented } from '../../../components/segmented.js';
 import { TableTwin } from '../../../components/table-twin.js';
 import type { Scale } from '../../../components/charts/amplitude-axis.js';
-import { usePalette } from '../../../lib/theme/use-palette.js';
+import { densityUnit } from '../charts/frequency-chart.js';
 import type { LetteredNote } from '../charts/note-letters.js';
-import { orderChart } from '../charts/order-chart.js';
-import type { ChannelComparison, OrderRow } from '../charts/order-rows.js';
+import type { ChannelComparison } from '../charts/order-rows.js';
 import { fundamentalSymbol, channelTitle } from '../charts/words.js';
-import { FrequencyView } from './frequency-view.js';
+import { FrequencyView, type FrequencyLook } from './frequency-view.js';
 import type { NoteTarget } from './note-target.js';
 import { orderColumns } from './order-columns.js';
+import { OrderView } from './order-view.js';
+import { extentWords } from './settings/settings-words.js';
 
 interface SpectrumFigureProps {
   recording: Recording;
   analysisId: string;
+  settings: Settings;
   channel: ChannelAnalysis;
   /** Drawn as the ceiling; null: none. */
   set: LimitSet | null;
@@ -28,24 +28,27 @@ interface SpectrumFigureProps {
 }
 
 type Abscissa = 'order' | 'frequency';
+type Amplitude = 'absolute' | 'relative' | 'density';
 const height = 280;
 
 /** Figure 2: orders as bars under the limit, or the spectrum line by line; a click selects what a note speaks of. */
 export function SpectrumFigure(props: SpectrumFigureProps) {
-  const { channel, comparison, target, onTarget } = props;
+  const { channel, comparison, settings, recording } = props;
   const { rows } = comparison;
   const [chosen, setAbscissa] = useState<Abscissa>('order');
   const [scale, setScale] = useState<Scale>('log');
-  const [relative, setRelative] = useState(false);
+  const [wanted, setAmplitude] = useState<Amplitude>('absolute');
+  const [look, setLook] = useState<FrequencyLook>({ range: null, marks: 'orders' });
   const abscissa = rows.length > 0 ? chosen : 'frequency';
+  const options = amplitudes(channel, rows.length > 0, abscissa);
+  const amplitude = options.find(({ value }) => value === wanted)?.value ?? 'absolute';
   const title = `${channelTitle(channel)} by ${abscissa}`;
-  const symbol = fundamentalSymbol(channel.quantity);
-  const columns = useMemo(() => orderColumns(rows, channel.unit, symbol), [rows, channel.unit, symbol]);
-  const selectedOrder = target?.kind === 'order' ? target.order : null;
+  const view = { ...props, scale, title, height };
+  const frequency = { ...view, amplitude, look, onLook: setLook };
   return (
     <FigureFrame
       title={title}
-      subtitle={abscissa === 'order' ? orderWords(channel) : undefined}
+      subtitle={abscissa === 'order' ? orderWords(channel, settings) : undefined}
       toggles={
         <>
           {rows.length > 0 ? (
@@ -60,55 +63,25 @@ export function SpectrumFigure(props: SpectrumFigureProps) {
             />
           ) : null}
           <Segmented label="Scale" value={scale} options={scales} onChange={setScale} />
-          {rows.length > 0 ? (
-            <Segmented
-              label="Amplitudes"
-              value={relative ? 'relative' : 'absolute'}
-              options={[
-                { value: 'absolute', label: channel.unit || 'Absolute' },
-                { value: 'relative', label: `% of ${symbol}` },
-              ]}
-              onChange={(value) => setRelative(value === 'relative')}
-            />
+          {options.length > 1 ? (
+            <Segmented label="Amplitudes" value={amplitude} options={options} onChange={setAmplitude} />
           ) : null}
         </>
       }
       table={
-        rows.length === 0 ? undefined : (
-          <TableTwin
-            caption={title}
-            columns={columns}
-            rows={rows}
-            rowKey={(row) => row.order}
-            fileName={`${props.recording.number}-orders`}
-            isSelected={(row) => row.order === selectedOrder}
-            onSelect={(row) => onTarget({ kind: 'order', order: row.order })}
-            maxHeight="560px"
-          />
+        abscissa === 'order' ? (
+          <OrderTable {...props} title={title} />
+        ) : (
+          <FrequencyView {...frequency} asTable={{ fileName: `${recording.number}-spectrum` }} />
         )
       }
     >
       {abscissa === 'order' ? (
-        <>
-          <OrderView {...props} scale={scale} relative={relative} title={title} />
-          {props.set ? <LimitSource set={props.set} rows={rows} /> : null}
-        </>
+        <OrderView {...view} relative={amplitude === 'relative'} />
       ) : (
-        <FrequencyView {...props} scale={scale} relative={relative} title={title} height={height} />
+        <FrequencyView {...frequency} />
       )}
     </FigureFrame>
-  );
-}
-
-function LimitSource({ set: { title, edition }, rows }: { set: LimitSet; rows: readonly OrderRow[] }) {
-  const spared = rows.filter((row) => row.result === 'disregarded' && (row.sharePercent ?? 0) > 100).length;
-  return (
-    <Text fontSize="xs" color="inkSoft">
-      Limits: {[title, edition].filter(Boolean).join(', ')}. Check them against the current edition.
-      {spared > 0
-        ? ` Grey bars over the line, ${spared} of them, are too small to be judged; see the table.`
-        : ''}
-    </Text>
   );
 }
 
@@ -117,49 +90,42 @@ const scales = [
   { value: 'linear', label: 'Linear' },
 ] as const;
 
-function orderWords({ windows, quantity }: ChannelAnalysis): string {
-  if (!windows) return 'single lines over the whole record';
+/** In the unit of the channel, in percent of order 1 where there is one, as a density where there are lines. */
+function amplitudes({ unit, quantity }: ChannelAnalysis, hasOrders: boolean, abscissa: Abscissa) {
+  const options: { value: Amplitude; label: string }[] = [{ value: 'absolute', label: unit || 'Absolute' }];
+  if (hasOrders) options.push({ value: 'relative', label: `% of ${fundamentalSymbol(quantity)}` });
+  if (abscissa === 'frequency') options.push({ value: 'density', label: densityUnit(unit) });
+  return options;
+}
+
+function OrderTable({
+  recording,
+  channel,
+  comparison: { rows },
+  target,
+  onTarget,
+  title,
+}: SpectrumFigureProps & { title: string }) {
+  const symbol = fundamentalSymbol(channel.quantity);
+  const columns = useMemo(() => orderColumns(rows, channel.unit, symbol), [rows, channel.unit, symbol]);
+  const selected = target?.kind === 'order' ? target.order : null;
+  return (
+    <TableTwin
+      caption={title}
+      columns={columns}
+      rows={rows}
+      rowKey={(row) => row.order}
+      fileName={`${recording.number}-orders`}
+      isSelected={(row) => row.order === selected}
+      onSelect={(row) => onTarget({ kind: 'order', order: row.order })}
+      maxHeight="560px"
+    />
+  );
+}
+
+function orderWords({ windows, quantity }: ChannelAnalysis, settings: Settings): string {
+  if (!windows) return `single lines over ${extentWords(settings)}`;
   const groups = quantity === 'current' ? 'groups' : 'subgroups';
   const count = windows.count === 1 ? '1 window' : `${windows.count} windows`;
   return `${groups}, mean of ${count} of ${windows.cycles} cycles, rectangular`;
-}
-
-function OrderView({
-  channel,
-  comparison,
-  notes,
-  target,
-  onTarget,
-  scale,
-  relative,
-  title,
-}: SpectrumFigureProps & { scale: Scale; relative: boolean; title: string }) {
-  const palette = usePalette();
-  const labelStep = useBreakpointValue({ base: 10, sm: 5, lg: 2 }, { ssr: false }) ?? 2;
-  const selected = target?.kind === 'order' ? target.order : null;
-  const chart = useMemo(() => {
-    const input = { rows: comparison.rows, unit: channel.unit, scale, relative, notes, selected, labelStep };
-    return orderChart({ ...input, heightPx: height }, palette);
-  }, [comparison.rows, channel.unit, scale, relative, notes, selected, labelStep, palette]);
-  const select = ({ points }: PlotPointEvent) => {
-    const order = points[0] && Math.round(points[0].x);
-    if (order) onTarget({ kind: 'order', order });
-  };
-  return (
-    <>
-      <Plot
-        label={`${title}: ${comparison.words}`}
-        height={height}
-        traces={chart.traces}
-        layout={chart.layout}
-        onClick={select}
-      />
-      {chart.belowAxis > 0 ? (
-        <Text fontSize="xs" color="inkSoft">
-          ▽ {chart.belowAxis === 1 ? '1 order lies' : `${chart.belowAxis} orders lie`} below the axis; the
-          table has {chart.belowAxis === 1 ? 'it' : 'them'}.
-        </Text>
-      ) : null}
-    </>
-  );
 }

@@ -14,6 +14,13 @@ export function settingsWords(settings: Settings): string {
   if (thdMaxOrder !== undefined) words.push(`THD to order ${thdMaxOrder}`);
   if (window !== undefined) words.push(`${window} window for the drawn spectrum`);
   if (cyclesPerWindow !== undefined) words.push(`${cyclesPerWindow} cycles per window`);
-  words.push(span ? `${formatDuration(span.fromS)} to ${formatDuration(span.toS)}` : 'whole record');
+  words.push(span ? spanWords(span) : 'whole record');
   return words.join(', ');
 }
+
+const spanWords = ({ fromS, toS }: NonNullable<Settings['span']>) =>
+  `${formatDuration(fromS)} to ${formatDuration(toS)}`;
+
+/** What was analysed, within a sentence: "the whole record", "1.20 s to 3.40 s of the record". */
+export const extentWords = ({ span }: Pick<Settings, 'span'>): string =>
+  span ? `${spanWords(span)} of the record` : 'the whole record';
