@@ -2,7 +2,7 @@ import type { WaveformFigures } from '../figures/waveform-figures.js';
 import { createFlagScan, type ScanFindings } from '../flags/flag-scan.js';
 import type { PartContext } from './part-types.js';
 import { BLOCK_SAMPLES, type Reading } from './reading.js';
-import { requireNumbers } from './require-numbers.js';
+import { LARGEST_VALUE, refuseValues } from './refuse-values.js';
 import { createWaveformScan } from './waveform-scan.js';
 
 /** What one pass over all samples of a channel gives. */
@@ -31,15 +31,14 @@ export function* scanChannel(
   for (let from = 0; from < sampleCount; from += BLOCK_SAMPLES) {
     const to = Math.min(sampleCount, from + BLOCK_SAMPLES);
     const block = yield { from, to };
-    requireNumbers(block, from, channel.name, sampleRateHz);
-    flags.push(block, from);
-    if (from < periodic && periodic <= to) {
-      waveform.push(block.subarray(0, periodic - from));
-      formFactor = waveform.formFactor();
-      waveform.push(block.subarray(periodic - from));
-    } else {
-      waveform.push(block);
+    const split = from < periodic && periodic <= to ? periodic - from : 0;
+    let sound = waveform.push(block.subarray(0, split));
+    if (split > 0) formFactor = waveform.formFactor();
+    sound = waveform.push(block.subarray(split)) && sound;
+    if (!sound || waveform.figures().peak > LARGEST_VALUE) {
+      throw refuseValues(block, from, channel.name, sampleRateHz);
     }
+    flags.push(block, from);
   }
   return { figures: waveform.figures(), formFactor, findings: flags.finish() };
 }

@@ -8,7 +8,7 @@ const LONGEST_WHOLE_FIT = 2 ** 20;
 const FEW_CYCLES = 64;
 const LONGEST_FEW_CYCLES = 2 ** 23;
 /** Length of the stretch that stands for a longer record. */
-const STRETCH_SAMPLES = 2 ** 19;
+const STRETCH_SAMPLES = 2 ** 17;
 const STRETCH_CYCLES = 16;
 const LONGEST_STRETCH = 2 ** 22;
 /** Where the middles of the stretches lie that are tried, as a share of the record. */
@@ -23,7 +23,7 @@ export function fitsAsWhole({ sampleRateHz, sampleCount, settings }: PartContext
 
 /**
  * Finds the fundamental of a channel. A record of more than 2^20 samples is represented by a stretch from its middle
- * (2^19 samples or 16 cycles of the nominal frequency), or, when no fundamental stands out there, from its first or third
+ * (2^17 samples or 16 cycles of the nominal frequency), or, when no fundamental stands out there, from its first or third
  * quarter; the frequency over the whole record then follows from the frequency track.
  */
 export function* locateFundamental(context: PartContext): Reading<FundamentalEstimate | null> {

@@ -5,9 +5,9 @@ import {
   interharmonicGroup,
   type Group,
 } from '../groups/grouping.js';
-import { highFrequencyBand, linesForBands } from '../groups/high-frequency-bands.js';
-import { createWindowLines, type WindowLinePlan } from '../groups/window-lines.js';
+import { highFrequencyBand } from '../groups/high-frequency-bands.js';
 import { wrapDegrees } from '../model/fit-sinusoids.js';
+import { createLineAnalysis, type Lines } from './line-analysis.js';
 import type { PartContext } from './part-types.js';
 import { readStretches, type Reading } from './reading.js';
 
@@ -40,8 +40,6 @@ export interface WindowChunk {
   centredSubgroup: Float64Array;
   band: Float64Array;
 }
-
-const PLAN_CACHE_SIZE = 4;
 
 /** Lines, groups and bands of a range of windows (IEC 61000-4-7, 4.4.1, 5.5, 5.6, annexes A and B). */
 export function* computeWindows(
@@ -102,50 +100,6 @@ function emptyChunk(count: number, orders: number, bands: number): WindowChunk {
     ...{ rms: rows(1), dc: rows(1), line: rows(orders), phaseDeg: rows(orders) },
     ...{ group: rows(orders), subgroup: rows(orders) },
     ...{ interharmonicGroup: rows(orders + 1), centredSubgroup: rows(orders + 1), band: rows(bands) },
-  };
-}
-
-interface Lines {
-  plan: WindowLinePlan;
-  cosine: Float64Array;
-  sine: Float64Array;
-  rms: Float64Array;
-}
-
-type LineAnalysis = (
-  samples: Float64Array,
-  start: number,
-  sampleCount: number,
-  windowSamples: number,
-) => Lines;
-
-/** Line analysis with plans kept for the window lengths that came last; the arrays hold until the next call. */
-function createLineAnalysis(
-  { cycles, orders, bandCentresHz }: WindowPlan,
-  sampleRateHz: number,
-): LineAnalysis {
-  const plans = new Map<string, Lines>();
-  return (samples, start, sampleCount, windowSamples) => {
-    const key = `${sampleCount} ${windowSamples.toPrecision(10)}`;
-    let lines = plans.get(key);
-    if (!lines) {
-      const wanted = Math.max(
-        cycles * (orders + 1),
-        linesForBands(bandCentresHz, sampleRateHz / windowSamples),
-      );
-      const plan = createWindowLines(sampleCount, windowSamples, cycles, orders, wanted);
-      const array = () => new Float64Array(plan.lineCount);
-      lines = { plan, cosine: array(), sine: array(), rms: array() };
-      if (plans.size >= PLAN_CACHE_SIZE) plans.clear();
-      plans.set(key, lines);
-    }
-    const { plan, cosine, sine, rms } = lines;
-    plan.amplitudes(samples, start, cosine, sine);
-    rms[0] = Math.abs(cosine[0]!);
-    for (let k = 1; k < rms.length; k++) {
-      rms[k] = Math.sqrt((cosine[k]! * cosine[k]! + sine[k]! * sine[k]!) / 2);
-    }
-    return lines;
   };
 }
 

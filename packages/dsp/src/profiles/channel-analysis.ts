@@ -93,14 +93,12 @@ function orderResults({ survey, grid, orders }: MeasuredChannel, flags: readonly
 }
 
 function fundamentalResult(
-  { survey, orders }: MeasuredChannel,
+  { survey: { context, track }, frequencyHz, orders }: MeasuredChannel,
   { rms, phaseDeg }: HarmonicResult,
 ): FundamentalResult {
-  const { context, fundamental, track } = survey;
-  const { frequencyHz } = fundamental!;
-  const steady = frequencyDriftFlag(track, frequencyHz, context.sampleRateHz) === null;
+  const steady = frequencyDriftFlag(track, frequencyHz!, context.sampleRateHz) === null;
   return {
-    frequencyHz,
+    frequencyHz: frequencyHz!,
     rms,
     phaseDeg,
     frequencyUncertaintyHz: steady ? frequencyDeviationHz(orders!, context) : null,

@@ -8,6 +8,7 @@ import type { ChannelSurvey } from './channel-survey.js';
 import { fittedOrders, ordersOfPhasors, windowOrders, type OrderSet } from './order-set.js';
 import { PartBatch, type Batches } from './part-batch.js';
 import { splitItems } from './split.js';
+import { windowFrequencyHz } from './window-frequency.js';
 import { windowCount, type WindowGrid } from './window-grid.js';
 
 /** A channel with the windows it is taken in. */
@@ -18,6 +19,8 @@ export interface GriddedChannel {
 }
 
 export interface MeasuredChannel extends GriddedChannel {
+  /** Of the channel's own fundamental over the whole record; null when it has none. */
+  frequencyHz: number | null;
   /** null when no whole window fits, or windows are not asked for. */
   windows: WindowChunk | null;
   orders: OrderSet | null;
@@ -39,11 +42,21 @@ export function* measureChannels(channels: readonly GriddedChannel[]): Batches<M
     const setter = channels.findIndex((other) => isSetter(other) && other.grid === channel.grid);
     return {
       ...channel,
+      frequencyHz: ownFrequency(channel, chunks[i]!),
       windows: chunks[i]!,
       orders: fit?.() ?? ordersWithoutFit(channel, chunks[i]!, chunks[setter] ?? null),
       tone: tone?.() ?? null,
     };
   });
+}
+
+/** The fit of the whole record gives it, of a long record the windows. */
+function ownFrequency({ survey, grid }: GriddedChannel, windows: WindowChunk | null): number | null {
+  const { context, fundamental } = survey;
+  if (fundamental === null || grid === null || windows === null || fitsAsWhole(context)) {
+    return fundamental?.frequencyHz ?? null;
+  }
+  return windowFrequencyHz(windows, grid, context.sampleRateHz) ?? fundamental.frequencyHz;
 }
 
 /** Whether the fundamental of the channel itself sets its windows. */

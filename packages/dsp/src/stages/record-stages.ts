@@ -1,3 +1,4 @@
+import { fitsAsWhole } from '../parts/locate-fundamental.js';
 import { recordPower } from '../power/record-power.js';
 import { channelAnalysis } from '../profiles/channel-analysis.js';
 import { checkRecord } from '../profiles/check-input.js';
@@ -61,7 +62,8 @@ function layWindows(surveys: readonly ChannelSurvey[], inPower: ReadonlySet<numb
   const setter = surveys[0]?.context.settings.profile === 'tone' ? null : gridChannel(surveys);
   const gridOf = (survey: ChannelSurvey): WindowGrid => {
     const { channel, sampleRateHz, sampleCount, settings } = survey.context;
-    const record = { sampleRateHz, sampleCount, channelCount: surveys.length, settings };
+    const ordersFromWindows = !fitsAsWhole(survey.context);
+    const record = { sampleRateHz, sampleCount, channelCount: surveys.length, ordersFromWindows, settings };
     return createWindowGrid(channel.index, survey.fundamental!.frequencyHz, survey.track, record);
   };
   const grid = setter && gridOf(setter);

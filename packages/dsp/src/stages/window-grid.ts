@@ -28,6 +28,8 @@ export interface GridRecord {
   sampleRateHz: number;
   sampleCount: number;
   channelCount: number;
+  /** Whether the windows give the orders, which then have to lie below half the sample rate by a line of a window. */
+  ordersFromWindows: boolean;
   settings: ResolvedSettings;
 }
 
@@ -40,11 +42,12 @@ export function createWindowGrid(
   channel: number,
   frequencyHz: number,
   track: FrequencyTrack | null,
-  { sampleRateHz, sampleCount, channelCount, settings }: GridRecord,
+  { sampleRateHz, sampleCount, channelCount, ordersFromWindows, settings }: GridRecord,
 ): WindowGrid {
   const cycles = settings.cyclesPerWindow ?? cyclesFor(frequencyHz);
   const lineHz = frequencyHz / cycles;
-  const orders = highestOrder(frequencyHz, sampleRateHz, sampleCount, settings.maxOrder);
+  const fitted = ordersFromWindows ? Math.min(sampleCount, sampleRateHz / lineHz) : sampleCount;
+  const orders = highestOrder(frequencyHz, sampleRateHz, fitted, settings.maxOrder);
   const bandCentresHz =
     settings.profile === 'mains' ? highFrequencyBandCentres(sampleRateHz, lineHz) : new Float64Array(0);
   const windows = (sampleCount / sampleRateHz) * lineHz;

@@ -1,0 +1,58 @@
+import { linesForBands } from '../groups/high-frequency-bands.js';
+import { createWindowLines, type WindowLinePlan } from '../groups/window-lines.js';
+import type { WindowPlan } from './window-chunk.js';
+
+/** The lines of one window. */
+export interface Lines {
+  plan: WindowLinePlan;
+  /** Peak amplitudes as in `WindowLinePlan`. */
+  cosine: Float64Array;
+  sine: Float64Array;
+  /** rms values; line 0 is the magnitude of the mean. */
+  rms: Float64Array;
+}
+
+/** Takes the window of `sampleCount` samples from `start`, exactly `windowSamples` long. */
+export type LineAnalysis = (
+  samples: Float64Array,
+  start: number,
+  sampleCount: number,
+  windowSamples: number,
+) => Lines;
+
+/** Window lengths kept: those that a mains frequency takes within some minutes. About 30 MB. */
+const MOST_PLANS = 96;
+
+/** Plans used last, the oldest first; shared by all parts that a thread computes. */
+const plans = new Map<string, Lines>();
+
+/** Line analysis of the windows of a plan; the arrays it answers hold until the next call. */
+export function createLineAnalysis(
+  { cycles, orders, bandCentresHz }: WindowPlan,
+  sampleRateHz: number,
+): LineAnalysis {
+  return (samples, start, sampleCount, windowSamples) => {
+    const count = Math.max(cycles * (orders + 1), linesForBands(bandCentresHz, sampleRateHz / windowSamples));
+    const key = `${sampleCount} ${windowSamples.toPrecision(10)} ${cycles} ${orders} ${count}`;
+    const lines =
+      plans.get(key) ?? prepareLines(createWindowLines(sampleCount, windowSamples, cycles, orders, count));
+    plans.delete(key);
+    plans.set(key, lines);
+    for (const [oldest] of plans) {
+      if (plans.size <= MOST_PLANS) break;
+      plans.delete(oldest);
+    }
+    const { plan, cosine, sine, rms } = lines;
+    plan.amplitudes(samples, start, cosine, sine);
+    rms[0] = Math.abs(cosine[0]!);
+    for (let k = 1; k < rms.length; k++) {
+      rms[k] = Math.sqrt((cosine[k]! * cosine[k]! + sine[k]! * sine[k]!) / 2);
+    }
+    return lines;
+  };
+}
+
+function prepareLines(plan: WindowLinePlan): Lines {
+  const array = () => new Float64Array(plan.lineCount);
+  return { plan, cosine: array(), sine: array(), rms: array() };
+}
