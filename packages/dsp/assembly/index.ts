@@ -4,3 +4,4 @@ export { separate, unpackEven, unpackOdd } from './real-spectrum';
 export { addPowerEven, addPowerOdd, mean, pairSegments } from './power';
 export { decimate, gatherLines, mirror, weigh } from './lines';
 export { fitOrders, removeLeakage } from './leakage';
+export { calmSamples, demodulate, sumBlock } from './blocks';

@@ -20,6 +20,9 @@ export interface KernelFunctions {
     to: number,
   ) => void;
   mean: (from: number, length: number) => number;
+  sumBlock: (x: number, count: number, shift: number, out: number) => void;
+  demodulate: (x: number, cosine: number, sine: number, count: number, out: number) => void;
+  calmSamples: (x: number, count: number, top: number, bottom: number, jump: number) => number;
   weigh: (x: number, weights: number, count: number, out: number) => void;
   decimate: (
     x: number,
