@@ -13,12 +13,16 @@ const MOST_PEAKS = 40;
 const SMALLEST_SHARE = 1e-5;
 /** Nats that a factor e of the share of power is worth beside the evidence of the places. */
 const SHARE_WEIGHT = 8;
+/** A line at a known place exceeds the noise there this many times with probability e^−9. */
+const KNOWN_PLACE = 9;
 
 export interface FundamentalCandidate {
   frequencyHz: number;
   uncertaintyHz: number;
   /** Root mean square of the orders that were met, weighted by their power. */
   typicalOrder: number;
+  /** Whether the fundamental itself stands out of the noise around it. */
+  standsOut: boolean;
 }
 
 /**
@@ -34,7 +38,8 @@ export function combFundamental(
   sampleRateHz: number,
   { lowHz, highHz }: { lowHz: number; highHz: number },
 ): FundamentalCandidate | null {
-  const peaks = peakPlaces(samples, sampleRateHz);
+  const spectrum = hannSpectrum(samples, sampleRateHz);
+  const peaks = peakPlaces(spectrum);
   const combs = harmonicCombs(peaks, { lowHz, highHz, bandHz: sampleRateHz / 2 });
   const worth = (comb: HarmonicComb) => comb.evidence + SHARE_WEIGHT * Math.log(comb.share);
   const [first, ...others] = combs.filter((comb) => comb.share > 0);
@@ -44,31 +49,48 @@ export function combFundamental(
     frequencyHz: best.fundamentalHz,
     uncertaintyHz: best.uncertaintyHz,
     typicalOrder: typicalOrder(best.orders, peaks),
+    standsOut: best.orders.includes(1) || exceedsFloor(spectrum, best),
   };
 }
 
-function peakPlaces(samples: Float64Array, sampleRateHz: number): PeakPlace[] {
+interface Spectrum {
+  lineHz: number;
+  power: Float64Array;
+  floor: Float64Array;
+  enbwLines: number;
+}
+
+function hannSpectrum(samples: Float64Array, sampleRateHz: number): Spectrum {
   const length = Math.min(samples.length, MAX_LENGTH);
   const start = Math.floor((samples.length - length) / 2);
   const window = windowSamples('hann', length);
   const { coherentGain, enbwBins } = windowGains(window);
-  const windowed = window.map((w, n) => w * samples[start + n]!);
+  for (let n = 0; n < length; n++) window[n]! *= samples[start + n]!;
   const plan = createRealFftPlan(length);
-  const re = new Float64Array(plan.lineCount);
+  const power = new Float64Array(plan.lineCount);
   const im = new Float64Array(plan.lineCount);
-  plan.forward(windowed, re, im);
+  plan.forward(window, power, im);
   const scale = 2 / (coherentGain * length) ** 2;
-  const power = re.map((value, k) => scale * (value * value + im[k]! * im[k]!));
+  for (let k = 0; k < power.length; k++) power[k] = scale * (power[k]! * power[k]! + im[k]! * im[k]!);
+  return { lineHz: sampleRateHz / length, power, floor: noiseFloor(power), enbwLines: enbwBins };
+}
+
+function peakPlaces({ lineHz, ...spectrum }: Spectrum): PeakPlace[] {
   const peaks = findPeaks({
-    ...{ power, floor: noiseFloor(power), transform: windowTransform('hann'), enbwLines: enbwBins },
-    ...{ smallestShare: SMALLEST_SHARE, most: MOST_PEAKS },
+    ...spectrum,
+    ...{ transform: windowTransform('hann'), smallestShare: SMALLEST_SHARE, most: MOST_PEAKS },
   });
-  const lineHz = sampleRateHz / length;
   return peaks.map((peak) => ({
     frequencyHz: peak.line * lineHz,
     uncertaintyHz: peak.uncertainty * lineHz,
     power: peak.power,
   }));
+}
+
+/** Whether the larger of the two lines beside the fundamental stands out of the noise. */
+function exceedsFloor({ lineHz, power, floor }: Spectrum, { fundamentalHz }: HarmonicComb): boolean {
+  const k = Math.floor(fundamentalHz / lineHz);
+  return Math.max(power[k] ?? 0, power[k + 1] ?? 0) > KNOWN_PLACE * (floor[k] ?? Infinity);
 }
 
 function typicalOrder(orders: readonly number[], peaks: readonly PeakPlace[]): number {

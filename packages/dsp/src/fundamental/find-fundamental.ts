@@ -29,6 +29,8 @@ export interface FundamentalEstimate {
 interface Start {
   frequencyHz: number;
   length: number;
+  /** Whether the fundamental was seen to stand out of the noise around it. */
+  standsOut: boolean;
 }
 
 interface Range {
@@ -73,7 +75,18 @@ export function findFundamental(
   if (start === null || start.frequencyHz * samples.length < 0.98 * sampleRateHz) return null;
   const frequencyHz = growSegments(ac, sampleRateHz, start, maxOrder);
   if (!(frequencyHz > 0.9 * range.lowHz && frequencyHz < 1.1 * range.highHz)) return null;
-  return assess(ac, sampleRateHz, frequencyHz, maxOrder, mean);
+  const estimate = fitOrders(ac, sampleRateHz, frequencyHz, maxOrder, mean);
+  return isSignificant(estimate, ac.length, start.standsOut) ? estimate : null;
+}
+
+/** The strongest order stands out of the residual, and the fundamental out of that or of the noise around it. */
+function isSignificant(
+  { fit, residualRms }: FundamentalEstimate,
+  sampleCount: number,
+  standsOut: boolean,
+): boolean {
+  const overNoise = fit.components.map(({ rms }) => (rms ** 2 * sampleCount) / (2 * residualRms ** 2));
+  return Math.max(...overNoise) >= SIGNIFICANCE && (standsOut || overNoise[0]! >= KNOWN_PLACE_SIGNIFICANCE);
 }
 
 function searchRange(sampleCount: number, sampleRateHz: number, nominal: number | 'auto'): Range | null {
@@ -90,13 +103,13 @@ function findStart(ac: Float64Array, sampleRateHz: number, range: Range, hinted:
   const cycles = (range.lowHz * ac.length) / sampleRateHz;
   const candidate = hinted && cycles < SPECTRUM_CYCLES ? null : combFundamental(ac, sampleRateHz, range);
   if (candidate) {
-    const { frequencyHz, uncertaintyHz, typicalOrder } = candidate;
+    const { frequencyHz, uncertaintyHz, typicalOrder, standsOut } = candidate;
     const sharp = (START_LINES * sampleRateHz) / (typicalOrder * uncertaintyHz);
-    return { frequencyHz, length: Math.max(sharp, firstStage(frequencyHz, sampleRateHz)) };
+    return { frequencyHz, length: Math.max(sharp, firstStage(frequencyHz, sampleRateHz)), standsOut };
   }
   if (!hinted) return null;
   const frequencyHz = coarseSearch(ac, sampleRateHz, range.lowHz, range.highHz);
-  return { frequencyHz, length: firstStage(frequencyHz, sampleRateHz) };
+  return { frequencyHz, length: firstStage(frequencyHz, sampleRateHz), standsOut: false };
 }
 
 function firstStage(frequencyHz: number, sampleRateHz: number): number {
@@ -115,13 +128,13 @@ function growSegments(ac: Float64Array, sampleRateHz: number, start: Start, maxO
   }
 }
 
-function assess(
+function fitOrders(
   ac: Float64Array,
   sampleRateHz: number,
   frequencyHz: number,
   maxOrder: number,
   mean: number,
-): FundamentalEstimate | null {
+): FundamentalEstimate {
   const n = ac.length;
   const angles = harmonicAngles(
     frequencyHz,
@@ -135,9 +148,6 @@ function assess(
   for (const x of ac) total += x * x;
   const freedom = Math.max(1, n - 2 * angles.length);
   const variance = Math.max(total - solution.explained, 1e-18 * total) / freedom;
-  const significance = fit.components.map(({ rms }) => (rms ** 2 * n) / (2 * variance));
-  if (!(Math.max(...significance) >= SIGNIFICANCE && significance[0]! >= KNOWN_PLACE_SIGNIFICANCE))
-    return null;
   // Kay, "Fundamentals of Statistical Signal Processing", vol. 1, 3.11, extended to Σ h² A_h² for a harmonic series.
   const weighted = fit.components.reduce((sum, c, i) => sum + 2 * ((i + 1) * c.rms) ** 2, 0);
   const deviation =

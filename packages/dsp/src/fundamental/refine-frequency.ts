@@ -17,13 +17,17 @@ export interface RefinedFrequency {
   solution: SinusoidSolution;
 }
 
-const MAX_STEPS = 20;
+const MAX_STEPS = 8;
+/** Bounds of the measured slope of the correction against the frequency; −1 for a steady series over many cycles. */
+const STEEPEST = -20;
+const FLATTEST = -0.2;
 /** Over many cycles each step squares what is left in lines, so that the error is then far below any noise. */
 const TOLERANCE_LINES = 1e-5;
 
 /**
  * Nonlinear least squares for the frequency of a harmonic series: Gauss-Newton on f0 with the linear amplitudes of DC and
- * the given orders solved exactly at each step. A step that explains less power is halved.
+ * the given orders solved exactly at each step; from the second step on the slope of the correction is taken from the last
+ * two (secant method), since a moving frequency bends it. A step that explains less power is shortened.
  *
  * @param frequencyHz start value, within about half a line of the segment (divided by the dominant order) of f0
  * @param orders of the model, ascending, from 1; all below half the sample rate
@@ -41,11 +45,12 @@ export function refineFrequency(
   let stepHz = best.correctionHz;
   for (let i = 0; i < MAX_STEPS && Math.abs(stepHz) > toleranceLines * lineHz; i++) {
     const next = fitAt(segment, best.frequencyHz + stepHz, withDc);
+    const slope = (next.correctionHz - best.correctionHz) / stepHz;
     if (next.solution.explained >= best.solution.explained) {
       best = next;
-      stepHz = next.correctionHz;
+      stepHz = -next.correctionHz / Math.min(FLATTEST, Math.max(STEEPEST, slope));
     } else {
-      stepHz /= 2;
+      stepHz /= Math.max(2, -slope);
     }
   }
   // The last small step does not touch the amplitudes, which are those at the centre of the segment.

@@ -25,8 +25,10 @@ export interface PeakSearch {
 
 /** Expected number of noise lines taken for peaks in a whole spectrum. */
 const FALSE_PEAKS = 0.01;
-/** Two maxima are one broad peak when the power between them stays above this share of the lower one. */
+/** Two maxima are one peak when the power between them stays above this share of the lower one. */
 const VALLEY_SHARE = 0.25;
+/** Two such maxima make a broad peak; below this share of the other one, a maximum is only a bump on its slope. */
+const BUMP_SHARE = 0.1;
 /** A peak wider than this, at a quarter of its power, is no steady line. */
 const STEADY_WIDTH = 4;
 /** A peak must exceed the side lobes of larger ones this many times in power. */
@@ -71,7 +73,7 @@ function peakRanges({ power, floor }: PeakSearch): PeakRange[] {
     if (here <= threshold * floor[k]! || here < power[k - 1]! || here <= power[k + 1]!) continue;
     const last = ranges.at(-1);
     if (last && lowestBetween(power, last.at, k) > VALLEY_SHARE * Math.min(here, last.top)) {
-      ranges[ranges.length - 1] = joined(last, k, here);
+      ranges[ranges.length - 1] = joined(last, { from: k, at: k, to: k, top: here });
     } else {
       ranges.push({ from: k, at: k, to: k, top: here });
     }
@@ -83,8 +85,9 @@ function peakRanges({ power, floor }: PeakSearch): PeakRange[] {
   return ranges;
 }
 
-function joined(range: PeakRange, k: number, power: number): PeakRange {
-  return power > range.top ? { ...range, to: k, at: k, top: power } : { ...range, to: k };
+function joined(left: PeakRange, right: PeakRange): PeakRange {
+  const [higher, lower] = right.top > left.top ? [right, left] : [left, right];
+  return lower.top < BUMP_SHARE * higher.top ? higher : { ...higher, from: left.from, to: right.to };
 }
 
 function lowestBetween(power: Float64Array, from: number, to: number): number {

@@ -32,6 +32,8 @@ const LARGEST_DIFFERENCE_DIVISOR = 4;
 const GATE = 3;
 /** A candidate starts this much less certain than its parent, which is met again among the peaks. */
 const LOOSENED = 2;
+/** Nats against a series without its order 1: one in fifty. */
+const MISSING_FUNDAMENTAL = Math.log(50);
 const EULER = 0.5772;
 const ROOT_TWO_PI = Math.sqrt(2 * Math.PI);
 
@@ -120,7 +122,8 @@ function judgeComb(
     onComb += peak.power;
   }
   const ownCost = Math.log(bandHz / (ROOT_TWO_PI * uncertaintyHz));
-  const evidence = gain - ownCost - membershipCost(matched, peaks.length);
+  const missingCost = orders.includes(1) ? 0 : MISSING_FUNDAMENTAL;
+  const evidence = gain - ownCost - membershipCost(matched, peaks.length) - missingCost;
   return {
     fundamentalHz: frequencyHz,
     uncertaintyHz,
