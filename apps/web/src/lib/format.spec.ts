@@ -9,7 +9,6 @@ import {
   formatPercent,
   formatSha256,
   formatSi,
-  formatWithUncertainty,
 } from './format.js';
 
 /** Spaces as they are read; the no-break kinds are checked on their own below. */
@@ -62,16 +61,6 @@ describe('fixed decimals', () => {
 
   it('has no minus before a rounded zero', () => {
     expect(formatFixed(-0.001, 1, '°')).toBe('0.0°');
-  });
-});
-
-describe('values with uncertainty (JCGM 100:2008, 7.2.6: two digits, both to the same place)', () => {
-  it('matches the example of that clause, 100.021 47 g with 0.35 mg', () => {
-    expect(plain(formatWithUncertainty(100.02147, 0.00035, 'g'))).toBe('100.02147 ± 0.00035 g');
-  });
-
-  it('does not print decimals of a coarse uncertainty', () => {
-    expect(plain(formatWithUncertainty(230.4, 12, 'V'))).toBe('230 ± 12 V');
   });
 });
 

@@ -7,8 +7,8 @@ const gap = '\u00a0';
 const groupGap = '\u202f';
 const minus = '\u2212';
 
-type Figure = number | null | undefined;
-const absent = (value: Figure): value is null | undefined =>
+export type Figure = number | null | undefined;
+export const absent = (value: Figure): value is null | undefined =>
   value === null || value === undefined || !Number.isFinite(value);
 
 const prefixes = [
@@ -45,7 +45,13 @@ const prefixable = new Set([
 /** A density per root hertz takes the prefix of its quantity: 130 nV/√Hz. */
 const takesPrefix = (unit: string) => prefixable.has(unit.replace(/\/√Hz$/, ''));
 
-function signed(text: string): string {
+/** Power of ten and sign of the prefix that suits `value`; none for units that take no prefix. */
+export function prefixOf(value: number, unit: string, digits = 4): { exponent: number; sign: string } {
+  return takesPrefix(unit) ? prefixFor(value, digits) : { exponent: 0, sign: '' };
+}
+
+/** With a true minus. */
+export function signed(text: string): string {
   return text.startsWith('-') ? minus + text.slice(1) : text;
 }
 
@@ -63,7 +69,7 @@ function toDigits(value: number, digits: number): string {
   return String(Math.round(value / step) * step);
 }
 
-/** Prefix that leaves one to three digits before the point once rounded. */
+/** Prefix that leaves one to three digits before the point once rounded to `digits`. */
 function prefixFor(value: number, digits: number) {
   const exponent = value === 0 ? 0 : Number(value.toExponential(digits - 1).split('e')[1]);
   const last = { exponent: -12, sign: 'p' } as const;
@@ -83,7 +89,7 @@ export interface SiOptions {
  */
 export function formatSi(value: Figure, unit: string, { digits = 4, trim = false }: SiOptions = {}): string {
   if (absent(value)) return none;
-  const prefix = takesPrefix(unit) ? prefixFor(value, digits) : { exponent: 0, sign: '' };
+  const prefix = prefixOf(value, unit, digits);
   // Dividing by a whole power keeps the decimal that was meant (0.001 is not exact in binary).
   const scaled = prefix.exponent < 0 ? value * 10 ** -prefix.exponent : value / 10 ** prefix.exponent;
   const text = toDigits(scaled, digits);
@@ -112,23 +118,6 @@ export function formatDb(value: Figure, decimals = 1): string {
 /** A frequency with its digits and no prefix: 49.981 Hz. Use `formatSi` for sample rates. */
 export function formatHz(value: Figure, decimals = 3): string {
   return formatFixed(value, decimals, 'Hz');
-}
-
-/**
- * A value to the digits its expanded uncertainty supports, with the uncertainty to two significant digits
- * and both to the same place (JCGM 100:2008, 7.2.6): 49.98100 Hz ± 0.00020 Hz.
- */
-export function formatWithUncertainty(value: Figure, uncertainty: Figure, unit: string): string {
-  if (absent(value)) return none;
-  if (absent(uncertainty) || uncertainty <= 0) return formatSi(value, unit);
-  const prefix = takesPrefix(unit)
-    ? prefixFor(Math.max(Math.abs(value), uncertainty), 4)
-    : { exponent: 0, sign: '' };
-  const scale = 10 ** -prefix.exponent;
-  const place = Number((uncertainty * scale).toExponential(1).split('e')[1]);
-  const decimals = Math.min(12, Math.max(0, 1 - place));
-  const tail = `${gap}${prefix.sign}${unit}`;
-  return `${signed((value * scale).toFixed(decimals))}${gap}±${gap}${(uncertainty * scale).toFixed(decimals)}${tail}`;
 }
 
 /** A whole number in groups of three from 10 000 on: 1500, 1 500 000. */

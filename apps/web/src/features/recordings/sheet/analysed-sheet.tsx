@@ -135,7 +135,7 @@ function ChannelSheet(props: AnalysedSheetProps & { figures: ChannelAnalysis }) 
             onTarget={select}
           />
         </Box>
-        <FiguresSection recording={recording} channel={figures} />
+        <FiguresSection recording={recording} channel={figures} settings={analysis.settings} />
         <InterharmonicsSection recording={recording} channel={figures} />
         {slots.verdicts?.(analysis)}
       </MarginLayout>

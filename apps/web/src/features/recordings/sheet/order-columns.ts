@@ -1,6 +1,9 @@
+import type { ChannelAnalysis } from '@overtally/contracts';
 import type { TableColumn } from '../../../components/table-column.js';
 import { formatFixed, formatHz, formatSi } from '../../../lib/format.js';
+import { formatToUncertainty, formatUncertainty } from '../../../lib/format-uncertainty.js';
 import { isOver, resultWords, type OrderRow } from '../charts/order-rows.js';
+import { fundamentalSymbol } from '../charts/words.js';
 import { percentWords } from './percent-words.js';
 
 type Column = TableColumn<OrderRow>;
@@ -18,7 +21,12 @@ function amount(key: keyof OrderRow, header: string, unit: string): Column {
 }
 
 /** Columns of the orders; those that hold nothing for this channel are left out. */
-export function orderColumns(rows: readonly OrderRow[], unit: string, symbol: string): Column[] {
+export function orderColumns(
+  rows: readonly OrderRow[],
+  { unit, quantity, tone }: Pick<ChannelAnalysis, 'unit' | 'quantity' | 'tone'>,
+): Column[] {
+  const symbol = fundamentalSymbol(quantity);
+  const dbc = (row: OrderRow) => tone?.harmonicsDbc[row.order - 2] ?? null;
   const columns: Column[] = [
     { key: 'order', header: 'Order', fileHeader: 'Order', align: 'right', value: (row) => row.order },
     {
@@ -29,7 +37,24 @@ export function orderColumns(rows: readonly OrderRow[], unit: string, symbol: st
       value: (row) => row.frequencyHz,
       show: (row) => formatHz(row.frequencyHz, 2),
     },
-    amount('rms', 'rms', unit),
+    {
+      key: 'rms',
+      header: 'rms',
+      fileHeader: unit ? `rms (${unit})` : 'rms',
+      align: 'right',
+      value: (row) => row.rms,
+      show: (row) => formatToUncertainty(row.rms, row.uncertainty, unit),
+    },
+    {
+      key: 'uncertainty',
+      header: '±, k = 2',
+      fileHeader: unit
+        ? `Expanded uncertainty of rms, k = 2 (${unit})`
+        : 'Expanded uncertainty of rms, k = 2',
+      align: 'right',
+      value: (row) => row.uncertainty,
+      show: (row) => formatUncertainty(row.uncertainty, unit),
+    },
     {
       key: 'percentOfFundamental',
       header: `of ${symbol}`,
@@ -37,6 +62,14 @@ export function orderColumns(rows: readonly OrderRow[], unit: string, symbol: st
       align: 'right',
       value: (row) => row.percentOfFundamental,
       show: (row) => percentWords(row.percentOfFundamental, 2),
+    },
+    {
+      key: 'dbc',
+      header: 'to the tone',
+      fileHeader: 'Relative to the tone (dBc)',
+      align: 'right',
+      value: dbc,
+      show: (row) => formatFixed(dbc(row), 1, 'dBc'),
     },
     {
       key: 'phaseDeg',

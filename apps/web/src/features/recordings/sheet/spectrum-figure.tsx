@@ -106,8 +106,7 @@ function OrderTable({
   onTarget,
   title,
 }: SpectrumFigureProps & { title: string }) {
-  const symbol = fundamentalSymbol(channel.quantity);
-  const columns = useMemo(() => orderColumns(rows, channel.unit, symbol), [rows, channel.unit, symbol]);
+  const columns = useMemo(() => orderColumns(rows, channel), [rows, channel]);
   const selected = target?.kind === 'order' ? target.order : null;
   return (
     <TableTwin
