@@ -16,7 +16,7 @@ const HZ = 50;
 
 const base: UncertaintyInput = {
   sampleRateHz: RATE,
-  sampleCount: 2000,
+  sampleCount: 1000,
   accuracy: null,
   quantisationStep: null,
   mean: null,
@@ -118,13 +118,13 @@ describe('uncertainty of a channel', () => {
 
   it('of an order lost in noise reaches down to nothing', () => {
     const { orders } = channelUncertainty({ ...base, lineRms: [100, 0.05], residualRms: 2 });
-    // The line reads 0.05 where noise alone reads √2·2/√2000 = 0.063.
+    // The line reads 0.05 where noise alone reads √2·2/√1000 = 0.089.
     expect(orders[1]!.expanded).toBeGreaterThan(0.05);
   });
 
-  /** Errors of order 3 over records of 2000 samples of a quantised wave with noise. */
+  /** Errors of order 3 over records of 1000 samples of a quantised wave with noise. */
   function codedErrors(frequencyHz: number, sigma: number): number[] {
-    const draws = 600;
+    const draws = 500;
     const phases = seededNoise(draws, 8);
     const noise = seededNoise(draws * base.sampleCount, 9);
     return Array.from({ length: draws }, (_, k) => {
@@ -143,7 +143,7 @@ describe('uncertainty of a channel', () => {
   it('of a converter is its step/√12 over all samples when noise makes its errors independent', () => {
     const sigma = 0.5;
     const uncertainty = coded(Math.hypot(sigma, 1 / Math.sqrt(12)));
-    expect(standardOf(uncertainty, 'quantisation')).toBeCloseTo(1 / Math.sqrt(12 * 2000), 5);
+    expect(standardOf(uncertainty, 'quantisation')).toBeCloseTo(1 / Math.sqrt(12 * 1000), 5);
     // The residual holds the quantisation as well.
     expect(standardOf(uncertainty, 'noise') / deviationOf(codedErrors(HZ, sigma))).toBeCloseTo(1, 1);
   });
@@ -169,7 +169,7 @@ describe('uncertainty of a channel', () => {
   });
 
   it('of the rms over a broken cycle bounds what the phase makes of it', () => {
-    const count = 2050;
+    const count = 1050;
     const values = Array.from({ length: 360 }, (_, degrees) => {
       const samples = record([100], count, (degrees * Math.PI) / 180, (x) => x);
       return Math.sqrt(samples.reduce((sum, x) => sum + x * x, 0) / count);
@@ -199,7 +199,7 @@ describe('uncertainty of figures from windows', () => {
 
   // t of 95 % with 7 degrees of freedom is 2.365: with the factor √(7/5) = 1.183 in it, k = 2 comes to 2.366.
   it('covers the true value in 95 of 100 cases, also with few windows', () => {
-    const draws = 4000;
+    const draws = 3000;
     const noise = seededNoise(8 * draws, 31);
     let covered = 0;
     for (let k = 0; k < draws; k++) {
@@ -219,6 +219,9 @@ describe('uncertainty of figures from windows', () => {
     const rows = windows([row], [centred, centred]);
     const { orders } = channelUncertainty({ ...base, lineRms: [1], windows: rows });
     expect(standardOf(orders[0], 'noise')).toBeCloseTo((1 - Math.sqrt(1 - 0.07)) / Math.sqrt(3), 12);
+    // Of the highest order, the lines above may lie beyond half the sample rate.
+    const oneSided = channelUncertainty({ ...base, lineRms: [1], windows: windows([row], [centred]) });
+    expect(oneSided.orders[0]).toEqual(orders[0]);
   });
 
   it('falls back to the residual of the fit below four windows', () => {
@@ -228,7 +231,7 @@ describe('uncertainty of figures from windows', () => {
       residualRms: 2,
       windows: windows([[99, 101, 100]]),
     });
-    expect(standardOf(orders[0], 'noise')).toBeCloseTo(2 / Math.sqrt(2000), 4);
+    expect(standardOf(orders[0], 'noise')).toBeCloseTo(2 / Math.sqrt(1000), 4);
   });
 
   // A window of 10 cycles and 0.03 %, computed line by line as a sum over 4000 samples.

@@ -34,7 +34,10 @@ const EDGE_LINES = 3;
 export function noiseFromWindows(lineRms: readonly number[], rows: WindowRows): LineNoise {
   const row = (values: Float64Array, i: number): Float64Array =>
     values.subarray(i * rows.count, (i + 1) * rows.count);
-  const power = lineRms.map((_, i) => (beside(row, rows, i) + beside(row, rows, i + 1)) / 2);
+  const power = lineRms.map((_, i) => {
+    const sides = [beside(row, rows, i), beside(row, rows, i + 1)].filter((side) => side !== null);
+    return sides.reduce((sum, side) => sum + side, 0) / Math.max(1, sides.length);
+  });
   const standard = lineRms.map((rms, i) => {
     const scatter = quadraticMeanScatter(row(rows.line, i), rows.flagged);
     return scatter === null ? null : Math.hypot(scatter, riseOf(rms, power[i]!));
@@ -55,13 +58,13 @@ export function noiseFromResidual(
   };
 }
 
-/** Mean square of a single line between order `i` and the next, 0 where none are known. */
+/** Mean square of a single line between order `i` and the next, null where none is known. */
 function beside(
   row: (values: Float64Array, i: number) => Float64Array,
   { centredSubgroup, cycles, flagged }: WindowRows,
   i: number,
-): number {
-  if (cycles <= EDGE_LINES) return 0;
+): number | null {
+  if (cycles <= EDGE_LINES) return null;
   let sum = 0;
   let count = 0;
   row(centredSubgroup, i).forEach((rms, j) => {
@@ -69,5 +72,5 @@ function beside(
     sum += rms ** 2;
     count++;
   });
-  return count > 0 ? sum / count / (cycles - EDGE_LINES) : 0;
+  return count > 0 ? sum / count / (cycles - EDGE_LINES) : null;
 }
