@@ -1,3 +1,5 @@
+import { createDemodulator, type Demodulate } from '../kernels/demodulator.js';
+import { createPlanCache } from '../fft/plan-cache.js';
 import { readFromMemory, readStretches, type Reading } from '../parts/reading.js';
 
 const FRAME_CYCLES = 10;
@@ -37,6 +39,16 @@ export function trackLayout(sampleCount: number, sampleRateHz: number, carrierHz
   return { frameSamples, hopSamples, frames };
 }
 
+const demodulators = createPlanCache<Demodulate>();
+
+function hannDemodulator(length: number, angle: number): Demodulate {
+  const weight = (i: number) => 0.5 - 0.5 * Math.cos((2 * Math.PI * (i + 0.5)) / length);
+  return createDemodulator(
+    Float64Array.from({ length }, (_, i) => weight(i) * Math.cos(angle * i)),
+    Float64Array.from({ length }, (_, i) => weight(i) * Math.sin(angle * i)),
+  );
+}
+
 /** Demodulates a range of frames by the carrier. */
 export function* trackFrames(
   layout: TrackLayout,
@@ -46,13 +58,7 @@ export function* trackFrames(
 ): Reading<TrackFrames> {
   const length = layout.frameSamples;
   const angle = (2 * Math.PI * carrierHz) / sampleRateHz;
-  const cosine = new Float64Array(length);
-  const sine = new Float64Array(length);
-  for (let i = 0; i < length; i++) {
-    const weight = 0.5 - 0.5 * Math.cos((2 * Math.PI * (i + 0.5)) / length);
-    cosine[i] = weight * Math.cos(angle * i);
-    sine[i] = weight * Math.sin(angle * i);
-  }
+  const demodulate = demodulators.get(`${length} ${angle}`, length, () => hannDemodulator(length, angle));
   const phase = new Float64Array(frames.to - frames.from);
   const magnitude = new Float64Array(phase.length);
   const stretchOf = (frame: number) => {
@@ -60,13 +66,7 @@ export function* trackFrames(
     return { from, to: from + length };
   };
   yield* readStretches(frames, stretchOf, (frame, samples, offset) => {
-    let re = 0;
-    let im = 0;
-    for (let i = 0; i < length; i++) {
-      const x = samples[offset + i]!;
-      re += x * cosine[i]!;
-      im -= x * sine[i]!;
-    }
+    const { re, im } = demodulate(samples, offset);
     phase[frame - frames.from] = Math.atan2(im, re) - angle * stretchOf(frame).from;
     magnitude[frame - frames.from] = Math.hypot(re, im);
   });

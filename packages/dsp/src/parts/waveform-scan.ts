@@ -1,4 +1,5 @@
 import type { WaveformFigures } from '../figures/waveform-figures.js';
+import { createBlockSums } from '../kernels/block-sums.js';
 
 /** Running figures of a waveform that comes in blocks. */
 export interface WaveformScan {
@@ -16,6 +17,7 @@ export interface WaveformScan {
  * formulae and a pairwise algorithm for computing sample variances", 1979), so a large DC component costs no digits.
  */
 export function createWaveformScan(): WaveformScan {
+  const sumBlock = createBlockSums();
   let count = 0;
   let mean = 0;
   let squares = 0;
@@ -26,8 +28,9 @@ export function createWaveformScan(): WaveformScan {
   function push(block: Float64Array): boolean {
     const length = block.length;
     if (length === 0) return true;
-    const sums = sumBlock(block, count === 0 ? meanOf(block) : mean);
-    const apart = sums.shift + sums.away / length - mean;
+    const shift = count === 0 ? sumBlock(block, 0).away / length : mean;
+    const sums = sumBlock(block, shift);
+    const apart = shift + sums.away / length - mean;
     const about = Math.max(0, sums.squares - (sums.away * sums.away) / length);
     const total = count + length;
     squares += about + (apart * apart * count * length) / total;
@@ -36,7 +39,7 @@ export function createWaveformScan(): WaveformScan {
     lowest = Math.min(lowest, sums.lowest);
     highest = Math.max(highest, sums.highest);
     count = total;
-    return Number.isFinite(sums.absolute);
+    return sums.notFinite === 0;
   }
 
   const rms = () => Math.sqrt(squares / count + mean * mean);
@@ -51,28 +54,4 @@ export function createWaveformScan(): WaveformScan {
     }),
     formFactor: () => (absolute > 0 ? rms() / (absolute / count) : null),
   };
-}
-
-function meanOf(block: Float64Array): number {
-  let sum = 0;
-  for (let i = 0; i < block.length; i++) sum += block[i]!;
-  return sum / block.length;
-}
-
-function sumBlock(block: Float64Array, shift: number) {
-  let away = 0;
-  let squares = 0;
-  let absolute = 0;
-  let lowest = Infinity;
-  let highest = -Infinity;
-  for (let i = 0; i < block.length; i++) {
-    const x = block[i]!;
-    const d = x - shift;
-    away += d;
-    squares += d * d;
-    absolute += Math.abs(x);
-    if (x < lowest) lowest = x;
-    if (x > highest) highest = x;
-  }
-  return { shift, away, squares, absolute, lowest, highest };
 }
