@@ -3,5 +3,5 @@ export { chirpTransform } from './chirp';
 export { separate, unpackEven, unpackOdd } from './real-spectrum';
 export { addPowerEven, addPowerOdd, mean, pairSegments } from './power';
 export { decimate, gatherLines, mirror, weigh } from './lines';
-export { fitOrders, removeLeakage } from './leakage';
+export { addColumns, addOrders, fitOrders } from './leakage';
 export { calmSamples, demodulate, sumBlock } from './blocks';

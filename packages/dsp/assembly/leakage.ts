@@ -49,59 +49,31 @@ export function fitOrders(
 }
 
 /**
- * Takes the leakage of the orders h < orders (order h at line cycles·h) out of the lines and leaves the orders themselves:
- * cosine[k] −= Σ_h a_h (d(k − ch) + d(k + ch)) and sine[k] −= Σ_h b_h (d(k − ch) − d(k + ch)), half of that for k = 0.
+ * target += Σ_i factors[i]·column_i
  *
- * @param kernel address of d(0); d is there for all k ± ch
- * @param count lines, rounded up to a multiple of 4 in memory
+ * @param columns one after another, each `rows` numbers, a multiple of 4
  */
-export function removeLeakage(
-  kernel: usize,
-  cycles: i32,
-  orders: i32,
-  orderCosine: usize,
-  orderSine: usize,
-  count: i32,
-  cosine: usize,
-  sine: usize,
-): void {
-  const hop: usize = cycles << 3;
-  const mean = load<f64>(cosine);
-  const ordersEnd = orderCosine + (orders << 3);
-  for (let k = 0; k < count; k += 4) {
-    const line: usize = k << 3;
-    let near = kernel + line;
-    let far = near;
-    let cosLow = f64x2.splat(0);
-    let cosHigh = cosLow;
-    let sinLow = cosLow;
-    let sinHigh = cosLow;
-    let b = orderSine;
-    for (let a = orderCosine; a < ordersEnd; a += 8) {
-      const aAll = v128.load_splat<f64>(a);
-      const bAll = v128.load_splat<f64>(b);
-      const nearLow = v128.load(near);
-      const nearHigh = v128.load(near, 16);
-      const farLow = v128.load(far);
-      const farHigh = v128.load(far, 16);
-      cosLow = f64x2.add(cosLow, f64x2.mul(aAll, f64x2.add(nearLow, farLow)));
-      cosHigh = f64x2.add(cosHigh, f64x2.mul(aAll, f64x2.add(nearHigh, farHigh)));
-      sinLow = f64x2.add(sinLow, f64x2.mul(bAll, f64x2.sub(nearLow, farLow)));
-      sinHigh = f64x2.add(sinHigh, f64x2.mul(bAll, f64x2.sub(nearHigh, farHigh)));
-      near -= hop;
-      far += hop;
-      b += 8;
+export function addColumns(columns: usize, factors: usize, count: i32, rows: i32, target: usize): void {
+  const columnBytes: usize = rows << 3;
+  for (let row: usize = 0; row < columnBytes; row += 32) {
+    let low = v128.load(target + row);
+    let high = v128.load(target + row, 16);
+    let at = columns + row;
+    for (let i = 0; i < count; i++) {
+      const factor = v128.load_splat<f64>(factors + (i << 3));
+      low = f64x2.add(low, f64x2.mul(factor, v128.load(at)));
+      high = f64x2.add(high, f64x2.mul(factor, v128.load(at, 16)));
+      at += columnBytes;
     }
-    v128.store(cosine + line, f64x2.sub(v128.load(cosine + line), cosLow));
-    v128.store(cosine + line, f64x2.sub(v128.load(cosine + line, 16), cosHigh), 16);
-    v128.store(sine + line, f64x2.sub(v128.load(sine + line), sinLow));
-    v128.store(sine + line, f64x2.sub(v128.load(sine + line, 16), sinHigh), 16);
+    v128.store(target + row, low);
+    v128.store(target + row, high, 16);
   }
-  store<f64>(cosine, mean - 0.5 * (mean - load<f64>(cosine)));
-  for (let h = 0; h < orders; h++) {
-    const line: usize = (h * cycles) << 3;
-    const order: usize = h << 3;
-    store<f64>(cosine + line, load<f64>(cosine + line) + load<f64>(orderCosine + order));
-    store<f64>(sine + line, load<f64>(sine + line) + load<f64>(orderSine + order));
+}
+
+/** lines[cycles·h] += factor·orders[h], h < count. */
+export function addOrders(lines: usize, cycles: i32, count: i32, factor: f64, orders: usize): void {
+  for (let h = 0; h < count; h++) {
+    const line = lines + ((cycles * h) << 3);
+    store<f64>(line, load<f64>(line) + factor * load<f64>(orders + (h << 3)));
   }
 }

@@ -1,17 +1,18 @@
 import { createChirpPlan } from '../fft/chirp-plan.js';
-import { removeLeakage, windowLeakage } from './leakage.js';
-import type { WindowLinePlan, WindowShape } from './window-lines.js';
+import { leakageCurve, orderFit, removeLeakage } from './leakage.js';
+import { ordersOf, type WindowLinePlan, type WindowShape } from './window-shape.js';
 
 /**
  * `createWindowLines` in plain TypeScript, by a chirp transform of each window; for platforms without WebAssembly SIMD.
  */
 export function createPlainWindowLines(shape: WindowShape): WindowLinePlan {
-  const { sampleCount, windowSamples, cycles, maxOrder, lineCount } = shape;
+  const { sampleCount, windowSamples, cycles, lineCount } = shape;
   const spacing = (2 * Math.PI) / windowSamples;
   const plan = createChirpPlan(sampleCount, lineCount, (i) => (spacing * i * i) / 2);
   const input = new Float64Array(2 * sampleCount);
   const output = new Float64Array(2 * lineCount);
-  const leakage = windowLeakage(sampleCount, windowSamples, cycles, maxOrder, lineCount);
+  const curve = leakageCurve(sampleCount, windowSamples);
+  const fit = curve && orderFit(curve, cycles, ordersOf(shape));
   const centre = (sampleCount - 1) / 2;
   const turnCos = Float64Array.from({ length: lineCount }, (_, k) => Math.cos(k * spacing * centre));
   const turnSin = Float64Array.from({ length: lineCount }, (_, k) => Math.sin(k * spacing * centre));
@@ -26,7 +27,7 @@ export function createPlainWindowLines(shape: WindowShape): WindowLinePlan {
       cosine[k] = scale * (re * turnCos[k]! - im * turnSin[k]!);
       sine[k] = -scale * (re * turnSin[k]! + im * turnCos[k]!);
     }
-    if (leakage) removeLeakage(leakage, cycles, cosine, sine);
+    if (curve && fit) removeLeakage(curve, fit, cycles, cosine, sine);
   }
   return { sampleCount, windowSamples, lineCount, amplitudes };
 }

@@ -3,7 +3,8 @@ import { seededNoise } from '../../test/seeded-noise.js';
 import { createRealFftPlan } from '../fft/real-fft-plan.js';
 import { createKernelWindowLines } from './kernel-window-lines.js';
 import { createPlainWindowLines } from './plain-window-lines.js';
-import { createWindowLines, lineRms, type WindowLinePlan, type WindowShape } from './window-lines.js';
+import { createWindowLines, lineRms } from './window-lines.js';
+import type { WindowLinePlan, WindowShape } from './window-shape.js';
 
 function linesOf(plan: WindowLinePlan, samples: Float64Array, start = 0) {
   const cosine = new Float64Array(plan.lineCount);

@@ -53,16 +53,8 @@ export interface KernelFunctions {
     factor: number,
     fitted: number,
   ) => void;
-  removeLeakage: (
-    kernel: number,
-    cycles: number,
-    orders: number,
-    orderCosine: number,
-    orderSine: number,
-    count: number,
-    cosine: number,
-    sine: number,
-  ) => void;
+  addColumns: (columns: number, factors: number, count: number, rows: number, target: number) => void;
+  addOrders: (lines: number, cycles: number, count: number, factor: number, orders: number) => void;
 }
 
 /** One instance of the compiled kernels with a memory of its own, which lives as long as its plan. */
