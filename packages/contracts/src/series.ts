@@ -37,6 +37,14 @@ export const seriesQuerySchema = z.object({
 });
 export type SeriesQuery = z.infer<typeof seriesQuerySchema>;
 
+/** All orders of a figure over time, as a table. */
+export const seriesTableQuerySchema = seriesQuerySchema.pick({
+  channel: true,
+  figure: true,
+  aggregation: true,
+});
+export type SeriesTableQuery = z.infer<typeof seriesTableQuerySchema>;
+
 /** A figure over time; when thinned, each point is the largest value of its stretch. */
 export const seriesSchema = z.object({
   channel: z.number().int(),

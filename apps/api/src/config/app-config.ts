@@ -21,6 +21,8 @@ export class AppConfig {
   readonly logLevel: Environment['LOG_LEVEL'];
   readonly logFormat: 'json' | 'pretty';
   readonly computeThreads: number;
+  /** More than threads, so that a short job goes on between the parts of a long one. */
+  readonly jobsAtOnce: number;
   readonly adminEmail?: string;
   readonly adminPassword?: string;
   readonly storage: 'disk';
@@ -41,6 +43,7 @@ export class AppConfig {
     this.logLevel = env.LOG_LEVEL;
     this.logFormat = env.LOG_FORMAT;
     this.computeThreads = env.COMPUTE_THREADS;
+    this.jobsAtOnce = 2 * env.COMPUTE_THREADS;
     this.adminEmail = env.ADMIN_EMAIL?.toLowerCase();
     this.adminPassword = env.ADMIN_PASSWORD;
     this.storage = env.STORAGE;

@@ -1,5 +1,5 @@
 import { isIP } from 'node:net';
-import { availableParallelism } from 'node:os';
+import { availableParallelism, platform } from 'node:os';
 import { z } from 'zod';
 
 const absent = (value: unknown) => (value === '' ? undefined : value);
@@ -24,6 +24,10 @@ const trustProxySchema = z
     error: 'give the number of proxies in front, or their addresses such as 10.0.0.2, 172.18.0.0/16',
   })
   .transform((entries) => (isHopCount(entries) ? Number(entries[0]) : entries));
+
+/** All processors where compute threads give way to the rest of the process (`lowerThreadPriority`), else all but one. */
+const usualComputeThreads = (): number =>
+  Math.max(1, availableParallelism() - (platform() === 'linux' ? 0 : 1));
 
 /** The environment of a process. An empty value counts as absent. */
 export const environmentSchema = z
@@ -54,12 +58,7 @@ export const environmentSchema = z
     LOG_FORMAT: z.preprocess(absent, z.enum(['json', 'pretty']).default('json')),
     COMPUTE_THREADS: z.preprocess(
       absent,
-      z.coerce
-        .number()
-        .int()
-        .min(1)
-        .max(256)
-        .default(() => Math.max(1, availableParallelism() - 1)),
+      z.coerce.number().int().min(1).max(256).default(usualComputeThreads),
     ),
     ADMIN_EMAIL: optional(z.email({ error: 'give an e-mail address' })),
     ADMIN_PASSWORD: optional(z.string().min(12, 'use at least 12 characters').max(256)),

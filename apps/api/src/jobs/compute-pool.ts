@@ -111,14 +111,15 @@ export class ComputePool implements OnApplicationShutdown {
       scratchFolder,
       workers: this.config.computeThreads,
     };
-    const make = () =>
+    const make = (maxThreads: number) =>
       new Piscina({
         filename: threadFile,
         minThreads: 0,
-        maxThreads: this.config.computeThreads,
+        maxThreads,
         idleTimeout: idleTimeoutMs,
         workerData,
       });
-    return { workers: make(), coordinators: make() };
+    const { computeThreads, jobsAtOnce } = this.config;
+    return { workers: make(computeThreads), coordinators: make(jobsAtOnce) };
   }
 }

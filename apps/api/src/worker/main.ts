@@ -12,7 +12,7 @@ async function start(): Promise<void> {
   const logger = app.get(Logger);
   app.useLogger(logger);
   app.enableShutdownHooks();
-  logger.log(`Worker ready, ${config.computeThreads} jobs at once`);
+  logger.log(`Worker ready, ${config.jobsAtOnce} jobs at once on ${config.computeThreads} threads`);
 }
 
 start().catch((error: unknown) => {

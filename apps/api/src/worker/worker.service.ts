@@ -60,7 +60,7 @@ export class WorkerService implements OnApplicationBootstrap, BeforeApplicationS
     const tasks = [...this.handlers].map(([name, handler]) => [name, taskFor(handler, this.shutdown.signal)]);
     this.runner = await run({
       pgPool: this.pool,
-      concurrency: this.config.computeThreads,
+      concurrency: this.config.jobsAtOnce,
       noHandleSignals: true,
       taskList: Object.fromEntries(tasks) as TaskList,
       events,

@@ -5,6 +5,7 @@ import {
   pageQuerySchema,
   seriesQuerySchema,
   seriesSchema,
+  seriesTableQuerySchema,
   spectrumQuerySchema,
   spectrumSchema,
 } from '@overtally/contracts';
@@ -18,3 +19,4 @@ export class SpectrumQueryDto extends createZodDto(spectrumQuerySchema) {}
 export class SpectrumDto extends createZodDto(spectrumSchema) {}
 export class SeriesQueryDto extends createZodDto(seriesQuerySchema) {}
 export class SeriesDto extends createZodDto(seriesSchema) {}
+export class SeriesTableQueryDto extends createZodDto(seriesTableQuerySchema) {}

@@ -1,19 +1,15 @@
 import { Injectable } from '@nestjs/common';
-import type { Aggregation, Series, SeriesFigure, SeriesQuery } from '@overtally/contracts';
+import type { Series, SeriesFigure, SeriesQuery, SeriesTableQuery } from '@overtally/contracts';
 import type { schema } from '@overtally/db';
-import { aggregateSeries, WINDOWS_PER_10_MIN, WINDOWS_PER_3_S } from '@overtally/dsp';
+import { aggregateSeries } from '@overtally/dsp';
+import { Readable } from 'node:stream';
 import { problem } from '../../common/problem.js';
-import { readNpy } from '../../storage/npy.js';
 import { Storage } from '../../storage/storage.js';
-import type { AnalysisChannelRow } from '../analyses.repository.js';
 import { AnalysesService } from '../analyses.service.js';
-import { firstRow, placeOf, type StoredFigure } from './series-layout.js';
+import { firstRow, placeOf } from './series-layout.js';
+import { seriesTable } from './series-table.js';
+import { readRow, storedSeries, unitOf, windowsPerInterval } from './stored-series.js';
 import { thinnedSeries, type SeriesPoints } from './thinned-series.js';
-
-interface StoredChannelSeries {
-  key: string;
-  shape: schema.StoredSeries;
-}
 
 /** Figures of a channel from window to window, as stored or aggregated. */
 @Injectable()
@@ -34,9 +30,9 @@ export class SeriesService {
     const row = rowOf(stored.shape, figure, query.order);
     const factor = windowsPerInterval(aggregation, channel, stored.shape);
     const [timeS, flagged, value] = await Promise.all([
-      this.row(stored, 'start', 0),
-      this.row(stored, 'flagged', 0),
-      this.row(stored, figure, row),
+      readRow(this.storage, stored, 'start', 0),
+      readRow(this.storage, stored, 'flagged', 0),
+      readRow(this.storage, stored, figure, row),
     ]);
     return {
       channel: channel.index,
@@ -49,17 +45,16 @@ export class SeriesService {
     };
   }
 
-  private row({ key, shape }: StoredChannelSeries, figure: StoredFigure, row: number): Promise<Float64Array> {
-    const from = placeOf(shape, figure).offset + row * shape.count;
-    return readNpy(this.storage, key, from, from + shape.count);
+  /** A figure with all its orders over time as CSV; errors as for `figure`. */
+  async table(id: string, { channel: index, figure, aggregation }: SeriesTableQuery): Promise<Readable> {
+    const channel = await this.analyses.channel(id, index);
+    const stored = storedSeries(channel);
+    if (placeOf(stored.shape, figure).rows === 0)
+      throw problem(404, 'no-such-order', absence(figure, 0, 0, 0));
+    const factor = windowsPerInterval(aggregation, channel, stored.shape);
+    const rows = seriesTable(this.storage, stored, { figure, factor, unit: unitOf(figure, channel.unit) });
+    return Readable.from(rows);
   }
-}
-
-function storedSeries({ series, seriesKey }: AnalysisChannelRow): StoredChannelSeries {
-  if (series !== null && seriesKey !== null) return { shape: series, key: seriesKey };
-  const detail =
-    'Nothing was followed over time for this channel: only the mains profile does so, on a record of whole windows';
-  throw problem(404, 'no-series', detail);
 }
 
 /** Index of the row of an order, gap or band. */
@@ -83,41 +78,9 @@ function absence(figure: SeriesFigure, first: number, rows: number, order: numbe
     : `Orders ${first} to ${last} were followed; there is no order ${order} of this figure`;
 }
 
-/** 150/180 cycles and 10 min in windows of 10/12 cycles (IEC 61000-4-30, 4.4); of other windows the nearest number. */
-function windowsPerInterval(
-  aggregation: Aggregation,
-  { windows }: AnalysisChannelRow,
-  { intervalS }: schema.StoredSeries,
-): number {
-  if (aggregation === 'window') return 1;
-  const isStandard = windows?.cycles === 10 || windows?.cycles === 12;
-  const [standard, seconds] = aggregation === '3s' ? [WINDOWS_PER_3_S, 3] : [WINDOWS_PER_10_MIN, 600];
-  return isStandard ? standard : Math.max(1, Math.round(seconds / intervalS));
-}
-
 function aggregated(points: SeriesPoints & { flagged: ArrayLike<number> }, factor: number): SeriesPoints {
   if (factor === 1) return points;
   const { values, flagged } = aggregateSeries(points.value, points.flagged, factor);
   const timeS = Float64Array.from(values, (_, i) => points.timeS[i * factor]!);
   return { timeS, value: values, flagged };
-}
-
-function unitOf(figure: SeriesFigure, unit: string): string {
-  switch (figure) {
-    case 'frequency':
-      return 'Hz';
-    case 'thd':
-    case 'thdg':
-    case 'thds':
-    case 'pwhd':
-      return '%';
-    case 'rms':
-    case 'line':
-    case 'group':
-    case 'subgroup':
-    case 'interharmonicGroup':
-    case 'centredSubgroup':
-    case 'band':
-      return unit;
-  }
 }
