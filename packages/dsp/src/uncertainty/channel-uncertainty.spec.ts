@@ -224,6 +224,14 @@ describe('uncertainty of figures from windows', () => {
     expect(oneSided.orders[0]).toEqual(orders[0]);
   });
 
+  it('of THD is the scatter of the windows in percent', () => {
+    const rows = windows([[100, 100, 100, 100]]);
+    rows.series.thd = Float64Array.of(7.9, 8.1, 7.9, 8.1);
+    const { figures } = channelUncertainty({ ...base, lineRms: [100, 8], windows: rows });
+    // s = 0.1·√(4/3), s/√4, and √3 for four values.
+    expect(standardOf(figures.thdFPercent, 'noise')).toBeCloseTo(0.1, 4);
+  });
+
   it('falls back to the residual of the fit below four windows', () => {
     const { orders } = channelUncertainty({
       ...base,
@@ -278,7 +286,7 @@ describe('uncertainty of single-tone figures', () => {
     const noise = seededNoise(draws * count, 77);
     const drawn = { sinadDb: [], snrDb: [], thdPlusNPercent: [] } as Record<string, number[]>;
     for (let k = 0; k < draws; k++) {
-      const samples = record([1, 0, 0.004], count, 0.3, (x, n) => x + 0.01 * noise[k * count + n]!);
+      const samples = record([1, 0, 0.2], count, 0.3, (x, n) => x + 0.5 * noise[k * count + n]!);
       const [, second, third] = fitHarmonics(samples, RATE, HZ, 3).harmonics;
       const tone = fitHarmonics(samples, RATE, HZ, 1);
       const total = samples.reduce((sum, x) => sum + x * x, 0) / count - tone.dc ** 2;
@@ -290,19 +298,19 @@ describe('uncertainty of single-tone figures', () => {
     }
     const powers = {
       ...{ sampleCount: count, sampleRateHz: RATE, frequencyHz: HZ, dc: 0, tone: 1 },
-      harmonics: [null, { frequencyHz: 150, power: 1.6e-5 }],
-      noiseAndDistortion: 1.16e-4,
+      harmonics: [null, { frequencyHz: 150, power: 0.04 }],
+      noiseAndDistortion: 0.29,
       bandNoiseAndDistortion: null,
       noiseDensitySquared: 0,
-      spurs: [{ frequencyHz: 800, power: 1e-7 }],
+      spurs: [{ frequencyHz: 800, power: 1e-3 }],
     };
     const predicted = toneUncertainty(powers);
     for (const [name, values] of Object.entries(drawn)) {
       expect(predicted[name]!.expanded / 2 / deviationOf(values)).toBeCloseTo(1, 1);
     }
     expect(predicted.enobBits!.expanded / predicted.sinadDb!.expanded).toBeCloseTo(1 / 6.0206, 4);
-    // The harmonic is a line of the signal, 80 times above the mean line of noise; without it nothing stands out.
-    expect(predicted.sfdrDb!.expanded).toBeCloseTo((20 / Math.LN10) * 2 * Math.sqrt(1e-7 / 1.6e-5), 2);
+    // Lines of 0.04 and 1 in noise of 0.25/1000 each way; without the harmonic nothing stands out.
+    expect(predicted.sfdrDb!.expanded).toBeCloseTo((20 / Math.LN10) * Math.sqrt(1e-3 / 0.04 + 1e-3), 9);
     expect(toneUncertainty({ ...powers, harmonics: [] }).sfdrDb).toBeUndefined();
   });
 
