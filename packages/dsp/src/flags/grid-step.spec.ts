@@ -41,8 +41,16 @@ describe('the grid of a record', () => {
     expect(stepOf(Float64Array.from({ length: 2000 }, (_, n) => sine[n % 200]!))).toBeNull();
   });
 
-  it('of a record that begins quietly is that of its loud part', () => {
-    const growing = sine.map((x, n) => Number(((3.25 * x * (n + 1)) / 20_000).toPrecision(5)));
-    expect(stepOf(growing)).toBeCloseTo(1e-4, 6);
+  // 1.00001 in 4 digits: nothing but 1.000 lies in the decade of the peak, and the values below have a step of 1e-4.
+  it('is that beside the crests where a power of ten is reached only just', () => {
+    expect(stepOf(sine.map((x) => Number((1.00001 * x).toPrecision(4))))).toBeCloseTo(1e-4, 9);
   });
+
+  it.each([3.25, 1.00001])(
+    'of a record that begins quietly is that of its loud part, with a peak of %d',
+    (peak) => {
+      const growing = sine.map((x, n) => Number((peak * x * Math.min(1, (n + 1) / 10_000)).toPrecision(4)));
+      expect(stepOf(growing)).toBeCloseTo(peak > 2 ? 1e-3 : 1e-4, 9);
+    },
+  );
 });
