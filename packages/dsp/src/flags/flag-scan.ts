@@ -1,3 +1,4 @@
+import { createCalmSearch } from '../kernels/calm-samples.js';
 import { CrestWatch, type CrestFindings } from './crest-watch.js';
 import { GridStep } from './grid-step.js';
 import { JumpWatch, type Jump } from './jump-watch.js';
@@ -60,6 +61,7 @@ class Scan implements FlagScan {
   private highest = -Infinity;
   private readonly grid = new GridStep();
   private readonly jumps = new JumpWatch();
+  private readonly beginCalmSearch = createCalmSearch();
   private jumpGate = 0;
   private readonly top: CrestWatch;
   private readonly bottom: CrestWatch;
@@ -110,46 +112,24 @@ class Scan implements FlagScan {
     }
   }
 
-  /** Passes over samples in fours, as long as none of them is near an end of the range or behind a large jump. */
+  /** Looks at samples in fours where one of them is near an end of the range or behind a large jump. */
   private walk(block: Float64Array, first: number): void {
-    const fours = block.length - (block.length % 4);
-    let [a, b, c] = this.last;
-    let { jumpGate } = this;
-    let topGate = this.top.gate;
-    let bottomGate = -this.bottom.gate;
+    const calmUntil = this.beginCalmSearch(block);
+    const gates = () => ({ top: this.top.gate, bottom: -this.bottom.gate, jump: this.jumpGate });
     let i = 0;
-    for (; i < fours; i += 4) {
-      const x0 = block[i]!;
-      const x1 = block[i + 1]!;
-      const x2 = block[i + 2]!;
-      const x3 = block[i + 3]!;
-      const size0 = Math.abs(x0 - a - 3 * (c - b));
-      const size1 = Math.abs(x1 - b - 3 * (x0 - c));
-      const size2 = Math.abs(x2 - c - 3 * (x1 - x0));
-      const size3 = Math.abs(x3 - x0 - 3 * (x2 - x1));
-      a = x1;
-      b = x2;
-      c = x3;
-      const calm = size0 <= jumpGate && size1 <= jumpGate && size2 <= jumpGate && size3 <= jumpGate;
-      const low = x0 < topGate && x1 < topGate && x2 < topGate && x3 < topGate;
-      const high = x0 > bottomGate && x1 > bottomGate && x2 > bottomGate && x3 > bottomGate;
-      if (calm && low && high && !this.nearEnd) continue;
-      this.inspect(x0, size0, first + i);
-      this.inspect(x1, size1, first + i + 1);
-      this.inspect(x2, size2, first + i + 2);
-      this.inspect(x3, size3, first + i + 3);
-      jumpGate = this.jumpGate;
-      topGate = this.top.gate;
-      bottomGate = -this.bottom.gate;
+    while (i < block.length) {
+      if (i >= 3 && !this.nearEnd) i = calmUntil(i, gates());
+      for (const end = Math.min(block.length, i + 4); i < end; i++) this.step(block, i, first);
     }
-    for (; i < block.length; i++) {
-      const x = block[i]!;
-      this.inspect(x, Math.abs(x - a - 3 * (c - b)), first + i);
-      a = b;
-      b = c;
-      c = x;
+    for (const x of block.subarray(Math.max(0, block.length - 3))) {
+      this.last = [this.last[1], this.last[2], x];
     }
-    this.last = [a, b, c];
+  }
+
+  private step(block: Float64Array, i: number, first: number): void {
+    const before = (steps: number) => (i >= steps ? block[i - steps]! : this.last[3 + i - steps]!);
+    const size = Math.abs(block[i]! - before(3) - 3 * (before(1) - before(2)));
+    this.inspect(block[i]!, size, first + i);
   }
 
   /** @param size third difference at the sample; NaN at the first three */

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { seededNoise } from '../../test/seeded-noise.js';
 import { createBlockSums, plainBlockSums } from './block-sums.js';
-import { createCalmUntil, plainCalmUntil } from './calm-samples.js';
+import { createCalmSearch, plainCalmSearch, type BeginCalmSearch } from './calm-samples.js';
 import { createDemodulator, plainDemodulator } from './demodulator.js';
 
 describe('createBlockSums', () => {
@@ -63,7 +63,7 @@ describe('createDemodulator', () => {
   });
 });
 
-describe('createCalmUntil', () => {
+describe('createCalmSearch', () => {
   const calm = { top: 10, bottom: -10, jump: 39 };
 
   it.each([
@@ -76,22 +76,23 @@ describe('createCalmUntil', () => {
   ])('stops at %s', (_, disturb, expected) => {
     const block = new Float64Array(20_004);
     disturb(block);
-    expect(plainCalmUntil(block, 3, calm)).toBe(expected);
-    expect(createCalmUntil()(block, 3, calm)).toBe(expected);
+    expect(plainCalmSearch(block)(3, calm)).toBe(expected);
+    expect(createCalmSearch()(block)(3, calm)).toBe(expected);
   });
 
   it('goes on in the same block and in another one', () => {
     const blocks = [seededNoise(30_000, 1), seededNoise(30_000, 2)];
-    const calmUntil = createCalmUntil();
-    const stops = (until: typeof plainCalmUntil, limit: number) =>
+    const compiled = createCalmSearch();
+    const stops = (begin: BeginCalmSearch, limit: number) =>
       blocks.flatMap((block) => {
         const out: number[] = [];
+        const calmUntil = begin(block);
         for (let at = 3; at + 4 <= block.length; at += 4) {
-          at = until(block, at, { top: limit, bottom: -limit, jump: 5 * limit });
+          at = calmUntil(at, { top: limit, bottom: -limit, jump: 5 * limit });
           out.push(at);
         }
         return out;
       });
-    for (const limit of [2, 3, 4]) expect(stops(calmUntil, limit)).toEqual(stops(plainCalmUntil, limit));
+    for (const limit of [2, 3, 4]) expect(stops(compiled, limit)).toEqual(stops(plainCalmSearch, limit));
   });
 });
