@@ -37,14 +37,16 @@ export function* measureChannels(channels: readonly GriddedChannel[]): Batches<M
     tone: toneParts(channel.survey, batch),
   }));
   yield* batch.run();
-  const chunks = pending.map(({ windows }) => windows?.() ?? null);
+  const windows = pending.map((each) => each.windows?.() ?? null);
+  const frequencies = channels.map((channel, i) => ownFrequency(channel, windows[i]!));
   return pending.map(({ channel, fit, tone }, i) => {
     const setter = channels.findIndex((other) => isSetter(other) && other.grid === channel.grid);
+    const reference = { windows: windows[setter] ?? null, frequencyHz: frequencies[setter] ?? null };
     return {
       ...channel,
-      frequencyHz: ownFrequency(channel, chunks[i]!),
-      windows: chunks[i]!,
-      orders: fit?.() ?? ordersWithoutFit(channel, chunks[i]!, chunks[setter] ?? null),
+      frequencyHz: frequencies[i]!,
+      windows: windows[i]!,
+      orders: fit?.() ?? ordersWithoutFit(channel, windows[i]!, reference),
       tone: tone?.() ?? null,
     };
   });
@@ -94,15 +96,17 @@ function fitPart(channel: GriddedChannel, batch: PartBatch): (() => OrderSet) | 
   return () => ordersOfPhasors(phasors(), grid.frequencyHz);
 }
 
+/** @param reference what the channel that sets the windows gave */
 function ordersWithoutFit(
   { survey: { context, fundamental, scan }, grid }: GriddedChannel,
   windows: WindowChunk | null,
-  reference: WindowChunk | null,
+  reference: { windows: WindowChunk | null; frequencyHz: number | null },
 ): OrderSet | null {
   if (grid === null) return null;
   const { sampleCount, sampleRateHz } = context;
   if (fitsAsWhole(context)) return fittedOrders(fundamental!.estimate, sampleCount);
-  return windowOrders(windows!, reference!, grid, {
+  return windowOrders(windows!, reference.windows!, grid, {
+    frequencyHz: reference.frequencyHz!,
     totalRms: scan.figures.rms,
     sampleCount,
     sampleRateHz,

@@ -41,6 +41,15 @@ export function ordersOfPhasors(phasors: PhasorSet, frequencyHz: number): OrderS
   };
 }
 
+export interface WindowOrderContext {
+  /** Mean frequency of the channel that sets the grid. */
+  frequencyHz: number;
+  /** Of all samples of the channel. */
+  totalRms: number;
+  sampleCount: number;
+  sampleRateHz: number;
+}
+
 /**
  * The orders of a record from its windows: mean phasors. Each window is turned back by the phase that the fundamental of
  * the grid has in it, order h by h times that phase, so that a frequency that wanders a little takes nothing from the
@@ -48,16 +57,15 @@ export function ordersOfPhasors(phasors: PhasorSet, frequencyHz: number): OrderS
  * cycles the orders are orthogonal, so that for a steady frequency this is the least-squares fit to all windows.
  *
  * @param reference windows of the channel that sets the grid
- * @param totalRms of all samples of the channel
  */
 export function windowOrders(
   windows: WindowChunk,
   reference: WindowChunk,
   grid: WindowGrid,
-  { totalRms, sampleCount, sampleRateHz }: { totalRms: number; sampleCount: number; sampleRateHz: number },
+  { frequencyHz, totalRms, sampleCount, sampleRateHz }: WindowOrderContext,
 ): OrderSet {
   const { count } = windows;
-  const start = fundamentalAtStart(reference, grid, sampleRateHz);
+  const start = fundamentalAtStart(reference, grid.boundaries, frequencyHz / sampleRateHz);
   const rms = new Float64Array(grid.orders);
   const phaseDeg = new Float64Array(grid.orders);
   const dc = windows.dc.reduce((sum, x) => sum + x, 0) / count;
@@ -77,15 +85,19 @@ export function windowOrders(
   }
   const all = windows.rms.reduce((sum, x) => sum + x * x, 0) / count;
   const noiseRms = Math.sqrt(Math.max(0, all - explained) / sampleCount);
-  return { frequencyHz: grid.frequencyHz, dc, totalRms, rms, phaseDeg, noiseRms };
+  return { frequencyHz, dc, totalRms, rms, phaseDeg, noiseRms };
 }
 
 /** Phase of order 1 at the first sample, degrees: its phases in the windows, turned back by the mean frequency. */
-function fundamentalAtStart(reference: WindowChunk, grid: WindowGrid, sampleRateHz: number): number {
+function fundamentalAtStart(
+  reference: WindowChunk,
+  boundaries: Float64Array,
+  cyclesPerSample: number,
+): number {
   let re = 0;
   let im = 0;
   for (let j = 0; j < reference.count; j++) {
-    const cycles = (grid.frequencyHz * grid.boundaries[j]!) / sampleRateHz;
+    const cycles = cyclesPerSample * boundaries[j]!;
     const angle = radians(reference.phaseDeg[j]!) - 2 * Math.PI * (cycles - Math.floor(cycles));
     re += reference.line[j]! * Math.cos(angle);
     im += reference.line[j]! * Math.sin(angle);

@@ -30,16 +30,17 @@ export function* recordStages(source: RecordSource): Batches<RecordAnalysis> {
   const sets = powerSets(settings, source.channels);
   const { channels, forPower, grid } = layWindows(surveys, sets.channels);
   const measured = yield* measureChannels([...channels, ...forPower]);
-  const own = measured.slice(0, channels.length);
+  const powerChannels = measured.filter((channel) => channel.grid === grid).flatMap(powerChannel);
+  const [first] = powerChannels;
   return {
     engineVersion,
     settings,
-    channels: own.map(channelAnalysis),
-    ...(grid === null || sets.channels.size === 0
+    channels: measured.slice(0, channels.length).map(channelAnalysis),
+    ...(first === undefined || sets.channels.size === 0
       ? { power: [], threePhase: [] }
       : recordPower({
-          frequencyHz: grid.frequencyHz,
-          channels: measured.filter((channel) => channel.grid === grid).flatMap(powerChannel),
+          frequencyHz: first.phasors.frequencyHz,
+          channels: powerChannels,
           pairs: sets.pairs,
           threePhase: sets.threePhase,
           ratedCurrentA: settings.ratedCurrentA,

@@ -53,9 +53,10 @@ export function createWindowGrid(
   const windows = (sampleCount / sampleRateHz) * lineHz;
   const values = windows * channelCount * (6 * orders + bandCentresHz.length);
   if (values > MOST_VALUES) {
-    const longestS = (sampleCount / sampleRateHz) * (MOST_VALUES / values);
+    const spanS = sampleCount / sampleRateHz;
+    const longestS = spanS * (MOST_VALUES / values);
     throw new AnalysisInputError(
-      `The span of ${(sampleCount / sampleRateHz).toPrecision(6)} s holds ${Math.floor(windows)} windows of ${cycles} cycles, ` +
+      `The span of ${Number(spanS.toPrecision(6))} s holds ${Math.floor(windows)} windows of ${cycles} cycles, ` +
         `too many for ${orders} orders of ${channelCount} ${channelCount === 1 ? 'channel' : 'channels'}. ` +
         `Choose spans of up to ${Number(longestS.toPrecision(3))} s, or fewer orders.`,
     );
