@@ -1,11 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import {
-  findFundamental,
-  fitPhasorSet,
-  recordPower,
+  analyseRecord,
   thdF,
   type PowerFigures,
   type PowerPairResult,
+  type ProfileName,
   type RecordPower,
   type SequenceOrder,
   type ThreePhaseResult,
@@ -13,8 +12,11 @@ import {
 import { judge } from './judge.js';
 import { readChannels, referenceCases, type ReferenceCase } from './reference-cases.js';
 
-describe.each(referenceCases(5))('$id $title', (reference) => {
-  const results = measure(reference);
+const PROFILES = ['mains', 'general'] as const;
+const cases = PROFILES.flatMap((profile) => referenceCases(5).map((reference) => ({ profile, reference })));
+
+describe.each(cases)('$reference.id $reference.title ($profile)', ({ profile, reference }) => {
+  const results = measure(reference, profile);
 
   it.each(Object.keys(reference.expected))('%s', (quantity) => {
     expect(judge(reference.expected[quantity]!, results[quantity])).toBeNull();
@@ -32,29 +34,28 @@ function channelsOf(analysis: ReferenceCase['analysis']): Channels {
     : { voltages: analysis.voltages as string[], currents: analysis.currents as string[] };
 }
 
-/** The voltage gives the fundamental; all channels are fitted at it. */
-function measure(reference: ReferenceCase): Record<string, unknown> {
+/** Powers as the analysis gives them, pairs and sets as the case states them. */
+function measure(reference: ReferenceCase, profile: ProfileName): Record<string, unknown> {
   const { analysis } = reference;
   const { sampleRateHz, samples } = readChannels(reference);
   const { voltages, currents } = channelsOf(analysis);
-  const names = [...voltages, ...currents];
-  const frequencyHz = findFundamental(samples[voltages[0]!]!, sampleRateHz, {
-    nominalFrequencyHz: analysis.nominal_hz as number,
-  })!.frequencyHz;
   const isThreePhase = voltages.length === 3;
-  const result = recordPower({
-    frequencyHz,
-    channels: names.map((name, index) => ({
-      index,
-      name,
-      unit: index < voltages.length ? 'V' : 'A',
-      phasors: fitPhasorSet(samples[name]!, sampleRateHz, frequencyHz, analysis.orders as number),
+  const result = analyseRecord({
+    sampleRateHz,
+    channels: [...voltages, ...currents].map((name, index) => ({
+      ...{ index, name, samples: samples[name]! },
+      ...(index < voltages.length ? { quantity: 'voltage', unit: 'V' } : { quantity: 'current', unit: 'A' }),
     })),
-    pairs: voltages.map((_, k) => ({ voltage: k, current: voltages.length + k })),
-    threePhase: isThreePhase
-      ? [{ voltages: [0, 1, 2], currents: [3, 4, 5], wires: analysis.wires as '3w' | '4w' }]
-      : [],
-    ratedCurrentA: analysis.rated_current_a as number | undefined,
+    settings: {
+      profile,
+      nominalFrequencyHz: analysis.nominal_hz as number,
+      maxOrder: analysis.orders as number,
+      pairs: voltages.map((_, k) => ({ voltage: k, current: voltages.length + k })),
+      threePhase: isThreePhase
+        ? [{ voltages: [0, 1, 2], currents: [3, 4, 5], wires: analysis.wires as '3w' | '4w' }]
+        : [],
+      ratedCurrentA: analysis.rated_current_a as number | undefined,
+    },
   });
   return isThreePhase ? threePhase(result) : singlePhase(result.power[0]!);
 }
