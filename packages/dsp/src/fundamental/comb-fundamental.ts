@@ -1,6 +1,7 @@
 import { createRealFftPlan } from '../fft/real-fft-plan.js';
 import { findPeaks } from '../peaks/find-peaks.js';
-import { harmonicCombs, type HarmonicComb, type PeakPlace } from '../peaks/harmonic-comb.js';
+import { harmonicCombs, type CombRange, type HarmonicComb, type PeakPlace } from '../peaks/harmonic-comb.js';
+import { bestEvidence, harmonicFamilies } from '../peaks/harmonic-families.js';
 import { noiseFloor } from '../peaks/noise-floor.js';
 import { windowGains } from '../windows/window-gains.js';
 import { windowSamples } from '../windows/window-samples.js';
@@ -11,8 +12,12 @@ const MAX_LENGTH = 2 ** 18;
 const MOST_PEAKS = 40;
 /** −50 dB: weaker peaks beside the largest are not asked. */
 const SMALLEST_SHARE = 1e-5;
+/** Series looked for among the peaks, each among those that the earlier ones left over. */
+const MOST_FAMILIES = 6;
+/** A series with less of the power than this is not what the record is about: hum beside a tone, say. */
+const LEAST_SHARE = 0.02;
 /** Nats that a factor e of the share of power is worth beside the evidence of the places. */
-const SHARE_WEIGHT = 8;
+const SHARE_WEIGHT = 3;
 /** A line at a known place exceeds the noise there this many times with probability e^−9. */
 const KNOWN_PLACE = 9;
 
@@ -26,31 +31,54 @@ export interface FundamentalCandidate {
 }
 
 /**
- * The fundamental that the peaks of the spectrum suggest: of all combs the one with the best evidence that also holds much
- * of the power. Neither strong lines that belong to nothing nor a dense comb that meets them by chance mislead it, nor
- * does it matter whether the fundamental itself is strong.
+ * The fundamental that the peaks of the spectrum suggest: they are taken apart into harmonic series and single lines, and
+ * the series with good evidence that also holds much of the power is taken. Neither strong lines that belong to nothing
+ * nor a dense comb that meets them by chance mislead it, nor does it matter whether the fundamental itself is strong.
  *
  * @param samples with their mean taken away
+ * @param hinted looks only at series whose fundamental lies between `lowHz` and `highHz`, whatever else is there
  * @returns null when no peak stands out or none suggests a fundamental between `lowHz` and `highHz`
  */
 export function combFundamental(
   samples: Float64Array,
   sampleRateHz: number,
-  { lowHz, highHz }: { lowHz: number; highHz: number },
+  range: { lowHz: number; highHz: number },
+  hinted: boolean,
 ): FundamentalCandidate | null {
   const spectrum = hannSpectrum(samples, sampleRateHz);
   const peaks = peakPlaces(spectrum);
-  const combs = harmonicCombs(peaks, { lowHz, highHz, bandHz: sampleRateHz / 2 });
-  const worth = (comb: HarmonicComb) => comb.evidence + SHARE_WEIGHT * Math.log(comb.share);
-  const [first, ...others] = combs.filter((comb) => comb.share > 0);
-  if (!first) return null;
-  const best = others.reduce((a, b) => (worth(b) > worth(a) ? b : a), first);
-  return {
-    frequencyHz: best.fundamentalHz,
-    uncertaintyHz: best.uncertaintyHz,
-    typicalOrder: typicalOrder(best.orders, peaks),
-    standsOut: best.orders.includes(1) || exceedsFloor(spectrum, best),
-  };
+  const combRange = { ...range, bandHz: sampleRateHz / 2 };
+  const best = hinted ? bestEvidence(harmonicCombs(peaks, combRange)) : mainSeries(peaks, combRange);
+  return (
+    best && {
+      frequencyHz: best.fundamentalHz,
+      uncertaintyHz: best.uncertaintyHz,
+      typicalOrder: typicalOrder(best.orders, peaks),
+      standsOut: best.orders.includes(1) || exceedsFloor(spectrum, best),
+    }
+  );
+}
+
+/** The series or single line that the record is most about. */
+function mainSeries(peaks: readonly PeakPlace[], range: CombRange): HarmonicComb | null {
+  const families = harmonicFamilies(peaks, range, { leastEvidence: 0, most: MOST_FAMILIES });
+  const total = peaks.reduce((sum, peak) => sum + peak.power, 0);
+  const singles = peaks
+    .map((peak, i) => ({ ...singleLine(peaks, i), share: peak.power / total }))
+    .filter(({ fundamentalHz }, i) => {
+      const inRange = fundamentalHz >= range.lowHz && fundamentalHz <= range.highHz;
+      return inRange && families.every(({ orders }) => orders[i] === 0);
+    });
+  const worth = ({ evidence, share }: HarmonicComb) => evidence + SHARE_WEIGHT * Math.log(share);
+  return [...families, ...singles]
+    .filter(({ share }) => share >= LEAST_SHARE)
+    .reduce<HarmonicComb | null>((best, comb) => (best && worth(best) >= worth(comb) ? best : comb), null);
+}
+
+function singleLine(peaks: readonly PeakPlace[], index: number): Omit<HarmonicComb, 'share'> {
+  const { frequencyHz, uncertaintyHz } = peaks[index]!;
+  const orders = peaks.map((_, i) => (i === index ? 1 : 0));
+  return { fundamentalHz: frequencyHz, uncertaintyHz, orders, evidence: 0 };
 }
 
 interface Spectrum {

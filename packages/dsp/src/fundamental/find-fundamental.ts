@@ -101,7 +101,8 @@ function searchRange(sampleCount: number, sampleRateHz: number, nominal: number 
 
 function findStart(ac: Float64Array, sampleRateHz: number, range: Range, hinted: boolean): Start | null {
   const cycles = (range.lowHz * ac.length) / sampleRateHz;
-  const candidate = hinted && cycles < SPECTRUM_CYCLES ? null : combFundamental(ac, sampleRateHz, range);
+  const candidate =
+    hinted && cycles < SPECTRUM_CYCLES ? null : combFundamental(ac, sampleRateHz, range, hinted);
   if (candidate) {
     const { frequencyHz, uncertaintyHz, typicalOrder, standsOut } = candidate;
     const sharp = (START_LINES * sampleRateHz) / (typicalOrder * uncertaintyHz);
