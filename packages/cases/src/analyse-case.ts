@@ -1,5 +1,6 @@
 import {
-  analyseRecord,
+  analyseSource,
+  computePart,
   type AnalysisSettings,
   type ChannelAnalysis,
   type RecordAnalysis,
@@ -26,9 +27,18 @@ export async function recordOf(folder: string, { files }: ReferenceCase): Promis
   return readRecord(folder, file);
 }
 
-/** Analyses a record as the worker does; what cannot be analysed is left out with the words of the analysis. */
-export function analyse({ sampleRateHz, channels }: CaseRecord, settings: AnalysisSettings): RecordAnalysis {
-  return analyseRecord({ sampleRateHz, channels, settings });
+/** Analyses a record part by part, as the worker of the server does. */
+export function analyse(record: CaseRecord, settings: AnalysisSettings): Promise<RecordAnalysis> {
+  const { sampleRateHz, sampleCount } = record;
+  const samples = new Map(record.channels.map((channel) => [channel.index, channel.samples]));
+  const channels = record.channels.map(({ samples: _samples, ...description }) => description);
+  return analyseSource(
+    { sampleRateHz, sampleCount, channels, settings },
+    {
+      runPart: (part, onProgress) =>
+        computePart(part, (index, from, to) => samples.get(index)!.subarray(from, to), { onProgress }),
+    },
+  );
 }
 
 /** Reads and analyses a case of one channel. */
@@ -36,7 +46,7 @@ export async function analyseOneChannel(
   folder: string,
   one: ReferenceCase,
   settings: AnalysisSettings,
-): Promise<{ channel: ChannelAnalysis; record: CaseRecord }> {
-  const record = await recordOf(folder, one);
-  return { channel: analyse(record, settings).channels[0]!, record };
+): Promise<ChannelAnalysis> {
+  const { channels } = await analyse(await recordOf(folder, one), settings);
+  return channels[0]!;
 }

@@ -1,3 +1,4 @@
+import { AnalysisInputError } from '@overtally/dsp';
 import { readCases, type ReferenceCase } from './case-file.js';
 import { distortionOfWaves } from './families/distortion-of-waves.js';
 import { filesFromInstruments } from './families/files-from-instruments.js';
@@ -29,17 +30,20 @@ export interface CaseResults {
   results: Record<string, Quantities>;
   /** Cases without a result, and why. */
   leftOut: { id: string; reason: string }[];
+  /** Cases that ended with an error of the program or its surroundings. */
+  failed: { id: string; error: unknown }[];
 }
 
-/** Computes the quantities of every case in a folder; a case that cannot be served is left out with the reason. */
+/** Computes the quantities of every case in a folder; whatever happens to one of them, the others are computed. */
 export async function runCases(folder: string): Promise<CaseResults> {
-  const outcome: CaseResults = { results: {}, leftOut: [] };
+  const outcome: CaseResults = { results: {}, leftOut: [], failed: [] };
   for (const one of await readCases(folder)) {
     try {
       outcome.results[one.id] = await quantitiesOf(folder, one);
     } catch (error) {
-      if (!(error instanceof CannotServe)) throw error;
-      outcome.leftOut.push({ id: one.id, reason: error.message });
+      if (error instanceof CannotServe || error instanceof AnalysisInputError) {
+        outcome.leftOut.push({ id: one.id, reason: error.message });
+      } else outcome.failed.push({ id: one.id, error });
     }
   }
   return outcome;

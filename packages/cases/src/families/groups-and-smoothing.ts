@@ -25,7 +25,7 @@ const spectra: [string, Rows, 0 | 1][] = [
 /** Family 4: lines, groups and distortion window by window, and their smoothing (IEC 61000-4-7). */
 export const groupsAndSmoothing: Mapper = async (folder, one) => {
   const { cycles_per_window: cycles, highest_order: highest } = groupSettings.parse(one.analysis);
-  const { channel } = await analyseOneChannel(folder, one, {
+  const channel = await analyseOneChannel(folder, one, {
     profile: 'mains',
     nominalFrequencyHz: cycles * nominalLineSpacingHz,
     cyclesPerWindow: cycles,

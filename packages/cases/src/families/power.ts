@@ -38,13 +38,14 @@ export const power: Mapper = async (folder, one) => {
   return ofPair(record, common, pairSettings.parse(one.analysis));
 };
 
-function ofPair(
+async function ofPair(
   record: CaseRecord,
   common: AnalysisSettings,
   { voltage, current, rated_current_a: ratedCurrentA }: z.infer<typeof pairSettings>,
-): Quantities {
+): Promise<Quantities> {
   const pair = { voltage: indexOf(record, voltage), current: indexOf(record, current) };
-  const [result] = analyse(record, { ...common, pairs: [pair], threePhase: [], ratedCurrentA }).power;
+  const settings = { ...common, pairs: [pair], threePhase: [], ratedCurrentA };
+  const [result] = (await analyse(record, settings)).power;
   if (result === undefined) throw new CannotServe('the channels have no common fundamental');
   return { f0_hz: result.frequencyHz, ...pairFigures(result), ...loadFigures(result) };
 }
@@ -79,17 +80,17 @@ function loadFigures({ orders, transformer }: PowerPairResult): Quantities {
   };
 }
 
-function ofThreePhases(
+async function ofThreePhases(
   record: CaseRecord,
   common: AnalysisSettings,
   { voltages, currents, wires, orders }: z.infer<typeof threePhaseSettings>,
-): Quantities {
+): Promise<Quantities> {
   const set = {
     voltages: indicesOf(record, voltages),
     currents: indicesOf(record, currents),
     wires,
   };
-  const [result] = analyse(record, { ...common, pairs: [], threePhase: [set] }).threePhase;
+  const [result] = (await analyse(record, { ...common, pairs: [], threePhase: [set] })).threePhase;
   if (result === undefined) throw new CannotServe('the channels have no common fundamental');
   const phases = result.phases.flatMap((figures, i) =>
     Object.entries(pairFigures(figures)).map(([name, value]) => [`${name}_${i + 1}`, value]),

@@ -4,7 +4,7 @@ import { waveQuantities } from './wave-quantities.js';
 
 /** Family 1: a pure sine, by least squares over the whole record. */
 export const sines: Mapper = async (folder, one) => {
-  const { channel } = await analyseOneChannel(folder, one, {
+  const channel = await analyseOneChannel(folder, one, {
     profile: 'general',
     nominalFrequencyHz: nominalOf(one),
   });

@@ -22,7 +22,7 @@ export const singleTones: Mapper = async (folder, one) => {
     thdMaxOrder: highestOrder,
     bandHz: audioBandHz,
   };
-  const { channel } = await analyseOneChannel(folder, one, settings);
+  const channel = await analyseOneChannel(folder, one, settings);
   const { tone, sinadDb } = channel;
   return {
     f0_hz: channel.fundamental?.frequencyHz ?? null,
