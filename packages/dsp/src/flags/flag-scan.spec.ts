@@ -75,6 +75,17 @@ describe('flat crests', () => {
     expect(clippedFlag(scan(samples), RATE)).toBeNull();
   });
 
+  it('count from where the new level begins when a plateau below comes first', () => {
+    // A plateau of 100 samples at 0.8 leads to one of 30 at 1, twice, after a block that knows only 0.8.
+    const plateaus = wave(1400, (c, n) => {
+      const place = (n - 500) % 400;
+      if (n < 500 || place >= 130) return limited(sine(c), 0.79) + 0.01 * sine(c);
+      return place < 100 ? 0.8 : 1;
+    });
+    const { evidence } = clippedFlag(scan(plateaus, {}, [500]), RATE)!;
+    expect(evidence).toMatchObject({ count: 2, value: 30, timesS: [0.06, 0.1] });
+  });
+
   it.each([
     ['a sine in 8 bits', (c: number) => Math.round(127 * sine(c)) / 128],
     ['a sine in 5 significant digits', (c: number) => Number((1.2345 * sine(c)).toPrecision(5))],
