@@ -1,7 +1,7 @@
 import { createRealFftPlan } from '../fft/real-fft-plan.js';
 import { findPeaks } from '../peaks/find-peaks.js';
 import { harmonicCombs, type CombRange, type HarmonicComb, type PeakPlace } from '../peaks/harmonic-comb.js';
-import { bestEvidence, harmonicFamilies } from '../peaks/harmonic-families.js';
+import { harmonicFamilies } from '../peaks/harmonic-families.js';
 import { noiseFloor } from '../peaks/noise-floor.js';
 import { windowGains } from '../windows/window-gains.js';
 import { windowSamples } from '../windows/window-samples.js';
@@ -48,7 +48,9 @@ export function combFundamental(
   const spectrum = hannSpectrum(samples, sampleRateHz);
   const peaks = peakPlaces(spectrum);
   const combRange = { ...range, bandHz: sampleRateHz / 2 };
-  const best = hinted ? bestEvidence(harmonicCombs(peaks, combRange)) : mainSeries(peaks, combRange);
+  const best = hinted
+    ? mostWorth(harmonicCombs(peaks, combRange).filter(({ share }) => share > 0))
+    : mainSeries(peaks, combRange);
   return (
     best && {
       frequencyHz: best.fundamentalHz,
@@ -69,10 +71,15 @@ function mainSeries(peaks: readonly PeakPlace[], range: CombRange): HarmonicComb
       const inRange = fundamentalHz >= range.lowHz && fundamentalHz <= range.highHz;
       return inRange && families.every(({ orders }) => orders[i] === 0);
     });
+  return mostWorth([...families, ...singles].filter(({ share }) => share >= LEAST_SHARE));
+}
+
+function mostWorth(combs: readonly HarmonicComb[]): HarmonicComb | null {
   const worth = ({ evidence, share }: HarmonicComb) => evidence + SHARE_WEIGHT * Math.log(share);
-  return [...families, ...singles]
-    .filter(({ share }) => share >= LEAST_SHARE)
-    .reduce<HarmonicComb | null>((best, comb) => (best && worth(best) >= worth(comb) ? best : comb), null);
+  return combs.reduce<HarmonicComb | null>(
+    (best, comb) => (best && worth(best) >= worth(comb) ? best : comb),
+    null,
+  );
 }
 
 function singleLine(peaks: readonly PeakPlace[], index: number): Omit<HarmonicComb, 'share'> {

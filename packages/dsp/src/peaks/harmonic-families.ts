@@ -28,7 +28,7 @@ export function harmonicFamilies(
   return families;
 }
 
-export function bestEvidence(combs: readonly HarmonicComb[]): HarmonicComb | null {
+function bestEvidence(combs: readonly HarmonicComb[]): HarmonicComb | null {
   return combs.reduce<HarmonicComb | null>(
     (best, comb) => (comb.evidence > (best?.evidence ?? -Infinity) ? comb : best),
     null,
