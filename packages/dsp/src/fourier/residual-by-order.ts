@@ -62,6 +62,6 @@ export function ordersForResidual(series: FourierSeries, percent: number): Order
 /** Index n: root of the sum of squares from the n-th value on, added from the end so that small ones count. */
 function remainders(rms: readonly number[], restRms: number): number[] {
   const left = [restRms * restRms];
-  for (let i = rms.length - 1; i >= 0; i--) left.push(left.at(-1) + rms[i]! ** 2);
+  for (let i = rms.length - 1; i >= 0; i--) left.push(left[left.length - 1]! + rms[i]! ** 2);
   return left.reverse().map(Math.sqrt);
 }

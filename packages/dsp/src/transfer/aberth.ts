@@ -72,8 +72,8 @@ function upperHull(heights: readonly number[]): number[] {
   heights.forEach((height, k) => {
     if (height === -Infinity) return;
     while (hull.length >= 2) {
-      const a = hull.at(-2);
-      const b = hull.at(-1);
+      const a = hull[hull.length - 2]!;
+      const b = hull[hull.length - 1]!;
       if ((heights[b]! - heights[a]!) * (k - a) > (height - heights[a]!) * (b - a)) break;
       hull.pop();
     }

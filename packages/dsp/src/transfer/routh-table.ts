@@ -58,8 +58,8 @@ export function routhTable(coefficients: readonly number[]): RouthTable {
     { elements: everySecond(0), special: null },
   ];
   for (let power = degree - 1; power >= 0; power--) {
-    const above = rows.at(-1).elements;
-    const elements = rows.length === 1 ? everySecond(1) : nextRow(rows.at(-2).elements, above);
+    const above = rows[rows.length - 1]!.elements;
+    const elements = rows.length === 1 ? everySecond(1) : nextRow(rows[rows.length - 2]!.elements, above);
     rows.push(withoutZeros(elements, above, power));
   }
   const heads = rows.map(({ elements }) => signOf(elements[0]!)).filter((sign) => sign !== 0);
