@@ -13,11 +13,14 @@ interface FigureFrameProps {
   toggles?: ReactNode;
   /** Table twin of the figure; adds the switch between the two. */
   table?: ReactNode;
+  /** Stands under the figure and under its table. */
+  foot?: ReactNode;
   children: ReactNode;
 }
 
 /** Frame of a chart: what it shows, its key figures, its toggles and its table twin. */
-export function FigureFrame({ title, subtitle, figures = [], toggles, table, children }: FigureFrameProps) {
+export function FigureFrame(props: FigureFrameProps) {
+  const { title, subtitle, figures = [], toggles, table, foot, children } = props;
   const id = useId();
   const [view, setView] = useState<'figure' | 'table'>('figure');
   const showsTable = view === 'table' && table !== undefined;
@@ -58,6 +61,7 @@ export function FigureFrame({ title, subtitle, figures = [], toggles, table, chi
         </Flex>
       </Flex>
       <Box minW="0">{showsTable ? table : children}</Box>
+      {foot}
     </Sheet>
   );
 }

@@ -20,6 +20,49 @@ export function MarginLayout({ children, margin }: MarginLayoutProps) {
   );
 }
 
+interface MarginRowProps {
+  /** Names the margin for screen readers: "Margin beside the waveform". */
+  label: string;
+  /** Heading of the margin, over the first row of a page. */
+  title?: string;
+  /** What is said about the figure; the column stays free where nothing is. */
+  margin?: ReactNode;
+  children: ReactNode;
+}
+
+/** A figure with what the margin says about it at its right, or under it on narrow screens. */
+export function MarginRow({ label, title, margin, children }: MarginRowProps) {
+  return (
+    <Flex direction={{ base: 'column', xl: 'row' }} align="flex-start" columnGap="6">
+      <Box flex="1" minW="0" w="full">
+        {children}
+      </Box>
+      <chakra.aside
+        aria-label={label}
+        w={{ base: 'full', xl: '292px' }}
+        flexShrink="0"
+        mb={{ base: '4', xl: '4' }}
+        css={{ '&:empty': { marginBottom: 0 } }}
+      >
+        {title ? (
+          <Heading
+            as="h2"
+            fontSize="sm"
+            lineHeight="1.45"
+            pb="2"
+            borderBottomWidth="2px"
+            borderColor="ink"
+            hideBelow="xl"
+          >
+            {title}
+          </Heading>
+        ) : null}
+        {margin}
+      </chakra.aside>
+    </Flex>
+  );
+}
+
 /** Column for what would be pencilled beside a figure: flags, notes, legends. */
 export function MarginColumn({
   title,
@@ -50,13 +93,15 @@ interface MarginItemProps {
   title?: ReactNode;
   /** Draws a bar at the side for flags. */
   tone?: 'over' | 'near' | 'act';
+  /** Stands behind the title: "error". */
+  aside?: string;
   /** Author and day. */
   foot?: ReactNode;
   children?: ReactNode;
 }
 
 /** One entry of the margin. */
-export function MarginItem({ letter, title, tone, foot, children }: MarginItemProps) {
+export function MarginItem({ letter, title, tone, aside, foot, children }: MarginItemProps) {
   return (
     <Box py="3" borderBottomWidth="1px" borderColor="rule" _last={{ borderBottomWidth: '0' }} fontSize="13px">
       <Box borderLeftWidth={tone ? '3px' : '0'} borderColor={tone} pl={tone ? '2.5' : '0'}>
@@ -68,6 +113,11 @@ export function MarginItem({ letter, title, tone, foot, children }: MarginItemPr
               </Box>
             ) : null}
             {title}
+            {aside ? (
+              <Box as="span" fontWeight="400" color="inkSoft">
+                {` ${aside}`}
+              </Box>
+            ) : null}
           </Text>
         ) : null}
         {children}

@@ -24,7 +24,7 @@ export function NumberInput({ value, min, max, onChange, ...props }: NumberInput
       fontFamily="mono"
       inputMode="decimal"
       {...props}
-      value={draft ?? numberText(value)}
+      value={draft ?? numberText(value, 6)}
       aria-invalid={isFit ? undefined : true}
       onChange={(event) => setDraft(event.target.value)}
       onBlur={commit}

@@ -1,4 +1,4 @@
-import { Box, Button, Flex, Table, Text } from '@chakra-ui/react';
+import { Box, Button, chakra, Flex, Table, Text } from '@chakra-ui/react';
 import { useId, useMemo, useRef, useState, type ReactNode } from 'react';
 import { toCsv, toTsv } from '../lib/delimited.js';
 import { saveText } from '../lib/save-file.js';
@@ -20,6 +20,7 @@ interface TableTwinProps<Row> {
   initialSort?: Sort;
   /** Rows to be seen as selected. */
   isSelected?: (row: Row) => boolean;
+  /** Makes rows selectable: by a click anywhere, and by a button in the first cell. */
   onSelect?: (row: Row) => void;
   /** Largest height before the rows scroll under their heading. */
   maxHeight?: string;
@@ -130,7 +131,7 @@ function TwinRow<Row>(props: TableTwinProps<Row> & { row: Row }) {
         cursor={onSelect ? 'pointer' : undefined}
         onClick={onSelect ? () => onSelect(row) : undefined}
       >
-        {columns.map((column) => (
+        {columns.map((column, index) => (
           <Table.Cell
             key={column.key}
             textAlign={column.align === 'right' ? 'end' : 'start'}
@@ -140,7 +141,24 @@ function TwinRow<Row>(props: TableTwinProps<Row> & { row: Row }) {
             fontWeight={column.tone?.(row) === 'over' ? '600' : undefined}
             whiteSpace="nowrap"
           >
-            {column.show ? column.show(row) : (column.value(row) ?? '–')}
+            {onSelect && index === 0 ? (
+              <chakra.button
+                type="button"
+                color="act"
+                cursor="pointer"
+                minW="6"
+                textAlign="inherit"
+                aria-pressed={isSelected?.(row) ?? false}
+                onClick={(event) => {
+                  event.stopPropagation();
+                  onSelect(row);
+                }}
+              >
+                {shownCell(column, row)}
+              </chakra.button>
+            ) : (
+              shownCell(column, row)
+            )}
           </Table.Cell>
         ))}
         {detail ? (
@@ -169,6 +187,10 @@ function TwinRow<Row>(props: TableTwinProps<Row> & { row: Row }) {
       ) : null}
     </>
   );
+}
+
+function shownCell<Row>(column: TableColumn<Row>, row: Row): ReactNode {
+  return column.show ? column.show(row) : (column.value(row) ?? '–');
 }
 
 function sortRows<Row>(

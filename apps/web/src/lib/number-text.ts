@@ -5,4 +5,4 @@ export function numberOf(text: string): number | undefined {
 }
 
 /** A number for a field, without digits that only binary arithmetic has put there: 0.3, not 0.30000000000000004. */
-export const numberText = (value: number): string => String(Number(value.toPrecision(9)));
+export const numberText = (value: number, digits = 9): string => String(Number(value.toPrecision(digits)));

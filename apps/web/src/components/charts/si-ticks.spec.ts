@@ -19,6 +19,16 @@ describe('axis ticks', () => {
     expect(linearTicks(-350, 350, 'V', 3).tickvals).toEqual([-200, 0, 200]);
   });
 
+  it('take as many digits as tell them apart', () => {
+    expect(linearTicks(49.976, 49.9849, 'Hz', 3).ticktext).toEqual([
+      `49.976${gap}Hz`,
+      `49.978${gap}Hz`,
+      `49.98${gap}Hz`,
+      `49.982${gap}Hz`,
+      `49.984${gap}Hz`,
+    ]);
+  });
+
   it('carry no rounding residue of the binary steps', () => {
     expect(linearTicks(0, 0.3, '', 3).ticktext).toEqual(['0', '0.1', '0.2', '0.3']);
   });

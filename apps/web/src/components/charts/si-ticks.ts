@@ -6,7 +6,13 @@ export interface AxisTicks {
   ticktext: string[];
 }
 
-const label = (value: number, unit: string) => formatSi(value, unit, { digits: 4, trim: true });
+const label = (value: number, unit: string, digits = 4) => formatSi(value, unit, { digits, trim: true });
+
+/** Digits that tell neighbouring ticks apart: five for 49.98 and 49.982. */
+function digitsFor(farthest: number, step: number): number {
+  const places = Math.floor(Math.log10(farthest)) - Math.floor(Math.log10(step)) + 1;
+  return Math.max(4, places);
+}
 
 /** Step of 1, 2 or 5 times a power of ten that comes nearest to `count` steps over `span`, on a scale of ratios. */
 function niceStep(span: number, count: number): number {
@@ -24,7 +30,9 @@ export function linearTicks(from: number, to: number, unit: string, count = 4): 
   const first = Math.ceil(from / step - 1e-9);
   const last = Math.floor(to / step + 1e-9);
   const tickvals = Array.from({ length: last - first + 1 }, (_, i) => (first + i) * step);
-  return { tickvals, ticktext: tickvals.map((value) => label(Number(value.toPrecision(12)), unit)) };
+  const digits = digitsFor(Math.max(Math.abs(from), Math.abs(to)), step);
+  const ticktext = tickvals.map((value) => label(Number(value.toPrecision(12)), unit, digits));
+  return { tickvals, ticktext };
 }
 
 /** Ticks at whole powers of ten within [from, to]; every second one or fewer where there are many. */

@@ -14,6 +14,8 @@ interface OverviewStripProps {
   /** Shortest span that makes sense, in seconds. */
   leastS: number;
   onView: (view: Span) => void;
+  /** Part of the record that was analysed, where it is not all of it. */
+  analysed?: Span | null;
 }
 
 const width = 1000;
@@ -25,7 +27,8 @@ const edgeReach = 8;
  * The whole record with a window on the part in view. The window is dragged, its edges stretch it, a drag beside it
  * draws a new one; arrows move it by a quarter, Page Up and Page Down by its length, + and − change the length.
  */
-export function OverviewStrip({ waveform, durationS, view, leastS, onView }: OverviewStripProps) {
+export function OverviewStrip(props: OverviewStripProps) {
+  const { waveform, durationS, view, leastS, onView, analysed = null } = props;
   const strip = useRef<HTMLDivElement>(null);
   const path = useMemo(() => (waveform ? overviewPath(waveform, width, height) : ''), [waveform]);
   const show = (span: Span) => onView(clampSpan(span, durationS, leastS));
@@ -51,6 +54,12 @@ export function OverviewStrip({ waveform, durationS, view, leastS, onView }: Ove
       >
         <chakra.path d={path} fill="ruleStrong" />
       </chakra.svg>
+      {analysed ? (
+        <>
+          <Veil fromS={0} toS={analysed.fromS} durationS={durationS} />
+          <Veil fromS={analysed.toS} toS={durationS} durationS={durationS} />
+        </>
+      ) : null}
       <Box
         role="slider"
         tabIndex={0}
@@ -71,6 +80,22 @@ export function OverviewStrip({ waveform, durationS, view, leastS, onView }: Ove
         cursor="grab"
       />
     </Box>
+  );
+}
+
+/** Lies over what was not analysed. */
+function Veil({ fromS, toS, durationS }: Span & { durationS: number }) {
+  if (!(toS > fromS)) return null;
+  return (
+    <Box
+      position="absolute"
+      top="0"
+      bottom="0"
+      left={`${(100 * fromS) / durationS}%`}
+      w={`${(100 * (toS - fromS)) / durationS}%`}
+      bg="sheet/75"
+      pointerEvents="none"
+    />
   );
 }
 

@@ -22,6 +22,7 @@ const input = (change: Partial<WaveformChartInput>): WaveformChartInput => ({
   span: { fromS: 1, toS: 1.08 },
   notes: [],
   labels: 9,
+  markS: null,
   ...change,
 });
 

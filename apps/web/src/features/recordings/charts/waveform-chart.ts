@@ -31,11 +31,13 @@ export interface WaveformChartInput {
   notes: readonly LetteredNote[];
   /** Labels of the time axis, at most. */
   labels: number;
+  /** A moment that is pointed at; null: none. */
+  markS: number | null;
 }
 
 /** Trace and layout of the zoomed waveform with brackets and letters where notes speak of a time span. */
 export function waveformChart(
-  { waveform, span, notes, labels }: WaveformChartInput,
+  { waveform, span, notes, labels, markS }: WaveformChartInput,
   palette: Palette,
 ): { traces: PlotTrace[]; layout: PlotLayout } {
   const { unit, factor } = timeUnit(span.toS - span.fromS);
@@ -77,7 +79,10 @@ export function waveformChart(
         ...linearTicks(bottom, top, waveform.unit, 3),
         ticklabelstandoff: 6,
       },
-      shapes: spans.flatMap(({ fromS, toS }) => bracket(fromS * factor, toS * factor, palette)),
+      shapes: [
+        ...spans.flatMap(({ fromS, toS }) => bracket(fromS * factor, toS * factor, palette)),
+        ...(markS === null ? [] : [pointer(markS * factor, palette)]),
+      ],
     },
   };
 }
@@ -113,6 +118,16 @@ function bracket(from: number, to: number, palette: Palette) {
     line: { color: palette.inkSoft, width: 1, dash },
   });
   return [line(from, to, 1, 'solid'), line(from, from, 0, 'dot'), line(to, to, 0, 'dot')];
+}
+
+/** An upright line at a moment. */
+function pointer(x: number, palette: Palette) {
+  return {
+    type: 'line',
+    layer: 'below',
+    ...{ x0: x, x1: x, yref: 'paper', y0: 0, y1: 1 },
+    line: { color: palette.near, width: 2 },
+  };
 }
 
 /** The span that zooming in the chart asks for; `whole` after a double click, null for any other change. */

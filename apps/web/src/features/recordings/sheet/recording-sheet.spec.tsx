@@ -55,11 +55,17 @@ const waveform = {
   ...{ values: [0, 1], minimum: [], maximum: [] },
 };
 
+const rmsSeries = {
+  ...{ channel: 0, figure: 'rms', order: null, unit: 'A', aggregation: 'window', intervalS: 0.2 },
+  ...{ timeS: [0, 0.2, 0.4], value: [3.1, 3.2, 3.3], flagged: [false, true, false], thinned: false },
+};
+
 const answers = (analysis = clippedAnalysis(), notes: Note[] = []) => ({
   [`GET /recordings/${recordingId}/analyses`]: page([analysis]),
   [`GET /recordings/${recordingId}/waveform`]: json(waveform),
   [`GET /analyses/${analysisId}`]: json(analysis),
   [`GET /analyses/${analysisId}/notes`]: page(notes),
+  [`GET /analyses/${analysisId}/series`]: json(rmsSeries),
 });
 
 function show(recording: Recording, role: 'manager' | 'guest' = 'manager') {

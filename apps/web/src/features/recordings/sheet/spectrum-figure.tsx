@@ -1,5 +1,5 @@
 import type { ChannelAnalysis, LimitSet, Recording, Settings } from '@overtally/contracts';
-import { useMemo, useState } from 'react';
+import { useMemo, useState, type ReactNode } from 'react';
 import { FigureFrame } from '../../../components/figure-frame.js';
 import { Segmented } from '../../../components/segmented.js';
 import { TableTwin } from '../../../components/table-twin.js';
@@ -25,6 +25,8 @@ interface SpectrumFigureProps {
   notes: readonly LetteredNote[];
   target: NoteTarget | null;
   onTarget: (target: NoteTarget) => void;
+  /** What stands under chart and table: the selection. */
+  foot: ReactNode;
 }
 
 type Abscissa = 'order' | 'frequency';
@@ -49,6 +51,7 @@ export function SpectrumFigure(props: SpectrumFigureProps) {
     <FigureFrame
       title={title}
       subtitle={abscissa === 'order' ? orderWords(channel, settings) : undefined}
+      foot={props.foot}
       toggles={
         <>
           {rows.length > 0 ? (

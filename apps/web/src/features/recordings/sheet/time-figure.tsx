@@ -24,6 +24,10 @@ interface TimeFigureProps {
   figures: ChannelAnalysis | null;
   /** Notes on the channel; those on time spans are marked. */
   notes?: readonly LetteredNote[];
+  /** Part of the record that was analysed; null: all of it, or nothing yet. */
+  analysed?: Span | null;
+  /** A moment that is pointed at. */
+  markS?: number | null;
   view: Span;
   onView: (view: Span) => void;
   /** Begins a note on the part in view; absent for those who may not write. */
@@ -38,6 +42,7 @@ const settleMs = 120;
 /** Figure 1: the whole record as a strip, and the part in view as it was sampled. */
 export function TimeFigure(props: TimeFigureProps) {
   const { recording, channel, figures, notes = noNotes, view, onView, onNote } = props;
+  const { analysed = null, markS = null } = props;
   const palette = usePalette();
   const labels = useBreakpointValue({ base: 4, md: 9 }, { ssr: false }) ?? 9;
   const durationS = recording.durationS ?? 0;
@@ -46,8 +51,9 @@ export function TimeFigure(props: TimeFigureProps) {
   const overview = useQuery(waveformQuery(recording, { channel: channel.index, points: 1200 }));
   const part = useQuery(waveformQuery(recording, { channel: channel.index, ...settled, points: 2400 }));
   const chart = useMemo(
-    () => (part.data ? waveformChart({ waveform: part.data, span: view, notes, labels }, palette) : null),
-    [part.data, view, notes, labels, palette],
+    () =>
+      part.data ? waveformChart({ waveform: part.data, span: view, notes, labels, markS }, palette) : null,
+    [part.data, view, notes, labels, markS, palette],
   );
   const zoom = (event: PlotRelayoutEvent) => {
     const wanted = spanOfRelayout(event, view);
@@ -58,7 +64,7 @@ export function TimeFigure(props: TimeFigureProps) {
   return (
     <FigureFrame
       title={title}
-      subtitle={viewWords(view, durationS, figures?.fundamental?.frequencyHz ?? null)}
+      subtitle={subtitle(view, durationS, figures, analysed)}
       figures={timeFigures(channel, figures)}
       toggles={
         onNote ? (
@@ -75,6 +81,7 @@ export function TimeFigure(props: TimeFigureProps) {
         leastS={leastS}
         view={view}
         onView={onView}
+        analysed={analysed}
       />
       {part.isError ? <ErrorState error={part.error} onRetry={() => void part.refetch()} /> : null}
       {part.isPending ? (
@@ -99,6 +106,17 @@ export function TimeFigure(props: TimeFigureProps) {
       ) : null}
     </FigureFrame>
   );
+}
+
+function subtitle(
+  view: Span,
+  durationS: number,
+  figures: ChannelAnalysis | null,
+  analysed: Span | null,
+): string {
+  const shown = viewWords(view, durationS, figures?.fundamental?.frequencyHz ?? null);
+  if (!analysed) return shown;
+  return `${shown}; analysed from ${formatDuration(analysed.fromS)} to ${formatDuration(analysed.toS)}`;
 }
 
 function viewWords(view: Span, durationS: number, fundamentalHz: number | null): string {
