@@ -78,10 +78,10 @@ describe('a coarse converter step', () => {
   });
 
   it('is not read into a signal of few levels, unless the converter is known to be nearly idle', () => {
-    const levels = record(20_000, (t) => Math.round(turn(50 * t)));
-    expect(lowResolutionFlag(scan(levels), 0.8)).toBeNull();
+    const levels = record(20_000, (t) => Math.round(2 * turn(50 * t)));
+    expect(lowResolutionFlag(scan(levels), 1.4)).toBeNull();
     const wide = { lowestCode: -32_768, highestCode: 32_767 };
-    expect(lowResolutionFlag(scan(levels, wide), 0.8)!.message).toContain('spans only 3 codes');
+    expect(lowResolutionFlag(scan(levels, wide), 1.4)!.message).toContain('spans only 5 codes');
   });
 
   it('is not read into samples that lie on no grid', () => {

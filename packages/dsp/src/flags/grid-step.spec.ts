@@ -14,7 +14,7 @@ const sine = Float64Array.from({ length: 20_000 }, (_, n) => Math.sin((2 * Math.
 
 // The step of a b-bit converter of range ±1 is 2^(1 − b).
 describe('the grid of a record', () => {
-  it.each([8, 12, 16, 20])('is the converter step of %d bits, with gain and offset', (bits) => {
+  it.each([8, 12, 14, 16])('is the converter step of %d bits, with gain and offset', (bits) => {
     const codes = sine.map((x) => Math.round(0.9 * x * 2 ** (bits - 1)));
     expect(stepOf(codes.map((code) => code / 2 ** (bits - 1)))).toBeCloseTo(2 ** (1 - bits), 12);
     const step = stepOf(codes.map((code) => (code / 2 ** (bits - 1)) * 353.7 + 12.9))!;
@@ -28,6 +28,22 @@ describe('the grid of a record', () => {
   it('is the one at the crests of a table with fixed significant digits', () => {
     const step = stepOf(sine.map((x) => Number((3.25 * x).toPrecision(5))));
     expect(step).toBeCloseTo(1e-4, 9);
+  });
+
+  // 200 samples a cycle, of which only the nine around each crest lie in the decade of the peak.
+  it('is not read into the few values of a periodic wave in the decade of its peak', () => {
+    expect(
+      stepOf(Float64Array.from({ length: 4000 }, (_, n) => 1.01 * Math.sin((2 * Math.PI * n) / 200))),
+    ).toBeNull();
+    expect(
+      stepOf(Float64Array.from({ length: 4000 }, (_, n) => 1.01 * Math.sin((2 * Math.PI * n) / 24))),
+    ).toBeNull();
+    expect(stepOf(Float64Array.from({ length: 4000 }, (_, n) => (n % 50 < 25 ? 1 : -1)))).toBeNull();
+  });
+
+  it('is seen where successive samples differ by one step at most', () => {
+    const slow = Float64Array.from({ length: 60_000 }, (_, n) => Math.round(100 * Math.sin(n / 4000)) / 128);
+    expect(stepOf(slow)).toBeCloseTo(1 / 128, 12);
   });
 
   it('is not told from no grid at 24 bits, where it matters for nothing', () => {
