@@ -20,8 +20,8 @@ export type LineAnalysis = (
   windowSamples: number,
 ) => Lines;
 
-/** Window lengths kept: those that a mains frequency takes within some minutes. About 30 MB. */
-const MOST_PLANS = 96;
+/** Window lengths kept: those that a mains frequency takes within some minutes. About 60 MB. */
+const MOST_PLANS = 160;
 
 /** Plans used last, the oldest first; shared by all parts that a thread computes. */
 const plans = new Map<string, Lines>();
