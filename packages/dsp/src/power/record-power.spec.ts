@@ -52,6 +52,19 @@ describe('recordPower', () => {
     expect(result.threePhase[0]!.phases[2].P).toBeCloseTo(230, 10);
   });
 
+  it('converts the noise with the unit', () => {
+    // 2000 mA stand out of 10 · 150 mA of noise and drown in 10 · 250 mA.
+    const phase = (noiseRms: number) =>
+      recordPower({
+        frequencyHz: 50,
+        channels: [CHANNELS[3]!, { ...CHANNELS[1]!, phasors: { ...CHANNELS[1]!.phasors, noiseRms } }],
+        pairs: [{ voltage: 8, current: 5 }],
+        threePhase: [],
+      }).power[0]!.orders[0]!.phaseDifferenceDeg;
+    expect(phase(150)).toBe(60);
+    expect(phase(250)).toBeNull();
+  });
+
   it.each([
     ['no channel', { voltage: 4, current: 5 }, /no channel 4/],
     ['a unit of something else', { voltage: 3, current: 7 }, /"x7" has the unit "g"/],

@@ -38,6 +38,12 @@ describe('threePhaseFigures', () => {
     expect(figures.neutralRms).toBeCloseTo(0, 12);
   });
 
+  it('counts the neutral with four wires only', () => {
+    const one: Triple<PhasorSet> = [sine(3, 0), OFF, OFF];
+    expect(threePhaseFigures(BALANCED, one, '3w').figures.Ie).toBeCloseTo(Math.sqrt(3), 12);
+    expect(threePhaseFigures(BALANCED, one, '4w').figures.Ie).toBeCloseTo(Math.sqrt(6), 12);
+  });
+
   it('adds currents of the third order in the neutral', () => {
     const currents = rotating((phase) => ({
       dc: 0,
