@@ -39,6 +39,7 @@ export { synthesise, type SynthesisComponent } from './harmonics/synthesise.js';
 export { crestFactor } from './figures/crest-factor.js';
 export { formFactor } from './figures/form-factor.js';
 export { thdF, thdR } from './figures/distortion.js';
+export { listPeaks, type PeakList, type PeakListOptions } from './peaks/list-peaks.js';
 export { combineToneFigures, toneFigures } from './tone/tone-figures.js';
 export { sineFit3, sineFit4, type SineFit } from './tone/sine-fit.js';
 export { longestToneStretch } from './tone/combine-tone-powers.js';

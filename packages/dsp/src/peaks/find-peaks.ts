@@ -14,6 +14,8 @@ export interface PeakSearch {
   power: Float64Array;
   /** Mean noise power per line. */
   floor: Float64Array;
+  /** Periodograms averaged in each line, default 1. */
+  averages?: number | undefined;
   /** Transform of the window by distance in lines, relative to its peak. */
   transform: (lines: number) => number;
   /** Equivalent noise bandwidth of the window in lines. */
@@ -29,8 +31,11 @@ const FALSE_PEAKS = 0.01;
 const VALLEY_SHARE = 0.25;
 /** Two such maxima make a broad peak; below this share of the other one, a maximum is only a bump on its slope. */
 const BUMP_SHARE = 0.1;
-/** A peak wider than this, at a quarter of its power, is no steady line. */
-const STEADY_WIDTH = 4;
+/** How far down the flanks of a broad peak its power is summed. */
+const FLANK_SHARE = 0.02;
+/** Lines that a steady line may be wide at a quarter of its power: beside these, a share of the noise bandwidth. */
+const STEADY_WIDTH = 2;
+const STEADY_BANDWIDTHS = 1.3;
 /** A peak must exceed the side lobes of larger ones this many times in power. */
 const ABOVE_SIDE_LOBES = 4;
 /** Interpolation between lines is no better than this, noise or not. */
@@ -46,13 +51,16 @@ const TRIED = 8;
  * power at its centre of gravity.
  */
 export function findPeaks(search: PeakSearch): Peak[] {
-  const { smallestShare, most } = search;
-  const ranges = peakRanges(search).sort((a, b) => b.top - a.top);
+  const { power, floor, transform, smallestShare, most } = search;
+  // What stands above the mean of the noise is the best guess at the power of the line itself.
+  const excess = power.map((p, k) => Math.max(0, p - floor[k]!));
+  const ranges = peakRanges(search, excess).sort((a, b) => b.top - a.top);
   const threshold = smallestShare * (ranges[0]?.top ?? 0);
+  const dc: Peak = { line: 0, power: 2 * power[0]!, uncertainty: 0 };
   const found: Peak[] = [];
   for (const range of ranges.slice(0, TRIED * most)) {
     if (range.top < threshold || found.length >= most) break;
-    if (!isSideLobe(range, found, search.transform)) found.push(describePeak(range, search));
+    if (!isSideLobe(range, [dc, ...found], transform)) found.push(describePeak(range, search, excess));
   }
   return found.sort((a, b) => b.power - a.power);
 }
@@ -65,24 +73,32 @@ interface PeakRange {
   top: number;
 }
 
-function peakRanges({ power, floor }: PeakSearch): PeakRange[] {
-  const threshold = Math.log(power.length / FALSE_PEAKS);
+function peakRanges({ power, floor, averages = 1 }: PeakSearch, excess: Float64Array): PeakRange[] {
+  const threshold = noiseThreshold(power.length / FALSE_PEAKS, averages);
   const ranges: PeakRange[] = [];
   for (let k = 2; k < power.length - 1; k++) {
     const here = power[k]!;
     if (here <= threshold * floor[k]! || here < power[k - 1]! || here <= power[k + 1]!) continue;
+    const range = { from: k, at: k, to: k, top: excess[k]! };
     const last = ranges.at(-1);
-    if (last && lowestBetween(power, last.at, k) > VALLEY_SHARE * Math.min(here, last.top)) {
-      ranges[ranges.length - 1] = joined(last, { from: k, at: k, to: k, top: here });
+    if (last && lowestBetween(excess, last.at, k) > VALLEY_SHARE * Math.min(range.top, last.top)) {
+      ranges[ranges.length - 1] = joined(last, range);
     } else {
-      ranges.push({ from: k, at: k, to: k, top: here });
+      ranges.push(range);
     }
   }
-  for (const range of ranges) {
-    while (range.from > 1 && power[range.from - 1]! > VALLEY_SHARE * range.top) range.from--;
-    while (range.to < power.length - 2 && power[range.to + 1]! > VALLEY_SHARE * range.top) range.to++;
-  }
   return ranges;
+}
+
+/**
+ * What a mean of exponentially distributed powers exceeds, relative to its expectation, less than once in `odds` lines: the
+ * logarithm for a single one, otherwise by the cube-root approximation of E. B. Wilson and M. M. Hilferty (1931).
+ */
+function noiseThreshold(odds: number, averages: number): number {
+  const logOdds = Math.log(odds);
+  if (averages === 1) return logOdds;
+  const variance = 1 / (9 * averages);
+  return (1 - variance + Math.sqrt(2 * logOdds * variance)) ** 3;
 }
 
 function joined(left: PeakRange, right: PeakRange): PeakRange {
@@ -116,18 +132,35 @@ function envelope(transform: PeakSearch['transform'], lines: number): number {
 }
 
 function describePeak(
-  { from, at, to, top }: PeakRange,
-  { power, floor, transform, enbwLines }: PeakSearch,
+  range: PeakRange,
+  { floor, transform, enbwLines }: PeakSearch,
+  excess: Float64Array,
 ): Peak {
+  const { at, top } = range;
   const noise = NOISE_UNCERTAINTY * Math.sqrt(floor[at]! / top);
-  if (to - from + 1 <= STEADY_WIDTH) {
-    return { ...interpolatePeak(power, at, transform), uncertainty: Math.hypot(SMALLEST_UNCERTAINTY, noise) };
+  const core = widened(range, excess, VALLEY_SHARE);
+  const steadyWidth = Math.ceil(STEADY_WIDTH + STEADY_BANDWIDTHS * enbwLines);
+  if (core.to - core.from < steadyWidth) {
+    return {
+      ...interpolatePeak(excess, at, transform),
+      uncertainty: Math.hypot(SMALLEST_UNCERTAINTY, noise),
+    };
   }
+  const { from, to } = widened(core, excess, FLANK_SHARE);
   let sum = 0;
   let moment = 0;
   for (let k = from; k <= to; k++) {
-    sum += power[k]!;
-    moment += k * power[k]!;
+    sum += excess[k]!;
+    moment += k * excess[k]!;
   }
-  return { line: moment / sum, power: sum / enbwLines, uncertainty: Math.hypot((to - from) / 4, noise) };
+  const width = core.to - core.from;
+  return { line: moment / sum, power: sum / enbwLines, uncertainty: Math.hypot(width / 4, noise) };
+}
+
+/** The range extended on either side as long as the power stays above a share of the top. */
+function widened({ from, at, to, top }: PeakRange, excess: Float64Array, share: number): PeakRange {
+  let [low, high] = [from, to];
+  while (low > 1 && excess[low - 1]! > share * top) low--;
+  while (high < excess.length - 2 && excess[high + 1]! > share * top) high++;
+  return { from: low, at, to: high, top };
 }

@@ -3,6 +3,7 @@ import { badRanges } from '../flags/bad-ranges.js';
 import { frequencyDriftFlag } from '../flags/frequency-drift.js';
 import type { WindowSynchronism } from '../flags/not-synchronous.js';
 import { countedFrequency } from '../fundamental/counted-frequency.js';
+import { listPeaks } from '../peaks/list-peaks.js';
 import type { MeasuredChannel } from '../stages/measure-channels.js';
 import type {
   ChannelAnalysis,
@@ -63,8 +64,7 @@ export function channelAnalysis(measured: MeasuredChannel): ChannelAnalysis {
     distortion: series && distortionStatistics(series),
     bands: series ? bandResults(series) : [],
     countedFrequency: mains && track ? countedFrequency(track, sampleRateHz, sampleCount) : [],
-    lines: [],
-    families: [],
+    ...listPeaks(spectrum, { kaiserBeta: settings.kaiserBeta }),
     uncertainty: uncertainty.figures,
     series,
     flags: channelFlags(measured, synchronism),
