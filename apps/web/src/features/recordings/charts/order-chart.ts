@@ -142,7 +142,8 @@ function belowMarks(
   };
 }
 
-const labelledOrders = (last: number, step: number) =>
+/** Orders that get a label: odd ones for a step of 2, else 1 and the multiples of the step. */
+export const labelledOrders = (last: number, step: number) =>
   Array.from({ length: last }, (_, i) => i + 1).filter((order) =>
     step === 2 ? order % 2 === 1 : order === 1 || order % step === 0,
   );

@@ -8,16 +8,19 @@ import { notesQuery } from '../api/notes.js';
 import { withLetters } from '../charts/note-letters.js';
 import type { ChannelComparison } from '../charts/order-rows.js';
 import type { AnalysedSheetProps } from './analysed-sheet.js';
+import { BandsSection } from './bands-section.js';
 import { FiguresSection } from './figures-section.js';
 import { FlagItems, WarningItems } from './flags/flag-items.js';
 import { flagsAt, type FlagPlace } from './flags/flag-words.js';
 import { InterharmonicsSection } from './interharmonics-section.js';
+import { LinesSection } from './lines/lines-section.js';
 import { MainsCaution } from './mains-caution.js';
 import { NoteItems } from './notes/note-items.js';
 import { NoteWriter } from './notes/note-writer.js';
 import { SelectionLine } from './selection-line.js';
 import { SeriesFigure } from './series/series-figure.js';
 import { SpectrumFigure } from './spectrum-figure.js';
+import { StatisticsSection } from './statistics/statistics-section.js';
 import { TimeFigure } from './time-figure.js';
 import { figureIds, placeOfTarget, type NotePlace, type useSheetState } from './use-sheet-state.js';
 
@@ -127,7 +130,15 @@ export function ChannelFigures(props: ChannelFiguresProps) {
       ) : null}
       <MarginRow label="Cautions" margin={<MainsCaution />}>
         <FiguresSection recording={recording} channel={figures} settings={analysis.settings} />
-        <InterharmonicsSection recording={recording} channel={figures} />
+        <StatisticsSection recording={recording} channel={figures} />
+        <LinesSection
+          recording={recording}
+          channel={figures}
+          target={state.target}
+          onTarget={state.showLine}
+        />
+        <InterharmonicsSection recording={recording} channel={figures} onFollow={state.followInterharmonic} />
+        <BandsSection recording={recording} channel={figures} />
         {slots.verdicts?.(analysis)}
       </MarginRow>
     </>

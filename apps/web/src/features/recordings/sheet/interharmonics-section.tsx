@@ -1,7 +1,6 @@
-import { Button } from '@chakra-ui/react';
 import type { ChannelAnalysis, Recording } from '@overtally/contracts';
-import { useMemo, useState } from 'react';
-import { FigureFrame } from '../../../components/figure-frame.js';
+import { useMemo } from 'react';
+import { FoldingFigure } from '../../../components/folding-figure.js';
 import type { TableColumn } from '../../../components/table-column.js';
 import { TableTwin } from '../../../components/table-twin.js';
 import { formatPercent, formatSi } from '../../../lib/format.js';
@@ -13,37 +12,33 @@ type Interharmonic = ChannelAnalysis['interharmonics'][number];
 export function InterharmonicsSection({
   recording,
   channel,
+  onFollow,
 }: {
   recording: Recording;
   channel: ChannelAnalysis;
+  /** Shows the group above an order over time. */
+  onFollow: (lowerOrder: number) => void;
 }) {
-  const [open, setOpen] = useState(false);
   const columns = useMemo(() => columnsOf(channel), [channel]);
   const { interharmonics, unit } = channel;
   const largest = interharmonics.toSorted((a, b) => b.groupRms - a.groupRms)[0];
   if (!largest) return null;
   const [below, above] = largest.betweenOrders;
   return (
-    <FigureFrame
+    <FoldingFigure
       title="Interharmonics"
       subtitle={`largest group ${formatSi(largest.groupRms, unit)}, between orders ${below} and ${above}`}
-      toggles={
-        <Button size="xs" variant="ghost" aria-expanded={open} onClick={() => setOpen(!open)}>
-          {open ? 'Hide' : 'Show'} the table
-        </Button>
-      }
     >
-      {open ? (
-        <TableTwin
-          caption={`Interharmonics of ${channel.name}`}
-          columns={columns}
-          rows={interharmonics}
-          rowKey={(row) => row.betweenOrders.join('-')}
-          fileName={`${recording.number}-interharmonics`}
-          maxHeight="420px"
-        />
-      ) : null}
-    </FigureFrame>
+      <TableTwin
+        caption={`Interharmonics of ${channel.name}`}
+        columns={columns}
+        rows={interharmonics}
+        rowKey={(row) => row.betweenOrders.join('-')}
+        fileName={`${recording.number}-interharmonics`}
+        onSelect={(row) => onFollow(row.betweenOrders[0])}
+        maxHeight="420px"
+      />
+    </FoldingFigure>
   );
 }
 

@@ -75,6 +75,14 @@ export function useSheetState(
       reveal(placeOfTarget(note.target));
     },
     followTarget: () => reveal('series'),
+    followInterharmonic: (lowerOrder: number) => {
+      setFollowed((before) => ({ ...before, figure: 'interharmonicGroup', order: lowerOrder }));
+      reveal('series');
+    },
+    showLine: (wanted: NoteTarget) => {
+      select(wanted);
+      reveal('spectrum');
+    },
     changeChannel: (index: number) => {
       onChannel(index);
       setTarget(null);

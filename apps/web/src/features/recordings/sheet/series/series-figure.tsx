@@ -1,4 +1,4 @@
-import { Box, Button, Text, useBreakpointValue } from '@chakra-ui/react';
+import { Box, Button, Link, Text, useBreakpointValue } from '@chakra-ui/react';
 import type { ChannelAnalysis, Recording, Series, Settings } from '@overtally/contracts';
 import { useQuery } from '@tanstack/react-query';
 import { useMemo, useState } from 'react';
@@ -8,12 +8,13 @@ import { LoadingState } from '../../../../components/loading-state.js';
 import { Plot, type PlotPointEvent, type PlotRelayoutEvent } from '../../../../components/plot.js';
 import { RangeFields } from '../../../../components/range-fields.js';
 import { formatCount, formatDuration, formatSi } from '../../../../lib/format.js';
+import { apiUrl } from '../../../../lib/http.js';
 import { usePalette } from '../../../../lib/theme/use-palette.js';
 import { seriesQuery } from '../../api/get-series.js';
 import { seriesChart, wholeSeries } from '../../charts/series-chart.js';
 import type { Span } from '../../charts/span.js';
 import { countedSeries } from './counted-series.js';
-import { choiceTitle, statisticsOf, type SeriesChoice } from './series-choice.js';
+import { choiceTitle, orderOptions, statisticsOf, type SeriesChoice } from './series-choice.js';
 import { SeriesControls } from './series-controls.js';
 import { SeriesTable } from './series-table.js';
 
@@ -70,6 +71,17 @@ export function SeriesFigure(props: SeriesFigureProps) {
       {series && isEmpty ? <Text color="inkSoft">{emptyWords(choice)}</Text> : null}
       {series && !isEmpty ? (
         <Steps key={title} series={series} title={title} fromS={fromS} onTime={onTime} />
+      ) : null}
+      {series && !isEmpty && !isCounted ? (
+        <Link
+          fontSize="xs"
+          href={apiUrl(`/analyses/${analysisId}/series.csv`, { channel: channel.index, figure, aggregation })}
+          download
+        >
+          {orderOptions(figure, channel).length > 0
+            ? 'Download every interval of all orders (CSV)'
+            : 'Download every interval (CSV)'}
+        </Link>
       ) : null}
     </FigureFrame>
   );
