@@ -139,6 +139,15 @@ describe('proposePowerPairs', () => {
     expect(pairs).toEqual(['u1/i1/-', 'u2/i2/-', 'u3/i3/-', 'u4/i4/-']);
   });
 
+  it('knows no phases where a name fits two ways of naming them', () => {
+    // B is phase 2 of A, B, C and phase 3 of R, Y, B.
+    const { pairs, sets } = proposed(
+      channels(['VA', 'VB', 'VC', 'VR', 'VY'], ['IA', 'IB', 'IC', 'IR', 'IY']),
+    );
+    expect(sets).toEqual([]);
+    expect(pairs).toEqual(['VA/IA/-', 'VB/IB/-', 'VC/IC/-', 'VR/IR/-', 'VY/IY/-']);
+  });
+
   it('pairs one current with its phase of three voltages', () => {
     expect(proposed(channels(['u1', 'u2', 'u3'], ['i2']))).toEqual({ pairs: ['u2/i2/2'], sets: [] });
   });
