@@ -5,3 +5,4 @@ export { addPowerEven, addPowerOdd, mean, pairSegments } from './power';
 export { decimate, gatherLines, mirror, weigh } from './lines';
 export { addColumns, addOrders, fitOrders } from './leakage';
 export { calmSamples, demodulate, sumBlock } from './blocks';
+export { foldBlock, projectBlock, projectTimedBlock } from './projections';

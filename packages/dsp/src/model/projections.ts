@@ -1,3 +1,5 @@
+import { createBlockProjector, PLAIN_SUMS, plainProjector, TIMED_SUMS } from '../kernels/block-projector.js';
+
 /** Sums over a segment, time counted in samples from its centre c = (N − 1)/2. */
 export interface Projections {
   /** Σ x cos(θ(n − c)) and Σ x sin(θ(n − c)) per component. */
@@ -37,6 +39,8 @@ export function timedProjections(
 }
 
 const HALF_BLOCK = 128;
+/** Samples times components below which compiled code would not earn its preparation. */
+const LEAST_COMPILED = 2 ** 16;
 
 function accumulate(
   samples: Float64Array,
@@ -49,33 +53,24 @@ function accumulate(
   const block = 2 * half;
   const count = angles.length;
   const sums = { cosine: zeros(count), sine: zeros(count), timeCosine: zeros(count), timeSine: zeros(count) };
-  const table = blockTable(angles, half);
+  const createProjector = length * count < LEAST_COMPILED ? plainProjector : createBlockProjector;
+  const project = createProjector(angles, half, timed);
+  const each = timed ? TIMED_SUMS : PLAIN_SUMS;
   const turn = turners(angles, block, (block - length) / 2);
-  const even = zeros(half);
-  const odd = zeros(half);
   for (let b = 0; b * block < length; b++) {
-    foldBlock(samples, start + b * block, start + length, even, odd);
+    const from = start + b * block;
+    const parts = project(samples, from, Math.min(start + length, from + block));
     const offset = b * block + (block - length) / 2;
     for (let c = 0; c < count; c++) {
-      const from = c * half;
-      let re = 0;
-      let im = 0;
-      for (let i = 0; i < half; i++) {
-        re += even[i]! * table.cosine[from + i]!;
-        im -= odd[i]! * table.sine[from + i]!;
-      }
+      const re = parts[each * c]!;
+      const im = parts[each * c + 1]!;
       const zRe = turn.re[c]!;
       const zIm = turn.im[c]!;
       sums.cosine[c]! += re * zRe - im * zIm;
       sums.sine[c]! -= re * zIm + im * zRe;
       if (timed) {
-        let timeRe = offset * re;
-        let timeIm = offset * im;
-        for (let i = 0; i < half; i++) {
-          const tau = i + 0.5;
-          timeRe += tau * odd[i]! * table.cosine[from + i]!;
-          timeIm -= tau * even[i]! * table.sine[from + i]!;
-        }
+        const timeRe = offset * re + parts[each * c + 2]!;
+        const timeIm = offset * im + parts[each * c + 3]!;
         sums.timeCosine[c]! += timeRe * zRe - timeIm * zIm;
         sums.timeSine[c]! -= timeRe * zIm + timeIm * zRe;
       }
@@ -90,18 +85,6 @@ function zeros(length: number): Float64Array {
   return new Float64Array(length);
 }
 
-function blockTable(angles: Float64Array, half: number): { cosine: Float64Array; sine: Float64Array } {
-  const cosine = zeros(angles.length * half);
-  const sine = zeros(angles.length * half);
-  for (let c = 0; c < angles.length; c++) {
-    for (let i = 0; i < half; i++) {
-      cosine[c * half + i] = Math.cos(angles[c]! * (i + 0.5));
-      sine[c * half + i] = Math.sin(angles[c]! * (i + 0.5));
-    }
-  }
-  return { cosine, sine };
-}
-
 /** e^(−jθ·first centre) and the step e^(−jθ·block) per component. */
 function turners(angles: Float64Array, block: number, firstCentre: number) {
   return {
@@ -110,22 +93,4 @@ function turners(angles: Float64Array, block: number, firstCentre: number) {
     stepRe: angles.map((angle) => Math.cos(angle * block)),
     stepIm: angles.map((angle) => -Math.sin(angle * block)),
   };
-}
-
-function foldBlock(
-  samples: Float64Array,
-  start: number,
-  end: number,
-  even: Float64Array,
-  odd: Float64Array,
-): void {
-  const half = even.length;
-  for (let i = 0; i < half; i++) {
-    const right = start + half + i;
-    const left = start + half - 1 - i;
-    const after = right < end ? samples[right]! : 0;
-    const before = left < end ? samples[left]! : 0;
-    even[i] = after + before;
-    odd[i] = after - before;
-  }
 }

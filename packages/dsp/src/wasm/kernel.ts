@@ -55,6 +55,9 @@ export interface KernelFunctions {
   ) => void;
   addColumns: (columns: number, factors: number, count: number, rows: number, target: number) => void;
   addOrders: (lines: number, cycles: number, count: number, factor: number, orders: number) => void;
+  foldBlock: (x: number, half: number, out: number) => void;
+  projectBlock: (folded: number, half: number, table: number, count: number, out: number) => void;
+  projectTimedBlock: (folded: number, half: number, table: number, count: number, out: number) => void;
 }
 
 /** One instance of the compiled kernels with a memory of its own, which lives as long as its plan. */
