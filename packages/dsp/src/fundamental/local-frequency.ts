@@ -1,10 +1,13 @@
-import { deviationAt, type FrequencyTrack } from './frequency-track.js';
+import type { FrequencyTrack } from './frequency-track.js';
 
 const FEWEST_FRAMES = 3;
 
+/** Frames count whose centres lie this share of the stretch outside it: half the distance of frames for ten cycles. */
+const MARGIN = 0.25;
+
 /**
- * Mean frequency between two positions: slope of the straight line through the phases of the frames around them (from
- * one frame before to one frame behind), which averages the noise of single frames.
+ * Mean frequency between two positions: slope of the straight line through the phases of the frames whose centres lie
+ * between them or little outside, of the nearest three at least.
  *
  * @param from position in samples
  * @param to position in samples, behind `from`
@@ -16,13 +19,15 @@ export function meanFrequencyHz(
   to: number,
 ): number {
   const { centres, deviation, carrierHz } = track;
-  const first = Math.max(0, firstAtOrBehind(centres, from) - 1);
-  const end = Math.min(centres.length, firstAtOrBehind(centres, to) + 1);
-  const slope =
-    end - first < FEWEST_FRAMES
-      ? (deviationAt(track, to) - deviationAt(track, from)) / (to - from)
-      : slopeOf(centres, deviation, first, end);
-  return carrierHz + (slope * sampleRateHz) / (2 * Math.PI);
+  const margin = MARGIN * (to - from);
+  let first = firstAtOrBehind(centres, from - margin);
+  let end = firstAtOrBehind(centres, to + margin);
+  while (end - first < FEWEST_FRAMES) {
+    const nextIsNearer = first === 0 || centres[end]! - to < from - centres[first - 1]!;
+    if (nextIsNearer && end < centres.length) end++;
+    else first--;
+  }
+  return carrierHz + (slopeOf(centres, deviation, first, end) * sampleRateHz) / (2 * Math.PI);
 }
 
 /**

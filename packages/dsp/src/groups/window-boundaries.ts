@@ -42,6 +42,7 @@ export function windowBoundaries(
   return Float64Array.from(out);
 }
 
+/** Looks at stretches of two windows, whose mean frequency is less noisy than that of one. */
 function isSteady(
   track: FrequencyTrack,
   sampleRateHz: number,
@@ -52,8 +53,8 @@ function isSteady(
   const noise = phaseNoise(track) / ((2 * Math.PI * frequencyHz * windowSamples) / sampleRateHz);
   const limit = Math.min(LARGEST_STEADY_SHARE, Math.max(LENGTH_STEP, NOISE_DEVIATIONS * noise));
   const last = track.centres[track.centres.length - 1]!;
-  for (let from = 0; from < last; from += windowSamples) {
-    const local = meanFrequencyHz(track, sampleRateHz, from, from + windowSamples);
+  for (let from = 0; from === 0 || from + windowSamples <= last; from += windowSamples) {
+    const local = meanFrequencyHz(track, sampleRateHz, from, from + 2 * windowSamples);
     if (Math.abs(local - frequencyHz) > limit * frequencyHz) return false;
   }
   return true;
