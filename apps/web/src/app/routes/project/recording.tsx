@@ -111,15 +111,17 @@ function PutIntoReport({ project, verdictId }: { project: Project; verdictId: st
   );
 }
 
-/** Analysis and channel stand in the address, so that a link shows what its sender saw. */
+/** Analysis, channel and part stand in the address, so that a link shows what its sender saw. */
 function useSheetPlace(): SheetPlace {
   const [search, setSearch] = useSearchParams();
-  const set = (name: string, value: string | null) =>
+  const set = (changes: Record<string, string | null>) =>
     setSearch(
       (current) => {
         const next = new URLSearchParams(current);
-        if (value === null) next.delete(name);
-        else next.set(name, value);
+        for (const [name, value] of Object.entries(changes)) {
+          if (value === null) next.delete(name);
+          else next.set(name, value);
+        }
         return next;
       },
       { preventScrollReset: true },
@@ -128,7 +130,9 @@ function useSheetPlace(): SheetPlace {
   return {
     analysisId: search.get('analysis'),
     channel: channel === null ? null : Number(channel),
-    onAnalysis: (id) => set('analysis', id),
-    onChannel: (index) => set('channel', String(index)),
+    part: search.get('part') === 'power' ? 'power' : 'channel',
+    onAnalysis: (id) => set({ analysis: id }),
+    onChannel: (index) => set({ channel: String(index), part: null }),
+    onPart: (part) => set({ part: part === 'power' ? part : null }),
   };
 }

@@ -3,9 +3,10 @@ import type { Analysis, ChannelAnalysis } from '@overtally/contracts';
 import { useState } from 'react';
 import { ErrorState } from '../../../components/error-state.js';
 import { isBusy } from '../recording-status.js';
-import { ChannelChooser } from './channel-chooser.js';
 import { ChannelFigures } from './channel-figures.js';
 import { ComparisonChooser } from './comparison-chooser.js';
+import { hasPower, PartRow } from './part-row.js';
+import { PowerView } from './power/power-view.js';
 import type { RecordingSheetProps } from './recording-sheet.js';
 import { AnalyseDialog } from './settings/analyse-dialog.js';
 import { SheetTitleBlock } from './sheet-title-block.js';
@@ -29,17 +30,22 @@ function ChannelSheet(props: AnalysedSheetProps & { figures: ChannelAnalysis }) 
   const { analysis, figures, recording, project, limitSets, place, mayRun } = props;
   const { sets, set, comparison, choose } = useComparison(figures, project, limitSets);
   const [asking, setAsking] = useState(false);
+  const part = hasPower(analysis) ? place.part : 'channel';
   const state = useSheetState(figures, recording, place.onChannel);
   return (
     <>
       <SheetTitleBlock recording={recording} channel={figures} set={set} comparison={comparison} />
-      <ChannelChooser
-        channels={analysis.channels}
-        value={figures.index}
-        onChange={state.changeChannel}
+      <PartRow
+        analysis={analysis}
+        channel={figures.index}
+        part={part}
+        onPart={place.onPart}
+        onChannel={state.changeChannel}
         actions={
           <>
-            <ComparisonChooser sets={sets} value={set?.id ?? ''} onChange={choose} />
+            {part === 'channel' ? (
+              <ComparisonChooser sets={sets} value={set?.id ?? ''} onChange={choose} />
+            ) : null}
             {mayRun ? (
               <Button disabled={isBusy(recording)} onClick={() => setAsking(true)}>
                 Analyse again
@@ -48,7 +54,11 @@ function ChannelSheet(props: AnalysedSheetProps & { figures: ChannelAnalysis }) 
           </>
         }
       />
-      <ChannelFigures {...props} state={state} set={set} comparison={comparison} />
+      {part === 'power' ? (
+        <PowerView recording={recording} analysis={analysis} onChannel={state.changeChannel} />
+      ) : (
+        <ChannelFigures {...props} state={state} set={set} comparison={comparison} />
+      )}
       <AnalyseDialog
         recording={recording}
         settings={analysis.settings}

@@ -9,6 +9,8 @@ interface ChannelChooserProps {
   channels: readonly Pick<Channel, 'index' | 'name' | 'quantity' | 'unit'>[];
   value: number;
   onChange: (index: number) => void;
+  /** At the left of the row, before the channels. */
+  before?: ReactNode;
   /** At the right of the row. */
   actions?: ReactNode;
 }
@@ -16,10 +18,14 @@ interface ChannelChooserProps {
 const segmentsAtMost = 4;
 
 /** Row over the figures: the channel they show, and what else belongs to the whole sheet. */
-export function ChannelChooser({ channels, value, onChange, actions }: ChannelChooserProps) {
+export function ChannelChooser(props: ChannelChooserProps) {
+  const { channels, value, onChange, before, actions } = props;
   return (
     <Flex justify="space-between" align="center" wrap="wrap" columnGap="6" rowGap="2" mb="3">
-      <Choice channels={channels} value={value} onChange={onChange} />
+      <Flex align="center" wrap="wrap" columnGap="6" rowGap="2">
+        {before}
+        <Choice channels={channels} value={value} onChange={onChange} />
+      </Flex>
       {actions ? (
         <Flex gap="3" wrap="wrap" align="center">
           {actions}

@@ -68,6 +68,8 @@ const answers = (analysis = clippedAnalysis(), notes: Note[] = []) => ({
   [`GET /analyses/${analysisId}/series`]: json(rmsSeries),
 });
 
+const noop = () => undefined;
+
 function show(recording: Recording, role: 'manager' | 'guest' = 'manager') {
   render(
     <ChakraProvider value={system}>
@@ -77,7 +79,14 @@ function show(recording: Recording, role: 'manager' | 'guest' = 'manager') {
           account={sampleAccount()}
           recording={recording}
           limitSets={[sampleLimitSet()]}
-          place={{ analysisId: null, channel: null, onAnalysis: () => undefined, onChannel: () => undefined }}
+          place={{
+            analysisId: null,
+            channel: null,
+            part: 'channel',
+            onAnalysis: noop,
+            onChannel: noop,
+            onPart: noop,
+          }}
           slots={{}}
           onDeleted={() => undefined}
         />

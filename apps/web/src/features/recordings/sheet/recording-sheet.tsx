@@ -25,12 +25,18 @@ import { ProvenanceSection } from './provenance-section.js';
 import { UnanalysedSheet } from './unanalysed-sheet.js';
 import { useShownAnalysis } from './use-shown-analysis.js';
 
+export type SheetPart = 'channel' | 'power';
+
 /** What the address says of the sheet, and how to change it. */
 export interface SheetPlace {
   analysisId: string | null;
   channel: number | null;
+  /** The figures of a channel, or the power of the channels together. */
+  part: SheetPart;
   onAnalysis: (analysisId: string | null) => void;
+  /** Shows the figures of a channel, whatever part was shown. */
   onChannel: (channel: number) => void;
+  onPart: (part: SheetPart) => void;
 }
 
 /** What other features put onto the sheet. */
