@@ -1,4 +1,3 @@
-import { waveformFigures } from '../figures/waveform-figures.js';
 import { harmonicAngles, highestOrder } from '../harmonics/harmonic-orders.js';
 import { toFit, type SinusoidFit } from '../model/fit-sinusoids.js';
 import { projections } from '../model/projections.js';
@@ -38,6 +37,8 @@ interface Range {
   highHz: number;
 }
 
+/** AC power relative to the square of the mean below which there is only rounding. */
+const SMALLEST_AC = 1e-20;
 const LOWEST_HZ = 1;
 const SEARCH_SPAN = 0.15;
 const FIRST_STAGE_CYCLES = 8;
@@ -64,11 +65,9 @@ export function findFundamental(
   sampleRateHz: number,
   { nominalFrequencyHz, maxOrder = 50 }: FundamentalOptions,
 ): FundamentalEstimate | null {
-  const { mean, rms } = waveformFigures(samples);
-  const acPower = rms * rms - mean * mean;
-  if (samples.length < 8 || !(acPower > 1e-20 * rms * rms)) return null;
-  const ac = new Float64Array(samples.length);
-  for (let n = 0; n < ac.length; n++) ac[n] = samples[n]! - mean;
+  if (samples.length < 8) return null;
+  const { ac, mean, acPower } = withoutMean(samples);
+  if (!(acPower > SMALLEST_AC * mean * mean)) return null;
   const range = searchRange(ac.length, sampleRateHz, nominalFrequencyHz);
   if (range === null) return null;
   const start = findStart(ac, sampleRateHz, range, nominalFrequencyHz !== 'auto');
@@ -87,6 +86,20 @@ function isSignificant(
 ): boolean {
   const overNoise = fit.components.map(({ rms }) => (rms ** 2 * sampleCount) / (2 * residualRms ** 2));
   return Math.max(...overNoise) >= SIGNIFICANCE && (standsOut || overNoise[0]! >= KNOWN_PLACE_SIGNIFICANCE);
+}
+
+function withoutMean(samples: Float64Array): { ac: Float64Array; mean: number; acPower: number } {
+  let sum = 0;
+  for (let n = 0; n < samples.length; n++) sum += samples[n]!;
+  const mean = sum / samples.length;
+  const ac = new Float64Array(samples.length);
+  let squares = 0;
+  for (let n = 0; n < ac.length; n++) {
+    const x = samples[n]! - mean;
+    ac[n] = x;
+    squares += x * x;
+  }
+  return { ac, mean, acPower: squares / ac.length };
 }
 
 function searchRange(sampleCount: number, sampleRateHz: number, nominal: number | 'auto'): Range | null {

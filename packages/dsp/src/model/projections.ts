@@ -54,6 +54,7 @@ function accumulate(
   const count = angles.length;
   const sums = { cosine: zeros(count), sine: zeros(count), timeCosine: zeros(count), timeSine: zeros(count) };
   const createProjector = length * count < LEAST_COMPILED ? plainProjector : createBlockProjector;
+  if (count === 0) return sums;
   const project = createProjector(angles, half, timed);
   const each = timed ? TIMED_SUMS : PLAIN_SUMS;
   const turn = turners(angles, block, (block - length) / 2);

@@ -17,11 +17,10 @@ const BLOCK_SHARE = 0.25;
 export function noiseFloor(power: Float64Array, averages = 1): Float64Array {
   const blocks = blockFloors(power, medianShare(averages));
   const floor = new Float64Array(power.length);
-  let b = 0;
-  for (let k = 0; k < floor.length; k++) {
-    while (b < blocks.length - 2 && k > blocks[b + 1]!.centre) b++;
-    floor[k] = between(blocks[b]!, blocks[Math.min(b + 1, blocks.length - 1)]!, k);
-  }
+  floor.fill(blocks[0]!.power);
+  for (let b = 0; b + 1 < blocks.length; b++) joinBlocks(floor, blocks[b]!, blocks[b + 1]!);
+  const last = blocks.at(-1)!;
+  floor.fill(last.power, Math.ceil(last.centre));
   return floor;
 }
 
@@ -43,11 +42,16 @@ function blockFloors(power: Float64Array, share: number): Block[] {
   return blocks;
 }
 
-function between(left: Block, right: Block, k: number): number {
-  if (k <= left.centre || right.centre === left.centre || !(left.power > 0 && right.power > 0))
-    return left.power;
-  const share = Math.min(1, (k - left.centre) / (right.centre - left.centre));
-  return left.power * (right.power / left.power) ** share;
+/** The lines between the centres of two blocks, in geometric progression; a step where one of them holds nothing. */
+function joinBlocks(floor: Float64Array, left: Block, right: Block): void {
+  const from = Math.ceil(left.centre);
+  const step =
+    left.power > 0 && right.power > 0 ? (right.power / left.power) ** (1 / (right.centre - left.centre)) : 1;
+  let value = left.power * step ** (from - left.centre);
+  for (let k = from; k < right.centre; k++) {
+    floor[k] = value;
+    value *= step;
+  }
 }
 
 /** Median over mean of an average of n exponentially distributed powers (E. B. Wilson, M. M. Hilferty, 1931). */

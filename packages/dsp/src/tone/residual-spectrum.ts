@@ -22,23 +22,29 @@ export interface ResidualSpectrum {
 /** Median of an exponentially distributed power (one line of noise) relative to its mean. */
 const MEDIAN_OF_NOISE = Math.LN2;
 
+/** Samples of the transform: as many as there are of a coherent record, otherwise the next power of two. */
+export function residualLength(sampleCount: number, coherent: boolean): number {
+  return coherent ? sampleCount : 2 ** Math.ceil(Math.log2(sampleCount));
+}
+
 /**
  * Spectrum of the residual of a tone. Of a coherent record it is the plain DFT of the whole record (IEEE 1241, 4.1.6),
  * so that every line stands for itself; otherwise Hann-windowed and zero-padded to a power of two, lines interpolated by
  * the transform of the window (Grandke 1983).
+ *
+ * @param padded the residual followed by zeros, `residualLength` numbers in all; it is windowed in place
  */
 export function residualSpectrum(
-  residual: Float64Array,
+  padded: Float64Array,
+  count: number,
   sampleRateHz: number,
   coherent: boolean,
 ): ResidualSpectrum {
-  const count = residual.length;
-  const length = coherent ? count : 2 ** Math.ceil(Math.log2(count));
+  const length = padded.length;
   const stepHz = sampleRateHz / length;
   const windowName = coherent ? 'rectangular' : 'hann';
-  const window = windowSamples(windowName, count);
-  const { sum, squares } = windowSums(window);
-  const linePower = powerLines(residual, window, length);
+  const { sum, squares } = coherent ? { sum: count, squares: count } : windowInPlace(padded, count);
+  const linePower = powerLines(padded);
   const scale = 1 / (sum * sum);
   for (let k = 0; k < linePower.length; k++) {
     linePower[k]! *= (k === 0 || 2 * k === length ? 1 : 2) * scale;
@@ -63,13 +69,18 @@ export function residualSpectrum(
   };
 }
 
-function powerLines(residual: Float64Array, window: Float64Array, length: number): Float64Array {
-  const plan = createRealFftPlan(length);
-  const padded = new Float64Array(length);
-  for (let n = 0; n < residual.length; n++) padded[n] = residual[n]! * window[n]!;
+/** Returns Σw and Σw² of the window. */
+function windowInPlace(samples: Float64Array, count: number): { sum: number; squares: number } {
+  const window = windowSamples('hann', count);
+  for (let n = 0; n < count; n++) samples[n]! *= window[n]!;
+  return windowSums(window);
+}
+
+function powerLines(samples: Float64Array): Float64Array {
+  const plan = createRealFftPlan(samples.length);
   const re = new Float64Array(plan.lineCount);
   const im = new Float64Array(plan.lineCount);
-  plan.forward(padded, re, im);
+  plan.forward(samples, re, im);
   for (let k = 0; k < re.length; k++) re[k] = re[k]! * re[k]! + im[k]! * im[k]!;
   return re;
 }

@@ -57,14 +57,13 @@ function requireFrequency(samples: Float64Array, sampleRateHz: number, frequency
 function describeFit(samples: Float64Array, sampleRateHz: number, { dc, components }: SinusoidFit): SineFit {
   const [sine] = components;
   if (!sine) throw new RangeError('The frequency is too close to half the sample rate for so few samples');
-  const rest = samples.map((x) => x - dc);
-  subtractSinusoid(rest, sampleRateHz, sine);
-  const squares = rest.reduce((sum, x) => sum + x * x, 0);
+  const rest = new Float64Array(samples.length);
+  const meanSquare = subtractSinusoid(samples, sampleRateHz, sine, dc, rest);
   return {
     frequencyHz: sine.frequencyHz,
     amplitude: Math.SQRT2 * sine.rms,
     phaseDeg: sine.phaseDeg,
     offset: dc,
-    residualRms: Math.sqrt(squares / samples.length),
+    residualRms: Math.sqrt(meanSquare),
   };
 }

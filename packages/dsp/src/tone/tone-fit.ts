@@ -61,29 +61,21 @@ function fitAt(
 ): { solution: SinusoidSolution; correctionHz: number } {
   const angles = lineAngles(frequenciesHz, sampleRateHz);
   const count = samples.length;
-  const toneSums = timedProjections(samples, 0, count, angles.subarray(1, 2));
-  const otherSums = projections(samples, 0, count, withoutTone(angles));
+  const nearSums = timedProjections(samples, 0, count, angles.subarray(0, 2));
+  const farSums = projections(samples, 0, count, angles.subarray(2));
   const solution = createSinusoidSolver(
     angles,
     count,
   )({
-    cosine: withTone(otherSums.cosine, toneSums.cosine[0]!),
-    sine: withTone(otherSums.sine, toneSums.sine[0]!),
+    cosine: Float64Array.of(...nearSums.cosine, ...farSums.cosine),
+    sine: Float64Array.of(...nearSums.sine, ...farSums.sine),
   });
-  const correction = toneCorrection(angles, count, toneSums, solution);
+  const correction = toneCorrection(angles, count, nearSums, solution);
   return { solution, correctionHz: (correction * sampleRateHz) / (2 * Math.PI) };
 }
 
 function lineAngles(frequenciesHz: readonly number[], sampleRateHz: number): Float64Array {
   return Float64Array.from([0, ...frequenciesHz], (f) => (2 * Math.PI * f) / sampleRateHz);
-}
-
-function withoutTone(values: Float64Array): Float64Array {
-  return values.filter((_, i) => i !== 1);
-}
-
-function withTone([dc, ...harmonics]: Float64Array, tone: number): Float64Array {
-  return Float64Array.of(dc!, tone, ...harmonics);
 }
 
 /**
@@ -93,12 +85,12 @@ function withTone([dc, ...harmonics]: Float64Array, tone: number): Float64Array 
 function toneCorrection(
   angles: Float64Array,
   count: number,
-  toneSums: TimedProjections,
+  { timeCosine: timeCosines, timeSine: timeSines }: TimedProjections,
   { cosine, sine }: SinusoidSolution,
 ): number {
   const angle = angles[1]!;
-  let timeCosine = toneSums.timeCosine[0]!;
-  let timeSine = toneSums.timeSine[0]!;
+  let timeCosine = timeCosines[1]!;
+  let timeSine = timeSines[1]!;
   for (let k = 0; k < angles.length; k++) {
     const sum = dirichletSlope(angles[k]! + angle, count);
     const difference = dirichletSlope(angles[k]! - angle, count);

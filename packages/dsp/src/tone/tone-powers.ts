@@ -1,4 +1,4 @@
-import { residualSpectrum } from './residual-spectrum.js';
+import { residualLength, residualSpectrum } from './residual-spectrum.js';
 import { subtractSinusoid } from './subtract-sinusoid.js';
 import { fitTone } from './tone-fit.js';
 import type { FrequencyBand, ToneOptions, TonePowers } from './tone-result.js';
@@ -24,17 +24,18 @@ export function tonePowers(
 ): TonePowers {
   const count = samples.length;
   const { dc, tone, harmonics } = fitTone(samples, sampleRateHz, fundamentalHz, maxOrder);
-  const rest = new Float64Array(count);
-  for (let n = 0; n < count; n++) rest[n] = samples[n]! - dc;
-  subtractSinusoid(rest, sampleRateHz, tone);
-  const noiseAndDistortion = meanSquare(rest);
-
-  const lineNoise = noiseAndDistortion / count;
-  const clear = harmonics.filter((h) => h.rms ** 2 > SIGNIFICANCE * lineNoise);
-  for (const harmonic of clear) subtractSinusoid(rest, sampleRateHz, harmonic);
   const cycles = (tone.frequencyHz * count) / sampleRateHz;
   const coherent = Math.abs(cycles - Math.round(cycles)) < COHERENT_CYCLES;
-  const spectrum = residualSpectrum(rest, sampleRateHz, coherent);
+  const padded = new Float64Array(residualLength(count, coherent));
+  const rest = padded.subarray(0, count);
+  const noiseAndDistortion = subtractSinusoid(samples, sampleRateHz, tone, dc, rest);
+
+  const clear = harmonics.filter((h) => h.rms ** 2 > (SIGNIFICANCE * noiseAndDistortion) / count);
+  const restPower = clear.reduce(
+    (_, harmonic) => subtractSinusoid(rest, sampleRateHz, harmonic, 0, rest),
+    noiseAndDistortion,
+  );
+  const spectrum = residualSpectrum(padded, count, sampleRateHz, coherent);
 
   return {
     sampleCount: count,
@@ -48,7 +49,7 @@ export function tonePowers(
     }),
     noiseAndDistortion,
     bandNoiseAndDistortion: band
-      ? spectrum.share(band) * meanSquare(rest) +
+      ? spectrum.share(band) * restPower +
         clear.filter((h) => inBand(h.frequencyHz, band)).reduce((sum, h) => sum + h.rms ** 2, 0)
       : null,
     noiseDensitySquared: spectrum.densitySquared,
@@ -58,10 +59,4 @@ export function tonePowers(
 
 export function inBand(frequencyHz: number, { fromHz, toHz }: FrequencyBand): boolean {
   return frequencyHz >= fromHz && frequencyHz <= toHz;
-}
-
-function meanSquare(values: Float64Array): number {
-  let sum = 0;
-  for (const x of values) sum += x * x;
-  return sum / values.length;
 }

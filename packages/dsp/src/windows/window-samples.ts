@@ -1,3 +1,4 @@
+import { createUnitTurns } from '../fft/unit-turns.js';
 import { besselI0 } from './bessel-i0.js';
 import { COSINE_TERMS, DEFAULT_KAISER_BETA, type WindowName } from './window-terms.js';
 
@@ -32,9 +33,10 @@ function kaiserValue(length: number, beta: number): (n: number) => number {
 
 /** Σ (−1)^k a_k cos(kx) by the recurrence of C. W. Clenshaw (1955): one cosine per sample whatever the number of terms. */
 function cosineValue(terms: readonly number[], length: number): (n: number) => number {
-  const step = (2 * Math.PI) / length;
+  if (terms.length === 1) return () => terms[0]!;
+  const turns = createUnitTurns(length);
   return (n) => {
-    const minusCosine = -Math.cos(step * n);
+    const minusCosine = -turns.cosine(n);
     let next = 0;
     let afterNext = 0;
     for (let k = terms.length - 1; k > 0; k--) {
