@@ -5,7 +5,6 @@ import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { Storage } from '../dist/storage/storage.js';
 import { csvOf, wavOf } from './support/captures.js';
-import { newFinishedAnalysis } from './support/finished-analysis.js';
 import { newAnalysis, newRecording } from './support/project-contents.js';
 import { ended, settled, upload } from './support/recordings.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
@@ -188,34 +187,5 @@ describe('a finished analysis', () => {
     expect(await storage.exists(row!.seriesKey!)).toBe(true);
     await technician.delete(`/api/recordings/${id}`).expect(204);
     expect(await storage.exists(row!.seriesKey!)).toBe(false);
-  });
-});
-
-describe('an analysis of an earlier engine', () => {
-  it('stays readable, with nothing where nothing was kept', async () => {
-    const owner = { projectId: test.project.id, userId: test.people.technician.id };
-    const { analysisId } = await newFinishedAnalysis(test.database, owner);
-    // As the migration leaves rows that were there before.
-    await test.database
-      .update(schema.analysisChannels)
-      .set({
-        windows: { cycles: 10, count: 150, samplesPerWindow: 10_004 } as never,
-        flags: [{ code: 'dc-heavy', severity: 'warning', message: 'DC' }] as never,
-      })
-      .where(eq(schema.analysisChannels.analysisId, analysisId));
-    const { body } = (await technician.get(`/api/analyses/${analysisId}`).expect(200)) as { body: Analysis };
-    expect(body).toMatchObject({ power: [], threePhase: [] });
-    expect(body.channels[0]).toMatchObject({
-      flags: [{ code: 'dc-heavy', evidence: null }],
-      windows: { count: 150, flaggedCount: 0, synchronisationErrorPercent: null, gridChannel: 0 },
-      uncertainty: {},
-    });
-    const { body: refusal } = await technician.get(`/api/analyses/${analysisId}/series`).expect(404);
-    expect(refusal.code).toBe('no-series');
-    const density = await technician
-      .get(`/api/analyses/${analysisId}/spectrum`)
-      .query({ scaling: 'density' })
-      .expect(409);
-    expect(density.body.code).toBe('no-noise-bandwidth');
   });
 });
