@@ -91,6 +91,8 @@ export interface ChannelInput extends ChannelDescription {
 export interface RecordInput {
   sampleRateHz: number;
   channels: ChannelInput[];
+  /** Samples in rising order before which time is missing, as a reader of the file sees it; their windows are flagged. */
+  gapsBefore?: readonly number[] | undefined;
   settings: AnalysisSettings;
 }
 
@@ -100,6 +102,8 @@ export interface RecordSource {
   /** Samples of each channel. */
   sampleCount: number;
   channels: ChannelDescription[];
+  /** Samples in rising order before which time is missing, as a reader of the file sees it; their windows are flagged. */
+  gapsBefore?: readonly number[] | undefined;
   settings: AnalysisSettings;
 }
 
@@ -143,7 +147,7 @@ export interface Uncertainty {
   contributors: { source: UncertaintySource; standard: number }[];
 }
 
-/** Over the windows of a record; flagged windows are left out. */
+/** Over the windows of a record; flagged windows are left out. Percentiles by nearest rank. */
 export interface Statistics {
   mean: number;
   max: number;
@@ -154,7 +158,10 @@ export interface Statistics {
 export interface HarmonicResult {
   order: number;
   frequencyHz: number;
-  /** mains: root mean square of the single line over all windows; otherwise of the whole-record fit. */
+  /**
+   * mains: root mean square of the single line over all windows; otherwise of the whole-record fit, or of a record of more
+   * than 2^20 samples the magnitude of the mean phasor of its windows.
+   */
   rms: number;
   percentOfFundamental: number | null;
   /** Cosine form, zero time = first sample. Null below 0.1 % of the largest order or within the noise. */
@@ -193,7 +200,7 @@ export interface WindowsResult {
   count: number;
   samplesPerWindow: number;
   flaggedCount: number;
-  /** Largest deviation of a window from whole cycles; null without a frequency track. */
+  /** Largest deviation of a window from whole cycles of the channel's own fundamental; null where that is not known. */
   synchronisationErrorPercent: number | null;
   /** Channel whose fundamental sets the windows of all channels. */
   gridChannel: number;
@@ -246,7 +253,7 @@ export interface CountedFrequency {
   cycles: number;
 }
 
-/** Percent, over the windows. */
+/** Percent, over the windows; see `WindowSeries`. */
 export interface DistortionStatistics {
   thd: Statistics;
   thdg: Statistics | null;
@@ -264,10 +271,11 @@ export interface WindowSeries {
   /** Of the channel that sets the windows, per window. */
   frequencyHz: Float64Array;
   rms: Float64Array;
-  /** Percent. NaN where it does not apply. */
+  /** Percent, NaN where it does not apply: of the single lines, of the groups, of the subgroups (IEC 61000-4-7, 3.3). */
   thd: Float64Array;
   thdg: Float64Array;
   thds: Float64Array;
+  /** Percent, of the single lines of orders 14 to 40; NaN where the orders do not reach 40. */
   pwhd: Float64Array;
   /** Orders 1.. (rows). NaN where the record ends below the group. */
   orders: number;

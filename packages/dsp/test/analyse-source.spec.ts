@@ -185,6 +185,16 @@ describe('analyseSource', () => {
     expect(channel!.harmonics[2]!.smoothedMaxRms).toBeGreaterThan(0.01);
   });
 
+  it('flags the windows before and behind which a reader saw time missing', () => {
+    const [channel] = analyseRecord({
+      sampleRateHz: RATE,
+      channels: [{ index: 0, name: 'u', quantity: 'voltage', unit: 'V', samples: wave(50, VOLTAGE, 20_000) }],
+      gapsBefore: [4000, 9123],
+      settings: { profile: 'mains', nominalFrequencyHz: 50, maxOrder: 9 },
+    }).channels;
+    expect(Array.from(channel!.series!.flagged)).toEqual([0, 1, 1, 0, 1, 0, 0, 0, 0, 0]);
+  });
+
   it('stops between parts, passes errors on and reports progress up to 1', async () => {
     const settings: AnalysisSettings = { profile: 'mains', nominalFrequencyHz: 50 };
     const { source, runPart } = inBlocks(channels(20_000), settings);

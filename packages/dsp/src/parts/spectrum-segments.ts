@@ -23,12 +23,12 @@ export interface SpectrumSum {
 }
 
 /** The spectrum is only drawn in these profiles, so that many segments, spread over the record, are enough. */
-const MOST_DRAWN_SEGMENTS = 32;
+const MOST_DRAWN_SEGMENTS = 16;
 const DEFAULT_OVERLAP_PERCENT = 50;
 
 /**
  * Segments of the averaged spectrum. `general` takes all of them (P. D. Welch, IEEE Trans. AU-15, 1967). The other
- * profiles take their figures elsewhere and draw the spectrum only: of a long record they average 32 segments spread
+ * profiles take their figures elsewhere and draw the spectrum only: of a long record they average 16 segments spread
  * evenly from its start to its end.
  */
 export function planSpectrum(sampleCount: number, settings: ResolvedSettings): SpectrumPlan {

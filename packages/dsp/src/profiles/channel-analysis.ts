@@ -1,5 +1,6 @@
 import { thdF, thdR } from '../figures/distortion.js';
 import { badRanges } from '../flags/bad-ranges.js';
+import { unionOf } from '../flags/bounded-ranges.js';
 import { frequencyDriftFlag } from '../flags/frequency-drift.js';
 import type { WindowSynchronism } from '../flags/not-synchronous.js';
 import { countedFrequency } from '../fundamental/counted-frequency.js';
@@ -26,15 +27,19 @@ import {
 } from './mains-results.js';
 import { windowSeries } from './window-series.js';
 
-/** The results of one channel, put together from what was measured. */
-export function channelAnalysis(measured: MeasuredChannel): ChannelAnalysis {
+/**
+ * The results of one channel, put together from what was measured.
+ *
+ * @param gapsBefore samples before which time is missing
+ */
+export function channelAnalysis(measured: MeasuredChannel, gapsBefore: readonly number[]): ChannelAnalysis {
   const { survey, frequencyHz, orders } = measured;
   const { context, scan, spectrum, track } = survey;
   const { channel, sampleRateHz, sampleCount, settings } = context;
   const { figures, formFactor } = scan;
   const mains = settings.profile === 'mains';
   const synchronism = mains ? windowSynchronism(measured) : null;
-  const series = mains ? seriesOf(measured) : null;
+  const series = mains ? seriesOf(measured, gapsBefore) : null;
   const listed = listHarmonics(measured, series);
   const fundamental = fundamentalResult(measured, listed);
   const windows = series && windowsResult(measured, series, synchronism);
@@ -72,14 +77,18 @@ export function channelAnalysis(measured: MeasuredChannel): ChannelAnalysis {
   };
 }
 
-function seriesOf({ survey, frequencyHz, grid, windows }: MeasuredChannel): WindowSeries | null {
+function seriesOf(
+  { survey, frequencyHz, grid, windows }: MeasuredChannel,
+  gapsBefore: readonly number[],
+): WindowSeries | null {
   if (grid === null || windows === null) return null;
   const { context, scan } = survey;
+  const gaps = gapsBefore.map((sample) => ({ start: sample - 1, end: sample + 1 }));
   return windowSeries(windows, grid, {
     sampleRateHz: context.sampleRateHz,
     thdMaxOrder: context.settings.thdMaxOrder,
     periodic: frequencyHz !== null,
-    badRanges: badRanges(scan.findings, context.sampleRateHz, frequencyHz),
+    badRanges: unionOf([...badRanges(scan.findings, context.sampleRateHz, frequencyHz), ...gaps]),
   });
 }
 

@@ -19,7 +19,7 @@ export function checkRecord({ sampleRateHz, sampleCount, channels }: RecordSourc
 }
 
 /** The record that samples in memory make; refuses channels of different lengths. */
-export function sourceOf({ sampleRateHz, channels, settings }: RecordInput): RecordSource {
+export function sourceOf({ channels, ...record }: RecordInput): RecordSource {
   const sampleCount = channels[0]?.samples.length ?? 0;
   const other = channels.find(({ samples }) => samples.length !== sampleCount);
   if (other) {
@@ -29,5 +29,5 @@ export function sourceOf({ sampleRateHz, channels, settings }: RecordInput): Rec
     );
   }
   const described = channels.map(({ samples: _, ...channel }) => channel);
-  return { sampleRateHz, sampleCount, channels: described, settings };
+  return { ...record, sampleCount, channels: described };
 }

@@ -1,6 +1,7 @@
 import type { FundamentalEstimate } from '../fundamental/find-fundamental.js';
 import { assembleTrack, trackLayout, type FrequencyTrack } from '../fundamental/frequency-track.js';
 import { regressedFrequencyHz } from '../fundamental/local-frequency.js';
+import { keepsPhase } from '../fundamental/phase-wander.js';
 import type { ChannelScan } from '../parts/channel-scan.js';
 import { fitsAsWhole } from '../parts/locate-fundamental.js';
 import type { PartContext } from '../parts/part-types.js';
@@ -17,6 +18,8 @@ export interface ChannelSurvey {
   /** null when none stands out. */
   fundamental: SurveyedFundamental | null;
   track: FrequencyTrack | null;
+  /** Whether one model of steady frequency fits the whole record; otherwise the synchronous windows give the orders. */
+  fittedWhole: boolean;
 }
 
 export interface SurveyedFundamental {
@@ -51,6 +54,7 @@ function surveyChannel(
   );
   return () => {
     const wholeTrack = track?.() ?? null;
+    const fittedWhole = fitsAsWhole(context) && keepsPhase(wholeTrack, 0, sampleCount);
     return {
       context,
       scan: scan(),
@@ -61,12 +65,13 @@ function surveyChannel(
       ),
       fundamental: estimate && {
         frequencyHz:
-          wholeTrack === null || fitsAsWhole(context)
+          wholeTrack === null || fittedWhole
             ? estimate.frequencyHz
             : regressedFrequencyHz(wholeTrack, sampleRateHz),
         estimate,
       },
       track: wholeTrack,
+      fittedWhole,
     };
   };
 }

@@ -1,6 +1,4 @@
 import { joinChunks, type WindowChunk } from '../parts/window-chunk.js';
-import { fitsAsWhole } from '../parts/locate-fundamental.js';
-import { longestToneStretch } from '../tone/combine-tone-powers.js';
 import { combineToneFigures } from '../tone/tone-figures.js';
 import { toneOptions } from '../parts/tone-options.js';
 import type { ToneResult } from '../tone/tone-result.js';
@@ -8,6 +6,7 @@ import type { ChannelSurvey } from './channel-survey.js';
 import { fittedOrders, ordersOfPhasors, windowOrders, type OrderSet } from './order-set.js';
 import { PartBatch, type Batches } from './part-batch.js';
 import { splitItems } from './split.js';
+import { toneStretches } from './tone-stretches.js';
 import { windowFrequencyHz } from './window-frequency.js';
 import { windowCount, type WindowGrid } from './window-grid.js';
 
@@ -55,7 +54,7 @@ export function* measureChannels(channels: readonly GriddedChannel[]): Batches<M
 /** The fit of the whole record gives it, of a long record the windows. */
 function ownFrequency({ survey, grid }: GriddedChannel, windows: WindowChunk | null): number | null {
   const { context, fundamental } = survey;
-  if (fundamental === null || grid === null || windows === null || fitsAsWhole(context)) {
+  if (fundamental === null || windows === null || !grid?.ordersFromWindows) {
     return fundamental?.frequencyHz ?? null;
   }
   return windowFrequencyHz(windows, grid, context.sampleRateHz) ?? fundamental.frequencyHz;
@@ -71,7 +70,7 @@ function windowParts(
   batch: PartBatch,
 ): (() => WindowChunk) | null {
   if (grid === null || windowCount(grid) === 0) return null;
-  if (context.settings.profile !== 'mains' && fitsAsWhole(context)) return null;
+  if (context.settings.profile !== 'mains' && !grid.ordersFromWindows) return null;
   const { boundaries, cycles, orders, bandCentresHz } = grid;
   const samplesPerWindow = boundaries[windowCount(grid)]! / windowCount(grid);
   const chunks = splitItems(windowCount(grid), samplesPerWindow).map(({ from, to }) => {
@@ -90,7 +89,7 @@ function windowParts(
 function fitPart(channel: GriddedChannel, batch: PartBatch): (() => OrderSet) | null {
   const { survey, grid } = channel;
   if (grid === null) return null;
-  const wanted = fitsAsWhole(survey.context) ? !isSetter(channel) : windowCount(grid) === 0;
+  const wanted = grid.ordersFromWindows ? windowCount(grid) === 0 : !isSetter(channel);
   if (!wanted) return null;
   const phasors = batch.add({ ...survey.context, kind: 'orders', fundamentalHz: grid.frequencyHz });
   return () => ordersOfPhasors(phasors(), grid.frequencyHz);
@@ -104,7 +103,7 @@ function ordersWithoutFit(
 ): OrderSet | null {
   if (grid === null) return null;
   const { sampleCount, sampleRateHz } = context;
-  if (fitsAsWhole(context)) return fittedOrders(fundamental!.estimate, sampleCount);
+  if (!grid.ordersFromWindows) return fittedOrders(fundamental!.estimate, sampleCount);
   return windowOrders(windows!, reference.windows!, grid, {
     frequencyHz: reference.frequencyHz!,
     totalRms: scan.figures.rms,
@@ -113,17 +112,14 @@ function ordersWithoutFit(
   });
 }
 
-function toneParts({ context, fundamental }: ChannelSurvey, batch: PartBatch): (() => ToneResult) | null {
+function toneParts(
+  { context, fundamental, track }: ChannelSurvey,
+  batch: PartBatch,
+): (() => ToneResult) | null {
   if (context.settings.profile !== 'tone' || fundamental === null) return null;
-  const { sampleCount } = context;
-  const count = Math.ceil(sampleCount / longestToneStretch);
-  const stretches = Array.from({ length: count }, (_, i) => {
-    const stretch = {
-      from: Math.floor((i * sampleCount) / count),
-      to: Math.floor(((i + 1) * sampleCount) / count),
-    };
-    return batch.add({ ...context, kind: 'tone', fundamentalHz: fundamental.frequencyHz, stretch });
-  });
+  const stretches = toneStretches({ context, fundamental, track }).map(({ stretch, fundamentalHz }) =>
+    batch.add({ ...context, kind: 'tone', fundamentalHz, stretch }),
+  );
   return () =>
     combineToneFigures(
       stretches.map((result) => result()),

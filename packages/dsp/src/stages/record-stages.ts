@@ -1,4 +1,3 @@
-import { fitsAsWhole } from '../parts/locate-fundamental.js';
 import { recordPower } from '../power/record-power.js';
 import { channelAnalysis } from '../profiles/channel-analysis.js';
 import { checkRecord } from '../profiles/check-input.js';
@@ -35,7 +34,9 @@ export function* recordStages(source: RecordSource): Batches<RecordAnalysis> {
   return {
     engineVersion,
     settings,
-    channels: measured.slice(0, channels.length).map(channelAnalysis),
+    channels: measured
+      .slice(0, channels.length)
+      .map((channel) => channelAnalysis(channel, source.gapsBefore ?? [])),
     ...(first === undefined || sets.channels.size === 0
       ? { power: [], threePhase: [] }
       : recordPower({
@@ -63,7 +64,7 @@ function layWindows(surveys: readonly ChannelSurvey[], inPower: ReadonlySet<numb
   const setter = surveys[0]?.context.settings.profile === 'tone' ? null : gridChannel(surveys);
   const gridOf = (survey: ChannelSurvey): WindowGrid => {
     const { channel, sampleRateHz, sampleCount, settings } = survey.context;
-    const ordersFromWindows = !fitsAsWhole(survey.context);
+    const ordersFromWindows = !survey.fittedWhole;
     const record = { sampleRateHz, sampleCount, channelCount: surveys.length, ordersFromWindows, settings };
     return createWindowGrid(channel.index, survey.fundamental!.frequencyHz, survey.track, record);
   };

@@ -15,6 +15,8 @@ export interface WindowGrid {
   cycles: number;
   /** Orders below half the sample rate, at most those asked for. */
   orders: number;
+  /** Whether the windows give the orders; otherwise a fit to the whole record does. */
+  ordersFromWindows: boolean;
   /** 200 Hz bands (mains). */
   bandCentresHz: Float64Array;
   /** Positions in samples, one more than windows; a single 0 when no whole window fits. */
@@ -62,7 +64,7 @@ export function createWindowGrid(
     );
   }
   const boundaries = windowBoundaries(sampleCount, sampleRateHz, frequencyHz, cycles, track);
-  return { channel, frequencyHz, track, cycles, orders, bandCentresHz, boundaries };
+  return { channel, frequencyHz, track, cycles, orders, ordersFromWindows, bandCentresHz, boundaries };
 }
 
 /** How many whole windows a grid has. */
