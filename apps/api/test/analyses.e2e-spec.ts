@@ -1,7 +1,7 @@
 import type { Analysis, Recording, Settings, Spectrum } from '@overtally/contracts';
 import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { squareWave, wavOf } from './support/captures.js';
+import { repeated, squareWave, wavOf } from './support/captures.js';
 import { ended, eventually, settled, upload } from './support/recordings.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
 
@@ -109,7 +109,8 @@ describe('spectrum', () => {
 
 describe('calling off', () => {
   it('ends a running analysis as cancelled, and a second request is told so', async () => {
-    const long = Array.from({ length: 8 }, () => Float32Array.from(squareWave(sampleRateHz, 200_000)));
+    const wave = repeated(squareWave(sampleRateHz, 20_000), 1_000_000);
+    const long = Array.from({ length: 8 }, () => wave);
     const { id } = await upload(technician, test.project.id, wavOf(long, sampleRateHz), 'long.wav');
     await eventually<Recording>(technician, `/api/recordings/${id}`, ({ status }) => status === 'analysing');
     const { body: list } = await technician.get(`/api/recordings/${id}/analyses`).expect(200);

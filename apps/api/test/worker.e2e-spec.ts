@@ -7,14 +7,14 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { analyseRecordingJob } from '../dist/jobs/definitions/analyse-recording.job.js';
 import { readRecordingJob } from '../dist/jobs/definitions/read-recording.job.js';
 import { JobsService } from '../dist/jobs/jobs.service.js';
-import { csvOf, squareThdFPercent, squareWave, wavOf } from './support/captures.js';
+import { csvOf, repeated, squareThdFPercent, squareWave, wavOf } from './support/captures.js';
 import { eventually, settled, upload } from './support/recordings.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
 import { spawnWorker, startWorker } from './support/workers.js';
 
 const sampleRateHz = 10_000;
 const short = csvOf(squareWave(sampleRateHz, 5_000), sampleRateHz);
-const samples = Float32Array.from(squareWave(sampleRateHz, 200_000));
+const samples = repeated(squareWave(sampleRateHz, 20_000), 1_000_000);
 const long = wavOf(
   Array.from({ length: 3 }, () => samples),
   sampleRateHz,

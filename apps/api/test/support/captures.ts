@@ -15,6 +15,11 @@ export function squareWave(sampleRateHz: number, sampleCount: number, fundamenta
   });
 }
 
+/** A wave of `count` samples, some of its whole cycles over and over. */
+export function repeated(cycles: Float64Array, count: number): Float32Array {
+  return Float32Array.from({ length: count }, (_, n) => cycles[n % cycles.length]!);
+}
+
 /** THD of that wave relative to the fundamental in percent: sqrt(sum of 1/h^2 over odd h from 3 to 39), 47.03 %. */
 export const squareThdFPercent =
   100 * Math.sqrt(squareOrders.slice(1).reduce((sum, h) => sum + 1 / h ** 2, 0));
