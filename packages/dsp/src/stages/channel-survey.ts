@@ -10,6 +10,9 @@ import type { SpectrumResult } from '../types.js';
 import { PartBatch, type Batches } from './part-batch.js';
 import { splitItems } from './split.js';
 
+/** rms wander that takes 2 % of the amplitude of order 10, which it turns by ten times as much. */
+const WANDER_RAD = 0.02;
+
 /** What is known of a channel before windows are laid. */
 export interface ChannelSurvey {
   context: PartContext;
@@ -54,7 +57,7 @@ function surveyChannel(
   );
   return () => {
     const wholeTrack = track?.() ?? null;
-    const fittedWhole = fitsAsWhole(context) && keepsPhase(wholeTrack, 0, sampleCount);
+    const fittedWhole = fitsAsWhole(context) && keepsPhase(wholeTrack, 0, sampleCount, WANDER_RAD);
     return {
       context,
       scan: scan(),

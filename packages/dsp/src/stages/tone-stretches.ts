@@ -8,6 +8,8 @@ import type { SurveyedFundamental } from './channel-survey.js';
 
 /** A stretch holds so many cycles of the tone at least, so that its harmonics are lines of their own. */
 const FEWEST_CYCLES = 64;
+/** rms wander of the tone in a stretch: its residue lies 70 dB below the tone. */
+const WANDER_RAD = 3e-4;
 
 export interface ToneStretch {
   stretch: SampleRange;
@@ -21,7 +23,7 @@ export interface ToneStretch {
  * as noise.
  */
 export function toneStretches({
-  context: { sampleCount, sampleRateHz },
+  context: { sampleCount, sampleRateHz, settings },
   fundamental,
   track,
 }: {
@@ -33,7 +35,7 @@ export function toneStretches({
   let count = Math.ceil(sampleCount / longestToneStretch);
   while (
     2 * count <= mostStretches &&
-    !split(sampleCount, count).every((s) => keepsPhase(track, s.from, s.to))
+    !split(sampleCount, count).every((s) => keepsPhase(track, s.from, s.to, WANDER_RAD))
   ) {
     count *= 2;
   }
