@@ -1,4 +1,4 @@
-import { createKernel, type Kernel } from '../wasm/kernel.js';
+import { createKernel } from '../wasm/kernel.js';
 
 /**
  * Projections of one block of samples on components, time counted from the centre of the block in samples: per component
@@ -12,35 +12,47 @@ export type ProjectBlock = (samples: Float64Array, from: number, to: number) => 
 export const PLAIN_SUMS = 2;
 export const TIMED_SUMS = 4;
 
+/** Room of the compiled projector. */
+const MOST_HALF = 128;
+const MOST_COMPONENTS = 256;
+
 /**
  * Projector for blocks of 2·half samples; of a shorter one the missing samples count as 0. As compiled code where the
- * platform has it.
+ * platform has it; there is one compiled projector, which serves the latest call only.
  *
  * @param angles radians per sample
  */
 export function createBlockProjector(angles: Float64Array, half: number, timed: boolean): ProjectBlock {
-  const kernel = half % 2 === 0 ? createKernel() : null;
-  return kernel === null ? plainProjector(angles, half, timed) : kernelProjector(kernel, angles, half, timed);
+  const fits = half % 2 === 0 && half <= MOST_HALF && angles.length <= MOST_COMPONENTS;
+  compiled = compiled === undefined ? compileProjector() : compiled;
+  return fits && compiled !== null ? compiled(angles, half, timed) : plainProjector(angles, half, timed);
 }
 
-function kernelProjector(kernel: Kernel, angles: Float64Array, half: number, timed: boolean): ProjectBlock {
+type Prepare = (angles: Float64Array, half: number, timed: boolean) => ProjectBlock;
+
+let compiled: Prepare | null | undefined;
+
+function compileProjector(): Prepare | null {
+  const kernel = createKernel();
+  if (kernel === null) return null;
+  const blockAt = kernel.allocate(2 * MOST_HALF);
+  const foldedAt = kernel.allocate(4 * MOST_HALF);
+  const tableAt = kernel.allocate(2 * MOST_HALF * MOST_COMPONENTS);
+  const outAt = kernel.allocate(TIMED_SUMS * MOST_COMPONENTS);
   const { foldBlock, projectBlock, projectTimedBlock } = kernel.functions;
-  const project = timed ? projectTimedBlock : projectBlock;
-  const count = angles.length;
-  const sums = (timed ? TIMED_SUMS : PLAIN_SUMS) * count;
-  const blockAt = kernel.allocate(2 * half);
-  const foldedAt = kernel.allocate(4 * half);
-  const tableAt = kernel.allocate(2 * half * count);
-  const outAt = kernel.allocate(sums);
-  kernel.floats(tableAt, 2 * half * count).set(carrierTable(angles, half));
-  const block = kernel.floats(blockAt, 2 * half);
-  const out = kernel.floats(outAt, sums);
-  return (samples, from, to) => {
-    block.set(samples.subarray(from, to));
-    if (to - from < block.length) block.fill(0, to - from);
-    foldBlock(blockAt, half, foldedAt);
-    project(foldedAt, half, tableAt, count, outAt);
-    return out;
+  return (angles, half, timed) => {
+    const project = timed ? projectTimedBlock : projectBlock;
+    const count = angles.length;
+    kernel.floats(tableAt, 2 * half * count).set(carrierTable(angles, half));
+    const block = kernel.floats(blockAt, 2 * half);
+    const out = kernel.floats(outAt, (timed ? TIMED_SUMS : PLAIN_SUMS) * count);
+    return (samples, from, to) => {
+      block.set(samples.subarray(from, to));
+      if (to - from < block.length) block.fill(0, to - from);
+      foldBlock(blockAt, half, foldedAt);
+      project(foldedAt, half, tableAt, count, outAt);
+      return out;
+    };
   };
 }
 
