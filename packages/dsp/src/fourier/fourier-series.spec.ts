@@ -65,7 +65,7 @@ describe('residualRmsByOrder', () => {
       rms: value,
       phaseDeg: null,
     }));
-    const result = residualRmsByOrder({ frequencyHz: 50, dc: 7, components });
+    const result = residualRmsByOrder({ frequencyHz: 50, dc: 7, components: components.reverse() });
     expect(result.ordersByMagnitude).toEqual([2, 5, 3, 1]);
     expect(result.byMagnitude.map((x) => x ** 2)).toEqual([23, 14, 5, 1, 0].map((x) => expect.closeTo(x, 9)));
     expect(result.byOrder.map((x) => x ** 2)).toEqual([23, 22, 13, 9, 9, 0].map((x) => expect.closeTo(x, 9)));

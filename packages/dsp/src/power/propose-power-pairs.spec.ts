@@ -157,6 +157,7 @@ describe('proposePowerPairs', () => {
     ['a voltage between lines', ['U12'], ['I1']],
     ['voltages between lines', ['U12', 'U23', 'U31'], ['I1', 'I2', 'I3']],
     ['voltages between lines by letter', ['VAB', 'VBC', 'VCA'], ['IA', 'IB', 'IC']],
+    ['a voltage between unnamed lines', ['VLL'], ['I']],
     ['different phases', ['UL1'], ['IL2']],
     ['a neutral current', ['UL1'], ['IN']],
     ['twice the same name', ['u1', 'u1'], ['i1', 'x']],

@@ -173,6 +173,22 @@ describe('polynomialRoots', () => {
     );
   });
 
+  it('keeps apart what is hardly further apart than the coefficients tell', () => {
+    expectRoots(
+      polynomialRoots(withRoots([-1, -1.00002])),
+      [
+        [-1, 0],
+        [-1.00002, 0],
+      ],
+      1e-9,
+    );
+    // −1 and −1 ± j1.7·10⁻⁵: no triple root, and no double one of two of the three.
+    const tight = polynomialRoots(multiply([1, 1], [1, 2, 1 + 1.7e-5 ** 2]));
+    expect(tight.map(({ multiplicity }) => multiplicity)).toEqual([1, 1, 1]);
+    // Three roots so close move by ∛ε, about 6 · 10⁻⁶, with the rounding of the coefficients.
+    for (const { re, im } of tight) expect(Math.hypot(re + 1, im)).toBeLessThan(3e-5);
+  });
+
   it('passes over leading zeros and gives none for a constant', () => {
     expect(polynomialRoots([0, 0, 1, -3])).toEqual([{ re: 3, im: 0, multiplicity: 1 }]);
     expect(polynomialRoots([5])).toEqual([]);

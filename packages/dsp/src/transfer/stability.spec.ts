@@ -95,6 +95,8 @@ describe('routhTable', () => {
 
   it('sees an undamped oscillation as a row of zeros without sign change', () => {
     expect(routhTable([1, 0, 25])).toMatchObject({ signChanges: 0, hasZeroRow: true });
+    // (s + 0.3)(s² + 0.7): the row vanishes but for the rounding of decimal fractions.
+    expect(routhTable([1, 0.3, 0.7, 0.21])).toMatchObject({ signChanges: 0, hasZeroRow: true });
   });
 
   it('has rows as long as their power of s', () => {

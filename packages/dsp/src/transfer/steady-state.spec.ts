@@ -110,6 +110,8 @@ describe('twoLevelSteadyState', () => {
     // tanh x = x − x³/3 …: ripple of 10⁻⁶ at T/(4τ) = 10⁻⁶, and full level at 10³.
     expect(twoLevelSteadyState(square, 0.25e6).peak).toBeCloseTo(1e-6, 15);
     expect(twoLevelSteadyState(square, 0.25e-3).peak).toBe(1);
+    // rms² = 1 − tanh(x)/x at x = T/(4τ) = 0.15.
+    expect(twoLevelSteadyState(square, 1 / 0.6).rms ** 2).toBeCloseTo(1 - Math.tanh(0.15) / 0.15, 14);
     // rms of a small triangle of peak a: a/√3.
     expect(twoLevelSteadyState(square, 0.25e6).rms).toBeCloseTo(1e-6 / Math.sqrt(3), 17);
   });
