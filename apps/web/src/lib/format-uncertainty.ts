@@ -20,7 +20,7 @@ function rounded(value: number, expanded: number, unit: string) {
 const isKnown = (expanded: Figure): expanded is number => !absent(expanded) && expanded > 0;
 
 /** A figure of a record is never shown finer than this share of it, however quiet the record is. */
-const finest = 1e-6;
+const finest = 1e-5;
 
 /**
  * A value with the digits that its expanded uncertainty supports (JCGM 100:2008, 7.2.6), seven or so at most; four where

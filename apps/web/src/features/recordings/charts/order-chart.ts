@@ -29,9 +29,10 @@ export interface OrderChartInput {
   heightPx: number;
 }
 
-/** Share of the orders that should be seen on a logarithmic axis, and the decades it spans at most. */
+/** Share of the orders that should be seen on a logarithmic axis. */
 const shareSeen = 0.9;
-const mostDecades = 6;
+/** Decades that such an axis spans at most; under limits fewer, so that these can be told apart. */
+const mostDecades = { underLimits: 6, alone: 8 };
 const margin = { l: 64, r: 12, t: 8, b: 30 };
 /** Room above the plot for the value of a broken bar. */
 const labelRoom = 20;
@@ -55,7 +56,8 @@ function orderScale(
   if (scale === 'log') {
     const strongest = values.filter((value) => value > 0).toSorted((a, b) => b - a);
     const faintest = strongest[Math.ceil(shareSeen * strongest.length) - 1] ?? null;
-    return { range: amplitudeRange(values, limits, scale, faintest, mostDecades), isBroken: false };
+    const decades = limits.length > 0 ? mostDecades.underLimits : mostDecades.alone;
+    return { range: amplitudeRange(values, limits, scale, faintest, decades), isBroken: false };
   }
   const others = values.filter((_, i) => rows[i]?.order !== 1);
   const isAlone = !others.some((value) => value > 0) && limits.length === 0;

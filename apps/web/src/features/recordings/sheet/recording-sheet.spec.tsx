@@ -145,6 +145,36 @@ describe('sheet of a recording', () => {
   });
 });
 
+describe('figures that lead to each other', () => {
+  it('follow a chosen order over time', async () => {
+    const seen = mockApi(answers());
+    const user = show(sampleRecording());
+    const spectrum = within(await screen.findByRole('region', { name: 'i, current by order' }));
+    await user.click(spectrum.getByRole('radio', { name: 'Table' }));
+    await user.click(spectrum.getByRole('button', { name: '3' }));
+    expect(await screen.findByRole('region', { name: 'i, order 3, group over time' })).toBeTruthy();
+    expect(spectrum.getByText(/2\.400.A, 120\.00.% of I₁/)).toBeTruthy();
+    await waitFor(() => expect(seen.some(({ path }) => path.includes('figure=group&order=3'))).toBe(true));
+  });
+
+  it('show the place of a flag in the waveform', async () => {
+    const evidence = { count: 37, timesS: [0.5], value: 14, limit: 3, unit: 'samples' };
+    const flag = { code: 'clipped', severity: 'error', message: 'Flat.', evidence } as const;
+    const span = { fromS: 1, toS: 2 };
+    const analysis = clippedAnalysis({
+      settings: { profile: 'mains', nominalFrequencyHz: 50, span },
+      channels: [sampleChannel({ flags: [flag] })],
+    });
+    const seen = mockApi(answers(analysis));
+    const user = show(sampleRecording());
+    expect(await screen.findByText('37 times, 14 samples against 3 samples')).toBeTruthy();
+    // Half a second into a span that begins at 1 s; four cycles of 50 Hz around it.
+    await user.click(screen.getByRole('button', { name: /Show 1\.500.s in the waveform/ }));
+    await waitFor(() => expect(seen.some(({ path }) => path.includes('fromS=1.46&toS=1.54'))).toBe(true));
+    expect(screen.getByText(/analysed from 1\.00.s to 2\.00.s/)).toBeTruthy();
+  });
+});
+
 describe('notes in the margin', () => {
   it('are lettered in the order of writing and say what they speak of', async () => {
     const span = { kind: 'span', fromS: 0.5, toS: 0.75 } as const;

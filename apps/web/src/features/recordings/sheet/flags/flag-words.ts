@@ -26,7 +26,7 @@ export function codeTitle(code: string): string {
 export const severity: Record<Flag['severity'], { tone: 'over' | 'near' | 'act'; words: string }> = {
   error: { tone: 'over', words: 'error' },
   warning: { tone: 'near', words: 'warning' },
-  info: { tone: 'act', words: 'for information' },
+  info: { tone: 'act', words: 'information' },
 };
 
 /** The figure of the sheet that a flag speaks of. */

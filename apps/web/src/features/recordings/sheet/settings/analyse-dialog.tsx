@@ -1,15 +1,20 @@
-import { Button, Grid, Input, Stack } from '@chakra-ui/react';
+import { Button, Stack } from '@chakra-ui/react';
 import { zodResolver } from '@hookform/resolvers/zod';
-import { windowNameSchema, type Recording, type Settings } from '@overtally/contracts';
+import type { Recording, Settings } from '@overtally/contracts';
 import { useForm } from 'react-hook-form';
-import { FormField, SelectInput } from '../../../../components/form-field.js';
 import { FormProblem } from '../../../../components/form-problem.js';
 import { Modal } from '../../../../components/modal.js';
 import { notifyDone } from '../../../../components/notify.js';
 import { setFormProblem } from '../../../../lib/form-errors.js';
 import type { Span } from '../../charts/span.js';
 import { useRecordingChanges } from '../../hooks/use-recording-changes.js';
-import { settingsFormSchema, toSettings, toSettingsForm, type SettingsForm } from './settings-values.js';
+import { ChainFields } from './chain-fields.js';
+import { FormPart } from './form-part.js';
+import { chainSummary, pairingSummary, spectrumSummary } from './part-summaries.js';
+import { PairingFields } from './pairing-fields.js';
+import { ProfileFields, SpectrumFields } from './profile-fields.js';
+import { settingsFormSchema, type SettingsForm } from './settings-form.js';
+import { toSettings, toSettingsForm } from './settings-values.js';
 import { SpanFields } from './span-fields.js';
 
 interface AnalyseDialogProps {
@@ -30,31 +35,16 @@ export function AnalyseDialog({ open, onClose, ...props }: AnalyseDialogProps) {
   );
 }
 
-const profiles = [
-  { value: 'mains', label: 'Mains: synchronous 200 ms windows' },
-  { value: 'tone', label: 'Tone: single-tone quality' },
-  { value: 'general', label: 'General: averaged windowed spectrum' },
-];
-const nominals = [
-  { value: 'auto', label: 'Found in the record' },
-  { value: '50', label: '50 Hz' },
-  { value: '60', label: '60 Hz' },
-  { value: 'other', label: 'Another frequency' },
-];
-const windows = [
-  { value: '', label: 'As the profile has it' },
-  ...windowNameSchema.options.map((value) => ({ value, label: value })),
-];
-
 function AnalyseForm({ recording, settings, view, onClose }: Omit<AnalyseDialogProps, 'open'>) {
+  const { channels, durationS } = recording;
   const form = useForm<SettingsForm>({
     resolver: zodResolver(settingsFormSchema),
-    defaultValues: toSettingsForm(settings, view),
+    defaultValues: toSettingsForm(settings, view, channels),
   });
   const { errors } = form.formState;
   const { analyse } = useRecordingChanges(recording);
   const start = form.handleSubmit((values) =>
-    analyse.mutate(toSettings(values, settings), {
+    analyse.mutate(toSettings(values), {
       onSuccess: () => {
         notifyDone('Analysis started');
         onClose();
@@ -62,45 +52,38 @@ function AnalyseForm({ recording, settings, view, onClose }: Omit<AnalyseDialogP
       onError: (error) => setFormProblem(form, error),
     }),
   );
-  const mono = { fontFamily: 'mono', inputMode: 'decimal' } as const;
+  const values = form.watch();
+  const has = (quantity: string) => channels.some((channel) => channel.quantity === quantity);
+  const mayHavePower = values.profile !== 'tone' && has('voltage') && has('current');
   return (
     <form noValidate onSubmit={start}>
       <Stack gap="4">
         <FormProblem message={errors.root?.message} />
-        <FormField label="Profile" error={errors.profile?.message}>
-          <SelectInput options={profiles} {...form.register('profile')} />
-        </FormField>
-        <Grid gap="4" templateColumns={{ base: '1fr', sm: '1fr 1fr' }}>
-          <FormField label="Nominal frequency" error={errors.nominal?.message}>
-            <SelectInput options={nominals} {...form.register('nominal')} />
-          </FormField>
-          {form.watch('nominal') === 'other' ? (
-            <FormField label="Frequency in Hz" error={errors.nominalOtherHz?.message}>
-              <Input {...mono} {...form.register('nominalOtherHz')} />
-            </FormField>
-          ) : null}
-        </Grid>
-        <Grid gap="4" templateColumns={{ base: '1fr', sm: '1fr 1fr' }}>
-          <FormField label="Highest order" optional error={errors.maxOrder?.message} help="50 when empty.">
-            <Input {...mono} {...form.register('maxOrder')} />
-          </FormField>
-          <FormField
-            label="Highest order in THD"
-            optional
-            error={errors.thdMaxOrder?.message}
-            help="40 when empty; 10 for a tone."
+        <ProfileFields form={form} />
+        <SpanFields form={form} durationS={durationS} />
+        <Stack gap="2">
+          <FormPart
+            title="Spectrum"
+            summary={spectrumSummary(values)}
+            isWrong={Boolean(errors.kaiserBeta || errors.segmentLength || errors.overlapPercent)}
           >
-            <Input {...mono} {...form.register('thdMaxOrder')} />
-          </FormField>
-        </Grid>
-        <FormField
-          label="Window of the drawn spectrum"
-          error={errors.window?.message}
-          help="The windows of the mains profile stay rectangular."
-        >
-          <SelectInput options={windows} {...form.register('window')} />
-        </FormField>
-        <SpanFields form={form} durationS={recording.durationS} />
+            <Stack gap="4">
+              <SpectrumFields form={form} />
+            </Stack>
+          </FormPart>
+          {mayHavePower ? (
+            <FormPart
+              title="Power"
+              summary={pairingSummary(values, channels)}
+              isWrong={Boolean(errors.pairs || errors.sets || errors.ratedCurrentA)}
+            >
+              <PairingFields form={form} channels={channels} />
+            </FormPart>
+          ) : null}
+          <FormPart title="Measuring chain" summary={chainSummary(values)} isWrong={Boolean(errors.accuracy)}>
+            <ChainFields form={form} />
+          </FormPart>
+        </Stack>
         <Stack direction="row" justify="flex-end" gap="2">
           <Button onClick={onClose}>Cancel</Button>
           <Button type="submit" variant="solid" loading={analyse.isPending}>

@@ -2,7 +2,7 @@ import { Grid, Input } from '@chakra-ui/react';
 import type { UseFormReturn } from 'react-hook-form';
 import { FormField, SelectInput } from '../../../../components/form-field.js';
 import { formatDuration } from '../../../../lib/format.js';
-import type { SettingsForm } from './settings-values.js';
+import type { SettingsForm } from './settings-form.js';
 
 interface SpanFieldsProps {
   form: UseFormReturn<SettingsForm>;
