@@ -117,3 +117,32 @@ export function gatherLines(
     sine += 8;
   }
 }
+
+/** rms values of lines given as peak amplitudes; line 0 is the magnitude of the mean. `count` is rounded up to even. */
+export function lineRms(cosine: usize, sine: usize, count: i32, rms: usize): void {
+  const half = f64x2.splat(0.5);
+  for (let i = 0; i < count; i += 2) {
+    const at: usize = i << 3;
+    const c = v128.load(cosine + at);
+    const s = v128.load(sine + at);
+    const square = f64x2.add(f64x2.mul(c, c), f64x2.mul(s, s));
+    v128.store(rms + at, f64x2.sqrt(f64x2.mul(half, square)));
+  }
+  store<f64>(rms, Math.abs(load<f64>(cosine)));
+}
+
+/** Mean of the squares of `count` samples. */
+export function meanSquare(x: usize, count: i32): f64 {
+  let low = f64x2.splat(0);
+  let high = low;
+  const rest = count & 3;
+  for (const end = x + ((count - rest) << 3); x < end; x += 32) {
+    const a = v128.load(x);
+    const b = v128.load(x, 16);
+    low = f64x2.add(low, f64x2.mul(a, a));
+    high = f64x2.add(high, f64x2.mul(b, b));
+  }
+  let sum = f64x2.extract_lane(sumsOf(low, high), 0) + f64x2.extract_lane(sumsOf(low, high), 1);
+  for (let i = 0; i < rest; i++) sum += load<f64>(x + (i << 3)) * load<f64>(x + (i << 3));
+  return sum / count;
+}

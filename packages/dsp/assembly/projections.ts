@@ -8,7 +8,7 @@
  * `half` numbers. `half` is even.
  */
 export function foldBlock(x: usize, half: i32, out: usize): void {
-  const row: usize = (<usize>half) << 3;
+  const row: usize = half << 3;
   let after = x + row;
   let before = x + row - 16;
   let distance = f64x2.replace_lane(f64x2.splat(0.5), 1, 1.5);
@@ -31,7 +31,7 @@ export function foldBlock(x: usize, half: i32, out: usize): void {
 
 /** Per component Σ even·cosine and −Σ odd·sine; `table` holds `half` cosines and as many sines of each. */
 export function projectBlock(folded: usize, half: i32, table: usize, count: i32, out: usize): void {
-  const row: usize = (<usize>half) << 3;
+  const row: usize = half << 3;
   for (let c = 0; c < count; c++) {
     store<f64>(out, dot(folded, table, half));
     store<f64>(out, -dot(folded + row, table + row, half), 8);
@@ -42,7 +42,7 @@ export function projectBlock(folded: usize, half: i32, table: usize, count: i32,
 
 /** As `projectBlock`, followed for each component by the same two sums weighted by the distance from the centre. */
 export function projectTimedBlock(folded: usize, half: i32, table: usize, count: i32, out: usize): void {
-  const row: usize = (<usize>half) << 3;
+  const row: usize = half << 3;
   for (let c = 0; c < count; c++) {
     store<f64>(out, dot(folded, table, half));
     store<f64>(out, -dot(folded + row, table + row, half), 8);
@@ -58,7 +58,7 @@ function dot(a: usize, b: usize, count: i32): f64 {
   let sum = f64x2.splat(0);
   let sum2 = sum;
   const rest = count & 3;
-  for (const end = a + ((<usize>(count - rest)) << 3); a < end; a += 32) {
+  for (const end = a + ((count - rest) << 3); a < end; a += 32) {
     sum = f64x2.add(sum, f64x2.mul(v128.load(a), v128.load(b)));
     sum2 = f64x2.add(sum2, f64x2.mul(v128.load(a, 16), v128.load(b, 16)));
     b += 32;

@@ -12,7 +12,7 @@ import { findPython, pythonVersions, runPython } from './python.mjs';
 const FOLDER = fileURLToPath(new URL('../../../.data/bench', import.meta.url));
 const OURS = fileURLToPath(new URL('ours.mjs', import.meta.url));
 const ROUNDS = 3;
-const REPEATS = 3;
+const REPEATS = 5;
 
 /** @param {number[]} values */
 const median = (values) => values.toSorted((a, b) => a - b)[values.length >> 1];

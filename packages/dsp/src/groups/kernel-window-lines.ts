@@ -33,10 +33,12 @@ export function createKernelWindowLines(shape: WindowShape): WindowLinePlan | nu
   };
   return {
     ...{ sampleCount, windowSamples, lineCount },
-    amplitudes(samples, start, cosine, sine) {
-      bench.analyse(tables, samples, start, sampleCount);
+    amplitudes(samples, start, cosine, sine, rms) {
+      const square = bench.analyse(tables, samples, start, sampleCount);
       cosine.set(bench.cosine);
       sine.set(bench.sine);
+      rms?.set(bench.rms);
+      return Math.sqrt(square);
     },
   };
 }

@@ -1,6 +1,6 @@
 import { createChirpPlan } from '../fft/chirp-plan.js';
 import { leakageCurve, orderFit, removeLeakage } from './leakage.js';
-import { ordersOf, type WindowLinePlan, type WindowShape } from './window-shape.js';
+import { lineRms, ordersOf, type WindowLinePlan, type WindowShape } from './window-shape.js';
 
 /**
  * `createWindowLines` in plain TypeScript, by a chirp transform of each window; for platforms without WebAssembly SIMD.
@@ -17,8 +17,19 @@ export function createPlainWindowLines(shape: WindowShape): WindowLinePlan {
   const turnCos = Float64Array.from({ length: lineCount }, (_, k) => Math.cos(k * spacing * centre));
   const turnSin = Float64Array.from({ length: lineCount }, (_, k) => Math.sin(k * spacing * centre));
 
-  function amplitudes(samples: Float64Array, start: number, cosine: Float64Array, sine: Float64Array): void {
-    for (let i = 0; i < sampleCount; i++) input[2 * i] = samples[start + i]!;
+  function amplitudes(
+    samples: Float64Array,
+    start: number,
+    cosine: Float64Array,
+    sine: Float64Array,
+    rms?: Float64Array,
+  ): number {
+    let squares = 0;
+    for (let i = 0; i < sampleCount; i++) {
+      const x = samples[start + i]!;
+      input[2 * i] = x;
+      squares += x * x;
+    }
     plan.transform(input, output);
     for (let k = 0; k < lineCount; k++) {
       const re = output[2 * k]!;
@@ -28,6 +39,8 @@ export function createPlainWindowLines(shape: WindowShape): WindowLinePlan {
       sine[k] = -scale * (re * turnSin[k]! + im * turnCos[k]!);
     }
     if (curve && fit) removeLeakage(curve, fit, cycles, cosine, sine);
+    rms?.set(lineRms(cosine, sine));
+    return Math.sqrt(squares / sampleCount);
   }
   return { sampleCount, windowSamples, lineCount, amplitudes };
 }

@@ -19,7 +19,10 @@ export interface WindowBench {
   /** Peak amplitudes of the lines of the window analysed last, about its centre. */
   readonly cosine: Float64Array;
   readonly sine: Float64Array;
-  analyse(tables: WindowTables, samples: Float64Array, start: number, count: number): void;
+  /** Their rms values. */
+  readonly rms: Float64Array;
+  /** @returns mean of the squares of the samples */
+  analyse(tables: WindowTables, samples: Float64Array, start: number, count: number): number;
 }
 
 /** @param lengths in samples; windows may be up to half a sample shorter than the shortest */
@@ -38,8 +41,9 @@ export function createWindowBench(
   const factors = kernel.allocate(2 * lineCount);
   const cosineAt = kernel.allocate(inFours(lineCount));
   const sineAt = kernel.allocate(inFours(lineCount));
+  const rmsAt = kernel.allocate(inFours(lineCount));
   const removal = createLeakageRemoval(kernel, nodes, lineCount, cycles, orderCount);
-  const { gatherLines } = kernel.functions;
+  const { gatherLines, lineRms } = kernel.functions;
   let loaded: WindowTables | null = null;
 
   function load(tables: WindowTables): void {
@@ -55,11 +59,14 @@ export function createWindowBench(
     nodes,
     cosine: kernel.floats(cosineAt, lineCount),
     sine: kernel.floats(sineAt, lineCount),
+    rms: kernel.floats(rmsAt, lineCount),
     analyse(tables, samples, start, count) {
       if (loaded !== tables) load(tables);
-      frame.transform(samples, start, count);
+      const square = frame.transform(samples, start, count);
       gatherLines(frame.re, frame.im, starts, weights, GATHERED_LINES, factors, lineCount, cosineAt, sineAt);
       if (tables.leakage) removal.apply(cosineAt, sineAt);
+      lineRms(cosineAt, sineAt, lineCount, rmsAt);
+      return square;
     },
   };
 }

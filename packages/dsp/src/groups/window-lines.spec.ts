@@ -7,10 +7,13 @@ import { createWindowLines, lineRms } from './window-lines.js';
 import type { WindowLinePlan, WindowShape } from './window-shape.js';
 
 function linesOf(plan: WindowLinePlan, samples: Float64Array, start = 0) {
-  const cosine = new Float64Array(plan.lineCount);
-  const sine = new Float64Array(plan.lineCount);
-  plan.amplitudes(samples, start, cosine, sine);
-  return { cosine, sine };
+  const [cosine, sine, rms] = [1, 2, 3].map(() => new Float64Array(plan.lineCount)) as [
+    Float64Array,
+    Float64Array,
+    Float64Array,
+  ];
+  const totalRms = plan.amplitudes(samples, start, cosine, sine, rms);
+  return { cosine, sine, rms, totalRms };
 }
 
 const amplitudeOf = (order: number) => 10 / (order * order + 1);
@@ -40,9 +43,9 @@ describe('createWindowLines', () => {
     const start = 7;
     const samples = distorted(sampleCount + 20, windowSamples, cycles, orders);
     const plan = createWindowLines(sampleCount, windowSamples, cycles, orders);
-    const { cosine, sine } = linesOf(plan, samples, start);
+    const { cosine, sine, rms } = linesOf(plan, samples, start);
     const centre = start + (sampleCount - 1) / 2;
-    const rms = lineRms(cosine, sine);
+    lineRms(cosine, sine).forEach((value, k) => expect(Math.abs(rms[k]! - value)).toBeLessThan(1e-14));
     expect(cosine[0]).toBeCloseTo(-3, 11);
     for (let k = 1; k < plan.lineCount; k++) {
       const order = k / cycles;
@@ -100,7 +103,8 @@ describe('createKernelWindowLines', () => {
       );
       const plain = linesOf(createPlainWindowLines(shape), samples, 2);
       const compiled = linesOf(createKernelWindowLines(shape)!, samples, 2);
-      const largest = lineRms(plain.cosine, plain.sine).reduce((max, x) => Math.max(max, x));
+      const largest = plain.rms.reduce((max, x) => Math.max(max, x));
+      expect(compiled.totalRms / plain.totalRms).toBeCloseTo(1, 12);
       compiled.cosine.forEach((c, k) => {
         expect(Math.hypot(c - plain.cosine[k]!, compiled.sine[k]! - plain.sine[k]!) / largest).toBeLessThan(
           1e-12,

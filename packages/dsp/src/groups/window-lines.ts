@@ -1,13 +1,8 @@
 import { createKernelWindowLines } from './kernel-window-lines.js';
 import { createPlainWindowLines } from './plain-window-lines.js';
-import type { WindowLinePlan } from './window-shape.js';
+import { lineRms, type WindowLinePlan } from './window-shape.js';
 
-export type { WindowLinePlan };
-
-/** rms values of lines given as peak amplitudes; line 0 is the magnitude of the mean. */
-export function lineRms(cosine: Float64Array, sine: Float64Array): Float64Array {
-  return cosine.map((c, k) => (k === 0 ? Math.abs(c) : Math.hypot(c, sine[k]!) / Math.SQRT2));
-}
+export { lineRms, type WindowLinePlan };
 
 /**
  * Plan for the lines k = 0..lineCount−1, spacing f0/N, of a rectangular window of exactly `windowSamples` samples

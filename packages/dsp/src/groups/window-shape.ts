@@ -13,8 +13,16 @@ export interface WindowLinePlan {
    *
    * @param cosine receives lineCount peak amplitudes (line 0: the mean)
    * @param sine receives lineCount peak amplitudes
+   * @param rms receives lineCount rms values, if given (`lineRms`)
+   * @returns rms value of all samples of the window
    */
-  amplitudes(samples: Float64Array, start: number, cosine: Float64Array, sine: Float64Array): void;
+  amplitudes(
+    samples: Float64Array,
+    start: number,
+    cosine: Float64Array,
+    sine: Float64Array,
+    rms?: Float64Array,
+  ): number;
 }
 
 /** What a line analysis is made for; see `createWindowLines`. */
@@ -29,4 +37,9 @@ export interface WindowShape {
 /** Orders whose leakage is taken out, DC included. */
 export function ordersOf({ cycles, maxOrder, lineCount }: WindowShape): number {
   return Math.min(maxOrder, Math.floor((lineCount - 1) / cycles)) + 1;
+}
+
+/** rms values of lines given as peak amplitudes; line 0 is the magnitude of the mean. */
+export function lineRms(cosine: Float64Array, sine: Float64Array): Float64Array {
+  return cosine.map((c, k) => (k === 0 ? Math.abs(c) : Math.hypot(c, sine[k]!) / Math.SQRT2));
 }

@@ -20,8 +20,12 @@ export interface LineFrame {
   /** Addresses of line 0 of the spectrum; `GATHERED_LINES` lines on both sides are there as well. */
   readonly re: number;
   readonly im: number;
-  /** Transforms `count` samples from `start`, at most the capacity; time is counted from sample floor(count/2). */
-  transform(samples: Float64Array, start: number, count: number): void;
+  /**
+   * Transforms `count` samples from `start`, at most the capacity; time is counted from sample floor(count/2).
+   *
+   * @returns mean of the squares of the samples
+   */
+  transform(samples: Float64Array, start: number, count: number): number;
 }
 
 /**
@@ -45,7 +49,7 @@ export function createLineFrame(kernel: Kernel, capacity: number, highest: numbe
   const centre = factor * half + reach;
   const length = 2 * centre + 2;
   const samplesAt = kernel.allocate(length);
-  const { decimate, mirror, unpackEven, weigh } = kernel.functions;
+  const { decimate, meanSquare, mirror, unpackEven, weigh } = kernel.functions;
 
   /** Grid points from `first` (in grid steps from the centre) into the source of the transform at `place`. */
   function fill(first: number, count: number, weightsAt: number, place: number): void {
@@ -68,6 +72,7 @@ export function createLineFrame(kernel: Kernel, capacity: number, highest: numbe
       unpackEven(transform.run(), size / 2, turns, re, im);
       mirror(re, im, GATHERED_LINES, -8);
       mirror(re + 4 * size, im + 4 * size, GATHERED_LINES, 8);
+      return meanSquare(samplesAt + 8 * from, count);
     },
   };
 }

@@ -10,6 +10,8 @@ export interface Lines {
   sine: Float64Array;
   /** rms values; line 0 is the magnitude of the mean. */
   rms: Float64Array;
+  /** Of all samples of the window. */
+  totalRms: number;
 }
 
 /** Takes the window of `sampleCount` samples from `start`, exactly `windowSamples` long. */
@@ -43,16 +45,12 @@ export function createLineAnalysis(
       plans.delete(oldest);
     }
     const { plan, cosine, sine, rms } = lines;
-    plan.amplitudes(samples, start, cosine, sine);
-    rms[0] = Math.abs(cosine[0]!);
-    for (let k = 1; k < rms.length; k++) {
-      rms[k] = Math.sqrt((cosine[k]! * cosine[k]! + sine[k]! * sine[k]!) / 2);
-    }
+    lines.totalRms = plan.amplitudes(samples, start, cosine, sine, rms);
     return lines;
   };
 }
 
 function prepareLines(plan: WindowLinePlan): Lines {
   const array = () => new Float64Array(plan.lineCount);
-  return { plan, cosine: array(), sine: array(), rms: array() };
+  return { plan, cosine: array(), sine: array(), rms: array(), totalRms: 0 };
 }

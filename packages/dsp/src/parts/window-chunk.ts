@@ -6,7 +6,6 @@ import {
   type Group,
 } from '../groups/grouping.js';
 import { highFrequencyBand } from '../groups/high-frequency-bands.js';
-import { createBlockSums } from '../kernels/block-sums.js';
 import { wrapDegrees } from '../model/fit-sinusoids.js';
 import { createLineAnalysis, type Lines } from './line-analysis.js';
 import type { PartContext } from './part-types.js';
@@ -51,7 +50,6 @@ export function* computeWindows(
   const count = boundaries.length - 1;
   const chunk = emptyChunk(count, plan.orders, plan.bandCentresHz.length);
   const linesOf = createLineAnalysis(plan, sampleRateHz);
-  const sumBlock = createBlockSums();
   const stretchOf = (window: number) => ({
     from: Math.round(boundaries[window]!),
     to: Math.min(sampleCount, Math.round(boundaries[window + 1]!)),
@@ -60,8 +58,7 @@ export function* computeWindows(
     const { from, to } = stretchOf(window);
     const windowSamples = boundaries[window + 1]! - boundaries[window]!;
     const lines = linesOf(samples, offset, to - from, windowSamples);
-    const { squares } = sumBlock(samples.subarray(offset, offset + to - from), 0);
-    chunk.rms[window] = Math.sqrt(squares / (to - from));
+    chunk.rms[window] = lines.totalRms;
     chunk.dc[window] = lines.cosine[0]!;
     writePhases(chunk, window, plan, lines, boundaries[window]! - from);
     writeGroups(chunk, window, plan, lines.rms);

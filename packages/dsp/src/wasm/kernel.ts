@@ -33,6 +33,8 @@ export interface KernelFunctions {
     count: number,
     out: number,
   ) => void;
+  lineRms: (cosine: number, sine: number, count: number, rms: number) => void;
+  meanSquare: (x: number, count: number) => number;
   mirror: (re: number, im: number, count: number, step: number) => void;
   gatherLines: (
     re: number,
