@@ -10,8 +10,8 @@ import type { SpectrumResult } from '../types.js';
 import { PartBatch, type Batches } from './part-batch.js';
 import { splitItems } from './split.js';
 
-/** rms wander that takes 2 % of the amplitude of order 10, which it turns by ten times as much. */
-const WANDER_RAD = 0.02;
+/** rms wander, in radians of the highest order, that takes 0.1 % of its amplitude in a model of steady frequency. */
+const WANDER_RAD = 0.045;
 
 /** What is known of a channel before windows are laid. */
 export interface ChannelSurvey {
@@ -57,7 +57,8 @@ function surveyChannel(
   );
   return () => {
     const wholeTrack = track?.() ?? null;
-    const fittedWhole = fitsAsWhole(context) && keepsPhase(wholeTrack, 0, sampleCount, WANDER_RAD);
+    const limitRad = WANDER_RAD / context.settings.maxOrder;
+    const fittedWhole = fitsAsWhole(context) && keepsPhase(wholeTrack, 0, sampleCount, limitRad);
     return {
       context,
       scan: scan(),

@@ -23,7 +23,7 @@ export interface ToneStretch {
  * as noise.
  */
 export function toneStretches({
-  context: { sampleCount, sampleRateHz, settings },
+  context: { sampleCount, sampleRateHz },
   fundamental,
   track,
 }: {
