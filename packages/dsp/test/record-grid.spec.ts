@@ -85,6 +85,21 @@ describe('windows of a record with several channels', () => {
     expect(Array.from(idle.series!.thd).every(Number.isNaN)).toBe(true);
   });
 
+  // A model of one frequency over the whole record would lose J0(0.5)² = 0.88 of the power (Abramowitz and Stegun, 9.1).
+  it.each(['mains', 'general'] as const)('give the whole power of a supply that wanders (%s)', (profile) => {
+    const angle = (n: number) => (2 * Math.PI * 50 * n) / RATE + 0.5 * Math.sin((2 * Math.PI * n) / LENGTH);
+    const wave = (rms: number, lag: number) =>
+      Float64Array.from({ length: LENGTH }, (_, n) => Math.SQRT2 * rms * Math.cos(angle(n) - lag));
+    const { power } = analyse(
+      [channel(0, 'voltage', wave(230, 0)), channel(1, 'current', wave(10, Math.PI / 3))],
+      { profile },
+    );
+    // 230 V · 10 A · cos 60° and sin 60°.
+    expect(power[0]!.P / 1150).toBeCloseTo(1, 4);
+    expect(power[0]!.Q1 / (2300 * Math.sin(Math.PI / 3))).toBeCloseTo(1, 4);
+    expect(power[0]!.orders[0]!.currentRms).toBeCloseTo(10, 3);
+  });
+
   it('leave the tone profile to each channel, without powers', () => {
     const { channels, power } = analyse(
       [channel(0, 'voltage', sine(50, 230)), channel(1, 'current', sine(50, 10))],
