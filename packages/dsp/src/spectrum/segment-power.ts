@@ -1,5 +1,4 @@
 import { SHORTEST_KERNEL_LENGTH } from '../fft/kernel-transform.js';
-import { createKernel } from '../wasm/kernel.js';
 import { createKernelSegmentPower } from './kernel-segment-power.js';
 import { createPlainSegmentPower } from './plain-segment-power.js';
 
@@ -17,8 +16,7 @@ export interface SegmentPower {
  * @param removeMean takes the mean of each segment away before it is windowed
  */
 export function createSegmentPower(window: Float64Array, removeMean: boolean): SegmentPower {
-  const kernel = window.length < SHORTEST_KERNEL_LENGTH ? null : createKernel();
-  return kernel === null
-    ? createPlainSegmentPower(window, removeMean)
-    : createKernelSegmentPower(kernel, window, removeMean);
+  const compiled =
+    window.length < SHORTEST_KERNEL_LENGTH ? null : createKernelSegmentPower(window, removeMean);
+  return compiled ?? createPlainSegmentPower(window, removeMean);
 }
