@@ -33,8 +33,8 @@ import { windowSeries } from './window-series.js';
  * @param gapsBefore samples before which time is missing
  */
 export function channelAnalysis(measured: MeasuredChannel, gapsBefore: readonly number[]): ChannelAnalysis {
-  const { survey, frequencyHz, orders } = measured;
-  const { context, scan, spectrum, track } = survey;
+  const { survey, scan, spectrum, frequencyHz, orders } = measured;
+  const { context, track } = survey;
   const { channel, sampleRateHz, sampleCount, settings } = context;
   const { figures, formFactor } = scan;
   const mains = settings.profile === 'mains';
@@ -78,11 +78,10 @@ export function channelAnalysis(measured: MeasuredChannel, gapsBefore: readonly 
 }
 
 function seriesOf(
-  { survey, frequencyHz, grid, windows }: MeasuredChannel,
+  { survey: { context }, scan, frequencyHz, grid, windows }: MeasuredChannel,
   gapsBefore: readonly number[],
 ): WindowSeries | null {
   if (grid === null || windows === null) return null;
-  const { context, scan } = survey;
   const gaps = gapsBefore.map((sample) => ({ start: sample - 1, end: sample + 1 }));
   return windowSeries(windows, grid, {
     sampleRateHz: context.sampleRateHz,

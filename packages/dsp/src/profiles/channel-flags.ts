@@ -7,10 +7,10 @@ import type { Flag } from '../types.js';
 
 /** All quality flags of a channel. */
 export function channelFlags(
-  { survey, frequencyHz, orders, grid }: MeasuredChannel,
+  { survey, scan, spectrum, frequencyHz, orders, grid }: MeasuredChannel,
   windows: WindowSynchronism | null,
 ): Flag[] {
-  const { context, scan, spectrum, track } = survey;
+  const { context, track } = survey;
   const { figures, findings } = scan;
   const { settings, sampleRateHz, channel } = context;
   const fundamental =

@@ -14,10 +14,9 @@ export interface StatedFigures {
 
 /** Expanded uncertainties of the figures and orders of a channel. */
 export function channelUncertainties(
-  { survey, grid, orders, tone }: MeasuredChannel,
+  { survey: { context }, scan, grid, orders, tone }: MeasuredChannel,
   { fundamental, harmonics, mean, series, synchronisationErrorPercent }: StatedFigures,
 ): ChannelUncertainty {
-  const { context, scan } = survey;
   const { channel, sampleRateHz, sampleCount, settings } = context;
   const { rms, mean: sampleMean } = scan.figures;
   const acRms = Math.sqrt(Math.max(0, rms ** 2 - sampleMean ** 2));

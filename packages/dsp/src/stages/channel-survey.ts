@@ -2,11 +2,8 @@ import type { FundamentalEstimate } from '../fundamental/find-fundamental.js';
 import { assembleTrack, trackLayout, type FrequencyTrack } from '../fundamental/frequency-track.js';
 import { regressedFrequencyHz } from '../fundamental/local-frequency.js';
 import { keepsPhase } from '../fundamental/phase-wander.js';
-import type { ChannelScan } from '../parts/channel-scan.js';
 import { fitsAsWhole } from '../parts/locate-fundamental.js';
 import type { PartContext } from '../parts/part-types.js';
-import { finishSpectrum, planSpectrum } from '../parts/spectrum-segments.js';
-import type { SpectrumResult } from '../types.js';
 import { PartBatch, type Batches } from './part-batch.js';
 import { splitItems } from './split.js';
 
@@ -16,8 +13,6 @@ const WANDER_RAD = 0.045;
 /** What is known of a channel before windows are laid. */
 export interface ChannelSurvey {
   context: PartContext;
-  scan: ChannelScan;
-  spectrum: SpectrumResult;
   /** null when none stands out. */
   fundamental: SurveyedFundamental | null;
   track: FrequencyTrack | null;
@@ -32,7 +27,7 @@ export interface SurveyedFundamental {
   estimate: FundamentalEstimate;
 }
 
-/** Everything about the channels of a record that one of them tells without the others. */
+/** Fundamental of each channel and how it moves. */
 export function* surveyChannels(contexts: readonly PartContext[]): Batches<ChannelSurvey[]> {
   const locating = new PartBatch();
   const located = contexts.map((context) => locating.add({ ...context, kind: 'locate' }));
@@ -49,24 +44,13 @@ function surveyChannel(
   batch: PartBatch,
 ): () => ChannelSurvey {
   const { sampleRateHz, sampleCount } = context;
-  const scan = batch.add({ ...context, kind: 'scan', fundamentalHz: estimate?.frequencyHz ?? null });
   const track = estimate && trackParts(context, estimate.frequencyHz, batch);
-  const plan = planSpectrum(sampleCount, context.settings);
-  const sums = splitItems(plan.segments, plan.segmentLength).map((segments) =>
-    batch.add({ ...context, kind: 'spectrum', plan, segments }),
-  );
   return () => {
     const wholeTrack = track?.() ?? null;
     const limitRad = WANDER_RAD / context.settings.maxOrder;
     const fittedWhole = fitsAsWhole(context) && keepsPhase(wholeTrack, 0, sampleCount, limitRad);
     return {
       context,
-      scan: scan(),
-      spectrum: finishSpectrum(
-        plan,
-        sums.map((sum) => sum()),
-        sampleRateHz,
-      ),
       fundamental: estimate && {
         frequencyHz:
           wholeTrack === null || fittedWhole

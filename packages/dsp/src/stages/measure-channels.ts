@@ -3,6 +3,7 @@ import { combineToneFigures } from '../tone/tone-figures.js';
 import { toneOptions } from '../parts/tone-options.js';
 import type { ToneResult } from '../tone/tone-result.js';
 import type { ChannelSurvey } from './channel-survey.js';
+import { observeChannel, type Observation } from './observe-channel.js';
 import { fittedOrders, ordersOfPhasors, windowOrders, type OrderSet } from './order-set.js';
 import { PartBatch, type Batches } from './part-batch.js';
 import { splitItems } from './split.js';
@@ -17,7 +18,7 @@ export interface GriddedChannel {
   grid: WindowGrid | null;
 }
 
-export interface MeasuredChannel extends GriddedChannel {
+export interface MeasuredChannel extends GriddedChannel, Observation {
   /** Of the channel's own fundamental over the whole record; null when it has none. */
   frequencyHz: number | null;
   /** null when no whole window fits, or windows are not asked for. */
@@ -26,27 +27,37 @@ export interface MeasuredChannel extends GriddedChannel {
   tone: ToneResult | null;
 }
 
-/** Windows, orders and tone figures of all channels. */
+/**
+ * Everything that takes the samples of the channels with their windows laid. All of it goes into one batch, the passes
+ * over whole channels first, so that threads have no need to wait for one another.
+ *
+ * @param channels a channel may be given twice, in different windows
+ */
 export function* measureChannels(channels: readonly GriddedChannel[]): Batches<MeasuredChannel[]> {
   const batch = new PartBatch();
+  const surveys = new Set(channels.map(({ survey }) => survey));
+  const observed = new Map([...surveys].map((survey) => [survey, observeChannel(survey, batch)]));
+  const tones = new Map([...surveys].map((survey) => [survey, toneParts(survey, batch)]));
   const pending = channels.map((channel) => ({
-    channel,
     windows: windowParts(channel, batch),
     fit: fitPart(channel, batch),
-    tone: toneParts(channel.survey, batch),
   }));
   yield* batch.run();
   const windows = pending.map((each) => each.windows?.() ?? null);
   const frequencies = channels.map((channel, i) => ownFrequency(channel, windows[i]!));
-  return pending.map(({ channel, fit, tone }, i) => {
-    const setter = channels.findIndex((other) => isSetter(other) && other.grid === channel.grid);
+  return channels.map((channel, i) => {
+    const { survey, grid } = channel;
+    const setter = channels.findIndex((other) => isSetter(other) && other.grid === grid);
     const reference = { windows: windows[setter] ?? null, frequencyHz: frequencies[setter] ?? null };
+    const observation = observed.get(survey)!();
+    const totalRms = observation.scan.figures.rms;
     return {
       ...channel,
+      ...observation,
       frequencyHz: frequencies[i]!,
       windows: windows[i]!,
-      orders: fit?.() ?? ordersWithoutFit(channel, windows[i]!, reference),
-      tone: tone?.() ?? null,
+      orders: pending[i]!.fit?.() ?? ordersWithoutFit(channel, windows[i]!, reference, totalRms),
+      tone: tones.get(survey)?.() ?? null,
     };
   });
 }
@@ -97,16 +108,17 @@ function fitPart(channel: GriddedChannel, batch: PartBatch): (() => OrderSet) | 
 
 /** @param reference what the channel that sets the windows gave */
 function ordersWithoutFit(
-  { survey: { context, fundamental, scan }, grid }: GriddedChannel,
+  { survey: { context, fundamental }, grid }: GriddedChannel,
   windows: WindowChunk | null,
   reference: { windows: WindowChunk | null; frequencyHz: number | null },
+  totalRms: number,
 ): OrderSet | null {
   if (grid === null) return null;
   const { sampleCount, sampleRateHz } = context;
   if (!grid.ordersFromWindows) return fittedOrders(fundamental!.estimate, sampleCount);
   return windowOrders(windows!, reference.windows!, grid, {
     frequencyHz: reference.frequencyHz!,
-    totalRms: scan.figures.rms,
+    totalRms,
     sampleCount,
     sampleRateHz,
   });

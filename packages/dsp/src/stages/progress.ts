@@ -2,7 +2,7 @@ import type { AnalysisPart } from '../parts/part-types.js';
 import { partSamples } from '../parts/run-part.js';
 
 /** Shares of the work that are done when the first, second and third batch end, roughly. */
-const BATCH_ENDS = [0.25, 0.6, 1];
+const BATCH_ENDS = [0.15, 0.25, 1];
 
 /** Tells how much of an analysis is done, from the samples that its parts look at. Never falls. */
 export interface Progress {

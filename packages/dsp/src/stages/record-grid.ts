@@ -42,9 +42,10 @@ export function followsGrid(survey: ChannelSurvey, grid: ChannelSurvey): boolean
   return Math.abs(own.frequencyHz - its.frequencyHz) <= limitHz;
 }
 
-function shareOfPower({ fundamental, scan: { figures } }: ChannelSurvey): number {
-  const ac = figures.rms ** 2 - figures.mean ** 2;
-  return fundamental!.estimate.fit.components[0]!.rms ** 2 / ac;
+function shareOfPower({ fundamental }: ChannelSurvey): number {
+  const { fit, residualRms } = fundamental!.estimate;
+  const power = fit.components.reduce((sum, component) => sum + component.rms ** 2, residualRms ** 2);
+  return fit.components[0]!.rms ** 2 / power;
 }
 
 function relativeDeviation({ fundamental }: ChannelSurvey): number {
