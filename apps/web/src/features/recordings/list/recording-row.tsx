@@ -3,7 +3,8 @@ import type { ChannelSummary, LimitSet, Recording } from '@overtally/contracts';
 import { Link as RouterLink } from 'react-router-dom';
 import { TallyStrip } from '../../../components/tally-strip.js';
 import { formatDateTime } from '../../../lib/format-date.js';
-import { formatDuration, formatHz, formatPercent, formatSi } from '../../../lib/format.js';
+import { formatDuration, formatHz, formatSi } from '../../../lib/format.js';
+import { percentWords } from '../percent-words.js';
 import { isBusy, statusWords } from '../recording-status.js';
 import { compareRecording } from './comparison.js';
 
@@ -81,7 +82,7 @@ export function RecordingRow({ recording, limitSet, to, selected, selectable, on
         {formatSi(channel?.rms ?? null, channel?.unit ?? '')}
       </Table.Cell>
       <Table.Cell {...figureCell} hideBelow="md">
-        {formatPercent(channel?.thdFPercent ?? null)}
+        {percentWords(channel?.thdFPercent ?? null)}
       </Table.Cell>
       <Table.Cell hideBelow="lg">
         <Standing recording={recording} comparison={comparison} />
@@ -94,8 +95,8 @@ export function RecordingRow({ recording, limitSet, to, selected, selectable, on
 function figureWords({ fundamentalHz, rms, unit, thdFPercent }: ChannelSummary): string {
   const parts = [formatSi(rms, unit)];
   if (fundamentalHz !== null) parts.unshift(formatHz(fundamentalHz, 2));
-  if (thdFPercent !== null) parts.push(`THD ${formatPercent(thdFPercent)}`);
-  return parts.join('  ');
+  if (thdFPercent !== null) parts.push(`THD ${percentWords(thdFPercent)}`);
+  return parts.join(' · ');
 }
 
 /** The tally strip with its words; before there is one, how far the work is or why it failed. */

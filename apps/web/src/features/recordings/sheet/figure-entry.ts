@@ -1,6 +1,6 @@
 import type { ChannelAnalysis, Uncertainty } from '@overtally/contracts';
 import { formatToUncertainty } from '../../../lib/format-uncertainty.js';
-import { percentWords } from './percent-words.js';
+import { percentWords } from '../percent-words.js';
 
 /** One figure of a channel, as shown and as exported. */
 export interface FigureRow {

@@ -4,7 +4,7 @@ import { formatFixed, formatHz, formatSi } from '../../../lib/format.js';
 import { formatToUncertainty, formatUncertainty } from '../../../lib/format-uncertainty.js';
 import { isOver, resultWords, type OrderRow } from '../charts/order-rows.js';
 import { fundamentalSymbol } from '../charts/words.js';
-import { percentWords } from './percent-words.js';
+import { percentWords } from '../percent-words.js';
 
 type Column = TableColumn<OrderRow>;
 

@@ -5,7 +5,7 @@ import { formatToUncertainty, formatUncertainty } from '../../../lib/format-unce
 import { resultWords, type OrderRow } from '../charts/order-rows.js';
 import { fundamentalSymbol } from '../charts/words.js';
 import { targetWords, type NoteTarget } from './note-target.js';
-import { percentWords } from './percent-words.js';
+import { percentWords } from '../percent-words.js';
 
 interface SelectionLineProps {
   channel: ChannelAnalysis;

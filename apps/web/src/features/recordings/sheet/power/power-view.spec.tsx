@@ -43,7 +43,9 @@ function show(shown = analysis) {
 /** Text of the cells of the row that begins with `caption`. */
 const cellsOf = (table: HTMLElement, caption: string) => {
   const row = within(table).getByRole('rowheader', { name: caption }).closest('tr');
-  return [...(row?.querySelectorAll('td') ?? [])].map((cell) => cell.textContent);
+  return [...(row?.querySelectorAll('td') ?? [])].map((cell) =>
+    [...cell.querySelectorAll('abbr, span')].map((part) => part.textContent).join(''),
+  );
 };
 
 describe('power', () => {

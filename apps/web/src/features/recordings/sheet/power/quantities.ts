@@ -1,6 +1,6 @@
 import type { PowerPair, ThreePhase } from '@overtally/contracts';
 import { formatFixed, formatSi } from '../../../../lib/format.js';
-import { percentWords } from '../percent-words.js';
+import { percentWords } from '../../percent-words.js';
 
 /** A quantity under its symbol, as IEEE 1459-2010 writes it. */
 export interface PowerQuantity {

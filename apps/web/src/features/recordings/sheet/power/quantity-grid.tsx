@@ -78,6 +78,7 @@ export function QuantityGrid({ caption, columns, rows }: QuantityGridProps) {
               <Table.Cell
                 key={column}
                 verticalAlign="top"
+                py={{ base: '0.5', md: '1.5' }}
                 display={{ base: entries.length > 0 ? 'block' : 'none', md: 'table-cell' }}
                 borderBottomWidth={{ base: column === lastFilled(cells) ? '1px' : '0', md: '1px' }}
               >
@@ -106,6 +107,9 @@ function Entry({ quantity, value }: GridEntry) {
       <chakra.span fontFamily="mono" fontSize="13px" whiteSpace="nowrap">
         {showQuantity(value, quantity)}
       </chakra.span>
+      <Box hideFrom="md" ml="auto" textAlign="end" fontSize="xs" color="inkSoft" aria-hidden="true">
+        {quantity.name}
+      </Box>
     </Flex>
   );
 }

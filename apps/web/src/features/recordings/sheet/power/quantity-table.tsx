@@ -21,7 +21,6 @@ export function QuantityTable({ caption, fileName, entries }: QuantityTableProps
         value: ({ quantity }) => plainSymbol(quantity),
         show: ({ quantity }) => <QuantitySymbol quantity={quantity} />,
       },
-      { key: 'name', header: 'Quantity', fileHeader: 'Quantity', value: ({ quantity }) => quantity.name },
       {
         key: 'value',
         header: 'Value',
@@ -30,6 +29,7 @@ export function QuantityTable({ caption, fileName, entries }: QuantityTableProps
         value: ({ value }) => value,
         show: ({ value, quantity }) => showQuantity(value, quantity),
       },
+      { key: 'name', header: 'Quantity', fileHeader: 'Quantity', value: ({ quantity }) => quantity.name },
     ],
     [],
   );

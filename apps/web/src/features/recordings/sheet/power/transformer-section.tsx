@@ -21,7 +21,6 @@ const columns: TableColumn<Factor>[] = [
     value: ({ symbol, subscript }) => symbol + subscript,
     show: (row) => <QuantitySymbol quantity={{ ...row, unit: 'ratio' }} />,
   },
-  { key: 'name', header: 'Factor', fileHeader: 'Factor', value: (row) => row.name },
   {
     key: 'value',
     header: 'Value',
@@ -30,6 +29,7 @@ const columns: TableColumn<Factor>[] = [
     value: (row) => row.value,
     show: (row) => formatFixed(row.value, 3),
   },
+  { key: 'name', header: 'Factor', fileHeader: 'Factor', value: (row) => row.name },
   {
     key: 'basis',
     header: 'Of what',

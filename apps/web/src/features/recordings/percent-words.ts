@@ -1,4 +1,4 @@
-import { formatPercent, formatSi } from '../../../lib/format.js';
+import { formatPercent, formatSi } from '../../lib/format.js';
 
 /** One part in a million: 120 dB down, below what a recorder resolves. */
 const leastPercent = 1e-4;
