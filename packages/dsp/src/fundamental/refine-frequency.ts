@@ -17,7 +17,8 @@ export interface RefinedFrequency {
   solution: SinusoidSolution;
 }
 
-const MAX_STEPS = 8;
+/** Enough for a steady series; one that moves within the segment would not settle with more. */
+const MOST_STEPS = 5;
 /** Bounds of the measured slope of the correction against the frequency; −1 for a steady series over many cycles. */
 const STEEPEST = -20;
 const FLATTEST = -0.2;
@@ -31,19 +32,20 @@ const TOLERANCE_LINES = 1e-5;
  *
  * @param frequencyHz start value, within about half a line of the segment (divided by the dominant order) of f0
  * @param orders of the model, ascending, from 1; all below half the sample rate
- * @param toleranceLines ends with a step below this share of a spectrum line of the segment
+ * @param toleranceLines ends with a step below this share of a spectrum line of the segment, or after `mostSteps`
  */
 export function refineFrequency(
   segment: Segment,
   frequencyHz: number,
   orders: readonly number[],
   toleranceLines = TOLERANCE_LINES,
+  mostSteps = MOST_STEPS,
 ): RefinedFrequency {
   const withDc = [0, ...orders];
   const lineHz = segment.sampleRateHz / segment.length;
   let best = fitAt(segment, frequencyHz, withDc);
   let stepHz = best.correctionHz;
-  for (let i = 0; i < MAX_STEPS && Math.abs(stepHz) > toleranceLines * lineHz; i++) {
+  for (let i = 0; i < mostSteps && Math.abs(stepHz) > toleranceLines * lineHz; i++) {
     const next = fitAt(segment, best.frequencyHz + stepHz, withDc);
     const slope = (next.correctionHz - best.correctionHz) / stepHz;
     if (next.solution.explained >= best.solution.explained) {

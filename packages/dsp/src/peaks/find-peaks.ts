@@ -51,16 +51,29 @@ const TRIED = 8;
  * power at its centre of gravity.
  */
 export function findPeaks(search: PeakSearch): Peak[] {
-  const { power, floor, transform, smallestShare, most } = search;
+  const { power, floor, transform, enbwLines, smallestShare, most } = search;
+  const steadyWidth = Math.ceil(STEADY_WIDTH + STEADY_BANDWIDTHS * enbwLines);
   // What stands above the mean of the noise is the best guess at the power of the line itself.
   const excess = power.map((p, k) => Math.max(0, p - floor[k]!));
   const ranges = peakRanges(search, excess).sort((a, b) => b.top - a.top);
   const threshold = smallestShare * (ranges[0]?.top ?? 0);
   const dc: Peak = { line: 0, power: 2 * power[0]!, uncertainty: 0 };
   const found: Peak[] = [];
+  const broad: PeakRange[] = [];
   for (const range of ranges.slice(0, TRIED * most)) {
     if (range.top < threshold || found.length >= most) break;
-    if (!isSideLobe(range, [dc, ...found], transform)) found.push(describePeak(range, search, excess));
+    const taken = broad.some(({ from, to }) => range.at >= from && range.at <= to);
+    if (taken || isSideLobe(range, [dc, ...found], transform)) continue;
+    const core = widened(range, excess, VALLEY_SHARE);
+    if (core.to - core.from < steadyWidth) {
+      found.push(steadyPeak(range, search, excess));
+    } else {
+      const whole = widened(core, excess, FLANK_SHARE);
+      // A hump whose flank runs into that of a larger one is part of it.
+      if (broad.some(({ at }) => at >= whole.from && at <= whole.to)) continue;
+      found.push(broadPeak(whole, search, excess, core.to - core.from));
+      broad.push(whole);
+    }
   }
   return found.sort((a, b) => b.power - a.power);
 }
@@ -131,30 +144,29 @@ function envelope(transform: PeakSearch['transform'], lines: number): number {
   );
 }
 
-function describePeak(
-  range: PeakRange,
-  { floor, transform, enbwLines }: PeakSearch,
+function steadyPeak({ at, top }: PeakRange, { floor, transform }: PeakSearch, excess: Float64Array): Peak {
+  const uncertainty = Math.hypot(SMALLEST_UNCERTAINTY, noiseUncertainty(floor[at]!, top));
+  return { ...interpolatePeak(excess, at, transform), uncertainty };
+}
+
+function broadPeak(
+  { from, at, to, top }: PeakRange,
+  { floor, enbwLines }: PeakSearch,
   excess: Float64Array,
+  width: number,
 ): Peak {
-  const { at, top } = range;
-  const noise = NOISE_UNCERTAINTY * Math.sqrt(floor[at]! / top);
-  const core = widened(range, excess, VALLEY_SHARE);
-  const steadyWidth = Math.ceil(STEADY_WIDTH + STEADY_BANDWIDTHS * enbwLines);
-  if (core.to - core.from < steadyWidth) {
-    return {
-      ...interpolatePeak(excess, at, transform),
-      uncertainty: Math.hypot(SMALLEST_UNCERTAINTY, noise),
-    };
-  }
-  const { from, to } = widened(core, excess, FLANK_SHARE);
   let sum = 0;
   let moment = 0;
   for (let k = from; k <= to; k++) {
     sum += excess[k]!;
     moment += k * excess[k]!;
   }
-  const width = core.to - core.from;
-  return { line: moment / sum, power: sum / enbwLines, uncertainty: Math.hypot(width / 4, noise) };
+  const uncertainty = Math.hypot(width / 4, noiseUncertainty(floor[at]!, top));
+  return { line: moment / sum, power: sum / enbwLines, uncertainty };
+}
+
+function noiseUncertainty(noise: number, top: number): number {
+  return NOISE_UNCERTAINTY * Math.sqrt(noise / top);
 }
 
 /** The range extended on either side as long as the power stays above a share of the top. */

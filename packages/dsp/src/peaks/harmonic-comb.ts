@@ -32,8 +32,8 @@ const LARGEST_DIFFERENCE_DIVISOR = 4;
 const GATE = 3;
 /** A candidate starts this much less certain than its parent, which is met again among the peaks. */
 const LOOSENED = 2;
-/** Nats against a series without its order 1: one in fifty. */
-const MISSING_FUNDAMENTAL = Math.log(50);
+/** Nats against a series without its order 1: one in 500. */
+const MISSING_FUNDAMENTAL = Math.log(500);
 const EULER = 0.5772;
 const ROOT_TWO_PI = Math.sqrt(2 * Math.PI);
 

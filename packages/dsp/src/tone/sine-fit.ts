@@ -18,6 +18,7 @@ export interface SineFit {
 const FEWEST_SAMPLES = 4;
 /** A few samples take many steps, each shrinking the last by some factor only. */
 const TOLERANCE_LINES = 1e-10;
+const MOST_STEPS = 30;
 
 /**
  * Three-parameter (known frequency) least-squares sine fit of IEEE 1057-2017, 4.6.2: amplitude, phase and offset.
@@ -39,7 +40,7 @@ export function sineFit3(samples: Float64Array, sampleRateHz: number, frequencyH
 export function sineFit4(samples: Float64Array, sampleRateHz: number, startHz: number): SineFit {
   requireFrequency(samples, sampleRateHz, startHz);
   const whole = { samples, sampleRateHz, start: 0, length: samples.length };
-  const { solution, angles } = refineFrequency(whole, startHz, [1], TOLERANCE_LINES);
+  const { solution, angles } = refineFrequency(whole, startHz, [1], TOLERANCE_LINES, MOST_STEPS);
   return describeFit(samples, sampleRateHz, toFit(solution, angles, samples.length, sampleRateHz));
 }
 
