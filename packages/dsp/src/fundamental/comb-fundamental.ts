@@ -88,6 +88,17 @@ function singleLine(peaks: readonly PeakPlace[], index: number): Omit<HarmonicCo
   return { fundamentalHz: frequencyHz, uncertaintyHz, orders, evidence: 0 };
 }
 
+/** The largest even number up to `most` without prime factors above 5, a few per cent below it at the most. */
+function quickLength(most: number): number {
+  let best = Math.min(2, most);
+  for (let threes = 1; 2 * threes <= most; threes *= 3) {
+    for (let odd = threes; 2 * odd <= most; odd *= 5) {
+      best = Math.max(best, odd * 2 ** Math.floor(Math.log2(most / odd)));
+    }
+  }
+  return best;
+}
+
 interface Spectrum {
   lineHz: number;
   power: Float64Array;
@@ -96,7 +107,7 @@ interface Spectrum {
 }
 
 function hannSpectrum(samples: Float64Array, sampleRateHz: number): Spectrum {
-  const length = Math.min(samples.length, MAX_LENGTH);
+  const length = quickLength(Math.min(samples.length, MAX_LENGTH));
   const start = Math.floor((samples.length - length) / 2);
   const window = windowSamples('hann', length);
   const { coherentGain, enbwBins } = windowGains(window);

@@ -1,3 +1,4 @@
+import { convenientLength } from '../fft/radices.js';
 import { createRealFftPlan } from '../fft/real-fft-plan.js';
 import { windowSums } from '../windows/window-gains.js';
 import { windowSamples } from '../windows/window-samples.js';
@@ -23,14 +24,14 @@ export interface ResidualSpectrum {
 const MEDIAN_OF_NOISE = Math.LN2;
 const MOST_MEDIAN_LINES = 2 ** 16;
 
-/** Samples of the transform: as many as there are of a coherent record, otherwise the next power of two. */
+/** Samples of the transform: as many as there are of a coherent record, otherwise a quick length at or above. */
 export function residualLength(sampleCount: number, coherent: boolean): number {
-  return coherent ? sampleCount : 2 ** Math.ceil(Math.log2(sampleCount));
+  return coherent ? sampleCount : convenientLength(sampleCount);
 }
 
 /**
  * Spectrum of the residual of a tone. Of a coherent record it is the plain DFT of the whole record (IEEE 1241, 4.1.6),
- * so that every line stands for itself; otherwise Hann-windowed and zero-padded to a power of two, lines interpolated by
+ * so that every line stands for itself; otherwise Hann-windowed and zero-padded to a quick length, lines interpolated by
  * the transform of the window (Grandke 1983).
  *
  * @param padded the residual followed by zeros, `residualLength` numbers in all; it is windowed in place
