@@ -25,6 +25,9 @@ export type LineAnalysis = (
 /** Window lengths kept: those that a mains frequency takes within some minutes. About 60 MB. */
 const MOST_PLANS = 160;
 
+/** Differences beyond are rounding of the positions of the windows. */
+const LENGTH_DIGITS = 11;
+
 /** Plans used last, the oldest first; shared by all parts that a thread computes. */
 const plans = new Map<string, Lines>();
 
@@ -35,9 +38,11 @@ export function createLineAnalysis(
 ): LineAnalysis {
   return (samples, start, sampleCount, windowSamples) => {
     const count = Math.max(cycles * (orders + 1), linesForBands(bandCentresHz, sampleRateHz / windowSamples));
-    const key = `${sampleCount} ${windowSamples.toPrecision(10)} ${cycles} ${orders} ${count}`;
+    // Rounded, so that the figures do not depend on which of nearly equal windows a thread comes upon first.
+    const length = Number(windowSamples.toPrecision(LENGTH_DIGITS));
+    const key = `${sampleCount} ${length} ${cycles} ${orders} ${count}`;
     const lines =
-      plans.get(key) ?? prepareLines(createWindowLines(sampleCount, windowSamples, cycles, orders, count));
+      plans.get(key) ?? prepareLines(createWindowLines(sampleCount, length, cycles, orders, count));
     plans.delete(key);
     plans.set(key, lines);
     for (const [oldest] of plans) {
