@@ -15,7 +15,7 @@ export function createKernelSegmentPower(window: Float64Array, removeMean: boole
     return kernel && createBench(kernel, length);
   });
   if (bench === null) return null;
-  const task: SumTask = { window, removeMean, power: null };
+  const task: SumTask = { window, removeMean, power: null, pending: null };
   return {
     get sum() {
       return bench.foldedPower(task);
@@ -32,6 +32,8 @@ interface SumTask {
   removeMean: boolean;
   /** Σ|Z_k|² while another sum is in memory; null before the first segment. */
   power: Float64Array | null;
+  /** A segment that waits for its partner meanwhile. The pairs of a sum never depend on other sums. */
+  pending: Float64Array | null;
 }
 
 /** The memory in which segments of one length are transformed, with one sum at a time. */
@@ -68,12 +70,14 @@ function createBench(kernel: Kernel, length: number): SegmentBench {
   function turnTo(task: SumTask): void {
     if (current === task) return;
     if (current !== null) {
-      addHeld(current);
       current.power = power.slice();
+      current.pending = held === 1 ? slotViews[0]!.slice() : null;
     }
     kernel.floats(windowAt, length).set(task.window);
     if (task.power === null) power.fill(0);
     else power.set(task.power);
+    held = task.pending === null ? 0 : 1;
+    if (task.pending !== null) slotViews[0]!.set(task.pending);
     current = task;
   }
 
