@@ -5,11 +5,7 @@
  * @param periodSamples length of one period in samples, need not be an integer
  */
 export function formFactor(samples: Float64Array, periodSamples: number | null): number | null {
-  const periods = periodSamples === null ? 0 : Math.floor((samples.length + 0.5) / periodSamples);
-  const count =
-    periods > 0 && periodSamples !== null
-      ? Math.min(samples.length, Math.round(periods * periodSamples))
-      : samples.length;
+  const count = wholePeriodSamples(samples.length, periodSamples);
   let squares = 0;
   let absolute = 0;
   for (let i = 0; i < count; i++) {
@@ -17,4 +13,12 @@ export function formFactor(samples: Float64Array, periodSamples: number | null):
     absolute += Math.abs(samples[i]!);
   }
   return absolute > 0 ? Math.sqrt(squares / count) / (absolute / count) : null;
+}
+
+/** Samples of the whole periods that fit into a record; all samples when no period is known or none fits. */
+export function wholePeriodSamples(sampleCount: number, periodSamples: number | null): number {
+  const periods = periodSamples === null ? 0 : Math.floor((sampleCount + 0.5) / periodSamples);
+  return periods > 0 && periodSamples !== null
+    ? Math.min(sampleCount, Math.round(periods * periodSamples))
+    : sampleCount;
 }

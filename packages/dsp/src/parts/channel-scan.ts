@@ -1,3 +1,4 @@
+import { wholePeriodSamples } from '../figures/form-factor.js';
 import type { WaveformFigures } from '../figures/waveform-figures.js';
 import { createFlagScan, type ScanFindings } from '../flags/flag-scan.js';
 import type { PartContext } from './part-types.js';
@@ -26,7 +27,7 @@ export function* scanChannel(
 ): Reading<ChannelScan> {
   const waveform = createWaveformScan();
   const flags = createFlagScan(channel);
-  const periodic = wholePeriods(sampleCount, fundamentalHz && sampleRateHz / fundamentalHz);
+  const periodic = wholePeriodSamples(sampleCount, fundamentalHz && sampleRateHz / fundamentalHz);
   let formFactor: number | null = null;
   for (let from = 0; from < sampleCount; from += BLOCK_SAMPLES) {
     const to = Math.min(sampleCount, from + BLOCK_SAMPLES);
@@ -41,12 +42,4 @@ export function* scanChannel(
     flags.push(block, from);
   }
   return { figures: waveform.figures(), formFactor, findings: flags.finish() };
-}
-
-/** Samples of the whole periods that fit into a record; all samples when no period is known. */
-function wholePeriods(sampleCount: number, periodSamples: number | null): number {
-  const periods = periodSamples === null ? 0 : Math.floor((sampleCount + 0.5) / periodSamples);
-  return periods > 0 && periodSamples !== null
-    ? Math.min(sampleCount, Math.round(periods * periodSamples))
-    : sampleCount;
 }
