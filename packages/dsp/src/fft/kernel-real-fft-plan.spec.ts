@@ -42,6 +42,27 @@ describe('createRealFftPlan', () => {
   });
 });
 
+describe('createKernel', () => {
+  it('is not there where a content security policy refuses to compile', async () => {
+    const Module = function () {
+      throw new EvalError('refused by the content security policy');
+    };
+    vi.stubGlobal('WebAssembly', { validate: () => true, Module });
+    vi.resetModules();
+    const { createKernel } = await import('../wasm/kernel.js');
+    expect(createKernel()).toBeNull();
+    vi.unstubAllGlobals();
+  });
+
+  it('is not there without SIMD', async () => {
+    vi.stubGlobal('WebAssembly', { validate: () => false });
+    vi.resetModules();
+    const { createKernel } = await import('../wasm/kernel.js');
+    expect(createKernel()).toBeNull();
+    vi.unstubAllGlobals();
+  });
+});
+
 describe('createPlanCache', () => {
   it('gives a plan again, and forgets the one not used for the longest time', () => {
     const cache = createPlanCache<object>();

@@ -1,9 +1,12 @@
 import type { Kernel } from '../wasm/kernel.js';
-import { createKernelTransform, SHORTEST_KERNEL_LENGTH } from './kernel-transform.js';
+import { createKernelTransform, isKernelLength } from './kernel-transform.js';
 import type { RealFftPlan } from './real-fft-plan.js';
 import { createUnitTurns } from './unit-turns.js';
 
-export const SHORTEST_KERNEL_REAL_LENGTH = 2 * SHORTEST_KERNEL_LENGTH;
+/** Whether `createKernelRealFftPlan` takes a length. */
+export function isKernelRealLength(length: number): boolean {
+  return isKernelLength(length % 2 === 0 ? length / 2 : length);
+}
 
 /** The transform of `createRealFftPlan` as compiled code; the kernel belongs to the plan. */
 export function createKernelRealFftPlan(kernel: Kernel, length: number): RealFftPlan {

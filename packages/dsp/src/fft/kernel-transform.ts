@@ -14,9 +14,16 @@ export interface KernelTransform {
 const PASS_FIELDS = 5;
 
 /** Shortest length that the compiled passes take. */
-export const SHORTEST_KERNEL_LENGTH = 8;
+const SHORTEST_KERNEL_LENGTH = 8;
+/** A chirp transform of this length fills most of the 4 GiB that a kernel can have. */
+const LONGEST_KERNEL_LENGTH = 2 ** 23;
 
-/** Plan of the forward DFT, X_k = Σ x_n e^(−j2πkn/N), unscaled. @param length at least 8 */
+/** Whether `createKernelTransform` takes a length. */
+export function isKernelLength(length: number): boolean {
+  return length >= SHORTEST_KERNEL_LENGTH && length <= LONGEST_KERNEL_LENGTH;
+}
+
+/** Plan of the forward DFT, X_k = Σ x_n e^(−j2πkn/N), unscaled. @param length as `isKernelLength` has it */
 export function createKernelTransform(kernel: Kernel, length: number): KernelTransform {
   const source = kernel.allocate(2 * length + 2);
   const radices = radicesOf(length);

@@ -1,6 +1,6 @@
 import { createKernel } from '../wasm/kernel.js';
 import { createPlanCache } from './plan-cache.js';
-import { createKernelRealFftPlan, SHORTEST_KERNEL_REAL_LENGTH } from './kernel-real-fft-plan.js';
+import { createKernelRealFftPlan, isKernelRealLength } from './kernel-real-fft-plan.js';
 import { createPlainRealFftPlan } from './plain-real-fft-plan.js';
 
 /** A prepared DFT of a real sequence. The plan holds tables and scratch space; use one per thread. */
@@ -24,7 +24,7 @@ const plans = createPlanCache<RealFftPlan>();
 export function createRealFftPlan(length: number): RealFftPlan {
   if (!Number.isInteger(length) || length < 1)
     throw new RangeError(`FFT length must be a positive integer, got ${length}`);
-  if (length < SHORTEST_KERNEL_REAL_LENGTH) return createPlainRealFftPlan(length);
+  if (!isKernelRealLength(length)) return createPlainRealFftPlan(length);
   return plans.get(`${length}`, length, () => {
     const kernel = createKernel();
     return kernel === null ? createPlainRealFftPlan(length) : createKernelRealFftPlan(kernel, length);

@@ -9,11 +9,15 @@ import { ordersOf, type WindowLinePlan, type WindowShape } from './window-shape.
 /** Windows of lengths up to the next multiple share a bench, so that a drifting frequency costs tables only. */
 const LENGTH_STEP = 64;
 
+/** Longer ones would need more memory than a kernel can have. */
+const LONGEST_WINDOW = 2 ** 23;
+
 const benches = createPlanCache<WindowBench | null>();
 
-/** `createWindowLines` as compiled code; null where the platform has no WebAssembly SIMD. */
+/** `createWindowLines` as compiled code; null for very long windows and where the platform has no WebAssembly SIMD. */
 export function createKernelWindowLines(shape: WindowShape): WindowLinePlan | null {
   const { sampleCount, windowSamples, cycles, lineCount } = shape;
+  if (sampleCount > LONGEST_WINDOW) return null;
   const capacity = LENGTH_STEP * Math.ceil(sampleCount / LENGTH_STEP);
   const orderCount = ordersOf(shape);
   const bench = benches.get(`${capacity} ${lineCount} ${cycles} ${orderCount}`, capacity, () => {

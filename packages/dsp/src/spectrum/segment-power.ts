@@ -1,4 +1,4 @@
-import { SHORTEST_KERNEL_LENGTH } from '../fft/kernel-transform.js';
+import { isKernelLength } from '../fft/kernel-transform.js';
 import { createKernelSegmentPower } from './kernel-segment-power.js';
 import { createPlainSegmentPower } from './plain-segment-power.js';
 
@@ -16,7 +16,6 @@ export interface SegmentPower {
  * @param removeMean takes the mean of each segment away before it is windowed
  */
 export function createSegmentPower(window: Float64Array, removeMean: boolean): SegmentPower {
-  const compiled =
-    window.length < SHORTEST_KERNEL_LENGTH ? null : createKernelSegmentPower(window, removeMean);
+  const compiled = isKernelLength(window.length) ? createKernelSegmentPower(window, removeMean) : null;
   return compiled ?? createPlainSegmentPower(window, removeMean);
 }
