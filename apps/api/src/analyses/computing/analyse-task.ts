@@ -19,7 +19,7 @@ import {
 import { ComputeStopped, type ComputeContext } from '../../jobs/compute-task.js';
 import { findMissingValues } from './find-missing-values.js';
 import type { PartTaskInput } from './part-task.js';
-import { readingFlags } from './reading-flags.js';
+import { gapsWithin, readingFlags } from './reading-flags.js';
 import { spanInSamples, spanProblem, type SampleSpan } from './span.js';
 import { storeChannel, type StoredArrays } from './store-channel.js';
 
@@ -82,10 +82,11 @@ export async function analyseTask(
 }
 
 function analyse(
-  { settings, sampleRateHz, channels }: AnalyseTaskInput,
-  { first, end }: SampleSpan,
+  { settings, sampleRateHz, channels, warnings }: AnalyseTaskInput,
+  span: SampleSpan,
   { reportProgress, shouldStop, delegate, workers }: ComputeContext,
 ): Promise<RecordAnalysis> {
+  const { first, end } = span;
   const stored = new Map(
     channels.map(({ index, samplesKey, gain, offset }) => [index, { samplesKey, gain, offset, first }]),
   );
@@ -93,7 +94,14 @@ function analyse(
     const task: PartTaskInput = { part, samples: stored.get(part.channel.index)! };
     return (await delegate('analysis-part', task, onProgress)) as PartResult;
   };
-  const source = { sampleRateHz, sampleCount: end - first, channels: channels.map(described), settings };
+  const gapsBefore = gapsWithin(warnings, span);
+  const source = {
+    sampleRateHz,
+    sampleCount: end - first,
+    channels: channels.map(described),
+    settings,
+    gapsBefore,
+  };
   return analyseSource(source, { runPart, parallel: workers, onProgress: reportProgress, shouldStop });
 }
 

@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { readingFlags } from './reading-flags.js';
+import { gapsWithin, readingFlags } from './reading-flags.js';
 
 const gap = {
   ...{ code: 'gap', message: 'The time jumps', count: 3, firstLine: 12, samples: [100, 250, 700] },
@@ -36,4 +36,9 @@ it('keeps warnings of earlier readings, which named no places', () => {
 it('leaves out what does not touch the samples', () => {
   const warning = { code: 'columns-left-out', message: 'Columns were left out', count: 1 };
   expect(readingFlags([warning], { first: 0, end: 1000 }, 1000)).toEqual([]);
+});
+
+it('tells the engine the gaps within the span, counted from its first sample', () => {
+  const uneven = { code: 'uneven-sampling', message: 'The steps wander', samples: [300] };
+  expect(gapsWithin([gap, uneven], { first: 100, end: 700 })).toEqual([150]);
 });

@@ -37,3 +37,12 @@ export function readingFlags(
     return [{ code, severity, message, evidence }];
   });
 }
+
+/** Samples of a span, counted from its first, before which time is missing by what the reader noticed. */
+export function gapsWithin(warnings: readonly ReadWarning[], { first, end }: SampleSpan): number[] {
+  return warnings
+    .filter(({ code }) => code === 'gap')
+    .flatMap(({ samples = [] }) => samples)
+    .filter((sample) => first < sample && sample < end)
+    .map((sample) => sample - first);
+}
