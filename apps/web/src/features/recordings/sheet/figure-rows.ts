@@ -48,7 +48,7 @@ function frequency({ fundamental, uncertainty }: ChannelAnalysis, extent: string
   const row = { name: 'Fundamental frequency', unit: 'Hz', value: fundamental?.frequencyHz ?? null };
   const known = uncertainty['fundamental.frequencyHz'] ?? null;
   if (!fundamental || known === null || isBelowClock(known.expanded, fundamental.frequencyHz)) {
-    const clock = known === null ? '' : '; below the clock of the recorder, which is not known';
+    const clock = known === null ? '' : '; the recorder’s clock is not in it';
     return {
       ...row,
       shown: formatFixed(row.value, known === null ? 3 : 4, 'Hz'),
