@@ -39,7 +39,7 @@ describe.each(WINDOW_NAMES)('interpolatePeak with %s', (name) => {
 });
 
 describe('interpolatePeak', () => {
-  // Grandke 1983, equation 10: δ = (2α − 1)/(α + 1) with α = |X(k+1)|/|X(k)| for the Hann window.
+  // T. Grandke 1983: δ = (2α − 1)/(α + 1) with α = |X(k+1)|/|X(k)| for the Hann window.
   it.each([0.6, 0.75, 0.95])('is the closed form of Grandke for Hann at α = %d', (alpha) => {
     const power = Float64Array.from([0.01, 1, alpha ** 2]);
     const { line } = interpolatePeak(power, 1, windowTransform('hann'));

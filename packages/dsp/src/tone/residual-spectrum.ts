@@ -30,7 +30,7 @@ export function residualLength(sampleCount: number, coherent: boolean): number {
 }
 
 /**
- * Spectrum of the residual of a tone. Of a coherent record it is the plain DFT of the whole record (IEEE 1241, 4.1.6),
+ * Spectrum of the residual of a tone. Of a coherent record it is the plain DFT of the whole record (IEEE 1241),
  * so that every line stands for itself; otherwise Hann-windowed and zero-padded to a quick length, lines interpolated by
  * the transform of the window (Grandke 1983).
  *

@@ -21,7 +21,7 @@ const TOLERANCE_LINES = 1e-10;
 const MOST_STEPS = 30;
 
 /**
- * Three-parameter (known frequency) least-squares sine fit of IEEE 1057-2017, 4.6.2: amplitude, phase and offset.
+ * Three-parameter (known frequency) least-squares sine fit of IEEE 1057: amplitude, phase and offset.
  *
  * @throws RangeError for fewer than 4 samples or a frequency that is not between 0 and half the sample rate
  */
@@ -31,7 +31,7 @@ export function sineFit3(samples: Float64Array, sampleRateHz: number, frequencyH
 }
 
 /**
- * Four-parameter least-squares sine fit of IEEE 1057-2017, 4.6.3: as `sineFit3` with the frequency among the unknowns,
+ * Four-parameter least-squares sine fit of IEEE 1057: as `sineFit3` with the frequency among the unknowns,
  * by Gauss-Newton steps on it.
  *
  * @param startHz start value, right to about half a line (sample rate over number of samples)

@@ -10,7 +10,7 @@ const ROUNDING_PER_CYCLE = 2 * Math.PI * Number.EPSILON;
 const ROUNDING_OF_SAMPLES = 1e-28;
 
 /**
- * Single-tone quality figures of a stretch (IEEE 1241-2010 and IEEE 1057-2017, sine-wave tests; IEC 60268-3 for THD+N):
+ * Single-tone quality figures of a stretch (IEEE 1241 and IEEE 1057, sine-wave tests; IEC 60268-3 for THD+N):
  * SINAD = P1/NAD, NAD = everything but tone and DC; SNR = P1/(NAD − harmonics); THD_F = √(harmonics)/√P1;
  * THD+N = √NAD relative to the total AC rms (audio convention); SFDR = P1 over the largest other line;
  * ENOB = (SINAD − 1.76 dB)/6.02 dB, at full scale with SINAD raised by what the tone lacks to it. Harmonics above half

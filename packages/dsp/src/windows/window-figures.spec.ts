@@ -32,8 +32,8 @@ describe('windowFigures against the survey of Harris', () => {
 });
 
 describe('windowFigures of later windows', () => {
-  // Side lobes: A. H. Nuttall, IEEE Trans. ASSP-29(1), 1981, −98.17 dB for the minimum four-term window; the flat-top as
-  // listed by G. Heinzel, A. Rüdiger, R. Schilling 2002 (five-term flat-top of the common libraries, −93.0 dB).
+  // A. H. Nuttall, IEEE Trans. ASSP-29(1), 1981: −98.17 dB for the minimum four-term window. Flat-top: common practice, the
+  // five-term form of the numerical libraries (scipy 1.10.1, signal.windows.flattop: side lobe −93.03 dB by numpy 1.24.2).
   it.each<[WindowName, number, number, number, number]>([
     ['nuttall', 0.3636, 1.9761, 0.851, -98.17],
     ['flat-top', 0.2156, 3.7702, 0.0098, -93.0],

@@ -3,7 +3,7 @@ import { COSINE_TERMS, DEFAULT_KAISER_BETA, type WindowName } from './window-ter
 /**
  * The spectrum of a window as a function of the distance from its peak in bins, relative to the peak, for windows of
  * many samples: Σ ½ a_k [sinc(δ − k) + sinc(δ + k)] for cosine sums, sinh√(β² − π²δ²)/√(β² − π²δ²) for Kaiser
- * (F. J. Harris, Proc. IEEE 66(1), 1978, equations 24 and 46). Right to about 1/N of the peak for N samples.
+ * (F. J. Harris, Proc. IEEE 66(1), 1978). Right to about 1/N of the peak for N samples.
  */
 export function windowTransform(name: WindowName, beta = DEFAULT_KAISER_BETA): (bins: number) => number {
   if (name === 'kaiser') {
