@@ -1,7 +1,7 @@
 import type { Browser, BrowserContext, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { expectAccessible, keepPicture, launchBrowser, signedInPage } from './support/browser.js';
-import { limitedToneWav, squareWaveCsv, type KnownCapture } from './support/job.js';
+import { clippedSineCsv, clippedSpan, limitedToneWav, squareWaveCsv } from './support/job.js';
 import { personOf, startProduct, type Product } from './support/product.js';
 
 let product: Product;
@@ -17,7 +17,7 @@ afterAll(async () => {
 });
 
 /** Uploads a capture on the page of recordings and waits until its row is ready. */
-async function upload(page: Page, capture: KnownCapture): Promise<void> {
+async function upload(page: Page, capture: { path: string; name: string }): Promise<void> {
   await page.getByLabel('Capture files').setInputFiles(capture.path);
   await page.getByText(/received as/).waitFor();
   await page
@@ -85,6 +85,44 @@ describe('a technician', () => {
     // Closed form: sqrt(sum of 1/h², h = 3, 5 … 39).
     expect(Math.abs((await shownThd(page)) - capture.thdFPercent)).toBeLessThanOrEqual(capture.tolerance);
     await keepPicture(page, 'sheet');
+    await expectAccessible(page);
+  });
+
+  it('is led by a flag to the place in the waveform where the crests are cut off', async () => {
+    const capture = clippedSineCsv();
+    await openProject(page, /Ostrel/);
+    await upload(page, capture);
+    await page.getByRole('link', { name: capture.name, exact: true }).click();
+    await page.getByText('Waveform clipped').waitFor();
+    await page
+      .getByRole('button', { name: /in the waveform$/ })
+      .first()
+      .click();
+    const inView = page.getByRole('slider', { name: 'Part of the record in view' });
+    const fromS = Number(await inView.getAttribute('aria-valuenow'));
+    // Four cycles of 50 Hz around the place, which is the first cut crest or one of its neighbours.
+    expect(Math.abs(fromS + 0.04 - clippedSpan.fromS)).toBeLessThan(0.02);
+    await expectAccessible(page);
+  });
+
+  it('follows an order over time, and reads the power of three phases', async () => {
+    await openProject(page, /Ostrel/);
+    await page.getByRole('link', { name: /three-phase/ }).click();
+    const spectrum = page.getByRole('region', { name: /by order$/ }).first();
+    await spectrum.getByText('Table', { exact: true }).click();
+    await spectrum.getByRole('button', { name: '5', exact: true }).click();
+    await spectrum.getByRole('button', { name: 'Over time' }).click();
+    const overTime = page.getByRole('region', { name: /order 5, group over time$/ });
+    await overTime.getByText('Table', { exact: true }).click();
+    // One second holds four whole windows of ten cycles of 49.97 Hz.
+    await overTime.getByText('4 rows').waitFor();
+    await expectAccessible(page);
+    await page.getByText('Power', { exact: true }).click();
+    await page.getByRole('heading', { name: /^Power of three phases/ }).waitFor();
+    await page.getByText('u1 with i1', { exact: true }).click();
+    await page.getByRole('table', { name: /grouped as in IEEE 1459$/ }).waitFor();
+    await page.getByRole('region', { name: /^Active power by order/ }).waitFor();
+    await keepPicture(page, 'power');
     await expectAccessible(page);
   });
 

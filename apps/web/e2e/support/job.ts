@@ -38,3 +38,21 @@ export function phaseCutCsv(): KnownCapture {
   const { thdFPercent, tolerance } = expectation;
   return { path: demoCapturePath(fileName), name: basename(fileName, '.csv'), thdFPercent, tolerance };
 }
+
+/** Where the waveform of `clippedSineCsv` stays flat, in seconds. */
+export const clippedSpan = { fromS: 0.4, toS: 0.6 };
+
+/** A sine of 50 Hz whose crests are cut off at 80 % of the peak for ten cycles, as CSV. */
+export function clippedSineCsv(): { path: string; name: string } {
+  const sampleRateHz = 10_000;
+  const rows = Array.from({ length: sampleRateHz }, (_, i) => {
+    const timeS = i / sampleRateHz;
+    const value = 325 * Math.sin(2 * Math.PI * 50 * timeS);
+    const isCut = timeS >= clippedSpan.fromS && timeS < clippedSpan.toS;
+    const shown = isCut ? Math.max(-260, Math.min(260, value)) : value;
+    return `${timeS.toFixed(4)},${shown.toFixed(2)}`;
+  });
+  const path = join(mkdtempSync(join(tmpdir(), 'overtally-captures-')), 'clipped-sine.csv');
+  writeFileSync(path, ['Time [s],U [V]', ...rows, ''].join('\n'));
+  return { path, name: 'clipped-sine' };
+}

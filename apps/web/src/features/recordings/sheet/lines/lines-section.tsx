@@ -3,7 +3,8 @@ import type { ChannelAnalysis, HarmonicFamily, Recording } from '@overtally/cont
 import { useMemo } from 'react';
 import { FoldingFigure } from '../../../../components/folding-figure.js';
 import { TableTwin } from '../../../../components/table-twin.js';
-import { formatHz, formatPercent } from '../../../../lib/format.js';
+import { formatHz } from '../../../../lib/format.js';
+import { percentWords } from '../../percent-words.js';
 import { FamilyGlyph } from '../family-legend.js';
 import type { NoteTarget } from '../note-target.js';
 import { lineColumns } from './line-columns.js';
@@ -48,10 +49,15 @@ function Family({ family, index }: { family: HarmonicFamily; index: number }) {
     <Text fontSize="13px">
       <FamilyGlyph index={index} />
       Proposed series of {formatHz(fundamentalHz, 3)}: {orders.length === 1 ? 'order' : 'orders'}{' '}
-      {orderRuns(orders)}, {formatPercent(100 * shareOfPower, shareOfPower > 0.99 ? 3 : 2)} of the power of
-      these lines
+      {orderRuns(orders)}, {shareWords(shareOfPower)} of the power of these lines
     </Text>
   );
+}
+
+/** "99.4 %"; a share that would read as all of it is not told in digits. */
+function shareWords(share: number): string {
+  if (share >= 0.9999) return 'almost all';
+  return percentWords(100 * share, share > 0.99 ? 2 : 1);
 }
 
 function seriesWords(lines: number, families: number, alone: number): string {
