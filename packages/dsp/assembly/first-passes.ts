@@ -4,13 +4,13 @@
  * of the last two blocks, which overlap the pair before.
  */
 
-/** Real parts of two complex numbers that follow each other in memory. */
-function realParts(address: usize): v128 {
-  return v128.shuffle<f64>(v128.load(address), v128.load(address, 16), 0, 2);
+/** Real parts of two complex numbers re, im. */
+function realParts(first: v128, second: v128): v128 {
+  return v128.shuffle<f64>(first, second, 0, 2);
 }
 
-function imaginaryParts(address: usize): v128 {
-  return v128.shuffle<f64>(v128.load(address), v128.load(address, 16), 1, 3);
+function imaginaryParts(first: v128, second: v128): v128 {
+  return v128.shuffle<f64>(first, second, 1, 3);
 }
 
 function turnedRe(re: v128, im: v128, twiddle: usize): v128 {
@@ -26,10 +26,14 @@ export function firstPass2(source: usize, to: usize, blocks: i32, twiddles: usiz
   for (let p = 0; p < blocks; p += 2) {
     if (p === blocks - 1) p--;
     const a = source + (p << 4);
-    const aRe = realParts(a);
-    const aIm = imaginaryParts(a);
-    const bRe = realParts(a + leg);
-    const bIm = imaginaryParts(a + leg);
+    const a0 = v128.load(a);
+    const a1 = v128.load(a, 16);
+    const aRe = realParts(a0, a1);
+    const aIm = imaginaryParts(a0, a1);
+    const b0 = v128.load(a + leg);
+    const b1 = v128.load(a + leg, 16);
+    const bRe = realParts(b0, b1);
+    const bIm = imaginaryParts(b0, b1);
     const y0Re = f64x2.add(aRe, bRe);
     const y0Im = f64x2.add(aIm, bIm);
     const difRe = f64x2.sub(aRe, bRe);
@@ -53,14 +57,30 @@ export function firstPass4(source: usize, to: usize, blocks: i32, twiddles: usiz
     const b = a + leg;
     const c = b + leg;
     const d = c + leg;
-    const acRe = f64x2.add(realParts(a), realParts(c));
-    const acIm = f64x2.add(imaginaryParts(a), imaginaryParts(c));
-    const bdRe = f64x2.add(realParts(b), realParts(d));
-    const bdIm = f64x2.add(imaginaryParts(b), imaginaryParts(d));
-    const cDifRe = f64x2.sub(realParts(a), realParts(c));
-    const cDifIm = f64x2.sub(imaginaryParts(a), imaginaryParts(c));
-    const dDifRe = f64x2.sub(realParts(b), realParts(d));
-    const dDifIm = f64x2.sub(imaginaryParts(b), imaginaryParts(d));
+    const a0 = v128.load(a);
+    const a1 = v128.load(a, 16);
+    const aRe = realParts(a0, a1);
+    const aIm = imaginaryParts(a0, a1);
+    const c0 = v128.load(c);
+    const c1 = v128.load(c, 16);
+    const cRe = realParts(c0, c1);
+    const cIm = imaginaryParts(c0, c1);
+    const acRe = f64x2.add(aRe, cRe);
+    const acIm = f64x2.add(aIm, cIm);
+    const cDifRe = f64x2.sub(aRe, cRe);
+    const cDifIm = f64x2.sub(aIm, cIm);
+    const b0 = v128.load(b);
+    const b1 = v128.load(b, 16);
+    const bRe = realParts(b0, b1);
+    const bIm = imaginaryParts(b0, b1);
+    const d0 = v128.load(d);
+    const d1 = v128.load(d, 16);
+    const dRe = realParts(d0, d1);
+    const dIm = imaginaryParts(d0, d1);
+    const bdRe = f64x2.add(bRe, dRe);
+    const bdIm = f64x2.add(bIm, dIm);
+    const dDifRe = f64x2.sub(bRe, dRe);
+    const dDifIm = f64x2.sub(bIm, dIm);
     const sum1Re = f64x2.add(cDifRe, dDifIm);
     const sum1Im = f64x2.sub(cDifIm, dDifRe);
     const sum2Re = f64x2.sub(acRe, bdRe);

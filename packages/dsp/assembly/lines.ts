@@ -78,7 +78,7 @@ export function mirror(re: usize, im: usize, count: i32, step: i32): void {
  * spectrum: cosine + j·(−sine).
  *
  * @param starts byte offsets of the first neighbour from `re` and `im`, 32-bit
- * @param weights `taps` (an even number) for each line
+ * @param weights `taps` (a multiple of 4) for each line
  * @param factors re, im for each line
  */
 export function gatherLines(
@@ -97,14 +97,19 @@ export function gatherLines(
     let fromIm = im + load<i32>(starts);
     let sumRe = f64x2.splat(0);
     let sumIm = sumRe;
-    for (const end = weights + (taps << 3); weights < end; weights += 16) {
+    let sumRe2 = sumRe;
+    let sumIm2 = sumRe;
+    for (const end = weights + (taps << 3); weights < end; weights += 32) {
       const w = v128.load(weights);
+      const w2 = v128.load(weights, 16);
       sumRe = f64x2.add(sumRe, f64x2.mul(w, v128.load(fromRe)));
       sumIm = f64x2.add(sumIm, f64x2.mul(w, v128.load(fromIm)));
-      fromRe += 16;
-      fromIm += 16;
+      sumRe2 = f64x2.add(sumRe2, f64x2.mul(w2, v128.load(fromRe, 16)));
+      sumIm2 = f64x2.add(sumIm2, f64x2.mul(w2, v128.load(fromIm, 16)));
+      fromRe += 32;
+      fromIm += 32;
     }
-    const sums = sumsOf(sumRe, sumIm);
+    const sums = sumsOf(f64x2.add(sumRe, sumRe2), f64x2.add(sumIm, sumIm2));
     const lineRe = f64x2.extract_lane(sums, 0);
     const lineIm = f64x2.extract_lane(sums, 1);
     const factorRe = load<f64>(factors);

@@ -9,8 +9,8 @@ export interface DecimationFilter {
   taps: Float64Array;
 }
 
-/** Length of the filter in samples that are kept. */
-const WIDTH = 14;
+/** a in the damping 2a e^(−a) of what folds onto the highest line: 1.2e-13. */
+const DAMPING = 34;
 /** Least ratio of the rate of the kept samples to twice the highest frequency. */
 const LEAST_RATIO = 2;
 
@@ -18,15 +18,17 @@ const LEAST_RATIO = 2;
 const LARGEST_FACTOR = 32;
 
 /**
- * The filter for lines up to `highest` (cycles per sample): what folds onto them is damped to 1e-13 of what passes. Its
+ * The filter for lines up to `highest` (cycles per sample): what folds onto them is damped to 2e-13. Its
  * taps are a Kaiser-Bessel bell (J. F. Kaiser, R. W. Schafer, IEEE Trans. ASSP-28(1), 1980) rather than a windowed sinc:
  * the lines are divided by its response, so that it need not be flat.
  */
 export function decimationFilter(highest: number): DecimationFilter {
   const factor = Math.min(LARGEST_FACTOR, Math.max(1, Math.floor(1 / (2 * LEAST_RATIO * highest))));
   if (factor === 1) return { factor, reach: 0, taps: Float64Array.of(1) };
-  const beta = Math.PI * WIDTH * (1 - factor * highest);
-  const reach = (WIDTH * factor) / 2;
+  // Length in samples that are kept, w: a = πw√(1 − 1/σ) with σ = 1/(2·factor·highest).
+  const width = DAMPING / (Math.PI * Math.sqrt(1 - 2 * factor * highest));
+  const reach = Math.ceil((width * factor) / 2);
+  const beta = ((2 * Math.PI * reach) / factor) * (1 - factor * highest);
   const scale = besselI0(beta);
   const taps = Float64Array.from(
     { length: reach + 1 },
