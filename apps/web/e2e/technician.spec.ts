@@ -1,7 +1,7 @@
 import type { Browser, BrowserContext, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { expectAccessible, keepPicture, launchBrowser, signedInPage } from './support/browser.js';
-import { clippedSineCsv, clippedSpan, limitedToneWav, squareWaveCsv } from './support/job.js';
+import { jumpAtS, jumpingSineCsv, limitedToneWav, squareWaveCsv } from './support/job.js';
 import { personOf, startProduct, type Product } from './support/product.js';
 
 let product: Product;
@@ -88,20 +88,17 @@ describe('a technician', () => {
     await expectAccessible(page);
   });
 
-  it('is led by a flag to the place in the waveform where the crests are cut off', async () => {
-    const capture = clippedSineCsv();
+  it('is led by a flag to the place in the waveform where samples are missing', async () => {
+    const capture = jumpingSineCsv();
     await openProject(page, /Ostrel/);
     await upload(page, capture);
     await page.getByRole('link', { name: capture.name, exact: true }).click();
-    await page.getByText('Waveform clipped').waitFor();
-    await page
-      .getByRole('button', { name: /in the waveform$/ })
-      .first()
-      .click();
+    await page.getByText('Jump in the record').waitFor();
+    await page.getByRole('button', { name: /^Show 0\.50\d.s in the waveform$/ }).click();
     const inView = page.getByRole('slider', { name: 'Part of the record in view' });
     const fromS = Number(await inView.getAttribute('aria-valuenow'));
-    // Four cycles of 50 Hz around the place, which is the first cut crest or one of its neighbours.
-    expect(Math.abs(fromS + 0.04 - clippedSpan.fromS)).toBeLessThan(0.02);
+    // Four cycles of 50 Hz around the jump.
+    expect(Math.abs(fromS + 0.04 - jumpAtS)).toBeLessThan(0.002);
     await expectAccessible(page);
   });
 

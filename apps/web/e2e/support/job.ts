@@ -39,20 +39,18 @@ export function phaseCutCsv(): KnownCapture {
   return { path: demoCapturePath(fileName), name: basename(fileName, '.csv'), thdFPercent, tolerance };
 }
 
-/** Where the waveform of `clippedSineCsv` stays flat, in seconds. */
-export const clippedSpan = { fromS: 0.4, toS: 0.6 };
+/** Where the waveform of `jumpingSineCsv` jumps, in seconds. */
+export const jumpAtS = 0.5;
 
-/** A sine of 50 Hz whose crests are cut off at 80 % of the peak for ten cycles, as CSV. */
-export function clippedSineCsv(): { path: string; name: string } {
+/** A sine of 50 Hz that goes on at another phase after half a second, as CSV. */
+export function jumpingSineCsv(): { path: string; name: string } {
   const sampleRateHz = 10_000;
   const rows = Array.from({ length: sampleRateHz }, (_, i) => {
     const timeS = i / sampleRateHz;
-    const value = 325 * Math.sin(2 * Math.PI * 50 * timeS);
-    const isCut = timeS >= clippedSpan.fromS && timeS < clippedSpan.toS;
-    const shown = isCut ? Math.max(-260, Math.min(260, value)) : value;
-    return `${timeS.toFixed(4)},${shown.toFixed(2)}`;
+    const value = 325 * Math.sin(2 * Math.PI * 50 * timeS + (timeS < jumpAtS ? 0 : 1.2));
+    return `${timeS.toFixed(4)},${value.toFixed(2)}`;
   });
-  const path = join(mkdtempSync(join(tmpdir(), 'overtally-captures-')), 'clipped-sine.csv');
+  const path = join(mkdtempSync(join(tmpdir(), 'overtally-captures-')), 'jumping-sine.csv');
   writeFileSync(path, ['Time [s],U [V]', ...rows, ''].join('\n'));
-  return { path, name: 'clipped-sine' };
+  return { path, name: 'jumping-sine' };
 }
