@@ -18,24 +18,49 @@ export function ensureData(folder, python) {
     runPython(python, ['make', folder]);
     return;
   }
-  writeNpy(join(folder, 'mains30m.npy'), 30_000_000, rectifier);
-  writeNpy(join(folder, 'tone1m.npy'), 1_000_000, tone);
+  writeNpy(join(folder, 'mains30m.npy'), 30_000_000, rectifier(), 5e-3);
+  writeNpy(join(folder, 'tone1m.npy'), 1_000_000, tone(), 1e-5);
 }
 
-/** @param {number} n sample at 50 kHz */
-function rectifier(n) {
-  let x = 5e-3 * noise();
-  for (let order = 1; order < 50; order += 2) {
-    const phase = ((2 * Math.PI * order * 49.97) / 50_000) * n + 0.7 * order;
-    x += ((5 * Math.exp(-order / 12)) / order ** 0.3) * Math.cos(phase);
+/**
+ * @typedef {object} Component
+ * @property {number} amplitude
+ * @property {number} angle radians per sample
+ * @property {number} phase radians
+ */
+
+/** @returns {Component[]} odd orders of 49.97 Hz at 50 kHz */
+function rectifier() {
+  return Array.from({ length: 25 }, (_, i) => 2 * i + 1).map((order) => ({
+    amplitude: (5 * Math.exp(-order / 12)) / order ** 0.3,
+    angle: (2 * Math.PI * order * 49.97) / 50_000,
+    phase: 0.7 * order,
+  }));
+}
+
+/** @returns {Component[]} 997.13 Hz at 192 kHz with a third harmonic */
+function tone() {
+  const angle = (2 * Math.PI * 997.13) / 192_000;
+  return [
+    { amplitude: 1, angle, phase: 0 },
+    { amplitude: 1e-4, angle: 3 * angle, phase: 0 },
+  ];
+}
+
+/**
+ * Adds a component to a block by turning a phasor from sample to sample.
+ * @param {Float64Array} block
+ * @param {number} from position of the block in its record
+ * @param {Component} component
+ */
+function addComponent(block, from, { amplitude, angle, phase }) {
+  const [cosine, sine] = [Math.cos(angle), Math.sin(angle)];
+  let re = amplitude * Math.cos(angle * from + phase);
+  let im = amplitude * Math.sin(angle * from + phase);
+  for (let i = 0; i < block.length; i++) {
+    block[i] += re;
+    [re, im] = [re * cosine - im * sine, re * sine + im * cosine];
   }
-  return x;
-}
-
-/** @param {number} n sample at 192 kHz */
-function tone(n) {
-  const phase = ((2 * Math.PI * 997.13) / 192_000) * n;
-  return Math.cos(phase) + 1e-4 * Math.cos(3 * phase) + 1e-5 * noise();
 }
 
 let state = 20_261_201;
@@ -53,15 +78,17 @@ function noise() {
 /**
  * @param {string} path
  * @param {number} count
- * @param {(n: number) => number} sample
+ * @param {Component[]} components
+ * @param {number} noiseRms
  */
-function writeNpy(path, count, sample) {
+function writeNpy(path, count, components, noiseRms) {
   const file = openSync(path, 'w');
   const dictionary = `{'descr': '<f8', 'fortran_order': False, 'shape': (${count},), }`.padEnd(117) + '\n';
   writeSync(file, Uint8Array.of(0x93, ...'NUMPY'.split('').map((c) => c.charCodeAt(0)), 1, 0, 118, 0));
   writeSync(file, dictionary);
   for (let from = 0; from < count; from += BLOCK) {
-    const block = Float64Array.from({ length: Math.min(BLOCK, count - from) }, (_, i) => sample(from + i));
+    const block = Float64Array.from({ length: Math.min(BLOCK, count - from) }, () => noiseRms * noise());
+    for (const component of components) addComponent(block, from, component);
     writeSync(file, block);
   }
   closeSync(file);
