@@ -16,6 +16,8 @@ const SMALLEST_SHARE = 1e-5;
 const MOST_FAMILIES = 6;
 /** A series with less of the power than this is not what the record is about: hum beside a tone, say. */
 const LEAST_SHARE = 0.02;
+/** A line with more of the power than this is what the record is about. */
+const DOMINANT_SHARE = 0.9;
 /** Nats that a factor e of the share of power is worth beside the evidence of the places. */
 const SHARE_WEIGHT = 3;
 /** A line at a known place exceeds the noise there this many times with probability e^−9. */
@@ -48,30 +50,39 @@ export function combFundamental(
   const spectrum = hannSpectrum(samples, sampleRateHz);
   const peaks = peakPlaces(spectrum);
   const combRange = { ...range, bandHz: sampleRateHz / 2 };
+  const standsOut = (comb: HarmonicComb) => comb.orders.includes(1) || exceedsFloor(spectrum, comb);
   const best = hinted
     ? mostWorth(harmonicCombs(peaks, combRange).filter(({ share }) => share > 0))
-    : mainSeries(peaks, combRange);
+    : mainSeries(peaks, combRange, standsOut);
   return (
     best && {
       frequencyHz: best.fundamentalHz,
       uncertaintyHz: best.uncertaintyHz,
-      typicalOrder: typicalOrder(best.orders, peaks),
-      standsOut: best.orders.includes(1) || exceedsFloor(spectrum, best),
+      typicalOrder: best.typicalOrder,
+      standsOut: standsOut(best),
     }
   );
 }
 
-/** The series or single line that the record is most about. */
-function mainSeries(peaks: readonly PeakPlace[], range: CombRange): HarmonicComb | null {
+/**
+ * The series or single line that the record is most about. Where that series has no line at its own fundamental, but one
+ * line holds nearly all of the power, it is that line: the lines that rounding gives a small tone lie on many combs.
+ */
+function mainSeries(
+  peaks: readonly PeakPlace[],
+  range: CombRange,
+  standsOut: (comb: HarmonicComb) => boolean,
+): HarmonicComb | null {
   const families = harmonicFamilies(peaks, range, { leastEvidence: 0, most: MOST_FAMILIES });
-  const total = peaks.reduce((sum, peak) => sum + peak.power, 0);
   const singles = peaks
-    .map((peak, i) => ({ ...singleLine(peaks, i), share: peak.power / total }))
-    .filter(({ fundamentalHz }, i) => {
-      const inRange = fundamentalHz >= range.lowHz && fundamentalHz <= range.highHz;
-      return inRange && families.every(({ orders }) => orders[i] === 0);
-    });
-  return mostWorth([...families, ...singles].filter(({ share }) => share >= LEAST_SHARE));
+    .map((_, i) => singleLine(peaks, i))
+    .filter(({ fundamentalHz }) => fundamentalHz >= range.lowHz && fundamentalHz <= range.highHz);
+  const alone = singles.filter(({ orders }) =>
+    families.every((family) => family.orders[orders.indexOf(1)] === 0),
+  );
+  const main = mostWorth([...families, ...alone].filter(({ share }) => share >= LEAST_SHARE));
+  if (main === null || standsOut(main)) return main;
+  return singles.find(({ share }) => share > DOMINANT_SHARE) ?? main;
 }
 
 function mostWorth(combs: readonly HarmonicComb[]): HarmonicComb | null {
@@ -82,10 +93,11 @@ function mostWorth(combs: readonly HarmonicComb[]): HarmonicComb | null {
   );
 }
 
-function singleLine(peaks: readonly PeakPlace[], index: number): Omit<HarmonicComb, 'share'> {
-  const { frequencyHz, uncertaintyHz } = peaks[index]!;
+function singleLine(peaks: readonly PeakPlace[], index: number): HarmonicComb {
+  const { frequencyHz, uncertaintyHz, power } = peaks[index]!;
   const orders = peaks.map((_, i) => (i === index ? 1 : 0));
-  return { fundamentalHz: frequencyHz, uncertaintyHz, orders, evidence: 0 };
+  const share = power / peaks.reduce((sum, peak) => sum + peak.power, 0);
+  return { fundamentalHz: frequencyHz, uncertaintyHz, orders, evidence: 0, share, typicalOrder: 1 };
 }
 
 /** The largest even number up to `most` without prime factors above 5, a few per cent below it at the most. */
@@ -137,15 +149,4 @@ function peakPlaces({ lineHz, ...spectrum }: Spectrum): PeakPlace[] {
 function exceedsFloor({ lineHz, power, floor }: Spectrum, { fundamentalHz }: HarmonicComb): boolean {
   const k = Math.floor(fundamentalHz / lineHz);
   return Math.max(power[k] ?? 0, power[k + 1] ?? 0) > KNOWN_PLACE * (floor[k] ?? Infinity);
-}
-
-function typicalOrder(orders: readonly number[], peaks: readonly PeakPlace[]): number {
-  let weighted = 0;
-  let total = 0;
-  orders.forEach((order, i) => {
-    if (order === 0) return;
-    weighted += order * order * peaks[i]!.power;
-    total += peaks[i]!.power;
-  });
-  return Math.sqrt(weighted / total);
 }

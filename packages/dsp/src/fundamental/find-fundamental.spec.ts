@@ -191,6 +191,15 @@ describe('findFundamental', () => {
     });
   });
 
+  // Rounded to a few steps, a coherent tone gets lines on very many combs.
+  it.each([1021, 1877, 3061, 3989])('finds a tone of %i cycles in 8192 samples of three steps', (cycles) => {
+    const samples = Float64Array.from({ length: 8192 }, (_, n) =>
+      Math.round(1.3 * Math.cos((2 * Math.PI * ((cycles * n) % 8192)) / 8192 + 0.4)),
+    );
+    const estimate = findFundamental(samples, 8192, { nominalFrequencyHz: 'auto' });
+    expect(estimate?.frequencyHz).toBeCloseTo(cycles, 1);
+  });
+
   // Cramér-Rao bound: the error is within 4 standard deviations in all but 1 of 16 000 cases.
   it('states the uncertainty that it has', () => {
     const errors = Array.from({ length: 60 }, (_, i) => {

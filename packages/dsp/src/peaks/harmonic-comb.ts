@@ -15,6 +15,8 @@ export interface HarmonicComb {
   evidence: number;
   /** Share of the power of all peaks. */
   share: number;
+  /** Root mean square of the orders, weighted by power. */
+  typicalOrder: number;
 }
 
 export interface CombRange {
@@ -28,6 +30,8 @@ export interface CombRange {
 const PARENTS = 12;
 const LARGEST_DIVISOR = 32;
 const LARGEST_DIFFERENCE_DIVISOR = 4;
+/** Peaks at higher orders belong to a series by chance only. */
+const LARGEST_ORDER = 100;
 /** A peak this many standard deviations off a multiple does not belong to it. */
 const GATE = 3;
 /** A candidate starts this much less certain than its parent, which is met again among the peaks. */
@@ -88,7 +92,7 @@ function fitComb(peaks: readonly PeakPlace[], ascending: readonly number[], star
     const order = Math.round(peak.frequencyHz / frequencyHz);
     const miss = peak.frequencyHz - order * frequencyHz;
     const spread = peak.uncertaintyHz ** 2 + order * order * variance;
-    if (order < 1 || miss * miss > GATE * GATE * spread) continue;
+    if (!isOrder(order) || miss * miss > GATE * GATE * spread) continue;
     frequencyHz += (order * variance * miss) / spread;
     variance *= peak.uncertaintyHz ** 2 / spread;
   }
@@ -105,6 +109,7 @@ function judgeComb(
   let gain = 0;
   let matched = 0;
   let onComb = 0;
+  let squaredOrders = 0;
   let total = 0;
   for (const peak of peaks) {
     const order = Math.round(peak.frequencyHz / frequencyHz);
@@ -112,7 +117,7 @@ function judgeComb(
     const spread = Math.hypot(peak.uncertaintyHz, order * uncertaintyHz);
     const saved =
       Math.log(bandHz / (ROOT_TWO_PI * spread)) - (miss / spread) ** 2 / 2 - Math.log(order) - orderCost;
-    const near = order >= 1 && Math.abs(miss) <= GATE * spread;
+    const near = isOrder(order) && Math.abs(miss) <= GATE * spread;
     const belongs = near && saved > 0 && !orders.includes(order);
     orders.push(belongs ? order : 0);
     total += peak.power;
@@ -120,6 +125,7 @@ function judgeComb(
     gain += saved;
     matched++;
     onComb += peak.power;
+    squaredOrders += order * order * peak.power;
   }
   const ownCost = Math.log(bandHz / (ROOT_TWO_PI * uncertaintyHz));
   const missingCost = orders.includes(1) ? 0 : MISSING_FUNDAMENTAL;
@@ -129,8 +135,13 @@ function judgeComb(
     uncertaintyHz,
     orders,
     evidence,
-    share: total > 0 ? onComb / total : 0,
+    share: onComb / total,
+    typicalOrder: onComb > 0 ? Math.sqrt(squaredOrders / onComb) : 0,
   };
+}
+
+function isOrder(order: number): boolean {
+  return order >= 1 && order <= LARGEST_ORDER;
 }
 
 /** n H(k/n): what it takes to say which k of n peaks belong to the comb. */

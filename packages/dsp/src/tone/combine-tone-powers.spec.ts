@@ -10,6 +10,7 @@ const STRETCH: TonePowers = {
   tone: 4,
   harmonics: [{ frequencyHz: 200, power: 0.1 }, null],
   noiseAndDistortion: 0.3,
+  noise: 0.2,
   bandNoiseAndDistortion: 0.2,
   noiseDensitySquared: 1e-4,
   spurs: [
@@ -23,13 +24,22 @@ describe('combineTonePowers', () => {
   it('weighs stretches by their samples', () => {
     const combined = combineTonePowers([
       STRETCH,
-      { ...STRETCH, sampleCount: 3000, frequencyHz: 104, dc: 0.1, tone: 8, noiseAndDistortion: 0.7 },
+      {
+        ...STRETCH,
+        sampleCount: 3000,
+        frequencyHz: 104,
+        dc: 0.1,
+        tone: 8,
+        noiseAndDistortion: 0.7,
+        noise: 0.6,
+      },
     ]);
     expect(combined.sampleCount).toBe(4000);
     expect(combined.frequencyHz).toBeCloseTo(103, 12);
     expect(combined.dc).toBeCloseTo(0.2, 12);
     expect(combined.tone).toBeCloseTo(7, 12);
     expect(combined.noiseAndDistortion).toBeCloseTo(0.6, 12);
+    expect(combined.noise).toBeCloseTo(0.5, 12);
     expect(combined.bandNoiseAndDistortion).toBeCloseTo(0.2, 12);
   });
 

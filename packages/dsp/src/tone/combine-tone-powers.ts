@@ -26,6 +26,7 @@ export function combineTonePowers(stretches: readonly TonePowers[]): TonePowers 
     tone: mean((s) => s.tone),
     harmonics: first.harmonics.map((_, i) => meanHarmonic(stretches, i)),
     noiseAndDistortion: mean((s) => s.noiseAndDistortion),
+    noise: mean((s) => s.noise),
     bandNoiseAndDistortion: withBand ? mean((s) => s.bandNoiseAndDistortion!) : null,
     noiseDensitySquared: mean((s) => s.noiseDensitySquared),
     spurs: meanSpurs(stretches, mean),

@@ -60,6 +60,13 @@ describe('toneFigures', () => {
     expect(tone.spurFrequencyHz).toBeCloseTo(2 * recipe.frequencyHz, 1);
   });
 
+  // Noise 70 dB below the harmonics: it must not drown in the rounding of their difference.
+  it('keeps the noise beside strong harmonics', () => {
+    const recipe = { frequencyHz: 5000.7, length: 65_536, harmonics: { 2: -30, 3: -34 }, noiseDbc: -100 };
+    const { snrDb } = toneFigures(record(recipe), RATE, 5000.7);
+    expect(Math.abs(snrDb! - 100)).toBeLessThan(0.1);
+  });
+
   // THD_R = THD_F/√(1 + THD_F²); orders 1, 0.1, 0.05, 0.02 give 11.3578 % and 11.2853 %.
   it('relates the two kinds of THD', () => {
     const harmonics = { 2: -20, 3: 20 * Math.log10(0.05), 4: 20 * Math.log10(0.02) };

@@ -61,7 +61,7 @@ function figuresOf(powers: TonePowers, options: ToneOptions): ToneResult {
     thdPlusNBandPercent: toneInBand ? bandPercent(tone, powers.bandNoiseAndDistortion) : null,
     bandHz: band,
     sinadDb,
-    snrDb: overTone(powers, nad - distortion),
+    snrDb: overTone(powers, powers.noise),
     sfdrDb: spur && overTone(powers, spur.power),
     spurFrequencyHz: spur && spur.frequencyHz,
     enobBits: bits(sinadDb),

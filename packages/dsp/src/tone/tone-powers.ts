@@ -35,6 +35,8 @@ export function tonePowers(
     (_, harmonic) => subtractSinusoid(rest, sampleRateHz, harmonic, 0, rest),
     noiseAndDistortion,
   );
+  // Harmonics within the noise were left in; their power, all but noise itself, is not made up for.
+  const drowned = harmonics.reduce((sum, h) => (clear.includes(h) ? sum : sum + h.rms ** 2), 0);
   const spectrum = residualSpectrum(padded, count, sampleRateHz, coherent);
 
   return {
@@ -48,6 +50,7 @@ export function tonePowers(
       return line ? { frequencyHz: line.frequencyHz, power: line.rms ** 2 } : null;
     }),
     noiseAndDistortion,
+    noise: Math.max(0, restPower - drowned),
     bandNoiseAndDistortion: band
       ? spectrum.share(band) * restPower +
         clear.filter((h) => inBand(h.frequencyHz, band)).reduce((sum, h) => sum + h.rms ** 2, 0)

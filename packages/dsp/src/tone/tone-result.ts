@@ -32,6 +32,8 @@ export interface TonePowers {
   harmonics: (Spur | null)[];
   /** Everything but tone and DC. */
   noiseAndDistortion: number;
+  /** The same without the harmonics. */
+  noise: number;
   /** The same within the band that was asked for; null without one. */
   bandNoiseAndDistortion: number | null;
   /** Square of the median noise density, unit²/Hz. */

@@ -300,6 +300,7 @@ describe('uncertainty of single-tone figures', () => {
       ...{ sampleCount: count, sampleRateHz: RATE, frequencyHz: HZ, dc: 0, tone: 1 },
       harmonics: [null, { frequencyHz: 150, power: 0.04 }],
       noiseAndDistortion: 0.29,
+      noise: 0.25,
       bandNoiseAndDistortion: null,
       noiseDensitySquared: 0,
       spurs: [{ frequencyHz: 800, power: 1e-3 }],
@@ -328,6 +329,7 @@ describe('uncertainty of single-tone figures', () => {
       toneUncertainty({
         ...powers,
         noiseAndDistortion: 0,
+        noise: 0,
         bandNoiseAndDistortion: null,
         noiseDensitySquared: 0,
       }),

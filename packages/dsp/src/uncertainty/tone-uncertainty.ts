@@ -18,9 +18,8 @@ const SIGNIFICANCE = 25;
  * 25 times above the mean noise line: the largest line of noise follows no such law.
  */
 export function toneUncertainty(powers: TonePowers): Record<string, Uncertainty> {
-  const { tone, noiseAndDistortion, sampleCount, harmonics, spurs } = powers;
+  const { tone, noiseAndDistortion, noise, sampleCount, harmonics, spurs } = powers;
   const distortion = harmonics.reduce((sum, line) => sum + (line?.power ?? 0), 0);
-  const noise = noiseAndDistortion - distortion;
   if (!(noise > 0 && tone > 0)) return {};
   const ofTone = (4 * noise) / (sampleCount * tone);
   const ofAll = (2 * noise ** 2 + 4 * distortion * noise) / (sampleCount * noiseAndDistortion ** 2);
