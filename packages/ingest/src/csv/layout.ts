@@ -5,6 +5,7 @@ import { cellKind } from './cell.js';
 import { type Dialect, refuseCommaClash, sniffDialect } from './dialect.js';
 import { splitCells } from './lines.js';
 import { readMetadata, statedSampleRateHz } from './metadata.js';
+import { findSecondClocks } from './second-clock.js';
 import { chooseTimeColumn, type TimeChoice } from './time-column.js';
 import { refuseNoTable } from './no-table.js';
 
@@ -20,6 +21,8 @@ export interface CsvLayout {
   /** Columns in which the first rows hold numbers, the time column and clocks left out. */
   valueColumns: number[];
   leftOut: LayoutColumn[];
+  /** Clocks beside the time column, which are no channels either. */
+  clocks: LayoutColumn[];
   time: TimeChoice | null;
   metadata: Record<string, string>;
   statedSampleRateHz: number | null;
@@ -86,13 +89,19 @@ export function detectLayout(lines: string[], fileName: string, options: ImportO
   const doubts: string[] = [];
   if (dialect.ambiguous)
     doubts.push('The table can be read with more than one delimiter; check the columns.');
-  const time = chooseTimeColumn({ columns, headerCells, body, dialect, options, doubts });
+  const input = { columns, headerCells, body, dialect, options, doubts };
+  const time = chooseTimeColumn(input);
+  const clocks =
+    time.column === null
+      ? []
+      : findSecondClocks(input, time.column, time.unit === null).filter((index) => !time.ignored.has(index));
   const holdsNumbers = (index: number) =>
     body.some((cells) =>
       ['number', 'grouped', 'other-mark'].includes(cellKind(cells[index] ?? '', dialect.decimal)),
     );
   const candidates = columns.filter(
-    (column) => column.index !== time.column && !time.ignored.has(column.index),
+    (column) =>
+      column.index !== time.column && !time.ignored.has(column.index) && !clocks.includes(column.index),
   );
   const metadata = readMetadata(lines.slice(0, header ?? dialect.bodyLine), dialect.delimiter);
   return {
@@ -102,6 +111,7 @@ export function detectLayout(lines: string[], fileName: string, options: ImportO
     columns,
     valueColumns: candidates.filter(({ index }) => holdsNumbers(index)).map(({ index }) => index),
     leftOut: candidates.filter(({ index }) => !holdsNumbers(index)),
+    clocks: columns.filter(({ index }) => clocks.includes(index)),
     time:
       time.column === null
         ? null

@@ -1,7 +1,7 @@
 import { ByteSource } from '../byte-source.js';
 import { isUsableRate } from '../channels.js';
 import { refuse } from '../refusal.js';
-import type { ImportOptions, ReadSuccess, ReadWarning, SampleSink } from '../types.js';
+import type { ImportOptions, LayoutColumn, ReadSuccess, ReadWarning, SampleSink } from '../types.js';
 import { decodeText, guessEncoding, utf16ToUtf8 } from './encoding.js';
 import type { CsvLayout } from './layout.js';
 import { describeLayout, planCsv, refuseNoSampleRate, requireSampleRate } from './plan.js';
@@ -121,9 +121,21 @@ export async function readCsv(input: ByteSource, args: CsvArguments): Promise<Re
   };
 }
 
+function namesOf(columns: LayoutColumn[]): string {
+  return columns.map(({ name }) => `"${name}"`).join(', ');
+}
+
 function leftOutWarnings(layout: CsvLayout, options: ImportOptions): ReadWarning[] {
-  if (options.channels !== undefined || layout.leftOut.length === 0) return [];
-  const names = layout.leftOut.map(({ name }) => `"${name}"`).join(', ');
-  const message = `Columns without numbers in their first rows were left out: ${names}.`;
-  return [{ code: 'columns-left-out', message, count: layout.leftOut.length }];
+  if (options.channels !== undefined && options.channels.length > 0) return [];
+  const { leftOut, clocks } = layout;
+  const found: ReadWarning[] = [];
+  if (leftOut.length > 0) {
+    const message = `Columns without numbers in their first rows were left out: ${namesOf(leftOut)}.`;
+    found.push({ code: 'columns-left-out', message, count: leftOut.length });
+  }
+  if (clocks.length > 0) {
+    const message = `${namesOf(clocks)} rises in step with the time column, so it was taken as a second clock and left out; choose it as a channel to have it read.`;
+    found.push({ code: 'second-clock', message, count: clocks.length });
+  }
+  return found;
 }

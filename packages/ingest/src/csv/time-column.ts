@@ -35,6 +35,11 @@ export interface TimeColumnInput {
   doubts: string[];
 }
 
+/** True for a name that says time, in the words that instruments use. */
+export function isTimeName(name: string): boolean {
+  return TIME_NAME.test(name) && !INDEX_NAME.test(name);
+}
+
 function numbersOf(input: TimeColumnInput, index: number): number[] {
   const { decimal } = input.dialect;
   const cells = input.body.map((row) => row[index] ?? '');
@@ -67,7 +72,7 @@ function findByHeader(input: TimeColumnInput): number | null {
   const usable = (column: LayoutColumn) =>
     hasStamps(input, column.index) || numbersOf(input, column.index).length > 0;
   const candidates = input.columns.filter((column) => mayBeTime(column) && usable(column));
-  const named = candidates.find((column) => TIME_NAME.test(column.name) && !INDEX_NAME.test(column.name));
+  const named = candidates.find((column) => isTimeName(column.name));
   const stamped = candidates.find((column) => hasStamps(input, column.index));
   const byUnit = candidates.find((column) => column.index === 0 && secondsPerUnit(column.unit) !== null);
   return (named ?? stamped ?? byUnit)?.index ?? null;
