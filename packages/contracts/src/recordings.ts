@@ -41,7 +41,7 @@ export const importOptionsSchema = z.strictObject({
   channels: z
     .array(
       z.strictObject({
-        column: columnSchema.describe('Index from 0 or header name; for WAV the channel'),
+        column: columnSchema.describe('Index from 0 or header name; for files without columns the channel'),
         name: z.string().trim().min(1).max(80).optional(),
         quantity: quantitySchema.optional(),
         unit: z.string().trim().max(20).optional(),
@@ -175,7 +175,7 @@ export type RecordingQuery = z.infer<typeof recordingQuerySchema>;
 
 /** Preview of a file's beginning under given options. */
 export const importPreviewSchema = z.object({
-  format: z.enum(['csv', 'wav']).nullable(),
+  format: z.enum(['csv', 'wav', 'npy', 'comtrade']).nullable(),
   lines: z.array(z.string()).describe('The first lines as they stand'),
   columns: z.array(
     z.object({ index: z.number().int(), name: z.string(), unit: z.string(), quantity: quantitySchema }),

@@ -1,15 +1,9 @@
 import { refuse } from './refusal.js';
-import type { ChannelOptions, ImportOptions, LayoutColumn, ReadChannel } from './types.js';
+import type { ChannelOptions, CodeRange, ImportOptions, LayoutColumn, ReadChannel } from './types.js';
 import { unitMeaning } from './units.js';
 
 /** Most channels of one recording; each is a file of its own while it is read. */
 const MAX_CHANNELS = 512;
-
-/** Raw ends of an integer sample format. */
-export interface CodeRange {
-  lowest: number;
-  highest: number;
-}
 
 /**
  * Finds a column by 0-based index or by name (as written in the header or without its unit, ignoring case).
@@ -46,12 +40,12 @@ function makeChannel(
   const written = wanted?.unit ?? column.unit;
   const meaning = unitMeaning(written);
   const factor = meaning?.factor ?? 1;
-  const gain = (wanted?.gain ?? 1) * factor;
-  const offset = (wanted?.offset ?? 0) * factor;
+  const gain = (wanted?.gain ?? column.gain ?? 1) * factor;
+  const offset = (wanted?.offset ?? column.offset ?? 0) * factor;
   if (!Number.isFinite(gain) || gain === 0 || !Number.isFinite(offset)) {
     refuse(
       'bad-scaling',
-      `The gain ${wanted?.gain} and offset ${wanted?.offset} of channel "${column.name}" are not usable numbers.`,
+      `The gain ${wanted?.gain ?? column.gain} and offset ${wanted?.offset ?? column.offset} of channel "${column.name}" are not usable numbers.`,
       'Give a gain other than zero and a finite offset.',
     );
   }
@@ -71,14 +65,15 @@ function makeChannel(
 
 /**
  * Channels to read: those the options select, or every column of `byDefault`. The prefix of a unit goes into the
- * gain, so that gain x raw + offset is in the base unit.
+ * gain, so that gain x raw + offset is in the base unit. A gain or offset of the options stands in place of the file's own.
+ * @param rangeOf raw ends of a column that holds integer codes
  */
 export function selectChannels(
   options: ImportOptions,
   columns: LayoutColumn[],
   headerCells: string[],
   byDefault: number[],
-  range: CodeRange | null,
+  rangeOf: (column: number) => CodeRange | null = () => null,
 ): ReadChannel[] {
   if (options.channels === undefined || options.channels.length === 0) {
     if (byDefault.length > MAX_CHANNELS) {
@@ -89,12 +84,12 @@ export function selectChannels(
       );
     }
     return byDefault.map((column, index) =>
-      makeChannel(index, columns[column] as LayoutColumn, undefined, range),
+      makeChannel(index, columns[column] as LayoutColumn, undefined, rangeOf(column)),
     );
   }
   return options.channels.map((wanted, index) => {
     const column = findColumn(wanted.column, columns, headerCells, 'channel');
-    return makeChannel(index, columns[column] as LayoutColumn, wanted, range);
+    return makeChannel(index, columns[column] as LayoutColumn, wanted, rangeOf(column));
   });
 }
 

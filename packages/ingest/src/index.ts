@@ -17,6 +17,7 @@ export type {
   ReadOutcome,
   ReadSuccess,
   ReadWarning,
+  RecordFormat,
   SampleSink,
   TimeUnit,
 } from './types.js';

@@ -5,19 +5,14 @@ import { splitCells, splitLines } from './csv/lines.js';
 import { type CsvPlan, describeLayout, planCsv, requireSampleRate } from './csv/plan.js';
 import { makeStampReader } from './csv/stamp-reader.js';
 import { refuseKnownBinary } from './known-binary.js';
-import { catchRefusal, refuse } from './refusal.js';
+import { isNpy } from './npy/header.js';
+import { previewNpy } from './npy/preview-npy.js';
+import { PREVIEW_LINES, PREVIEW_ROWS, refuseTooShort, withProblem } from './preview-problem.js';
+import { catchRefusal } from './refusal.js';
 import type { ImportOptions, PreviewArguments, PreviewOutcome, Problem } from './types.js';
 import { isWav, readWavHeader } from './wav/header.js';
 import { describeWav, wavChannels } from './wav/layout.js';
 import { decoderOf } from './wav/samples.js';
-
-const PREVIEW_LINES = 30;
-const PREVIEW_ROWS = 20;
-
-function withProblem(format: 'csv' | 'wav', lines: string[], problem: Problem): PreviewOutcome {
-  const layout = { format, confident: false, doubts: [problem.message] };
-  return { layout, lines, rows: [], sampleRateHz: null, problem, needs: [] };
-}
 
 function cellValue(cell: string, plan: CsvPlan): string | number | null {
   const { decimal } = plan.layout.dialect;
@@ -82,11 +77,7 @@ function previewWav(head: Uint8Array, complete: boolean, args: PreviewArguments)
     () => {
       const header = readWavHeader(head, complete);
       if (typeof header === 'number') {
-        refuse(
-          'preview-too-short',
-          'The beginning of the WAV file does not reach to its samples.',
-          'Upload the file: it is read as a whole.',
-        );
+        refuseTooShort('the WAV file');
       }
       const { format, dataOffset, dataBytes } = header;
       wavChannels(header, args.options ?? {});
@@ -123,5 +114,7 @@ export function previewRecording(head: Uint8Array, args: PreviewArguments): Prev
     });
   }
   const complete = args.sizeBytes !== undefined && args.sizeBytes <= head.length;
-  return isWav(head) ? previewWav(head, complete, args) : previewCsv(head, complete, args);
+  if (isWav(head)) return previewWav(head, complete, args);
+  if (isNpy(head)) return previewNpy(head, complete, args);
+  return previewCsv(head, complete, args);
 }

@@ -1,6 +1,8 @@
 import { ByteSource } from './byte-source.js';
 import { readCsv } from './csv/read-csv.js';
 import { refuseKnownBinary } from './known-binary.js';
+import { isNpy } from './npy/header.js';
+import { readNpy } from './npy/read-npy.js';
 import { refuse, Refusal } from './refusal.js';
 import type { ReadArguments, ReadOutcome, ReadSuccess } from './types.js';
 import { isWav } from './wav/header.js';
@@ -17,6 +19,7 @@ async function read(source: ByteSource, args: ReadArguments): Promise<ReadSucces
     );
   }
   if (isWav(head)) return readWav(source, { fileName, sink, options });
+  if (isNpy(head)) return readNpy(source, { sink, options });
   refuseKnownBinary(head, fileName);
   return readCsv(source, { fileName, sink, options });
 }

@@ -9,6 +9,7 @@ export type Quantity =
   | 'dimensionless'
   | 'other';
 
+export type RecordFormat = 'csv' | 'wav' | 'npy' | 'comtrade';
 export type Delimiter = ',' | ';' | '\t' | ' ' | '|';
 export type DecimalMark = '.' | ',';
 export type TimeUnit = 's' | 'ms' | 'us' | 'ns';
@@ -39,7 +40,7 @@ export interface ImportOptions {
 /** A channel of the file. Engineering value = raw value x `gain` + `offset`, in `unit`. */
 export interface ReadChannel {
   index: number;
-  /** 0-based source column, or 0-based channel of a WAV file. */
+  /** 0-based source column, or 0-based channel of a file without columns. */
   column: number;
   name: string;
   quantity: Quantity;
@@ -56,7 +57,7 @@ export interface ReadChannel {
 export interface SampleSink {
   begin(channels: ReadChannel[]): void | Promise<void>;
   /**
-   * Raw values as they stand in the file (integer WAV: code / 2^(bits-1)), before gain and offset; NaN where a
+   * Raw values as they stand in the file (integer WAV: code / 2^(bits-1); .npy and COMTRADE: the stored number), before gain and offset; NaN where a
    * value is missing. The buffer is used again once the returned promise resolves.
    */
   write(channelIndex: number, samples: Float64Array): void | Promise<void>;
@@ -91,11 +92,20 @@ export interface LayoutColumn {
   name: string;
   unit: string;
   quantity: Quantity;
+  /** Scaling that the file states, in `unit`; absent where it states none. */
+  gain?: number;
+  offset?: number;
+}
+
+/** Raw ends of an integer sample format. */
+export interface CodeRange {
+  lowest: number;
+  highest: number;
 }
 
 /** How the reader understood the file. */
 export interface DetectedLayout {
-  format: 'csv' | 'wav';
+  format: RecordFormat;
   encoding?: string;
   delimiter?: string;
   decimal?: string;
@@ -116,7 +126,7 @@ export interface DetectedLayout {
 /** A recording that was read to its end. */
 export interface ReadSuccess {
   ok: true;
-  format: 'csv' | 'wav';
+  format: RecordFormat;
   sampleRateHz: number;
   /** Samples per channel, missing ones included. */
   sampleCount: number;
@@ -150,7 +160,7 @@ export interface PreviewArguments {
 /** What the beginning of a file tells about it. */
 export interface PreviewOutcome {
   layout: DetectedLayout;
-  /** The first lines as they stand in the file; the first has number 1. Empty for WAV. */
+  /** The first lines as they stand in the file; the first has number 1. Empty for binary formats. */
   lines: string[];
   /** The first data rows, cell by cell: number, text, or null where the cell is blank. */
   rows: (string | number | null)[][];

@@ -38,7 +38,7 @@ export function planCsv(
   const lines = splitLines(withoutControls(text));
   if (!complete && lines.length > 1) lines.pop();
   const layout = detectLayout(lines, fileName, options);
-  const channels = selectChannels(options, layout.columns, layout.headerCells, layout.valueColumns, null);
+  const channels = selectChannels(options, layout.columns, layout.headerCells, layout.valueColumns);
   if (channels.length === 0) {
     refuse(
       'no-channels',

@@ -34,6 +34,6 @@ export function wavChannels(header: WavHeader, options: ImportOptions): ReadChan
     columns,
     [],
     columns.map(({ index }) => index),
-    codeRange(header.format),
+    () => codeRange(header.format),
   );
 }

@@ -1,4 +1,5 @@
 import type { ByteSource } from '../byte-source.js';
+import { keepFinite, requireFrames } from '../frames.js';
 import { refuse } from '../refusal.js';
 import type { ImportOptions, ReadChannel, ReadSuccess, SampleSink } from '../types.js';
 import { fourCc, readWavHeader, type WavHeader } from './header.js';
@@ -35,17 +36,6 @@ async function readHeader(source: ByteSource): Promise<WavHeader> {
   }
 }
 
-/** Replaces what is no finite number by NaN; returns how many there were. */
-function countMissing(samples: Float64Array): number {
-  let missing = 0;
-  for (let i = 0; i < samples.length; i += 1) {
-    if (Number.isFinite(samples[i])) continue;
-    samples[i] = NaN;
-    missing += 1;
-  }
-  return missing;
-}
-
 async function readSamples(
   source: ByteSource,
   header: WavHeader,
@@ -66,7 +56,7 @@ async function readSamples(
       const samples = out.subarray(0, frames);
       decode(bytes, channel.column * format.bytesPerSample, stride, frames, samples);
       if (format.encoding === 'float')
-        counts.missing[index] = (counts.missing[index] as number) + countMissing(samples);
+        counts.missing[index] = (counts.missing[index] as number) + keepFinite(samples);
       if (frames > 0) await sink.write(index, samples);
     }
     const used = frames === 0 ? bytes.length : frames * stride;
@@ -101,14 +91,7 @@ async function requireSamples(source: ByteSource, header: WavHeader): Promise<vo
   const stride = header.format.bytesPerSample * header.format.channelCount;
   const wanted = Math.min(2 * stride, header.dataBytes ?? Infinity);
   const frames = Math.floor((await source.peek(wanted)).length / stride);
-  if (frames >= 2) return;
-  refuse(
-    frames === 0 ? 'no-samples' : 'too-few-samples',
-    frames === 0
-      ? 'The data chunk of the WAV file is empty: there are no samples in it.'
-      : 'The WAV file holds one sample per channel only; at least two are needed.',
-    'Check that the recording was stopped properly, then copy the file again.',
-  );
+  requireFrames(frames, 'The data chunk of the WAV file');
 }
 
 /** Reads a WAV file. Refusals travel as `Refusal`; see `readRecording` for the rules. */

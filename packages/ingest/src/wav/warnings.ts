@@ -1,3 +1,4 @@
+import { missingWarning } from '../frames.js';
 import type { ReadWarning } from '../types.js';
 import type { WavHeader } from './header.js';
 
@@ -38,16 +39,6 @@ export function collectWarnings(header: WavHeader, counts: Counts): ReadWarning[
       message: 'The header does not state how many samples there are; the file was read to its end.',
     });
   }
-  const total = missing.reduce((sum, n) => sum + n, 0);
-  if (total > 0) {
-    found.push({
-      code: 'missing-values',
-      message:
-        total === 1
-          ? '1 sample is not a finite number; it is kept as missing, not as zero.'
-          : `${total} samples are not finite numbers; they are kept as missing, not as zero.`,
-      count: total,
-    });
-  }
+  found.push(...missingWarning(missing));
   return found;
 }
