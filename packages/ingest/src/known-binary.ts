@@ -11,9 +11,13 @@ const KNOWN: { magic: string; what: string; cure: string }[] = [
     what: 'a spreadsheet of an old binary format',
     cure: 'Save the sheet as CSV.',
   },
-  { magic: '%PDF', what: 'a PDF document', cure: 'Upload the record itself: a CSV or WAV file.' },
-  { magic: '\u0089PNG', what: 'a picture', cure: 'Upload the record itself: a CSV or WAV file.' },
-  { magic: '\u00ff\u00d8\u00ff', what: 'a picture', cure: 'Upload the record itself: a CSV or WAV file.' },
+  { magic: '%PDF', what: 'a PDF document', cure: 'Upload the record itself, such as a CSV or WAV file.' },
+  { magic: '\u0089PNG', what: 'a picture', cure: 'Upload the record itself, such as a CSV or WAV file.' },
+  {
+    magic: '\u00ff\u00d8\u00ff',
+    what: 'a picture',
+    cure: 'Upload the record itself, such as a CSV or WAV file.',
+  },
   { magic: 'fLaC', what: 'FLAC compressed audio', cure: 'Decode it to WAV; nothing is lost by that.' },
   {
     magic: 'OggS',

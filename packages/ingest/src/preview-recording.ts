@@ -1,4 +1,7 @@
 import { isUsableRate } from './channels.js';
+import { refuseHalfRecord } from './comtrade/alone.js';
+import { isCff } from './comtrade/cff.js';
+import { previewComtrade } from './comtrade/preview-comtrade.js';
 import { bareCell, cellKind, cellNumber } from './csv/cell.js';
 import { decodeText, guessEncoding } from './csv/encoding.js';
 import { splitCells, splitLines } from './csv/lines.js';
@@ -42,6 +45,7 @@ function previewCsv(head: Uint8Array, complete: boolean, args: PreviewArguments)
   return catchRefusal(
     () => {
       refuseKnownBinary(head, args.fileName);
+      refuseHalfRecord(head.subarray(0, 4096), args.fileName, options);
       const plan = planCsv(text, encoding, complete, { fileName: args.fileName, options });
       const { bodyLine, delimiter } = plan.layout.dialect;
       const body = splitLines(text).slice(bodyLine, complete ? undefined : -1);
@@ -116,5 +120,6 @@ export function previewRecording(head: Uint8Array, args: PreviewArguments): Prev
   const complete = args.sizeBytes !== undefined && args.sizeBytes <= head.length;
   if (isWav(head)) return previewWav(head, complete, args);
   if (isNpy(head)) return previewNpy(head, complete, args);
+  if (isCff(head)) return previewComtrade(head, complete, args);
   return previewCsv(head, complete, args);
 }

@@ -1,4 +1,7 @@
 import { ByteSource } from './byte-source.js';
+import { refuseHalfRecord } from './comtrade/alone.js';
+import { isCff } from './comtrade/cff.js';
+import { readComtrade } from './comtrade/read-comtrade.js';
 import { readCsv } from './csv/read-csv.js';
 import { refuseKnownBinary } from './known-binary.js';
 import { isNpy } from './npy/header.js';
@@ -8,9 +11,12 @@ import type { ReadArguments, ReadOutcome, ReadSuccess } from './types.js';
 import { isWav } from './wav/header.js';
 import { readWav } from './wav/read-wav.js';
 
+/** Bytes that tell one format from another. */
+const HEAD_BYTES = 4096;
+
 async function read(source: ByteSource, args: ReadArguments): Promise<ReadSuccess> {
   const { fileName, sink, options = {} } = args;
-  const head = await source.peek(16);
+  const head = await source.peek(HEAD_BYTES);
   if (head.length === 0) {
     refuse(
       'empty-file',
@@ -20,14 +26,17 @@ async function read(source: ByteSource, args: ReadArguments): Promise<ReadSucces
   }
   if (isWav(head)) return readWav(source, { fileName, sink, options });
   if (isNpy(head)) return readNpy(source, { sink, options });
+  if (isCff(head)) return readComtrade(source, { sink, options });
   refuseKnownBinary(head, fileName);
+  refuseHalfRecord(head, fileName, options);
   return readCsv(source, { fileName, sink, options });
 }
 
 /**
  * Reads a recording from its bytes and hands the samples to `sink` block by block, in flat memory.
  *
- * The content decides the format: RIFF or RF64 is read as WAV, text as a table of numbers. Bad input gives
+ * The content decides the format: RIFF or RF64 is read as WAV, the magic string of .npy as an
+ * array, sections of file types as a COMTRADE record, other text as a table of numbers. Bad input gives
  * `{ ok: false, problem }`; whatever the sink received until then is to be thrown away. Rejects only with the abort
  * reason of `signal`, with what the source or the sink throw, or on a programming error.
  *

@@ -16,6 +16,10 @@ const SEEDS = [
   'npy-f8-little.npy',
   'npy-fortran-order.npy',
   'npy-i2-big.npy',
+  'comtrade-ascii.cff',
+  'comtrade-binary.cff',
+  'comtrade-by-stamps.cff',
+  'comtrade-float32.cff',
 ];
 
 interface Edit {
@@ -71,7 +75,13 @@ describe('damaged files', { timeout: 30_000 }, () => {
     await fc.assert(
       fc.asyncProperty(
         fc.uint8Array({ maxLength: 300 }),
-        fc.constantFrom('', 'RIFF    WAVE', 'RIFF    WAVEfmt ', '\u0093NUMPY\u0001\u0000\u0020\u0000'),
+        fc.constantFrom(
+          '',
+          'RIFF    WAVE',
+          'RIFF    WAVEfmt ',
+          '--- file type: CFG ---\n',
+          '\u0093NUMPY\u0001\u0000\u0020\u0000',
+        ),
         async (tail, start) => {
           const bytes = Uint8Array.from([...Array.from(start, (letter) => letter.charCodeAt(0)), ...tail]);
           expect(typeof (await readAll(bytes)).outcome.ok).toBe('boolean');

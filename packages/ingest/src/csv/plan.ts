@@ -17,8 +17,8 @@ function refuseBinary(text: string, fileName: string): void {
   if (!looksBinary(text)) return;
   refuse(
     'not-a-capture',
-    `"${fileName}" holds binary data that is not recognised: it is not text and has no RIFF or RF64 header of a WAV file.`,
-    'Upload a table of numbers as text (CSV) or a WAV file.',
+    `"${fileName}" holds binary data that is not recognised: it is not text and does not begin like a WAV, .npy or COMTRADE file.`,
+    'Upload a table of numbers as text (CSV), a WAV file, a NumPy array (.npy) or a COMTRADE record (.cff).',
   );
 }
 

@@ -17,6 +17,18 @@ interface Tally {
   value: number;
 }
 
+/** How places are named: lines of text, or records of binary data, which no line number leads to. */
+export interface RowWords {
+  row: 'line' | 'record';
+  /** What a person can do instead of mending the stamps. */
+  otherwise: string;
+}
+
+const LINES: RowWords = {
+  row: 'line',
+  otherwise: 'or state that there is no time column and give the sample rate',
+};
+
 /** A step of the time from the row before to the row of `sample`. */
 interface Step {
   step: number;
@@ -50,7 +62,10 @@ export class TimeAxis {
   private readonly gaps = emptyTally();
 
   /** Stamps stay in the unit of the file, so that no rounding comes into their differences. */
-  constructor(private readonly time: TimeChoice) {}
+  constructor(
+    private readonly time: TimeChoice,
+    private readonly rows: RowWords = LINES,
+  ) {}
 
   /** First time stamp in seconds, null when there is none. */
   get startS(): number | null {
@@ -96,8 +111,8 @@ export class TimeAxis {
     if (this.uneven.count > 0) {
       found.push({
         code: 'uneven-sampling',
-        message: `${this.uneven.count} intervals between time stamps differ by more than 5 % from the usual one, first at line ${this.uneven.firstLine}; the samples are treated as evenly spaced at the mean rate.`,
-        ...this.uneven,
+        message: `${this.uneven.count} intervals between time stamps differ by more than 5 % from the usual one, first at ${this.rows.row} ${this.uneven.firstLine}; the samples are treated as evenly spaced at the mean rate.`,
+        ...this.placesOf(this.uneven),
         limit: 100 * UNEVEN,
         unit: '%',
       });
@@ -105,13 +120,17 @@ export class TimeAxis {
     if (this.gaps.count > 0) {
       found.push({
         code: 'gap',
-        message: `The time jumps by more than 1.5 sample intervals in ${this.gaps.count} places, first before line ${this.gaps.firstLine}${this.uneven.count > 0 ? '' : '; samples are missing there'}.`,
-        ...this.gaps,
+        message: `The time jumps by more than 1.5 sample intervals in ${this.gaps.count} places, first before ${this.rows.row} ${this.gaps.firstLine}${this.uneven.count > 0 ? '' : '; samples are missing there'}.`,
+        ...this.placesOf(this.gaps),
         limit: GAP,
         unit: 'sample intervals',
       });
     }
     return found;
+  }
+
+  private placesOf({ firstLine, ...tally }: Tally): Omit<Tally, 'firstLine'> & { firstLine?: number } {
+    return this.rows.row === 'line' ? { ...tally, firstLine } : tally;
   }
 
   private measure(step: Step): void {
@@ -146,15 +165,16 @@ export class TimeAxis {
   private refuseBackwards(stamp: number, line: number): never {
     const same = stamp === this.lastStamp;
     const unit = this.time.unit ?? 's';
+    const place = `${this.rows.row === 'line' ? 'Line' : 'Record'} ${line}`;
     refuse(
       same ? 'time-repeated' : 'time-not-increasing',
       same
-        ? `Line ${line} repeats the time ${stamp} ${unit} of the row before with different values: one time stamp stands twice.`
-        : `Line ${line}: the time runs backwards, ${stamp} ${unit} after ${this.lastStamp} ${unit}. Time stamps must be in increasing order.`,
+        ? `${place} repeats the time ${stamp} ${unit} of the row before with different values: one time stamp stands twice.`
+        : `${place}: the time runs backwards, ${stamp} ${unit} after ${this.lastStamp} ${unit}. Time stamps must be in increasing order.`,
       same
-        ? 'Export the time with more digits; or state that there is no time column and give the sample rate.'
-        : 'Export the record as one piece in the order of time; or state that there is no time column and give the sample rate.',
-      { line, column: this.time.column + 1 },
+        ? `Export the time with more digits; ${this.rows.otherwise}.`
+        : `Export the record as one piece in the order of time; ${this.rows.otherwise}.`,
+      this.rows.row === 'line' ? { line, column: this.time.column + 1 } : {},
     );
   }
 }

@@ -40,7 +40,11 @@ export const uploadBody = {
   type: 'object',
   required: ['file'],
   properties: {
-    file: { type: 'string', format: 'binary', description: 'The capture, CSV or WAV' },
+    file: {
+      type: 'string',
+      format: 'binary',
+      description: 'The capture: CSV, WAV, NumPy .npy or COMTRADE .cff',
+    },
     name: { ...text, description: 'File name without extension when absent' },
     eut: text,
     measuringChain: text,
