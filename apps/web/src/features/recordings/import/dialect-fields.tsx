@@ -31,9 +31,10 @@ function choices(words: Record<string, string>, found: string | null | undefined
   ];
 }
 
-/** How the text is to be taken apart, and where the time comes from. WAV files need none of it. */
+/** How the text is to be taken apart, and where the time comes from. Other formats have at most the sample rate, WAV not even that. */
 export function DialectFields({ draft, faults, preview, needsSampleRate, onChange }: DialectFieldsProps) {
   if (preview?.format === 'wav') return null;
+  const isTable = (preview?.format ?? 'csv') === 'csv';
   const timeName = preview?.columns.find((column) => column.index === preview.timeColumn)?.name;
   return (
     <Grid templateColumns={{ base: '1fr 1fr', md: 'repeat(3, 1fr)' }} gap="3">
@@ -53,46 +54,50 @@ export function DialectFields({ draft, faults, preview, needsSampleRate, onChang
           onChange={(event) => onChange({ sampleRateHz: event.target.value })}
         />
       </FormField>
-      <FormField label="Time column">
-        <SelectInput
-          options={[
-            { value: '', label: detected(timeName ?? (preview ? 'none' : undefined)) },
-            { value: 'none', label: 'none' },
-            ...(preview?.columns ?? []).map(({ index, name }) => ({ value: String(index), label: name })),
-          ]}
-          value={draft.timeColumn}
-          onChange={(event) => onChange({ timeColumn: event.target.value })}
-        />
-      </FormField>
-      <FormField label="Time unit">
-        <SelectInput
-          options={choices(timeUnits, preview?.timeUnit)}
-          value={draft.timeUnit}
-          onChange={(event) => onChange({ timeUnit: event.target.value })}
-        />
-      </FormField>
-      <FormField label="Delimiter">
-        <SelectInput
-          options={choices(delimiters, preview?.delimiter)}
-          value={draft.delimiter}
-          onChange={(event) => onChange({ delimiter: event.target.value })}
-        />
-      </FormField>
-      <FormField label="Decimal mark">
-        <SelectInput
-          options={choices(decimals, preview?.decimal)}
-          value={draft.decimal}
-          onChange={(event) => onChange({ decimal: event.target.value })}
-        />
-      </FormField>
-      <FormField label="Lines before the numbers" error={faults.headerRows}>
-        <Input
-          inputMode="numeric"
-          placeholder={preview?.headerRows === null ? '' : String(preview?.headerRows ?? '')}
-          value={draft.headerRows}
-          onChange={(event) => onChange({ headerRows: event.target.value })}
-        />
-      </FormField>
+      {isTable ? (
+        <>
+          <FormField label="Time column">
+            <SelectInput
+              options={[
+                { value: '', label: detected(timeName ?? (preview ? 'none' : undefined)) },
+                { value: 'none', label: 'none' },
+                ...(preview?.columns ?? []).map(({ index, name }) => ({ value: String(index), label: name })),
+              ]}
+              value={draft.timeColumn}
+              onChange={(event) => onChange({ timeColumn: event.target.value })}
+            />
+          </FormField>
+          <FormField label="Time unit">
+            <SelectInput
+              options={choices(timeUnits, preview?.timeUnit)}
+              value={draft.timeUnit}
+              onChange={(event) => onChange({ timeUnit: event.target.value })}
+            />
+          </FormField>
+          <FormField label="Delimiter">
+            <SelectInput
+              options={choices(delimiters, preview?.delimiter)}
+              value={draft.delimiter}
+              onChange={(event) => onChange({ delimiter: event.target.value })}
+            />
+          </FormField>
+          <FormField label="Decimal mark">
+            <SelectInput
+              options={choices(decimals, preview?.decimal)}
+              value={draft.decimal}
+              onChange={(event) => onChange({ decimal: event.target.value })}
+            />
+          </FormField>
+          <FormField label="Lines before the numbers" error={faults.headerRows}>
+            <Input
+              inputMode="numeric"
+              placeholder={preview?.headerRows === null ? '' : String(preview?.headerRows ?? '')}
+              value={draft.headerRows}
+              onChange={(event) => onChange({ headerRows: event.target.value })}
+            />
+          </FormField>
+        </>
+      ) : null}
     </Grid>
   );
 }

@@ -26,6 +26,14 @@ const unreadable = new Set([
   'bad-format-chunk',
   'header-cut',
   'unsupported-encoding',
+  'unsupported-shape',
+  'bad-header',
+  'bad-configuration',
+  'comtrade-half',
+  'data-type-differs',
+  'no-configuration',
+  'no-data-section',
+  'several-sampling-rates',
 ]);
 
 interface ImportDialogProps {
@@ -72,7 +80,7 @@ function ImportForm({ projectId, source, pending = false, onClose, onRead }: Imp
       {!shown && !preview.isError && !head.isError ? <LoadingState label="Looking into the file" /> : null}
       {shown && shown.format !== 'wav' ? (
         <Grid templateColumns={{ base: 'minmax(0, 1fr)', md: 'minmax(0, 1fr) minmax(0, 1fr)' }} gap="4">
-          <FileLines lines={shown.lines} />
+          {shown.lines.length > 0 ? <FileLines lines={shown.lines} /> : null}
           <ReadRows preview={shown} />
         </Grid>
       ) : null}

@@ -35,7 +35,9 @@ export function DropZone({ onFiles, checkFirst, onCheckFirst }: DropZoneProps) {
     >
       <Box flex="1 1 320px">
         <input {...getInputProps({ 'aria-label': 'Capture files' })} />
-        <Text>Drop CSV or WAV captures here. Sources are kept byte for byte.</Text>
+        <Text>
+          Drop captures here: CSV, WAV, NumPy (.npy) or COMTRADE (.cff). Sources are kept byte for byte.
+        </Text>
         <Text fontSize="xs" color="inkSoft">
           Captures on mains: qualified persons, rated probes, isolation. Local codes decide.
         </Text>
