@@ -43,6 +43,7 @@ describe('a clock beside the time column', () => {
     ['a ramp with a unit', 'time_s,u_V', (i: number) => [i, 5 + i]],
     ['a ramp of another pace', 'time_s,ramp,u_V', (i: number) => [i, 5 + 3 * i, wave(i)]],
     ['a time that does not rise in step', 'time_s,loop_us,u_V', (i: number) => [i, 2400 + wave(i), wave(i)]],
+    ['a time that rises faster and faster', 'time_s,delay_us,u_V', (i: number) => [i, i * i, wave(i)]],
     ['a time that stands still now and then', 'time_s,tick_s,u_V', (i: number) => [i, i >> 1, wave(i)]],
   ])('is not seen in %s', async (_what, header, row) => {
     const reading = await readGood(table(header, row));
