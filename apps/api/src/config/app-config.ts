@@ -1,5 +1,6 @@
-import { resolve } from 'node:path';
+import { join, resolve } from 'node:path';
 import type { Environment } from './environment.js';
+import { storageSettings, type StorageSettings } from './storage-settings.js';
 
 /** Settings of the process, checked at start. Nothing else reads the environment. */
 export class AppConfig {
@@ -25,7 +26,7 @@ export class AppConfig {
   readonly jobsAtOnce: number;
   readonly adminEmail?: string;
   readonly adminPassword?: string;
-  readonly storage: 'disk';
+  readonly storage: StorageSettings;
 
   constructor(env: Environment) {
     this.port = env.PORT;
@@ -46,7 +47,7 @@ export class AppConfig {
     this.jobsAtOnce = 2 * env.COMPUTE_THREADS;
     this.adminEmail = env.ADMIN_EMAIL?.toLowerCase();
     this.adminPassword = env.ADMIN_PASSWORD;
-    this.storage = env.STORAGE;
+    this.storage = storageSettings(env, join(this.dataDir, 'storage'));
   }
 
   /** True when people reach the installation over TLS. */

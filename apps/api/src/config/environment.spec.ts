@@ -19,7 +19,7 @@ describe('the environment', () => {
       worker: 'embedded',
       demo: false,
       webDist: null,
-      storage: 'disk',
+      storage: { kind: 'disk', folder: '/var/lib/overtally/storage' },
     });
     expect(config.isHttps).toBe(false);
   });
@@ -64,5 +64,34 @@ describe('the environment', () => {
   it('knows TLS by the public address and drops the slash at its end', () => {
     const config = new AppConfig(readEnvironment({ ...needed, PUBLIC_URL: 'https://lab.example/' }));
     expect(config).toMatchObject({ publicUrl: 'https://lab.example', isHttps: true });
+  });
+
+  it('takes a bucket for storage', () => {
+    const s3 = {
+      S3_ENDPOINT: 'https://s3.lab.example',
+      S3_BUCKET: 'captures',
+      S3_REGION: 'eu-central-1',
+      S3_ACCESS_KEY_ID: 'id',
+      S3_SECRET_ACCESS_KEY: 'secret',
+      S3_FORCE_PATH_STYLE: 'on',
+    };
+    expect(new AppConfig(readEnvironment({ ...needed, STORAGE: 's3', ...s3 })).storage).toEqual({
+      kind: 's3',
+      endpoint: 'https://s3.lab.example',
+      bucket: 'captures',
+      region: 'eu-central-1',
+      accessKeyId: 'id',
+      secretAccessKey: 'secret',
+      forcePathStyle: true,
+    });
+  });
+
+  it('names what a bucket lacks together with other faults', () => {
+    const read = () => readEnvironment({ ...needed, PORT: 'eighty', STORAGE: 's3', S3_BUCKET: 'captures' });
+    for (const name of ['S3_ENDPOINT', 'S3_REGION', 'S3_ACCESS_KEY_ID', 'S3_SECRET_ACCESS_KEY'])
+      expect(read).toThrow(`${name}: STORAGE=s3 needs it`);
+    expect(read).toThrow('PORT');
+    expect(read).not.toThrow('S3_BUCKET');
+    expect(() => readEnvironment({ ...needed, STORAGE: 'tape' })).toThrow('STORAGE');
   });
 });

@@ -1,6 +1,7 @@
 import { isIP } from 'node:net';
 import { availableParallelism, platform } from 'node:os';
 import { z } from 'zod';
+import { s3Variables } from './storage-settings.js';
 
 const absent = (value: unknown) => (value === '' ? undefined : value);
 const optional = <T extends z.ZodType>(schema: T) => z.preprocess(absent, schema.optional());
@@ -28,6 +29,13 @@ const trustProxySchema = z
 /** All processors where compute threads give way to the rest of the process (`lowerThreadPriority`), else all but one. */
 const usualComputeThreads = (): number =>
   Math.max(1, availableParallelism() - (platform() === 'linux' ? 0 : 1));
+
+/** Looked at together with the other faults, not after them. */
+const neededByS3 = (name: (typeof s3Variables)[number]) =>
+  z.refine<{ STORAGE: string } & Partial<Record<typeof name, string>>>(
+    (env) => env.STORAGE !== 's3' || env[name] !== undefined,
+    { path: [name], message: 'STORAGE=s3 needs it', when: () => true },
+  );
 
 /** The environment of a process. An empty value counts as absent. */
 export const environmentSchema = z
@@ -62,8 +70,15 @@ export const environmentSchema = z
     ),
     ADMIN_EMAIL: optional(z.email({ error: 'give an e-mail address' })),
     ADMIN_PASSWORD: optional(z.string().min(12, 'use at least 12 characters').max(256)),
-    STORAGE: z.preprocess(absent, z.literal('disk', { error: "only 'disk' is known" }).default('disk')),
+    STORAGE: z.preprocess(absent, z.enum(['disk', 's3']).default('disk')),
+    S3_ENDPOINT: optional(z.url({ protocol: /^https?$/, error: 'give an http:// or https:// address' })),
+    S3_BUCKET: optional(z.string()),
+    S3_REGION: optional(z.string()),
+    S3_ACCESS_KEY_ID: optional(z.string()),
+    S3_SECRET_ACCESS_KEY: optional(z.string()),
+    S3_FORCE_PATH_STYLE: z.preprocess(absent, z.enum(['on', 'off']).default('off')),
   })
+  .check(...s3Variables.map(neededByS3))
   .refine((env) => (env.ADMIN_EMAIL === undefined) === (env.ADMIN_PASSWORD === undefined), {
     path: ['ADMIN_EMAIL'],
     message: 'give ADMIN_EMAIL and ADMIN_PASSWORD together, or neither',

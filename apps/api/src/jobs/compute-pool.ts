@@ -107,7 +107,7 @@ export class ComputePool implements OnApplicationShutdown {
     await makePrivateFolder(scratchFolder);
     await removeStale(scratchFolder, staleAfterMs);
     const workerData: ComputeEnvironment = {
-      storage: { kind: 'disk', folder: join(this.config.dataDir, 'storage') },
+      storage: this.config.storage,
       scratchFolder,
       workers: this.config.computeThreads,
     };

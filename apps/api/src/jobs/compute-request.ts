@@ -1,9 +1,9 @@
 import type { MessagePort } from 'node:worker_threads';
-import type { StorageLocation } from '../storage/storage-location.js';
+import type { StorageSettings } from '../config/storage-settings.js';
 
 /** What every compute thread is started with. */
 export interface ComputeEnvironment {
-  storage: StorageLocation;
+  storage: StorageSettings;
   scratchFolder: string;
   /** Threads that compute at the same time. */
   workers: number;

@@ -1,18 +1,19 @@
 import { createHash, randomUUID } from 'node:crypto';
-import { createReadStream } from 'node:fs';
-import { mkdir, open, rename, rm, stat } from 'node:fs/promises';
+import { createReadStream, type Dirent } from 'node:fs';
+import { mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import type { Readable } from 'node:stream';
 import { makePrivateFolder } from './private-folder.js';
 import { readWhole } from './read-whole.js';
-import { removeStale } from './stale-files.js';
-import { checkedKey } from './storage-key.js';
+import { modifiedAt, removeStale } from './stale-files.js';
+import { checkedKey, checkedPrefix } from './storage-key.js';
 import {
   Storage,
   StorageObjectMissing,
   type ByteInput,
   type ByteRange,
   type StagedObject,
+  type StoredObject,
 } from './storage.js';
 
 const staleAfterMs = 24 * 3600 * 1000;
@@ -99,8 +100,18 @@ export class DiskStorage extends Storage {
   }
 
   async deleteAll(prefix: string): Promise<void> {
-    if (!prefix.endsWith('/')) throw new RangeError(`Not the prefix of a folder: ${prefix}`);
-    await rm(this.path(prefix.slice(0, -1)), { recursive: true, force: true });
+    await rm(join(this.root, checkedPrefix(prefix)), { recursive: true, force: true });
+  }
+
+  async *list(prefix: string): AsyncIterable<StoredObject> {
+    for (const entry of await entriesOf(join(this.root, checkedPrefix(prefix)))) {
+      const key = `${prefix}${entry.name}`;
+      if (entry.isDirectory()) yield* this.list(`${key}/`);
+      else {
+        const writtenAt = await modifiedAt(this.path(key));
+        if (writtenAt !== undefined) yield { key, writtenAt };
+      }
+    }
   }
 
   private path(key: string): string {
@@ -139,6 +150,16 @@ async function syncPath(path: string): Promise<void> {
     await handle.sync();
   } finally {
     await handle.close();
+  }
+}
+
+/** What lies in a folder; nothing where it is gone or was never made. */
+async function entriesOf(folder: string): Promise<Dirent[]> {
+  try {
+    return await readdir(folder, { withFileTypes: true });
+  } catch (error) {
+    if (error instanceof Error && 'code' in error && error.code === 'ENOENT') return [];
+    throw error;
   }
 }
 

@@ -5,14 +5,13 @@ import { join } from 'node:path';
 export async function removeStale(folder: string, ageMs: number, now = Date.now()): Promise<void> {
   for (const name of await readdir(folder)) {
     const path = join(folder, name);
-    const modifiedAt = await modified(path);
-    if (modifiedAt !== undefined && now - modifiedAt >= ageMs)
-      await rm(path, { recursive: true, force: true });
+    const writtenAt = await modifiedAt(path);
+    if (writtenAt !== undefined && now - writtenAt >= ageMs) await rm(path, { recursive: true, force: true });
   }
 }
 
 /** Moment of the last write in ms since 1970; undefined when the file went away meanwhile. */
-async function modified(path: string): Promise<number | undefined> {
+export async function modifiedAt(path: string): Promise<number | undefined> {
   try {
     return (await stat(path)).mtimeMs;
   } catch (error) {

@@ -11,3 +11,13 @@ export function checkedKey(key: string): string {
   }
   return key;
 }
+
+/**
+ * Returns `prefix` when it is a key with a slash at its end.
+ * @throws RangeError otherwise
+ */
+export function checkedPrefix(prefix: string): string {
+  if (!prefix.endsWith('/')) throw new RangeError(`Not the prefix of a folder: ${prefix}`);
+  checkedKey(prefix.slice(0, -1));
+  return prefix;
+}

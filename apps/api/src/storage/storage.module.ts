@@ -1,7 +1,6 @@
 import { Global, Module } from '@nestjs/common';
-import { join } from 'node:path';
 import { AppConfig } from '../config/app-config.js';
-import { DiskStorage } from './disk-storage.js';
+import { openStorage } from './open-storage.js';
 import { Storage } from './storage.js';
 
 @Global()
@@ -11,7 +10,7 @@ import { Storage } from './storage.js';
       provide: Storage,
       inject: [AppConfig],
       useFactory: async (config: AppConfig): Promise<Storage> => {
-        const storage = new DiskStorage(join(config.dataDir, 'storage'));
+        const storage = openStorage(config.storage);
         await storage.prepare();
         return storage;
       },

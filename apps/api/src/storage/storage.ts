@@ -17,6 +17,13 @@ export interface StagedObject {
   discard(): Promise<void>;
 }
 
+/** An object as a list names it. */
+export interface StoredObject {
+  key: string;
+  /** When its bytes were written, in ms since 1970. */
+  writtenAt: number;
+}
+
 export type ByteInput = AsyncIterable<Uint8Array> | Uint8Array;
 
 /** Thrown when an object that ought to be there is not. */
@@ -32,6 +39,11 @@ export class StorageObjectMissing extends Error {
  * An object appears whole or not at all. Reading a missing object fails with `StorageObjectMissing`.
  */
 export abstract class Storage {
+  /**
+   * Makes the store ready and clears what an interrupted process left unnamed a day or more before `now`.
+   * @throws Error that says what is wrong when the store cannot be used
+   */
+  abstract prepare(now?: number): Promise<void>;
   /** Receives bytes without a name yet; what was received of a source that fails is dropped. */
   abstract stage(source: ByteInput): Promise<StagedObject>;
   abstract put(key: string, source: ByteInput): Promise<{ size: number; sha256: string }>;
@@ -45,4 +57,6 @@ export abstract class Storage {
   abstract delete(key: string): Promise<void>;
   /** Deletes every object whose key begins with `prefix`, which ends in a slash. */
   abstract deleteAll(prefix: string): Promise<void>;
+  /** Every object whose key begins with `prefix`, which ends in a slash, in no order. */
+  abstract list(prefix: string): AsyncIterable<StoredObject>;
 }

@@ -13,10 +13,14 @@ import type { ComputeContext } from '../jobs/compute-task.js';
 import { Delegation } from '../jobs/delegation.js';
 import { toPlainError } from '../jobs/plain-error.js';
 import { readTask, type ReadTaskInput } from '../recordings/reading/read-task.js';
-import { openStorage } from '../storage/storage-location.js';
+import { openStorage } from '../storage/open-storage.js';
 import { lowerThreadPriority } from './lower-priority.js';
 
 const progressIntervalMs = 100;
+
+const environment = workerData as ComputeEnvironment;
+/** One for all tasks of the thread, so that connections to the store are kept. */
+const storage = openStorage(environment.storage);
 
 lowerThreadPriority();
 
@@ -49,11 +53,11 @@ function perform({ task, input }: ComputeRequest, context: ComputeContext): Prom
 }
 
 function contextOf({ stopFlag, port }: ComputeRequest): ComputeContext {
-  const { storage, scratchFolder, workers } = workerData as ComputeEnvironment;
+  const { scratchFolder, workers } = environment;
   const delegation = new Delegation(port);
   let reportedAt = 0;
   return {
-    storage: openStorage(storage),
+    storage,
     scratchFolder,
     workers,
     reportProgress: (fraction) => {
