@@ -133,7 +133,7 @@ describe('reading that fails for reasons of the installation', () => {
       const worker = await startWorker(test);
       expect(await settled(technician, id)).toMatchObject({
         status: 'failed',
-        problem: { code: 'internal-error' },
+        problem: { code: 'stored-file-missing' },
       });
       await worker.close();
     },

@@ -68,6 +68,15 @@ export class RecordingDataController {
   ): Promise<StreamableFile | undefined> {
     const recording = (await this.repository.find(id))!;
     const entityTag = `"${recording.fileSha256}"`;
+    if (request.get('if-none-match') === entityTag) {
+      response.status(304).set({ 'Cache-Control': 'private, no-cache', ETag: entityTag });
+      return undefined;
+    }
+    const size = recording.fileSize;
+    const range = ifRange === undefined || ifRange === entityTag ? wantedRange(request, size) : undefined;
+    const length = range === undefined ? size : range.end - range.start + 1;
+    const stream = await present(this.storage.read(recording.sourceKey, range));
+    // Set only now: they say nothing true of an answer that reports a fault.
     response.attachment(recording.fileName).set({
       // Not the type the name suggests: compressed on the way, a range would no longer be one of the file.
       'Content-Type': 'application/octet-stream',
@@ -75,17 +84,9 @@ export class RecordingDataController {
       'Accept-Ranges': 'bytes',
       ETag: entityTag,
     });
-    if (request.get('if-none-match') === entityTag) {
-      response.status(304);
-      return undefined;
-    }
-    const size = recording.fileSize;
-    const range = ifRange === undefined || ifRange === entityTag ? wantedRange(request, size) : undefined;
     if (range !== undefined) {
       response.status(206).set('Content-Range', `bytes ${range.start}-${range.end}/${size}`);
     }
-    const length = range === undefined ? size : range.end - range.start + 1;
-    const stream = await present(this.storage.read(recording.sourceKey, range));
     return new StreamableFile(stream, { type: 'application/octet-stream', length });
   }
 }

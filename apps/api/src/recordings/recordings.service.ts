@@ -113,10 +113,15 @@ export class RecordingsService {
     });
     // Keys are spelled as the row has them, which an id in a path need not be.
     await this.storage.deleteAll(recordingPrefix(recording.id));
+    await this.deleteUnusedSource(recording.sourceKey);
+  }
+
+  /** Deletes a source file unless a recording has it; nobody can bring the same file in meanwhile. */
+  async deleteUnusedSource(key: string): Promise<void> {
     await this.database.transaction(async (tx) => {
-      await this.repository.lockSource(tx, recording.sourceKey);
-      const isUsed = await this.repository.isSourceUsed(tx, recording.sourceKey);
-      if (!isUsed) await this.storage.delete(recording.sourceKey);
+      await this.repository.lockSource(tx, key);
+      const isUsed = await this.repository.isSourceUsed(tx, key);
+      if (!isUsed) await this.storage.delete(key);
     });
   }
 

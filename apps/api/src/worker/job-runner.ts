@@ -1,6 +1,7 @@
 import { Logger } from '@nestjs/common';
 import type { ReadProblem } from '@overtally/contracts';
 import type { JobHelpers, Task } from 'graphile-worker';
+import { isMissingObject } from '../storage/missing-object.js';
 import type { AnyHandler } from './match-handlers.js';
 
 /** What the person who waits for a job sees when it is given up for reasons that are not theirs. */
@@ -8,6 +9,12 @@ export const gaveUpProblem: ReadProblem = {
   code: 'internal-error',
   message: 'The computation failed for a reason that lies in this installation, not in the file.',
   cure: 'Try once more; if it fails again, give the time and the recording number to the administrator.',
+};
+
+const fileMissingProblem: ReadProblem = {
+  code: 'stored-file-missing',
+  message: 'A file of this recording is missing in the storage of this installation.',
+  cure: 'Have it restored from the backup, then read the recording again.',
 };
 
 /**
@@ -28,7 +35,7 @@ export function taskFor(handler: AnyHandler, shutdown: AbortSignal): Task {
         throw error;
       }
       logger.error({ ...place, err: error }, 'A job failed and was given up');
-      await handler.giveUp(payload, gaveUpProblem);
+      await handler.giveUp(payload, isMissingObject(error) ? fileMissingProblem : gaveUpProblem);
     }
   };
 }

@@ -1,7 +1,8 @@
 import { Module } from '@nestjs/common';
 import { AnalysesModule } from '../analyses/analyses.module.js';
 import { RecordingsModule } from '../recordings/recordings.module.js';
+import { ClearStorageHandler } from './clear-storage.handler.js';
 import { WorkerService } from './worker.service.js';
 
-@Module({ imports: [RecordingsModule, AnalysesModule], providers: [WorkerService] })
+@Module({ imports: [RecordingsModule, AnalysesModule], providers: [WorkerService, ClearStorageHandler] })
 export class WorkerModule {}

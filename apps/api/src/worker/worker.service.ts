@@ -5,6 +5,7 @@ import {
   type BeforeApplicationShutdown,
   type OnApplicationBootstrap,
 } from '@nestjs/common';
+import type { Database } from '@overtally/db';
 import {
   run,
   WorkerUtils,
@@ -17,15 +18,20 @@ import { EventEmitter } from 'node:events';
 import type { Pool } from 'pg';
 import { AnalyseRecordingHandler } from '../analyses/computing/analyse-recording.handler.js';
 import { AppConfig } from '../config/app-config.js';
-import { POOL } from '../database/database.tokens.js';
+import { DATABASE, POOL } from '../database/database.tokens.js';
+import { clearStorageJob } from '../jobs/definitions/clear-storage.job.js';
 import { jobDefinitions } from '../jobs/definitions/index.js';
+import { JobsService } from '../jobs/jobs.service.js';
 import { ReadRecordingHandler } from '../recordings/reading/read-recording.handler.js';
+import { ClearStorageHandler } from './clear-storage.handler.js';
 import { gaveUpProblem, taskFor } from './job-runner.js';
 import { matchHandlers, type AnyHandler } from './match-handlers.js';
 import { queueLogger } from './queue-logger.js';
 import { exhaustedJobs, releaseDeadWorkers, resumeInterrupted, WorkerLease } from './worker-lease.js';
 
 const sweepIntervalMs = 5_000;
+/** Every night at an odd minute, in UTC. */
+const schedule = `17 2 * * * ${clearStorageJob.name} ?max=${clearStorageJob.maxAttempts}&jobKey=${clearStorageJob.key({})}`;
 
 /** Runs the queue in this process and looks after what dead workers left behind. */
 @Injectable()
@@ -42,15 +48,19 @@ export class WorkerService implements OnApplicationBootstrap, BeforeApplicationS
 
   constructor(
     @Inject(POOL) private readonly pool: Pool,
+    @Inject(DATABASE) private readonly database: Database,
     private readonly config: AppConfig,
+    private readonly jobs: JobsService,
     readRecording: ReadRecordingHandler,
     analyseRecording: AnalyseRecordingHandler,
+    clearStorage: ClearStorageHandler,
   ) {
-    this.handlers = matchHandlers(jobDefinitions, [readRecording, analyseRecording]);
+    this.handlers = matchHandlers(jobDefinitions, [readRecording, analyseRecording, clearStorage]);
   }
 
   async onApplicationBootstrap(): Promise<void> {
     this.utils = await makeWorkerUtils({ pgPool: this.pool, logger: queueLogger });
+    await this.database.transaction((tx) => this.jobs.enqueue(tx, clearStorageJob, {}));
     const events: WorkerEvents = new EventEmitter();
     events.on('pool:create', ({ workerPool }) => {
       this.lease = new WorkerLease(this.pool, workerPool.id);
@@ -62,6 +72,7 @@ export class WorkerService implements OnApplicationBootstrap, BeforeApplicationS
       pgPool: this.pool,
       concurrency: this.config.jobsAtOnce,
       noHandleSignals: true,
+      crontab: schedule,
       taskList: Object.fromEntries(tasks) as TaskList,
       events,
       logger: queueLogger,
