@@ -83,9 +83,9 @@ describe.each(stores)('files of recordings on %s', (kind, start) => {
     await storage.delete(key);
   });
 
-  it('go from the upload to the analysis and back', async () => {
+  it('go from the upload to the analysis and back', { timeout: 90_000 }, async () => {
     const { id } = await upload(technician, test.project.id, capture, 'stored.csv');
-    recording = await settled(technician, id);
+    recording = await settled(technician, id, 60_000);
     expect(recording).toMatchObject({ status: 'ready', problem: null });
     // Closed form: a square wave has THD-F = sqrt(sum of 1/n²) over its odd orders.
     expect(Math.abs(recording.summaries[0]!.thdFPercent! - squareThdFPercent)).toBeLessThan(0.01);

@@ -10,7 +10,7 @@ import { Storage } from './storage.js';
       provide: Storage,
       inject: [AppConfig],
       useFactory: async (config: AppConfig): Promise<Storage> => {
-        const storage = openStorage(config.storage);
+        const storage = await openStorage(config.storage);
         await storage.prepare();
         return storage;
       },

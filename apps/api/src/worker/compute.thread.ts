@@ -20,7 +20,7 @@ const progressIntervalMs = 100;
 
 const environment = workerData as ComputeEnvironment;
 /** One for all tasks of the thread, so that connections to the store are kept. */
-const storage = openStorage(environment.storage);
+const storage = await openStorage(environment.storage);
 
 lowerThreadPriority();
 
