@@ -190,7 +190,7 @@ export interface FundamentalResult {
   rms: number;
   /** Cosine form, zero time = first sample; null when the frequency drifts. */
   phaseDeg: number | null;
-  /** One standard deviation (Cramér-Rao, from the residual of the fit); null when the frequency drifts. */
+  /** One standard deviation (Cramér-Rao, from the residual of the fit); null when the frequency drifts or wanders. */
   frequencyUncertaintyHz: number | null;
 }
 

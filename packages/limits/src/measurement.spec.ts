@@ -13,6 +13,9 @@ const harmonic = (rest: Partial<Harmonic>): Harmonic => ({
   subgroupRms: null,
   smoothedMeanRms: null,
   smoothedMaxRms: null,
+  uncertainty: null,
+  groupStatistics: null,
+  subgroupStatistics: null,
   ...rest,
 });
 const channel = (rest: Partial<ChannelAnalysis>): ChannelAnalysis => ({
@@ -20,6 +23,8 @@ const channel = (rest: Partial<ChannelAnalysis>): ChannelAnalysis => ({
   ...{ crestFactor: null, formFactor: null, thdFPercent: null, thdRPercent: null, thdMaxOrder: 40 },
   ...{ thdPlusNPercent: null, sinadDb: null, snrDb: null, sfdrDb: null, enobBits: null },
   fundamental: { frequencyHz: 50, rms: 9.9, phaseDeg: 0, frequencyUncertaintyHz: null },
+  ...{ tone: null, distortion: null, bands: [], countedFrequency: [], lines: [], families: [] },
+  uncertainty: {},
   harmonics: [],
   interharmonics: [],
   windows: null,
@@ -52,9 +57,10 @@ describe('measurementOfChannel', () => {
   });
 
   it('counts orders below half the sample rate as measurable: 2000 samples in 10 cycles reach order 99', () => {
-    const windows = { cycles: 10, count: 5, samplesPerWindow: 2000 };
+    const rest = { flaggedCount: 0, synchronisationErrorPercent: null, gridChannel: 0 };
+    const windows = { cycles: 10, count: 5, samplesPerWindow: 2000, ...rest };
     expect(measurementOfChannel(channel({ windows })).highestMeasurableOrder).toBe(99);
-    const odd = { cycles: 10, count: 5, samplesPerWindow: 803.2 };
+    const odd = { cycles: 10, count: 5, samplesPerWindow: 803.2, ...rest };
     expect(measurementOfChannel(channel({ windows: odd })).highestMeasurableOrder).toBe(40);
   });
 

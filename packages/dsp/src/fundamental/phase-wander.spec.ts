@@ -57,3 +57,16 @@ describe('a tone that wanders', () => {
     expect(channels[0]!.sinadDb).toBeCloseTo(33.98, 1);
   });
 });
+
+it('states no uncertainty of a frequency that wanders, as there is no one value of it', () => {
+  const uncertaintyHz = (samples: Float64Array) =>
+    analyseRecord({
+      sampleRateHz: rate,
+      channels: [{ index: 0, name: 'u', quantity: 'voltage', unit: 'V', samples }],
+      settings: { profile: 'mains', nominalFrequencyHz: 50 },
+    }).channels[0]!.fundamental?.frequencyUncertaintyHz;
+  expect(uncertaintyHz(swinging(0.5, 0.01))).toBeNull();
+  // Cramér-Rao bound (Kay 1993, 3.11) with Σ h² A_h² = 1.0036 V², s = 0.01 V and N = 200 000 samples.
+  const bound = (rate / (2 * Math.PI)) * Math.sqrt((24 * 0.01 ** 2) / (1.0036 * 2e5 * (4e10 - 1)));
+  expect(uncertaintyHz(swinging(0, 0.01))! / bound).toBeCloseTo(1, 1);
+});

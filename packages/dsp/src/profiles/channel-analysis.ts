@@ -4,7 +4,9 @@ import { unionOf } from '../flags/bounded-ranges.js';
 import { frequencyDriftFlag } from '../flags/frequency-drift.js';
 import type { WindowSynchronism } from '../flags/not-synchronous.js';
 import { countedFrequency } from '../fundamental/counted-frequency.js';
+import { keepsPhase } from '../fundamental/phase-wander.js';
 import { listPeaks } from '../peaks/list-peaks.js';
+import type { ChannelSurvey } from '../stages/channel-survey.js';
 import type { MeasuredChannel } from '../stages/measure-channels.js';
 import type {
   ChannelAnalysis,
@@ -26,6 +28,9 @@ import {
   withWindowFigures,
 } from './mains-results.js';
 import { windowSeries } from './window-series.js';
+
+/** rms wander of the phase above which the fundamental has no single frequency. */
+const WANDER_RAD = 0.02;
 
 /**
  * The results of one channel, put together from what was measured.
@@ -113,8 +118,13 @@ function fundamentalResult(
     frequencyHz,
     rms: first.rms,
     phaseDeg: first.phaseDeg,
-    frequencyUncertaintyHz: isSteady(measured) ? frequencyDeviationHz(orders, survey.context) : null,
+    frequencyUncertaintyHz: keepsFrequency(survey) ? frequencyDeviationHz(orders, survey.context) : null,
   };
+}
+
+/** Whether one frequency holds for the whole record, so that there is a value of which to state an uncertainty. */
+function keepsFrequency({ track, context: { sampleCount } }: ChannelSurvey): boolean {
+  return keepsPhase(track, 0, sampleCount, WANDER_RAD);
 }
 
 function isSteady({ survey: { track, context }, frequencyHz }: MeasuredChannel): boolean {
