@@ -52,22 +52,13 @@ export interface AnalysisSettings {
   accuracy?: ChannelAccuracy[] | undefined;
 }
 
-export interface ResolvedSettings {
-  profile: ProfileName;
-  nominalFrequencyHz: number | 'auto';
+/** Settings with their defaults filled in. */
+export interface ResolvedSettings extends Omit<AnalysisSettings, 'cyclesPerWindow'> {
   window: WindowName;
   maxOrder: number;
   thdMaxOrder: number;
   /** null: follows from the fundamental that is found. */
   cyclesPerWindow: number | null;
-  kaiserBeta?: number | undefined;
-  segmentLength?: number | undefined;
-  overlapPercent?: number | undefined;
-  bandHz?: { fromHz: number; toHz: number } | undefined;
-  pairs?: PowerPairSetting[] | undefined;
-  threePhase?: ThreePhaseSetting[] | undefined;
-  ratedCurrentA?: number | undefined;
-  accuracy?: ChannelAccuracy[] | undefined;
 }
 
 /** A channel without its samples. */

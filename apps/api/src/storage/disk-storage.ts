@@ -81,16 +81,6 @@ export class DiskStorage extends Storage {
     }
   }
 
-  async exists(key: string): Promise<boolean> {
-    try {
-      await this.size(key);
-      return true;
-    } catch (error) {
-      if (error instanceof StorageObjectMissing) return false;
-      throw error;
-    }
-  }
-
   async size(key: string): Promise<number> {
     return (await orMissing(key, stat(this.path(key)))).size;
   }

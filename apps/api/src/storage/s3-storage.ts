@@ -119,16 +119,6 @@ export class S3Storage extends Storage {
     return bytes;
   }
 
-  async exists(key: string): Promise<boolean> {
-    try {
-      await this.size(key);
-      return true;
-    } catch (error) {
-      if (error instanceof StorageObjectMissing) return false;
-      throw error;
-    }
-  }
-
   async size(key: string): Promise<number> {
     const command = new HeadObjectCommand({ Bucket: this.bucket, Key: checkedKey(key) });
     const { ContentLength } = await orMissing(key, this.client.send(command));

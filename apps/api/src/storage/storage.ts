@@ -51,7 +51,6 @@ export abstract class Storage {
   abstract putFile(key: string, localPath: string): Promise<void>;
   abstract read(key: string, range?: ByteRange): Promise<Readable>;
   abstract readBytes(key: string, range?: ByteRange): Promise<Uint8Array>;
-  abstract exists(key: string): Promise<boolean>;
   abstract size(key: string): Promise<number>;
   /** Deletes the object if it is there. */
   abstract delete(key: string): Promise<void>;
@@ -59,4 +58,14 @@ export abstract class Storage {
   abstract deleteAll(prefix: string): Promise<void>;
   /** Every object whose key begins with `prefix`, which ends in a slash, in no order. */
   abstract list(prefix: string): AsyncIterable<StoredObject>;
+
+  async exists(key: string): Promise<boolean> {
+    try {
+      await this.size(key);
+      return true;
+    } catch (error) {
+      if (error instanceof StorageObjectMissing) return false;
+      throw error;
+    }
+  }
 }

@@ -40,7 +40,7 @@ export function regressedFrequencyHz(track: FrequencyTrack, sampleRateHz: number
 }
 
 /** Slope of the least-squares line through points from up to but not including end. */
-function slopeOf(x: Float64Array, y: Float64Array, from: number, end: number): number {
+export function slopeOf(x: ArrayLike<number>, y: ArrayLike<number>, from: number, end: number): number {
   const count = end - from;
   let meanX = 0;
   let meanY = 0;

@@ -1,4 +1,5 @@
 import type { FrequencyTrack } from './frequency-track.js';
+import { slopeOf } from './local-frequency.js';
 
 /** Wander counts when it exceeds the scatter of neighbouring frames so many times. */
 const SCATTERS = 4;
@@ -36,13 +37,7 @@ export function keepsPhase(
 function fromLine(x: readonly number[], y: readonly number[]): number[] {
   const meanX = mean(x);
   const meanY = mean(y);
-  let product = 0;
-  let square = 0;
-  x.forEach((value, i) => {
-    product += (value - meanX) * (y[i]! - meanY);
-    square += (value - meanX) ** 2;
-  });
-  const slope = product / square;
+  const slope = slopeOf(x, y, 0, x.length);
   return y.map((value, i) => value - meanY - slope * (x[i]! - meanX));
 }
 
