@@ -116,8 +116,8 @@ describe('a worker beside the API', () => {
       status: 'failed',
       problem: { code: 'internal-error' },
     });
-    await worker.close();
     await queueEmpty();
+    await worker.close();
   });
 });
 
