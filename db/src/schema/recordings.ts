@@ -14,7 +14,7 @@ import {
   unique,
   uuid,
 } from 'drizzle-orm/pg-core';
-import { createdAt, moment } from './columns.js';
+import { createdAt, moment, updatedAt } from './columns.js';
 import { users } from './identity.js';
 import { projects } from './projects.js';
 
@@ -25,6 +25,27 @@ export const recordingStatus = pgEnum('recording_status', [
   'ready',
   'failed',
 ]);
+
+/** Import options of a project for the files they fit. */
+export const readingRules = pgTable(
+  'reading_rules',
+  {
+    id: uuid().primaryKey().defaultRandom(),
+    projectId: uuid()
+      .notNull()
+      .references(() => projects.id, { onDelete: 'cascade' }),
+    name: text().notNull(),
+    fileNamePattern: text().notNull(),
+    columnNames: jsonb().$type<string[]>(),
+    options: jsonb().$type<ImportOptions>().notNull(),
+    createdById: uuid()
+      .notNull()
+      .references(() => users.id),
+    createdAt,
+    updatedAt,
+  },
+  (table) => [unique('reading_rules_project_name_key').on(table.projectId, table.name)],
+);
 
 /** One uploaded time record. The source file lies in storage under its SHA-256 and never changes. */
 export const recordings = pgTable(
@@ -50,6 +71,9 @@ export const recordings = pgTable(
     fileSha256: text().notNull(),
     sourceKey: text().notNull(),
     importOptions: jsonb().$type<ImportOptions>().notNull().default({}),
+    readingRuleId: uuid().references(() => readingRules.id, { onDelete: 'set null' }),
+    /** Stays when the rule is deleted; null: the options came from a person or from the file alone. */
+    readingRuleName: text(),
     format: text(),
     metadata: jsonb().$type<Record<string, string>>().notNull().default({}),
     sampleRateHz: doublePrecision(),

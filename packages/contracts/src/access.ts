@@ -32,6 +32,8 @@ export const permissions = {
   'recording.upload': { allow: bench },
   'recording.update': { allow: bench },
   'recording.delete': { allow: bench },
+  'reading-rule.read': { allow: everyMember, administratorToo: true },
+  'reading-rule.write': { allow: bench },
   'analysis.read': { allow: everyMember, administratorToo: true },
   'analysis.run': { allow: bench },
   'note.read': { allow: everyMember, administratorToo: true },

@@ -25,6 +25,12 @@ const scaleLimit = 1e12;
 /** Gain or offset: large enough for any transducer, small enough that every figure stays finite. */
 const scaleSchema = z.number().min(-scaleLimit).max(scaleLimit);
 
+const positiveScaleSchema = z
+  .number()
+  .positive()
+  .min(1 / scaleLimit)
+  .max(scaleLimit);
+
 const columnSchema = z.union([z.number().int().min(0), z.string().min(1).max(200)]);
 
 /** How a file is to be read; what is absent is detected. */
@@ -47,14 +53,34 @@ export const importOptionsSchema = z.strictObject({
         unit: z.string().trim().max(20).optional(),
         gain: scaleSchema.optional().describe('Engineering value = gain x stored value + offset'),
         offset: scaleSchema.optional(),
+        fullScale: positiveScaleSchema
+          .optional()
+          .describe('Input in the unit at digital full scale (WAV: stored value 1); multiplies the gain'),
+        probeRatio: positiveScaleSchema
+          .optional()
+          .describe('100 for a probe or transformer of 100:1; multiplies the gain'),
+        inverted: z.boolean().optional().describe('Turns the sign of the gain'),
       }),
     )
     .min(1)
     .max(512)
     .optional()
     .describe('Columns to keep; absent: all value columns'),
+  missingValues: z
+    .enum(['keep', 'interpolate', 'refuse'])
+    .optional()
+    .describe('Cells without a number: kept as missing (default), bridged by a straight line, or no reading'),
+  unevenTime: z
+    .enum(['resample', 'take-as-even', 'refuse'])
+    .optional()
+    .describe(
+      'Time stamps that are not even: resampled (default), taken as even at the mean rate, or no reading',
+    ),
 });
 export type ImportOptions = z.infer<typeof importOptionsSchema>;
+
+/** A reading rule as a recording names it; `id` is null once the rule is deleted. */
+export const readingRuleRefSchema = z.object({ id: idSchema.nullable(), name: z.string() });
 
 /** Why a recording or an analysis failed, in words for the person who uploaded it. */
 export const readProblemSchema = z.object({
@@ -151,7 +177,8 @@ export const recordingSchema = z.object({
     .describe('Earlier recording of the project with the same bytes'),
   format: z.string().nullable(),
   metadata: z.record(z.string(), z.string()),
-  import: importOptionsSchema.describe('As given on upload'),
+  import: importOptionsSchema.describe('The options it was read with'),
+  readingRule: readingRuleRefSchema.nullable().describe('The reading rule the options came from'),
   sampleRateHz: z.number().nullable(),
   sampleCount: z.number().int().nullable(),
   durationS: z.number().nullable(),
@@ -173,6 +200,23 @@ export const recordingQuerySchema = pageQuerySchema.extend({
 });
 export type RecordingQuery = z.infer<typeof recordingQuerySchema>;
 
+/** A channel over the first cycles of a file, scaled as it would be read. */
+export const previewSignalSchema = z.object({
+  column: z.number().int(),
+  name: z.string(),
+  quantity: quantitySchema,
+  unit: z.string(),
+  startS: z.number(),
+  stepS: z.number().describe('Time between values'),
+  values: z
+    .array(z.number().nullable())
+    .describe('At most 2000 values of the beginning; null where one is missing'),
+  rms: z.number().nullable().describe('Over all of the beginning that was looked at'),
+  peak: z.number().nullable().describe('Largest magnitude, over the same'),
+  fundamentalHz: z.number().nullable().describe('null: none found, or too few cycles'),
+});
+export type PreviewSignal = z.infer<typeof previewSignalSchema>;
+
 /** Preview of a file's beginning under given options. */
 export const importPreviewSchema = z.object({
   format: z.enum(['csv', 'wav', 'npy', 'comtrade']).nullable(),
@@ -190,6 +234,12 @@ export const importPreviewSchema = z.object({
   confident: z.boolean(),
   doubts: z.array(z.string()),
   problem: readProblemSchema.nullable(),
+  clockColumns: z.array(z.number().int()).describe('Columns that tell the time, the time column included'),
+  signals: z.array(previewSignalSchema).describe('At most eight channels; empty where nothing can be read'),
+  readingRule: readingRuleRefSchema.nullable().describe('The reading rule that fits the file'),
+  options: importOptionsSchema.describe(
+    'The options of this preview: as given, else those of the reading rule',
+  ),
 });
 export type ImportPreview = z.infer<typeof importPreviewSchema>;
 

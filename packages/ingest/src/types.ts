@@ -22,6 +22,12 @@ export interface ChannelOptions {
   unit?: string;
   gain?: number;
   offset?: number;
+  /** Input in the unit at digital full scale (raw value 1); multiplies the gain. */
+  fullScale?: number;
+  /** 100 for a probe or transformer of 100:1; multiplies the gain. */
+  probeRatio?: number;
+  /** Turns the sign of the gain. */
+  inverted?: boolean;
 }
 
 /** What the user states about a file; everything absent is detected from its content. */
@@ -35,6 +41,10 @@ export interface ImportOptions {
   timeColumn?: number | string | null;
   timeUnit?: TimeUnit;
   channels?: ChannelOptions[];
+  /** Cells without a number: kept as missing (default), bridged by a straight line, or refused. */
+  missingValues?: 'keep' | 'interpolate' | 'refuse';
+  /** Time stamps that are not even: resampled (default), taken as even at the mean rate, or refused. */
+  unevenTime?: 'resample' | 'take-as-even' | 'refuse';
 }
 
 /** A channel of the file. Engineering value = raw value x `gain` + `offset`, in `unit`. */

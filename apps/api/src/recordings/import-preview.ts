@@ -28,5 +28,9 @@ export function importPreview(head: Uint8Array, fields: PreviewFields): ImportPr
     confident: layout.confident && needs.length === 0,
     doubts: layout.doubts,
     problem,
+    clockColumns: layout.timeColumn == null ? [] : [layout.timeColumn],
+    signals: [],
+    readingRule: null,
+    options: fields.import ?? {},
   };
 }

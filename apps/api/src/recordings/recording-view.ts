@@ -33,6 +33,7 @@ export function toRecording(
     format: row.format,
     metadata: row.metadata,
     import: row.importOptions,
+    readingRule: row.readingRuleName === null ? null : { id: row.readingRuleId, name: row.readingRuleName },
     sampleRateHz,
     sampleCount,
     durationS: sampleRateHz === null || sampleCount === null ? null : sampleCount / sampleRateHz,
