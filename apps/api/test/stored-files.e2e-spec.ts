@@ -9,35 +9,10 @@ import { AppConfig } from '../dist/config/app-config.js';
 import { Storage } from '../dist/storage/storage.js';
 import { ClearStorageHandler } from '../dist/worker/clear-storage.handler.js';
 import { csvOf, squareThdFPercent, squareWave } from './support/captures.js';
-import { startFakeS3 } from './support/fake-s3.js';
 import { settled, upload } from './support/recordings.js';
+import { stores, type Store } from './support/stores.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
 import { startWorker } from './support/workers.js';
-
-interface Store {
-  environment: Record<string, string>;
-  stop(): Promise<void>;
-}
-
-const stores: [string, () => Promise<Store>][] = [
-  ['disk', () => Promise.resolve({ environment: {}, stop: () => Promise.resolve() })],
-  [
-    's3',
-    async () => {
-      const { settings, stop } = await startFakeS3();
-      const environment = {
-        STORAGE: 's3',
-        S3_ENDPOINT: settings.endpoint,
-        S3_BUCKET: settings.bucket,
-        S3_REGION: settings.region,
-        S3_ACCESS_KEY_ID: settings.accessKeyId,
-        S3_SECRET_ACCESS_KEY: settings.secretAccessKey,
-        S3_FORCE_PATH_STYLE: 'on',
-      };
-      return { environment, stop };
-    },
-  ],
-];
 
 const dayMs = 24 * 3600 * 1000;
 const sampleRateHz = 10_000;

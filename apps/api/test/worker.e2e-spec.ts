@@ -1,7 +1,6 @@
 import type { Analysis, Recording } from '@overtally/contracts';
 import { sql } from 'drizzle-orm';
 import { randomUUID } from 'node:crypto';
-import { once } from 'node:events';
 import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { analyseRecordingJob } from '../dist/jobs/definitions/analyse-recording.job.js';
@@ -10,7 +9,7 @@ import { JobsService } from '../dist/jobs/jobs.service.js';
 import { csvOf, repeated, squareThdFPercent, squareWave, wavOf } from './support/captures.js';
 import { eventually, settled, upload } from './support/recordings.js';
 import { startTestApp, type TestApp } from './support/test-app.js';
-import { spawnWorker, startWorker } from './support/workers.js';
+import { kill, spawnWorker, startWorker } from './support/workers.js';
 
 const sampleRateHz = 10_000;
 const short = csvOf(squareWave(sampleRateHz, 5_000), sampleRateHz);
@@ -99,8 +98,7 @@ describe('a worker beside the API', () => {
     const { id } = await upload(technician, test.project.id, long, 'killed.wav');
     const doomed = spawnWorker(test);
     await inState(id, 'reading', 'analysing');
-    doomed.kill('SIGKILL');
-    await once(doomed, 'exit');
+    await kill(doomed);
     const heir = await startWorker(test);
     await expectGoodFigures(id);
     await heir.close();
