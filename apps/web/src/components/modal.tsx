@@ -7,7 +7,7 @@ interface ModalProps {
   title: string;
   children: ReactNode;
   footer?: ReactNode;
-  size?: 'sm' | 'md' | 'lg' | 'xl';
+  size?: 'sm' | 'md' | 'lg' | 'xl' | 'wide';
   role?: 'dialog' | 'alertdialog';
   initialFocus?: () => HTMLElement | null;
 }
@@ -27,7 +27,7 @@ export function Modal({
     <Dialog.Root
       open={open}
       onOpenChange={(details) => (details.open ? undefined : onClose())}
-      size={size}
+      size={size === 'wide' ? 'xl' : size}
       role={role ?? 'dialog'}
       initialFocusEl={initialFocus}
       lazyMount
@@ -36,7 +36,7 @@ export function Modal({
       <Portal>
         <Dialog.Backdrop />
         <Dialog.Positioner>
-          <Dialog.Content>
+          <Dialog.Content maxW={size === 'wide' ? '6xl' : undefined}>
             <Dialog.Header>
               <Dialog.Title>{title}</Dialog.Title>
             </Dialog.Header>

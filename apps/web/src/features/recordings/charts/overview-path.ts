@@ -37,7 +37,8 @@ export function overviewPath(
     .join('');
 }
 
-function runs(values: readonly (number | null)[]): number[][] {
+/** Indices of the values that are there, one list for each run without a missing one. */
+export function runs(values: readonly (number | null)[]): number[][] {
   const found: number[][] = [];
   values.forEach((value, index) => {
     if (value === null) return;

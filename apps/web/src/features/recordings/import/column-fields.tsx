@@ -1,115 +1,142 @@
-import { Box, Heading, Input, Table, Text } from '@chakra-ui/react';
-import { quantitySchema, type ImportPreview } from '@overtally/contracts';
-import { useId } from 'react';
-import { SelectInput } from '../../../components/form-field.js';
-import { quantityWords } from '../quantity-words.js';
-import { untouchedColumn, valueColumns, type ColumnDraft, type ImportDraft } from './import-draft.js';
+import { Box, Button, Heading, Table, Text } from '@chakra-ui/react';
+import type { ImportPreview, PreviewSignal } from '@overtally/contracts';
+import { useId, useState } from 'react';
+import { scaledLike, sharesUnit, unitOf, type ColumnDraft } from './column-draft.js';
+import { ColumnRow, TimeRow } from './column-row.js';
+import {
+  columnKey,
+  fieldsOf,
+  keptColumns,
+  timeIndex,
+  type ImportDraft,
+  type ImportFaults,
+} from './import-draft.js';
 
 interface ColumnFieldsProps {
   draft: ImportDraft;
-  fault: string | undefined;
+  faults: ImportFaults;
   preview: ImportPreview;
+  /** Channels as they would be read: they know what a unit stands for. */
+  signals: readonly PreviewSignal[];
   onChange: (columns: ImportDraft['columns']) => void;
 }
 
-const quantityOptions = quantitySchema.options.map((value) => ({ value, label: quantityWords[value] }));
+/** Rows shown at first; a table of several hundred columns opens on request. */
+const rowsAtFirst = 16;
 
 /** Which columns become channels, and how their values are scaled. */
-export function ColumnFields({ draft, fault, preview, onChange }: ColumnFieldsProps) {
+export function ColumnFields({ draft, faults, preview, signals, onChange }: ColumnFieldsProps) {
   const id = useId();
-  const columns = valueColumns(draft, preview);
+  const [showsAll, setShowsAll] = useState(false);
+  const { columns } = preview;
   if (columns.length === 0) return null;
+  const time = timeIndex(draft, preview);
+  const kept = keptColumns(draft, preview);
+  const hasFullScale =
+    preview.format === 'wav' || kept.some((column) => column.draft.fullScale.trim() !== '');
+  const set = (changes: readonly (readonly [number, ColumnDraft])[]) =>
+    onChange({
+      ...draft.columns,
+      ...Object.fromEntries(changes.map(([index, fields]) => [columnKey(index), fields])),
+    });
+  const shown = showsAll ? columns : columns.slice(0, rowsAtFirst);
+  const headings = [
+    'Read',
+    'Name',
+    'Quantity',
+    'Unit',
+    'Probe ratio',
+    ...(hasFullScale ? ['Input at full scale'] : []),
+    'Gain',
+    'Offset',
+    'Inverted',
+    '',
+  ];
   return (
     <Box>
       <Heading as="h3" id={id} fontSize="sm" mb="1">
         Channels
       </Heading>
       <Text color="inkSoft" fontSize="13px" mb="1">
-        Value = gain × number in the file + offset: a probe ratio, a shunt, an inverted channel (gain −1).
+        Value = sign × probe ratio × {hasFullScale ? 'full scale × ' : ''}gain × number in the file + offset
       </Text>
-      {fault ? (
+      {kept.length === 0 ? (
         <Text role="alert" color="over" fontSize="13px">
-          {fault}
+          Read at least one column.
         </Text>
       ) : null}
-      <Box role="region" aria-labelledby={id} tabIndex={0} overflow="auto" maxH="280px">
-        <Table.Root size="sm">
+      <Box role="region" aria-labelledby={id} tabIndex={0} overflow="auto" maxH="340px" mx="-3">
+        <Table.Root size="sm" css={stackedWhereNarrow}>
           <Table.Header>
             <Table.Row>
-              {['Read', 'Column', 'Name', 'Quantity', 'Unit', 'Gain', 'Offset'].map((heading) => (
-                <Table.ColumnHeader key={heading} scope="col">
-                  {heading}
+              {headings.map((heading) => (
+                <Table.ColumnHeader key={heading} scope="col" px="1.5">
+                  {heading || <Box srOnly>Apply to others</Box>}
                 </Table.ColumnHeader>
               ))}
             </Table.Row>
           </Table.Header>
           <Table.Body>
-            {columns.map((column) => (
-              <ColumnRow
-                key={column.index}
-                column={column}
-                draft={draft.columns[column.index] ?? untouchedColumn}
-                onChange={(change) => onChange({ ...draft.columns, [column.index]: change })}
-              />
-            ))}
+            {shown.map((column) => {
+              const { index } = column;
+              if (index === time) return <TimeRow key={index} column={column} span={headings.length - 2} />;
+              const fields = fieldsOf(draft, column, preview);
+              const alike = kept.filter(
+                (other) => other.column.index !== index && sharesUnit({ column, draft: fields }, other),
+              );
+              return (
+                <ColumnRow
+                  key={index}
+                  column={column}
+                  isClock={preview.clockColumns.includes(index)}
+                  hasFullScale={hasFullScale}
+                  fields={fields}
+                  faults={faults.columns[columnKey(index)] ?? {}}
+                  quantity={signals.find((signal) => signal.column === index)?.quantity ?? column.quantity}
+                  alike={alike.length}
+                  unit={unitOf(column, fields)}
+                  onChange={(change) => set([[index, change]])}
+                  onApplyToAlike={() =>
+                    set(
+                      [{ column, draft: fields }, ...alike].map(
+                        (other) => [other.column.index, scaledLike(other.draft, fields)] as const,
+                      ),
+                    )
+                  }
+                />
+              );
+            })}
           </Table.Body>
         </Table.Root>
+        {shown.length < columns.length ? (
+          <Button size="xs" m="3" onClick={() => setShowsAll(true)}>
+            Show the other {columns.length - shown.length} columns
+          </Button>
+        ) : null}
       </Box>
     </Box>
   );
 }
 
-interface ColumnRowProps {
-  column: ImportPreview['columns'][number];
-  draft: ColumnDraft;
-  onChange: (draft: ColumnDraft) => void;
-}
-
-function ColumnRow({ column, draft, onChange }: ColumnRowProps) {
-  const field = (
-    key: 'name' | 'unit' | 'gain' | 'offset',
-    label: string,
-    placeholder: string,
-    width: string,
-  ) => (
-    <Table.Cell>
-      <Input
-        aria-label={`${label} of column ${column.name}`}
-        placeholder={placeholder}
-        width={width}
-        disabled={!draft.keep}
-        value={draft[key]}
-        onChange={(event) => onChange({ ...draft, [key]: event.target.value })}
-      />
-    </Table.Cell>
-  );
-  return (
-    <Table.Row>
-      <Table.Cell>
-        <input
-          type="checkbox"
-          aria-label={`Read column ${column.name}`}
-          checked={draft.keep}
-          onChange={(event) => onChange({ ...draft, keep: event.target.checked })}
-        />
-      </Table.Cell>
-      <Table.Cell whiteSpace="nowrap" color="inkSoft">
-        {column.index + 1}
-      </Table.Cell>
-      {field('name', 'Name', column.name, '130px')}
-      <Table.Cell>
-        <SelectInput
-          aria-label={`Quantity of column ${column.name}`}
-          width="140px"
-          disabled={!draft.keep}
-          options={quantityOptions}
-          value={draft.quantity || column.quantity}
-          onChange={(event) => onChange({ ...draft, quantity: quantitySchema.parse(event.target.value) })}
-        />
-      </Table.Cell>
-      {field('unit', 'Unit', column.unit, '76px')}
-      {field('gain', 'Gain', 'detected', '96px')}
-      {field('offset', 'Offset', '0', '96px')}
-    </Table.Row>
-  );
-}
+/** On narrow screens each column is a block, with the captions over its fields. */
+const stackedWhereNarrow = {
+  '@media (max-width: 47.99em)': {
+    '& thead': { position: 'absolute', width: '1px', height: '1px', overflow: 'hidden', opacity: 0 },
+    '& tbody tr': {
+      display: 'grid',
+      gridTemplateColumns: '1fr 1fr',
+      borderBottomWidth: '1px',
+      borderColor: 'rule',
+      paddingBlock: '2',
+    },
+    '& tbody td': { borderBottomWidth: '0', paddingBlock: '1' },
+    '& tbody td[data-caption]::before': {
+      content: 'attr(data-caption)',
+      display: 'block',
+      fontSize: 'xs',
+      color: 'inkSoft',
+    },
+    '& tbody td[data-whole]': { gridColumn: '1 / -1' },
+    '& tbody td[data-whole]:empty': { display: 'none' },
+  },
+};

@@ -2,25 +2,16 @@ import { Grid, Input } from '@chakra-ui/react';
 import type { ImportPreview } from '@overtally/contracts';
 import { FormField, SelectInput } from '../../../components/form-field.js';
 import { formatSi } from '../../../lib/format.js';
-import type { faultsOf, ImportDraft } from './import-draft.js';
+import { decimalWords, delimiterWords, timeUnitWords } from '../rules/options-words.js';
+import { columnKey, timeIndex, type ImportDraft, type ImportFaults } from './import-draft.js';
 
 interface DialectFieldsProps {
   draft: ImportDraft;
-  faults: ReturnType<typeof faultsOf>;
+  faults: ImportFaults;
   preview: ImportPreview | null;
   needsSampleRate: boolean;
   onChange: (change: Partial<ImportDraft>) => void;
 }
-
-const delimiters: Record<string, string> = {
-  ',': 'comma',
-  ';': 'semicolon',
-  '\t': 'tab',
-  ' ': 'space',
-  '|': 'bar',
-};
-const decimals: Record<string, string> = { '.': 'point', ',': 'comma' };
-const timeUnits: Record<string, string> = { s: 's', ms: 'ms', us: 'µs', ns: 'ns' };
 
 const detected = (word: string | undefined) => (word ? `as detected (${word})` : 'as detected');
 
@@ -61,29 +52,32 @@ export function DialectFields({ draft, faults, preview, needsSampleRate, onChang
               options={[
                 { value: '', label: detected(timeName ?? (preview ? 'none' : undefined)) },
                 { value: 'none', label: 'none' },
-                ...(preview?.columns ?? []).map(({ index, name }) => ({ value: String(index), label: name })),
+                ...(preview?.columns ?? []).map(({ index, name }) => ({
+                  value: columnKey(index),
+                  label: name,
+                })),
               ]}
-              value={draft.timeColumn}
+              value={timeChoice(draft, preview)}
               onChange={(event) => onChange({ timeColumn: event.target.value })}
             />
           </FormField>
           <FormField label="Time unit">
             <SelectInput
-              options={choices(timeUnits, preview?.timeUnit)}
+              options={choices(timeUnitWords, preview?.timeUnit)}
               value={draft.timeUnit}
               onChange={(event) => onChange({ timeUnit: event.target.value })}
             />
           </FormField>
           <FormField label="Delimiter">
             <SelectInput
-              options={choices(delimiters, preview?.delimiter)}
+              options={choices(delimiterWords, preview?.delimiter)}
               value={draft.delimiter}
               onChange={(event) => onChange({ delimiter: event.target.value })}
             />
           </FormField>
           <FormField label="Decimal mark">
             <SelectInput
-              options={choices(decimals, preview?.decimal)}
+              options={choices(decimalWords, preview?.decimal)}
               value={draft.decimal}
               onChange={(event) => onChange({ decimal: event.target.value })}
             />
@@ -100,4 +94,11 @@ export function DialectFields({ draft, faults, preview, needsSampleRate, onChang
       ) : null}
     </Grid>
   );
+}
+
+/** Options may name the time column by its name; the list has it by its place. */
+function timeChoice(draft: ImportDraft, preview: ImportPreview | null): string {
+  if (!draft.timeColumn.startsWith('=') || !preview) return draft.timeColumn;
+  const index = timeIndex(draft, preview);
+  return index === null ? '' : columnKey(index);
 }

@@ -1,22 +1,22 @@
+import type { ImportOptions } from '@overtally/contracts';
 import { keepPreviousData, skipToken, useQuery } from '@tanstack/react-query';
-import { useEffect, useState } from 'react';
 import { previewImport } from '../api/preview-import.js';
-import { faultsOf, optionsOf, type ImportDraft } from './import-draft.js';
 
-/** What the form's settings give, asked anew a moment after each change. */
+/** The beginning of a file, and the size of the whole. */
+export interface PreviewSource {
+  file: File;
+  sizeBytes: number;
+}
+
+/**
+ * What reading a file under `options` gives; null: by the reading rule that fits it. The preview before stays while
+ * another one is fetched.
+ */
 export function useImportPreview(
   projectId: string,
-  source: { file: File; sizeBytes: number } | undefined,
-  draft: ImportDraft,
+  source: PreviewSource | undefined,
+  options: ImportOptions | null,
 ) {
-  const [asked, setAsked] = useState(draft);
-  useEffect(() => {
-    if (Object.keys(faultsOf(draft)).length > 0) return;
-    const timer = setTimeout(() => setAsked(draft), 300);
-    return () => clearTimeout(timer);
-  }, [draft]);
-  // Columns are left out: they rename and scale, and every column has to stay in view to be kept or not.
-  const options = optionsOf({ ...asked, columns: {} }, null);
   return useQuery({
     queryKey: [
       'import-preview',
