@@ -1,3 +1,4 @@
+export { joinComtradePair } from './comtrade/pair.js';
 export { decodeNpyHeader, encodeNpyHeader } from './npy-header.js';
 export { previewRecording } from './preview-recording.js';
 export { readRecording } from './read-recording.js';

@@ -1,6 +1,6 @@
 /**
  * Which part of the product may import what. Arrows go one way:
- * web -> contracts, dsp, limits; api -> contracts, db, ingest, dsp, limits; cases -> dsp, ingest; packages never
+ * web -> contracts, dsp, limits, the joining of COMTRADE pairs; api -> contracts, db, ingest, dsp, limits; cases -> dsp, ingest; packages never
  * import apps.
  */
 import { readdirSync } from 'node:fs';
@@ -29,7 +29,11 @@ const rooms = [
   { folder: 'packages/cases', ours: ['dsp', 'ingest'] },
   { folder: 'db', ours: ['contracts'] },
   { folder: 'fixtures', ours: [] },
-  { folder: 'apps/web', ours: ['contracts', 'dsp', 'limits'], forbidden: ['pg', 'drizzle-orm'] },
+  {
+    folder: 'apps/web',
+    ours: ['contracts', 'dsp', 'limits', 'ingest/comtrade-pair'],
+    forbidden: ['pg', 'drizzle-orm'],
+  },
   { folder: 'apps/api', ours: ['contracts', 'db', 'ingest', 'dsp', 'limits'] },
 ];
 

@@ -77,6 +77,7 @@ describe('what may be imported passes', () => {
     ['packages/contracts/src/x.ts', "import { z } from 'zod';"],
     ['packages/cases/src/x.ts', "import { readRecording } from '@overtally/ingest';"],
     ['apps/web/src/x.ts', "import { predict } from '@overtally/dsp';"],
+    ['apps/web/src/x.ts', "import { joinComtradePair } from '@overtally/ingest/comtrade-pair';"],
     ['apps/api/src/demo/x.ts', "import { demoPeople } from '@overtally/fixtures';"],
     [`apps/web/src/features/${feature}/x.ts`, `import '${moduleOf(feature)}';`],
   ])('%s: %s', async (file, code) => {

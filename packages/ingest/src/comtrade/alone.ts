@@ -3,7 +3,7 @@ import { refuse } from '../refusal.js';
 import type { ImportOptions } from '../types.js';
 
 const CURE =
-  'Combine both into one .cff file: a line "--- file type: CFG ---", the whole .cfg, a line "--- file type: DAT BINARY: n ---" with n the bytes of the .dat (or "--- file type: DAT ASCII ---" when the .dat is text), then the whole .dat as it stands. Many programs export this single file themselves (revision 2013).';
+  'Upload the .cfg and the .dat together, by the same name; they are joined to one file. Or combine them into one .cff file yourself: a line "--- file type: CFG ---", the whole .cfg, a line "--- file type: DAT BINARY: n ---" with n the bytes of the .dat (or "--- file type: DAT ASCII ---" when the .dat is text), then the whole .dat as it stands.';
 
 /** The second line of a configuration: the count of channels, of analog and of status ones. */
 function isConfiguration(lines: string[]): boolean {

@@ -41,8 +41,12 @@ interface Walk {
 
 function keepLine(walk: Walk, text: string, number: number): void {
   if (walk.section === 'CFG') {
-    if (text.trim() !== '')
-      walk.config.push({ fields: text.split(',').map((field) => field.trim()), number });
+    // A control character marks the end of a file on old systems.
+    const fields = text
+      .replace('\u001a', '')
+      .split(',')
+      .map((field) => field.trim());
+    if (fields.some((field) => field !== '')) walk.config.push({ fields, number });
   } else if ((walk.section === 'HDR' || walk.section === 'INF') && text.trim() !== '') {
     walk.texts[walk.section].push(text.trim());
   }
