@@ -1,6 +1,6 @@
 /**
  * Which part of the product may import what. Arrows go one way:
- * web -> contracts, dsp, limits, the joining of COMTRADE pairs; api -> contracts, db, ingest, dsp, limits; cases -> dsp, ingest; packages never
+ * web -> contracts, dsp, limits, the joining of COMTRADE pairs; api -> contracts, db, ingest, dsp, limits; cases, bench -> dsp, ingest; packages never
  * import apps.
  */
 import { readdirSync } from 'node:fs';

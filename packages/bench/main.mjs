@@ -1,6 +1,6 @@
 /**
  * `pnpm bench [NAME …]`: the engine against reference.py, in turns. One JSON line for each case and number of threads; times
- * in milliseconds are medians over rounds, the ratio is the median of the ratios of the rounds. Needs a build.
+ * in milliseconds are medians over rounds, the ratio is the median of the ratios of the rounds. Needs a build of dsp and ingest.
  */
 import { execFileSync } from 'node:child_process';
 import { join } from 'node:path';
@@ -9,7 +9,7 @@ import { benchCases } from './cases.mjs';
 import { ensureData } from './data.mjs';
 import { findPython, pythonVersions, runPython } from './python.mjs';
 
-const FOLDER = fileURLToPath(new URL('../../../.data/bench', import.meta.url));
+const FOLDER = fileURLToPath(new URL('../../.data/bench', import.meta.url));
 const OURS = fileURLToPath(new URL('ours.mjs', import.meta.url));
 const ROUNDS = 3;
 const REPEATS = 5;
