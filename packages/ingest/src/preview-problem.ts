@@ -6,10 +6,13 @@ export const PREVIEW_ROWS = 20;
 /** Lines that a preview shows. */
 export const PREVIEW_LINES = 30;
 
+/** A preview without the samples of the beginning. */
+export type PreviewHead = Omit<PreviewOutcome, 'signals' | 'headSamples'>;
+
 /** A preview of what cannot be read as it is. */
-export function withProblem(format: RecordFormat, lines: string[], problem: Problem): PreviewOutcome {
+export function withProblem(format: RecordFormat, lines: string[], problem: Problem): PreviewHead {
   const layout = { format, confident: false, doubts: [problem.message] };
-  return { layout, lines, rows: [], sampleRateHz: null, problem, needs: [] };
+  return { layout, lines, rows: [], sampleRateHz: null, problem, needs: [], clockColumns: [] };
 }
 
 /** Refuses a preview whose bytes end before the samples begin. `what` names the file, such as "the WAV file". */

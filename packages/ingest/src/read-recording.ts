@@ -7,7 +7,7 @@ import { refuseKnownBinary } from './known-binary.js';
 import { isNpy } from './npy/header.js';
 import { readNpy } from './npy/read-npy.js';
 import { refuse, Refusal } from './refusal.js';
-import type { ReadArguments, ReadOutcome, ReadSuccess } from './types.js';
+import type { ReadArguments, ReadOutcome, ReadSuccess, RecordingSource } from './types.js';
 import { isWav } from './wav/header.js';
 import { readWav } from './wav/read-wav.js';
 
@@ -44,12 +44,10 @@ async function read(source: ByteSource, args: ReadArguments): Promise<ReadSucces
  * intervals are even, that of the regular intervals. Time running backwards, and one time stamp with different values,
  * are refused; exact copies of a row are dropped; missing cells are NaN and counted.
  */
-export async function readRecording(
-  source: AsyncIterable<Uint8Array>,
-  args: ReadArguments,
-): Promise<ReadOutcome> {
+export async function readRecording(source: RecordingSource, args: ReadArguments): Promise<ReadOutcome> {
   args.signal?.throwIfAborted();
-  const bytes = new ByteSource(source, args.onProgress, args.signal);
+  const opened = typeof source === 'function' ? await source() : source;
+  const bytes = new ByteSource(opened, args.onProgress, args.signal);
   try {
     return await read(bytes, args);
   } catch (error) {

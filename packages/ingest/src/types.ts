@@ -152,6 +152,10 @@ export interface ReadSuccess {
 
 export type ReadOutcome = ReadSuccess | { ok: false; problem: Problem };
 
+/** Bytes of a file, or what opens them anew each time it is called. */
+export type RecordingSource =
+  AsyncIterable<Uint8Array> | (() => AsyncIterable<Uint8Array> | Promise<AsyncIterable<Uint8Array>>);
+
 export interface ReadArguments {
   fileName: string;
   sizeBytes?: number;
@@ -167,6 +171,29 @@ export interface PreviewArguments {
   options?: ImportOptions;
 }
 
+/** The beginning of a channel as it would be read: scaled, missing values and uneven time stamps treated by the options. */
+export interface PreviewSignal {
+  /** As in `ReadChannel`. */
+  column: number;
+  name: string;
+  quantity: Quantity;
+  unit: string;
+  /** Time of the first value in seconds, by the time column where there is one, else 0. */
+  startS: number;
+  /** Time between values in seconds. */
+  stepS: number;
+  /**
+   * At most 2000 values in `unit`, null where one is missing: successive samples where that many reach over 0.08 s (four
+   * cycles at 50 Hz), else lowest and highest value of equal bins in the order they occur, so that no peak is lost.
+   */
+  values: (number | null)[];
+}
+
+/** All samples of a channel that the bytes at hand hold, scaled, at the sample rate of the preview; NaN: missing. */
+export interface HeadSamples extends Pick<PreviewSignal, 'column' | 'name' | 'quantity' | 'unit'> {
+  samples: Float64Array;
+}
+
 /** What the beginning of a file tells about it. */
 export interface PreviewOutcome {
   layout: DetectedLayout;
@@ -178,4 +205,10 @@ export interface PreviewOutcome {
   problem: Problem | null;
   /** Names of the import options the user must give, such as `sampleRateHz`. */
   needs: string[];
+  /** Columns that tell the time and are no channels: the time column and clocks beside it. */
+  clockColumns: number[];
+  /** The first eight channels that would be read; empty where a problem stands in the way. */
+  signals: PreviewSignal[];
+  /** The same channels at full rate, for figures such as rms and fundamental. */
+  headSamples: HeadSamples[];
 }

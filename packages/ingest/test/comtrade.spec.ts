@@ -98,7 +98,10 @@ describe('COMTRADE records in one file', () => {
     expect(reading.sampleRateHz / 4800).toBeCloseTo(1, 5);
     expect(codes(reading)).not.toContain('uneven-sampling');
     const size = fixture('comtrade-by-stamps.cff').length;
-    const shown = previewRecording(fixture('comtrade-by-stamps.cff'), { fileName: 'a.cff', sizeBytes: size });
+    const shown = await previewRecording(fixture('comtrade-by-stamps.cff'), {
+      fileName: 'a.cff',
+      sizeBytes: size,
+    });
     expect((shown.sampleRateHz as number) / 4800).toBeCloseTo(1, 5);
   });
 
@@ -223,7 +226,7 @@ describe('COMTRADE records in one file', () => {
 
   it('shows the beginning, as the reader understands it', async () => {
     const bytes = fixture('comtrade-ascii.cff');
-    const shown = previewRecording(bytes, { fileName: 'a.cff', sizeBytes: bytes.length });
+    const shown = await previewRecording(bytes, { fileName: 'a.cff', sizeBytes: bytes.length });
     expect(shown).toMatchObject({ sampleRateHz: 4800, problem: null, needs: [] });
     expect(shown.lines[1]).toBe('Substation 7,Recorder 3,2013');
     expect(shown.rows).toHaveLength(20);
@@ -249,7 +252,9 @@ describe('one half of a COMTRADE record of two files', () => {
     expect(problem.code).toBe('comtrade-half');
     expect(problem.cure).toContain('--- file type: CFG ---');
     const bytes = typeof content === 'string' ? new TextEncoder().encode(content) : content;
-    expect(previewRecording(bytes, { fileName: name, sizeBytes: bytes.length }).problem).toEqual(problem);
+    expect((await previewRecording(bytes, { fileName: name, sizeBytes: bytes.length })).problem).toEqual(
+      problem,
+    );
   });
 
   it('is no matter for tables that are named .dat', async () => {

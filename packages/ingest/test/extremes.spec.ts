@@ -44,7 +44,7 @@ describe('sample rates no capture has', () => {
     const rows = Array.from({ length: 20 }, (_, n) => `${n * Number(step)},${n}`);
     const file = ['t (s),u (V)', ...rows, ''].join('\n');
     expect((await readBad(file)).cure).toMatch(/unit of the time column/);
-    expect(previewRecording(text(file), { fileName: 'a.csv' }).sampleRateHz).toBeNull();
+    expect((await previewRecording(text(file), { fileName: 'a.csv' })).sampleRateHz).toBeNull();
   });
 });
 

@@ -64,7 +64,7 @@ describe('damaged files', { timeout: 30_000 }, () => {
           const gaps = samples.map((values) => values.filter((value) => !Number.isFinite(value)).length);
           expect(gaps).toEqual(outcome.missingValues);
         } else expect(outcome.problem.message.length * outcome.problem.cure.length).toBeGreaterThan(0);
-        const preview = previewRecording(damaged, { fileName: name, sizeBytes: damaged.length });
+        const preview = await previewRecording(damaged, { fileName: name, sizeBytes: damaged.length });
         expect(preview.layout.doubts).toBeInstanceOf(Array);
       }),
       { seed: 20240917, numRuns: 50 },

@@ -78,7 +78,7 @@ describe('.npy files', () => {
 
   it('asks for the sample rate', async () => {
     expect((await readBad(fixture('npy-f8-little.npy'))).code).toBe('needs-sample-rate');
-    const shown = previewRecording(fixture('npy-f8-little.npy'), { fileName: 'a.npy' });
+    const shown = await previewRecording(fixture('npy-f8-little.npy'), { fileName: 'a.npy' });
     expect(shown).toMatchObject({ needs: ['sampleRateHz'], problem: { code: 'needs-sample-rate' } });
     expect(shown.rows[1]?.[0]).toBe(cases.find(({ file }) => file === 'npy-f8-little.npy')?.channels[0]?.[1]);
   });
@@ -94,7 +94,9 @@ describe('.npy files', () => {
       message: expect.stringMatching(words) as string,
     });
     const size = fixture(name).length;
-    expect(previewRecording(fixture(name), { fileName: name, sizeBytes: size }).problem).toEqual(problem);
+    expect((await previewRecording(fixture(name), { fileName: name, sizeBytes: size })).problem).toEqual(
+      problem,
+    );
   });
 
   it.each([

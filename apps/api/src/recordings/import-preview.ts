@@ -3,8 +3,8 @@ import { previewRecording } from '@overtally/ingest';
 import type { PreviewFields } from './dto/upload.dto.js';
 
 /** What the reader makes of the beginning of a file under the given options. */
-export function importPreview(head: Uint8Array, fields: PreviewFields): ImportPreview {
-  const { layout, lines, rows, sampleRateHz, problem, needs } = previewRecording(head, {
+export async function importPreview(head: Uint8Array, fields: PreviewFields): Promise<ImportPreview> {
+  const { layout, lines, rows, sampleRateHz, problem, needs, clockColumns } = await previewRecording(head, {
     fileName: fields.fileName,
     sizeBytes: fields.sizeBytes,
     options: fields.import ?? {},
@@ -28,7 +28,7 @@ export function importPreview(head: Uint8Array, fields: PreviewFields): ImportPr
     confident: layout.confident && needs.length === 0,
     doubts: layout.doubts,
     problem,
-    clockColumns: layout.timeColumn == null ? [] : [layout.timeColumn],
+    clockColumns,
     signals: [],
     readingRule: null,
     options: fields.import ?? {},

@@ -1,7 +1,13 @@
 import { splitLines } from '../csv/lines.js';
-import { PREVIEW_LINES, PREVIEW_ROWS, refuseTooShort, withProblem } from '../preview-problem.js';
+import {
+  PREVIEW_LINES,
+  PREVIEW_ROWS,
+  refuseTooShort,
+  withProblem,
+  type PreviewHead,
+} from '../preview-problem.js';
 import { catchRefusal } from '../refusal.js';
-import type { PreviewArguments, PreviewOutcome, Problem } from '../types.js';
+import type { PreviewArguments, Problem } from '../types.js';
 import { type CffHead, readCffHead } from './cff.js';
 import { comtradeChannels, describeComtrade, recordReader } from './layout.js';
 import { WINDOW_BYTES } from './records.js';
@@ -28,7 +34,7 @@ function firstRecords(head: Uint8Array, cff: CffHead, complete: boolean): FirstR
 }
 
 /** Says how a single-file COMTRADE record would be read, from its beginning. */
-export function previewComtrade(head: Uint8Array, complete: boolean, args: PreviewArguments): PreviewOutcome {
+export function previewComtrade(head: Uint8Array, complete: boolean, args: PreviewArguments): PreviewHead {
   const options = args.options ?? {};
   return catchRefusal(
     () => {
@@ -53,6 +59,7 @@ export function previewComtrade(head: Uint8Array, complete: boolean, args: Previ
         sampleRateHz,
         problem,
         needs: problem === null ? [] : ['sampleRateHz'],
+        clockColumns: [],
       };
     },
     (problem) => withProblem('comtrade', [], problem),

@@ -23,6 +23,8 @@ export interface CsvLayout {
   leftOut: LayoutColumn[];
   /** Clocks beside the time column, which are no channels either. */
   clocks: LayoutColumn[];
+  /** All columns that tell the time, the time column first. */
+  clockColumns: number[];
   time: TimeChoice | null;
   metadata: Record<string, string>;
   statedSampleRateHz: number | null;
@@ -112,6 +114,7 @@ export function detectLayout(lines: string[], fileName: string, options: ImportO
     valueColumns: candidates.filter(({ index }) => holdsNumbers(index)).map(({ index }) => index),
     leftOut: candidates.filter(({ index }) => !holdsNumbers(index)),
     clocks: columns.filter(({ index }) => clocks.includes(index)),
+    clockColumns: [...(time.column === null ? time.unwanted : [time.column]), ...clocks],
     time:
       time.column === null
         ? null

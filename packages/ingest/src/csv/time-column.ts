@@ -23,6 +23,8 @@ interface Choice {
   secondsPerUnit: number;
   /** Columns that are no values: sample counters, and time columns the user does not want. */
   ignored: Set<number>;
+  /** Time columns among the ignored. */
+  unwanted: number[];
 }
 
 export interface TimeColumnInput {
@@ -107,18 +109,20 @@ export function chooseTimeColumn(input: TimeColumnInput): Choice {
   const ignored = new Set(counters(input));
   const byHeader = findByHeader(input);
   if (options.timeColumn === null) {
-    if (byHeader !== null && input.headerCells.length > 0) ignored.add(byHeader);
-    return { column: null, unit: null, secondsPerUnit: 1, ignored };
+    const unwanted = byHeader !== null && input.headerCells.length > 0 ? [byHeader] : [];
+    for (const index of unwanted) ignored.add(index);
+    return { column: null, unit: null, secondsPerUnit: 1, ignored, unwanted };
   }
   const column =
     options.timeColumn === undefined
       ? (byHeader ?? findByValues(input))
       : findColumn(options.timeColumn, columns, input.headerCells, 'time column');
-  if (column === null) return { column, unit: null, secondsPerUnit: 1, ignored };
+  const rest = { column, ignored, unwanted: [] };
+  if (column === null) return { ...rest, unit: null, secondsPerUnit: 1 };
   ignored.delete(column);
-  if (hasStamps(input, column)) return { column, unit: null, secondsPerUnit: 1, ignored };
+  if (hasStamps(input, column)) return { ...rest, unit: null, secondsPerUnit: 1 };
   if (options.timeUnit !== undefined) {
-    return { column, unit: options.timeUnit, secondsPerUnit: UNIT_SECONDS[options.timeUnit], ignored };
+    return { ...rest, unit: options.timeUnit, secondsPerUnit: UNIT_SECONDS[options.timeUnit] };
   }
   const stated = secondsPerUnit(columns[column]?.unit ?? '') ?? secondsPerUnit(columns[column]?.name ?? '');
   if (stated === null && input.headerCells.length > 0) {
@@ -128,5 +132,5 @@ export function chooseTimeColumn(input: TimeColumnInput): Choice {
       input.doubts.push('The time column names no unit; its whole numbers were taken as seconds.');
   }
   const written = Object.entries(UNIT_SECONDS).find(([, seconds]) => seconds === (stated ?? 1))?.[0];
-  return { column, unit: written ?? columns[column]?.unit ?? 's', secondsPerUnit: stated ?? 1, ignored };
+  return { ...rest, unit: written ?? columns[column]?.unit ?? 's', secondsPerUnit: stated ?? 1 };
 }

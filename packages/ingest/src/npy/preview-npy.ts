@@ -1,6 +1,6 @@
-import { PREVIEW_ROWS, refuseTooShort, withProblem } from '../preview-problem.js';
+import { PREVIEW_ROWS, refuseTooShort, withProblem, type PreviewHead } from '../preview-problem.js';
 import { catchRefusal } from '../refusal.js';
-import type { PreviewArguments, PreviewOutcome, Problem } from '../types.js';
+import type { PreviewArguments, Problem } from '../types.js';
 import { type NpyHeader, readNpyHeader } from './header.js';
 import { describeNpy, npyChannels, npySampleRateHz } from './layout.js';
 import { decoderOf } from './samples.js';
@@ -27,7 +27,7 @@ function firstRows(head: Uint8Array, header: NpyHeader): (number | null)[][] {
 }
 
 /** Says how an .npy file would be read, from its beginning. */
-export function previewNpy(head: Uint8Array, complete: boolean, args: PreviewArguments): PreviewOutcome {
+export function previewNpy(head: Uint8Array, complete: boolean, args: PreviewArguments): PreviewHead {
   const options = args.options ?? {};
   return catchRefusal(
     () => {
@@ -48,6 +48,7 @@ export function previewNpy(head: Uint8Array, complete: boolean, args: PreviewArg
         sampleRateHz: options.sampleRateHz ?? null,
         problem,
         needs: problem === null ? [] : ['sampleRateHz'],
+        clockColumns: [],
       };
     },
     (problem) => withProblem('npy', [], problem),
