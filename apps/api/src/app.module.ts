@@ -18,6 +18,7 @@ import { JobsModule } from './jobs/jobs.module.js';
 import { LimitsModule } from './limits/limits.module.js';
 import { NotesModule } from './notes/notes.module.js';
 import { ProjectsModule } from './projects/projects.module.js';
+import { ReadingRulesModule } from './reading-rules/reading-rules.module.js';
 import { RecordingsModule } from './recordings/recordings.module.js';
 import { ReportsModule } from './reports/reports.module.js';
 import { StorageModule } from './storage/storage.module.js';
@@ -40,6 +41,7 @@ export class AppModule {
         ProjectsModule,
         StorageModule,
         JobsModule,
+        ReadingRulesModule,
         RecordingsModule,
         AnalysesModule,
         NotesModule,

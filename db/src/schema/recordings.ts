@@ -74,6 +74,8 @@ export const recordings = pgTable(
     readingRuleId: uuid().references(() => readingRules.id, { onDelete: 'set null' }),
     /** Stays when the rule is deleted; null: the options came from a person or from the file alone. */
     readingRuleName: text(),
+    /** The reading asked for last; one that was asked for before it is no longer wanted. */
+    readId: uuid(),
     format: text(),
     metadata: jsonb().$type<Record<string, string>>().notNull().default({}),
     sampleRateHz: doublePrecision(),

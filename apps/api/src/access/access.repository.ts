@@ -5,8 +5,8 @@ import type { ProjectAccess, SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import type { ResourceKind } from './require-permission.decorator.js';
 
-const { accessKeys, users, members, projects, recordings, analyses, notes, verdicts, reports, limitSets } =
-  schema;
+const { accessKeys, users, members, projects, readingRules, recordings, analyses, notes } = schema;
+const { verdicts, reports, limitSets } = schema;
 
 const person = { id: users.id, email: users.email, name: users.name, isAdministrator: users.isAdministrator };
 
@@ -66,6 +66,11 @@ export class AccessRepository {
     switch (resource) {
       case 'project':
         return this.database.select({ projectId: projects.id }).from(projects).where(eq(projects.id, id));
+      case 'reading-rule':
+        return this.database
+          .select({ projectId: readingRules.projectId })
+          .from(readingRules)
+          .where(eq(readingRules.id, id));
       case 'recording':
         return viaRecording.from(recordings).where(eq(recordings.id, id));
       case 'analysis':

@@ -7,7 +7,8 @@ import { ApiProblem } from '../common/api-problem.decorator.js';
 export type { ProjectAccess as ProjectAccessValue } from '../common/request.js';
 
 /** Kinds of things that belong to a project, whose id may stand in a path. */
-export type ResourceKind = 'project' | 'recording' | 'analysis' | 'note' | 'verdict' | 'report' | 'limit-set';
+export type ResourceKind =
+  'project' | 'reading-rule' | 'recording' | 'analysis' | 'note' | 'verdict' | 'report' | 'limit-set';
 
 export interface RouteAccess {
   permission: Permission;

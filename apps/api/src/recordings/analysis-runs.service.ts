@@ -62,6 +62,28 @@ export class AnalysisRunsService {
       );
   }
 
+  /**
+   * Lets the reading that is kept stand again, after another one was called off: with the analyses there are, or with a
+   * new one when the other reading had them called off before one was done.
+   */
+  async standAgain(
+    tx: Tx,
+    run: { recordingId: string; settings: Settings; startedById: string },
+  ): Promise<void> {
+    const { recordingId } = run;
+    const runs = await tx
+      .select({ status: analyses.status, cancelRequestedAt: analyses.cancelRequestedAt })
+      .from(analyses)
+      .where(and(eq(analyses.recordingId, recordingId), isNull(analyses.supersededById)));
+    const isDone = runs.some(({ status }) => status === 'done');
+    if (!isDone && runs.some(({ cancelRequestedAt }) => cancelRequestedAt !== null)) {
+      await this.start(tx, { ...run, replacesEarlier: false });
+      return;
+    }
+    await tx.update(recordings).set({ status: 'analysing' }).where(eq(recordings.id, recordingId));
+    await this.settleRecording(tx, recordingId);
+  }
+
   private async supersede(tx: Tx, recordingId: string, byId: string): Promise<void> {
     await tx
       .update(analyses)

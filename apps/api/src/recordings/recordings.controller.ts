@@ -53,6 +53,15 @@ export class RecordingsController {
     await this.recordings.delete(id);
   }
 
+  @Post('recordings/:id/cancel-reading')
+  @RequirePermission('recording.update', { resource: 'recording' })
+  @ApiOperation({ summary: 'Call off a reading; what an earlier reading gave stands again' })
+  @ZodResponse({ status: 202, type: RecordingDto })
+  @ApiProblem(409, 'It is not being read')
+  cancelReading(@Param('id') id: string, @CurrentUser() user: SignedInUser) {
+    return this.recordings.cancelReading(id, user.id);
+  }
+
   @Post('recordings/:id/read')
   @RequirePermission('recording.update', { resource: 'recording' })
   @ApiOperation({ summary: 'Read the source again under other import options; supersedes earlier analyses' })

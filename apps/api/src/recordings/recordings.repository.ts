@@ -1,6 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import { schema, type Database, type Tx } from '@overtally/db';
-import { and, eq, inArray, sql } from 'drizzle-orm';
+import { and, eq, inArray, isNull, or, sql } from 'drizzle-orm';
 import { DATABASE } from '../database/database.tokens.js';
 
 const { analyses, channels, projects, recordings, reportVerdicts, reports, verdicts } = schema;
@@ -105,12 +105,18 @@ export class RecordingsRepository {
     return rows.length > 0;
   }
 
-  /** Writes the progress of a reading; false when the recording is gone or no longer being read. */
-  async writeReadProgress(id: string, progress: number): Promise<boolean> {
+  /** Writes the progress of a reading; false when the recording is gone or this reading no longer wanted. */
+  async writeReadProgress(id: string, readId: string, progress: number): Promise<boolean> {
     const rows = await this.database
       .update(recordings)
       .set({ progress })
-      .where(and(eq(recordings.id, id), eq(recordings.status, 'reading')))
+      .where(
+        and(
+          eq(recordings.id, id),
+          eq(recordings.status, 'reading'),
+          or(eq(recordings.readId, readId), isNull(recordings.readId)),
+        ),
+      )
       .returning({ id: recordings.id });
     return rows.length > 0;
   }

@@ -1,5 +1,11 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { ImportOptions, Recording, RecordingQuery, UpdateRecording } from '@overtally/contracts';
+import type {
+  ImportOptions,
+  ReadProblem,
+  Recording,
+  RecordingQuery,
+  UpdateRecording,
+} from '@overtally/contracts';
 import type { Database, Tx } from '@overtally/db';
 import { randomUUID } from 'node:crypto';
 import { parse } from 'node:path';
@@ -16,6 +22,12 @@ import { RecordingsRepository, type RecordingRow } from './recordings.repository
 
 const maxNameLength = 160;
 const maxFileNameLength = 255;
+
+const readingCancelled: ReadProblem = {
+  code: 'reading-cancelled',
+  message: 'The reading was called off before it was done',
+  cure: 'Read it again; the uploaded file is kept',
+};
 
 export interface Upload {
   projectId: string;
@@ -93,8 +105,32 @@ export class RecordingsService {
       if (isBeingRead(recording))
         throw problem(409, 'being-read', 'The recording is being read; wait until it is done');
       await this.runs.cancelAll(tx, id);
-      await this.repository.update(tx, id, { status: 'received', progress: 0, problem: null });
       await this.queueReading(tx, recording.id, options, userId);
+    });
+    return this.get(id);
+  }
+
+  /**
+   * Calls off the reading that is queued or under way. What an earlier reading gave stands again, with its analyses;
+   * a recording that was never read fails.
+   */
+  async cancelReading(id: string, userId: string): Promise<Recording> {
+    await this.database.transaction(async (tx) => {
+      const recording = await this.locked(tx, id);
+      if (!isBeingRead(recording)) {
+        throw problem(
+          409,
+          'not-being-read',
+          'The recording is not being read, so there is nothing to call off',
+        );
+      }
+      const wasRead = (await this.repository.channelsOf(tx, id)).length > 0;
+      if (wasRead) {
+        const settings = await this.repository.settingsFor(tx, recording);
+        await this.runs.standAgain(tx, { recordingId: id, settings, startedById: userId });
+      } else {
+        await this.repository.update(tx, id, { status: 'failed', problem: readingCancelled });
+      }
     });
     return this.get(id);
   }
@@ -125,14 +161,15 @@ export class RecordingsService {
     });
   }
 
-  private queueReading(
+  private async queueReading(
     tx: Tx,
     recordingId: string,
     options: ImportOptions,
     requestedById: string,
   ): Promise<void> {
     const readId = randomUUID();
-    return this.jobs.enqueue(tx, readRecordingJob, { recordingId, readId, options, requestedById });
+    await this.repository.update(tx, recordingId, { status: 'received', progress: 0, problem: null, readId });
+    await this.jobs.enqueue(tx, readRecordingJob, { recordingId, readId, options, requestedById });
   }
 
   private async locked(tx: Tx, id: string): Promise<RecordingRow> {

@@ -4,6 +4,7 @@ import {
   newAnalysis,
   newLimitSet,
   newNote,
+  newReadingRule,
   newRecording,
   newReport,
   newVerdict,
@@ -24,6 +25,7 @@ export async function makeExamples({ database, project }: TestApp, userId: strin
   const verdict = await newVerdict(database, analysis.id, owner);
   return {
     project: project.id,
+    'reading-rule': (await newReadingRule(database, owner)).id,
     recording: recording.id,
     analysis: analysis.id,
     note: (await newNote(database, analysis.id, owner)).id,

@@ -1,5 +1,6 @@
 import type { LimitSet } from '@overtally/contracts';
 import { schema, type Database } from '@overtally/db';
+import { randomUUID } from 'node:crypto';
 import { made } from './factories.js';
 
 /** What rows of a project hang on: whose they are and where. */
@@ -25,6 +26,16 @@ export async function newRecording(database: Database, { projectId, userId }: Ow
       sourceKey: `sources/${'0'.repeat(64)}`,
       uploadedById: userId,
     })
+    .returning();
+  return made(row);
+}
+
+/** A reading rule that fits tables by their ending. */
+export async function newReadingRule(database: Database, { projectId, userId }: Owner) {
+  const name = `Rule ${randomUUID()}`;
+  const [row] = await database
+    .insert(schema.readingRules)
+    .values({ projectId, name, fileNamePattern: '*.csv', options: {}, createdById: userId })
     .returning();
   return made(row);
 }

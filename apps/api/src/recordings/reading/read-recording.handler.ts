@@ -1,6 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { ReadProblem } from '@overtally/contracts';
-import type { Database } from '@overtally/db';
+import type { Database, Tx } from '@overtally/db';
 import { dirname } from 'node:path/posix';
 import type { z } from 'zod';
 import { DATABASE } from '../../database/database.tokens.js';
@@ -32,7 +32,7 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
   ) {}
 
   async run(payload: Payload, context: JobContext): Promise<void> {
-    const recording = await this.begin(payload.recordingId);
+    const recording = await this.begin(payload);
     if (recording === undefined) return;
     const result = await this.read(recording, payload, context);
     if (result === undefined) {
@@ -40,26 +40,34 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
     } else if (result.ok) {
       await this.keep(payload, result);
     } else {
-      await this.fail(recording.id, result.problem);
+      await this.fail(payload, result.problem);
     }
   }
 
   async giveUp(payload: Payload, problem: ReadProblem): Promise<void> {
-    await this.fail(payload.recordingId, problem);
+    await this.fail(payload, problem);
     await this.discard(payload);
   }
 
   /** Marks the reading as begun; undefined when there is nothing left to read. */
-  private begin(recordingId: string): Promise<RecordingRow | undefined> {
+  private begin(payload: Payload): Promise<RecordingRow | undefined> {
     return this.database.transaction(async (tx) => {
-      const recording = await this.repository.lock(tx, recordingId);
-      if (recording?.status !== 'received' && recording?.status !== 'reading') return undefined;
-      await this.repository.update(tx, recordingId, { status: 'reading', progress: 0 });
+      const recording = await this.lockWanted(tx, payload);
+      if (recording === undefined) return undefined;
+      await this.repository.update(tx, recording.id, { status: 'reading', progress: 0 });
       return recording;
     });
   }
 
-  /** The outcome of reading; undefined when the recording was deleted meanwhile. */
+  /** The recording, held until the transaction ends, while this reading of it is wanted. */
+  private async lockWanted(tx: Tx, { recordingId, readId }: Payload): Promise<RecordingRow | undefined> {
+    const recording = await this.repository.lock(tx, recordingId);
+    if (recording?.status !== 'received' && recording?.status !== 'reading') return undefined;
+    // Null: asked for before the product kept this.
+    return recording.readId === null || recording.readId === readId ? recording : undefined;
+  }
+
+  /** The outcome of reading; undefined when the recording was deleted meanwhile, or the reading called off. */
   private async read(
     recording: RecordingRow,
     { readId, options: importOptions }: Payload,
@@ -75,7 +83,7 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
     try {
       return await watched(
         context,
-        (progress) => this.repository.writeReadProgress(recording.id, progress),
+        (progress) => this.repository.writeReadProgress(recording.id, readId, progress),
         (options) => this.pool.run<ReadTaskInput, ReadTaskResult>('read', input, options),
       );
     } catch (error) {
@@ -87,8 +95,8 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
   private async keep(payload: Payload, result: ReadOk): Promise<void> {
     const { recordingId, options: importOptions, requestedById: startedById } = payload;
     const outdated = await this.database.transaction(async (tx) => {
-      const recording = await this.repository.lock(tx, recordingId);
-      if (recording?.status !== 'reading') return undefined;
+      const recording = await this.lockWanted(tx, payload);
+      if (recording === undefined) return undefined;
       const earlier = await this.repository.channelsOf(tx, recordingId);
       await this.repository.replaceChannels(
         tx,
@@ -123,11 +131,11 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
     });
   }
 
-  private async fail(recordingId: string, problem: ReadProblem): Promise<void> {
+  private async fail(payload: Payload, problem: ReadProblem): Promise<void> {
     await this.database.transaction(async (tx) => {
-      const recording = await this.repository.lock(tx, recordingId);
-      if (recording?.status !== 'received' && recording?.status !== 'reading') return;
-      await this.repository.update(tx, recordingId, { status: 'failed', problem });
+      const recording = await this.lockWanted(tx, payload);
+      if (recording === undefined) return;
+      await this.repository.update(tx, recording.id, { status: 'failed', problem });
     });
   }
 }

@@ -1,0 +1,54 @@
+import { describe, expect, it } from 'vitest';
+import { fittingRule, inOrder } from './fitting-rule.js';
+
+const rule = (id: string, fileNamePattern: string, columnNames: string[] | null = null, day = 1) => ({
+  id,
+  fileNamePattern,
+  columnNames,
+  createdAt: new Date(Date.UTC(2026, 0, day)),
+  options: {},
+});
+
+const ids = (rules: { id: string }[]) => rules.map(({ id }) => id);
+
+describe('the order of reading rules', () => {
+  it('is by columns, then by the length of the pattern, then by age', () => {
+    const rules = [
+      rule('any', '*'),
+      rule('older', '*.csv', null, 2),
+      rule('newer', '?.csv', null, 3),
+      rule('long', 'bench-*.csv'),
+      rule('columns', '*', ['t', 'u']),
+    ];
+    expect(ids(inOrder(rules))).toEqual(['columns', 'long', 'newer', 'older', 'any']);
+    expect(ids(rules)[0]).toBe('any');
+  });
+});
+
+describe('the rule that fits a file', () => {
+  const columns = () => ['t', 'u'];
+
+  it('is the first in order whose pattern and columns fit', () => {
+    const rules = [
+      rule('other columns', 'bench-*.csv', ['u', 't']),
+      rule('fewer', 'bench-*.csv', ['t']),
+      rule('pattern', 'bench-*.csv'),
+      rule('columns', '*.csv', ['t', 'u']),
+    ];
+    expect(fittingRule(rules, 'bench-1.csv', columns)?.id).toBe('columns');
+    expect(fittingRule(rules.slice(0, 3), 'bench-1.csv', columns)?.id).toBe('pattern');
+    expect(fittingRule(rules, 'bench-1.wav', columns)).toBeUndefined();
+  });
+
+  it('looks at the columns as they are under the options of the rule, and only where it must', () => {
+    const asked: object[] = [];
+    const options = { delimiter: ';' as const };
+    const rules = [{ ...rule('semicolon', '*.csv', ['a', 'b']), options }, rule('name', '*.wav', ['a'])];
+    const found = fittingRule(rules, 'x.csv', (given) => {
+      asked.push(given);
+      return given.delimiter === ';' ? ['a', 'b'] : ['a;b'];
+    });
+    expect(found?.id).toBe('semicolon');
+    expect(asked).toEqual([options]);
+  });
+});

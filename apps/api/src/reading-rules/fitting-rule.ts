@@ -1,0 +1,41 @@
+import type { ImportOptions } from '@overtally/contracts';
+import { fitsPattern, literalLength } from './file-name-pattern.js';
+
+/** What decides which rule is tried first. */
+export interface RankedRule {
+  id: string;
+  fileNamePattern: string;
+  columnNames: string[] | null;
+  createdAt: Date;
+}
+
+/** Rules in the order they are tried: those that name columns first, then by length of pattern, then the newer. */
+export function inOrder<Rule extends RankedRule>(rules: readonly Rule[]): Rule[] {
+  return [...rules].sort(
+    (one, other) =>
+      Number(other.columnNames !== null) - Number(one.columnNames !== null) ||
+      literalLength(other.fileNamePattern) - literalLength(one.fileNamePattern) ||
+      other.createdAt.getTime() - one.createdAt.getTime() ||
+      (one.id < other.id ? -1 : 1),
+  );
+}
+
+/**
+ * The first rule in order that fits a file by its name and, where the rule names columns, by their names in order.
+ * @param columnsUnder names of the file's columns when it is read under given options
+ */
+export function fittingRule<Rule extends RankedRule & { options: ImportOptions }>(
+  rules: readonly Rule[],
+  fileName: string,
+  columnsUnder: (options: ImportOptions) => readonly string[],
+): Rule | undefined {
+  return inOrder(rules).find(
+    ({ fileNamePattern, columnNames, options }) =>
+      fitsPattern(fileNamePattern, fileName) &&
+      (columnNames === null || areSame(columnNames, columnsUnder(options))),
+  );
+}
+
+function areSame(wanted: readonly string[], found: readonly string[]): boolean {
+  return wanted.length === found.length && wanted.every((name, i) => name === found[i]);
+}
