@@ -25,7 +25,7 @@ export function Component() {
     { label: 'Limits', to: paths.limits(id) },
     { label: 'Reports', to: paths.reports(id) },
     { label: 'Members', to: paths.members(id) },
-    ...(holds('project.update', project.role, account.isAdministrator)
+    ...(holds('reading-rule.read', project.role, account.isAdministrator)
       ? [{ label: 'Settings', to: paths.projectSettings(id), atFoot: true }]
       : []),
   ];

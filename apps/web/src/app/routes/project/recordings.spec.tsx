@@ -70,6 +70,36 @@ describe('recordings', () => {
     expect(await screen.findByText('3 recordings, 1 over the limit, 1 with a problem')).toBeTruthy();
   });
 
+  it('lets reading be called off, and says so afterwards', async () => {
+    const cancelled = recording(2, {
+      ...{ status: 'failed', sampleRateHz: null, channels: [] },
+      problem: { code: 'reading-cancelled', message: 'Reading was cancelled.', cure: 'Read it again.' },
+    });
+    let now = reading;
+    const seen = mockApi({
+      ...answers('technician', []),
+      [`GET /projects/${id}/recordings`]: (request) => page([now])(request),
+      [`POST /recordings/${reading.id}/cancel-reading`]: (request) => {
+        now = cancelled;
+        return json(cancelled)(request);
+      },
+    });
+    const { user } = renderRoute(address);
+    const [cancel] = (await row('Capture 2')).getAllByRole('button', { name: 'Cancel reading R-0002' });
+    await user.click(cancel!);
+    await waitFor(async () =>
+      expect((await row('Capture 2')).getAllByText('Reading was cancelled.').length).toBeGreaterThan(0),
+    );
+    expect(seen.filter(({ method }) => method === 'POST')).toHaveLength(1);
+  });
+
+  it('lets nobody call reading off who may not change recordings', async () => {
+    mockApi(answers('guest', [reading]));
+    renderRoute(address);
+    await row('Capture 2');
+    expect(screen.queryByRole('button', { name: 'Cancel reading R-0002' })).toBeNull();
+  });
+
   it('lets only what is ready be chosen for an overlay, from two on', async () => {
     mockApi(answers('technician', [over, { ...over, id: sampleId(104), name: 'Capture 4' }, reading]));
     const { user, router } = renderRoute(address);

@@ -94,6 +94,7 @@ export function Component() {
               recordingTo={recordingTo}
               selection={selection}
               onSelect={select}
+              mayCancel={holds('recording.update', project.role, account.isAdministrator)}
             />
           ) : (
             <EmptyState

@@ -1,6 +1,7 @@
 import type { ImportOptions, Recording, Settings, UpdateRecording } from '@overtally/contracts';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { cancelAnalysis } from '../api/cancel-analysis.js';
+import { cancelReading } from '../api/cancel-reading.js';
 import { createAnalysis } from '../api/create-analysis.js';
 import { deleteRecording } from '../api/delete-recording.js';
 import { recordingQuery } from '../api/get-recording.js';
@@ -28,6 +29,14 @@ export function useRecordingChanges({ id, projectId }: Pick<Recording, 'id' | 'p
       await refresh();
     },
   });
+  const stopReading = useMutation({
+    mutationFn: () => cancelReading(id),
+    onSuccess: (recording) => {
+      queryClient.setQueryData(recordingQuery(id).queryKey, recording);
+    },
+    // Also after a refusal: it was read in the meantime.
+    onSettled: refresh,
+  });
   const analyse = useMutation({
     mutationFn: (settings: Settings) => createAnalysis(id, settings),
     onSuccess: refresh,
@@ -46,5 +55,5 @@ export function useRecordingChanges({ id, projectId }: Pick<Recording, 'id' | 'p
       await queryClient.invalidateQueries({ queryKey: ['projects', projectId], exact: true });
     },
   });
-  return { update, read, analyse, cancel, remove };
+  return { update, read, stopReading, analyse, cancel, remove };
 }

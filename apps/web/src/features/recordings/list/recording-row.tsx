@@ -1,11 +1,12 @@
-import { Box, Checkbox, Link, Progress, Table, Text } from '@chakra-ui/react';
+import { Box, Checkbox, Flex, Link, Progress, Table, Text } from '@chakra-ui/react';
 import type { ChannelSummary, LimitSet, Recording } from '@overtally/contracts';
 import { Link as RouterLink } from 'react-router-dom';
 import { TallyStrip } from '../../../components/tally-strip.js';
 import { formatDateTime } from '../../../lib/format-date.js';
 import { formatDuration, formatHz, formatSi } from '../../../lib/format.js';
+import { CancelReading } from '../cancel-reading-button.js';
 import { percentWords } from '../percent-words.js';
-import { isBusy, statusWords } from '../recording-status.js';
+import { isBusy, isCancelled, statusWords } from '../recording-status.js';
 import { compareRecording } from './comparison.js';
 
 interface RecordingRowProps {
@@ -16,12 +17,15 @@ interface RecordingRowProps {
   /** False once as many are chosen as an overlay holds. */
   selectable: boolean;
   onSelect: (selected: boolean) => void;
+  /** Whether reading may be called off. */
+  mayCancel: boolean;
 }
 
 const figureCell = { textAlign: 'end', fontFamily: 'mono', fontSize: '13px', whiteSpace: 'nowrap' } as const;
 
 /** One recording: what it is, its main figures, and how it stands against the limits. */
-export function RecordingRow({ recording, limitSet, to, selected, selectable, onSelect }: RecordingRowProps) {
+export function RecordingRow(props: RecordingRowProps) {
+  const { recording, limitSet, to, selected, selectable, onSelect, mayCancel } = props;
   const comparison = compareRecording(recording, limitSet);
   const { channel } = comparison;
   return (
@@ -61,7 +65,7 @@ export function RecordingRow({ recording, limitSet, to, selected, selectable, on
           </Text>
         ) : null}
         <Box hideFrom="lg" mt="1.5">
-          <Standing recording={recording} comparison={comparison} />
+          <Standing recording={recording} comparison={comparison} mayCancel={mayCancel} />
         </Box>
       </Table.Cell>
       <Table.Cell color="inkSoft" whiteSpace="nowrap" hideBelow="xl">
@@ -85,7 +89,7 @@ export function RecordingRow({ recording, limitSet, to, selected, selectable, on
         {percentWords(channel?.thdFPercent ?? null)}
       </Table.Cell>
       <Table.Cell hideBelow="lg">
-        <Standing recording={recording} comparison={comparison} />
+        <Standing recording={recording} comparison={comparison} mayCancel={mayCancel} />
       </Table.Cell>
     </Table.Row>
   );
@@ -103,15 +107,17 @@ function figureWords({ fundamentalHz, rms, unit, thdFPercent }: ChannelSummary):
 function Standing({
   recording,
   comparison,
+  mayCancel,
 }: {
   recording: Recording;
   comparison: ReturnType<typeof compareRecording>;
+  mayCancel: boolean;
 }) {
-  if (isBusy(recording)) return <Working recording={recording} />;
+  if (isBusy(recording)) return <Working recording={recording} mayCancel={mayCancel} />;
   if (recording.problem) {
     return (
       <Text fontSize="13px" maxW="46ch" whiteSpace="normal">
-        <Box as="span" color="over" fontWeight="600">
+        <Box as="span" color={isCancelled(recording.problem) ? 'inkSoft' : 'over'} fontWeight="600">
           {recording.sampleRateHz === null ? 'Not read: ' : 'Not analysed: '}
         </Box>
         {recording.problem.message}
@@ -129,24 +135,33 @@ function Standing({
   );
 }
 
-function Working({ recording }: { recording: Recording }) {
+function Working({ recording, mayCancel }: { recording: Recording; mayCancel: boolean }) {
   const words = statusWords[recording.status];
   const waits = recording.status === 'received';
   return (
-    <Progress.Root
-      value={waits ? null : Math.round(recording.progress * 100)}
-      size="xs"
-      colorPalette="act"
-      maxW="220px"
-      aria-label={`${recording.number}: ${words}`}
-    >
-      <Text fontSize="13px" color="inkSoft">
-        {words}
-        {waits ? '' : ` ${Math.round(recording.progress * 100)} %`}
-      </Text>
-      <Progress.Track>
-        <Progress.Range />
-      </Progress.Track>
-    </Progress.Root>
+    <Flex align="flex-end" gap="3">
+      <Progress.Root
+        value={waits ? null : Math.round(recording.progress * 100)}
+        size="xs"
+        colorPalette="act"
+        flex="1"
+        maxW="220px"
+        aria-label={`${recording.number}: ${words}`}
+      >
+        <Text fontSize="13px" color="inkSoft">
+          {words}
+          {waits ? '' : ` ${Math.round(recording.progress * 100)} %`}
+        </Text>
+        <Progress.Track>
+          <Progress.Range />
+        </Progress.Track>
+      </Progress.Root>
+      {mayCancel && recording.status !== 'analysing' ? (
+        // Above the link that covers the row.
+        <Box position="relative" zIndex="1">
+          <CancelReading recording={recording} />
+        </Box>
+      ) : null}
+    </Flex>
   );
 }

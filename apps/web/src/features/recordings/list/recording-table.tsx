@@ -9,6 +9,8 @@ interface RecordingTableProps {
   recordingTo: (recordingId: string) => string;
   selection: ReadonlySet<string>;
   onSelect: (recordingId: string, selected: boolean) => void;
+  /** Whether reading may be called off. */
+  mayCancel: boolean;
 }
 
 /** As many recordings as one overlay holds. */
@@ -21,6 +23,7 @@ export function RecordingTable({
   recordingTo,
   selection,
   onSelect,
+  mayCancel,
 }: RecordingTableProps) {
   return (
     <Sheet overflowX="auto">
@@ -66,6 +69,7 @@ export function RecordingTable({
               selected={selection.has(recording.id)}
               selectable={selection.size < overlayCapacity}
               onSelect={(selected) => onSelect(recording.id, selected)}
+              mayCancel={mayCancel}
             />
           ))}
         </Table.Body>

@@ -15,13 +15,14 @@ import { PageHeader } from '../../../components/page-header.js';
 import { notifyDone, notifyProblem } from '../../../components/notify.js';
 import { useRecordingChanges } from '../hooks/use-recording-changes.js';
 import { ImportDialog } from '../import/import-dialog.js';
-import { isBusy } from '../recording-status.js';
+import { isBusy, isCancelled } from '../recording-status.js';
 import { AnalysedSheet } from './analysed-sheet.js';
 import { FailNotice, RunNotice } from './run-notice.js';
 import { SheetMenu } from './sheet-menu.js';
 import { SheetTitleBlock } from './sheet-title-block.js';
 import { StandingNotice } from './standing-notice.js';
 import { ProvenanceSection } from './provenance-section.js';
+import { ReadingSection } from './reading-section.js';
 import { UnanalysedSheet } from './unanalysed-sheet.js';
 import { useShownAnalysis } from './use-shown-analysis.js';
 
@@ -89,7 +90,12 @@ export function RecordingSheet(props: RecordingSheetProps) {
           </>
         }
       />
-      <Progress {...props} runningId={may.run ? (running?.id ?? null) : null} readAgain={readAgain} />
+      <Progress
+        {...props}
+        runningId={may.run ? (running?.id ?? null) : null}
+        mayCancelReading={may.update}
+        readAgain={readAgain}
+      />
       {shownId !== null && shown.isPending ? <LoadingState label="Loading the analysis" lines={8} /> : null}
       {shown.isError ? <ErrorState error={shown.error} onRetry={() => void shown.refetch()} /> : null}
       {shown.data ? (
@@ -123,6 +129,7 @@ export function RecordingSheet(props: RecordingSheetProps) {
           })
         }
       />
+      <ReadingSection recording={recording} />
       <ProvenanceSection
         analyses={list}
         shownId={shownId}
@@ -157,8 +164,9 @@ function subtitle({ channels, format, file, remark }: Recording): string {
 function Progress({
   recording,
   runningId,
+  mayCancelReading,
   readAgain,
-}: RecordingSheetProps & { runningId: string | null; readAgain: ReactNode }) {
+}: RecordingSheetProps & { runningId: string | null; mayCancelReading: boolean; readAgain: ReactNode }) {
   if (isBusy(recording) && recording.status !== 'ready' && recording.status !== 'failed') {
     return (
       <RunNotice
@@ -166,12 +174,20 @@ function Progress({
         status={recording.status}
         progress={recording.progress}
         analysisId={runningId}
+        mayCancelReading={mayCancelReading}
       />
     );
   }
   if (recording.status !== 'failed' || !recording.problem) return null;
   const read = recording.channels.length > 0;
-  const cancelled = recording.problem.code === 'cancelled';
-  const title = cancelled ? 'Not analysed' : read ? 'The analysis failed' : 'This file was not read';
-  return <FailNotice title={title} problem={recording.problem} actions={cancelled ? undefined : readAgain} />;
+  const cancelled = isCancelled(recording.problem);
+  const title = read
+    ? cancelled
+      ? 'Not analysed'
+      : 'The analysis failed'
+    : cancelled
+      ? 'Reading was cancelled'
+      : 'This file was not read';
+  const actions = cancelled && read ? undefined : readAgain;
+  return <FailNotice title={title} problem={recording.problem} actions={actions} />;
 }

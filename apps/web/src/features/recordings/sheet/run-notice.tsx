@@ -3,6 +3,7 @@ import type { ReadProblem, Recording } from '@overtally/contracts';
 import type { ReactNode } from 'react';
 import { notifyProblem } from '../../../components/notify.js';
 import { Sheet } from '../../../components/sheet.js';
+import { CancelReading } from '../cancel-reading-button.js';
 import { useRecordingChanges } from '../hooks/use-recording-changes.js';
 
 const titles = {
@@ -18,10 +19,11 @@ interface RunNoticeProps {
   progress: number;
   /** Analysis that can be called off; null when there is none or the person may not. */
   analysisId: string | null;
+  mayCancelReading: boolean;
 }
 
 /** What the worker is doing to the recording, how far it is, and the way to stop it. */
-export function RunNotice({ recording, status, progress, analysisId }: RunNoticeProps) {
+export function RunNotice({ recording, status, progress, analysisId, mayCancelReading }: RunNoticeProps) {
   const { cancel } = useRecordingChanges(recording);
   const waiting = status === 'received' || progress === 0;
   return (
@@ -55,6 +57,7 @@ export function RunNotice({ recording, status, progress, analysisId }: RunNotice
             Cancel
           </Button>
         ) : null}
+        {mayCancelReading && status !== 'analysing' ? <CancelReading recording={recording} /> : null}
       </Flex>
     </Sheet>
   );
