@@ -31,6 +31,42 @@ export function findColumn(
   );
 }
 
+const CURE_SCALING =
+  'Give a gain other than zero, a finite offset, and a full scale and probe ratio greater than zero.';
+
+function refuseScaling(column: LayoutColumn, what: string): never {
+  return refuse('bad-scaling', `Channel "${column.name}": ${what}.`, CURE_SCALING);
+}
+
+/** Full scale x probe ratio, negative where the channel is inverted. */
+function inputFactor(
+  column: LayoutColumn,
+  { fullScale = 1, probeRatio = 1, inverted }: Partial<ChannelOptions>,
+) {
+  const isFactor = (value: number) => value > 0 && Number.isFinite(value);
+  if (!isFactor(fullScale))
+    refuseScaling(column, `the full scale ${fullScale} is no number greater than zero`);
+  if (!isFactor(probeRatio))
+    refuseScaling(column, `the probe ratio ${probeRatio} is no number greater than zero`);
+  return fullScale * probeRatio * (inverted === true ? -1 : 1);
+}
+
+/**
+ * Gain and offset from the raw value to the base unit. `factor`: that of the prefix of the unit. An offset of the
+ * options is in the unit of the channel and comes last; one of the file belongs to its gain and goes with it.
+ */
+function scalingOf(column: LayoutColumn, wanted: Partial<ChannelOptions>, factor: number) {
+  const own = wanted.gain ?? column.gain ?? 1;
+  const input = inputFactor(column, wanted);
+  const gain = own * input * factor;
+  const offset = (wanted.offset ?? (column.offset ?? 0) * input) * factor;
+  if (!Number.isFinite(gain) || gain === 0)
+    refuseScaling(column, `the gain ${own}, times full scale and probe ratio ${gain}, is not usable`);
+  if (!Number.isFinite(offset))
+    refuseScaling(column, `the offset ${wanted.offset ?? column.offset} is not a usable number`);
+  return { gain, offset };
+}
+
 function makeChannel(
   index: number,
   column: LayoutColumn,
@@ -39,16 +75,6 @@ function makeChannel(
 ): ReadChannel {
   const written = wanted?.unit ?? column.unit;
   const meaning = unitMeaning(written);
-  const factor = meaning?.factor ?? 1;
-  const gain = (wanted?.gain ?? column.gain ?? 1) * factor;
-  const offset = (wanted?.offset ?? column.offset ?? 0) * factor;
-  if (!Number.isFinite(gain) || gain === 0 || !Number.isFinite(offset)) {
-    refuse(
-      'bad-scaling',
-      `The gain ${wanted?.gain ?? column.gain} and offset ${wanted?.offset ?? column.offset} of channel "${column.name}" are not usable numbers.`,
-      'Give a gain other than zero and a finite offset.',
-    );
-  }
   return {
     index,
     column: column.index,
@@ -56,8 +82,7 @@ function makeChannel(
     quantity:
       wanted?.quantity ?? (wanted?.unit === undefined ? column.quantity : meaning?.quantity) ?? 'other',
     unit: meaning?.base ?? written,
-    gain,
-    offset,
+    ...scalingOf(column, wanted ?? {}, meaning?.factor ?? 1),
     lowestCode: range?.lowest ?? null,
     highestCode: range?.highest ?? null,
   };
@@ -65,7 +90,9 @@ function makeChannel(
 
 /**
  * Channels to read: those the options select, or every column of `byDefault`. The prefix of a unit goes into the
- * gain, so that gain x raw + offset is in the base unit. A gain or offset of the options stands in place of the file's own.
+ * gain, so that gain x raw + offset is in the base unit. A gain or offset of the options stands in place of the file's own;
+ * full scale, probe ratio and inversion multiply the gain, whichever it is:
+ * gain = (gain of the options, else of the file, else 1) x full scale x probe ratio x (inverted ? -1 : 1) x prefix.
  * @param rangeOf raw ends of a column that holds integer codes
  */
 export function selectChannels(

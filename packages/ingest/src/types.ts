@@ -20,13 +20,18 @@ export interface ChannelOptions {
   name?: string;
   quantity?: Quantity;
   unit?: string;
+  /** In place of the gain that the file states, else of 1. */
   gain?: number;
+  /** In `unit`, added last; no factor applies to it. In place of the offset that the file states. */
   offset?: number;
-  /** Input in the unit at digital full scale (raw value 1); multiplies the gain. */
+  /**
+   * Input in `unit` where the raw value is 1; multiplies the gain. The raw value of an integer WAV is
+   * code / 2^(bits - 1), so this is the input at digital full scale.
+   */
   fullScale?: number;
   /** 100 for a probe or transformer of 100:1; multiplies the gain. */
   probeRatio?: number;
-  /** Turns the sign of the gain. */
+  /** Turns the sign of the gain. The ends of the codes stay raw: with a negative gain the highest code is the lowest value. */
   inverted?: boolean;
 }
 
@@ -47,7 +52,10 @@ export interface ImportOptions {
   unevenTime?: 'resample' | 'take-as-even' | 'refuse';
 }
 
-/** A channel of the file. Engineering value = raw value x `gain` + `offset`, in `unit`. */
+/**
+ * A channel of the file. Engineering value = raw value x `gain` + `offset`, in `unit`. The gain holds the prefix of the
+ * unit, full scale, probe ratio and inversion, so it may be negative.
+ */
 export interface ReadChannel {
   index: number;
   /** 0-based source column, or 0-based channel of a file without columns. */
