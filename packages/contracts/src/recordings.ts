@@ -79,6 +79,20 @@ export const importOptionsSchema = z.strictObject({
 });
 export type ImportOptions = z.infer<typeof importOptionsSchema>;
 
+/** Where the import options that go with a file come from. */
+export const readingRuleIdSchema = idSchema
+  .nullable()
+  .optional()
+  .describe(
+    'Reading rule of the project that the import options come from; without options its own are used. null: no rule, ' +
+      'what is not stated is detected. Absent: options that are stated come from no rule; without any (or {}), those of ' +
+      'the rule that fits the file are used',
+  );
+
+/** How a recording is to be read again. */
+export const readAgainSchema = importOptionsSchema.extend({ readingRuleId: readingRuleIdSchema });
+export type ReadAgain = z.infer<typeof readAgainSchema>;
+
 /** A reading rule as a recording names it; `id` is null once the rule is deleted. */
 export const readingRuleRefSchema = z.object({ id: idSchema.nullable(), name: z.string() });
 

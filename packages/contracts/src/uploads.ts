@@ -1,6 +1,11 @@
 import { z } from 'zod';
 import { timestampSchema } from './common.js';
-import { importOptionsSchema, recordingSchema, updateRecordingSchema } from './recordings.js';
+import {
+  importOptionsSchema,
+  readingRuleIdSchema,
+  recordingSchema,
+  updateRecordingSchema,
+} from './recordings.js';
 
 /** An upload that began and has not become a recording; it goes on where it stopped (tus 1.0). */
 export const unfinishedUploadSchema = z.object({
@@ -25,6 +30,7 @@ export const finishUploadSchema = z.strictObject({
     .optional()
     .describe('SHA-256 of the bytes as the sender has them; compared with what arrived'),
   import: importOptionsSchema.optional(),
+  readingRuleId: readingRuleIdSchema,
   ...updateRecordingSchema.omit({ channels: true }).shape,
 });
 export type FinishUpload = z.infer<typeof finishUploadSchema>;

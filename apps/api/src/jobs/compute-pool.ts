@@ -32,6 +32,8 @@ interface Pools {
   workers: Piscina;
   /** Threads that hand work on to `workers`; apart from them, so that no worker is held by one that waits for it. */
   coordinators: Piscina;
+  /** A thread for what somebody waits for, so that it does not stand behind long readings. */
+  previews: Piscina;
 }
 
 /** Runs computations in threads of their own, so that requests are answered meanwhile. */
@@ -59,8 +61,8 @@ export class ComputePool implements OnApplicationShutdown {
 
   async onApplicationShutdown(): Promise<void> {
     if (this.pools === undefined) return;
-    const { workers, coordinators } = await this.pools;
-    await Promise.all([coordinators.destroy(), workers.destroy()]);
+    const { workers, coordinators, previews } = await this.pools;
+    await Promise.all([coordinators.destroy(), workers.destroy(), previews.destroy()]);
   }
 
   /** Runs a task, and what it hands on, under one flag to stop. */
@@ -71,7 +73,7 @@ export class ComputePool implements OnApplicationShutdown {
     onProgress: (fraction: number) => void,
   ): Promise<ComputeOutcome> {
     this.pools ??= this.open();
-    const { workers, coordinators } = await this.pools;
+    const pools = await this.pools;
     const { port1, port2 } = new MessageChannel();
     port1.on('message', (message: FromThread) => {
       if (message.kind === 'progress') onProgress(message.fraction);
@@ -79,8 +81,7 @@ export class ComputePool implements OnApplicationShutdown {
     });
     try {
       const request: ComputeRequest = { task, input, stopFlag, port: port2 };
-      const pool = task === 'analyse' ? coordinators : workers;
-      return (await pool.run(request, { transferList: [port2] })) as ComputeOutcome;
+      return (await poolFor(task, pools).run(request, { transferList: [port2] })) as ComputeOutcome;
     } finally {
       port1.close();
     }
@@ -120,6 +121,11 @@ export class ComputePool implements OnApplicationShutdown {
         workerData,
       });
     const { computeThreads, jobsAtOnce } = this.config;
-    return { workers: make(computeThreads), coordinators: make(jobsAtOnce) };
+    return { workers: make(computeThreads), coordinators: make(jobsAtOnce), previews: make(1) };
   }
+}
+
+function poolFor(task: ComputeTask, { workers, coordinators, previews }: Pools): Piscina {
+  if (task === 'preview') return previews;
+  return task === 'analyse' ? coordinators : workers;
 }

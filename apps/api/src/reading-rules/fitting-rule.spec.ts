@@ -26,27 +26,29 @@ describe('the order of reading rules', () => {
 });
 
 describe('the rule that fits a file', () => {
-  const columns = () => ['t', 'u'];
+  const columns = () => Promise.resolve(['t', 'u']);
 
-  it('is the first in order whose pattern and columns fit', () => {
+  it('is the first in order whose pattern and columns fit', async () => {
     const rules = [
       rule('other columns', 'bench-*.csv', ['u', 't']),
       rule('fewer', 'bench-*.csv', ['t']),
       rule('pattern', 'bench-*.csv'),
       rule('columns', '*.csv', ['t', 'u']),
     ];
-    expect(fittingRule(rules, 'bench-1.csv', columns)?.id).toBe('columns');
-    expect(fittingRule(rules.slice(0, 3), 'bench-1.csv', columns)?.id).toBe('pattern');
-    expect(fittingRule(rules, 'bench-1.wav', columns)).toBeUndefined();
+    const found = async (tried: typeof rules, fileName: string) =>
+      (await fittingRule(tried, fileName, columns))?.id;
+    expect(await found(rules, 'bench-1.csv')).toBe('columns');
+    expect(await found(rules.slice(0, 3), 'bench-1.csv')).toBe('pattern');
+    expect(await found(rules, 'bench-1.wav')).toBeUndefined();
   });
 
-  it('looks at the columns as they are under the options of the rule, and only where it must', () => {
+  it('looks at the columns as they are under the options of the rule, and only where it must', async () => {
     const asked: object[] = [];
     const options = { delimiter: ';' as const };
     const rules = [{ ...rule('semicolon', '*.csv', ['a', 'b']), options }, rule('name', '*.wav', ['a'])];
-    const found = fittingRule(rules, 'x.csv', (given) => {
+    const found = await fittingRule(rules, 'x.csv', (given) => {
       asked.push(given);
-      return given.delimiter === ';' ? ['a', 'b'] : ['a;b'];
+      return Promise.resolve(given.delimiter === ';' ? ['a', 'b'] : ['a;b']);
     });
     expect(found?.id).toBe('semicolon');
     expect(asked).toEqual([options]);

@@ -20,20 +20,20 @@ export function inOrder<Rule extends RankedRule>(rules: readonly Rule[]): Rule[]
   );
 }
 
-/**
- * The first rule in order that fits a file by its name and, where the rule names columns, by their names in order.
- * @param columnsUnder names of the file's columns when it is read under given options
- */
-export function fittingRule<Rule extends RankedRule & { options: ImportOptions }>(
+/** Names of a file's columns when it is read under given options. */
+export type ColumnsUnder = (options: ImportOptions) => Promise<readonly string[]>;
+
+/** The first rule in order that fits a file by its name and, where the rule names columns, by their names in order. */
+export async function fittingRule<Rule extends RankedRule & { options: ImportOptions }>(
   rules: readonly Rule[],
   fileName: string,
-  columnsUnder: (options: ImportOptions) => readonly string[],
-): Rule | undefined {
-  return inOrder(rules).find(
-    ({ fileNamePattern, columnNames, options }) =>
-      fitsPattern(fileNamePattern, fileName) &&
-      (columnNames === null || areSame(columnNames, columnsUnder(options))),
-  );
+  columnsUnder: ColumnsUnder,
+): Promise<Rule | undefined> {
+  for (const rule of inOrder(rules)) {
+    if (!fitsPattern(rule.fileNamePattern, fileName)) continue;
+    if (rule.columnNames === null || areSame(rule.columnNames, await columnsUnder(rule.options))) return rule;
+  }
+  return undefined;
 }
 
 function areSame(wanted: readonly string[], found: readonly string[]): boolean {

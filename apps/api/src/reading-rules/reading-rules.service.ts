@@ -1,11 +1,16 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { CreateReadingRule, ReadingRule, UpdateReadingRule } from '@overtally/contracts';
-import type { Database } from '@overtally/db';
+import type { Database, Tx } from '@overtally/db';
 import { problem } from '../common/problem.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { isUniqueViolation } from '../database/unique-violation.js';
+import { statesOptions, type ChosenReading, type StatedReading } from './choose-options.js';
 import { inOrder } from './fitting-rule.js';
-import { ReadingRulesRepository, type ReadingRuleRecord } from './reading-rules.repository.js';
+import {
+  ReadingRulesRepository,
+  type ReadingRuleRecord,
+  type ReadingRuleRow,
+} from './reading-rules.repository.js';
 
 /** Each is tried against every new file, and the list holds them all. */
 const maxRules = 200;
@@ -52,6 +57,30 @@ export class ReadingRulesService {
   /** Deletes a rule; recordings that were read by it keep its name. */
   async delete(id: string): Promise<void> {
     await this.database.transaction((tx) => this.repository.delete(tx, id));
+  }
+
+  /**
+   * The rules that come into question for a file: none where its options are stated or no rule is wanted, the named one
+   * where one is named, else all of the project.
+   * @throws 400 when the named rule is none of the project
+   */
+  async candidates(projectId: string, stated: StatedReading): Promise<ReadingRuleRow[]> {
+    const { readingRuleId } = stated;
+    if (readingRuleId === null) return [];
+    if (readingRuleId === undefined) {
+      return statesOptions(stated) ? [] : this.repository.ofProject(projectId);
+    }
+    const rule = await this.repository.find(projectId, readingRuleId);
+    if (rule !== undefined) return [rule];
+    const message = 'The project has no such reading rule; name another one, or none';
+    throw problem(400, 'invalid-request', message, [{ path: 'readingRuleId', message }]);
+  }
+
+  /** The rule as the row of a recording names it. A rule that was deleted meanwhile leaves its name. */
+  async reference(tx: Tx, rule: ChosenReading['readingRule']) {
+    if (rule === null) return { readingRuleId: null, readingRuleName: null };
+    const isThere = await this.repository.hold(tx, rule.id);
+    return { readingRuleId: isThere ? rule.id : null, readingRuleName: rule.name };
   }
 
   private async get(id: string): Promise<ReadingRule> {

@@ -4,8 +4,9 @@ import { ZodResponse } from 'nestjs-zod';
 import { RequirePermission } from '../access/require-permission.decorator.js';
 import { ApiProblem } from '../common/api-problem.decorator.js';
 import { CurrentUser, type SignedInUser } from '../common/current-user.decorator.js';
+import { present } from '../storage/missing-object.js';
 import {
-  ImportOptionsDto,
+  ReadAgainDto,
   RecordingDto,
   RecordingPageDto,
   RecordingQueryDto,
@@ -66,8 +67,9 @@ export class RecordingsController {
   @RequirePermission('recording.update', { resource: 'recording' })
   @ApiOperation({ summary: 'Read the source again under other import options; supersedes earlier analyses' })
   @ZodResponse({ status: 202, type: RecordingDto })
+  @ApiProblem(400, 'Options that are not valid, or a reading rule of another project')
   @ApiProblem(409, 'It is being read')
-  readAgain(@Param('id') id: string, @CurrentUser() user: SignedInUser, @Body() options: ImportOptionsDto) {
-    return this.recordings.readAgain(id, user.id, options);
+  readAgain(@Param('id') id: string, @CurrentUser() user: SignedInUser, @Body() reading: ReadAgainDto) {
+    return present(this.recordings.readAgain(id, user.id, reading));
   }
 }

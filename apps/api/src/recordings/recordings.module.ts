@@ -1,5 +1,7 @@
 import { Module } from '@nestjs/common';
 import { AnalysisRunsService } from './analysis-runs.service.js';
+import { ReadingRulesModule } from '../reading-rules/reading-rules.module.js';
+import { PreviewsService } from './previewing/previews.service.js';
 import { ReadRecordingHandler } from './reading/read-recording.handler.js';
 import { RecordingDataController } from './recording-data.controller.js';
 import { RecordingViewsRepository } from './recording-views.repository.js';
@@ -10,9 +12,11 @@ import { UploadsController } from './uploads.controller.js';
 import { WaveformService } from './waveform.service.js';
 
 @Module({
+  imports: [ReadingRulesModule],
   controllers: [RecordingsController, UploadsController, RecordingDataController],
   providers: [
     RecordingsService,
+    PreviewsService,
     RecordingsRepository,
     RecordingViewsRepository,
     AnalysisRunsService,

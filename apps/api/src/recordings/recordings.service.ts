@@ -1,6 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type {
-  ImportOptions,
+  ReadAgain,
   ReadProblem,
   Recording,
   RecordingQuery,
@@ -13,9 +13,13 @@ import { problem } from '../common/problem.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { readRecordingJob } from '../jobs/definitions/read-recording.job.js';
 import { JobsService } from '../jobs/jobs.service.js';
+import { chooseOptions, type ChosenReading } from '../reading-rules/choose-options.js';
+import type { ColumnsUnder } from '../reading-rules/fitting-rule.js';
+import { ReadingRulesService } from '../reading-rules/reading-rules.service.js';
 import { Storage, type StagedObject } from '../storage/storage.js';
 import { AnalysisRunsService } from './analysis-runs.service.js';
 import type { UploadFields } from './dto/upload.dto.js';
+import { columnBytes, PreviewsService } from './previewing/previews.service.js';
 import { recordingPrefix, sourceKey } from './recording-keys.js';
 import { RecordingViewsRepository } from './recording-views.repository.js';
 import { RecordingsRepository, type RecordingRow } from './recordings.repository.js';
@@ -47,6 +51,8 @@ export class RecordingsService {
     private readonly runs: AnalysisRunsService,
     private readonly jobs: JobsService,
     private readonly storage: Storage,
+    private readonly rules: ReadingRulesService,
+    private readonly previews: PreviewsService,
   ) {}
 
   async get(id: string): Promise<Recording> {
@@ -62,12 +68,15 @@ export class RecordingsService {
   /** Keeps an uploaded file as a new recording and queues its reading. */
   async upload({ projectId, uploadedById, staged, fields, ...upload }: Upload): Promise<Recording> {
     const fileName = upload.fileName.replace(/\p{Cc}/gu, '');
-    const { import: importOptions, capturedAt, name, ...bench } = fields;
+    const { import: _, readingRuleId: __, capturedAt, name, ...bench } = fields;
     const key = sourceKey(projectId, staged.sha256);
+    const rules = await this.rules.candidates(projectId, fields);
     const id = await this.database.transaction(async (tx) => {
       await this.repository.lockSource(tx, key);
       // The row must not be seen before its file is there; bytes known already are stored once.
       if (!(await this.storage.exists(key))) await staged.commit(key);
+      const file = { fileName, fileSize: staged.size, sourceKey: key };
+      const reading = await chooseOptions(fields, rules, fileName, this.columnsOf(file));
       const recordingId = await this.repository.insert(tx, {
         projectId,
         uploadedById,
@@ -78,9 +87,10 @@ export class RecordingsService {
         fileSize: staged.size,
         fileSha256: staged.sha256,
         sourceKey: key,
-        importOptions: importOptions ?? {},
+        importOptions: reading.options,
+        ...(await this.rules.reference(tx, reading.readingRule)),
       });
-      await this.queueReading(tx, recordingId, importOptions ?? {}, uploadedById);
+      await this.queueReading(tx, recordingId, reading, uploadedById);
       return recordingId;
     });
     return this.get(id);
@@ -99,13 +109,19 @@ export class RecordingsService {
   }
 
   /** Reads the source again under other options. What the earlier reading gave stands until the new one is done. */
-  async readAgain(id: string, userId: string, options: ImportOptions): Promise<Recording> {
+  async readAgain(id: string, userId: string, reading: ReadAgain): Promise<Recording> {
+    const { readingRuleId, ...options } = reading;
+    const stated = { import: options, readingRuleId };
+    const before = await this.repository.find(id);
+    if (before === undefined) throw noSuchRecording();
+    const rules = await this.rules.candidates(before.projectId, stated);
+    const chosen = await chooseOptions(stated, rules, before.fileName, this.columnsOf(before));
     await this.database.transaction(async (tx) => {
       const recording = await this.locked(tx, id);
       if (isBeingRead(recording))
         throw problem(409, 'being-read', 'The recording is being read; wait until it is done');
       await this.runs.cancelAll(tx, id);
-      await this.queueReading(tx, recording.id, options, userId);
+      await this.queueReading(tx, recording.id, chosen, userId);
     });
     return this.get(id);
   }
@@ -161,15 +177,30 @@ export class RecordingsService {
     });
   }
 
+  /** Tells the columns of a stored file under given options. */
+  private columnsOf(file: Pick<RecordingRow, 'fileName' | 'fileSize' | 'sourceKey'>): ColumnsUnder {
+    const { fileName, fileSize: sizeBytes, sourceKey: key } = file;
+    const end = Math.min(sizeBytes, columnBytes) - 1;
+    const head = () =>
+      end < 0 ? Promise.resolve(new Uint8Array()) : this.storage.readBytes(key, { start: 0, end });
+    return this.previews.columnsOf({ fileName, sizeBytes, head });
+  }
+
   private async queueReading(
     tx: Tx,
     recordingId: string,
-    options: ImportOptions,
+    { options, readingRule }: ChosenReading,
     requestedById: string,
   ): Promise<void> {
     const readId = randomUUID();
     await this.repository.update(tx, recordingId, { status: 'received', progress: 0, problem: null, readId });
-    await this.jobs.enqueue(tx, readRecordingJob, { recordingId, readId, options, requestedById });
+    await this.jobs.enqueue(tx, readRecordingJob, {
+      recordingId,
+      readId,
+      options,
+      readingRule,
+      requestedById,
+    });
   }
 
   private async locked(tx: Tx, id: string): Promise<RecordingRow> {

@@ -9,18 +9,21 @@ import { CurrentUser, type SignedInUser } from '../common/current-user.decorator
 import { problem } from '../common/problem.js';
 import { ImportPreviewDto, RecordingDto } from './dto/recording.dto.js';
 import { PreviewDto, previewBody, uploadBody, UploadDto } from './dto/upload.dto.js';
-import { importPreview } from './import-preview.js';
+import { PreviewsService } from './previewing/previews.service.js';
 import { RecordingsService } from './recordings.service.js';
 import { formLimits } from './uploading/form-limits.js';
 import type { StagedFile } from './uploading/staging-engine.js';
 import { UploadInterceptor } from './uploading/upload.interceptor.js';
 
-const maxHeadBytes = 256 * 1024;
+const maxHeadBytes = 1024 * 1024;
 
 @ApiTags('recordings')
 @Controller('projects/:id')
 export class UploadsController {
-  constructor(private readonly recordings: RecordingsService) {}
+  constructor(
+    private readonly recordings: RecordingsService,
+    private readonly previews: PreviewsService,
+  ) {}
 
   @Post('recordings')
   @UseInterceptors(UploadInterceptor)
@@ -54,10 +57,14 @@ export class UploadsController {
   @ApiConsumes('multipart/form-data')
   @ApiBody({ schema: previewBody })
   @ZodResponse({ status: 200, type: ImportPreviewDto })
-  @ApiProblem(413, 'The beginning is longer than 256 KiB')
-  preview(@UploadedFile() head: Express.Multer.File | undefined, @Body() fields: PreviewDto) {
+  @ApiProblem(413, 'The beginning is longer than 1 MiB')
+  preview(
+    @Param('id') projectId: string,
+    @UploadedFile() head: Express.Multer.File | undefined,
+    @Body() fields: PreviewDto,
+  ) {
     if (head === undefined) throw missing('head', 'Send the beginning of the file as a part named head');
-    return importPreview(head.buffer, fields);
+    return this.previews.preview(projectId, head.buffer, fields);
   }
 }
 

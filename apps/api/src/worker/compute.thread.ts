@@ -12,6 +12,7 @@ import type {
 import type { ComputeContext } from '../jobs/compute-task.js';
 import { Delegation } from '../jobs/delegation.js';
 import { toPlainError } from '../jobs/plain-error.js';
+import { previewTask, type PreviewTaskInput } from '../recordings/previewing/preview-task.js';
 import { readTask, type ReadTaskInput } from '../recordings/reading/read-task.js';
 import { openStorage } from '../storage/open-storage.js';
 import { lowerThreadPriority } from './lower-priority.js';
@@ -43,6 +44,8 @@ async function outcomeOf(request: ComputeRequest): Promise<ComputeOutcome> {
 
 function perform({ task, input }: ComputeRequest, context: ComputeContext): Promise<unknown> {
   switch (task) {
+    case 'preview':
+      return previewTask(input as PreviewTaskInput);
     case 'read':
       return readTask(input as ReadTaskInput, context);
     case 'analyse':

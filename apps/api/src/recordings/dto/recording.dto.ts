@@ -1,6 +1,6 @@
 import {
-  importOptionsSchema,
   importPreviewSchema,
+  readAgainSchema,
   recordingPageSchema,
   recordingQuerySchema,
   recordingSchema,
@@ -14,7 +14,7 @@ export class RecordingDto extends createZodDto(recordingSchema) {}
 export class RecordingPageDto extends createZodDto(recordingPageSchema) {}
 export class RecordingQueryDto extends createZodDto(recordingQuerySchema) {}
 export class UpdateRecordingDto extends createZodDto(updateRecordingSchema) {}
-export class ImportOptionsDto extends createZodDto(importOptionsSchema) {}
+export class ReadAgainDto extends createZodDto(readAgainSchema) {}
 export class ImportPreviewDto extends createZodDto(importPreviewSchema) {}
 export class WaveformQueryDto extends createZodDto(waveformQuerySchema) {}
 export class WaveformDto extends createZodDto(waveformSchema) {}

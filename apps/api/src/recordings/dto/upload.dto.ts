@@ -1,4 +1,4 @@
-import { importOptionsSchema, updateRecordingSchema } from '@overtally/contracts';
+import { importOptionsSchema, readingRuleIdSchema, updateRecordingSchema } from '@overtally/contracts';
 import { createZodDto } from 'nestjs-zod';
 import { z } from 'zod';
 import { jsonText } from './json-text.js';
@@ -9,6 +9,12 @@ const bench = updateRecordingSchema.omit({ channels: true }).shape;
 const filled = <T extends z.ZodType>(schema: T) =>
   z.preprocess((value) => (value === '' ? undefined : value), schema);
 
+/** An empty text counts as absent, the text null as none. */
+const readingRuleIdField = z.preprocess(
+  (value) => (value === '' ? undefined : value === 'null' ? null : value),
+  readingRuleIdSchema,
+);
+
 const uploadSchema = z.object({
   name: filled(bench.name),
   eut: filled(bench.eut),
@@ -17,6 +23,7 @@ const uploadSchema = z.object({
   capturedAt: filled(bench.capturedAt),
   remark: filled(bench.remark),
   import: jsonText(importOptionsSchema).optional(),
+  readingRuleId: readingRuleIdField,
 });
 
 /** The text fields that go with an uploaded file. */
@@ -27,6 +34,7 @@ const previewSchema = z.object({
   fileName: z.string().min(1).max(255),
   sizeBytes: z.coerce.number().int().min(0),
   import: jsonText(importOptionsSchema).optional(),
+  readingRuleId: readingRuleIdField,
 });
 
 /** The text fields that go with the beginning of a file. */
@@ -34,6 +42,13 @@ export class PreviewDto extends createZodDto(previewSchema) {}
 export type PreviewFields = z.output<typeof previewSchema>;
 
 const text = { type: 'string' } as const;
+
+const readingRuleText = {
+  ...text,
+  description:
+    'Id of the reading rule that the options come from, whose own are used without any; null for none. Absent: the ' +
+    'rule that fits the file is used, unless options are stated',
+};
 
 /** The multipart bodies, for the OpenAPI document. */
 export const uploadBody = {
@@ -52,6 +67,7 @@ export const uploadBody = {
     capturedAt: { ...text, format: 'date-time' },
     remark: text,
     import: { ...text, description: 'Import options as JSON; what is absent is detected' },
+    readingRuleId: readingRuleText,
   },
 };
 
@@ -59,9 +75,10 @@ export const previewBody = {
   type: 'object',
   required: ['head', 'fileName', 'sizeBytes'],
   properties: {
-    head: { type: 'string', format: 'binary', description: 'The first bytes of the file, up to 256 KiB' },
+    head: { type: 'string', format: 'binary', description: 'The first bytes of the file, up to 1 MiB' },
     fileName: text,
     sizeBytes: { type: 'integer', description: 'Size of the whole file' },
     import: { ...text, description: 'Import options as JSON' },
+    readingRuleId: readingRuleText,
   },
 };

@@ -9,6 +9,7 @@ import { isComputeStopped } from '../../jobs/compute-task.js';
 import { readRecordingJob } from '../../jobs/definitions/read-recording.job.js';
 import type { JobContext, JobHandler } from '../../jobs/job-handler.js';
 import { watched } from '../../jobs/watched-compute.js';
+import { ReadingRulesService } from '../../reading-rules/reading-rules.service.js';
 import { Storage } from '../../storage/storage.js';
 import { AnalysisRunsService } from '../analysis-runs.service.js';
 import { readPrefix } from '../recording-keys.js';
@@ -26,6 +27,7 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
   constructor(
     @Inject(DATABASE) private readonly database: Database,
     private readonly repository: RecordingsRepository,
+    private readonly rules: ReadingRulesService,
     private readonly runs: AnalysisRunsService,
     private readonly storage: Storage,
     private readonly pool: ComputePool,
@@ -40,7 +42,7 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
     } else if (result.ok) {
       await this.keep(payload, result);
     } else {
-      await this.fail(payload, result.problem);
+      await this.fail(payload, underRule(result.problem, payload));
     }
   }
 
@@ -106,6 +108,7 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
       const { format, metadata, sampleRateHz, sampleCount, warnings } = result;
       await this.repository.update(tx, recordingId, {
         importOptions,
+        ...(await this.rules.reference(tx, payload.readingRule)),
         format,
         metadata,
         sampleRateHz,
@@ -138,4 +141,14 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
       await this.repository.update(tx, recording.id, { status: 'failed', problem });
     });
   }
+}
+
+/** A problem of a file that was read by a rule: the fault may lie in the rule, which whoever sent the file may not know. */
+function underRule(problem: ReadProblem, { readingRule }: Payload): ReadProblem {
+  if (readingRule === null) return problem;
+  return {
+    ...problem,
+    message: `Read by the reading rule “${readingRule.name}”: ${problem.message}`,
+    cure: `${problem.cure} If the rule does not suit this file, change the rule or read the file again without it.`,
+  };
 }
