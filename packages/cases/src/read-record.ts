@@ -15,12 +15,12 @@ export async function readFileOf(
   const path = join(folder, name);
   const { size } = await stat(path);
   const blocks: Float64Array[][] = [];
-  const outcome = await readRecording(createReadStream(path), {
+  const outcome = await readRecording(() => createReadStream(path), {
     fileName: name,
     sizeBytes: size,
     options,
     sink: {
-      begin: (channels) => void channels.forEach(() => blocks.push([])),
+      begin: (channels) => void blocks.splice(0, blocks.length, ...channels.map(() => [])),
       write: (index, samples) => void blocks[index]!.push(samples.slice()),
     },
   });

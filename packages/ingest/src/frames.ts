@@ -1,8 +1,43 @@
 import { refuse } from './refusal.js';
-import type { ReadWarning } from './types.js';
+import type { ReadChannel, ReadWarning } from './types.js';
+
+/** Counts samples that are no numbers, per channel, and knows the first. */
+export class MissingTally {
+  readonly counts: number[];
+  private first: { channel: string; sample: number } | null = null;
+
+  constructor(private readonly channels: ReadChannel[]) {
+    this.counts = channels.map(() => 0);
+  }
+
+  /** Takes `samples` of a channel, the first of them sample number `from`, counted from 0; what is no finite number becomes NaN. */
+  take(index: number, samples: Float64Array, from: number): void {
+    const missing = keepFinite(samples);
+    if (missing > 0) this.add(index, from + samples.findIndex((value) => Number.isNaN(value)), missing);
+  }
+
+  /** Counts `missing` samples of a channel, the first of them sample number `from`. */
+  add(index: number, from: number, missing: number): void {
+    this.counts[index] = (this.counts[index] as number) + missing;
+    this.first ??= { channel: this.channels[index]?.name ?? '', sample: from };
+  }
+
+  /** Warning about what was counted, none when there is nothing. */
+  warnings(): ReadWarning[] {
+    const total = this.counts.reduce((sum, n) => sum + n, 0);
+    if (this.first === null || total === 0) return [];
+    const { channel, sample } = this.first;
+    const place = `sample ${sample + 1} of channel "${channel}"`;
+    const message =
+      total === 1
+        ? `1 sample is not a finite number, ${place}.`
+        : `${total} samples are not finite numbers, first ${place}.`;
+    return [{ code: 'missing-values', message, count: total, samples: [sample] }];
+  }
+}
 
 /** Replaces what is no finite number by NaN; returns how many there were. */
-export function keepFinite(samples: Float64Array): number {
+function keepFinite(samples: Float64Array): number {
   let missing = 0;
   for (let i = 0; i < samples.length; i += 1) {
     if (Number.isFinite(samples[i])) continue;
@@ -10,17 +45,6 @@ export function keepFinite(samples: Float64Array): number {
     missing += 1;
   }
   return missing;
-}
-
-/** Warning about samples that are no numbers, none when there are none. `missing`: how many per channel. */
-export function missingWarning(missing: number[]): ReadWarning[] {
-  const total = missing.reduce((sum, n) => sum + n, 0);
-  if (total === 0) return [];
-  const message =
-    total === 1
-      ? '1 sample is not a finite number; it is kept as missing, not as zero.'
-      : `${total} samples are not finite numbers; they are kept as missing, not as zero.`;
-  return [{ code: 'missing-values', message, count: total }];
 }
 
 /** Refuses a record of fewer than two samples. `what` begins the sentence, such as "The .npy file". */

@@ -46,9 +46,15 @@ export interface ImportOptions {
   timeColumn?: number | string | null;
   timeUnit?: TimeUnit;
   channels?: ChannelOptions[];
-  /** Cells without a number: kept as missing (default), bridged by a straight line, or refused. */
+  /**
+   * Samples without a number: kept as missing (default), bridged by a straight line in runs of up to ten (at the ends by
+   * the nearest number; longer runs stay missing), or the file refused.
+   */
   missingValues?: 'keep' | 'interpolate' | 'refuse';
-  /** Time stamps that are not even: resampled (default), taken as even at the mean rate, or refused. */
+  /**
+   * Time stamps off by more than 5 % of their interval: resampled at the mean rate (default; see `readRecording`), taken
+   * as even at that rate, or the file refused. A sample rate that is given rules over the stamps.
+   */
   unevenTime?: 'resample' | 'take-as-even' | 'refuse';
 }
 
@@ -73,10 +79,11 @@ export interface ReadChannel {
 
 /** Receives the samples while the file is read. */
 export interface SampleSink {
+  /** Called once the channels are known; called again where a file is read twice: what was written before is void then. */
   begin(channels: ReadChannel[]): void | Promise<void>;
   /**
    * Raw values as they stand in the file (integer WAV: code / 2^(bits-1); .npy and COMTRADE: the stored number), before gain and offset; NaN where a
-   * value is missing. The buffer is used again once the returned promise resolves.
+   * value is missing. Uneven time stamps are resampled and missing values bridged among the raw values. The buffer is used again once the returned promise resolves.
    */
   write(channelIndex: number, samples: Float64Array): void | Promise<void>;
 }

@@ -62,7 +62,7 @@ describe('time stamps', () => {
     expect(read.warnings).toEqual([
       expect.objectContaining({
         ...{ code: 'missing-values', count: 1, firstLine: 5 },
-        message: '1 cell holds no number, at line 5; it is kept as missing, not as zero.',
+        message: '1 cell holds no number, at line 5. What is missing is kept as missing, not as zero.',
       }),
     ]);
   });

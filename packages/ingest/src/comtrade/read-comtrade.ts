@@ -1,8 +1,10 @@
 import type { ByteSource } from '../byte-source.js';
 import { isUsableRate } from '../channels.js';
-import { TimeAxis } from '../csv/time-axis.js';
-import { missingWarning, requireFrames } from '../frames.js';
+import { EVEN, TimeAxis } from '../csv/time-axis.js';
+import { MissingTally, requireFrames } from '../frames.js';
 import { refuse } from '../refusal.js';
+import type { Resampler } from '../resampling/resampler.js';
+import type { TimeRule } from '../resampling/time-rule.js';
 import type { ImportOptions, ReadChannel, ReadSuccess, ReadWarning, SampleSink } from '../types.js';
 import { type CffHead, readCffHead } from './cff.js';
 import { comtradeChannels, describeComtrade, recordReader } from './layout.js';
@@ -16,6 +18,7 @@ const MAX_LINE_BYTES = 1 << 22;
 export interface ComtradeArguments {
   options: ImportOptions;
   sink: SampleSink;
+  time: TimeRule;
 }
 
 async function readHead(source: ByteSource): Promise<CffHead> {
@@ -31,7 +34,7 @@ async function readHead(source: ByteSource): Promise<CffHead> {
 /** Reads the data block by block; what it counts stands in the fields at the end. */
 class DataReader {
   frameCount = 0;
-  readonly missing: number[];
+  readonly missing: MissingTally;
   private begun = false;
   private held: Float64Array[] = [];
 
@@ -40,8 +43,9 @@ class DataReader {
     private readonly channels: ReadChannel[],
     private readonly stamps: Stamps,
     private readonly sink: SampleSink,
+    private readonly resampler: Resampler | null,
   ) {
-    this.missing = channels.map(() => 0);
+    this.missing = new MissingTally(channels);
   }
 
   async read(source: ByteSource, dataBytes: number | null): Promise<void> {
@@ -66,11 +70,14 @@ class DataReader {
   private async hand(): Promise<void> {
     const { count, values, stamps } = this.records;
     this.stamps.take(stamps, count, this.frameCount);
-    this.frameCount += count;
     const blocks = values.map((block) => block.subarray(0, count));
-    for (const [index, block] of blocks.entries()) {
-      for (const value of block)
-        if (Number.isNaN(value)) this.missing[index] = (this.missing[index] as number) + 1;
+    for (const [index, block] of blocks.entries()) this.missing.take(index, block, this.frameCount);
+    this.frameCount += count;
+    if (this.resampler !== null) {
+      if (!this.begun) await this.sink.begin(this.channels);
+      this.begun = true;
+      await this.resampler.take(stamps, blocks, count);
+      return;
     }
     if (!this.begun && this.frameCount < 2) {
       // Nothing is begun before it is certain that there is a record.
@@ -130,24 +137,27 @@ export async function readComtrade(source: ByteSource, args: ComtradeArguments):
       )
     : null;
   const stamps = new Stamps(config.secondsPerStamp, axis);
-  const reader = new DataReader(recordReader(head, columns), channels, stamps, sink);
+  const resampler = args.time.resampler(channels.length, sink);
+  const reader = new DataReader(recordReader(head, columns), channels, stamps, sink, resampler);
   await reader.read(source, isText ? null : head.dataBytes);
+  await resampler?.finish();
+  if (axis !== null) args.time.settle(axis, reader.frameCount);
   const warnings = [
     ...dataWarnings(head, reader.frameCount, reader.records.cut),
-    ...missingWarning(reader.missing),
-    ...stamps.warnings(config.sampleRateHz),
+    ...reader.missing.warnings(),
+    ...stamps.warnings(config.sampleRateHz, resampler?.treatment ?? EVEN),
     ...configWarnings(head, channels, options),
   ];
-  const sampleRateHz = chooseRate(head, options, stamps, warnings);
+  const sampleRateHz = resampler?.rateHz ?? chooseRate(head, options, stamps, warnings);
   const layout = describeComtrade(head);
   const names = (layout.columns ?? []).map(({ name }) => name);
   return {
     ok: true,
     format: 'comtrade',
     sampleRateHz,
-    sampleCount: reader.frameCount,
+    sampleCount: resampler?.grid.count ?? reader.frameCount,
     channels,
-    missingValues: reader.missing,
+    missingValues: resampler?.missing ?? reader.missing.counts,
     startTimeS: stamps.startS,
     warnings,
     metadata: comtradeMetadata(head, names),

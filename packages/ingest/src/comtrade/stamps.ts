@@ -36,9 +36,12 @@ export class Stamps {
     return rate > 0 && Number.isFinite(rate) ? rate : null;
   }
 
-  /** What the stamps show. `statedHz`: the sampling rate of the configuration, which wins over them. */
-  warnings(statedHz: number | null): ReadWarning[] {
-    if (this.axis !== null) return this.axis.warnings();
+  /**
+   * What the stamps show. `statedHz`: the sampling rate of the configuration, which wins over them; `treatment`: what was
+   * done about uneven ones.
+   */
+  warnings(statedHz: number | null, treatment: string): ReadWarning[] {
+    if (this.axis !== null) return this.axis.warnings(treatment);
     if (statedHz !== null && this.falls > 0) {
       const message = `The time stamps of the records do not rise throughout (${this.falls} times not); the sampling rate of the configuration, ${statedHz} Hz, is used.`;
       return [{ code: 'time-stamps-differ', message, count: this.falls }];

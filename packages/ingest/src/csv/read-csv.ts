@@ -1,11 +1,13 @@
 import { ByteSource } from '../byte-source.js';
 import { isUsableRate } from '../channels.js';
 import { refuse } from '../refusal.js';
+import type { TimeRule } from '../resampling/time-rule.js';
 import type { ImportOptions, LayoutColumn, ReadSuccess, ReadWarning, SampleSink } from '../types.js';
 import { decodeText, guessEncoding, utf16ToUtf8 } from './encoding.js';
 import type { CsvLayout } from './layout.js';
 import { describeLayout, planCsv, refuseNoSampleRate, requireSampleRate } from './plan.js';
 import { TableReader } from './table-reader.js';
+import { EVEN } from './time-axis.js';
 
 /** Bytes that are looked at to work out how a table is laid out. */
 const HEAD_BYTES = 1 << 17;
@@ -16,6 +18,7 @@ export interface CsvArguments {
   fileName: string;
   options: ImportOptions;
   sink: SampleSink;
+  time: TimeRule;
 }
 
 async function* bytesOf(source: ByteSource): AsyncGenerator<Uint8Array> {
@@ -51,8 +54,9 @@ function chooseRate(
   layout: CsvLayout,
   options: ImportOptions,
   warnings: ReadWarning[],
+  gridRateHz: number | null,
 ): number {
-  const measured = reader.axis?.sampleRateHz() ?? layout.statedSampleRateHz;
+  const measured = gridRateHz ?? reader.axis?.sampleRateHz() ?? layout.statedSampleRateHz;
   const stated = options.sampleRateHz;
   if (stated === undefined) {
     if (measured === null || !Number.isFinite(measured)) {
@@ -96,24 +100,28 @@ export async function readCsv(input: ByteSource, args: CsvArguments): Promise<Re
   requireSampleRate(plan, args.options);
   const { layout, channels } = plan;
   await args.sink.begin(channels);
-  const reader = new TableReader(plan, args.sink);
+  const resampler = args.time.resampler(channels.length, args.sink);
+  const refusesMissing = args.options.missingValues === 'refuse';
+  const reader = new TableReader(plan, args.sink, { refusesMissing, resampler });
   await readRows(source, reader);
+  await resampler?.finish();
   const { collector, axis } = reader;
   refuseTooFew(collector.rowCount, args.fileName);
+  if (axis !== null) args.time.settle(axis, collector.rowCount);
   const warnings = [
     ...collector.warnings(),
-    ...(axis?.warnings() ?? []),
+    ...(axis?.warnings(resampler?.treatment ?? EVEN) ?? []),
     ...leftOutWarnings(layout, args.options),
   ];
-  const sampleRateHz = chooseRate(reader, layout, args.options, warnings);
+  const sampleRateHz = chooseRate(reader, layout, args.options, warnings, resampler?.rateHz ?? null);
   const start = reader.startText;
   return {
     ok: true,
     format: 'csv',
     sampleRateHz,
-    sampleCount: collector.rowCount,
+    sampleCount: resampler?.grid.count ?? collector.rowCount,
     channels,
-    missingValues: collector.missing,
+    missingValues: resampler?.missing ?? collector.missing,
     startTimeS: axis?.startS ?? null,
     warnings,
     metadata: start === null ? layout.metadata : { ...layout.metadata, startTime: start },

@@ -1,3 +1,4 @@
+import { refuseMissing } from '../missing/missing-values.js';
 import { refuse } from '../refusal.js';
 import type { ReadChannel, ReadWarning } from '../types.js';
 import type { CsvLayout } from './layout.js';
@@ -13,6 +14,8 @@ export class RowCollector {
   rowCount = 0;
   readonly blocks: Float64Array[];
   readonly missing: number[];
+  /** Time stamps of the rows in the block, NaN where one is missing; not kept without a time column. */
+  readonly stamps: Float64Array;
   private readonly capacity: number;
   private readonly previous: Float64Array;
   private missingLine = 0;
@@ -27,10 +30,12 @@ export class RowCollector {
     private readonly layout: CsvLayout,
     private readonly channels: ReadChannel[],
     private readonly axis: TimeAxis | null,
+    private readonly refusesMissing: boolean,
   ) {
     this.capacity = Math.max(64, Math.min(16384, Math.floor(BLOCK_VALUES / channels.length)));
     this.blocks = channels.map(() => new Float64Array(this.capacity));
     this.missing = channels.map(() => 0);
+    this.stamps = new Float64Array(axis === null ? 0 : this.capacity);
     this.previous = new Float64Array(channels.length);
   }
 
@@ -65,8 +70,8 @@ export class RowCollector {
         code: 'missing-values',
         message:
           missing === 1
-            ? `1 cell holds no number, at line ${this.missingLine}; it is kept as missing, not as zero.`
-            : `${missing} cells hold no number, first at line ${this.missingLine}; they are kept as missing, not as zero.`,
+            ? `1 cell holds no number, at line ${this.missingLine}.`
+            : `${missing} cells hold no number, first at line ${this.missingLine}.`,
         count: missing,
         firstLine: this.missingLine,
       });
@@ -148,8 +153,9 @@ export class RowCollector {
     }
     if (kind === 0) {
       this.missingTimes += 1;
-      if (this.missingLine === 0) this.missingLine = line;
+      this.noteMissing(line, time.column);
       this.axis.skip();
+      this.stamps[this.filled] = NaN;
       return true;
     }
     const stamp = parser.cells[time.column] as number;
@@ -159,11 +165,21 @@ export class RowCollector {
       return false;
     }
     this.axis.push(stamp, line, this.rowCount);
+    this.stamps[this.filled] = stamp;
     return true;
   }
 
   private equalsPrevious(parser: RowParser): boolean {
     return this.channels.every(({ column }, k) => Object.is(parser.cells[column], this.previous[k]));
+  }
+
+  private noteMissing(line: number, column: number): void {
+    if (this.refusesMissing)
+      refuseMissing(`Line ${line}, column ${column + 1}: the cell holds no number`, {
+        line,
+        column: column + 1,
+      });
+    if (this.missingLine === 0) this.missingLine = line;
   }
 
   private keepValues(parser: RowParser, line: number): void {
@@ -173,7 +189,7 @@ export class RowCollector {
       const value = parser.cells[column] as number;
       if (parser.kinds[column] !== 1) {
         this.missing[k] = (this.missing[k] as number) + 1;
-        if (this.missingLine === 0) this.missingLine = line;
+        this.noteMissing(line, column);
       }
       previous[k] = value;
       (blocks[k] as Float64Array)[filled] = value;

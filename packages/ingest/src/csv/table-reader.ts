@@ -1,3 +1,4 @@
+import type { Resampler } from '../resampling/resampler.js';
 import type { SampleSink } from '../types.js';
 import type { CsvPlan } from './plan.js';
 import { RowCollector } from './row-collector.js';
@@ -19,11 +20,12 @@ export class TableReader {
   constructor(
     private readonly plan: CsvPlan,
     private readonly sink: SampleSink,
+    private readonly rules: { refusesMissing: boolean; resampler: Resampler | null },
   ) {
     const { layout, channels, encoding } = plan;
     this.axis = layout.time === null ? null : new TimeAxis(layout.time);
     this.stamps = layout.time !== null && layout.time.unit === null ? makeStampReader() : null;
-    this.collector = new RowCollector(layout, channels, this.axis);
+    this.collector = new RowCollector(layout, channels, this.axis, rules.refusesMissing);
     const wanted = layout.columns.map(
       ({ index }) => index === layout.time?.column || channels.some(({ column }) => column === index),
     );
@@ -59,9 +61,12 @@ export class TableReader {
   }
 
   async flush(): Promise<void> {
-    const { blocks, filled } = this.collector;
+    const { blocks, stamps, filled } = this.collector;
     if (filled === 0) return;
-    for (const [index, block] of blocks.entries()) await this.sink.write(index, block.subarray(0, filled));
+    const { resampler } = this.rules;
+    if (resampler !== null) await resampler.take(stamps, blocks, filled);
+    else
+      for (const [index, block] of blocks.entries()) await this.sink.write(index, block.subarray(0, filled));
     this.collector.filled = 0;
   }
 }

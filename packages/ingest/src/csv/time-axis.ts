@@ -1,10 +1,15 @@
 import { refuse } from '../refusal.js';
+import type { EvenGrid } from '../resampling/even-grid.js';
 import type { ReadWarning } from '../types.js';
 import type { TimeChoice } from './time-column.js';
 
 const SETTLE_AFTER = 256;
 const UNEVEN = 0.05;
 const GAP = 1.5;
+/** Intervals between stamps from which on at least one sample is missing, however uneven they are; a resampling leaves a pause. */
+const PAUSE = 2;
+/** Finest digit that is looked for in time stamps. */
+const FINEST_DIGIT = 12;
 
 /** Places that are told one by one. */
 const PLACES = 20;
@@ -45,6 +50,33 @@ function count(tally: Tally, { line, sample }: Step, value: number): void {
 
 const emptyTally = (): Tally => ({ count: 0, firstLine: 0, samples: [], value: 0 });
 
+/** What is done about uneven stamps that are not resampled. */
+export const EVEN = 'the samples are taken as evenly spaced at the mean rate';
+const COARSE = `the digits of the stamps are too few for their interval, which explains it, so ${EVEN}`;
+
+/** Value of the last digit that stamps are written with, 0 where they have more than are looked for. */
+function lastDigit(stamps: number[]): number {
+  for (let digits = 0; digits <= FINEST_DIGIT; digits += 1) {
+    const scale = 10 ** digits;
+    const isWhole = (stamp: number) => Math.abs(stamp * scale - Math.round(stamp * scale)) < 1e-3;
+    if (stamps.every(isWhole)) return 1 / scale;
+  }
+  return 0;
+}
+
+/**
+ * True where even stamps, each rounded to its last digit, would look like these: a straight line stays within one digit
+ * of all of them, counted from the first.
+ */
+function isCoarse(first: number, steps: Step[]): boolean {
+  const stamps = [first];
+  for (const { step } of steps) stamps.push((stamps.at(-1) as number) + step);
+  const digit = lastDigit(stamps) * (1 + 1e-6);
+  const slopes = (sign: number) =>
+    stamps.slice(1).map((stamp, i) => (stamp - first + sign * digit) / (i + 1));
+  return Math.max(...slopes(-1)) <= Math.min(...slopes(1));
+}
+
 /**
  * Watches the time stamps go by: refuses time that runs backwards, counts uneven intervals and gaps against the median
  * of the first intervals, and knows the sample rate at the end. Holds no stamps beyond the first few hundred.
@@ -60,6 +92,10 @@ export class TimeAxis {
   private regularCount = 0;
   private readonly uneven = emptyTally();
   private readonly gaps = emptyTally();
+  /** Intervals that are gaps but no pauses, and their time. */
+  private longTime = 0;
+  private longCount = 0;
+  private coarse = false;
 
   /** Stamps stay in the unit of the file, so that no rounding comes into their differences. */
   constructor(
@@ -105,13 +141,45 @@ export class TimeAxis {
     return this.intervals / ((this.lastStamp - this.firstStamp) * this.time.secondsPerUnit);
   }
 
-  warnings(): ReadWarning[] {
+  /**
+   * The grid to which the stamps are to be resampled at their mean rate; null where they are even within 5 %, or where
+   * the digits they are written with explain how they differ (judged by the first few hundred).
+   */
+  evenGrid(): EvenGrid | null {
+    this.settle();
+    if (this.uneven.count === 0 || this.coarse) return null;
+    const regular = this.regularCount + this.longCount;
+    const span = this.lastStamp - this.firstStamp;
+    const isWhole = regular === this.intervals;
+    const interval = isWhole ? span / regular : (this.regularTime + this.longTime) / regular;
+    const count = isWhole ? regular + 1 : Math.floor(span / interval + 1e-9) + 1;
+    const { secondsPerUnit } = this.time;
+    const [first, last] = [this.firstStamp, this.lastStamp];
+    return { first, last, interval, count, widest: PAUSE * this.interval, secondsPerUnit };
+  }
+
+  /** Refuses stamps that are uneven, whatever the reason. */
+  refuseUneven(): void {
+    this.settle();
+    const { count: times, firstLine } = this.uneven;
+    if (times === 0) return;
+    const isLine = this.rows.row === 'line';
+    refuse(
+      'uneven-sampling',
+      `${times} intervals between time stamps differ by more than 5 % from the usual one, first at ${this.rows.row} ${firstLine}.`,
+      'Export the record with even time stamps, or have it resampled to its mean rate.',
+      isLine ? { line: firstLine, column: this.time.column + 1 } : {},
+    );
+  }
+
+  /** @param treatment what was done about uneven stamps, as the end of a sentence */
+  warnings(treatment: string): ReadWarning[] {
     this.settle();
     const found: ReadWarning[] = [];
     if (this.uneven.count > 0) {
       found.push({
         code: 'uneven-sampling',
-        message: `${this.uneven.count} intervals between time stamps differ by more than 5 % from the usual one, first at ${this.rows.row} ${this.uneven.firstLine}; the samples are treated as evenly spaced at the mean rate.`,
+        message: `${this.uneven.count} intervals between time stamps differ by more than 5 % from the usual one, first at ${this.rows.row} ${this.uneven.firstLine}; ${this.coarse && treatment === EVEN ? COARSE : treatment}.`,
         ...this.placesOf(this.uneven),
         limit: 100 * UNEVEN,
         unit: '%',
@@ -147,6 +215,7 @@ export class TimeAxis {
     this.early = null;
     const steps = early.map(({ step }) => step).sort((a, b) => a - b);
     this.interval = steps[steps.length >> 1] ?? 0;
+    this.coarse = isCoarse(this.firstStamp, early);
     for (const step of early) this.judge(step);
   }
 
@@ -154,6 +223,10 @@ export class TimeAxis {
     const { step } = place;
     if (step > GAP * this.interval) {
       count(this.gaps, place, step / this.interval);
+      if (step <= PAUSE * this.interval) {
+        this.longTime += step;
+        this.longCount += 1;
+      }
       return;
     }
     this.regularTime += step;

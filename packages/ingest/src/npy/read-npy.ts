@@ -1,5 +1,5 @@
 import type { ByteSource } from '../byte-source.js';
-import { keepFinite, missingWarning, requireFrames } from '../frames.js';
+import { MissingTally, requireFrames } from '../frames.js';
 import type { ImportOptions, ReadChannel, ReadSuccess, ReadWarning, SampleSink } from '../types.js';
 import { type NpyHeader, readNpyHeader } from './header.js';
 import { describeNpy, npyChannels, npySampleRateHz } from './layout.js';
@@ -18,7 +18,7 @@ class ArrayReader {
   frameCount = 0;
   /** True when the file ends before the array does. */
   cut = false;
-  readonly missing: number[];
+  readonly missing: MissingTally;
   /** Integers that a double cannot hold exactly. */
   rounded = 0;
   private readonly out = new Float64Array(BLOCK_BYTES);
@@ -30,7 +30,7 @@ class ArrayReader {
     private readonly channels: ReadChannel[],
     private readonly sink: SampleSink,
   ) {
-    this.missing = channels.map(() => 0);
+    this.missing = new MissingTally(channels);
     this.decode = decoderOf(header.type);
   }
 
@@ -48,7 +48,7 @@ class ArrayReader {
       const bytes = await this.source.peek(wanted * stride);
       const frames = Math.floor(bytes.length / stride);
       for (const [index, { column }] of this.channels.entries()) {
-        await this.hand(index, bytes, column * type.bytes, stride, frames);
+        await this.hand(index, bytes, { from: column * type.bytes, stride, frames, sample: this.frameCount });
       }
       this.source.consume(frames * stride);
       this.frameCount += frames;
@@ -79,7 +79,8 @@ class ArrayReader {
       const bytes = await this.source.peek(wanted * type.bytes);
       const frames = Math.floor(bytes.length / type.bytes);
       for (const [index, { column }] of this.channels.entries()) {
-        if (column === plane) await this.hand(index, bytes, 0, type.bytes, frames);
+        if (column === plane)
+          await this.hand(index, bytes, { from: 0, stride: type.bytes, frames, sample: read });
       }
       this.source.consume(frames * type.bytes);
       read += frames;
@@ -91,15 +92,12 @@ class ArrayReader {
   private async hand(
     index: number,
     bytes: Uint8Array,
-    from: number,
-    stride: number,
-    frames: number,
+    { from, stride, frames, sample }: { from: number; stride: number; frames: number; sample: number },
   ): Promise<void> {
     if (frames === 0) return;
     const samples = this.out.subarray(0, frames);
     this.decode(bytes, from, stride, frames, samples);
-    if (this.header.type.kind === 'f')
-      this.missing[index] = (this.missing[index] as number) + keepFinite(samples);
+    if (this.header.type.kind === 'f') this.missing.take(index, samples, sample);
     if (this.header.type.bytes === 8 && this.header.type.kind === 'i') this.countRounded(samples);
     await this.sink.write(index, samples);
   }
@@ -114,7 +112,7 @@ class ArrayReader {
       for (let left = count; left > 0; left -= this.out.length) {
         await this.sink.write(index, this.out.subarray(0, Math.min(left, this.out.length)).fill(NaN));
       }
-      this.missing[index] = (this.missing[index] as number) + count;
+      if (count > 0) this.missing.add(index, this.frameCount - count, count);
     }
   }
 }
@@ -127,7 +125,7 @@ function collectWarnings(header: NpyHeader, reader: ArrayReader): ReadWarning[] 
     const message = `The header claims ${header.frameCount} samples in ${header.channelCount === 1 ? '1 channel' : `each of ${header.channelCount} channels`} but the file ends earlier; what is there was read, ${reader.frameCount} samples${rest}.`;
     found.push({ code: 'truncated', message, count: 1, samples: [reader.frameCount] });
   }
-  found.push(...missingWarning(reader.missing));
+  found.push(...reader.missing.warnings());
   if (reader.rounded > 0) {
     const message = `Whole numbers beyond 2^53 were rounded to the nearest that a 64-bit float holds: ${reader.rounded} of them.`;
     found.push({ code: 'rounded-values', message, count: reader.rounded });
@@ -159,7 +157,7 @@ export async function readNpy(source: ByteSource, { options, sink }: NpyArgument
     sampleRateHz,
     sampleCount: reader.frameCount,
     channels,
-    missingValues: reader.missing,
+    missingValues: reader.missing.counts,
     startTimeS: null,
     warnings: collectWarnings(header, reader),
     metadata: {},

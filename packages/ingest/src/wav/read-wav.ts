@@ -1,5 +1,5 @@
 import type { ByteSource } from '../byte-source.js';
-import { keepFinite, requireFrames } from '../frames.js';
+import { MissingTally, requireFrames } from '../frames.js';
 import { refuse } from '../refusal.js';
 import type { ImportOptions, ReadChannel, ReadSuccess, SampleSink } from '../types.js';
 import { fourCc, readWavHeader, type WavHeader } from './header.js';
@@ -47,7 +47,7 @@ async function readSamples(
   const blockFrames = Math.max(1, Math.floor(BLOCK_BYTES / stride));
   const decode = decoderOf(format);
   const out = new Float64Array(blockFrames);
-  const counts: Counts = { frames: 0, leftover: 0, missing: channels.map(() => 0) };
+  const counts: Counts = { frames: 0, leftover: 0, missing: new MissingTally(channels) };
   let left = header.dataBytes ?? Infinity;
   while (left > 0) {
     const bytes = await source.peek(Math.min(left, blockFrames * stride));
@@ -55,8 +55,7 @@ async function readSamples(
     for (const [index, channel] of channels.entries()) {
       const samples = out.subarray(0, frames);
       decode(bytes, channel.column * format.bytesPerSample, stride, frames, samples);
-      if (format.encoding === 'float')
-        counts.missing[index] = (counts.missing[index] as number) + keepFinite(samples);
+      if (format.encoding === 'float') counts.missing.take(index, samples, counts.frames);
       if (frames > 0) await sink.write(index, samples);
     }
     const used = frames === 0 ? bytes.length : frames * stride;
@@ -116,7 +115,7 @@ export async function readWav(source: ByteSource, args: WavArguments): Promise<R
     sampleRateHz: stated ?? own,
     sampleCount: counts.frames,
     channels,
-    missingValues: counts.missing,
+    missingValues: counts.missing.counts,
     startTimeS: null,
     warnings,
     metadata: { ...header.metadata, ...(await readTrailer(source, header)) },

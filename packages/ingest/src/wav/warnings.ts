@@ -1,4 +1,4 @@
-import { missingWarning } from '../frames.js';
+import type { MissingTally } from '../frames.js';
 import type { ReadWarning } from '../types.js';
 import type { WavHeader } from './header.js';
 
@@ -7,7 +7,7 @@ export interface Counts {
   frames: number;
   /** Bytes of a last frame that is not whole. */
   leftover: number;
-  missing: number[];
+  missing: MissingTally;
 }
 
 /** Warnings about the samples of a WAV file that are missing or were not announced. */
@@ -39,6 +39,6 @@ export function collectWarnings(header: WavHeader, counts: Counts): ReadWarning[
       message: 'The header does not state how many samples there are; the file was read to its end.',
     });
   }
-  found.push(...missingWarning(missing));
+  found.push(...missing.warnings());
   return found;
 }

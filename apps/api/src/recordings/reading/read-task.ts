@@ -25,7 +25,7 @@ export async function readTask(input: ReadTaskInput, context: ComputeContext): P
   const stop = new AbortController();
   const sink = new StoringSink(context, () => stop.abort(new ComputeStopped()));
   try {
-    const outcome = await readRecording(await context.storage.read(input.sourceKey), {
+    const outcome = await readRecording(() => context.storage.read(input.sourceKey), {
       fileName: input.fileName,
       sizeBytes: input.sizeBytes,
       options: input.options,
@@ -62,6 +62,7 @@ class StoringSink implements SampleSink {
   ) {}
 
   async begin(channels: ReadChannel[]): Promise<void> {
+    await this.discard();
     for (const { index } of channels) {
       const path = join(this.context.scratchFolder, `${this.folderName}-${index}.npy`);
       this.writers.push(await ChannelWriter.open(path));
