@@ -1,60 +1,39 @@
-import { encodeNpyHeader } from '@overtally/ingest';
-import { open, rm, type FileHandle } from 'node:fs/promises';
-import { asBytes, putNpy } from '../../storage/npy.js';
 import type { Storage } from '../../storage/storage.js';
+import { NpyFile } from './npy-file.js';
 import { PyramidBuilder } from './pyramid.js';
-
-const bufferedSamples = 8192;
 
 /** Receives the samples of one channel in pieces and leaves them and their pyramid in storage. */
 export class ChannelWriter {
-  private readonly pyramid = new PyramidBuilder();
-  private readonly buffer = new Float64Array(bufferedSamples);
-  private buffered = 0;
-  private count = 0;
+  private readonly builder = new PyramidBuilder();
 
   private constructor(
-    private readonly path: string,
-    private readonly file: FileHandle,
+    private readonly samples: NpyFile,
+    private readonly pyramid: NpyFile,
   ) {}
 
-  /** Begins a file at `path`, with room for the header that is written last. */
+  /** Begins the files of a channel, whose names begin with `path`. */
   static async open(path: string): Promise<ChannelWriter> {
-    const file = await open(path, 'w');
-    await file.writeFile(encodeNpyHeader(0));
-    return new ChannelWriter(path, file);
+    const samples = await NpyFile.open(`${path}.npy`);
+    return new ChannelWriter(samples, await NpyFile.open(`${path}-pyramid.npy`));
   }
 
   async write(samples: Float64Array): Promise<void> {
-    this.pyramid.add(samples);
-    this.count += samples.length;
-    if (this.buffered + samples.length > bufferedSamples) await this.flush();
-    if (samples.length > bufferedSamples) {
-      await this.file.writeFile(asBytes(samples));
-      return;
-    }
-    this.buffer.set(samples, this.buffered);
-    this.buffered += samples.length;
+    await this.pyramid.append(this.builder.add(samples));
+    await this.samples.append(samples);
   }
 
-  /** Completes the file and hands it and the pyramid to storage. */
+  /** Completes the files and hands them to storage. */
   async finish(storage: Storage, samplesKey: string, pyramidKey: string): Promise<void> {
-    await this.flush();
-    await this.file.write(encodeNpyHeader(this.count), 0, undefined, 0);
-    await this.file.close();
-    await storage.putFile(samplesKey, this.path);
-    await putNpy(storage, pyramidKey, this.pyramid.finish());
+    await this.samples.finish();
+    await storage.putFile(samplesKey, this.samples.path);
+    for (const level of this.builder.finish()) await this.pyramid.append(level);
+    await this.pyramid.finish();
+    await storage.putFile(pyramidKey, this.pyramid.path);
   }
 
   /** Removes what was written so far. */
   async discard(): Promise<void> {
-    await this.file.close();
-    await rm(this.path, { force: true });
-  }
-
-  private async flush(): Promise<void> {
-    if (this.buffered === 0) return;
-    await this.file.writeFile(asBytes(this.buffer.subarray(0, this.buffered)));
-    this.buffered = 0;
+    await this.samples.discard();
+    await this.pyramid.discard();
   }
 }

@@ -29,50 +29,97 @@ export function pyramidLevels(sampleCount: number): PyramidLevel[] {
   return levels;
 }
 
-/** Builds the pyramid while samples arrive; holds two values for every 64 samples. */
-export class PyramidBuilder {
-  private base = new Float64Array(2048);
+/** Bins of one level while samples arrive: the bin that is open, and those closed since they were last taken. */
+class OpenLevel {
+  private closed = new Float64Array(2048);
   private filled = 0;
   private inBin = 0;
   private lowest = Infinity;
   private highest = -Infinity;
 
-  add(samples: Float64Array): void {
-    for (const sample of samples) {
-      if (sample < this.lowest) this.lowest = sample;
-      if (sample > this.highest) this.highest = sample;
-      this.inBin += 1;
-      if (this.inBin === baseFactor) this.closeBin();
-    }
+  /** @param width parts that make a bin: samples, or bins of the finer level */
+  constructor(private readonly width: number) {}
+
+  /** How many parts are wanting until the open bin is whole. */
+  get wanting(): number {
+    return this.width - this.inBin;
   }
 
-  /** All levels in the layout above. */
-  finish(): Float64Array {
-    if (this.inBin > 0) this.closeBin();
-    const levels: Float64Array[] = [this.base.slice(0, this.filled)];
-    while (levels.at(-1)!.length > 2) levels.push(coarser(levels.at(-1)!));
-    const pyramid = new Float64Array(levels.reduce((length, level) => length + level.length, 0));
-    let offset = 0;
-    for (const level of levels) {
-      pyramid.set(level, offset);
-      offset += level.length;
-    }
-    return pyramid;
+  /** Takes the extremes of `count` parts, no more than are wanting. */
+  add(lowest: number, highest: number, count: number): void {
+    if (lowest < this.lowest) this.lowest = lowest;
+    if (highest > this.highest) this.highest = highest;
+    this.inBin += count;
+    if (this.inBin === this.width) this.close();
   }
 
-  private closeBin(): void {
-    if (this.filled === this.base.length) {
-      const longer = new Float64Array(this.base.length * 2);
-      longer.set(this.base);
-      this.base = longer;
+  /** Closes the last bin, which may be shorter than the others. */
+  end(): void {
+    if (this.inBin > 0) this.close();
+  }
+
+  /** The closed bins as pairs, in memory that is used again; none are left. */
+  take(): Float64Array {
+    const taken = this.closed.subarray(0, this.filled);
+    this.filled = 0;
+    return taken;
+  }
+
+  private close(): void {
+    if (this.filled === this.closed.length) {
+      const longer = new Float64Array(this.closed.length * 2);
+      longer.set(this.closed);
+      this.closed = longer;
     }
     const empty = this.lowest > this.highest;
-    this.base[this.filled] = empty ? NaN : this.lowest;
-    this.base[this.filled + 1] = empty ? NaN : this.highest;
+    this.closed[this.filled] = empty ? NaN : this.lowest;
+    this.closed[this.filled + 1] = empty ? NaN : this.highest;
     this.filled += 2;
     this.inBin = 0;
     this.lowest = Infinity;
     this.highest = -Infinity;
+  }
+}
+
+/** Builds the pyramid while samples arrive; holds two values for every 512 samples, as the finest level is handed on. */
+export class PyramidBuilder {
+  private readonly finest = new OpenLevel(baseFactor);
+  private readonly second = new OpenLevel(levelRatio);
+  private finestBins = 0;
+
+  /** Takes samples; returns the next part of the finest level, valid until the next call. */
+  add(samples: Float64Array): Float64Array {
+    for (let from = 0; from < samples.length;) {
+      const to = Math.min(samples.length, from + this.finest.wanting);
+      let lowest = Infinity;
+      let highest = -Infinity;
+      for (let i = from; i < to; i += 1) {
+        const sample = samples[i]!;
+        if (sample < lowest) lowest = sample;
+        if (sample > highest) highest = sample;
+      }
+      this.finest.add(lowest, highest, to - from);
+      from = to;
+    }
+    return this.takeFinest();
+  }
+
+  /** The rest of the finest level, then every coarser one, in the layout above. */
+  finish(): Float64Array[] {
+    this.finest.end();
+    const rest = this.takeFinest().slice();
+    this.second.end();
+    if (this.finestBins < 2) return [rest];
+    const levels = [this.second.take()];
+    while (levels.at(-1)!.length > 2) levels.push(coarser(levels.at(-1)!));
+    return [rest, ...levels];
+  }
+
+  private takeFinest(): Float64Array {
+    const pairs = this.finest.take();
+    for (let i = 0; i < pairs.length; i += 2) this.second.add(pairs[i]!, pairs[i + 1]!, 1);
+    this.finestBins += pairs.length / 2;
+    return pairs;
   }
 }
 

@@ -64,7 +64,7 @@ class StoringSink implements SampleSink {
   async begin(channels: ReadChannel[]): Promise<void> {
     await this.discard();
     for (const { index } of channels) {
-      const path = join(this.context.scratchFolder, `${this.folderName}-${index}.npy`);
+      const path = join(this.context.scratchFolder, `${this.folderName}-${index}`);
       this.writers.push(await ChannelWriter.open(path));
     }
   }
