@@ -2,6 +2,7 @@ import { refuseMissing } from '../missing/missing-values.js';
 import { refuse } from '../refusal.js';
 import type { ReadChannel, ReadWarning } from '../types.js';
 import type { CsvLayout } from './layout.js';
+import { PlainRows } from './plain-rows.js';
 import type { RowParser } from './row-parser.js';
 import type { TimeAxis } from './time-axis.js';
 
@@ -17,6 +18,7 @@ export class RowCollector {
   /** Time stamps of the rows in the block, NaN where one is missing; not kept without a time column. */
   readonly stamps: Float64Array;
   private readonly capacity: number;
+  private readonly plain: PlainRows | null;
   private readonly previous: Float64Array;
   private missingLine = 0;
   private missingTimes = 0;
@@ -33,14 +35,43 @@ export class RowCollector {
     private readonly refusesMissing: boolean,
   ) {
     this.capacity = Math.max(64, Math.min(16384, Math.floor(BLOCK_VALUES / channels.length)));
-    this.blocks = channels.map(() => new Float64Array(this.capacity));
+    this.plain = PlainRows.create(layout, channels, this.capacity);
+    this.blocks = this.plain?.blocks ?? channels.map(() => new Float64Array(this.capacity));
     this.missing = channels.map(() => 0);
-    this.stamps = new Float64Array(axis === null ? 0 : this.capacity);
+    this.stamps = this.plain?.stamps ?? new Float64Array(axis === null ? 0 : this.capacity);
     this.previous = new Float64Array(channels.length);
   }
 
   get full(): boolean {
     return this.filled === this.capacity;
+  }
+
+  /** The bytes that `takePlain` speaks of. */
+  begin(bytes: Uint8Array): void {
+    this.plain?.begin(bytes);
+  }
+
+  /**
+   * Takes the rows of plain numbers at `from`, the first of them line `line`; returns how many. They end at `next`.
+   */
+  takePlain(from: number, end: number, line: number): number {
+    const { plain, axis, filled } = this;
+    if (plain === null || this.trailingTextLine !== 0) return 0;
+    const count = plain.read(from, end, filled, axis?.latest ?? NaN);
+    if (count === 0) return 0;
+    axis?.pushAll(this.stamps.subarray(filled, filled + count), line, this.rowCount);
+    const [low, high] = plain.tails;
+    this.tailLow = Math.min(this.tailLow, low);
+    this.tailHigh = Math.max(this.tailHigh, high);
+    this.filled += count;
+    this.rowCount += count;
+    for (const [k, block] of this.blocks.entries()) this.previous[k] = block[this.filled - 1] as number;
+    return count;
+  }
+
+  /** Offset of the byte after the plain rows that were taken last. */
+  get next(): number {
+    return this.plain?.next ?? 0;
   }
 
   /** Takes the row that `parser` holds. `unfinished`: it is the last line and has no line end. */

@@ -44,18 +44,28 @@ export class TableReader {
 
   /** Parses whole lines of `bytes`, or all of it when it is the last; returns the bytes used. */
   async read(bytes: Uint8Array, last: boolean): Promise<number> {
+    const { collector, parser } = this;
     const end = last ? bytes.length : lastLineEnd(bytes);
     let p = 0;
+    collector.begin(bytes);
     while (p < end) {
-      if (this.line <= this.plan.layout.dialect.bodyLine) p = nextLine(bytes, p, end);
-      else {
-        this.parser.parse(bytes, p, end, this.line);
-        p = this.parser.next;
-        const ended = bytes[p - 1] === LF || bytes[p - 1] === CR;
-        this.collector.take(this.parser, this.line, !ended);
+      if (this.line <= this.plan.layout.dialect.bodyLine) {
+        p = nextLine(bytes, p, end);
+        this.line += 1;
+        continue;
       }
-      this.line += 1;
-      if (this.collector.full) await this.flush();
+      const rows = collector.takePlain(p, end, this.line);
+      if (rows > 0) {
+        p = collector.next;
+        this.line += rows;
+      } else {
+        parser.parse(bytes, p, end, this.line);
+        p = parser.next;
+        const ended = bytes[p - 1] === LF || bytes[p - 1] === CR;
+        collector.take(parser, this.line, !ended);
+        this.line += 1;
+      }
+      if (collector.full) await this.flush();
     }
     return end;
   }

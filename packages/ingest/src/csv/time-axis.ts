@@ -41,7 +41,7 @@ interface Step {
   sample: number;
 }
 
-function count(tally: Tally, { line, sample }: Step, value: number): void {
+function count(tally: Tally, line: number, sample: number, value: number): void {
   if (tally.count === 0) tally.firstLine = line;
   if (tally.samples.length < PLACES) tally.samples.push(sample);
   tally.count += 1;
@@ -108,6 +108,11 @@ export class TimeAxis {
     return Number.isNaN(this.firstStamp) ? null : this.firstStamp * this.time.secondsPerUnit;
   }
 
+  /** The last stamp, NaN before the first. */
+  get latest(): number {
+    return this.lastStamp;
+  }
+
   /** A row whose time stamp is missing stands in the record like any other. */
   skip(): void {
     this.rowsSinceLast += 1;
@@ -125,10 +130,17 @@ export class TimeAxis {
     else {
       if (stamp <= this.lastStamp) this.refuseBackwards(stamp, line);
       this.intervals += rows;
-      this.measure({ step: (stamp - this.lastStamp) / rows, line, sample });
+      const step = (stamp - this.lastStamp) / rows;
+      if (this.early === null) this.judge(step, line, sample);
+      else this.defer(this.early, { step, line, sample });
     }
     this.lastStamp = stamp;
     this.rowsSinceLast = 0;
+  }
+
+  /** Stamps of rows one after the other, the first at `line` and of sample number `sample`. */
+  pushAll(stamps: Float64Array, line: number, sample: number): void {
+    for (let i = 0; i < stamps.length; i += 1) this.push(stamps[i] as number, line + i, sample + i);
   }
 
   /** Sample rate in Hz, from the regular intervals only where whole rows are missing; null with fewer than two stamps. */
@@ -201,12 +213,9 @@ export class TimeAxis {
     return this.rows.row === 'line' ? { ...tally, firstLine } : tally;
   }
 
-  private measure(step: Step): void {
-    if (this.early === null) this.judge(step);
-    else {
-      this.early.push(step);
-      if (this.early.length === SETTLE_AFTER) this.settle();
-    }
+  private defer(early: Step[], step: Step): void {
+    early.push(step);
+    if (early.length === SETTLE_AFTER) this.settle();
   }
 
   private settle(): void {
@@ -216,13 +225,12 @@ export class TimeAxis {
     const steps = early.map(({ step }) => step).sort((a, b) => a - b);
     this.interval = steps[steps.length >> 1] ?? 0;
     this.coarse = isCoarse(this.firstStamp, early);
-    for (const step of early) this.judge(step);
+    for (const { step, line, sample } of early) this.judge(step, line, sample);
   }
 
-  private judge(place: Step): void {
-    const { step } = place;
+  private judge(step: number, line: number, sample: number): void {
     if (step > GAP * this.interval) {
-      count(this.gaps, place, step / this.interval);
+      count(this.gaps, line, sample, step / this.interval);
       if (step <= PAUSE * this.interval) {
         this.longTime += step;
         this.longCount += 1;
@@ -232,7 +240,7 @@ export class TimeAxis {
     this.regularTime += step;
     this.regularCount += 1;
     const deviation = Math.abs(step - this.interval) / this.interval;
-    if (deviation > UNEVEN) count(this.uneven, place, 100 * deviation);
+    if (deviation > UNEVEN) count(this.uneven, line, sample, 100 * deviation);
   }
 
   private refuseBackwards(stamp: number, line: number): never {

@@ -5,7 +5,7 @@ import type { ImportOptions, ReadChannel, ReadSuccess, SampleSink } from '../typ
 import { fourCc, readWavHeader, type WavHeader } from './header.js';
 import { readInfoList } from './info-list.js';
 import { describeWav, wavChannels } from './layout.js';
-import { decoderOf } from './samples.js';
+import { frameDecoder } from './samples.js';
 import { collectWarnings, type Counts } from './warnings.js';
 
 const HEAD_BYTES = 1 << 16;
@@ -45,16 +45,15 @@ async function readSamples(
   const { format } = header;
   const stride = format.bytesPerSample * format.channelCount;
   const blockFrames = Math.max(1, Math.floor(BLOCK_BYTES / stride));
-  const decode = decoderOf(format);
-  const out = new Float64Array(blockFrames);
+  const decoder = frameDecoder(format, blockFrames);
   const counts: Counts = { frames: 0, leftover: 0, missing: new MissingTally(channels) };
   let left = header.dataBytes ?? Infinity;
   while (left > 0) {
     const bytes = await source.peek(Math.min(left, blockFrames * stride));
     const frames = Math.floor(bytes.length / stride);
+    decoder.begin(bytes.subarray(0, frames * stride));
     for (const [index, channel] of channels.entries()) {
-      const samples = out.subarray(0, frames);
-      decode(bytes, channel.column * format.bytesPerSample, stride, frames, samples);
+      const samples = decoder.decode(channel.column);
       if (format.encoding === 'float') counts.missing.take(index, samples, counts.frames);
       if (frames > 0) await sink.write(index, samples);
     }
