@@ -1,9 +1,9 @@
 /** Reads captures from disk into arrays. */
-import { createReadStream, statSync } from 'node:fs';
+import { open } from 'node:fs/promises';
 import { basename } from 'node:path';
 import { readRecording } from '@overtally/ingest';
 
-const CHUNK_BYTES = 1 << 20;
+const BLOCK_BYTES = 1 << 18;
 
 /**
  * @typedef {object} Capture
@@ -17,13 +17,26 @@ const CHUNK_BYTES = 1 << 20;
  * @returns {Promise<Capture>}
  */
 export async function readCapture(path) {
-  const { size } = statSync(path);
+  const file = await open(path);
+  try {
+    return await read(file, basename(path), (await file.stat()).size);
+  } finally {
+    await file.close();
+  }
+}
+
+/**
+ * @param {import('node:fs/promises').FileHandle} file
+ * @param {string} fileName
+ * @param {number} size
+ */
+async function read(file, fileName, size) {
   /** @type {Float64Array[]} */
   let room = [];
   /** @type {number[]} */
   let filled = [];
-  const outcome = await readRecording(createReadStream(path, { highWaterMark: CHUNK_BYTES }), {
-    fileName: basename(path),
+  const outcome = await readRecording(blocksOf(file), {
+    fileName,
     sizeBytes: size,
     sink: {
       begin: (channels) => {
@@ -41,4 +54,20 @@ export async function readCapture(path) {
   if (!outcome.ok) throw new Error(outcome.problem.message);
   const { sampleRateHz, channels } = outcome;
   return { sampleRateHz, channels, samples: room.map((values, i) => values.subarray(0, filled[i])) };
+}
+
+/**
+ * The bytes of a file, the next block read while one is worked on. A block stands until the one after the next.
+ * @param {import('node:fs/promises').FileHandle} file
+ */
+async function* blocksOf(file) {
+  let [block, other] = [new Uint8Array(BLOCK_BYTES), new Uint8Array(BLOCK_BYTES)];
+  let reading = file.read(block, 0, BLOCK_BYTES);
+  for (;;) {
+    const { bytesRead } = await reading;
+    if (bytesRead === 0) return;
+    reading = file.read(other, 0, BLOCK_BYTES);
+    yield block.subarray(0, bytesRead);
+    [block, other] = [other, block];
+  }
 }
