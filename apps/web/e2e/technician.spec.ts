@@ -1,7 +1,7 @@
 import type { Browser, BrowserContext, Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { expectAccessible, keepPicture, launchBrowser, signedInPage } from './support/browser.js';
-import { jumpAtS, jumpingSineCsv, limitedToneWav, squareWaveCsv } from './support/job.js';
+import { jumpAtS, jumpingSineCsv, limitedToneWav, probedSineCsv, squareWaveCsv } from './support/job.js';
 import { personOf, startProduct, type Product } from './support/product.js';
 
 let product: Product;
@@ -173,6 +173,43 @@ describe('a technician', () => {
       .getByText(/Not read:/)
       .filter({ visible: true })
       .waitFor({ timeout: 60_000 });
+  });
+
+  it('sees a wrong probe ratio before reading, corrects it, and keeps the cure for the files that follow', async () => {
+    await openProject(page, /Ostrel/);
+    await page.getByLabel('Check before reading').check();
+    await page.getByLabel('Capture files').setInputFiles(probedSineCsv('probe-01.csv'));
+    const dialog = page.getByRole('dialog');
+    // 230 V behind 100:1; the clock in ms beside the time is no channel.
+    await dialog.getByText('2.300 V', { exact: true }).waitFor();
+    await dialog.getByText('50.00 Hz', { exact: true }).waitFor();
+    expect(await dialog.getByLabel('Read column ms').isChecked()).toBe(false);
+    await dialog.getByLabel('Probe ratio of column U').fill('100 : 1');
+    await dialog.getByText('230.0 V', { exact: true }).waitFor();
+    await dialog.getByRole('button', { name: /Keep these settings as a reading rule/ }).click();
+    await dialog.getByLabel('Name of the rule').fill('Probe at 100 : 1');
+    await expectAccessible(page);
+    await keepPicture(page, 'import');
+    await dialog.getByRole('button', { name: 'Keep the rule' }).click();
+    await dialog.getByText(/Read by the rule/).waitFor();
+    await dialog.getByRole('button', { name: 'Read with these settings' }).click();
+    await page.getByRole('link', { name: 'probe-01', exact: true }).waitFor();
+
+    await page.getByLabel('Check before reading').uncheck();
+    await page.getByLabel('Capture files').setInputFiles(probedSineCsv('probe-02.csv'));
+    await page.getByRole('link', { name: 'probe-02', exact: true }).click();
+    const read = page.getByRole('region', { name: 'Reading', exact: true });
+    await read.getByText('Probe at 100 : 1').waitFor();
+    await read.getByText(/probe 100 : 1/).waitFor();
+    const rms = page.getByRole('row').filter({ hasText: /^rms/ });
+    await rms.getByText('230.0 V').first().waitFor({ timeout: 60_000 });
+    await expectAccessible(page);
+
+    await page.getByRole('link', { name: 'Settings' }).click();
+    const rule = page.getByRole('row').filter({ hasText: 'probe-*.csv' });
+    await rule.getByRole('cell', { name: '2', exact: true }).waitFor();
+    await expectAccessible(page);
+    await keepPicture(page, 'reading-rules');
   });
 
   it('finds no way to judge or to issue, and the server agrees', async () => {

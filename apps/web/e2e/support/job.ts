@@ -54,3 +54,16 @@ export function jumpingSineCsv(): { path: string; name: string } {
   writeFileSync(path, ['Time [s],U [V]', ...rows, ''].join('\n'));
   return { path, name: 'jumping-sine' };
 }
+
+/** A sine of 50 Hz as it comes behind a probe of 100:1 whose ratio was set nowhere: 230 V stand there as 2.3 V. */
+export function probedSineCsv(fileName: string): { name: string; mimeType: string; buffer: Buffer } {
+  const rows = Array.from({ length: 10_000 }, (_, i) => {
+    const timeS = i / 10_000;
+    return `${timeS.toFixed(4)};${(1000 * timeS).toFixed(1)};${(2.3 * Math.SQRT2 * Math.sin(2 * Math.PI * 50 * timeS)).toFixed(6)}`;
+  });
+  return {
+    name: fileName,
+    mimeType: 'text/csv',
+    buffer: Buffer.from(['Time [s];ms;U [V]', ...rows, ''].join('\n')),
+  };
+}

@@ -19,7 +19,7 @@ export function ReadRows({ preview }: { preview: ImportPreview }) {
                 <Table.ColumnHeader key={column.index} scope="col" textAlign="end">
                   {column.name}
                   {column.unit ? ` (${column.unit})` : ''}
-                  {column.index === preview.timeColumn ? ' · time' : ''}
+                  {preview.clockColumns.includes(column.index) ? ' · time' : ''}
                 </Table.ColumnHeader>
               ))}
             </Table.Row>

@@ -63,12 +63,14 @@ export function useReading(projectId: string, source: PreviewSource | undefined,
     readBy: (chosen: ReadingRule | null) =>
       setEdited({
         draft: draftOf(chosen?.options ?? {}),
-        rule: chosen && { id: chosen.id, name: chosen.name },
+        rule: refOf(chosen),
       }),
     /** Says where the settings, which stay, belong to. */
-    belongTo: (chosen: RuleRef | null) => setEdited({ ...current, rule: chosen }),
+    belongTo: (chosen: RuleRef | null) => setEdited({ ...current, rule: refOf(chosen) }),
   };
 }
+
+const refOf = (rule: RuleRef | null): RuleRef | null => rule && { id: rule.id, name: rule.name };
 
 export type UsedReading = ReturnType<typeof useReading>;
 
