@@ -32,7 +32,7 @@ export function FormField({ label, help, error, optional = false, children }: Fo
 
 type SelectProps = ComponentProps<typeof NativeSelect.Field> & {
   options: readonly { value: string; label: string }[];
-  width?: string;
+  width?: ComponentProps<typeof NativeSelect.Root>['width'];
   disabled?: boolean;
 };
 

@@ -18,7 +18,10 @@ export function previewImport(
   const body = new FormData();
   body.set('fileName', file.name);
   body.set('sizeBytes', String(sizeBytes));
-  if (options) body.set('import', JSON.stringify(options));
+  if (options) {
+    body.set('import', JSON.stringify(options));
+    body.set('readingRuleId', 'null');
+  }
   body.set('head', file.slice(0, headBytes), file.name);
   return requestJson(importPreviewSchema, `/projects/${projectId}/import-preview`, {
     method: 'POST',

@@ -1,4 +1,4 @@
-import type { ImportOptions, Recording, Settings, UpdateRecording } from '@overtally/contracts';
+import type { ReadAgain, Recording, Settings, UpdateRecording } from '@overtally/contracts';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { cancelAnalysis } from '../api/cancel-analysis.js';
 import { cancelReading } from '../api/cancel-reading.js';
@@ -23,7 +23,7 @@ export function useRecordingChanges({ id, projectId }: Pick<Recording, 'id' | 'p
     },
   });
   const read = useMutation({
-    mutationFn: (options: ImportOptions) => readAgain(id, options),
+    mutationFn: (reading: ReadAgain) => readAgain(id, reading),
     onSuccess: async (recording) => {
       queryClient.setQueryData(recordingQuery(id).queryKey, recording);
       await refresh();

@@ -65,7 +65,7 @@ export function ColumnFields({ draft, faults, preview, signals, onChange }: Colu
           Read at least one column.
         </Text>
       ) : null}
-      <Box role="region" aria-labelledby={id} tabIndex={0} overflow="auto" maxH="340px" mx="-3">
+      <Box role="region" aria-labelledby={id} tabIndex={0} overflow="auto" maxH={{ md: '340px' }} mx="-1.5">
         <Table.Root size="sm" css={stackedWhereNarrow}>
           <Table.Header>
             <Table.Row>
@@ -137,6 +137,6 @@ const stackedWhereNarrow = {
       color: 'inkSoft',
     },
     '& tbody td[data-whole]': { gridColumn: '1 / -1' },
-    '& tbody td[data-whole]:empty': { display: 'none' },
+    '& tbody td[data-whole]:empty, & tbody tr[data-unread] td[data-caption]': { display: 'none' },
   },
 };

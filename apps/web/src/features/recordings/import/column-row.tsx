@@ -16,11 +16,14 @@ export function TimeRow({ column, span }: { column: Column; span: number }) {
       <Table.Cell px="1.5" data-whole>
         <Flex as="span" align="center" gap="2" color="inkSoft">
           <input type="checkbox" disabled aria-label={`Column ${column.name} tells the time`} />
-          <span>{column.index + 1}</span>
+          {column.index + 1}
+          <Box as="span" hideFrom="md">
+            {column.name}, tells the time
+          </Box>
         </Flex>
       </Table.Cell>
-      <Table.Cell px="1.5" color="inkSoft" colSpan={span} data-whole>
-        {column.name} · time
+      <Table.Cell px="1.5" color="inkSoft" colSpan={span} hideBelow="md">
+        {column.name}, tells the time
       </Table.Cell>
       <Table.Cell hideBelow="md" />
     </Table.Row>
@@ -60,7 +63,11 @@ export function ColumnRow(props: ColumnRowProps) {
     />
   );
   return (
-    <Table.Row verticalAlign="top" color={fields.keep ? undefined : 'inkSoft'}>
+    <Table.Row
+      verticalAlign="top"
+      color={fields.keep ? undefined : 'inkSoft'}
+      data-unread={fields.keep ? undefined : true}
+    >
       <Table.Cell px="1.5" data-whole>
         <Flex as="label" align="center" gap="2" minH="32px" whiteSpace="nowrap">
           <input
@@ -73,13 +80,16 @@ export function ColumnRow(props: ColumnRowProps) {
             {column.index + 1}
             {isClock ? ' · time' : ''}
           </Box>
+          <Box as="span" hideFrom="md">
+            {column.name}
+          </Box>
         </Flex>
       </Table.Cell>
       {field('name', 'Name', column.name, '120px')}
       <Table.Cell px="1.5" data-caption="Quantity">
         <SelectInput
           aria-label={`Quantity of column ${column.name}`}
-          width="136px"
+          width={{ base: 'full', md: '136px' }}
           disabled={!fields.keep}
           options={quantityOptions}
           value={fields.quantity || quantity}

@@ -1,7 +1,7 @@
 import { noteSchema, type Analysis, type Note, type Recording } from '@overtally/contracts';
 import { ChakraProvider } from '@chakra-ui/react';
 import { QueryClientProvider } from '@tanstack/react-query';
-import { render, screen, waitFor, within } from '@testing-library/react';
+import { cleanup, render, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { describe, expect, it, vi } from 'vitest';
 import { Toaster } from '../../../components/toaster.js';
@@ -130,6 +130,43 @@ describe('sheet of a recording', () => {
     expect(screen.getByText('40%')).toBeTruthy();
     await user.click(await screen.findByRole('button', { name: 'Cancel' }));
     await waitFor(() => expect(seen.map(({ method }) => method)).toContain('POST'));
+  });
+
+  it('calls a reading off, and offers to read again afterwards', async () => {
+    const reading = sampleRecording({
+      status: 'reading',
+      progress: 0.2,
+      channels: [],
+      latestAnalysisId: null,
+    });
+    const seen = mockApi({
+      [`GET /recordings/${recordingId}/analyses`]: page([]),
+      [`GET /recordings/${recordingId}`]: json(reading),
+      [`POST /recordings/${recordingId}/cancel-reading`]: json(reading, 202),
+    });
+    const user = show(reading);
+    await user.click(screen.getByRole('button', { name: `Cancel reading ${reading.number}` }));
+    await waitFor(() => expect(seen.map(({ method }) => method)).toContain('POST'));
+    cleanup();
+    const problem = { code: 'reading-cancelled', message: 'Called off', cure: 'Read it again.' };
+    show({ ...reading, status: 'failed', problem });
+    expect(screen.getByText('Reading was cancelled')).toBeTruthy();
+    expect(screen.getByRole('button', { name: 'Read again with other settings' })).toBeTruthy();
+  });
+
+  it('says by which rule and settings it was read, also once the rule is deleted', async () => {
+    mockApi(answers());
+    show(
+      sampleRecording({
+        readingRule: { id: null, name: 'Bench scope' },
+        import: { decimal: ',', channels: [{ column: 1, probeRatio: 100 }] },
+      }),
+    );
+    const read = within(await screen.findByRole('region', { name: 'Reading' }));
+    expect(read.getByText('Bench scope')).toBeTruthy();
+    expect(read.getByText('(deleted since)')).toBeTruthy();
+    expect(read.getByText('decimal comma')).toBeTruthy();
+    expect(read.getByText('column 2: probe 100 : 1')).toBeTruthy();
   });
 
   it('lets a guest read and change nothing', async () => {

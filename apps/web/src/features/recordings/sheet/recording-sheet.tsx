@@ -118,15 +118,18 @@ export function RecordingSheet(props: RecordingSheetProps) {
         source={{ kind: 'recording', recording }}
         pending={read.isPending}
         onClose={() => setReading(false)}
-        onRead={(options) =>
-          read.mutate(options, {
-            onSuccess: () => {
-              setReading(false);
-              place.onAnalysis(null);
-              notifyDone(`${recording.number} is read again`);
+        onRead={(options, readingRuleId) =>
+          read.mutate(
+            { ...options, readingRuleId },
+            {
+              onSuccess: () => {
+                setReading(false);
+                place.onAnalysis(null);
+                notifyDone(`${recording.number} is read again`);
+              },
+              onError: (error) => notifyProblem('It is not read again', error),
             },
-            onError: (error) => notifyProblem('It is not read again', error),
-          })
+          )
         }
       />
       <ReadingSection recording={recording} />
