@@ -15,8 +15,10 @@ export function Doubts({ preview, lineCount, onLine }: DoubtsProps) {
   if (!problem && doubts.length === 0) return null;
   const linked = (text: string) => <LinkedLines text={text} lineCount={lineCount} onLine={onLine} />;
   const place = [
-    problem?.line === undefined ? null : `line ${problem.line}`,
-    problem?.column === undefined ? null : `column ${problem.column}`,
+    problem?.line === undefined || names(problem.message, problem.line) ? null : `line ${problem.line}`,
+    problem?.column === undefined || problem.message.includes(`column ${problem.column}`)
+      ? null
+      : `column ${problem.column}`,
   ].filter(Boolean);
   return (
     <Stack gap="1" borderLeftWidth="3px" borderColor={problem ? 'over' : 'near'} pl="3" role="status">
@@ -33,10 +35,13 @@ export function Doubts({ preview, lineCount, onLine }: DoubtsProps) {
   );
 }
 
+/** True where a sentence tells the line itself. */
+const names = (text: string, line: number) => new RegExp(`\\bline ${line}\\b`, 'i').test(text);
+
 /** A sentence in which “line 7” can be followed where that line is among those shown. */
 function LinkedLines({ text, lineCount, onLine }: { text: string } & Omit<DoubtsProps, 'preview'>) {
-  return text.split(/(\bline \d+)/).map((part, index) => {
-    const line = Number(/^line (\d+)$/.exec(part)?.[1] ?? Number.NaN);
+  return text.split(/(\bline \d+)/i).map((part, index) => {
+    const line = Number(/^line (\d+)$/i.exec(part)?.[1] ?? Number.NaN);
     if (!(line >= 1 && line <= lineCount)) return part;
     return (
       <chakra.button
