@@ -8,6 +8,7 @@ import { readMetadata, statedSampleRateHz } from './metadata.js';
 import { findSecondClocks } from './second-clock.js';
 import { chooseTimeColumn, type TimeChoice } from './time-column.js';
 import { refuseNoTable } from './no-table.js';
+import { doubtDecimalCommas } from './thousands.js';
 
 const SAMPLED_ROWS = 100;
 
@@ -65,6 +66,17 @@ function findHeaderLines(rows: string[][], dialect: Dialect): HeaderLines {
   return { header: isHeaderRow(cells, dialect) ? last : null, units: null };
 }
 
+/** Between blanks a unit in brackets stands apart from its name; it belongs to the cell before. */
+function joinUnits(cells: string[], { delimiter, columnCount }: Dialect): string[] {
+  if (delimiter !== ' ' || cells.length <= columnCount) return cells;
+  const joined: string[] = [];
+  for (const cell of cells) {
+    if (/^[[({].*[\])}]$/.test(cell) && joined.length > 0) joined.push(`${joined.pop()} ${cell}`);
+    else joined.push(cell);
+  }
+  return joined.length === columnCount ? joined : cells;
+}
+
 function uncomment(cells: string[]): string[] {
   return cells.map((cell, i) => (i === 0 ? cell.replace(/^(#|%|\/\/)\s*/, '') : cell));
 }
@@ -77,7 +89,8 @@ export function detectLayout(lines: string[], fileName: string, options: ImportO
   const dialect = sniffDialect(lines, options) ?? refuseNoTable(lines, fileName, options);
   const rows = lines
     .slice(0, dialect.bodyLine + SAMPLED_ROWS)
-    .map((line) => splitCells(line, dialect.delimiter));
+    .map((line) => splitCells(line, dialect.delimiter))
+    .map((cells, i) => (i < dialect.bodyLine ? joinUnits(cells, dialect) : cells));
   const { header, units } = findHeaderLines(rows, dialect);
   const headerCells = header === null ? [] : uncomment(rows[header] as string[]);
   refuseCommaClash(dialect, headerCells);
@@ -89,6 +102,8 @@ export function detectLayout(lines: string[], fileName: string, options: ImportO
   );
   const columns = describeColumns(headerCells, units === null ? null : (rows[units] as string[]), count);
   const doubts: string[] = [];
+  const commas = doubtDecimalCommas(rows, dialect, options);
+  if (commas !== null) doubts.push(commas);
   if (dialect.ambiguous)
     doubts.push('The table can be read with more than one delimiter; check the columns.');
   const input = { columns, headerCells, body, dialect, options, doubts };
