@@ -20,6 +20,7 @@ import { NotesModule } from './notes/notes.module.js';
 import { ProjectsModule } from './projects/projects.module.js';
 import { ReadingRulesModule } from './reading-rules/reading-rules.module.js';
 import { RecordingsModule } from './recordings/recordings.module.js';
+import { UploadingModule } from './recordings/uploading/uploading.module.js';
 import { ReportsModule } from './reports/reports.module.js';
 import { StorageModule } from './storage/storage.module.js';
 import { UsersModule } from './users/users.module.js';
@@ -43,6 +44,7 @@ export class AppModule {
         JobsModule,
         ReadingRulesModule,
         RecordingsModule,
+        UploadingModule,
         AnalysesModule,
         NotesModule,
         LimitsModule,

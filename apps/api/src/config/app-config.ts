@@ -17,6 +17,10 @@ export class AppConfig {
   /** Proxies that are believed who the caller is: a number of hops, or addresses; false: none. */
   readonly trustProxy: number | string[] | false;
   readonly maxUploadBytes: number;
+  /** Bytes of sources that one project may hold; null: no bound. */
+  readonly projectQuotaBytes: number | null;
+  /** Absolute path of the folder that keeps uploads until they are recordings. */
+  readonly spoolFolder: string;
   readonly worker: 'embedded' | 'off';
   readonly demo: boolean;
   readonly logLevel: Environment['LOG_LEVEL'];
@@ -38,7 +42,9 @@ export class AppConfig {
     this.publicUrl = (env.PUBLIC_URL ?? ownAddress(env.HOST, env.PORT)).replace(/\/+$/, '');
     // Behind TLS there is a proxy; one elsewhere than on this machine must be named, as anybody could be one.
     this.trustProxy = env.TRUST_PROXY ?? (this.isHttps ? ['loopback'] : false);
-    this.maxUploadBytes = Math.floor(env.MAX_UPLOAD_MB * 1024 * 1024);
+    this.maxUploadBytes = bytesOf(env.MAX_UPLOAD_MB);
+    this.projectQuotaBytes = env.PROJECT_QUOTA_MB === undefined ? null : bytesOf(env.PROJECT_QUOTA_MB);
+    this.spoolFolder = join(this.dataDir, 'uploads');
     this.worker = env.WORKER;
     this.demo = env.DEMO === 'on';
     this.logLevel = env.LOG_LEVEL;
@@ -54,6 +60,10 @@ export class AppConfig {
   get isHttps(): boolean {
     return this.publicUrl.startsWith('https:');
   }
+}
+
+function bytesOf(mebibytes: number): number {
+  return Math.floor(mebibytes * 1024 * 1024);
 }
 
 /** The address of the server itself; an IPv6 host stands in brackets (RFC 3986, 3.2.2). */

@@ -56,7 +56,8 @@ export const environmentSchema = z
     ),
     PUBLIC_URL: optional(z.url({ protocol: /^https?$/, error: 'give an http:// or https:// address' })),
     TRUST_PROXY: optional(trustProxySchema),
-    MAX_UPLOAD_MB: z.preprocess(absent, z.coerce.number().positive().default(2048)),
+    MAX_UPLOAD_MB: z.preprocess(absent, z.coerce.number().positive().default(8192)),
+    PROJECT_QUOTA_MB: optional(z.coerce.number().positive()),
     WORKER: z.preprocess(absent, z.enum(['embedded', 'off']).default('embedded')),
     DEMO: z.preprocess(absent, z.enum(['on', 'off']).default('off')),
     LOG_LEVEL: z.preprocess(

@@ -8,12 +8,12 @@ import { RecordingViewsRepository } from './recording-views.repository.js';
 import { RecordingsController } from './recordings.controller.js';
 import { RecordingsRepository } from './recordings.repository.js';
 import { RecordingsService } from './recordings.service.js';
-import { UploadsController } from './uploads.controller.js';
+import { UploadLimitsService } from './uploading/upload-limits.service.js';
 import { WaveformService } from './waveform.service.js';
 
 @Module({
   imports: [ReadingRulesModule],
-  controllers: [RecordingsController, UploadsController, RecordingDataController],
+  controllers: [RecordingsController, RecordingDataController],
   providers: [
     RecordingsService,
     PreviewsService,
@@ -21,8 +21,9 @@ import { WaveformService } from './waveform.service.js';
     RecordingViewsRepository,
     AnalysisRunsService,
     WaveformService,
+    UploadLimitsService,
     ReadRecordingHandler,
   ],
-  exports: [RecordingsService, AnalysisRunsService, ReadRecordingHandler],
+  exports: [RecordingsService, UploadLimitsService, AnalysisRunsService, ReadRecordingHandler],
 })
 export class RecordingsModule {}

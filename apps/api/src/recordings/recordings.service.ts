@@ -22,6 +22,7 @@ import type { UploadFields } from './dto/upload.dto.js';
 import { columnBytes, PreviewsService } from './previewing/previews.service.js';
 import { recordingPrefix, sourceKey } from './recording-keys.js';
 import { RecordingViewsRepository } from './recording-views.repository.js';
+import { UploadLimitsService } from './uploading/upload-limits.service.js';
 import { RecordingsRepository, type RecordingRow } from './recordings.repository.js';
 
 const maxNameLength = 160;
@@ -34,6 +35,8 @@ const readingCancelled: ReadProblem = {
 };
 
 export interface Upload {
+  /** What the recording is to be known by; where it is there already, it stays the only one. */
+  id?: string;
   projectId: string;
   uploadedById: string;
   fileName: string;
@@ -53,12 +56,18 @@ export class RecordingsService {
     private readonly storage: Storage,
     private readonly rules: ReadingRulesService,
     private readonly previews: PreviewsService,
+    private readonly limits: UploadLimitsService,
   ) {}
 
   async get(id: string): Promise<Recording> {
-    const recording = await this.views.one(id);
+    const recording = await this.find(id);
     if (recording === undefined) throw noSuchRecording();
     return recording;
+  }
+
+  /** Undefined once it is deleted. */
+  find(id: string): Promise<Recording | undefined> {
+    return this.views.one(id);
   }
 
   page(projectId: string, query: RecordingQuery) {
@@ -73,11 +82,16 @@ export class RecordingsService {
     const rules = await this.rules.candidates(projectId, fields);
     const id = await this.database.transaction(async (tx) => {
       await this.repository.lockSource(tx, key);
+      if (upload.id !== undefined && (await this.repository.lock(tx, upload.id)) !== undefined)
+        return upload.id;
+      if (!(await this.repository.isSourceUsed(tx, key)))
+        await this.limits.admitSource(tx, projectId, staged.size);
       // The row must not be seen before its file is there; bytes known already are stored once.
       if (!(await this.storage.exists(key))) await staged.commit(key);
       const file = { fileName, fileSize: staged.size, sourceKey: key };
       const reading = await chooseOptions(fields, rules, fileName, this.columnsOf(file));
       const recordingId = await this.repository.insert(tx, {
+        id: upload.id,
         projectId,
         uploadedById,
         ...bench,

@@ -3,6 +3,7 @@ import { createReadStream, type Dirent } from 'node:fs';
 import { mkdir, open, readdir, rename, rm, stat } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import type { Readable } from 'node:stream';
+import { hashFile } from './hash-file.js';
 import { makePrivateFolder } from './private-folder.js';
 import { readWhole } from './read-whole.js';
 import { modifiedAt, removeStale } from './stale-files.js';
@@ -49,6 +50,14 @@ export class DiskStorage extends Storage {
       await rm(partPath, { force: true });
       throw error;
     }
+  }
+
+  async stageFile(localPath: string): Promise<StagedObject> {
+    return {
+      ...(await hashFile(localPath)),
+      commit: (key) => this.putFile(key, localPath),
+      discard: () => Promise.resolve(),
+    };
   }
 
   async put(key: string, source: ByteInput): Promise<{ size: number; sha256: string }> {

@@ -92,6 +92,15 @@ export class S3Storage extends Storage {
     return { ...received, commit, discard };
   }
 
+  async stageFile(localPath: string): Promise<StagedObject> {
+    const staged = await this.stage(createReadStream(localPath, { highWaterMark: 2 ** 20 }));
+    const commit = async (key: string) => {
+      await staged.commit(key);
+      await rm(localPath, { force: true });
+    };
+    return { ...staged, commit };
+  }
+
   async put(key: string, source: ByteInput): Promise<{ size: number; sha256: string }> {
     return this.upload(checkedKey(key), source);
   }

@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { access, mkdtemp, readdir, rm, writeFile } from 'node:fs/promises';
+import { access, mkdtemp, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Readable } from 'node:stream';
@@ -155,6 +155,24 @@ describe.each(Object.entries(stores))('storage on %s', (_kind, open) => {
     await storage.putFile('taken/file.bin', local);
     expect(await buffer(await storage.read('taken/file.bin'))).toEqual(bytes);
     await expect(access(local)).rejects.toThrow('ENOENT');
+    await rm(folder, { recursive: true });
+  });
+
+  it('stages a local file without touching it, then takes it over', async () => {
+    const folder = await mkdtemp(join(tmpdir(), 'local-'));
+    const local = join(folder, 'file');
+    await writeFile(local, long);
+    const dropped = await storage.stageFile(local);
+    expect(dropped).toMatchObject({ size: long.length, sha256: sha256(long) });
+    await dropped.discard();
+    expect(sha256(await readFile(local))).toBe(sha256(long));
+    const kept = await storage.stageFile(local);
+    expect(await storage.exists('taken/long.bin')).toBe(false);
+    await kept.commit('taken/long.bin');
+    await kept.discard();
+    expect(sha256(await storage.readBytes('taken/long.bin'))).toBe(sha256(long));
+    expect(await readdir(folder)).toEqual([]);
+    await expect(storage.stageFile(local)).rejects.toThrow('ENOENT');
     await rm(folder, { recursive: true });
   });
 

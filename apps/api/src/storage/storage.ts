@@ -46,6 +46,11 @@ export abstract class Storage {
   abstract prepare(now?: number): Promise<void>;
   /** Receives bytes without a name yet; what was received of a source that fails is dropped. */
   abstract stage(source: ByteInput): Promise<StagedObject>;
+  /**
+   * Stages a local file, which is read once. `commit` takes the file over: it is gone afterwards, and no second copy of
+   * it was made on a disk. Until then it stays as it is, `discard` leaves it alone.
+   */
+  abstract stageFile(localPath: string): Promise<StagedObject>;
   abstract put(key: string, source: ByteInput): Promise<{ size: number; sha256: string }>;
   /** Takes over a local file as the object; the file is gone afterwards. */
   abstract putFile(key: string, localPath: string): Promise<void>;

@@ -1,4 +1,12 @@
-import { importOptionsSchema, readingRuleIdSchema, updateRecordingSchema } from '@overtally/contracts';
+import {
+  finishUploadSchema,
+  importOptionsSchema,
+  readingRuleIdSchema,
+  unfinishedUploadListSchema,
+  updateRecordingSchema,
+  uploadLimitsSchema,
+  uploadOutcomeSchema,
+} from '@overtally/contracts';
 import { createZodDto } from 'nestjs-zod';
 import { z } from 'zod';
 import { jsonText } from './json-text.js';
@@ -29,6 +37,11 @@ const uploadSchema = z.object({
 /** The text fields that go with an uploaded file. */
 export class UploadDto extends createZodDto(uploadSchema) {}
 export type UploadFields = z.output<typeof uploadSchema>;
+
+export class FinishUploadDto extends createZodDto(finishUploadSchema) {}
+export class UploadOutcomeDto extends createZodDto(uploadOutcomeSchema) {}
+export class UploadLimitsDto extends createZodDto(uploadLimitsSchema) {}
+export class UnfinishedUploadListDto extends createZodDto(unfinishedUploadListSchema) {}
 
 const previewSchema = z.object({
   fileName: z.string().min(1).max(255),

@@ -1,0 +1,121 @@
+import { Injectable } from '@nestjs/common';
+import { previewRecording } from '@overtally/ingest';
+import { posix } from 'node:path';
+import type { ZipFile } from 'yauzl';
+import { problem, ProblemException } from '../../../common/problem.js';
+import { AppConfig } from '../../../config/app-config.js';
+import { Storage } from '../../../storage/storage.js';
+import type { UploadFields } from '../../dto/upload.dto.js';
+import { RecordingsService } from '../../recordings.service.js';
+import { memberRecordingId } from '../member-recording-id.js';
+import type { SpoolOutcome } from '../spool-records.js';
+import { UploadLimitsService } from '../upload-limits.service.js';
+import { UploadSpool, type UploadOwner } from '../upload-spool.js';
+import { openArchive, readMembers, shownPath, type Member } from './archive-members.js';
+import { demandModest, inflated, UnpackBudget } from './inflate-member.js';
+import { MemberRefused } from './member-refused.js';
+import { peeked } from './peeked.js';
+
+/** As much as tells what a file is. */
+const headBytes = 128 * 1024;
+
+export interface Unpacking {
+  archive: {
+    /** Ids of the recordings follow from it. */
+    uploadId: string;
+    /** Where the archive lies on this server. */
+    path: string;
+  };
+  owner: UploadOwner;
+  /** What is said of every recording; a name is that of its file. */
+  fields: UploadFields;
+  signal: AbortSignal;
+}
+
+/** Captures in ZIP archives. */
+@Injectable()
+export class ArchivesService {
+  constructor(
+    private readonly recordings: RecordingsService,
+    private readonly limits: UploadLimitsService,
+    private readonly spool: UploadSpool,
+    private readonly storage: Storage,
+    private readonly config: AppConfig,
+  ) {}
+
+  /**
+   * Makes a recording of each capture in an archive, one after the other. What may not come in is told with its reason and
+   * does not keep the others out; what came in stays when the work is broken off, and is not made again.
+   * @throws ProblemException 422 for an archive that cannot be read or holds nothing, 507 where it does not fit
+   */
+  async unpack(unpacking: Unpacking): Promise<SpoolOutcome> {
+    const zip = await openArchive(unpacking.archive.path);
+    try {
+      const { members, leftOut } = await readMembers(zip);
+      const budget = new UnpackBudget(this.config.maxUploadBytes);
+      if (members.length === 0 && leftOut.length === 0)
+        throw problem(422, 'archive-empty', 'The archive holds no file');
+      if (this.config.storage.kind === 'disk') await this.spool.demandRoom(unpackedBytes(members, budget));
+      const recordingIds: string[] = [];
+      for (const member of members) {
+        unpacking.signal.throwIfAborted();
+        try {
+          recordingIds.push(await this.bringIn(zip, member, unpacking, budget));
+        } catch (error) {
+          leftOut.push({ path: shownPath(member.path), reason: reasonOf(error) });
+        }
+      }
+      return { recordingIds, leftOut };
+    } finally {
+      zip.close();
+    }
+  }
+
+  private async bringIn(
+    zip: ZipFile,
+    member: Member,
+    { archive, owner, fields, signal }: Unpacking,
+    budget: UnpackBudget,
+  ): Promise<string> {
+    const id = memberRecordingId(archive.uploadId, member.path);
+    if ((await this.recordings.find(id)) !== undefined) return id;
+    demandModest(member, budget);
+    await this.limits.admit(owner.projectId, member.entry.uncompressedSize);
+    const fileName = posix.basename(member.path);
+    const { head, whole } = await peeked(inflated(zip, member, budget, signal), headBytes);
+    const staged = await this.storage.stage(capture(head, whole, member));
+    try {
+      const { name: _, ...bench } = fields;
+      const source = { fileName, staged, fields: bench };
+      await this.recordings.upload({ id, projectId: owner.projectId, uploadedById: owner.userId, ...source });
+      return id;
+    } finally {
+      await staged.discard();
+    }
+  }
+}
+
+/** The bytes of a capture. @throws MemberRefused when their beginning is that of something else, such as an archive */
+async function* capture(head: Uint8Array, whole: AsyncGenerator<Uint8Array>, { path, entry }: Member) {
+  try {
+    const args = { fileName: posix.basename(path), sizeBytes: entry.uncompressedSize };
+    const { problem: found } = previewRecording(head, args);
+    if (found?.code === 'not-a-capture' || found?.code === 'empty-file')
+      throw new MemberRefused(`${found.message} ${found.cure}`);
+    yield* whole;
+  } finally {
+    await whole.return(undefined);
+  }
+}
+
+function unpackedBytes(members: readonly Member[], { limit }: UnpackBudget): number {
+  const told = members.reduce((sum, { entry }) => sum + entry.uncompressedSize, 0);
+  return Math.min(told, limit);
+}
+
+/** Why a file of an archive stays out. @throws what is no fault of the file */
+function reasonOf(error: unknown): string {
+  if (error instanceof MemberRefused) return error.message;
+  if (error instanceof ProblemException && error.getStatus() === 413) return error.detail;
+  throw error;
+}
