@@ -33,9 +33,11 @@ function expected({ access }: Route, who: Role | null): Expected {
 }
 
 /** What the server did; a body is not sent, so an allowed request may still be refused for its form. */
-function outcome({ access }: Route, reply: { status: number; body: { detail?: string } }): Expected {
+function outcome({ access, method }: Route, reply: { status: number; body: { detail?: string } }): Expected {
   if (reply.status === 401 || reply.status === 403) return reply.status;
-  const isGuard = reply.body.detail === `There is no such ${access?.resource?.replace('-', ' ')}`;
+  // A reply to HEAD has no body; the routes that answer it refuse requests without a version of their protocol first.
+  const isGuard =
+    method === 'HEAD' || reply.body.detail === `There is no such ${access?.resource?.replace('-', ' ')}`;
   return reply.status === 404 && isGuard ? 404 : 'allowed';
 }
 
@@ -45,7 +47,8 @@ async function ask(route: Route, who: Role | null, examples: Examples): Promise<
   const values = { ...(await makeOtherParameters(test)), ...(resource && { [param]: examples[resource] }) };
   const path = route.path.replace(/:(\w+)/g, (_, name: string) => values[name] ?? `no-example-of-${name}`);
   const agent = who === null ? supertest(test.http) : await test.signIn(who);
-  const method = route.method.toLowerCase() as 'get' | 'post' | 'patch' | 'put' | 'delete';
+  const method = route.method.toLowerCase() as
+    'get' | 'post' | 'patch' | 'put' | 'delete' | 'head' | 'options';
   return outcome(route, await agent[method](path));
 }
 

@@ -65,9 +65,15 @@ export class RecordingsService {
     return recording;
   }
 
-  /** Undefined once it is deleted. */
+  /** Undefined where there is none, or no more. */
   find(id: string): Promise<Recording | undefined> {
     return this.views.one(id);
+  }
+
+  /** Those of the recordings that are still there. */
+  async present(ids: readonly string[]): Promise<Recording[]> {
+    const found = await Promise.all(ids.map((id) => this.find(id)));
+    return found.filter((recording) => recording !== undefined);
   }
 
   page(projectId: string, query: RecordingQuery) {

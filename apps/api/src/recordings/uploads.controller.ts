@@ -1,6 +1,7 @@
-import { Body, Controller, Param, Post, UploadedFile, UseInterceptors } from '@nestjs/common';
+import { Body, Controller, Param, Post, Res, UploadedFile, UseInterceptors } from '@nestjs/common';
 import { FileInterceptor } from '@nestjs/platform-express';
 import { ApiBody, ApiConsumes, ApiOperation, ApiTags } from '@nestjs/swagger';
+import type { Response } from 'express';
 import multer from 'multer';
 import { ZodResponse } from 'nestjs-zod';
 import { RequirePermission } from '../access/require-permission.decorator.js';
@@ -8,10 +9,21 @@ import { ApiProblem } from '../common/api-problem.decorator.js';
 import { CurrentUser, type SignedInUser } from '../common/current-user.decorator.js';
 import { problem } from '../common/problem.js';
 import { ImportPreviewDto, RecordingDto } from './dto/recording.dto.js';
-import { PreviewDto, previewBody, uploadBody, UploadDto } from './dto/upload.dto.js';
+import {
+  archiveBody,
+  ArchiveDto,
+  PreviewDto,
+  previewBody,
+  uploadBody,
+  UploadDto,
+  UploadOutcomeDto,
+} from './dto/upload.dto.js';
 import { PreviewsService } from './previewing/previews.service.js';
 import { RecordingsService } from './recordings.service.js';
+import { ArchiveInterceptor } from './uploading/archives/archive.interceptor.js';
+import { ArchivesService } from './uploading/archives/archives.service.js';
 import { formLimits } from './uploading/form-limits.js';
+import { goneSignal } from './uploading/gone-signal.js';
 import type { StagedFile } from './uploading/staging-engine.js';
 import { UploadInterceptor } from './uploading/upload.interceptor.js';
 
@@ -23,6 +35,7 @@ export class UploadsController {
   constructor(
     private readonly recordings: RecordingsService,
     private readonly previews: PreviewsService,
+    private readonly archives: ArchivesService,
   ) {}
 
   @Post('recordings')
@@ -32,8 +45,9 @@ export class UploadsController {
   @ApiConsumes('multipart/form-data')
   @ApiBody({ schema: uploadBody })
   @ZodResponse({ status: 202, type: RecordingDto })
-  @ApiProblem(400, 'No file, or import options that are not valid')
-  @ApiProblem(413, 'The file is larger than the limit')
+  @ApiProblem(400, 'No file, a ZIP archive, or import options that are not valid')
+  @ApiProblem(413, 'The file is larger than the limit, or than what the project may still take')
+  @ApiProblem(507, 'The disk of the server has no room')
   upload(
     @Param('id') projectId: string,
     @CurrentUser() user: SignedInUser,
@@ -43,6 +57,29 @@ export class UploadsController {
     if (file === undefined) throw missing('file', 'Send the capture as a part named file');
     const { originalname: fileName, staged } = file;
     return this.recordings.upload({ projectId, uploadedById: user.id, fileName, staged, fields });
+  }
+
+  @Post('archives')
+  @UseInterceptors(ArchiveInterceptor)
+  @RequirePermission('recording.upload', { resource: 'project' })
+  @ApiOperation({ summary: 'Upload a ZIP archive; each capture in it becomes a recording' })
+  @ApiConsumes('multipart/form-data')
+  @ApiBody({ schema: archiveBody })
+  @ZodResponse({ status: 202, type: UploadOutcomeDto })
+  @ApiProblem(400, 'No file, no ZIP archive, or import options that are not valid')
+  @ApiProblem(413, 'The archive is larger than the limit, or than what the project may still take')
+  @ApiProblem(422, 'The archive cannot be read or holds nothing')
+  @ApiProblem(507, 'The disk of the server has no room')
+  unpack(
+    @Param('id') projectId: string,
+    @CurrentUser() { id: userId }: SignedInUser,
+    @UploadedFile() file: Express.Multer.File | undefined,
+    @Body() fields: ArchiveDto,
+    @Res({ passthrough: true }) reply: Response,
+  ) {
+    if (file === undefined) throw missing('file', 'Send the archive as a part named file');
+    const signal = goneSignal(reply);
+    return this.archives.unpackForm(file.path, { owner: { projectId, userId }, fields, signal });
   }
 
   @Post('import-preview')

@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import type { ResourceKind } from '../../dist/access/require-permission.decorator.js';
 import { newPerson } from './factories.js';
 import {
@@ -38,5 +39,5 @@ export async function makeExamples({ database, project }: TestApp, userId: strin
 /** Values of path parameters that do not name what the permission is held on, by parameter name. */
 export async function makeOtherParameters({ database }: TestApp): Promise<Record<string, string>> {
   const someone = await newPerson(database);
-  return { id: someone.id, userId: someone.id };
+  return { id: someone.id, userId: someone.id, uploadId: randomUUID() };
 }

@@ -38,6 +38,9 @@ const uploadSchema = z.object({
 export class UploadDto extends createZodDto(uploadSchema) {}
 export type UploadFields = z.output<typeof uploadSchema>;
 
+/** The text fields that go with an archive; they are said of every capture in it. */
+export class ArchiveDto extends createZodDto(uploadSchema.omit({ name: true })) {}
+
 export class FinishUploadDto extends createZodDto(finishUploadSchema) {}
 export class UploadOutcomeDto extends createZodDto(uploadOutcomeSchema) {}
 export class UploadLimitsDto extends createZodDto(uploadLimitsSchema) {}
@@ -81,6 +84,17 @@ export const uploadBody = {
     remark: text,
     import: { ...text, description: 'Import options as JSON; what is absent is detected' },
     readingRuleId: readingRuleText,
+  },
+};
+
+const { name: _, ...archiveFields } = uploadBody.properties;
+
+export const archiveBody = {
+  type: 'object',
+  required: ['file'],
+  properties: {
+    ...archiveFields,
+    file: { type: 'string', format: 'binary', description: 'A ZIP archive of captures' },
   },
 };
 

@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import type { FinishUpload, Recording, UploadOutcome } from '@overtally/contracts';
+import type { FinishUpload, UploadOutcome } from '@overtally/contracts';
 import { problem } from '../../common/problem.js';
 import { hashFile } from '../../storage/hash-file.js';
 import { Storage, StorageObjectMissing, type StagedObject } from '../../storage/storage.js';
@@ -10,7 +10,6 @@ import { fileIsZip } from './is-zip.js';
 import { memberRecordingId } from './member-recording-id.js';
 import { noSuchUpload } from './resumable-uploads.service.js';
 import type { SpoolOutcome, SpoolRecord } from './spool-records.js';
-import { UploadLimitsService } from './upload-limits.service.js';
 import { fileNameOf, UploadSpool, type UploadOwner } from './upload-spool.js';
 
 export interface Finish {
@@ -26,7 +25,6 @@ export interface Finish {
 export class FinishUploadService {
   constructor(
     private readonly spool: UploadSpool,
-    private readonly limits: UploadLimitsService,
     private readonly recordings: RecordingsService,
     private readonly archives: ArchivesService,
     private readonly storage: Storage,
@@ -45,7 +43,7 @@ export class FinishUploadService {
       const record = await this.spool.find(uploadId, owner);
       if (record === undefined) throw noSuchUpload();
       const outcome = record.outcome ?? (await this.settle(request, record));
-      return { items: await this.present(outcome.recordingIds), leftOut: outcome.leftOut };
+      return { items: await this.recordings.present(outcome.recordingIds), leftOut: outcome.leftOut };
     });
   }
 
@@ -55,7 +53,6 @@ export class FinishUploadService {
     const received = await this.spool.receivedBytes(uploadId);
     if (received === undefined && record.sha256 === undefined) throw noSuchUpload();
     if (received !== undefined && received !== expected) throw incomplete(received, expected);
-    await this.limits.admit(request.owner.projectId, expected);
     const isArchive = received !== undefined && (await fileIsZip(this.spool.path(uploadId)));
     const outcome = isArchive ? await this.unpack(request, record) : await this.keep(request, record);
     await this.spool.settle(uploadId, (await this.spool.records.find(uploadId)) ?? record, outcome);
@@ -117,12 +114,6 @@ export class FinishUploadService {
       `The file has changed on its way: what arrived has the SHA-256 ${found}, the sender's has ${wanted}. What arrived was dropped; send the file again`,
       [{ path: 'sha256', message: `What arrived has ${found}` }],
     );
-  }
-
-  /** Those of the recordings that have not been deleted since. */
-  private async present(ids: readonly string[]): Promise<Recording[]> {
-    const found = await Promise.all(ids.map((id) => this.recordings.find(id)));
-    return found.filter((recording) => recording !== undefined);
   }
 }
 

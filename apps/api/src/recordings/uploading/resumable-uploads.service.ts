@@ -103,7 +103,7 @@ function passedOn(request: AppRequest): Request {
     method,
     headers,
     ...(hasBody && { body: Readable.toWeb(request, { strategy }), duplex: 'half' }),
-  } as RequestInit);
+  });
 }
 
 function refusal(

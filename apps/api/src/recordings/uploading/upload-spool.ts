@@ -34,7 +34,8 @@ export interface UploadOwner {
 export class UploadSpool implements OnModuleInit, OnModuleDestroy {
   readonly records: SpoolRecords;
   readonly locks = new UploadLocks();
-  private readonly folder: string;
+  /** Absolute path. */
+  readonly folder: string;
   private readonly logger = new Logger('Uploads');
   private sweeping?: NodeJS.Timeout;
 
@@ -77,9 +78,9 @@ export class UploadSpool implements OnModuleInit, OnModuleDestroy {
     return join(this.folder, id);
   }
 
-  /** Where bytes may be put that belong to no upload; they go when they are old. */
-  strayPath(): string {
-    return this.path(randomUUID());
+  /** A name for bytes that belong to no upload; they go when they are old. */
+  strayName(): string {
+    return randomUUID();
   }
 
   /** Bytes that have arrived; undefined once they have left the spool. */

@@ -1,5 +1,7 @@
 import { Injectable } from '@nestjs/common';
 import { previewRecording } from '@overtally/ingest';
+import type { UploadOutcome } from '@overtally/contracts';
+import { randomUUID } from 'node:crypto';
 import { posix } from 'node:path';
 import type { ZipFile } from 'yauzl';
 import { problem, ProblemException } from '../../../common/problem.js';
@@ -7,6 +9,7 @@ import { AppConfig } from '../../../config/app-config.js';
 import { Storage } from '../../../storage/storage.js';
 import type { UploadFields } from '../../dto/upload.dto.js';
 import { RecordingsService } from '../../recordings.service.js';
+import { fileIsZip } from '../is-zip.js';
 import { memberRecordingId } from '../member-recording-id.js';
 import type { SpoolOutcome } from '../spool-records.js';
 import { UploadLimitsService } from '../upload-limits.service.js';
@@ -69,6 +72,21 @@ export class ArchivesService {
     } finally {
       zip.close();
     }
+  }
+
+  /**
+   * Makes recordings of an archive that came in a form.
+   * @throws ProblemException 400 `not-an-archive` for another file, else as `unpack`
+   */
+  async unpackForm(path: string, unpacking: Omit<Unpacking, 'archive'>): Promise<UploadOutcome> {
+    if (!(await fileIsZip(path))) {
+      const message =
+        'The file is no ZIP archive. Send a single capture to the route that ends in /recordings';
+      throw problem(400, 'not-an-archive', message, [{ path: 'file', message: 'This is no ZIP archive' }]);
+    }
+    const archive = { uploadId: randomUUID(), path };
+    const { recordingIds, leftOut } = await this.unpack({ ...unpacking, archive });
+    return { items: await this.recordings.present(recordingIds), leftOut };
   }
 
   private async bringIn(

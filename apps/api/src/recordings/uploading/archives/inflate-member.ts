@@ -52,14 +52,15 @@ export async function* inflated(
   try {
     const chunks = (stream as AsyncIterable<Buffer>)[Symbol.asyncIterator]();
     for (;;) {
-      const { value, done } = await asRefusal(chunks.next());
+      const next: IteratorResult<Buffer, unknown> = await asRefusal(chunks.next());
       signal.throwIfAborted();
-      if (done) break;
-      count += value.length;
-      checksum = crc32(value, checksum);
-      budget.spend(value.length);
+      if (next.done) break;
+      const chunk = next.value;
+      count += chunk.length;
+      checksum = crc32(chunk, checksum);
+      budget.spend(chunk.length);
       demandRatio(count, entry.compressedSize);
-      yield value;
+      yield chunk;
     }
   } finally {
     stream.destroy();

@@ -9,10 +9,10 @@ export async function peeked(
   const chunks: Uint8Array[] = [];
   let count = 0;
   while (count < headBytes) {
-    const { value, done } = await source.next();
-    if (done) break;
-    chunks.push(Buffer.from(value));
-    count += value.length;
+    const next: IteratorResult<Uint8Array, unknown> = await source.next();
+    if (next.done) break;
+    chunks.push(Buffer.from(next.value));
+    count += next.value.length;
   }
   async function* whole() {
     try {
