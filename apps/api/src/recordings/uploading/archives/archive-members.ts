@@ -72,7 +72,7 @@ export async function readMembers(zip: ZipFile): Promise<{ members: Member[]; le
         : undefined);
     seen.add(member.path);
     if (reason === undefined) members.push(member);
-    else leftOut.push({ path: shownPath(member.path), reason });
+    else leftOut.push({ path: member.path, reason });
   }
   return { members, leftOut };
 }

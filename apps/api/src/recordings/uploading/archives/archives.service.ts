@@ -2,7 +2,6 @@ import { Injectable } from '@nestjs/common';
 import { previewRecording } from '@overtally/ingest';
 import type { UploadOutcome } from '@overtally/contracts';
 import { randomUUID } from 'node:crypto';
-import { posix } from 'node:path';
 import type { ZipFile } from 'yauzl';
 import { problem, ProblemException } from '../../../common/problem.js';
 import { AppConfig } from '../../../config/app-config.js';
@@ -14,7 +13,8 @@ import { memberRecordingId } from '../member-recording-id.js';
 import type { SpoolOutcome } from '../spool-records.js';
 import { UploadLimitsService } from '../upload-limits.service.js';
 import { UploadSpool, type UploadOwner } from '../upload-spool.js';
-import { openArchive, readMembers, shownPath, type Member } from './archive-members.js';
+import { openArchive, readMembers, shownPath } from './archive-members.js';
+import { capturesOf, toldBytes, unpacked, type ArchivedCapture } from './archived-captures.js';
 import { demandModest, inflated, UnpackBudget } from './inflate-member.js';
 import { MemberRefused } from './member-refused.js';
 import { peeked } from './peeked.js';
@@ -54,21 +54,29 @@ export class ArchivesService {
   async unpack(unpacking: Unpacking): Promise<SpoolOutcome> {
     const zip = await openArchive(unpacking.archive.path);
     try {
-      const { members, leftOut } = await readMembers(zip);
-      const budget = new UnpackBudget(this.config.maxUploadBytes);
-      if (members.length === 0 && leftOut.length === 0)
+      const { members, leftOut: unfit } = await readMembers(zip);
+      const { captures, leftOut: unused } = capturesOf(members);
+      const leftOut = [...unfit, ...unused];
+      if (captures.length === 0 && leftOut.length === 0)
         throw problem(422, 'archive-empty', 'The archive holds no file');
-      if (this.config.storage.kind === 'disk') await this.spool.demandRoom(unpackedBytes(members, budget));
+      const budget = new UnpackBudget(this.config.maxUploadBytes);
+      const told = captures.reduce((sum, capture) => sum + toldBytes(capture), 0);
+      if (this.config.storage.kind === 'disk')
+        await this.spool.demandRoom(Math.min(told, this.config.maxUploadBytes));
       const recordingIds: string[] = [];
-      for (const member of members) {
+      for (const capture of captures) {
         unpacking.signal.throwIfAborted();
         try {
-          recordingIds.push(await this.bringIn(zip, member, unpacking, budget));
+          recordingIds.push(await this.bringIn(zip, capture, unpacking, budget));
         } catch (error) {
-          leftOut.push({ path: shownPath(member.path), reason: reasonOf(error) });
+          const reason = reasonOf(error);
+          leftOut.push(...capture.members.map(({ path }) => ({ path, reason })));
         }
       }
-      return { recordingIds, leftOut };
+      return {
+        recordingIds,
+        leftOut: leftOut.map(({ path, reason }) => ({ path: shownPath(path), reason })),
+      };
     } finally {
       zip.close();
     }
@@ -91,17 +99,16 @@ export class ArchivesService {
 
   private async bringIn(
     zip: ZipFile,
-    member: Member,
+    capture: ArchivedCapture,
     { archive, owner, fields, signal }: Unpacking,
     budget: UnpackBudget,
   ): Promise<string> {
-    const id = memberRecordingId(archive.uploadId, member.path);
+    const id = memberRecordingId(archive.uploadId, capture.path);
     if ((await this.recordings.find(id)) !== undefined) return id;
-    demandModest(member, budget);
-    await this.limits.admit(owner.projectId, member.entry.uncompressedSize);
-    const fileName = posix.basename(member.path);
-    const { head, whole } = await peeked(inflated(zip, member, budget, signal), headBytes);
-    const staged = await this.storage.stage(capture(head, whole, member));
+    for (const member of capture.members) demandModest(member, budget);
+    await this.limits.admit(owner.projectId, toldBytes(capture));
+    const { fileName, bytes } = await unpacked(zip, capture, budget, signal);
+    const staged = await this.storage.stage(looked(fileName, toldBytes(capture), bytes));
     try {
       const { name: _, ...bench } = fields;
       const source = { fileName, staged, fields: bench };
@@ -114,21 +121,16 @@ export class ArchivesService {
 }
 
 /** The bytes of a capture. @throws MemberRefused when their beginning is that of something else, such as an archive */
-async function* capture(head: Uint8Array, whole: AsyncGenerator<Uint8Array>, { path, entry }: Member) {
+async function* looked(fileName: string, sizeBytes: number, bytes: AsyncGenerator<Uint8Array>) {
+  const { head, whole } = await peeked(bytes, headBytes);
   try {
-    const args = { fileName: posix.basename(path), sizeBytes: entry.uncompressedSize };
-    const { problem: found } = previewRecording(head, args);
+    const { problem: found } = await previewRecording(head, { fileName, sizeBytes });
     if (found?.code === 'not-a-capture' || found?.code === 'empty-file')
       throw new MemberRefused(`${found.message} ${found.cure}`);
     yield* whole;
   } finally {
     await whole.return(undefined);
   }
-}
-
-function unpackedBytes(members: readonly Member[], { limit }: UnpackBudget): number {
-  const told = members.reduce((sum, { entry }) => sum + entry.uncompressedSize, 0);
-  return Math.min(told, limit);
 }
 
 /** Why a file of an archive stays out. @throws what is no fault of the file */
