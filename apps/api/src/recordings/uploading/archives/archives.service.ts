@@ -15,7 +15,7 @@ import { UploadLimitsService } from '../upload-limits.service.js';
 import { UploadSpool, type UploadOwner } from '../upload-spool.js';
 import { openArchive, readMembers, shownPath } from './archive-members.js';
 import { capturesOf, toldBytes, unpacked, type ArchivedCapture } from './archived-captures.js';
-import { demandModest, inflated, UnpackBudget } from './inflate-member.js';
+import { demandModest, UnpackBudget } from './inflate-member.js';
 import { MemberRefused } from './member-refused.js';
 import { peeked } from './peeked.js';
 
