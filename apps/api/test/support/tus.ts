@@ -1,4 +1,5 @@
-import { Upload, type UploadOptions } from 'tus-js-client';
+import { Agent } from 'node:http';
+import { DefaultHttpStack, Upload, type UploadOptions } from 'tus-js-client';
 
 type Options = Partial<UploadOptions> & {
   endpoint: string;
@@ -22,6 +23,8 @@ export async function sendByTus(
       headers: { cookie },
       metadata: { filename: fileName },
       retryDelays: null,
+      // A connection of an earlier upload may have been closed meanwhile.
+      httpStack: new DefaultHttpStack({ agent: new Agent({ keepAlive: false }) }),
       ...options,
       onProgress: (sent) => {
         if (cutAtBytes === undefined || sent < cutAtBytes || upload.url === null) return;

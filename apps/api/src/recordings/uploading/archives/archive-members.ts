@@ -103,7 +103,8 @@ async function allMembers(zip: ZipFile): Promise<Member[]> {
 function isNoFile(path: string): boolean {
   if (path.endsWith('/')) return true;
   const folders = path.split('/');
-  return folders.every((name) => name !== '..') && folders.some((name) => name !== '.' && clutter.test(name));
+  const isSound = !path.includes('\\') && !folders.includes('..');
+  return isSound && folders.some((name) => name !== '.' && clutter.test(name));
 }
 
 /** Why an entry may not come in, by what the directory tells of it. */
