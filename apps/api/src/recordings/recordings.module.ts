@@ -24,6 +24,12 @@ import { WaveformService } from './waveform.service.js';
     UploadLimitsService,
     ReadRecordingHandler,
   ],
-  exports: [RecordingsService, UploadLimitsService, AnalysisRunsService, ReadRecordingHandler],
+  exports: [
+    RecordingsService,
+    PreviewsService,
+    UploadLimitsService,
+    AnalysisRunsService,
+    ReadRecordingHandler,
+  ],
 })
 export class RecordingsModule {}
