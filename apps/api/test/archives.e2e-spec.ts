@@ -71,7 +71,7 @@ describe.each(stores)('archives of captures on %s', (kind, start) => {
     status = 202,
     fields: Record<string, string> = {},
   ) {
-    const archive = entries instanceof Buffer ? entries : zipOf(entries);
+    const archive = Buffer.isBuffer(entries) ? entries : zipOf(entries);
     const request = technician.post(`${base}/archives`).attach('file', archive, 'bench.zip');
     for (const [name, value] of Object.entries(fields)) void request.field(name, value);
     const { body } = await request.expect(status);
