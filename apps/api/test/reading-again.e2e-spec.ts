@@ -64,6 +64,20 @@ describe('a recording that is read again', () => {
     await worker.close();
   });
 
+  it('keeps its earlier analyses readable, as superseded', async () => {
+    const [latest, earlier] = await analysesOf(recording.id);
+    expect(earlier).toMatchObject({ status: 'done', supersededById: latest!.id });
+    const path = `/api/analyses/${earlier!.id}`;
+    const { body } = await technician.get(path).expect(200);
+    expect(body.channels[0]).toMatchObject({ name: 'U1', unit: 'V' });
+    // The square wave of amplitude 1 under the gain of 10: its fundamental has the rms 10 x 4 / (pi sqrt(2)).
+    const spectrum = (await technician.get(`${path}/spectrum`).expect(200)).body;
+    expect(Math.max(...spectrum.rms)).toBeCloseTo((10 * 4) / (Math.PI * Math.SQRT2), 1);
+    const series = (await technician.get(`${path}/series`).expect(200)).body;
+    expect(series.unit).toBe('V');
+    expect(series.value.length).toBeGreaterThan(0);
+  });
+
   it('leaves nothing in the store when it is deleted, however its id is spelled', async () => {
     const folder = join(test.app.get(AppConfig).dataDir, 'storage', 'recordings', recording.id);
     await access(folder);

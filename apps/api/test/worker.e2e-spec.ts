@@ -1,6 +1,5 @@
 import type { Analysis, Recording } from '@overtally/contracts';
 import { sql } from 'drizzle-orm';
-import { randomUUID } from 'node:crypto';
 import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { analyseRecordingJob } from '../dist/jobs/definitions/analyse-recording.job.js';
@@ -55,11 +54,13 @@ describe('a worker beside the API', () => {
 
   it('does each job once where two run and jobs were queued twice', async () => {
     const { id } = await upload(technician, test.project.id, short, 'twice.csv');
+    const { rows } = await test.database.execute(sql`select read_id from recordings where id = ${id}`);
+    const readId = String(rows[0]!.read_id);
     const jobs = test.app.get(JobsService);
     const repeat = () =>
       test.database.transaction((tx) =>
         jobs.enqueue(tx, readRecordingJob, {
-          ...{ recordingId: id, readId: randomUUID(), options: {} },
+          ...{ recordingId: id, readId, options: {}, readingRule: null },
           requestedById: test.people.technician.id,
         }),
       );

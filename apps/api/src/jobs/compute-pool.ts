@@ -107,21 +107,25 @@ export class ComputePool implements OnApplicationShutdown {
     const scratchFolder = join(this.config.dataDir, 'scratch');
     await makePrivateFolder(scratchFolder);
     await removeStale(scratchFolder, staleAfterMs);
-    const workerData: ComputeEnvironment = {
+    const environment: Omit<ComputeEnvironment, 'inBackground'> = {
       storage: this.config.storage,
       scratchFolder,
       workers: this.config.computeThreads,
     };
-    const make = (maxThreads: number) =>
+    const make = (maxThreads: number, inBackground: boolean) =>
       new Piscina({
         filename: threadFile,
         minThreads: 0,
         maxThreads,
         idleTimeout: idleTimeoutMs,
-        workerData,
+        workerData: { ...environment, inBackground } satisfies ComputeEnvironment,
       });
     const { computeThreads, jobsAtOnce } = this.config;
-    return { workers: make(computeThreads), coordinators: make(jobsAtOnce), previews: make(1) };
+    return {
+      workers: make(computeThreads, true),
+      coordinators: make(jobsAtOnce, true),
+      previews: make(1, false),
+    };
   }
 }
 

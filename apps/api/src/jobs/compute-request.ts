@@ -5,6 +5,8 @@ import type { StorageSettings } from '../config/storage-settings.js';
 export interface ComputeEnvironment {
   storage: StorageSettings;
   scratchFolder: string;
+  /** Whether requests and all else on the machine come first. */
+  inBackground: boolean;
   /** Threads that compute at the same time. */
   workers: number;
 }

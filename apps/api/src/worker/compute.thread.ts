@@ -23,7 +23,7 @@ const environment = workerData as ComputeEnvironment;
 /** One for all tasks of the thread, so that connections to the store are kept. */
 const storage = await openStorage(environment.storage);
 
-lowerThreadPriority();
+if (environment.inBackground) lowerThreadPriority();
 
 /** Entry point of a compute thread: runs one task at a time. */
 export default async function compute(request: ComputeRequest): Promise<unknown> {
