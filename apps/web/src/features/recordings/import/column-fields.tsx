@@ -18,7 +18,8 @@ interface ColumnFieldsProps {
   preview: ImportPreview;
   /** Channels as they would be read: they know what a unit stands for. */
   signals: readonly PreviewSignal[];
-  onChange: (columns: ImportDraft['columns']) => void;
+  /** `index` is that of the column that was touched. */
+  onChange: (columns: ImportDraft['columns'], index: number) => void;
 }
 
 /** Rows shown at first; a table of several hundred columns opens on request. */
@@ -34,11 +35,14 @@ export function ColumnFields({ draft, faults, preview, signals, onChange }: Colu
   const kept = keptColumns(draft, preview);
   const hasFullScale =
     preview.format === 'wav' || kept.some((column) => column.draft.fullScale.trim() !== '');
-  const set = (changes: readonly (readonly [number, ColumnDraft])[]) =>
-    onChange({
-      ...draft.columns,
-      ...Object.fromEntries(changes.map(([index, fields]) => [columnKey(index), fields])),
-    });
+  const set = (touched: number, changes: readonly (readonly [number, ColumnDraft])[]) =>
+    onChange(
+      {
+        ...draft.columns,
+        ...Object.fromEntries(changes.map(([index, fields]) => [columnKey(index), fields])),
+      },
+      touched,
+    );
   const shown = showsAll ? columns : columns.slice(0, rowsAtFirst);
   const headings = [
     'Read',
@@ -95,9 +99,10 @@ export function ColumnFields({ draft, faults, preview, signals, onChange }: Colu
                   quantity={signals.find((signal) => signal.column === index)?.quantity ?? column.quantity}
                   alike={alike.length}
                   unit={unitOf(column, fields)}
-                  onChange={(change) => set([[index, change]])}
+                  onChange={(change) => set(index, [[index, change]])}
                   onApplyToAlike={() =>
                     set(
+                      index,
                       [{ column, draft: fields }, ...alike].map(
                         (other) => [other.column.index, scaledLike(other.draft, fields)] as const,
                       ),

@@ -76,6 +76,7 @@ function ImportForm({ projectId, source, pending = false, onClose, onRead }: Imp
       : null,
   );
   const [shownLine, setShownLine] = useState<{ line: number; at: number } | null>(null);
+  const [shownColumn, setShownColumn] = useState<number | null>(null);
   const { draft, layout, read, change } = reading;
   const faults = faultsOf(draft);
   const file = layout.data ?? null;
@@ -123,9 +124,17 @@ function ImportForm({ projectId, source, pending = false, onClose, onRead }: Imp
             faults={faults}
             preview={file}
             signals={asRead?.signals ?? []}
-            onChange={(columns) => change({ columns })}
+            onChange={(columns, index) => {
+              change({ columns });
+              setShownColumn(index);
+            }}
           />
-          <SignalFigure signals={asRead?.signals ?? []} isBusy={read.isFetching} />
+          <SignalFigure
+            signals={asRead?.signals ?? []}
+            chosen={shownColumn}
+            onChoose={setShownColumn}
+            isBusy={read.isFetching}
+          />
           <IrregularFields draft={draft} preview={file} onChange={change} />
         </>
       ) : null}

@@ -1,6 +1,6 @@
 import { Box, chakra, Text } from '@chakra-ui/react';
 import type { PreviewSignal } from '@overtally/contracts';
-import { useId, useMemo, useState } from 'react';
+import { useId, useMemo } from 'react';
 import { SelectInput } from '../../../components/form-field.js';
 import { Segmented } from '../../../components/segmented.js';
 import { formatDuration, formatSi } from '../../../lib/format.js';
@@ -9,6 +9,9 @@ import { PreviewFrame } from './preview-frame.js';
 
 interface SignalFigureProps {
   signals: readonly PreviewSignal[];
+  /** Column whose channel is shown, where there is one; else the first. */
+  chosen: number | null;
+  onChoose: (column: number) => void;
   /** True while another one is worked out. */
   isBusy: boolean;
 }
@@ -17,8 +20,7 @@ interface SignalFigureProps {
 const inRow = 4;
 
 /** The first cycles of a channel as it would be read, with what tells at a glance whether its scaling is right. */
-export function SignalFigure({ signals, isBusy }: SignalFigureProps) {
-  const [chosen, setChosen] = useState<number | null>(null);
+export function SignalFigure({ signals, chosen, onChoose, isBusy }: SignalFigureProps) {
   const signal = signals.find(({ column }) => column === chosen) ?? signals[0];
   if (!signal) return null;
   const choice = {
@@ -32,13 +34,13 @@ export function SignalFigure({ signals, isBusy }: SignalFigureProps) {
       scrolls={false}
       tools={
         signals.length === 1 ? undefined : signals.length <= inRow && longest <= 60 ? (
-          <Segmented label="Channel shown" {...choice} onChange={(column) => setChosen(Number(column))} />
+          <Segmented label="Channel shown" {...choice} onChange={(column) => onChoose(Number(column))} />
         ) : (
           <SelectInput
             aria-label="Channel shown"
             width="180px"
             {...choice}
-            onChange={(event) => setChosen(Number(event.target.value))}
+            onChange={(event) => onChoose(Number(event.target.value))}
           />
         )
       }
