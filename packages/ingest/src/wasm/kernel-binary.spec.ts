@@ -11,7 +11,7 @@ const PACKAGE = new URL('../..', import.meta.url).pathname;
 const COMPILER = createRequire(import.meta.url).resolve('assemblyscript/bin/asc.js');
 
 // `pnpm --filter @overtally/ingest assemble` writes the module anew after a change of assembly/.
-it('holds the kernels as the source gives them', { timeout: 30_000 }, async () => {
+it('holds the kernels as the source gives them', { timeout: 120_000 }, async () => {
   const base64 = compile().toString('base64');
   const text = `/** assembly/ compiled to WebAssembly (base64). Made by \`pnpm --filter @overtally/ingest assemble\`. */
 export const kernelBinary =
