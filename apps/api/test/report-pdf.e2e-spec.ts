@@ -129,16 +129,18 @@ describe('the PDF of an issued report', () => {
     for (const line of fonts) expect(line).toMatch(/IBMPlex.* yes yes yes /);
   });
 
-  it('is not handed out once the stored bytes are not those that were issued', async () => {
+  it('is not handed out once the stored bytes are missing, or not those that were issued', async () => {
     const report = await newIssued(test, [judged.verdict.id]);
     const { dataDir } = test.app.get(AppConfig);
     const stored = (await readdir(dataDir, { recursive: true })).find(
       (path) => path.includes(report.id) && path.endsWith('.pdf'),
     );
-    await writeFile(join(dataDir, stored!), 'something else');
     const guest = await test.signIn('guest');
-    const { body } = await guest.get(`/api/reports/${report.id}/pdf`).expect(500);
-    expect(body.code).toBe('pdf-damaged');
+    const answer = async () => (await guest.get(`/api/reports/${report.id}/pdf`).expect(500)).body;
+    await writeFile(join(dataDir, stored!), 'something else');
+    expect((await answer()).code).toBe('pdf-damaged');
+    await rm(join(dataDir, stored!));
+    expect((await answer()).code).toBe('stored-file-missing');
   });
 });
 

@@ -3,6 +3,7 @@ import { ApiOkResponse, ApiProduces, ApiTags } from '@nestjs/swagger';
 import type { Response } from 'express';
 import { ProjectAccess, RequirePermission } from '../access/require-permission.decorator.js';
 import type { AppRequest, ProjectAccess as Access } from '../common/request.js';
+import { present } from '../storage/missing-object.js';
 import { ReportPdfService } from './report-pdf.service.js';
 import { ReportsService } from './reports.service.js';
 
@@ -28,7 +29,7 @@ export class ReportPdfController {
     @Param('id') id: string,
   ): Promise<StreamableFile | undefined> {
     await this.reports.requireVisible(id, role);
-    const { bytes, fileName, sha256 } = await this.pdfs.get(id);
+    const { bytes, fileName, sha256 } = await present(this.pdfs.get(id));
     if (sha256 === null) {
       response.setHeader('Cache-Control', 'no-store');
     } else {

@@ -15,7 +15,7 @@ export function useIntake(projectId: string, queue: UploadQueue) {
   async function takeOne(file: File, checkFirst: boolean): Promise<void> {
     if (checkFirst) return hold(file);
     try {
-      const preview = await previewImport(projectId, file, {});
+      const preview = await previewImport(projectId, file, null);
       if (!preview.confident || preview.problem) return hold(file);
     } catch (error) {
       notifyProblem(`${file.name} could not be looked into first; it is sent as it is`, error);
