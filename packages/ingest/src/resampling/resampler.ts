@@ -1,6 +1,6 @@
 import type { SampleSink } from '../types.js';
 import { type EvenGrid, instant } from './even-grid.js';
-import { cubicNodes, interpolate, weightsAt } from './lagrange.js';
+import { LocalCubic } from './lagrange.js';
 
 const BLOCK = 4096;
 /** Stamps that are kept behind the current interval, and that must be there after it. */
@@ -8,7 +8,7 @@ const BEHIND = 3;
 const AHEAD = 3;
 
 /**
- * Resamples rows with uneven time stamps to an even grid by piecewise cubic interpolation; see `weightsAt`. Holds one
+ * Resamples rows with uneven time stamps to an even grid by piecewise cubic interpolation; see `LocalCubic`. Holds one
  * block of rows. Rows without a time stamp are left out. An instant is missing in a pause, and where one of the two
  * rows around it has no number; its own value stands where a stamp falls on it.
  */
@@ -23,12 +23,14 @@ export class Resampler {
   private next = 0;
   private readonly out: Float64Array[];
   private outFilled = 0;
+  private readonly cubic: LocalCubic;
 
   constructor(
     readonly grid: EvenGrid,
     channelCount: number,
     private readonly sink: SampleSink,
   ) {
+    this.cubic = new LocalCubic(grid.widest);
     this.missing = Array.from({ length: channelCount }, () => 0);
     this.values = this.missing.map(() => new Float64Array(BLOCK));
     this.out = this.missing.map(() => new Float64Array(BLOCK));
@@ -96,11 +98,14 @@ export class Resampler {
     const { times, row, filled, grid, values, out, outFilled } = this;
     const onStamp = times[row] === time || row + 1 >= filled;
     const paused = !onStamp && (times[row + 1] as number) - (times[row] as number) > grid.widest;
-    const nodes = onStamp || paused ? [] : cubicNodes(times, row, filled, grid.widest);
-    const weights = weightsAt(time, times, nodes);
+    if (!onStamp && !paused) this.cubic.aim(time, times, row, filled);
     for (let k = 0; k < values.length; k += 1) {
       const column = values[k] as Float64Array;
-      const value = onStamp ? (column[row] as number) : interpolate(time, times, column, row, nodes, weights);
+      const value = onStamp
+        ? (column[row] as number)
+        : paused
+          ? NaN
+          : this.cubic.value(time, times, column, row);
       if (Number.isNaN(value)) this.missing[k] = (this.missing[k] as number) + 1;
       (out[k] as Float64Array)[outFilled] = value;
     }
