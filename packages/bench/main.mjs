@@ -24,7 +24,7 @@ const median = (values) => values.toSorted((a, b) => a - b)[values.length >> 1];
  * @param {number} threads
  */
 function measureOurs({ name, file }, threads) {
-  const args = [OURS, name, join(FOLDER, file), String(threads), String(REPEATS)];
+  const args = ['--expose-gc', OURS, name, join(FOLDER, file), String(threads), String(REPEATS)];
   return JSON.parse(execFileSync(process.execPath, args, { encoding: 'utf8', env: ENVIRONMENT }));
 }
 
