@@ -51,6 +51,8 @@ const answers = (role: 'technician' | 'guest', items: Recording[]) => ({
   ),
   [`GET /projects/${id}/recordings`]: page(items),
   'GET /limit-sets': page([classA]),
+  [`GET /projects/${id}/uploads`]: page([]),
+  [`GET /projects/${id}/upload-limits`]: json({ maxFileBytes: 1e9, quotaBytes: null, usedBytes: 0 }),
 });
 
 const row = async (name: string) => {

@@ -1,20 +1,32 @@
 import { Box, Button, Flex, Text } from '@chakra-ui/react';
+import { useRef, type ChangeEvent } from 'react';
 import { useDropzone } from 'react-dropzone';
+import { notifyProblem } from '../../../components/notify.js';
+import { formatBytes } from '../../../lib/format.js';
 
 interface DropZoneProps {
   onFiles: (files: readonly File[]) => void;
+  /** Largest file that the server takes; null while it is not known. */
+  maxFileBytes: number | null;
   /** Opens the import form for each file before it is sent. */
   checkFirst: boolean;
   onCheckFirst: (checkFirst: boolean) => void;
 }
 
-/** Where captures are dropped or chosen. Any file is taken: its content decides, not its name. */
-export function DropZone({ onFiles, checkFirst, onCheckFirst }: DropZoneProps) {
+/** Where captures and folders of them are dropped or chosen. Any file is taken: its content decides, not its name. */
+export function DropZone({ onFiles, maxFileBytes, checkFirst, onCheckFirst }: DropZoneProps) {
+  const folderInput = useRef<HTMLInputElement>(null);
   const { getRootProps, getInputProps, isDragActive, open } = useDropzone({
     onDrop: onFiles,
+    onError: (error) => notifyProblem('What was dropped could not be opened', error),
     noClick: true,
     noKeyboard: true,
   });
+  const takeFolder = ({ currentTarget }: ChangeEvent<HTMLInputElement>) => {
+    onFiles([...(currentTarget.files ?? [])]);
+    // The same folder chosen again is a change too.
+    currentTarget.value = '';
+  };
   return (
     <Flex
       {...getRootProps()}
@@ -35,14 +47,26 @@ export function DropZone({ onFiles, checkFirst, onCheckFirst }: DropZoneProps) {
     >
       <Box flex="1 1 320px">
         <input {...getInputProps({ 'aria-label': 'Capture files' })} />
+        <input
+          ref={folderInput}
+          type="file"
+          multiple
+          webkitdirectory=""
+          aria-label="Folder of captures"
+          style={{ display: 'none' }}
+          onChange={takeFolder}
+        />
         <Text>
-          Drop captures here: CSV, WAV, NumPy (.npy) or COMTRADE (.cff). Sources are kept byte for byte.
+          Drop captures, folders or ZIP archives here: CSV, WAV, NumPy (.npy), COMTRADE (.cff, or .cfg with
+          .dat)
+          {maxFileBytes === null ? '' : `, up to ${formatBytes(maxFileBytes)} each`}. Sources are kept byte
+          for byte.
         </Text>
         <Text fontSize="xs" color="inkSoft">
           Captures on mains: qualified persons, rated probes, isolation. Local codes decide.
         </Text>
       </Box>
-      <Flex align="center" gap="4" wrap="wrap">
+      <Flex align="center" columnGap="4" rowGap="2" wrap="wrap">
         <label>
           <Flex as="span" align="center" gap="2" fontSize="13px" color="inkSoft">
             <input
@@ -53,9 +77,12 @@ export function DropZone({ onFiles, checkFirst, onCheckFirst }: DropZoneProps) {
             Check before reading
           </Flex>
         </label>
-        <Button variant="solid" onClick={open}>
-          Add recordings
-        </Button>
+        <Flex gap="2">
+          <Button onClick={() => folderInput.current?.click()}>Choose folder</Button>
+          <Button variant="solid" onClick={open}>
+            Add recordings
+          </Button>
+        </Flex>
       </Flex>
     </Flex>
   );

@@ -1,159 +1,114 @@
-import { Box, Button, Flex, Grid, Link, Progress, Text } from '@chakra-ui/react';
-import { Link as RouterLink } from 'react-router-dom';
+import { Box, Button, Flex, Text, VisuallyHidden } from '@chakra-ui/react';
+import type { UnfinishedUpload } from '@overtally/contracts';
 import { Sheet } from '../../../components/sheet.js';
-import { problemText } from '../../../lib/api-problem.js';
-import { formatBytes } from '../../../lib/format.js';
-import { isOpen, type UploadItem, type UploadQueue } from '../upload-queue.js';
+import { isOpen, isRunning, mayPause, mayStop, type UploadItem } from '../upload-item.js';
+import type { UploadQueue } from '../upload-queue.js';
+import { ThinProgress } from './thin-progress.js';
+import { UnfinishedRow } from './unfinished-row.js';
+import { UploadRow } from './upload-row.js';
+import { countWords, progressWords, spokenStatus, totalsOf } from './upload-words.js';
 
 interface UploadListProps {
   queue: UploadQueue;
   items: readonly UploadItem[];
+  /** Uploads that broke off and are not on the list. */
+  unfinished: readonly UnfinishedUpload[];
   recordingTo: (recordingId: string) => string;
-  /** Opens the import form for a file that was left out. */
-  onLookAgain: (item: UploadItem) => void;
+  onDiscard: (upload: UnfinishedUpload) => void;
   /** Removes a recording that turned out to be a copy. */
   onRemoveCopy: (item: UploadItem) => void;
 }
 
-/** Uploads under way and just ended, each with its progress, its way out, and what came of it. */
-export function UploadList({ queue, items, recordingTo, onLookAgain, onRemoveCopy }: UploadListProps) {
-  if (items.length === 0) return null;
-  const open = items.filter(isOpen);
-  return (
-    <Sheet as="section" aria-label="Uploads" px="4" py="3" mb="3">
-      <Flex justify="space-between" align="baseline" gap="4" wrap="wrap">
-        <Text role="status" fontFamily="mono" fontSize="13px">
-          {summary(items)}
-        </Text>
-        {open.length > 0 ? (
-          <Button size="xs" onClick={() => queue.stopAll()}>
-            Stop all
-          </Button>
-        ) : (
-          <Button size="xs" onClick={() => queue.clear()}>
-            Clear the list
-          </Button>
-        )}
-      </Flex>
-      <Box as="ul" listStyleType="none">
-        {items.map((item) => (
-          <Grid
-            as="li"
-            key={item.id}
-            templateColumns={{ base: 'minmax(0, 1fr) auto', md: 'minmax(0, 1fr) minmax(0, 2fr) 150px' }}
-            alignItems="center"
-            columnGap="4"
-            rowGap="1"
-            borderTopWidth="1px"
-            borderColor="rule"
-            mt="2"
-            pt="2"
-          >
-            <Text overflowWrap="anywhere">
-              {item.file.name}{' '}
-              <Box as="span" color="inkSoft" fontSize="13px">
-                {formatBytes(item.file.size)}
-              </Box>
-            </Text>
-            <Box gridColumn={{ base: '1 / -1', md: 'auto' }} gridRow={{ base: 2, md: 'auto' }}>
-              <Outcome item={item} recordingTo={recordingTo} />
-            </Box>
-            <Flex justify="flex-end">
-              <Actions item={item} queue={queue} onLookAgain={onLookAgain} onRemoveCopy={onRemoveCopy} />
-            </Flex>
-          </Grid>
-        ))}
-      </Box>
-    </Sheet>
-  );
-}
-
-function Outcome({ item, recordingTo }: { item: UploadItem; recordingTo: UploadListProps['recordingTo'] }) {
-  if (item.state === 'waiting') return <Text color="inkSoft">waits for its turn</Text>;
-  if (item.state === 'left-out') return <Text color="near">left out, not sent</Text>;
-  if (item.state === 'stopped') return <Text color="inkSoft">stopped, nothing was kept</Text>;
-  if (item.state === 'failed') {
-    return (
-      <Text role="alert" color="over">
-        Not received: {problemText(item.error)}
-      </Text>
-    );
-  }
-  if (item.state === 'sending') {
-    const share = item.file.size > 0 ? Math.round((100 * item.sentBytes) / item.file.size) : 0;
-    return (
-      <Progress.Root value={share} size="xs" colorPalette="act" aria-label={`Sending ${item.file.name}`}>
-        <Progress.Track>
-          <Progress.Range />
-        </Progress.Track>
-      </Progress.Root>
-    );
-  }
-  const { recording } = item;
-  if (!recording) return null;
-  return (
-    <Text>
-      received as{' '}
-      <Link asChild>
-        <RouterLink to={recordingTo(recording.id)}>{recording.number}</RouterLink>
-      </Link>
-      {recording.duplicateOf ? (
-        <Box as="span" color="near">
-          , the same file as{' '}
-          <Link asChild>
-            <RouterLink to={recordingTo(recording.duplicateOf.id)}>{recording.duplicateOf.number}</RouterLink>
-          </Link>
-        </Box>
-      ) : null}
-    </Text>
-  );
-}
-
-function Actions({
-  item,
+/** Uploads under way, just ended and broken off, each with its progress, its way out, and what came of it. */
+export function UploadList({
   queue,
-  onLookAgain,
+  items,
+  unfinished,
+  recordingTo,
+  onDiscard,
   onRemoveCopy,
-}: Pick<UploadListProps, 'queue' | 'onLookAgain' | 'onRemoveCopy'> & { item: UploadItem }) {
-  if (isOpen(item)) {
-    return (
-      <Button size="xs" aria-label={`Stop ${item.file.name}`} onClick={() => queue.stop(item.id)}>
-        Stop
-      </Button>
-    );
-  }
-  if (item.state === 'left-out') {
-    return (
-      <Button size="xs" aria-label={`Look into ${item.file.name} again`} onClick={() => onLookAgain(item)}>
-        Look again
-      </Button>
-    );
-  }
-  if (item.state === 'failed' || item.state === 'stopped') {
-    return (
-      <Button size="xs" aria-label={`Send ${item.file.name} again`} onClick={() => queue.retry(item.id)}>
-        Send again
-      </Button>
-    );
-  }
-  if (item.recording?.duplicateOf) {
-    return (
-      <Button size="xs" onClick={() => onRemoveCopy(item)}>
-        Remove this copy
-      </Button>
-    );
-  }
-  return null;
+}: UploadListProps) {
+  return (
+    <>
+      <VisuallyHidden role="status">{items.length > 0 ? spokenStatus(items) : ''}</VisuallyHidden>
+      {items.length > 0 || unfinished.length > 0 ? (
+        <Sheet as="section" aria-label="Uploads" px="4" pt="3" pb="2" mb="3">
+          {items.length > 0 ? <Summary queue={queue} items={items} /> : null}
+          <Box
+            as="ul"
+            listStyleType="none"
+            maxH={items.length > 12 ? '60vh' : undefined}
+            overflowY={items.length > 12 ? 'auto' : undefined}
+          >
+            {items.map((item) => (
+              <UploadRow
+                key={item.id}
+                item={item}
+                queue={queue}
+                recordingTo={recordingTo}
+                onRemoveCopy={onRemoveCopy}
+              />
+            ))}
+          </Box>
+          {unfinished.length > 0 ? (
+            <>
+              <Text fontWeight="600" fontSize="13px" mt={items.length > 0 ? '3' : '0'}>
+                Broken off
+              </Text>
+              <Box as="ul" listStyleType="none">
+                {unfinished.map((upload) => (
+                  <UnfinishedRow key={upload.id} upload={upload} onDiscard={onDiscard} />
+                ))}
+              </Box>
+            </>
+          ) : null}
+        </Sheet>
+      ) : null}
+    </>
+  );
 }
 
-/** "2 uploading, 41.8 MB of 96.0 MB" */
-function summary(items: readonly UploadItem[]): string {
-  const open = items.filter(isOpen);
-  if (open.length === 0) {
-    const arrived = items.filter((item) => item.state === 'done').length;
-    return `${arrived} of ${items.length} received`;
-  }
-  const sent = open.reduce((sum, item) => sum + item.sentBytes, 0);
-  const total = open.reduce((sum, item) => sum + item.file.size, 0);
-  return `${open.length} uploading, ${formatBytes(Math.round(sent))} of ${formatBytes(total)}`;
+function Summary({ queue, items }: Pick<UploadListProps, 'queue' | 'items'>) {
+  const { sentBytes, totalBytes, speed } = totalsOf(items);
+  const isBusy = items.some(isOpen);
+  return (
+    <Box mb="2">
+      <Flex justify="space-between" align="center" gap="4" rowGap="2" wrap="wrap" mb={isBusy ? '2' : '0'}>
+        <Text fontFamily="mono" fontSize="13px">
+          {countWords(items)}
+          {items.some(isRunning) ? (
+            <Box as="span" color="inkSoft">
+              {' · '}
+              {progressWords(sentBytes, totalBytes, speed)}
+            </Box>
+          ) : null}
+        </Text>
+        <Flex gap="2">
+          {items.some(mayPause) ? (
+            <Button size="xs" onClick={() => queue.pauseAll()}>
+              Pause all
+            </Button>
+          ) : null}
+          {items.some(({ state }) => state === 'paused') ? (
+            <Button size="xs" onClick={() => queue.resumeAll()}>
+              Go on with all
+            </Button>
+          ) : null}
+          {items.some(mayStop) ? (
+            <Button size="xs" onClick={() => queue.stopAll()}>
+              Stop all
+            </Button>
+          ) : null}
+          {isBusy ? null : (
+            <Button size="xs" onClick={() => queue.clear()}>
+              Clear the list
+            </Button>
+          )}
+        </Flex>
+      </Flex>
+      {isBusy && items.length > 1 ? (
+        <ThinProgress label="All uploads" share={totalBytes > 0 ? sentBytes / totalBytes : 0} />
+      ) : null}
+    </Box>
+  );
 }
