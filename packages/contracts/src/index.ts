@@ -2,6 +2,7 @@ export * from './access.js';
 export * from './analyses.js';
 export * from './common.js';
 export * from './figures.js';
+export * from './file-name-pattern.js';
 export * from './limits.js';
 export * from './people.js';
 export * from './projects.js';

@@ -1,5 +1,4 @@
-import type { ImportOptions } from '@overtally/contracts';
-import { fitsPattern, literalLength } from './file-name-pattern.js';
+import { fitsPattern, literalLength, type ImportOptions } from '@overtally/contracts';
 
 /** What decides which rule is tried first. */
 export interface RankedRule {

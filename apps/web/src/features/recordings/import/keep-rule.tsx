@@ -1,12 +1,12 @@
 import { Button, Stack, Text } from '@chakra-ui/react';
 import { zodResolver } from '@hookform/resolvers/zod';
-import type { ImportOptions, ReadingRule } from '@overtally/contracts';
+import { fitsPattern, type ImportOptions, type ReadingRule } from '@overtally/contracts';
 import { useForm } from 'react-hook-form';
 import { FormProblem } from '../../../components/form-problem.js';
 import { notifyDone } from '../../../components/notify.js';
 import { setFormProblem } from '../../../lib/form-errors.js';
 import { useRuleChanges } from '../hooks/use-rule-changes.js';
-import { fitsPattern, suggestName, suggestPattern } from '../rules/file-name-pattern.js';
+import { suggestName, suggestPattern } from '../rules/file-name-pattern.js';
 import { ruleFieldsSchema, type RuleFields } from '../rules/rule-fields.js';
 import { RuleFormFields } from '../rules/rule-form-fields.js';
 import { FormPart } from '../sheet/settings/form-part.js';

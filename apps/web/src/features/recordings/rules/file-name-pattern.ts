@@ -19,13 +19,3 @@ export function suggestName(pattern: string): string {
   const kind = dot > 0 ? pattern.slice(dot + 1).toUpperCase() : '';
   return [stem, kind].filter(Boolean).join(', ').slice(0, 80);
 }
-
-/** Whether a file name fits a pattern in which * stands for any text and ? for one character; case does not matter. */
-export function fitsPattern(pattern: string, fileName: string): boolean {
-  const source = pattern
-    .trim()
-    .replace(/[.+^${}()|[\]\\]/g, '\\$&')
-    .replaceAll('*', '.*')
-    .replaceAll('?', '.');
-  return new RegExp(`^${source}$`, 'isu').test(fileName);
-}
