@@ -130,7 +130,7 @@ describe('uploads', () => {
     await page.getByText('2 recordings, 1 left out').waitFor();
     await page.getByText('What was left out').click();
     await page.getByText(/^lone\.cfg: /).waitFor();
-    await page.getByText('3 of 3 received').waitFor();
+    await page.getByText('3 of 3 received', { exact: true }).waitFor();
     // What is hidden, and what operating systems leave, is not on the list.
     expect(await page.getByText(/DS_Store|\.hidden/).count()).toBe(0);
     await expectAccessible(page);
