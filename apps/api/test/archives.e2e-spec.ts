@@ -153,6 +153,11 @@ describe.each(stores)('archives of captures on %s', (kind, start) => {
       /archive/,
     ],
     ['is a picture', { path: 'bench.png', bytes: Buffer.from('\u0089PNG\r\n\u001a\n', 'latin1') }, /picture/],
+    [
+      'is text without a table',
+      { path: 'notes.txt', bytes: Buffer.from('Kettle on bench 2.\nLid open.\n') },
+      /no line of it holds numeric/,
+    ],
     ['is empty', { path: 'empty.csv', bytes: Buffer.alloc(0) }, /empty/],
     ['comes twice', { path: 'good.csv', bytes: wav }, /before/],
     ['has another checksum', { path: 'broken.csv', told: { crc32: 1 } }, /CRC-32/],

@@ -19,6 +19,9 @@ import { demandModest, UnpackBudget } from './inflate-member.js';
 import { MemberRefused } from './member-refused.js';
 import { peeked } from './peeked.js';
 
+/** What is no capture at all, such as the notes beside one; a capture that cannot be read becomes a recording that says why. */
+const noCapture = new Set(['not-a-capture', 'empty-file', 'no-numbers']);
+
 /** As much as tells what a file is. */
 const headBytes = 128 * 1024;
 
@@ -125,7 +128,7 @@ async function* looked(fileName: string, sizeBytes: number, bytes: AsyncGenerato
   const { head, whole } = await peeked(bytes, headBytes);
   try {
     const { problem: found } = await previewRecording(head, { fileName, sizeBytes });
-    if (found?.code === 'not-a-capture' || found?.code === 'empty-file')
+    if (found !== null && noCapture.has(found.code))
       throw new MemberRefused(`${found.message} ${found.cure}`);
     yield* whole;
   } finally {
