@@ -15,7 +15,7 @@ describe('the environment', () => {
       port: 4310,
       host: '127.0.0.1',
       publicUrl: 'http://127.0.0.1:4310',
-      maxUploadBytes: 2048 * 1024 * 1024,
+      maxUploadBytes: 8192 * 1024 * 1024,
       worker: 'embedded',
       demo: false,
       webDist: null,
