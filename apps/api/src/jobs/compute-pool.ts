@@ -22,6 +22,9 @@ const idleTimeoutMs = 60_000;
 /** Files of a reading are written to all the time; these were left by a process that was killed. */
 const staleAfterMs = 3600 * 1000;
 
+/** A thread's short-lived objects are few: samples lie outside the heap. The usual size lets each keep tens of megabytes. */
+const youngGenerationMb = 8;
+
 interface RunOptions {
   stop: AbortSignal;
   onProgress: (fraction: number) => void;
@@ -118,6 +121,7 @@ export class ComputePool implements OnApplicationShutdown {
         minThreads: 0,
         maxThreads,
         idleTimeout: idleTimeoutMs,
+        resourceLimits: { maxYoungGenerationSizeMb: youngGenerationMb },
         workerData: { ...environment, inBackground } satisfies ComputeEnvironment,
       });
     const { computeThreads, jobsAtOnce } = this.config;

@@ -70,13 +70,18 @@ export function* computeWindows(
   return chunk;
 }
 
-/** Puts the chunks of successive ranges of windows together. */
-export function joinChunks(chunks: readonly WindowChunk[], orders: number, bands: number): WindowChunk {
-  if (chunks.length === 1) return chunks[0]!;
-  const count = chunks.reduce((sum, chunk) => sum + chunk.count, 0);
+/**
+ * Puts the chunks of successive ranges of windows together. They are taken one after the other, so that each may be let go
+ * of before the next.
+ */
+export function joinChunks(
+  chunks: Iterable<WindowChunk>,
+  { count, orders, bands }: { count: number; orders: number; bands: number },
+): WindowChunk {
   const whole = emptyChunk(count, orders, bands);
   let at = 0;
   for (const chunk of chunks) {
+    if (chunk.count === count) return chunk;
     for (const name of CHUNK_ROWS) {
       const rows = chunk[name].length / chunk.count;
       for (let row = 0; row < rows; row++) {

@@ -86,14 +86,12 @@ function windowParts(
   const samplesPerWindow = boundaries[windowCount(grid)]! / windowCount(grid);
   const chunks = splitItems(windowCount(grid), samplesPerWindow).map(({ from, to }) => {
     const plan = { boundaries: boundaries.slice(from, to + 1), cycles, orders, bandCentresHz };
-    return batch.add({ ...context, kind: 'windows', plan });
+    return batch.addLarge({ ...context, kind: 'windows', plan });
   });
-  return () =>
-    joinChunks(
-      chunks.map((chunk) => chunk()),
-      orders,
-      bandCentresHz.length,
-    );
+  function* inOrder() {
+    for (const chunk of chunks) yield chunk();
+  }
+  return () => joinChunks(inOrder(), { count: windowCount(grid), orders, bands: bandCentresHz.length });
 }
 
 /** Orders at a fundamental that another channel set, or of a long record that holds no whole window. */
