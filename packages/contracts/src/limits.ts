@@ -45,6 +45,13 @@ export const limitEntrySchema = z.object({
   order: z.number().int().min(2).max(200),
   limit: z.number().positive(),
   capA: z.number().positive().optional().describe('Upper bound in A, with milliampere-per-watt'),
+  timesParameter: parameterNameSchema
+    .optional()
+    .describe('The limit is multiplied by this parameter, as 30 times the power factor'),
+  basis: limitBasisSchema.optional().describe("Where it differs from the set's"),
+  unit: z.string().max(20).optional().describe("Unit of an absolute limit, where it differs from the set's"),
+  referenceParameter: parameterNameSchema.optional().describe("Where it differs from the set's"),
+  formula: z.string().max(120).optional().describe('What the value was worked out from, for display'),
 });
 export type LimitEntry = z.infer<typeof limitEntrySchema>;
 
@@ -53,10 +60,76 @@ export const totalLimitSchema = z.object({
   name: z.enum(['THD', 'THC', 'POHC', 'PWHC', 'TDD']),
   limit: z.number().positive(),
   maxOrder: z.number().int().min(2).max(200),
+  basis: limitBasisSchema.optional().describe('Where the total refers to something else than its name says'),
 });
+export type TotalLimit = z.infer<typeof totalLimitSchema>;
 
 /** How single smoothed values and small currents are treated. */
-export const limitProcedureSchema = z.enum(['iec61000-3-2', 'plain']);
+export const limitProcedureSchema = z.enum(['iec61000-3-2', 'iec61000-3-12', 'plain']);
+
+/** Values of one parameter, each end open or closed: above < value, from <= value, value < below, value <= upTo. */
+export const parameterRangeSchema = z.object({
+  parameter: parameterNameSchema,
+  above: z.number().optional(),
+  from: z.number().optional(),
+  below: z.number().optional(),
+  upTo: z.number().optional(),
+});
+export type ParameterRange = z.infer<typeof parameterRangeSchema>;
+
+/** What the shape of the current must be, in degrees after the zero crossing of the fundamental voltage. */
+export const waveformConditionSchema = z.object({
+  startsByDeg: z.number(),
+  peakByDeg: z.number(),
+  endsNotBeforeDeg: z.number(),
+  how: z.string().describe('How the angles are read'),
+});
+export type WaveformCondition = z.infer<typeof waveformConditionSchema>;
+
+/** Limits of a set that hold for a range of a parameter, or as one of several alternatives. */
+export const limitRowSchema = z.object({
+  label: z.string().max(160),
+  selector: parameterRangeSchema.optional(),
+  basis: limitBasisSchema.optional().describe("Where it differs from the set's"),
+  unit: z.string().max(20).optional(),
+  orders: z.array(limitEntrySchema).max(199),
+  totals: z.array(totalLimitSchema).max(5),
+  waveform: waveformConditionSchema.optional(),
+});
+export type LimitRow = z.infer<typeof limitRowSchema>;
+
+/**
+ * How one row is taken: by the range that holds the parameter, by linear interpolation between the lower ends of
+ * the ranges, or as alternatives of which one is enough.
+ */
+export const rowChoiceSchema = z.enum(['range', 'interpolate', 'alternative']);
+
+/** Where a set applies; outside, the verdict is `not-applicable` with the reason. */
+export const applicabilitySchema = parameterRangeSchema.extend({
+  otherwise: z.string().max(300).describe('The reason when the parameter is outside, as a sentence'),
+});
+export type Applicability = z.infer<typeof applicabilitySchema>;
+
+const conditionsOfUse = {
+  rows: z
+    .array(limitRowSchema)
+    .max(20)
+    .optional()
+    .describe('Limits that depend on parameters; `orders` and `totals` of the set are then empty'),
+  rowChoice: rowChoiceSchema.optional().describe('How a row is taken; needed with `rows`'),
+  applicability: z.array(applicabilitySchema).max(10).optional(),
+  shortExcursion: z
+    .boolean()
+    .optional()
+    .describe('Single values up to 200 % for a short time are allowed (IEC 61000-3-2, class A)'),
+  statistic: z
+    .string()
+    .max(500)
+    .optional()
+    .describe(
+      'The statistic that the standard compares, and what a short record can state; said with each result',
+    ),
+};
 
 export const limitSetSchema = z.object({
   id: z.string().describe('Published sets: a fixed name such as `iec61000-3-2.classA`; custom sets: a UUID'),
@@ -75,8 +148,13 @@ export const limitSetSchema = z.object({
     .describe('Parameter that `percent-of-reference` refers to'),
   procedure: limitProcedureSchema,
   parameters: z.array(parameterNameSchema).describe('Parameters a verdict must be given'),
+  optionalParameters: z
+    .array(parameterNameSchema)
+    .optional()
+    .describe('Parameters that are checked when given, such as the power that decides whether limits apply'),
   orders: z.array(limitEntrySchema),
   totals: z.array(totalLimitSchema),
+  ...conditionsOfUse,
   source: z.array(z.string()),
   confidence: confidenceSchema,
   evidence: z.string(),
@@ -93,13 +171,27 @@ export const createLimitSetSchema = z
     appliesWhen: z.string().trim().max(500).default(''),
     quantity: quantitySchema,
     unit: z.string().trim().max(20),
-    basis: z.enum(['absolute', 'percent-of-fundamental']),
-    orders: z
-      .array(limitEntrySchema.omit({ capA: true }))
-      .min(1, 'Give at least one order')
-      .max(199),
+    basis: limitBasisSchema,
+    referenceParameter: parameterNameSchema
+      .optional()
+      .describe('Parameter that `percent-of-reference` refers to'),
+    procedure: limitProcedureSchema.optional().describe('`plain` when absent'),
+    orders: z.array(limitEntrySchema).max(199),
     totals: z.array(totalLimitSchema).max(5).default([]),
+    ...conditionsOfUse,
     source: z.string().trim().min(1, 'Say where the limits come from').max(500),
+  })
+  .refine((set) => set.orders.length > 0 || (set.rows?.length ?? 0) > 0, {
+    message: 'Give at least one order',
+    path: ['orders'],
+  })
+  .refine((set) => set.rows === undefined || set.rowChoice !== undefined, {
+    message: 'Say how a row is taken',
+    path: ['rowChoice'],
+  })
+  .refine((set) => set.basis !== 'percent-of-reference' || set.referenceParameter !== undefined, {
+    message: 'Name the parameter that the percentages refer to',
+    path: ['referenceParameter'],
   })
   .refine((set) => new Set(set.orders.map((entry) => entry.order)).size === set.orders.length, {
     message: 'Each order may stand once',

@@ -2,20 +2,15 @@ import type {
   DecisionRule,
   LimitSet,
   OrderVerdict,
-  Quantity,
   TotalVerdict,
   VerdictParameters,
   VerdictResult,
 } from '@overtally/contracts';
-import { comparisonReason } from './comparison-reason.js';
-import { classify, decisionOf, describeDecision, worst, type Decision } from './decision.js';
-import { judgeByIec61000_3_2 } from './iec61000-3-2.js';
-import { limitUnit } from './limit-for-order.js';
+import { better, decisionOf, describeDecision, type Decision } from './decision.js';
+import { judgeLimits, type JudgedLimits, type Judging } from './judge-limits.js';
 import type { Measurement } from './measurement.js';
-import { isDecidable, orderCases, orderVerdict, type OrderCase } from './order-cases.js';
-import { overallReason } from './overall-reason.js';
-import { judgeTotal } from './totals.js';
-import { unitRatio } from './units.js';
+import { resolveLimits, shownLimits, type Resolution, type ResolvedLimits } from './resolve.js';
+import { mismatch, referredToChannel, scopeCaution } from './scope.js';
 
 /** A limit set applied to one channel. */
 export interface Evaluation {
@@ -27,69 +22,56 @@ export interface Evaluation {
   totals: TotalVerdict[];
 }
 
-/** Only class A allows single values up to 200 % (IEC 61000-3-2, 6.2.3). */
-const setsWithShortExcursion: readonly string[] = ['iec61000-3-2.classA'];
-
-const quantityNames: Readonly<Record<Quantity, string>> = {
-  voltage: 'voltage',
-  current: 'current',
-  power: 'power',
-  sound_pressure: 'sound pressure',
-  acceleration: 'acceleration',
-  velocity: 'velocity',
-  dimensionless: 'a quantity without dimension',
-  other: 'another quantity',
-};
-
-/** Sets of voltages that are judged by 95 % of the 10 min means of one week (as their notes say). */
-const setsOfWeeks: readonly string[] = ['en50160.lv', 'iec61000-2-2.lv'];
-const weekCondition =
-  'The standard takes 10 min values of one week; a short record is compared with its values, which states no conformity';
-
-/** Why the set cannot be applied to the channel at all; null when it can. */
-function mismatch(set: LimitSet, measurement: Measurement): string | null {
-  if (set.quantity !== measurement.quantity) {
-    return `The set limits ${quantityNames[set.quantity]}; the channel holds ${quantityNames[measurement.quantity]}`;
-  }
-  const unit = limitUnit(set);
-  if (unit !== null && unitRatio(unit, measurement.unit) === null) {
-    const given = measurement.unit === '' ? 'has no unit' : `is in ${measurement.unit}`;
-    return `The limits are in ${unit}; the channel ${given}: set the unit of the channel`;
-  }
-  return null;
-}
+const hasUncertainty = ({ harmonics }: Measurement): boolean =>
+  harmonics.some(({ uncertainty }) => uncertainty !== undefined && uncertainty !== null);
 
 /** Why no order can be decided: something that all of them need is missing. */
-function commonGap(
-  set: LimitSet,
-  measurement: Measurement,
-  parameters: VerdictParameters,
-  decision: Decision,
-): string | null {
+function commonGap(measurement: Measurement, resolution: Resolution, decision: Decision): string | null {
   if (measurement.fundamentalRms === null || measurement.fundamentalRms === 0) {
     return 'No fundamental was found in the channel';
   }
-  const needed = set.referenceParameter ? [...set.parameters, set.referenceParameter] : set.parameters;
-  const missing = [...new Set(needed)].filter((name) => parameters[name] === undefined);
-  if (missing.length > 0) return `The set needs ${missing.join(', ')}`;
-  if (decision.rule !== 'simple-acceptance' && decision.uncertaintyPercent === null) {
+  if (resolution.gap !== null) return resolution.gap.reason;
+  const isStated = decision.uncertaintyPercent !== null || hasUncertainty(measurement);
+  if (decision.rule !== 'simple-acceptance' && !isStated) {
     return 'The decision rule needs expandedUncertaintyPercent';
   }
   return null;
 }
 
-function judgePlainly(orderCase: OrderCase, decision: Decision): OrderVerdict {
-  if (!isDecidable(orderCase)) return orderVerdict(orderCase, decision, 'not-decidable', orderCase.gap);
-  const { mean, limit } = orderCase;
-  const result = classify(mean, limit, decision);
-  return orderVerdict(orderCase, decision, result, comparisonReason('Mean', mean, limit, result));
+/** The alternative that judges best, the first of equals; all of them are said in the reason. */
+function bestOf(
+  judged: readonly JudgedLimits[],
+): Pick<JudgedLimits, 'result' | 'reason' | 'orders' | 'totals'> {
+  const [first, ...rest] = judged as [JudgedLimits, ...JudgedLimits[]];
+  if (rest.length === 0) {
+    const row = first.label === null ? '' : `. Limits of ${first.label}`;
+    return { ...first, reason: `${first.reason}${row}` };
+  }
+  const best = rest.reduce(
+    (held, next) =>
+      next.result !== held.result && better(held.result, next.result) === next.result ? next : held,
+    first,
+  );
+  const others = judged
+    .filter((each) => each !== best)
+    .map(({ label, reason }) => `${label ?? ''}: ${reason}`);
+  const used = `One alternative is enough; ${best.label ?? ''} is used`;
+  return { ...best, reason: [`${best.reason}`, used, ...others].join('. ') };
 }
+
+const chosenLimits = (
+  set: LimitSet,
+  parameters: VerdictParameters,
+  resolution: Resolution,
+): ResolvedLimits[] =>
+  resolution.limits ?? [{ set: shownLimits(set, parameters), label: null, waveform: null }];
 
 /**
  * Applies a limit set to one channel by a decision rule.
  *
  * Amounts are in the channel's unit. The whole is as bad as its worst part: fail, conditional-fail,
- * not-decidable, conditional-pass, pass. A channel of another quantity is `not-applicable`; without a
+ * not-decidable, conditional-pass, pass; of alternatives the best counts. A channel of another quantity or
+ * nominal voltage, and parameters outside the set's conditions of use, are `not-applicable`; without a
  * fundamental, a needed parameter or the uncertainty that the rule needs, the result is `not-decidable` and the
  * reason names what is missing.
  */
@@ -99,28 +81,21 @@ export function evaluate(
   args: { parameters: VerdictParameters; decisionRule: DecisionRule },
 ): Evaluation {
   const decision = decisionOf(args.decisionRule, args.parameters);
-  const decisionRuleText = describeDecision(decision);
-  const unfit = mismatch(set, measurement);
+  const decisionRuleText = describeDecision(decision, hasUncertainty(measurement));
+  const resolution = resolveLimits(set, args.parameters);
+  const chosen = chosenLimits(set, args.parameters, resolution);
+  const referred = referredToChannel(set, measurement, args.parameters);
+  const misfits = chosen.map((limits) => mismatch(limits.set, measurement));
+  const unfit =
+    misfits.find((reason) => reason !== null) ??
+    (resolution.gap?.result === 'not-applicable' ? resolution.gap.reason : referred.unfit);
   if (unfit !== null) {
     return { result: 'not-applicable', reason: unfit, decisionRuleText, orders: [], totals: [] };
   }
-  const gap = commonGap(set, measurement, args.parameters, decision);
-  const cases = orderCases(set, measurement, args.parameters, gap);
-  const judged =
-    set.procedure === 'iec61000-3-2'
-      ? judgeByIec61000_3_2(cases, measurement, decision, setsWithShortExcursion.includes(set.id))
-      : { orders: cases.map((orderCase) => judgePlainly(orderCase, decision)), totals: [] };
-  const totals = set.totals.map((total) =>
-    judgeTotal(total, set, measurement, args.parameters, decision, gap),
-  );
-  const result = worst([...judged.orders, ...totals].map((row) => row.result));
-  const reason = overallReason(result, judged.orders, totals);
-  const isConditional = setsOfWeeks.includes(set.id) && result !== 'not-decidable';
-  return {
-    result,
-    reason: isConditional ? `${reason}. ${weekCondition}` : reason,
-    decisionRuleText,
-    orders: judged.orders,
-    totals: [...judged.totals, ...totals],
-  };
+  const gap = commonGap(measurement, resolution, decision);
+  const judging: Judging = { measurement, parameters: referred.parameters, decision, gap };
+  const { result, reason, orders, totals } = bestOf(chosen.map((limits) => judgeLimits(limits, judging)));
+  const cautions = result === 'not-decidable' ? [] : [scopeCaution(set, measurement), set.statistic];
+  const said = [reason, ...cautions.filter((caution) => caution !== null && caution !== undefined)];
+  return { result, reason: said.join('. '), decisionRuleText, orders, totals };
 }

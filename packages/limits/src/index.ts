@@ -1,5 +1,13 @@
 export { evaluate, type Evaluation } from './evaluate.js';
 export { limitForOrder, type LimitContext } from './limit-for-order.js';
-export { basisOfChannel, measurementOfChannel, type Measurement } from './measurement.js';
+export { basisOfChannel, measurementOfChannel, type CurrentShape, type Measurement } from './measurement.js';
+export {
+  neededParameters,
+  resolveLimits,
+  shownLimits,
+  type LimitGap,
+  type Resolution,
+  type ResolvedLimits,
+} from './resolve.js';
 export { findPublishedLimitSet, publishedLimitSets } from './sets/index.js';
 export { sharesOfSummary } from './shares.js';

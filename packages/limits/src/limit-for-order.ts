@@ -1,4 +1,5 @@
-import type { LimitSet, ParameterName, VerdictParameters } from '@overtally/contracts';
+import type { LimitEntry, LimitSet, ParameterName, VerdictParameters } from '@overtally/contracts';
+import { resolveLimits } from './resolve.js';
 import { unitRatio } from './units.js';
 
 export interface LimitContext {
@@ -47,19 +48,37 @@ export function limitScale(set: LimitSet, context: LimitContext): number | null 
   return reference === undefined ? null : (reference / 100) * ratio;
 }
 
+/** The set as one of its entries reads it: an entry may be in a unit or of a basis of its own. */
+export const readBy = (set: LimitSet, entry: LimitEntry): LimitSet => ({
+  ...set,
+  basis: entry.basis ?? set.basis,
+  unit: entry.unit ?? set.unit,
+  referenceParameter: entry.referenceParameter ?? set.referenceParameter,
+});
+
 /**
- * Limit of one order as an rms value in the channel's unit.
+ * Limit of one entry as an rms value in the channel's unit.
  *
  * Percentages are taken of the fundamental or of the reference parameter; mA/W limits are multiplied by
- * `powerW` and held to the set's cap (IEC 61000-3-2, Table 3). Null when the set does not limit the order
- * or something it needs is missing.
+ * `powerW` and held to the entry's cap (IEC 61000-3-2, Table 3); an entry may be multiplied by a parameter, as
+ * 30 times the power factor (Table 2 of edition 4). Null when something it needs is missing.
  */
-export function limitForOrder(set: LimitSet, order: number, context: LimitContext): number | null {
-  const entry = set.orders.find((candidate) => candidate.order === order);
-  const scale = limitScale(set, context);
-  if (entry === undefined || scale === null) return null;
-  const limit = entry.limit * scale;
+export function amountOf(entry: LimitEntry, set: LimitSet, context: LimitContext): number | null {
+  const scale = limitScale(readBy(set, entry), context);
+  const factor = entry.timesParameter === undefined ? 1 : context.parameters[entry.timesParameter];
+  if (scale === null || factor === undefined) return null;
+  const limit = entry.limit * factor * scale;
   if (entry.capA === undefined) return limit;
   const cap = entry.capA * (unitRatio('A', context.unit ?? 'A') ?? 1);
   return Math.min(limit, cap);
+}
+
+/**
+ * Limit of one order as an rms value in the channel's unit, from the limits that hold for the parameters (the
+ * first of alternatives). Null when the set does not limit the order or something it needs is missing.
+ */
+export function limitForOrder(set: LimitSet, order: number, context: LimitContext): number | null {
+  const held = resolveLimits(set, context.parameters).limits?.[0]?.set;
+  const entry = held?.orders.find((candidate) => candidate.order === order);
+  return held && entry ? amountOf(entry, held, context) : null;
 }

@@ -1,5 +1,12 @@
 import type { ChannelAnalysis, Harmonic, Quantity } from '@overtally/contracts';
 
+/** When a lamp's current reaches 5 % of its peak, has its last peak, and falls below 5 %, in degrees. */
+export interface CurrentShape {
+  startsDeg: number;
+  peakDeg: number;
+  endsDeg: number;
+}
+
 /** What a limit set is applied to: one channel, all amounts rms in its unit. */
 export interface Measurement {
   quantity: Quantity;
@@ -13,7 +20,17 @@ export interface Measurement {
     mean: number;
     /** Largest 1.5 s smoothed value; null when there were no synchronous windows. */
     smoothedMax: number | null;
+    /** Expanded uncertainty (k = 2) of the mean, in the channel's unit; absent or null when not known. */
+    uncertainty?: number | null;
+    /** Smoothed values in equal steps over the observation, for the time above 150 % of a limit. */
+    smoothed?: readonly number[];
+    /** Share of the observation, 0 to 1, with smoothed values above 150 % of the limit, where it is known. */
+    timeAbove150Share?: number;
   }[];
+  /** Length of the observation in s; absent or null when not known. */
+  observationS?: number | null;
+  /** Shape of the current in degrees after the zero crossing of the fundamental voltage; absent when not read. */
+  currentShape?: CurrentShape | null;
   /** Orders above this one cannot be measured at the record's sample rate. */
   highestMeasurableOrder: number;
 }
@@ -42,17 +59,20 @@ export function basisOfChannel({ quantity, harmonics }: ChannelAnalysis): string
 export function measurementOfChannel(channel: ChannelAnalysis): Measurement {
   const mean = channel.quantity === 'current' ? meanOfCurrent : meanOfOther;
   const highestListed = channel.harmonics.reduce((highest, { order }) => Math.max(highest, order), 0);
-  const samplesPerCycle = channel.windows ? channel.windows.samplesPerWindow / channel.windows.cycles : null;
+  const { windows, fundamental } = channel;
+  const samplesPerCycle = windows ? windows.samplesPerWindow / windows.cycles : null;
   return {
     quantity: channel.quantity,
     unit: channel.unit,
     rms: channel.rms,
-    fundamentalRms: channel.fundamental?.rms ?? null,
+    fundamentalRms: fundamental?.rms ?? null,
     harmonics: channel.harmonics.map((harmonic) => ({
       order: harmonic.order,
       mean: mean(harmonic),
       smoothedMax: harmonic.smoothedMaxRms,
+      uncertainty: harmonic.uncertainty,
     })),
     highestMeasurableOrder: samplesPerCycle === null ? highestListed : Math.ceil(samplesPerCycle / 2) - 1,
+    observationS: windows && fundamental ? (windows.count * windows.cycles) / fundamental.frequencyHz : null,
   };
 }

@@ -1,5 +1,6 @@
 import type { ChannelSummary, LimitSet, VerdictParameters } from '@overtally/contracts';
-import { limitForOrder } from './limit-for-order.js';
+import { amountOf } from './limit-for-order.js';
+import { resolveLimits } from './resolve.js';
 
 const firstOrder = 2;
 const lastOrder = 40;
@@ -17,11 +18,14 @@ export function sharesOfSummary(
   parameters: VerdictParameters = {},
 ): { order: number; sharePercent: number | null }[] {
   const fits = set.quantity === summary.quantity;
+  const held = fits ? resolveLimits(set, parameters).limits?.[0]?.set : undefined;
+  const entries = new Map(held?.orders.map((entry) => [entry.order, entry]));
   const context = { fundamentalRms: summary.harmonicRms[0] ?? null, parameters, unit: summary.unit };
   return Array.from({ length: lastOrder - firstOrder + 1 }, (_, i) => {
     const order = firstOrder + i;
     const rms = summary.harmonicRms[order - 1];
-    const limit = fits ? limitForOrder(set, order, context) : null;
+    const entry = entries.get(order);
+    const limit = held && entry ? amountOf(entry, held, context) : null;
     const known = rms !== undefined && limit !== null && limit > 0;
     return { order, sharePercent: known ? (100 * rms) / limit : null };
   });

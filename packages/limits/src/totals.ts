@@ -1,32 +1,45 @@
-import type { LimitSet, TotalVerdict, VerdictParameters } from '@overtally/contracts';
+import type { LimitSet, TotalLimit, TotalVerdict, VerdictParameters } from '@overtally/contracts';
 import { comparisonReason } from './comparison-reason.js';
-import { classify, type Decision } from './decision.js';
+import { classify, withMeasured, type Decision } from './decision.js';
 import { limitScale } from './limit-for-order.js';
 import type { Measurement } from './measurement.js';
-
-type TotalLimit = LimitSet['totals'][number];
 
 interface Sum {
   value: number;
   /** False when an order of the sum was not measured, so that the value is a lower bound. */
   complete: boolean;
+  /** Expanded uncertainty of the value; null when an order that counts has none. */
+  expanded: number | null;
 }
 
-/** Root of the weighted sum of squares of the orders' means. */
+/**
+ * Root of the weighted sum of squares of the orders' means.
+ *
+ * Its expanded uncertainty takes the orders as fully correlated, since they share one measuring chain
+ * (JCGM 100:2008, 5.2.2, note 1): the sum of |c_i| U_i with c_i = w_i x_i / value. This is an upper bound.
+ */
 export function rootSumOfSquares(
   measurement: Measurement,
   orders: readonly number[],
   weight: (order: number) => number = () => 1,
 ): Sum {
-  const measured = new Map(measurement.harmonics.map(({ order, mean }) => [order, mean]));
+  const measured = new Map(measurement.harmonics.map((harmonic) => [harmonic.order, harmonic]));
   let sum = 0;
+  let weighted: number | null = 0;
   let complete = true;
   for (const order of orders) {
-    const mean = order > measurement.highestMeasurableOrder ? undefined : measured.get(order);
-    if (mean === undefined) complete = false;
-    else sum += weight(order) * mean * mean;
+    const harmonic = order > measurement.highestMeasurableOrder ? undefined : measured.get(order);
+    if (harmonic === undefined) {
+      complete = false;
+      continue;
+    }
+    const { mean, uncertainty = null } = harmonic;
+    sum += weight(order) * mean * mean;
+    weighted =
+      weighted === null || uncertainty === null ? null : weighted + weight(order) * mean * uncertainty;
   }
-  return { value: Math.sqrt(sum), complete };
+  const value = Math.sqrt(sum);
+  return { value, complete, expanded: weighted === null || value === 0 ? weighted : weighted / value };
 }
 
 const ordersFrom = (first: number, last: number, step = 1): number[] =>
@@ -42,23 +55,17 @@ function sumOfTotal({ name, maxOrder }: TotalLimit, measurement: Measurement): S
   return rootSumOfSquares(measurement, ordersFrom(2, maxOrder));
 }
 
-/** What one unit of the total's limit amounts to in the channel's unit: THD refers to the fundamental, TDD to IL. */
-function scaleOfTotal(
-  { name }: TotalLimit,
-  set: LimitSet,
-  measurement: Measurement,
-  parameters: VerdictParameters,
-) {
-  const context = { fundamentalRms: measurement.fundamentalRms, parameters, unit: measurement.unit };
-  if (name === 'THD') return limitScale({ ...set, basis: 'percent-of-fundamental' }, context);
-  if (name === 'TDD') {
-    return limitScale({ ...set, basis: 'percent-of-reference', referenceParameter: 'ilA' }, context);
-  }
-  return limitScale(set, context);
+/** The set as the total reads it: THD refers to the fundamental, TDD to IL, unless the total says otherwise. */
+function readByTotal({ name, basis }: TotalLimit, set: LimitSet): LimitSet {
+  if (basis !== undefined) return { ...set, basis };
+  if (name === 'THD') return { ...set, basis: 'percent-of-fundamental' };
+  if (name === 'TDD') return { ...set, basis: 'percent-of-reference', referenceParameter: 'ilA' };
+  return set;
 }
 
-function unitOfTotal({ name }: TotalLimit, set: LimitSet): string {
-  return name === 'THD' || name === 'TDD' ? '%' : set.unit;
+function unitOfTotal({ basis, unit }: LimitSet): string {
+  if (basis === 'absolute') return unit;
+  return basis === 'milliampere-per-watt' ? 'mA/W' : '%';
 }
 
 /** Verdict on one total of the set; `commonGap` says why nothing of the channel can be decided. */
@@ -70,14 +77,17 @@ export function judgeTotal(
   decision: Decision,
   commonGap: string | null,
 ): TotalVerdict {
-  const scale = scaleOfTotal(total, set, measurement, parameters);
+  const read = readByTotal(total, set);
+  const context = { fundamentalRms: measurement.fundamentalRms, parameters, unit: measurement.unit };
+  const scale = limitScale(read, context);
   const sum = sumOfTotal(total, measurement);
   const value = scale === null || scale === 0 ? null : sum.value / scale;
-  const row = { name: total.name, unit: unitOfTotal(total, set), limit: total.limit };
-  if (commonGap !== null || value === null) {
+  const row = { name: total.name, unit: unitOfTotal(read), limit: total.limit };
+  if (commonGap !== null || value === null || scale === null) {
     return { ...row, value: null, sharePercent: null, result: 'not-decidable', reason: commonGap };
   }
-  const result = classify(value, total.limit, decision);
+  const expanded = sum.expanded === null ? null : sum.expanded / scale;
+  const result = classify(value, total.limit, withMeasured(decision, value, expanded));
   if (!sum.complete && result !== 'fail') {
     const reason = `Some orders up to ${total.maxOrder} were not measured`;
     return { ...row, value: null, sharePercent: null, result: 'not-decidable', reason };

@@ -1,7 +1,7 @@
 import { Inject, Injectable } from '@nestjs/common';
-import { holds, type CreateLimitSet, type LimitSet } from '@overtally/contracts';
+import { holds, type CreateLimitSet, type LimitBasis, type LimitSet } from '@overtally/contracts';
 import type { Database } from '@overtally/db';
-import { findPublishedLimitSet, publishedLimitSets } from '@overtally/limits';
+import { findPublishedLimitSet, neededParameters, publishedLimitSets } from '@overtally/limits';
 import { z } from 'zod';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
@@ -93,22 +93,29 @@ const withPublished = (rows: LimitSetRow[]): LimitSetPage => ({
   nextCursor: null,
 });
 
-/** A custom set is compared plainly, order by order; TDD alone needs a parameter. */
+const unitOfBasis: Readonly<Record<LimitBasis, string | null>> = {
+  absolute: null,
+  'percent-of-fundamental': '%',
+  'percent-of-reference': '%',
+  'milliampere-per-watt': 'mA/W',
+};
+
+/** A custom set is compared plainly, order by order, unless it says otherwise; TDD needs the demand current. */
 function definitionFrom(input: CreateLimitSet, author: string): LimitSetRow['definition'] {
-  const { source, orders, unit, basis, ...words } = input;
-  return {
-    ...words,
-    basis,
-    unit: basis === 'absolute' ? unit : '%',
+  const { source, orders, unit, referenceParameter = null, procedure = 'plain', ...rest } = input;
+  const definition: LimitSetRow['definition'] = {
+    ...rest,
+    unit: unitOfBasis[input.basis] ?? unit,
     version: 1,
     tableRef: '',
-    referenceParameter: null,
-    procedure: 'plain',
-    parameters: input.totals.some(({ name }) => name === 'TDD') ? ['ilA'] : [],
+    referenceParameter,
+    procedure,
+    parameters: [],
     orders: [...orders].sort((one, other) => one.order - other.order),
     source: [source],
     confidence: 'medium',
     evidence: `Entered in the project by ${author}; to be checked against its source`,
     notes: [],
   };
+  return { ...definition, parameters: neededParameters(definition) };
 }

@@ -1,7 +1,5 @@
-import type { LimitEntry, LimitSet } from '@overtally/contracts';
-
-const ordersBetween = (first: number, last: number, step: number): number[] =>
-  Array.from({ length: Math.floor((last - first) / step) + 1 }, (_, i) => first + i * step);
+import type { Applicability, LimitEntry, LimitSet } from '@overtally/contracts';
+import { byFormula, listed, ordersBetween, sorted } from './orders.js';
 
 const oddLowOrders = [
   { order: 3, amperes: 2.3, milliamperePerWatt: 3.4 },
@@ -11,29 +9,44 @@ const oddLowOrders = [
   { order: 11, amperes: 0.33, milliamperePerWatt: 0.35 },
   { order: 13, amperes: 0.21, milliamperePerWatt: 3.85 / 13 },
 ];
-const evenLowOrders: LimitEntry[] = [
-  { order: 2, limit: 1.08 },
-  { order: 4, limit: 0.43 },
-  { order: 6, limit: 0.3 },
+const oddFormulaOrders = ordersBetween(15, 39, 2);
+const evenFormulaOrders = ordersBetween(8, 40, 2);
+
+const classAOrders: LimitEntry[] = sorted(
+  oddLowOrders.map(({ order, amperes }) => ({ order, limit: amperes })),
+  byFormula(oddFormulaOrders, '0.15*15/n', (n) => (0.15 * 15) / n),
+  listed({ 2: 1.08, 4: 0.43, 6: 0.3 }),
+  byFormula(evenFormulaOrders, '0.23*8/n', (n) => (0.23 * 8) / n),
+);
+
+const timesOneAndAHalf = ({ formula, order, limit }: LimitEntry): LimitEntry => ({
+  order,
+  limit: 1.5 * limit,
+  ...(formula === undefined ? {} : { formula: `1.5*(${formula})` }),
+});
+
+/** mA/W column of Table 3, without the cap in A of its other column. */
+export const milliamperesPerWatt: LimitEntry[] = [
+  ...oddLowOrders
+    .filter(({ order }) => order < 13)
+    .map(({ order, milliamperePerWatt }) => ({ order, limit: milliamperePerWatt })),
+  ...byFormula(ordersBetween(13, 39, 2), '3.85/n', (n) => 3.85 / n),
 ];
 
-const classAOrders: LimitEntry[] = [
-  ...oddLowOrders.map(({ order, amperes }) => ({ order, limit: amperes })),
-  ...ordersBetween(15, 39, 2).map((order) => ({ order, limit: (0.15 * 15) / order })),
-  ...evenLowOrders,
-  ...ordersBetween(8, 40, 2).map((order) => ({ order, limit: (0.23 * 8) / order })),
-].sort((a, b) => a.order - b.order);
+const classDOrders: LimitEntry[] = milliamperesPerWatt.map((entry) => ({
+  ...entry,
+  capA: oddLowOrders.find(({ order }) => order === entry.order)?.amperes ?? (0.15 * 15) / entry.order,
+}));
 
-const classDOrders: LimitEntry[] = [
-  ...oddLowOrders.map(({ order, amperes, milliamperePerWatt }) => ({
-    order,
-    limit: milliamperePerWatt,
-    capA: amperes,
-  })),
-  ...ordersBetween(15, 39, 2).map((order) => ({ order, limit: 3.85 / order, capA: (0.15 * 15) / order })),
-];
+const noLimitsUpTo75W: Applicability = {
+  parameter: 'powerW',
+  above: 75,
+  otherwise:
+    'IEC 61000-3-2 has no limits for equipment with a rated power of 75 W or less, lighting excepted (clause 7)',
+};
 
-const shared = {
+/** What the sets of IEC 61000-3-2 have in common. */
+export const iec61000_3_2Shared = {
   projectId: null,
   version: 1,
   standard: 'IEC 61000-3-2',
@@ -49,15 +62,16 @@ const shared = {
   evidence: 'source',
 } satisfies Partial<LimitSet>;
 
-const checkEdition = 'Check the values against your own copy of the edition that applies to the product.';
-const observation =
+export const checkEdition =
+  'Check the values against your own copy of the edition that applies to the product.';
+export const observation =
   'The average is over the whole record: it is that of the standard only when the record covers the observation period that the standard asks for.';
 const noLimits =
   'No limits: rated power up to 75 W (lighting excepted), professional equipment above 1 kW, symmetrically controlled heating elements up to 200 W, independent dimmers for incandescent lamps up to 1 kW.';
 
 /** IEC 61000-3-2, Table 1: limits for class A equipment, A rms per phase at 230 V. */
 export const iec61000_3_2ClassA: LimitSet = {
-  ...shared,
+  ...iec61000_3_2Shared,
   id: 'iec61000-3-2.classA',
   edition: '4:2014 and 5:2018+A1:2020 (A2:2024 not checked)',
   title: 'IEC 61000-3-2, class A',
@@ -67,11 +81,14 @@ export const iec61000_3_2ClassA: LimitSet = {
   unit: 'A',
   basis: 'absolute',
   parameters: [],
+  optionalParameters: ['powerW'],
+  applicability: [noLimitsUpTo75W],
+  shortExcursion: true,
   orders: classAOrders,
   notes: [
     'Orders above 40 have no limit.',
     noLimits,
-    'Single smoothed values between 150 % and 200 % are allowed for a short share of the time; the share is not recorded, so such an order is not decidable.',
+    'Single smoothed values between 150 % and 200 % are allowed when the time above 150 % is under 10 % of the observation and 10 min and the mean is below 90 %; where that time is not known, such an order is not decidable.',
     observation,
     checkEdition,
   ],
@@ -79,7 +96,7 @@ export const iec61000_3_2ClassA: LimitSet = {
 
 /** IEC 61000-3-2, 7.2: limits for class B equipment, 1.5 times Table 1. */
 export const iec61000_3_2ClassB: LimitSet = {
-  ...shared,
+  ...iec61000_3_2Shared,
   id: 'iec61000-3-2.classB',
   edition: '4:2014 and 5:2018+A1:2020',
   title: 'IEC 61000-3-2, class B',
@@ -88,7 +105,9 @@ export const iec61000_3_2ClassB: LimitSet = {
   unit: 'A',
   basis: 'absolute',
   parameters: [],
-  orders: classAOrders.map(({ order, limit }) => ({ order, limit: 1.5 * limit })),
+  optionalParameters: ['powerW'],
+  applicability: [noLimitsUpTo75W],
+  orders: classAOrders.map(timesOneAndAHalf),
   notes: [
     'Orders above 40 have no limit.',
     'The 200 % rule of class A does not apply.',
@@ -99,7 +118,7 @@ export const iec61000_3_2ClassB: LimitSet = {
 
 /** IEC 61000-3-2, Table 3: limits for class D equipment, mA/W with a cap in A. */
 export const iec61000_3_2ClassD: LimitSet = {
-  ...shared,
+  ...iec61000_3_2Shared,
   id: 'iec61000-3-2.classD',
   edition: '4:2014 and 5:2018+A1:2020',
   title: 'IEC 61000-3-2, class D',
@@ -109,6 +128,14 @@ export const iec61000_3_2ClassD: LimitSet = {
   unit: 'mA/W',
   basis: 'milliampere-per-watt',
   parameters: ['powerW'],
+  applicability: [
+    noLimitsUpTo75W,
+    {
+      parameter: 'powerW',
+      upTo: 600,
+      otherwise: 'Class D is for a specified power up to and including 600 W (clause 5); use class A',
+    },
+  ],
   orders: classDOrders,
   notes: [
     'Odd orders only. Both columns apply: the mA/W value times the power, never more than the cap in A.',

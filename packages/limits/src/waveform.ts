@@ -1,0 +1,20 @@
+import type { TotalVerdict, WaveformCondition } from '@overtally/contracts';
+import type { CurrentShape } from './measurement.js';
+
+/** Shape of a lamp's current against the condition of IEC 61000-3-2 for lighting of up to 25 W (7.3 b, 7.4.3). */
+export function judgeWaveform(condition: WaveformCondition, shape: CurrentShape | null): TotalVerdict {
+  const { startsByDeg, peakByDeg, endsNotBeforeDeg } = condition;
+  const row = { name: 'Current shape', value: null, unit: '', limit: null, sharePercent: null };
+  const wanted = `starts at or before ${startsByDeg}°, last peak at or before ${peakByDeg}°, ends not before ${endsNotBeforeDeg}°`;
+  if (shape === null) {
+    const reason = `The shape of the current against the voltage is not known here (${wanted})`;
+    return { ...row, result: 'not-decidable', reason };
+  }
+  const missed = [
+    shape.startsDeg > startsByDeg ? `starts at ${shape.startsDeg}°` : null,
+    shape.peakDeg > peakByDeg ? `peaks at ${shape.peakDeg}°` : null,
+    shape.endsDeg < endsNotBeforeDeg ? `ends at ${shape.endsDeg}°` : null,
+  ].filter((part) => part !== null);
+  if (missed.length === 0) return { ...row, result: 'pass', reason: null };
+  return { ...row, result: 'fail', reason: `The current ${missed.join(', ')} (asked for: ${wanted})` };
+}
