@@ -103,6 +103,7 @@ export type LimitRow = z.infer<typeof limitRowSchema>;
  * the ranges, or as alternatives of which one is enough.
  */
 export const rowChoiceSchema = z.enum(['range', 'interpolate', 'alternative']);
+export type RowChoice = z.infer<typeof rowChoiceSchema>;
 
 /** Where a set applies; outside, the verdict is `not-applicable` with the reason. */
 export const applicabilitySchema = parameterRangeSchema.extend({

@@ -2,6 +2,7 @@ export { evaluate, type Evaluation } from './evaluate.js';
 export { limitForOrder, type LimitContext } from './limit-for-order.js';
 export { basisOfChannel, measurementOfChannel, type CurrentShape, type Measurement } from './measurement.js';
 export {
+  limitRows,
   neededParameters,
   resolveLimits,
   shownLimits,

@@ -129,6 +129,10 @@ export function resolveLimits(set: LimitSet, parameters: VerdictParameters): Res
   return chooseRow(set, set.rows, parameters);
 }
 
+/** Every row of a set as limits of its own, to list them; empty for a set without rows. */
+export const limitRows = (set: LimitSet): ResolvedLimits[] =>
+  (set.rows ?? []).map((row) => withRow(set, row));
+
 /**
  * The set with the limits to draw or list for given parameters: those that hold, the first of alternatives. Where
  * none hold, those of the set itself, and of the first row of a set with rows.

@@ -5,6 +5,7 @@ import {
   type LimitSet,
   type VerdictParameters,
 } from '@overtally/contracts';
+import { neededParameters } from '@overtally/limits';
 import type { ParameterKey } from '../../components/verdict/verdict-words.js';
 
 /** What the form for a verdict holds; parameters as they were typed. */
@@ -15,11 +16,26 @@ export interface JudgeDraft {
   entries: Partial<Record<ParameterKey, string>>;
 }
 
-/** Parameters that the set and the rule ask for, in the order they are asked. */
-export function neededParameters(set: LimitSet, rule: DecisionRule): ParameterKey[] {
-  const reference = set.referenceParameter === null ? [] : [set.referenceParameter];
-  const uncertainty = rule === 'simple-acceptance' ? [] : (['expandedUncertaintyPercent'] as const);
-  return [...new Set<ParameterKey>([...set.parameters, ...reference, ...uncertainty])];
+/** Parameters that a verdict is asked for; optional ones are checked when given. */
+export interface AskedParameters {
+  needed: ParameterKey[];
+  optional: ParameterKey[];
+}
+
+/**
+ * Parameters that the set and the rule ask for, in the order they are asked. The uncertainty is asked for by the
+ * rules that guard with it; it may be left out where the orders of the channel carry their own.
+ */
+export function askedParameters(
+  set: LimitSet,
+  rule: DecisionRule,
+  channel?: Pick<ChannelAnalysis, 'harmonics'>,
+): AskedParameters {
+  const needed: ParameterKey[] = neededParameters(set);
+  const optional: ParameterKey[] = (set.optionalParameters ?? []).filter((name) => !needed.includes(name));
+  const hasOwn = channel?.harmonics.some(({ uncertainty }) => uncertainty !== null) ?? false;
+  if (rule !== 'simple-acceptance') (hasOwn ? optional : needed).push('expandedUncertaintyPercent');
+  return { needed, optional };
 }
 
 export interface ReadParameters {
@@ -32,14 +48,14 @@ export interface ReadParameters {
 
 /** Reads the entries that are asked for; a decimal comma counts as a point. */
 export function readParameters(
-  needed: readonly ParameterKey[],
+  { needed, optional }: AskedParameters,
   entries: Partial<Record<ParameterKey, string>>,
 ): ReadParameters {
   const read: ReadParameters = { parameters: {}, problems: {}, missing: [] };
-  for (const key of needed) {
+  for (const key of [...needed, ...optional]) {
     const text = (entries[key] ?? '').trim();
     if (text === '') {
-      read.missing.push(key);
+      if (needed.includes(key)) read.missing.push(key);
       continue;
     }
     const value = Number(text.replace(',', '.'));

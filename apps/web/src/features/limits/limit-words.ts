@@ -1,4 +1,5 @@
-import type { LimitBasis, LimitSet, Quantity } from '@overtally/contracts';
+import type { LimitBasis, LimitSet, Quantity, RowChoice } from '@overtally/contracts';
+import { shownLimits } from '@overtally/limits';
 
 export const quantityWords: Record<Quantity, string> = {
   voltage: 'Voltage',
@@ -25,12 +26,26 @@ export const confidenceWords: Record<LimitSet['confidence'], string> = {
   low: 'low: check before use',
 };
 
+const evidenceOfPublished: Readonly<Record<string, string>> = {
+  source: 'Taken from the named sources',
+  source_partial: 'In part from the named source, the rest from memory',
+  memory: 'From memory; no source was seen',
+  memory_and_arithmetic: 'From memory; an independent calculation agrees with part of it',
+};
+
 /** Values of published sets come from print or from memory; custom sets say it in a sentence of their own. */
-export const evidenceWords = (evidence: string): string =>
-  evidence === 'source' ? 'Taken from the named sources' : evidence;
+export const evidenceWords = (evidence: string): string => evidenceOfPublished[evidence] ?? evidence;
+
+/** What the rows of a set are chosen by. */
+export const rowChoiceWords: Record<RowChoice, string> = {
+  range: 'Row',
+  interpolate: 'Row; between two rows limits are interpolated',
+  alternative: 'Alternative; one of them is enough',
+};
 
 /** Orders 2 to 40, or "13 orders, 3 to 39" where some are left out. */
-export function orderRange({ orders }: Pick<LimitSet, 'orders'>): string {
+export function orderRange(set: LimitSet): string {
+  const { orders } = shownLimits(set);
   const first = orders[0]?.order;
   const last = orders.at(-1)?.order;
   if (first === undefined || last === undefined) return 'none';

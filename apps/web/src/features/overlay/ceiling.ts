@@ -1,5 +1,5 @@
 import type { LimitSet } from '@overtally/contracts';
-import { limitForOrder } from '@overtally/limits';
+import { limitForOrder, shownLimits } from '@overtally/limits';
 import type { OrderLimit } from '../../components/charts/limit-ceiling.js';
 import type { OverlayView } from './overlay-link.js';
 import { commonQuantity, gainOf, type OverlaySeries } from './series.js';
@@ -44,7 +44,7 @@ export function ceilingFor(
   const { summary } = first;
   const gain = gainOf(summary, amplitude);
   const context = { fundamentalRms: summary.harmonicRms[0] ?? null, parameters: {}, unit: summary.unit };
-  const limits = set.orders.flatMap(({ order }) => {
+  const limits = shownLimits(set).orders.flatMap(({ order }) => {
     const limit = limitForOrder(set, order, context);
     return limit === null || gain === null ? [] : [{ order, limit: limit * gain }];
   });

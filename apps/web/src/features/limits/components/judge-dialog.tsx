@@ -8,7 +8,7 @@ import { LoadingState } from '../../../components/loading-state.js';
 import { Modal } from '../../../components/modal.js';
 import { limitSetsQuery } from '../api/list-limit-sets.js';
 import { useCreateVerdict } from '../hooks/use-create-verdict.js';
-import { neededParameters, readParameters, setsForChannel, type JudgeDraft } from '../judge-draft.js';
+import { askedParameters, readParameters, setsForChannel, type JudgeDraft } from '../judge-draft.js';
 import { JudgeForm } from './judge-form.js';
 import { VerdictView } from './verdict-view.js';
 
@@ -60,7 +60,9 @@ function Judging({
   const [draft, setDraft] = useState(() => firstDraft(props, limitSets));
   const create = useCreateVerdict(projectId, analysisId);
   const set = limitSets.find(({ id }) => id === draft.limitSetId);
-  const read = readParameters(set ? neededParameters(set, draft.decisionRule) : [], draft.entries);
+  const channel = channels.find(({ index }) => index === draft.channel);
+  const asked = set ? askedParameters(set, draft.decisionRule, channel) : { needed: [], optional: [] };
+  const read = readParameters(asked, draft.entries);
   const complete = set !== undefined && read.missing.length === 0 && Object.keys(read.problems).length === 0;
   const verdict = create.data;
   const judge = () =>

@@ -5,7 +5,7 @@ import { useMemo } from 'react';
 import { FormField, SelectInput } from '../../../components/form-field.js';
 import { decisionRuleNames, parameterWords } from '../../../components/verdict/verdict-words.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
-import { neededParameters, readParameters, setsForChannel, type JudgeDraft } from '../judge-draft.js';
+import { askedParameters, readParameters, setsForChannel, type JudgeDraft } from '../judge-draft.js';
 import { Judgement } from './judgement.js';
 import { LimitSetSelect } from './limit-set-select.js';
 import { ParameterFields } from './parameter-fields.js';
@@ -24,11 +24,11 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
   const channel = channels.find(({ index }) => index === draft.channel);
   const set = limitSets.find(({ id }) => id === draft.limitSetId);
   const { fitting, others } = setsForChannel(limitSets, channel);
-  const needed = useMemo(
-    () => (set ? neededParameters(set, draft.decisionRule) : []),
-    [set, draft.decisionRule],
+  const asked = useMemo(
+    () => (set ? askedParameters(set, draft.decisionRule, channel) : { needed: [], optional: [] }),
+    [set, draft.decisionRule, channel],
   );
-  const read = useMemo(() => readParameters(needed, draft.entries), [needed, draft.entries]);
+  const read = useMemo(() => readParameters(asked, draft.entries), [asked, draft.entries]);
   const preview = useMemo(
     () =>
       set && channel
@@ -81,7 +81,7 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
         />
       </FormField>
       <ParameterFields
-        needed={needed}
+        asked={asked}
         entries={draft.entries}
         problems={read.problems}
         onChange={(key, text) => onChange({ ...draft, entries: { ...draft.entries, [key]: text } })}

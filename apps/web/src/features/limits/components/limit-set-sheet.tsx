@@ -1,7 +1,9 @@
 import { Box, Text } from '@chakra-ui/react';
 import type { LimitEntry, LimitSet } from '@overtally/contracts';
+import { limitRows, neededParameters } from '@overtally/limits';
 import { useState } from 'react';
 import type { Scale } from '../../../components/charts/amplitude-axis.js';
+import { FormField, SelectInput } from '../../../components/form-field.js';
 import { FigureFrame } from '../../../components/figure-frame.js';
 import { MarginColumn, MarginItem, MarginLayout } from '../../../components/margin-column.js';
 import { Plot } from '../../../components/plot.js';
@@ -14,7 +16,14 @@ import { formatSi } from '../../../lib/format.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
 import { usePalette } from '../../../lib/theme/use-palette.js';
 import { limitChart } from '../limit-chart.js';
-import { basisWords, confidenceWords, evidenceWords, orderRange, quantityWords } from '../limit-words.js';
+import {
+  basisWords,
+  confidenceWords,
+  evidenceWords,
+  orderRange,
+  quantityWords,
+  rowChoiceWords,
+} from '../limit-words.js';
 
 /** Everything a limit set says: its values as a ceiling and as numbers, and where they come from. */
 export function LimitSetSheet({ set }: { set: LimitSet }) {
@@ -52,11 +61,14 @@ function titleCells(set: LimitSet): TitleCell[] {
 function Ceiling({ set }: { set: LimitSet }) {
   const palette = usePalette();
   const [scale, setScale] = useState<Scale>('log');
-  const { traces, layout } = limitChart(set, scale, palette);
+  const rows = limitRows(set);
+  const [row, setRow] = useState(0);
+  const shown = rows[row]?.set ?? set;
+  const { traces, layout } = limitChart(shown, scale, palette);
   return (
     <FigureFrame
       title="Limit by order"
-      subtitle={set.basis === 'absolute' ? `rms in ${set.unit}` : basisWords[set.basis]}
+      subtitle={shown.basis === 'absolute' ? `rms in ${shown.unit}` : basisWords[shown.basis]}
       toggles={
         <Segmented
           label="Scale"
@@ -71,13 +83,25 @@ function Ceiling({ set }: { set: LimitSet }) {
       table={
         <TableTwin
           caption={`Limits of ${limitSetName(set)}`}
-          columns={columns(set)}
-          rows={set.orders}
+          columns={columns(shown)}
+          rows={shown.orders}
           rowKey={(row) => row.order}
           fileName={`limits-${set.title}`}
         />
       }
     >
+      {rows.length > 1 ? (
+        <Box maxW="480px" mb="3">
+          <FormField label={rowChoiceWords[set.rowChoice ?? 'range']}>
+            <SelectInput
+              options={rows.map(({ label }, index) => ({ value: String(index), label: label ?? '' }))}
+              value={String(row)}
+              onChange={(event) => setRow(Number(event.target.value))}
+            />
+          </FormField>
+        </Box>
+      ) : null}
+      <Totals set={shown} />
       <Plot label={`Limits of ${limitSetName(set)} by order`} traces={traces} layout={layout} height={380} />
     </FigureFrame>
   );
@@ -102,37 +126,67 @@ function columns(set: LimitSet): TableColumn<LimitEntry>[] {
       fileHeader: `Limit (${set.unit})`,
       align: 'right',
       value: (row) => row.limit,
-      show: (row) => formatSi(row.limit, set.unit, { trim: true }),
+      show: (row) => shownLimit(row, set.unit),
     },
+    ...(set.orders.some((row) => row.formula !== undefined) ? [formulaColumn] : []),
     ...(set.orders.some((row) => row.capA !== undefined) ? caps : []),
   ];
 }
 
+const formulaColumn: TableColumn<LimitEntry> = {
+  key: 'formula',
+  header: 'Worked out from',
+  fileHeader: 'Worked out from',
+  value: (row) => row.formula ?? null,
+  show: (row) => row.formula ?? '',
+};
+
+/** A limit in its own unit; one that is multiplied by a parameter says by which. */
+function shownLimit({ limit, unit, timesParameter }: LimitEntry, unitOfSet: string): string {
+  const amount = formatSi(limit, unit ?? unitOfSet, { trim: true });
+  return timesParameter ? `${amount} × ${parameterWords[timesParameter].label.toLowerCase()}` : amount;
+}
+
+/** Totals of the limits that are shown; unnamed where there are none. */
+function Totals({ set: { totals, unit } }: { set: LimitSet }) {
+  if (totals.length === 0) return null;
+  const parts = totals.map(({ name, limit, maxOrder }) => {
+    const shown = formatSi(limit, name === 'THD' || name === 'TDD' ? '%' : unit, { trim: true });
+    return `${name} up to order ${maxOrder}: ${shown}`;
+  });
+  return (
+    <Text fontSize="13px" mb="2">
+      {parts.join('; ')}
+    </Text>
+  );
+}
+
 function SetMargin({ set }: { set: LimitSet }) {
-  const { totals, parameters, source, notes, projectId } = set;
+  const { source, notes, projectId, applicability = [], optionalParameters = [] } = set;
+  const parameters = neededParameters(set);
   return (
     <MarginColumn title="About the values">
       <MarginItem title="Check the current edition" tone="near">
         Standards are amended. Before a verdict leaves the house, compare these values with the edition that
         applies{projectId === null ? '' : ' and with the source named below'}.
       </MarginItem>
-      {totals.length > 0 ? (
-        <MarginItem title="Totals">
-          {totals.map((total) => (
-            <Text key={total.name} fontSize="13px">
-              {total.name} up to order {total.maxOrder}:{' '}
-              <Box as="span" fontFamily="mono">
-                {formatSi(total.limit, total.name === 'THD' || total.name === 'TDD' ? '%' : set.unit, {
-                  trim: true,
-                })}
-              </Box>
-            </Text>
-          ))}
-        </MarginItem>
-      ) : null}
       {parameters.length > 0 ? (
         <MarginItem title="Asked for when judging">
           {parameters.map((name) => parameterWords[name].label).join(', ')}
+        </MarginItem>
+      ) : null}
+      {optionalParameters.length > 0 ? (
+        <MarginItem title="Checked when given">
+          {optionalParameters.map((name) => parameterWords[name].label).join(', ')}
+        </MarginItem>
+      ) : null}
+      {applicability.length > 0 ? (
+        <MarginItem title="Where it does not apply">
+          {applicability.map(({ otherwise }) => (
+            <Text key={otherwise} fontSize="13px">
+              {otherwise}.
+            </Text>
+          ))}
         </MarginItem>
       ) : null}
       <MarginItem title="Source" foot={evidenceWords(set.evidence)}>
