@@ -149,10 +149,6 @@ export const limitSetSchema = z.object({
     .describe('Parameter that `percent-of-reference` refers to'),
   procedure: limitProcedureSchema,
   parameters: z.array(parameterNameSchema).describe('Parameters a verdict must be given'),
-  optionalParameters: z
-    .array(parameterNameSchema)
-    .optional()
-    .describe('Parameters that are checked when given, such as the power that decides whether limits apply'),
   orders: z.array(limitEntrySchema),
   totals: z.array(totalLimitSchema),
   ...conditionsOfUse,

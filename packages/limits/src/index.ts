@@ -4,6 +4,7 @@ export { basisOfChannel, measurementOfChannel, type CurrentShape, type Measureme
 export {
   limitRows,
   neededParameters,
+  optionalParameters,
   resolveLimits,
   shownLimits,
   type LimitGap,
@@ -12,3 +13,6 @@ export {
 } from './resolve.js';
 export { findPublishedLimitSet, publishedLimitSets } from './sets/index.js';
 export { sharesOfSummary } from './shares.js';
+export { combineRepeats, type CombinedRepeats, type RepeatedOrder } from './repeats.js';
+export { cloneLimitSet } from './custom/clone-limit-set.js';
+export { parseLimitTable, type LimitTable, type TableProblem } from './custom/parse-limit-table.js';

@@ -46,6 +46,13 @@ export function neededParameters(set: Omit<LimitSet, 'id' | 'projectId'>): Param
   return [...new Set(all.filter((name) => name !== undefined && name !== null))];
 }
 
+/** Parameters that decide whether the set applies and may be left out: they are checked when given. */
+export function optionalParameters(set: LimitSet): ParameterName[] {
+  const needed = neededParameters(set);
+  const checked = (set.applicability ?? []).map(({ parameter }) => parameter);
+  return [...new Set(checked)].filter((name) => !needed.includes(name));
+}
+
 /** The set with the limits of one row in place of its own. */
 function withRow(set: LimitSet, row: LimitRow): ResolvedLimits {
   const { rows, rowChoice, ...rest } = set;

@@ -1,6 +1,7 @@
 import type { LimitSet, ParameterName, Quantity, VerdictParameters } from '@overtally/contracts';
 import { limitUnit, readBy } from './limit-for-order.js';
 import type { Measurement } from './measurement.js';
+import { neededParameters, optionalParameters } from './resolve.js';
 import { unitRatio } from './units.js';
 
 const quantityNames: Readonly<Record<Quantity, string>> = {
@@ -30,7 +31,7 @@ export function mismatch(set: LimitSet, measurement: Measurement): string | null
 const supplyTolerance = 0.15;
 
 const asksFor = (set: LimitSet, name: ParameterName): boolean =>
-  [...set.parameters, ...(set.optionalParameters ?? [])].includes(name);
+  [...neededParameters(set), ...optionalParameters(set)].includes(name);
 
 /**
  * Parameters as they hold for the channel. A voltage set may be given the nominal voltage between lines for a

@@ -33,7 +33,6 @@ export const classCAbove25WEdition4: LimitSet = {
   tableRef: 'Table 2',
   appliesWhen: 'Lighting equipment with an active input power above 25 W',
   parameters: ['powerFactor'],
-  optionalParameters: ['powerW'],
   applicability: [above25W],
   orders: table2({ order: 3, limit: 30, timesParameter: 'powerFactor', formula: '30*lambda' }),
   notes: [
@@ -54,7 +53,6 @@ export const classCAbove25WEdition5: LimitSet = {
   tableRef: 'Table 2',
   appliesWhen: 'Lighting equipment with a rated power above 25 W',
   parameters: [],
-  optionalParameters: ['powerW'],
   applicability: [above25W],
   orders: table2({ order: 3, limit: 27 }),
   source: ['From memory'],

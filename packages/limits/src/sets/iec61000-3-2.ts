@@ -81,7 +81,6 @@ export const iec61000_3_2ClassA: LimitSet = {
   unit: 'A',
   basis: 'absolute',
   parameters: [],
-  optionalParameters: ['powerW'],
   applicability: [noLimitsUpTo75W],
   shortExcursion: true,
   orders: classAOrders,
@@ -105,7 +104,6 @@ export const iec61000_3_2ClassB: LimitSet = {
   unit: 'A',
   basis: 'absolute',
   parameters: [],
-  optionalParameters: ['powerW'],
   applicability: [noLimitsUpTo75W],
   orders: classAOrders.map(timesOneAndAHalf),
   notes: [

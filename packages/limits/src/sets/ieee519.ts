@@ -131,7 +131,6 @@ function currentSet({ number, where, range, lines }: Table, edition: Edition): L
     referenceParameter: 'ilA',
     procedure: 'plain',
     parameters: ['iscOverIl', 'ilA'],
-    optionalParameters: ['nominalV'],
     applicability: [
       {
         parameter: 'nominalV',

@@ -16,7 +16,6 @@ export const voltageShared = {
   referenceParameter: null,
   procedure: 'plain',
   parameters: [],
-  optionalParameters: ['nominalV'],
   statistic: weekOfTenMinutes,
 } satisfies Partial<LimitSet>;
 
@@ -85,7 +84,6 @@ export const en50160Mv: LimitSet = {
   tableRef: 'Table 4',
   appliesWhen: 'Supply terminals of public medium-voltage networks, above 1 kV up to and including 36 kV',
   parameters: ['nominalV'],
-  optionalParameters: [],
   applicability: [
     {
       parameter: 'nominalV',

@@ -5,7 +5,7 @@ import {
   type LimitSet,
   type VerdictParameters,
 } from '@overtally/contracts';
-import { neededParameters } from '@overtally/limits';
+import { neededParameters, optionalParameters } from '@overtally/limits';
 import type { ParameterKey } from '../../components/verdict/verdict-words.js';
 
 /** What the form for a verdict holds; parameters as they were typed. */
@@ -32,7 +32,7 @@ export function askedParameters(
   channel?: Pick<ChannelAnalysis, 'harmonics'>,
 ): AskedParameters {
   const needed: ParameterKey[] = neededParameters(set);
-  const optional: ParameterKey[] = (set.optionalParameters ?? []).filter((name) => !needed.includes(name));
+  const optional: ParameterKey[] = optionalParameters(set);
   const hasOwn = channel?.harmonics.some(({ uncertainty }) => uncertainty !== null) ?? false;
   if (rule !== 'simple-acceptance') (hasOwn ? optional : needed).push('expandedUncertaintyPercent');
   return { needed, optional };

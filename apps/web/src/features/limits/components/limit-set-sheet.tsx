@@ -1,6 +1,6 @@
 import { Box, Text } from '@chakra-ui/react';
 import type { LimitEntry, LimitSet } from '@overtally/contracts';
-import { limitRows, neededParameters } from '@overtally/limits';
+import { limitRows, neededParameters, optionalParameters } from '@overtally/limits';
 import { useState } from 'react';
 import type { Scale } from '../../../components/charts/amplitude-axis.js';
 import { FormField, SelectInput } from '../../../components/form-field.js';
@@ -162,8 +162,9 @@ function Totals({ set: { totals, unit } }: { set: LimitSet }) {
 }
 
 function SetMargin({ set }: { set: LimitSet }) {
-  const { source, notes, projectId, applicability = [], optionalParameters = [] } = set;
+  const { source, notes, projectId, applicability = [] } = set;
   const parameters = neededParameters(set);
+  const checked = optionalParameters(set);
   return (
     <MarginColumn title="About the values">
       <MarginItem title="Check the current edition" tone="near">
@@ -175,9 +176,9 @@ function SetMargin({ set }: { set: LimitSet }) {
           {parameters.map((name) => parameterWords[name].label).join(', ')}
         </MarginItem>
       ) : null}
-      {optionalParameters.length > 0 ? (
+      {checked.length > 0 ? (
         <MarginItem title="Checked when given">
-          {optionalParameters.map((name) => parameterWords[name].label).join(', ')}
+          {checked.map((name) => parameterWords[name].label).join(', ')}
         </MarginItem>
       ) : null}
       {applicability.length > 0 ? (
