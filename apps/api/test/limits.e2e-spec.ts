@@ -1,6 +1,6 @@
 import { limitSetPageSchema, limitSetSchema, type LimitSet } from '@overtally/contracts';
 import { schema } from '@overtally/db';
-import { publishedLimitSets } from '@overtally/limits';
+import { cloneLimitSet, parseLimitTable, publishedLimitSets } from '@overtally/limits';
 import { eq } from 'drizzle-orm';
 import supertest from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -70,6 +70,25 @@ describe('limit sets', () => {
       totals: [{ name: 'TDD', limit: 5, maxOrder: 40 }],
     });
     expect([set.unit, set.parameters]).toEqual(['%', ['ilA']]);
+  });
+
+  it('keeps a copy of a published set with its rows, conditions and parameters', async () => {
+    const original = publishedLimitSets.find((set) => set.id === 'iec61000-3-12.table3')!;
+    const copy = await createAsAnalyst(cloneLimitSet(original, 'Drives of our own'));
+    expect(copy).toMatchObject({
+      ...{ title: 'Drives of our own', projectId: test.project.id, version: 1, confidence: 'medium' },
+      ...{ procedure: original.procedure, rowChoice: original.rowChoice, rows: original.rows, orders: [] },
+    });
+    expect([...copy.parameters].sort()).toEqual(['irefA', 'rsce']);
+    expect(copy.source[0]).toContain('iec61000-3-12.table3, version 1');
+  });
+
+  it('keeps entries of several kinds and derives what a verdict must be given', async () => {
+    const table = parseLimitTable('3;3.4;mA/W;2.3\n15-39 odd: 0.15*15/n;A\n5;4;% IL');
+    const set = await createAsAnalyst({ orders: table.orders });
+    expect(set.orders.map(({ order }) => order).slice(0, 3)).toEqual([3, 5, 15]);
+    expect(set.orders[2]).toMatchObject({ limit: 0.15, unit: 'A', formula: '0.15*15/n' });
+    expect([...set.parameters].sort()).toEqual(['ilA', 'powerW']);
   });
 
   it('refuses what could not be judged by, naming the field', async () => {

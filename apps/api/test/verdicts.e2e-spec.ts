@@ -60,6 +60,21 @@ describe('a verdict', () => {
     expect(nineteenth.result).toBe('fail');
   });
 
+  /** IEEE 519-2022, table 2: 4 % of IL below order 11 for Isc/IL below 20, TDD 5 %. IEC 61000-3-2: class D to 600 W. */
+  it('takes the row that the parameters choose, and says where a set does not apply', async () => {
+    const limitSetId = 'ieee519-2022.table2';
+    const verdict = await judge({ limitSetId, parameters: { iscOverIl: 12, ilA: 10 } });
+    expect(verdict.orders.find((entry) => entry.order === 5)?.limit).toBeCloseTo(0.4, 12);
+    expect(verdict.totals).toMatchObject([{ name: 'TDD', unit: '%', limit: 5 }]);
+    expect(verdict.reason).toContain('Isc/IL below 20');
+    expect(verdict.limitSet).toEqual(findPublishedLimitSet(limitSetId));
+    const missing = await judge({ limitSetId, parameters: {} });
+    expect(missing).toMatchObject({ result: 'not-decidable', reason: 'The set needs iscOverIl, ilA' });
+    const large = await judge({ limitSetId: 'iec61000-3-2.classD', parameters: { powerW: 700 } });
+    expect(large).toMatchObject({ result: 'not-applicable', orders: [], totals: [] });
+    expect(large.reason).toContain('600 W');
+  });
+
   it('needs an analysis that is done', async () => {
     const recording = await newRecording(test.database, owner);
     const queued = await newAnalysis(test.database, recording.id, owner);

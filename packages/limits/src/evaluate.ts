@@ -55,8 +55,12 @@ function bestOf(
   const others = judged
     .filter((each) => each !== best)
     .map(({ label, reason }) => `${label ?? ''}: ${reason}`);
-  const used = `One alternative is enough; ${best.label ?? ''} is used`;
-  return { ...best, reason: [`${best.reason}`, used, ...others].join('. ') };
+  const isMet = best.result === 'pass' || best.result === 'conditional-pass';
+  const used = isMet ? 'One alternative is enough' : 'No alternative is shown to be met';
+  return {
+    ...best,
+    reason: [best.reason, `${used}; these are the limits of ${best.label ?? ''}`, ...others].join('. '),
+  };
 }
 
 const chosenLimits = (

@@ -1,7 +1,7 @@
 import type { OrderVerdict, TotalVerdict, VerdictParameters } from '@overtally/contracts';
 import { comparisonReason } from './comparison-reason.js';
 import { classify, worst, type Decision, type Judgement } from './decision.js';
-import { judgeByIec61000_3_12 } from './iec61000-3-12.js';
+import { judgeByIec61000_3_12, referenceFloor } from './iec61000-3-12.js';
 import { judgeByIec61000_3_2 } from './iec61000-3-2.js';
 import type { Measurement } from './measurement.js';
 import { isDecidable, orderCases, orderVerdict, type OrderCase } from './order-cases.js';
@@ -55,8 +55,9 @@ export function judgeLimits(limits: ResolvedLimits, judging: Judging): JudgedLim
   const { set, label, waveform } = limits;
   const { measurement, parameters, decision, gap } = judging;
   const judged = judgeOrders(limits, judging);
+  const floor = set.procedure === 'iec61000-3-12' ? referenceFloor(measurement, parameters) : 0;
   const totals = [
-    ...set.totals.map((total) => judgeTotal(total, set, measurement, parameters, decision, gap)),
+    ...set.totals.map((total) => judgeTotal(total, set, measurement, parameters, decision, gap, floor)),
     ...(waveform === null ? [] : [judgeWaveform(waveform, measurement.currentShape ?? null)]),
   ];
   const result = worst([...judged.orders, ...totals].map((row) => row.result));

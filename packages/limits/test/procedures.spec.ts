@@ -91,11 +91,11 @@ describe('class C', () => {
   it('one alternative is enough, and the reason says which', () => {
     const first = judge(lamp, measured({ 1: 0.044, 3: 0.034 }), { powerW: 10 });
     expect(first.result).toBe('pass');
-    expect(first.reason).toMatch(/One alternative is enough; alternative 1 \(mA\/W/);
+    expect(first.reason).toMatch(/One alternative is enough; these are the limits of alternative 1 \(mA\/W/);
     // 35 mA at order 3 of 0.2 A: over 34 mA, 17.5 % of I1.
     const third = judge(lamp, measured({ 1: 0.2, 3: 0.035 }), { powerW: 10 });
     expect(third.result).toBe('pass');
-    expect(third.reason).toMatch(/One alternative is enough; alternative 3/);
+    expect(third.reason).toMatch(/One alternative is enough; these are the limits of alternative 3/);
     expect(third.totals.map(({ name }) => name)).toEqual(['THD']);
   });
 
@@ -112,7 +112,9 @@ describe('class C', () => {
     expect(shaped(60, 65.1, 90).result).toBe('fail');
     expect(shaped(60, 65, 89.9).result).toBe('fail');
     // Order 3 at 90 % of I1 is over every alternative.
-    expect(judge(lamp, measured({ 1: 0.05, 3: 0.045 }), { powerW: 10 }).result).toBe('fail');
+    const lost = judge(lamp, measured({ 1: 0.05, 3: 0.045 }), { powerW: 10 });
+    expect(lost.result).toBe('fail');
+    expect(lost.reason).toMatch(/No alternative is shown to be met; these are the limits of alternative 1/);
   });
 });
 
@@ -164,6 +166,7 @@ describe('IEC 61000-3-12', () => {
     // Between 120 (22 %) and 250 (37 %): 185 is half way.
     expect(limitOfThc(185)).toBeCloseTo(29.5, 9);
     expect(limitOfThc(5000)).toBe(48);
+    expect(judge(table3, sixPulse(), { rsce: 120, irefA }).reason).toMatch(/Limits of Rsce 120$/);
     expect(judge(table3, sixPulse(), { rsce: 32.9, irefA })).toMatchObject({ result: 'not-applicable' });
     expect(judge(table3, sixPulse(), { rsce: 33, irefA: 16 }).reason).toMatch(
       /above 16 A up to and including 75 A/,
@@ -183,6 +186,19 @@ describe('IEC 61000-3-12', () => {
     expect(failing(at({ 1: 50, 12: 0.67 }))).toEqual([12]);
     expect(failing(at({ 1: 50, 2: { mean: 3, smoothedMax: 6.01 } }))).toEqual([2]);
     expect(failing(at({ 1: 50, 2: { mean: 4, smoothedMax: 6 } }))).toEqual([]);
+  });
+
+  it('leaves a total open that only currents below 1 % of Iref put over its limit', () => {
+    // Iref 50 A, Table 3 at Rsce 33: PWHC 22 % is 11 A. 2.6 A at order 17 alone: sqrt(17) 2.6 = 10.72 A; with
+    // 0.4 A (0.8 %) at each of 35, 37 and 38: sqrt(17 * 6.76 + 110 * 0.16) = 11.51 A.
+    const pwhc = (amounts: Parameters<typeof measured>[0]) =>
+      totalOf(judge(table3, measured({ 1: 50, ...amounts }), { rsce: 33, irefA: 50 }), 'PWHC');
+    expect(pwhc({ 17: 2.6 })?.result).toBe('pass');
+    const open = pwhc({ 17: 2.6, 35: 0.4, 37: 0.4, 38: 0.4 });
+    expect(open?.value).toBeCloseTo((100 * Math.sqrt(17 * 6.76 + 110 * 0.16)) / 50, 9);
+    expect(open?.result).toBe('not-decidable');
+    expect(open?.reason).toMatch(/only with the currents below 1 % of Iref/);
+    expect(pwhc({ 17: 2.7 })?.result).toBe('fail');
   });
 
   it('asks for Rsce and Iref', () => {

@@ -57,7 +57,7 @@ const shared = {
 const notes = [
   'Rsce = Ssc / (3 Sequ) for single-phase, Ssc / (2 Sequ) for interphase, Ssc / Sequ for three-phase equipment. Between two rows the limits are interpolated linearly.',
   'Equipment that meets the row Rsce = 33 needs no condition of connection; otherwise the maker states the least Ssc.',
-  'Mean of the 1.5 s smoothed values against the limit, single smoothed values within 150 %; currents below 1 % of Iref are ignored order by order and kept in THC and PWHC (of medium confidence).',
+  'Mean of the 1.5 s smoothed values against the limit, single smoothed values within 150 %; currents below 1 % of Iref are ignored order by order (of medium confidence); a total that is over its limit only with them is not decidable.',
   'Even orders above 12 count in THC and PWHC only.',
   checkEdition,
 ];

@@ -13,7 +13,8 @@ import { sampleId, sampleLimitSet } from '../../../testing/samples.js';
 import { JudgeDialog } from './judge-dialog.js';
 
 const analysisId = sampleId(500);
-const sets = [sampleLimitSet(), findPublishedLimitSet('iec61000-3-2.classD')!];
+const published = ['iec61000-3-2.classD', 'iec61000-3-12.table5'].map((id) => findPublishedLimitSet(id)!);
+const sets = [sampleLimitSet(), ...published];
 
 function open() {
   const seen = mockApi({
@@ -68,6 +69,22 @@ describe('judging a channel', () => {
         parameters: { powerW: 500, expandedUncertaintyPercent: 2.5 },
         decisionRule: 'guarded-acceptance',
       }),
+    );
+  });
+
+  // IEC 61000-3-12, Table 5 chooses its row by Rsce, in percent of Iref; its numbers are of medium confidence.
+  it('asks for what chooses the row, says what does not apply and how sure the values are', async () => {
+    const { user } = open();
+    await user.selectOptions(await screen.findByLabelText('Limit set'), 'iec61000-3-12.table5');
+    expect(screen.getByText(/Confidence medium: check against the source/)).toBeTruthy();
+    const dialog = within(screen.getByRole('dialog'));
+    await user.type(dialog.getByLabelText('Short-circuit ratio Rsce'), '120');
+    await user.type(dialog.getByLabelText('Reference current Iref in A'), '10');
+    expect((await screen.findByRole('status')).textContent).toMatch(/^Not applicable. .* above 16 A up to/);
+    await user.clear(dialog.getByLabelText('Reference current Iref in A'));
+    await user.type(dialog.getByLabelText('Reference current Iref in A'), '20');
+    await waitFor(() =>
+      expect(screen.getByRole('status').textContent).toMatch(/interpolation between Rsce 33 and Rsce 250/),
     );
   });
 });

@@ -6,6 +6,7 @@ import { FormField, SelectInput } from '../../../components/form-field.js';
 import { decisionRuleNames, parameterWords } from '../../../components/verdict/verdict-words.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
 import { askedParameters, readParameters, setsForChannel, type JudgeDraft } from '../judge-draft.js';
+import { editionLine } from '../limit-words.js';
 import { Judgement } from './judgement.js';
 import { LimitSetSelect } from './limit-set-select.js';
 import { ParameterFields } from './parameter-fields.js';
@@ -62,7 +63,7 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
             onChange={(event) => choose(Number(event.target.value))}
           />
         </FormField>
-        <FormField label="Limit set" help={set ? `Edition ${set.edition || 'not stated'}` : undefined}>
+        <FormField label="Limit set" help={set ? editionLine(set) : undefined}>
           <LimitSetSelect
             fitting={fitting}
             others={others}

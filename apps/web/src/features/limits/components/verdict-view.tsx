@@ -3,6 +3,7 @@ import type { Verdict } from '@overtally/contracts';
 import { formatDateTime } from '../../../lib/format-date.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
 import { parameterLine } from '../../../components/verdict/parameter-line.js';
+import { editionLine } from '../limit-words.js';
 import { Judgement } from './judgement.js';
 
 /** A stored verdict: the set, the rule, the parameters, the result and its numbers. */
@@ -12,8 +13,7 @@ export function VerdictView({ verdict, subject }: { verdict: Verdict; subject: s
   return (
     <Stack gap="3">
       <Text>
-        {channelName} against {name}
-        {limitSet.edition ? `, edition ${limitSet.edition}` : ''}.
+        {channelName} against {name}. {editionLine(limitSet)}.
       </Text>
       <Judgement
         preview={false}
