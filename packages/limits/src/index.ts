@@ -16,3 +16,4 @@ export { sharesOfSummary } from './shares.js';
 export { combineRepeats, type CombinedRepeats, type RepeatedOrder } from './repeats.js';
 export { cloneLimitSet } from './custom/clone-limit-set.js';
 export { parseLimitTable, type LimitTable, type TableProblem } from './custom/parse-limit-table.js';
+export { checkTestSupply, type NominalSupply, type SupplyCheck } from './test-supply.js';
