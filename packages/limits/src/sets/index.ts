@@ -17,7 +17,10 @@ import { iec61000_2_4Class1, iec61000_2_4Class2, iec61000_2_4Class3 } from './in
 import { iec61000_3_6Hv, iec61000_3_6Mv } from './planning.js';
 import { en50160Lv, en50160Mv, iec61000_2_2Lv } from './voltage.js';
 
-/** Published limit sets, each with edition, table, source and how far it was checked. */
+/**
+ * Published limit sets, each with edition, table, source and how far it was checked. The first of a quantity is
+ * offered first, so those that need no parameter stand before the others.
+ */
 export const publishedLimitSets: readonly LimitSet[] = [
   iec61000_3_2ClassA,
   iec61000_3_2ClassB,
@@ -31,13 +34,13 @@ export const publishedLimitSets: readonly LimitSet[] = [
   iec61000_3_12Table4,
   iec61000_3_12Table5,
   ...ieee519Current,
-  ieee519Voltage,
   en50160Lv,
   en50160Mv,
   iec61000_2_2Lv,
   iec61000_2_4Class1,
   iec61000_2_4Class2,
   iec61000_2_4Class3,
+  ieee519Voltage,
   iec61000_3_6Mv,
   iec61000_3_6Hv,
 ];
