@@ -1,4 +1,5 @@
 import type { Analysis, Recording } from '@overtally/contracts';
+import { uniformSource } from '@overtally/fixtures';
 import { sql } from 'drizzle-orm';
 import { setTimeout as wait } from 'node:timers/promises';
 import type TestAgent from 'supertest/lib/agent.js';
@@ -22,16 +23,6 @@ const long = wavOf(
   Array.from({ length: 2 }, () => repeated(cycles, 1_500_000)),
   sampleRateHz,
 );
-
-/** Numbers from 0 to 1 (mulberry32). */
-function seededRandom(state: number): () => number {
-  return () => {
-    state = (state + 0x6d2b79f5) | 0;
-    let mixed = Math.imul(state ^ (state >>> 15), 1 | state);
-    mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), 61 | mixed)) ^ mixed;
-    return ((mixed ^ (mixed >>> 14)) >>> 0) / 4294967296;
-  };
-}
 
 describe('workers killed at random moments', () => {
   let test: TestApp;
@@ -94,7 +85,7 @@ describe('workers killed at random moments', () => {
     `leave every recording ready, or failed with a reason, once, after ${kills} kills (seed ${seed})`,
     { timeout: 60_000 + kills * 30_000 },
     async () => {
-      const random = seededRandom(seed);
+      const random = uniformSource(seed);
       const uploaded: string[] = [];
       const hit = new Set<string>();
       const dead = new Set<string>();
