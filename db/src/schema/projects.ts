@@ -1,5 +1,5 @@
 import type { Settings } from '@overtally/contracts';
-import { index, integer, jsonb, pgEnum, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core';
+import { boolean, index, integer, jsonb, pgEnum, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core';
 import { createdAt, moment } from './columns.js';
 import { users } from './identity.js';
 
@@ -10,9 +10,13 @@ export const projects = pgTable('projects', {
   id: uuid().primaryKey().defaultRandom(),
   name: text().notNull(),
   customer: text().notNull().default(''),
+  /** Address and person of the customer, as the report states them. */
+  customerContact: text().notNull().default(''),
   description: text().notNull().default(''),
   defaultSettings: jsonb().$type<Settings>().notNull(),
   comparisonLimitSetId: text(),
+  /** Whether who prepared or submitted a report may issue it, where a laboratory has nobody else. */
+  preparerMayIssue: boolean().notNull().default(false),
   lastRecordingNumber: integer().notNull().default(0),
   lastReportNumber: integer().notNull().default(0),
   archivedAt: moment(),

@@ -1,4 +1,4 @@
-import type { ImportOptions, Quantity, ReadProblem, ReadWarning } from '@overtally/contracts';
+import type { ImportOptions, Quantity, ReadProblem, ReadWarning, TestConditions } from '@overtally/contracts';
 import { sql } from 'drizzle-orm';
 import {
   bigint,
@@ -15,7 +15,9 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { createdAt, moment, updatedAt } from './columns.js';
+import { equipment, operatingModes } from './equipment.js';
 import { users } from './identity.js';
+import { measuringChains } from './instruments.js';
 import { projects } from './projects.js';
 
 export const recordingStatus = pgEnum('recording_status', [
@@ -62,6 +64,10 @@ export const recordings = pgTable(
     instrument: text().notNull().default(''),
     remark: text().notNull().default(''),
     capturedAt: moment(),
+    equipmentId: uuid().references(() => equipment.id, { onDelete: 'restrict' }),
+    operatingModeId: uuid().references(() => operatingModes.id, { onDelete: 'restrict' }),
+    measuringChainId: uuid().references(() => measuringChains.id, { onDelete: 'restrict' }),
+    conditions: jsonb().$type<TestConditions>().notNull().default({}),
     status: recordingStatus().notNull().default('received'),
     progress: doublePrecision().notNull().default(0),
     problem: jsonb().$type<ReadProblem>(),
@@ -88,6 +94,7 @@ export const recordings = pgTable(
   (table) => [
     unique('recordings_project_number_key').on(table.projectId, table.number),
     index('recordings_project_sha256_index').on(table.projectId, table.fileSha256),
+    index('recordings_equipment_index').on(table.equipmentId),
     check('recordings_sha256_form', sql`${table.fileSha256} ~ '^[0-9a-f]{64}$'`),
   ],
 );
@@ -108,6 +115,8 @@ export const channels = pgTable(
     lowestCode: doublePrecision(),
     highestCode: doublePrecision(),
     missingValues: integer().notNull().default(0),
+    /** Where it differs from the recording's. */
+    measuringChainId: uuid().references(() => measuringChains.id, { onDelete: 'restrict' }),
     samplesKey: text().notNull(),
     pyramidKey: text().notNull(),
   },

@@ -245,6 +245,50 @@ export const totalVerdictSchema = z.object({
 });
 export type TotalVerdict = z.infer<typeof totalVerdictSchema>;
 
+/** One requirement on the test supply with what was measured; null ends are open. */
+export const supplyCheckSchema = z.object({
+  name: z.string(),
+  unit: z.string(),
+  value: z.number().nullable(),
+  from: z.number().nullable(),
+  upTo: z.number().nullable(),
+  result: z.enum(['pass', 'fail', 'not-decidable']),
+});
+
+/** The recorded test voltage against what the standard asks of the supply. */
+export const supplyVerdictSchema = z.object({
+  channel: z.number().int().describe('The voltage channel'),
+  channelName: z.string(),
+  nominalV: z.number(),
+  frequencyHz: z.number(),
+  result: z.enum(['pass', 'fail', 'not-decidable']),
+  checks: z.array(supplyCheckSchema),
+});
+export type SupplyVerdict = z.infer<typeof supplyVerdictSchema>;
+
+/** Spread of one order over the repeats of a test. */
+export const repeatOrderSchema = z.object({
+  order: z.number().int(),
+  count: z.number().int().describe('Repeats in which it was measured'),
+  repeatabilityPercent: z.number().nullable().describe('Standard deviation in percent of the limit'),
+  deviationPercent: z
+    .number()
+    .nullable()
+    .describe('Furthest mean from the mean of means, in percent of the limit'),
+});
+export type RepeatOrder = z.infer<typeof repeatOrderSchema>;
+
+/** One repeat of a test in a verdict over several. */
+export const verdictRepeatSchema = z.object({
+  analysisId: idSchema,
+  recordingId: idSchema,
+  recordingNumber: z.string(),
+  channel: z.number().int(),
+  result: verdictResultSchema,
+  reason: z.string(),
+});
+export type VerdictRepeat = z.infer<typeof verdictRepeatSchema>;
+
 export const verdictSchema = z.object({
   id: idSchema,
   analysisId: idSchema,
@@ -261,6 +305,16 @@ export const verdictSchema = z.object({
   reason: z.string(),
   orders: z.array(orderVerdictSchema),
   totals: z.array(totalVerdictSchema),
+  supply: supplyVerdictSchema
+    .nullable()
+    .describe('Null where the standard asks nothing of the supply or no voltage was recorded'),
+  repeats: z
+    .array(verdictRepeatSchema)
+    .describe('The analyses a verdict over several repeats is made of; empty for a single one'),
+  repeatability: z
+    .object({ isRepeatable: z.boolean().nullable(), orders: z.array(repeatOrderSchema) })
+    .nullable()
+    .describe('Null for a verdict over one analysis'),
   author: personRefSchema,
   createdAt: timestampSchema,
 });

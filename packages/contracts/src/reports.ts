@@ -1,11 +1,23 @@
 import { z } from 'zod';
 import { analysisSchema, channelAnalysisSchema, noteSchema, settingsSchema } from './analyses.js';
 import { idSchema, pageOf, personRefSchema, timestampSchema } from './common.js';
+import { equipmentSchema, operatingModeSchema, testConditionsSchema } from './equipment.js';
+import { laboratorySchema, measuringChainSchema } from './instruments.js';
 import { verdictResultSchema, verdictSchema } from './limits.js';
 import { recordingSchema } from './recordings.js';
 
 export const reportStatusSchema = z.enum(['draft', 'in-review', 'issued', 'superseded']);
 export type ReportStatus = z.infer<typeof reportStatusSchema>;
+
+/** To whom an issued report is sent. */
+export const reportRecipientSchema = z.object({
+  name: z.string().trim().max(120).default(''),
+  email: z
+    .email('Give an e-mail address')
+    .max(254)
+    .transform((email) => email.toLowerCase()),
+});
+export type ReportRecipient = z.infer<typeof reportRecipientSchema>;
 
 const fields = {
   title: z.string().trim().min(1, 'Name the report').max(200),
@@ -61,16 +73,47 @@ export const reportSectionSchema = z.object({
     channel: channelAnalysisSchema,
   }),
   notes: z.array(noteSchema),
+  equipment: equipmentSchema
+    .pick({
+      id: true,
+      name: true,
+      manufacturer: true,
+      model: true,
+      serialNumber: true,
+      ratings: true,
+      receivedOn: true,
+      remark: true,
+    })
+    .nullable()
+    .describe('Null: the recording names its equipment in words only'),
+  operatingMode: operatingModeSchema.nullable(),
+  chain: measuringChainSchema
+    .nullable()
+    .describe('As it stood when the recording was captured; null: named in words only'),
+  conditions: testConditionsSchema,
 });
 export type ReportSection = z.infer<typeof reportSectionSchema>;
 
 /** Everything a report says, frozen from submission on, so that what was reviewed is what is issued. */
 export const reportContentSchema = z.object({
-  project: z.object({ id: idSchema, name: z.string(), customer: z.string() }),
+  project: z.object({
+    id: idSchema,
+    name: z.string(),
+    customer: z.string(),
+    customerContact: z.string(),
+  }),
+  laboratory: laboratorySchema,
   sections: z.array(reportSectionSchema),
   result: verdictResultSchema.describe('The worst of the verdicts'),
 });
 export type ReportContent = z.infer<typeof reportContentSchema>;
+
+const revisionRefSchema = z.object({
+  id: idSchema,
+  revision: z.number().int(),
+  status: reportStatusSchema,
+});
+export type RevisionRef = z.infer<typeof revisionRefSchema>;
 
 export const reportSchema = z.object({
   id: idSchema,
@@ -79,6 +122,14 @@ export const reportSchema = z.object({
   revision: z.number().int(),
   title: z.string(),
   summary: z.string(),
+  deviations: z.string().describe('Additions to, deviations or exclusions from the method'),
+  recipients: z.array(z.object({ name: z.string(), email: z.string() })),
+  replaces: revisionRefSchema.nullable().describe('The issued revision it replaces once it is issued'),
+  replacedBy: revisionRefSchema.nullable().describe('The revision made to replace it'),
+  overdueReason: z
+    .string()
+    .nullable()
+    .describe('Why it was issued although calibrations were overdue; null where none was'),
   status: reportStatusSchema,
   verdictIds: z.array(idSchema),
   content: reportContentSchema.describe('Live for a draft, frozen while in review and once issued'),
@@ -87,13 +138,16 @@ export const reportSchema = z.object({
   issuedBy: personRefSchema.nullable(),
   issuedAt: timestampSchema.nullable(),
   pdfSha256: z.string().nullable(),
+  jsonSha256: z.string().nullable(),
+  csvSha256: z.string().nullable(),
+  checkCode: z.string().nullable().describe('With the number it opens the public check page'),
   createdAt: timestampSchema,
   updatedAt: timestampSchema,
 });
 export type Report = z.infer<typeof reportSchema>;
 
 export const reportListItemSchema = reportSchema
-  .omit({ content: true, events: true, verdictIds: true })
+  .omit({ content: true, events: true, verdictIds: true, recipients: true })
   .extend({ result: verdictResultSchema, sections: z.number().int() });
 export type ReportListItem = z.infer<typeof reportListItemSchema>;
 export const reportPageSchema = pageOf(reportListItemSchema);

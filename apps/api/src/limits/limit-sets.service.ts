@@ -2,6 +2,7 @@ import { Inject, Injectable } from '@nestjs/common';
 import { holds, type CreateLimitSet, type LimitBasis, type LimitSet } from '@overtally/contracts';
 import type { Database } from '@overtally/db';
 import { findPublishedLimitSet, neededParameters, publishedLimitSets } from '@overtally/limits';
+import { randomUUID } from 'node:crypto';
 import { z } from 'zod';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
@@ -58,8 +59,11 @@ export class LimitSetsService {
       const message = 'Give the unit of the limits, such as A or V';
       throw problem(422, 'unit-missing', message, [{ path: 'unit', message }]);
     }
+    const id = randomUUID();
     const row = await this.database.transaction((tx) =>
       this.repository.insert(tx, {
+        id,
+        familyId: id,
         projectId,
         definition: definitionFrom(input, user.name),
         createdById: user.id,

@@ -101,6 +101,9 @@ export function toVerdict(row: VerdictRow): Verdict {
     reason: row.reason,
     orders: row.orders,
     totals: row.totals,
+    supply: row.supply,
+    repeats: [],
+    repeatability: row.repeatability,
     author: { id: row.authorId, name: row.authorName },
     createdAt: row.createdAt.toISOString(),
   };

@@ -25,7 +25,13 @@ export class ReportContentService {
     for (const verdict of verdicts) {
       if (verdict) sections.push(await this.section(verdict));
     }
-    return { project, sections, result: worstResult(sections.map((section) => section.verdict.result)) };
+    const laboratory = { name: '', address: '', contact: '', accreditation: '' };
+    return {
+      project,
+      laboratory,
+      sections,
+      result: worstResult(sections.map((section) => section.verdict.result)),
+    };
   }
 
   private async notesOf(analysisId: string): Promise<Note[]> {
@@ -55,6 +61,10 @@ export class ReportContentService {
       },
       analysis: analysisPart(analysis, verdict.channel),
       notes: notes.filter((note) => note.channel === verdict.channel),
+      equipment: null,
+      operatingMode: null,
+      chain: null,
+      conditions: {},
     };
   }
 }

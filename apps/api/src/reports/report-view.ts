@@ -15,6 +15,10 @@ function toHead(row: Omit<ReportRow, 'content'>): Head {
     revision: row.revision,
     title: row.title,
     summary: row.summary,
+    deviations: row.deviations,
+    replaces: row.replaces,
+    replacedBy: row.replacedBy,
+    overdueReason: row.overdueReason,
     status: row.status,
     preparedBy: { id: row.preparedById, name: row.preparerName },
     issuedBy:
@@ -23,6 +27,9 @@ function toHead(row: Omit<ReportRow, 'content'>): Head {
         : { id: row.issuedById, name: row.issuerName },
     issuedAt: row.issuedAt?.toISOString() ?? null,
     pdfSha256: row.pdfSha256,
+    jsonSha256: row.jsonSha256,
+    csvSha256: row.csvSha256,
+    checkCode: row.checkCode,
     createdAt: row.createdAt.toISOString(),
     updatedAt: row.updatedAt.toISOString(),
   };
@@ -36,6 +43,7 @@ export const toListItem = (row: Omit<ReportRow, 'content'>): ReportListItem => (
 
 export const toReport = (row: ReportRow, content: ReportContent, events: ReportEventRow[]): Report => ({
   ...toHead(row),
+  recipients: row.recipients,
   verdictIds: row.verdictIds,
   content,
   events: events.map(toEvent),

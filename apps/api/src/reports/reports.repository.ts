@@ -1,5 +1,5 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { ReportEvent, ReportStatus, VerdictResult } from '@overtally/contracts';
+import type { ReportEvent, ReportStatus, RevisionRef, VerdictResult } from '@overtally/contracts';
 import { schema, type Database, type Tx } from '@overtally/db';
 import { and, asc, desc, eq, getTableColumns, inArray, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
@@ -16,6 +16,13 @@ const joined = {
   issuerName: issuers.name,
   projectName: projects.name,
   customer: projects.customer,
+  customerContact: projects.customerContact,
+  replaces: sql<RevisionRef | null>`(
+    select json_build_object('id', r.id, 'revision', r.revision, 'status', r.status) from ${reports} r
+    where r.id = ${reports.replacesId})`,
+  replacedBy: sql<RevisionRef | null>`(
+    select json_build_object('id', r.id, 'revision', r.revision, 'status', r.status) from ${reports} r
+    where r.replaces_id = ${reports.id})`,
   verdictIds: sql<string[]>`coalesce((
     select json_agg(rv.verdict_id order by rv.position) from ${reportVerdicts} rv
     where rv.report_id = ${reports.id}), '[]')`,

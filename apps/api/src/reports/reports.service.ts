@@ -42,7 +42,8 @@ export class ReportsService {
   async get(id: string): Promise<Report> {
     const [row, events] = await Promise.all([this.repository.find(id), this.repository.eventsOf(id)]);
     if (!row) throw noSuchReport();
-    const project = { id: row.projectId, name: row.projectName, customer: row.customer };
+    const { projectId, projectName, customer, customerContact } = row;
+    const project = { id: projectId, name: projectName, customer, customerContact };
     const frozen = row.content && withCompletedChannels(row.content);
     const content = frozen ?? (await this.contents.gather(project, row.verdictIds));
     return toReport(row, content, events);

@@ -89,9 +89,10 @@ export async function newVerdict(database: Database, analysisId: string, { userI
 }
 
 export async function newLimitSet(database: Database, { projectId, userId }: Owner) {
+  const id = randomUUID();
   const [row] = await database
     .insert(schema.limitSets)
-    .values({ projectId, definition: limits, createdById: userId })
+    .values({ id, familyId: id, projectId, definition: limits, createdById: userId })
     .returning();
   return made(row);
 }
