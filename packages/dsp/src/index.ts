@@ -89,6 +89,9 @@ export {
   type OrdersForResidual,
   type ResidualByOrder,
 } from './fourier/residual-by-order.js';
+export { waveformOf, undrawnOrders, type Waveform, type WaveformOptions } from './fourier/waveform.js';
+export { seriesFigures, type SeriesFigures } from './fourier/series-figures.js';
+export { checkSeries } from './fourier/check-series.js';
 export { harmonicTable, type HarmonicRow } from './fourier/harmonic-table.js';
 export {
   dcGain,
@@ -97,10 +100,58 @@ export {
   zeros,
   type TransferFunction,
 } from './transfer/transfer-function.js';
+export { relativeDegree } from './transfer/transfer-function.js';
+export { fromZerosPolesGain, zerosPolesGain, type ZerosPolesGain } from './transfer/zeros-poles-gain.js';
+export {
+  closeLoop,
+  inSeries,
+  MAX_PADE_ORDER,
+  padeDelay,
+  totalDelay,
+  withPadeDelay,
+  type LoopOutput,
+} from './transfer/compose.js';
 export { expandRoots, polynomialRoots, type Root } from './transfer/polynomial-roots.js';
-export { frequencyResponse, type ResponsePoint } from './transfer/frequency-response.js';
+export {
+  frequencyResponse,
+  responseOf,
+  type Response,
+  type ResponsePoint,
+  type StageChain,
+} from './transfer/frequency-response.js';
 export { stability, type Stability, type StabilityVerdict } from './transfer/stability.js';
 export { steadyStateOf, type SteadyState } from './transfer/steady-state.js';
+export { logFrequencies, resonancePeaks, type ResonancePeak } from './transfer/resonance.js';
+export {
+  harmonicsThroughStages,
+  type OrderThroughStages,
+  type StagesResult,
+  type ThroughStagesOptions,
+} from './response/through-stages.js';
+export {
+  resonanceWarnings,
+  type ResonanceWarning,
+  type ResonanceWarningOptions,
+} from './response/resonance-warnings.js';
+export { parseQuantity, type ComponentUnit } from './circuits/parse-quantity.js';
+export type { CircuitKind, CircuitParameter, CircuitValues } from './circuits/circuit-kind.js';
+export {
+  chainOf,
+  circuitKinds,
+  stageTransfer,
+  type CircuitName,
+  type StageSpec,
+} from './circuits/stage-spec.js';
+export { pidController, type ControllerSettings } from './circuits/controller.js';
+export { lineReactorInductance, type LineReactorRating } from './circuits/line-reactor.js';
+export {
+  designCTypeFilter,
+  designTunedFilter,
+  parallelResonanceOrder,
+  type ShuntFilterComponents,
+  type ShuntFilterDemand,
+} from './circuits/filter-design.js';
+export type { Complex } from './linear/complex.js';
 export { twoLevelSeries, type TwoLevelWave } from './transfer/two-level-wave.js';
 export { twoLevelSteadyState, type TwoLevelSteadyState } from './transfer/two-level-steady-state.js';
 export { routhTable, type RouthElement, type RouthRow, type RouthTable } from './transfer/routh-table.js';

@@ -1,4 +1,4 @@
-import { angleDegrees, complexAbs, complexDivide, type Complex } from '../linear/complex.js';
+import { angleDegrees, complexAbs, type Complex } from '../linear/complex.js';
 import { trimLeadingZeros, type Polynomial } from './polynomial.js';
 import { dcGain, type TransferFunction } from './transfer-function.js';
 
@@ -12,61 +12,134 @@ export interface ResponsePoint {
   phaseDeg: number | null;
 }
 
-/** Response H(j2πf) at each of the frequencies, which may be 0. */
-export function frequencyResponse(h: TransferFunction, frequenciesHz: ArrayLike<number>): ResponsePoint[] {
-  return Array.from(frequenciesHz, (frequencyHz) => {
-    const value = responseAt(h, frequencyHz);
-    const magnitude = value && complexAbs(value);
-    const isZero = magnitude === null || magnitude === 0;
-    return {
-      frequencyHz,
-      magnitude,
-      magnitudeDb: isZero ? null : 20 * Math.log10(magnitude),
-      phaseDeg: isZero ? null : angleDegrees(value!),
-    };
-  });
+/** One stage or several in series; the whole response is their product. */
+export type StageChain = TransferFunction | readonly TransferFunction[];
+
+/** H(j2πf); null at a pole on the imaginary axis. */
+export type Response = (frequencyHz: number) => Complex | null;
+
+/** The stages of a chain, one by one. */
+export function stagesOf(chain: StageChain): readonly TransferFunction[] {
+  return 'numerator' in chain ? [chain] : chain;
+}
+
+/** Response H(j2πf) of a stage or of stages in series at each of the frequencies, which may be 0. */
+export function frequencyResponse(chain: StageChain, frequenciesHz: ArrayLike<number>): ResponsePoint[] {
+  const response = responseOf(chain);
+  return Array.from(frequenciesHz, (frequencyHz) => responsePoint(frequencyHz, response(frequencyHz)));
+}
+
+/** A value of a response as magnitude, decibels and angle. */
+export function responsePoint(frequencyHz: number, value: Complex | null): ResponsePoint {
+  const magnitude = value && complexAbs(value);
+  const isZero = magnitude === null || magnitude === 0;
+  return {
+    frequencyHz,
+    magnitude,
+    magnitudeDb: isZero ? null : 20 * Math.log10(magnitude),
+    phaseDeg: isZero ? null : angleDegrees(value!),
+  };
+}
+
+/** H(j2πf) at one frequency; see `responseOf`. */
+export function responseAt(h: TransferFunction, frequencyHz: number): Complex | null {
+  return responseOf(h)(frequencyHz);
 }
 
 /**
- * H(j2πf). Numerator and denominator are evaluated with their even and odd powers apart, so that real and imaginary part
- * each come from a real polynomial in ω², and in powers of 1/ω above ω = 1, so that high degrees do not overflow.
- *
- * @returns null at a pole on the imaginary axis
+ * H(j2πf) as a function of f, made ready for many frequencies. Stages are evaluated one by one and multiplied, so that no
+ * polynomial of high degree is formed; a delay T turns by exactly −2πfT.
  */
-export function responseAt(h: TransferFunction, frequencyHz: number): Complex | null {
-  const omega = 2 * Math.PI * frequencyHz;
-  if (omega === 0) {
-    const gain = dcGain(h);
-    return gain === null ? null : { re: gain, im: 0 };
-  }
-  const numerator = trimLeadingZeros(h.numerator);
-  const denominator = trimLeadingZeros(h.denominator);
-  const above = onImaginaryAxis(numerator, omega);
-  const below = onImaginaryAxis(denominator, omega);
-  if (below.re === 0 && below.im === 0) return null;
-  const { re, im } = complexDivide(above, below);
-  const power = Math.abs(omega) > 1 ? omega ** (numerator.length - denominator.length) : 1;
-  return { re: re * power, im: im * power };
+export function responseOf(chain: StageChain): Response {
+  const responses = stagesOf(chain).map(stageResponse);
+  return (frequencyHz) => {
+    let re = 1;
+    let im = 0;
+    for (const response of responses) {
+      const factor = response(frequencyHz);
+      if (factor === null) return null;
+      const next = re * factor.re - im * factor.im;
+      im = re * factor.im + im * factor.re;
+      re = next;
+    }
+    return { re, im };
+  };
 }
 
-/** p(jω), above ω = 1 divided by ω^degree. */
-function onImaginaryAxis(polynomial: Polynomial, omega: number): Complex {
-  const isHigh = Math.abs(omega) > 1;
-  const x = isHigh ? 1 / omega : omega;
+function stageResponse(h: TransferFunction): Response {
+  const numerator = prepare(trimLeadingZeros(h.numerator));
+  const denominator = prepare(trimLeadingZeros(h.denominator));
+  const excess = numerator.degree - denominator.degree;
+  const gain = dcGain(h);
+  const atZero = gain === null ? null : { re: gain, im: 0 };
+  const above: Complex = { re: 0, im: 0 };
+  const below: Complex = { re: 0, im: 0 };
+  const { delayS = 0 } = h;
+  return (frequencyHz) => {
+    if (frequencyHz === 0) return atZero;
+    const omega = 2 * Math.PI * frequencyHz;
+    evaluateOnAxis(numerator, omega, above);
+    evaluateOnAxis(denominator, omega, below);
+    // A power of two near the size of the denominator keeps its square from overflow and from vanishing.
+    const size = Math.max(Math.abs(below.re), Math.abs(below.im));
+    if (size === 0) return null;
+    const c = below.re / size;
+    const d = below.im / size;
+    const scale = (Math.abs(omega) > 1 ? omega ** excess : 1) / ((c * c + d * d) * size);
+    const re = (above.re * c + above.im * d) * scale;
+    const im = (above.im * c - above.re * d) * scale;
+    return delayS === 0 ? { re, im } : turned(re, im, frequencyHz * delayS);
+  };
+}
+
+/** Turned back by a number of full turns, whole ones taken out first. */
+function turned(re: number, im: number, turns: number): Complex {
+  const angle = 2 * Math.PI * (turns - Math.round(turns));
+  const cosine = Math.cos(angle);
+  const sine = Math.sin(angle);
+  return { re: re * cosine + im * sine, im: im * cosine - re * sine };
+}
+
+/** Coefficients of even and odd powers in ascending order, each with the sign of j^k. */
+interface AxisPolynomial {
+  degree: number;
+  even: Float64Array;
+  odd: Float64Array;
+}
+
+function prepare(polynomial: Polynomial): AxisPolynomial {
   const degree = polynomial.length - 1;
-  const parts: [number, number] = [0, 0];
-  for (const parity of [0, 1] as const) {
-    // Powers k of this parity with the sign of j^k, added from the one that x² is multiplied with most often.
-    const powers = Array.from({ length: degree + 1 }, (_, k) => k).filter((k) => k % 2 === parity);
-    const inOrder = isHigh ? powers : powers.reverse();
-    let sum = 0;
-    for (const k of inOrder) {
-      const sign = k % 4 < 2 ? 1 : -1;
-      sum = sum * x * x + sign * polynomial[degree - k]!;
-    }
-    const last = inOrder.at(-1);
-    const exponent = last === undefined ? 0 : isHigh ? degree - last : last;
-    parts[parity] = sum * x ** exponent;
+  const ofParity = (parity: number) =>
+    Float64Array.from({ length: Math.max(0, Math.ceil((degree + 1 - parity) / 2)) }, (_, i) => {
+      return (i % 2 === 0 ? 1 : -1) * polynomial[degree - parity - 2 * i]!;
+    });
+  return { degree, even: ofParity(0), odd: ofParity(1) };
+}
+
+/**
+ * p(jω), above ω = 1 divided by ω^degree. Even and odd powers stay apart, so that real and imaginary part each come from a
+ * real polynomial in ω², and in powers of 1/ω above ω = 1, so that high degrees do not overflow.
+ */
+function evaluateOnAxis({ degree, even, odd }: AxisPolynomial, omega: number, out: Complex): void {
+  if (Math.abs(omega) > 1) {
+    const x = 1 / omega;
+    out.re = fromLowest(even, x * x) * (degree % 2 === 0 ? 1 : x);
+    out.im = fromLowest(odd, x * x) * (degree % 2 === 1 ? 1 : x);
+  } else {
+    out.re = fromHighest(even, omega * omega);
+    out.im = fromHighest(odd, omega * omega) * omega;
   }
-  return { re: parts[0], im: parts[1] };
+}
+
+/** Horner's rule with the lowest power of ω multiplied most often. */
+function fromLowest(terms: Float64Array, square: number): number {
+  let sum = 0;
+  for (const term of terms) sum = sum * square + term;
+  return sum;
+}
+
+function fromHighest(terms: Float64Array, square: number): number {
+  let sum = 0;
+  for (let i = terms.length - 1; i >= 0; i--) sum = sum * square + terms[i]!;
+  return sum;
 }

@@ -41,3 +41,27 @@ export function derivative(polynomial: Polynomial, order = 1): Polynomial {
   }
   return current;
 }
+
+/** Product of polynomials; 1 for none. */
+export function multiplyPolynomials(...factors: readonly Polynomial[]): Polynomial {
+  return factors.reduce<Polynomial>(
+    (product, factor) => {
+      const out = new Array<number>(Math.max(0, product.length + factor.length - 1)).fill(0);
+      product.forEach((a, i) => factor.forEach((b, k) => (out[i + k]! += a * b)));
+      return out;
+    },
+    [1],
+  );
+}
+
+/** Sum of two polynomials without leading zeros. */
+export function addPolynomials(a: Polynomial, b: Polynomial): Polynomial {
+  const length = Math.max(a.length, b.length);
+  const at = (p: Polynomial, k: number) => p[k - (length - p.length)] ?? 0;
+  return trimLeadingZeros(Array.from({ length }, (_, k) => at(a, k) + at(b, k)));
+}
+
+/** All coefficients times a factor. */
+export function scalePolynomial(polynomial: Polynomial, factor: number): Polynomial {
+  return polynomial.map((c) => c * factor);
+}

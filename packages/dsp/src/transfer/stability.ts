@@ -1,7 +1,8 @@
+import { complexAbs } from '../linear/complex.js';
+import { stagesOf, type StageChain } from './frequency-response.js';
 import { evaluate, evaluateMagnitudes, trimLeadingZeros } from './polynomial.js';
 import { COEFFICIENT_PRECISION, type Root } from './polynomial-roots.js';
 import { poles, type TransferFunction } from './transfer-function.js';
-import { complexAbs } from '../linear/complex.js';
 
 export type StabilityVerdict = 'stable' | 'marginal' | 'unstable';
 
@@ -14,20 +15,22 @@ export interface Stability {
 }
 
 /**
- * Stability of a stage by its poles (A. M. Lyapunov; any textbook on control, such as Ogata, Modern Control Engineering):
- * stable when all of them have a negative real part, unstable with one of positive real part or a repeated one on the
- * imaginary axis, marginal with simple ones on the axis.
+ * Stability of a stage, or of stages in series, by their poles (A. M. Lyapunov; any textbook on control, such as Ogata,
+ * Modern Control Engineering): stable when all of them have a negative real part, unstable with one of positive real part
+ * or a repeated one on the imaginary axis, marginal with simple ones on the axis.
  *
- * A pole counts as on the axis when a change of the coefficients by 1e-11 could put it there.
+ * Poles are never cancelled against zeros, not against those of another stage either: a mode that a zero hides from the
+ * output is still there. A pole counts as on the axis when a change of the coefficients of its stage by 1e-11 could put it
+ * there. A delay in series changes nothing; for one within a loop see `nyquist`.
  */
-export function stability(h: TransferFunction): Stability {
-  const all = poles(h);
-  const onAxis = all.filter((pole) => isOnAxis(h, pole));
-  const right = all.filter((pole) => pole.re > 0 && !onAxis.includes(pole));
+export function stability(chain: StageChain): Stability {
+  const all = stagesOf(chain).flatMap(judgedPoles);
+  const right = all.filter(({ place }) => place === 'right').map(({ pole }) => pole);
   if (right.length > 0) {
     return { verdict: 'unstable', offending: right, reason: `${named(right)} has a positive real part.` };
   }
-  const repeated = onAxis.filter((pole) => pole.multiplicity > 1);
+  const onAxis = all.filter(({ place }) => place === 'axis').map(({ pole }) => pole);
+  const repeated = onAxis.filter((pole) => timesThere(onAxis, pole) > 1);
   if (repeated.length > 0) {
     return {
       verdict: 'unstable',
@@ -43,6 +46,27 @@ export function stability(h: TransferFunction): Stability {
     };
   }
   return { verdict: 'stable', offending: [], reason: 'Every pole has a negative real part.' };
+}
+
+interface JudgedPole {
+  pole: Root;
+  place: 'left' | 'axis' | 'right';
+}
+
+function judgedPoles(h: TransferFunction): JudgedPole[] {
+  return poles(h).map((pole) => {
+    if (isOnAxis(h, pole)) return { pole, place: 'axis' };
+    return { pole, place: pole.re > 0 ? 'right' : 'left' };
+  });
+}
+
+/** How often a pole on the axis occurs, in one stage or in several. */
+function timesThere(onAxis: readonly Root[], pole: Root): number {
+  const near = 1e-9 * Math.abs(pole.im);
+  return onAxis.reduce(
+    (sum, { im, multiplicity }) => sum + (Math.abs(im - pole.im) <= near ? multiplicity : 0),
+    0,
+  );
 }
 
 function isOnAxis(h: TransferFunction, pole: Root): boolean {

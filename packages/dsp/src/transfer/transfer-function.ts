@@ -2,10 +2,15 @@ import { AnalysisInputError } from '../errors.js';
 import { rootsAtOrigin, trimLeadingZeros } from './polynomial.js';
 import { polynomialRoots, type Root } from './polynomial-roots.js';
 
-/** H(s) = numerator/denominator of a linear, time-invariant stage; real coefficients in descending powers of s (1/s). */
+/**
+ * H(s) = numerator/denominator · e^(−s delayS) of a linear, time-invariant stage; real coefficients in descending powers of
+ * s (1/s).
+ */
 export interface TransferFunction {
   numerator: readonly number[];
   denominator: readonly number[];
+  /** Pure delay in seconds, default 0. It has no poles and changes the phase alone. */
+  delayS?: number;
 }
 
 const MAX_DEGREE = 50;
@@ -13,13 +18,21 @@ const MAX_DEGREE = 50;
 /**
  * A checked transfer function without leading zeros.
  *
- * @throws AnalysisInputError when a coefficient is no finite number, the denominator is zero, or the degree exceeds 50
+ * @throws AnalysisInputError when a coefficient is no finite number, the denominator is zero, the degree exceeds 50, or
+ *   the delay is negative or no finite number
  */
 export function transferFunction(
   numerator: readonly number[],
   denominator: readonly number[],
+  delayS = 0,
 ): TransferFunction {
+  if (!(delayS >= 0 && delayS < Infinity)) {
+    throw new AnalysisInputError(
+      `The delay is ${delayS} s; it must be zero or a positive number of seconds.`,
+    );
+  }
   const checked = {
+    ...(delayS > 0 && { delayS }),
     numerator: checkedPolynomial(numerator, 'numerator'),
     denominator: checkedPolynomial(denominator, 'denominator'),
   };
@@ -65,4 +78,13 @@ export function dcGain(h: TransferFunction): number | null {
   const common = Math.min(rootsAtOrigin(numerator), rootsAtOrigin(denominator));
   const divisor = denominator[denominator.length - 1 - common]!;
   return divisor === 0 ? null : numerator[numerator.length - 1 - common]! / divisor;
+}
+
+/**
+ * Degree of the denominator minus that of the numerator. Below zero H is improper: its gain grows without bound with
+ * frequency, and its answer to a step holds an impulse; null for H = 0.
+ */
+export function relativeDegree(h: TransferFunction): number | null {
+  const numerator = trimLeadingZeros(h.numerator);
+  return numerator.length === 0 ? null : trimLeadingZeros(h.denominator).length - numerator.length;
 }
