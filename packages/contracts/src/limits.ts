@@ -156,6 +156,12 @@ export const limitSetSchema = z.object({
   confidence: confidenceSchema,
   evidence: z.string(),
   notes: z.array(z.string()),
+  familyId: idSchema.optional().describe('Custom sets: the same for all versions of a set'),
+  clonedFrom: z.string().optional().describe('The set it was copied from'),
+  retiredAt: timestampSchema
+    .optional()
+    .describe('Custom sets: since when it is no longer offered for new verdicts'),
+  newestId: idSchema.optional().describe('The newest version of the set, where this is an earlier one'),
 });
 export type LimitSet = z.infer<typeof limitSetSchema>;
 export const limitSetPageSchema = pageOf(limitSetSchema);
@@ -173,14 +179,25 @@ export const createLimitSetSchema = z
       .optional()
       .describe('Parameter that `percent-of-reference` refers to'),
     procedure: limitProcedureSchema.optional().describe('`plain` when absent'),
-    orders: z.array(limitEntrySchema).max(199),
+    orders: z.array(limitEntrySchema).max(199).default([]),
     totals: z.array(totalLimitSchema).max(5).default([]),
+    table: z
+      .string()
+      .max(100_000)
+      .optional()
+      .describe(
+        'Orders and totals as delimited text in place of `orders` and `totals`: order, limit, unit, cap on each line',
+      ),
     ...conditionsOfUse,
     source: z.string().trim().min(1, 'Say where the limits come from').max(500),
   })
-  .refine((set) => set.orders.length > 0 || (set.rows?.length ?? 0) > 0, {
+  .refine((set) => set.orders.length > 0 || (set.rows?.length ?? 0) > 0 || set.table !== undefined, {
     message: 'Give at least one order',
     path: ['orders'],
+  })
+  .refine((set) => set.table === undefined || (set.orders.length === 0 && set.totals.length === 0), {
+    message: 'Give the limits once: as a table or as orders and totals',
+    path: ['table'],
   })
   .refine((set) => set.rows === undefined || set.rowChoice !== undefined, {
     message: 'Say how a row is taken',
@@ -196,6 +213,18 @@ export const createLimitSetSchema = z
   });
 export type CreateLimitSet = z.infer<typeof createLimitSetSchema>;
 
+/** A copy of a published set, or of one of the same project. */
+export const cloneLimitSetSchema = z.object({
+  limitSetId: z.string().min(1).max(80).describe('The set to copy'),
+  title: z.string().trim().min(1, 'Name the limit set').max(160).optional(),
+});
+export type CloneLimitSet = z.infer<typeof cloneLimitSetSchema>;
+
+export const updateLimitSetSchema = z.object({
+  retired: z.boolean().describe('A retired set stays readable and is not offered for new verdicts'),
+});
+export type UpdateLimitSet = z.infer<typeof updateLimitSetSchema>;
+
 /**
  * Decision rules, ILAC-G8:09/2019: simple acceptance (4.2.1), guarded acceptance with w = U (4.2.2),
  * and the non-binary statement with a guard band (4.2.3).
@@ -203,11 +232,22 @@ export type CreateLimitSet = z.infer<typeof createLimitSetSchema>;
 export const decisionRuleSchema = z.enum(['simple-acceptance', 'guarded-acceptance', 'non-binary']);
 export type DecisionRule = z.infer<typeof decisionRuleSchema>;
 
+const channelIndexSchema = z.number().int().min(0).max(maxChannelIndex);
+
+/** A channel of another analysis of the project: the same test once more. */
+export const repeatSchema = z.object({ analysisId: idSchema, channel: channelIndexSchema });
+export type Repeat = z.infer<typeof repeatSchema>;
+
 export const createVerdictSchema = z.object({
   limitSetId: z.string().min(1).max(80),
-  channel: z.number().int().min(0).max(maxChannelIndex),
+  channel: channelIndexSchema,
   parameters: verdictParametersSchema.default({}),
   decisionRule: decisionRuleSchema.default('simple-acceptance'),
+  repeats: z
+    .array(repeatSchema)
+    .max(20)
+    .optional()
+    .describe('Further repeats of the test, each of the same quantity and unit'),
 });
 export type CreateVerdict = z.infer<typeof createVerdictSchema>;
 
@@ -260,7 +300,12 @@ export const supplyVerdictSchema = z.object({
   channel: z.number().int().describe('The voltage channel'),
   channelName: z.string(),
   nominalV: z.number(),
-  frequencyHz: z.number(),
+  frequencyHz: z.number().describe('Nominal frequency'),
+  assumption: z
+    .string()
+    .nullable()
+    .describe('What was taken for granted, as a sentence: a nominal value that was not stated'),
+  summary: z.string().describe('The result, and what it means for the verdict, in words'),
   result: z.enum(['pass', 'fail', 'not-decidable']),
   checks: z.array(supplyCheckSchema),
 });
