@@ -11,6 +11,7 @@ export * from './people.js';
 export * from './projects.js';
 export * from './reading-rules.js';
 export * from './recordings.js';
+export * from './report-twin.js';
 export * from './reports.js';
 export * from './power.js';
 export * from './series.js';

@@ -4,7 +4,8 @@ import { idSchema, pageOf, personRefSchema, timestampSchema } from './common.js'
 import { equipmentSchema, operatingModeSchema, testConditionsSchema } from './equipment.js';
 import { laboratorySchema, measuringChainSchema } from './instruments.js';
 import { verdictResultSchema, verdictSchema } from './limits.js';
-import { recordingSchema } from './recordings.js';
+import { recordingSchema, waveformSchema } from './recordings.js';
+import { seriesSchema } from './series.js';
 
 export const reportStatusSchema = z.enum(['draft', 'in-review', 'issued', 'superseded']);
 export type ReportStatus = z.infer<typeof reportStatusSchema>;
@@ -50,6 +51,18 @@ export const reportEventSchema = z.object({
 });
 export type ReportEvent = z.infer<typeof reportEventSchema>;
 
+/** First cycles of the judged channel, for the figure in the report: one value a point, or a minimum and a maximum. */
+export const waveformExcerptSchema = waveformSchema
+  .pick({ unit: true, kind: true, startS: true, stepS: true, values: true, minimum: true, maximum: true })
+  .describe('At most 800 points, to six significant digits');
+export type WaveformExcerpt = z.infer<typeof waveformExcerptSchema>;
+
+/** The judged channel's distortion over time, for the figure in the report. */
+export const distortionSeriesSchema = seriesSchema
+  .pick({ unit: true, intervalS: true, timeS: true, value: true, thinned: true })
+  .describe('THD of subgroups from window to window; when thinned, the largest of each stretch');
+export type DistortionSeries = z.infer<typeof distortionSeriesSchema>;
+
 /** One recording judged, with all that its pages in the report show. */
 export const reportSectionSchema = z.object({
   verdict: verdictSchema,
@@ -91,6 +104,8 @@ export const reportSectionSchema = z.object({
     .nullable()
     .describe('As it stood when the recording was captured; null: named in words only'),
   conditions: testConditionsSchema,
+  waveform: waveformExcerptSchema.nullable().describe('Null: its samples could not be read'),
+  distortion: distortionSeriesSchema.nullable().describe('Null: nothing was followed over time'),
 });
 export type ReportSection = z.infer<typeof reportSectionSchema>;
 
@@ -151,3 +166,7 @@ export const reportListItemSchema = reportSchema
   .extend({ result: verdictResultSchema, sections: z.number().int() });
 export type ReportListItem = z.infer<typeof reportListItemSchema>;
 export const reportPageSchema = pageOf(reportListItemSchema);
+
+/** Path of the public check page of an issued report, as its PDF and its QR code name it. */
+export const reportCheckPath = (number: string, code: string): string =>
+  `/check/${encodeURIComponent(number)}/${encodeURIComponent(code)}`;

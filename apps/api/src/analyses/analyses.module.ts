@@ -11,6 +11,6 @@ import { SeriesService } from './series/series.service.js';
   imports: [RecordingsModule],
   controllers: [AnalysesController, SeriesController],
   providers: [AnalysesService, AnalysesRepository, SeriesService, AnalyseRecordingHandler],
-  exports: [AnalysesService, AnalyseRecordingHandler],
+  exports: [AnalysesService, SeriesService, AnalyseRecordingHandler],
 })
 export class AnalysesModule {}

@@ -37,6 +37,8 @@ interface Pools {
   coordinators: Piscina;
   /** A thread for what somebody waits for, so that it does not stand behind long readings. */
   previews: Piscina;
+  /** A thread that draws reports, one at a time, so that neither a preview nor memory waits for a long one. */
+  reports: Piscina;
 }
 
 /** Runs computations in threads of their own, so that requests are answered meanwhile. */
@@ -64,8 +66,8 @@ export class ComputePool implements OnApplicationShutdown {
 
   async onApplicationShutdown(): Promise<void> {
     if (this.pools === undefined) return;
-    const { workers, coordinators, previews } = await this.pools;
-    await Promise.all([coordinators.destroy(), workers.destroy(), previews.destroy()]);
+    const pools: Piscina[] = Object.values(await this.pools);
+    await Promise.all(pools.map((pool) => pool.destroy()));
   }
 
   /** Runs a task, and what it hands on, under one flag to stop. */
@@ -129,11 +131,13 @@ export class ComputePool implements OnApplicationShutdown {
       workers: make(computeThreads, true),
       coordinators: make(jobsAtOnce, true),
       previews: make(1, false),
+      reports: make(1, false),
     };
   }
 }
 
-function poolFor(task: ComputeTask, { workers, coordinators, previews }: Pools): Piscina {
+function poolFor(task: ComputeTask, { workers, coordinators, previews, reports }: Pools): Piscina {
   if (task === 'preview') return previews;
+  if (task === 'report') return reports;
   return task === 'analyse' ? coordinators : workers;
 }

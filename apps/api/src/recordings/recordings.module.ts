@@ -29,6 +29,7 @@ import { WaveformService } from './waveform.service.js';
     PreviewsService,
     UploadLimitsService,
     AnalysisRunsService,
+    WaveformService,
     ReadRecordingHandler,
   ],
 })

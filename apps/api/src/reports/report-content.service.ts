@@ -4,6 +4,7 @@ import { AnalysesService } from '../analyses/analyses.service.js';
 import { VerdictsService } from '../limits/verdicts.service.js';
 import { NotesService } from '../notes/notes.service.js';
 import { RecordingsService } from '../recordings/recordings.service.js';
+import { ReportPictures } from './report-pictures.service.js';
 import { worstResult } from './report-state.js';
 
 const notesPerQuery = 200;
@@ -16,6 +17,7 @@ export class ReportContentService {
     private readonly recordings: RecordingsService,
     private readonly analyses: AnalysesService,
     private readonly notes: NotesService,
+    private readonly pictures: ReportPictures,
   ) {}
 
   /** The content as of now, one section per verdict in the order given. */
@@ -53,18 +55,21 @@ export class ReportContentService {
     ]);
     const { id, number, name, eut, measuringChain, instrument, capturedAt, file } = recording;
     const { sampleRateHz, sampleCount, durationS, metadata } = recording;
+    const { recordingId, analysisId } = verdict;
+    const judged = analysisPart(analysis, verdict.channel);
     return {
       verdict,
       recording: {
         ...{ id, number, name, eut, measuringChain, instrument, capturedAt, file },
         ...{ sampleRateHz, sampleCount, durationS, metadata, import: recording.import },
       },
-      analysis: analysisPart(analysis, verdict.channel),
+      analysis: judged,
       notes: notes.filter((note) => note.channel === verdict.channel),
       equipment: null,
       operatingMode: null,
       chain: null,
       conditions: {},
+      ...(await this.pictures.of({ recordingId, analysisId, ...judged })),
     };
   }
 }

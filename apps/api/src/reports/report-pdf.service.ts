@@ -2,7 +2,7 @@ import { Injectable } from '@nestjs/common';
 import { createHash } from 'node:crypto';
 import { problem } from '../common/problem.js';
 import { Storage } from '../storage/storage.js';
-import { renderReportPdf } from './pdf/render-report.js';
+import { ReportRendering } from './rendering/report-rendering.service.js';
 import { reportNumber } from './report-view.js';
 import { ReportsRepository } from './reports.repository.js';
 import { ReportsService } from './reports.service.js';
@@ -21,6 +21,7 @@ export class ReportPdfService {
     private readonly repository: ReportsRepository,
     private readonly reports: ReportsService,
     private readonly storage: Storage,
+    private readonly rendering: ReportRendering,
   ) {}
 
   async get(id: string): Promise<ReportPdf> {
@@ -32,7 +33,8 @@ export class ReportPdfService {
         sha256: row.pdfSha256,
       };
     }
-    return { bytes: await renderReportPdf(await this.reports.get(id)), fileName: 'draft.pdf', sha256: null };
+    const { pdf } = await this.rendering.forms(await this.reports.get(id), ['pdf']);
+    return { bytes: pdf, fileName: 'draft.pdf', sha256: null };
   }
 
   private async stored(key: string, sha256: string): Promise<Uint8Array> {

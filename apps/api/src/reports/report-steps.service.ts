@@ -4,7 +4,7 @@ import type { Database } from '@overtally/db';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { Storage } from '../storage/storage.js';
-import { renderReportPdf } from './pdf/render-report.js';
+import { ReportRendering } from './rendering/report-rendering.service.js';
 import { requireAction } from './report-state.js';
 import { reportNumber } from './report-view.js';
 import { ReportsRepository } from './reports.repository.js';
@@ -18,6 +18,7 @@ export class ReportStepsService {
     private readonly repository: ReportsRepository,
     private readonly reports: ReportsService,
     private readonly storage: Storage,
+    private readonly rendering: ReportRendering,
   ) {}
 
   /** Into review, with what it says kept, so that what is reviewed is what will be issued. */
@@ -55,13 +56,16 @@ export class ReportStepsService {
       const row = await this.reports.lockAsRead(tx, reviewed, 'issue');
       const number = await this.repository.nextNumber(tx, row.projectId);
       const issuedAt = new Date();
-      const pdf = await renderReportPdf({
-        ...reviewed,
-        number: reportNumber(number),
-        status: 'issued',
-        issuedBy: { id: user.id, name: user.name },
-        issuedAt: issuedAt.toISOString(),
-      });
+      const { pdf } = await this.rendering.forms(
+        {
+          ...reviewed,
+          number: reportNumber(number),
+          status: 'issued',
+          issuedBy: { id: user.id, name: user.name },
+          issuedAt: issuedAt.toISOString(),
+        },
+        ['pdf'],
+      );
       const pdfKey = `reports/${id}/revision-${row.revision}.pdf`;
       const { sha256: pdfSha256 } = await this.storage.put(pdfKey, pdf);
       await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'issued', comment });

@@ -6,16 +6,26 @@ import { RecordingsModule } from '../recordings/recordings.module.js';
 import { ReportContentService } from './report-content.service.js';
 import { ReportPdfController } from './report-pdf.controller.js';
 import { ReportPdfService } from './report-pdf.service.js';
+import { ReportPictures } from './report-pictures.service.js';
 import { ReportStepsController } from './report-steps.controller.js';
 import { ReportStepsService } from './report-steps.service.js';
 import { ReportsController } from './reports.controller.js';
 import { ReportsRepository } from './reports.repository.js';
+import { ReportRendering } from './rendering/report-rendering.service.js';
 import { ReportsService } from './reports.service.js';
 
 @Module({
   imports: [AnalysesModule, LimitsModule, NotesModule, RecordingsModule],
   controllers: [ReportsController, ReportStepsController, ReportPdfController],
-  providers: [ReportsService, ReportsRepository, ReportContentService, ReportStepsService, ReportPdfService],
-  exports: [ReportsService, ReportStepsService],
+  providers: [
+    ReportsService,
+    ReportsRepository,
+    ReportContentService,
+    ReportStepsService,
+    ReportRendering,
+    ReportPictures,
+    ReportPdfService,
+  ],
+  exports: [ReportsService, ReportStepsService, ReportRendering],
 })
 export class ReportsModule {}

@@ -142,6 +142,8 @@ const noSuchReport = () => problem(404, 'not-found', 'There is no such report');
 function withCompletedChannels(content: ReportContent): ReportContent {
   const sections = content.sections.map((section) => ({
     ...section,
+    waveform: section.waveform ?? null,
+    distortion: section.distortion ?? null,
     analysis: { ...section.analysis, channel: completed(section.analysis.channel) },
   }));
   return { ...content, sections };

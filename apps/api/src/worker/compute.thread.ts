@@ -14,6 +14,7 @@ import { Delegation } from '../jobs/delegation.js';
 import { toPlainError } from '../jobs/plain-error.js';
 import { previewTask, type PreviewTaskInput } from '../recordings/previewing/preview-task.js';
 import { readTask, type ReadTaskInput } from '../recordings/reading/read-task.js';
+import { reportTask, type ReportTaskInput } from '../reports/rendering/report-task.js';
 import { openStorage } from '../storage/open-storage.js';
 import { lowerThreadPriority } from './lower-priority.js';
 
@@ -46,6 +47,8 @@ function perform({ task, input }: ComputeRequest, context: ComputeContext): Prom
   switch (task) {
     case 'preview':
       return previewTask(input as PreviewTaskInput);
+    case 'report':
+      return reportTask(input as ReportTaskInput, context);
     case 'read':
       return readTask(input as ReadTaskInput, context);
     case 'analyse':

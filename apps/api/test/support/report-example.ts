@@ -169,6 +169,8 @@ export function exampleSection(options: SectionOptions = {}): ReportSection {
     operatingMode: null,
     chain: null,
     conditions: {},
+    waveform: null,
+    distortion: null,
   };
 }
 

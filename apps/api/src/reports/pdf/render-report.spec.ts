@@ -1,3 +1,4 @@
+import type { Report } from '@overtally/contracts';
 import { execFileSync } from 'node:child_process';
 import { describe, expect, it } from 'vitest';
 import {
@@ -7,10 +8,12 @@ import {
   exampleSection,
   noteOn,
 } from '../../../test/support/report-example.js';
-import { renderReportPdf } from './render-report.js';
+import { renderReportPdf as render } from './render-report.js';
+
+const renderReportPdf = (report: Report) => render(report, { checkUrl: null, between: () => undefined });
 
 /** Pages as poppler reads them, spaces made plain. */
-async function pagesOf(report: Parameters<typeof renderReportPdf>[0]): Promise<string[]> {
+async function pagesOf(report: Report): Promise<string[]> {
   const input = await renderReportPdf(report);
   const text = execFileSync('pdftotext', ['-layout', '-', '-'], { input, encoding: 'utf8' });
   return text.replaceAll('\u00a0', ' ').split('\f').slice(0, -1);

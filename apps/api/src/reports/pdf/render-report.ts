@@ -7,13 +7,20 @@ import { drawSection } from './section-pages.js';
 import { Sheet } from './sheet.js';
 import { page } from './theme.js';
 
+export interface RenderOptions {
+  /** Address of the check page; null until the report has a number and a code. */
+  checkUrl: string | null;
+  /** Called between sections; may throw to end early. */
+  between: () => void;
+}
+
 /**
  * Renders a report as a tagged A4 PDF with embedded fonts.
  *
  * Everything printed comes from the report's content; nothing is computed anew. A report that is not issued is
  * marked DRAFT on each page. The same report gives the same bytes.
  */
-export async function renderReportPdf(report: Report): Promise<Buffer> {
+export async function renderReportPdf(report: Report, { between }: RenderOptions): Promise<Buffer> {
   const doc = new PDFDocument({
     size: 'A4',
     margins: { left: page.left, right: page.right, top: page.top, bottom: page.bottom },
@@ -34,7 +41,10 @@ export async function renderReportPdf(report: Report): Promise<Buffer> {
   const bytes = collect(doc);
   const sheet = new Sheet(doc);
   drawCoverPage(sheet, report);
-  report.content.sections.forEach((section, index, all) => drawSection(sheet, section, index, all.length));
+  report.content.sections.forEach((section, index, all) => {
+    between();
+    drawSection(sheet, section, index, all.length);
+  });
   drawClosing(sheet, report);
   drawFurniture(sheet, report);
   doc.end();
