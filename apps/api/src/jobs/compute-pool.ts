@@ -66,7 +66,8 @@ export class ComputePool implements OnApplicationShutdown {
 
   async onApplicationShutdown(): Promise<void> {
     if (this.pools === undefined) return;
-    const pools: Piscina[] = Object.values(await this.pools);
+    const { workers, coordinators, previews, reports } = await this.pools;
+    const pools = [coordinators, workers, previews, reports];
     await Promise.all(pools.map((pool) => pool.destroy()));
   }
 
