@@ -107,7 +107,6 @@ export {
   inSeries,
   MAX_PADE_ORDER,
   padeDelay,
-  totalDelay,
   withPadeDelay,
   type LoopOutput,
 } from './transfer/compose.js';
@@ -115,6 +114,7 @@ export { expandRoots, polynomialRoots, type Root } from './transfer/polynomial-r
 export {
   frequencyResponse,
   responseOf,
+  totalDelay,
   type Response,
   type ResponsePoint,
   type StageChain,
@@ -152,6 +152,29 @@ export {
   type ShuntFilterDemand,
 } from './circuits/filter-design.js';
 export type { Complex } from './linear/complex.js';
+export { hiddenModes, naturalModes, type HiddenMode, type NaturalMode } from './transfer/natural-modes.js';
+export { groupDelay, unwrappedPhase } from './transfer/group-delay.js';
+export {
+  loopMargins,
+  type GainCrossing,
+  type LoopMargins,
+  type PhaseCrossing,
+} from './transfer/loop-margins.js';
+export { closedLoopResponse, nyquist, type NyquistResult } from './transfer/nyquist.js';
+export {
+  partialFractions,
+  type PartialFraction,
+  type PartialFractions,
+} from './transfer/partial-fractions.js';
+export type { ExponentialTerm } from './transfer/exponential-sum.js';
+export {
+  stepFigures,
+  timeResponse,
+  type StepFigures,
+  type TestInput,
+  type TimeResponse,
+} from './transfer/time-response.js';
+export { periodicTransient, type PeriodicTransient } from './transfer/periodic-transient.js';
 export { twoLevelSeries, type TwoLevelWave } from './transfer/two-level-wave.js';
 export { twoLevelSteadyState, type TwoLevelSteadyState } from './transfer/two-level-steady-state.js';
 export { routhTable, type RouthElement, type RouthRow, type RouthTable } from './transfer/routh-table.js';

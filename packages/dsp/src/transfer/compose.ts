@@ -1,5 +1,5 @@
 import { AnalysisInputError } from '../errors.js';
-import { stagesOf, type StageChain } from './frequency-response.js';
+import { stagesOf, totalDelay, type StageChain } from './frequency-response.js';
 import { addPolynomials, multiplyPolynomials, type Polynomial } from './polynomial.js';
 import { transferFunction, type TransferFunction } from './transfer-function.js';
 
@@ -19,11 +19,6 @@ export function inSeries(chain: StageChain): TransferFunction {
     multiplyPolynomials(...stages.map(({ denominator }) => denominator)),
     totalDelay(chain),
   );
-}
-
-/** Sum of the pure delays of stages in series, in seconds. */
-export function totalDelay(chain: StageChain): number {
-  return stagesOf(chain).reduce((sum, { delayS = 0 }) => sum + delayS, 0);
 }
 
 /**

@@ -1,5 +1,6 @@
 import { angleDegrees, complexAbs, type Complex } from '../linear/complex.js';
-import { trimLeadingZeros, type Polynomial } from './polynomial.js';
+import { axisPolynomial, evaluateOnAxis } from './axis-polynomial.js';
+import { trimLeadingZeros } from './polynomial.js';
 import { dcGain, type TransferFunction } from './transfer-function.js';
 
 export interface ResponsePoint {
@@ -21,6 +22,11 @@ export type Response = (frequencyHz: number) => Complex | null;
 /** The stages of a chain, one by one. */
 export function stagesOf(chain: StageChain): readonly TransferFunction[] {
   return 'numerator' in chain ? [chain] : chain;
+}
+
+/** Sum of the pure delays of stages in series, in seconds. */
+export function totalDelay(chain: StageChain): number {
+  return stagesOf(chain).reduce((sum, { delayS = 0 }) => sum + delayS, 0);
 }
 
 /** Response H(j2πf) of a stage or of stages in series at each of the frequencies, which may be 0. */
@@ -67,8 +73,8 @@ export function responseOf(chain: StageChain): Response {
 }
 
 function stageResponse(h: TransferFunction): Response {
-  const numerator = prepare(trimLeadingZeros(h.numerator));
-  const denominator = prepare(trimLeadingZeros(h.denominator));
+  const numerator = axisPolynomial(trimLeadingZeros(h.numerator));
+  const denominator = axisPolynomial(trimLeadingZeros(h.denominator));
   const excess = numerator.degree - denominator.degree;
   const gain = dcGain(h);
   const atZero = gain === null ? null : { re: gain, im: 0 };
@@ -98,48 +104,4 @@ function turned(re: number, im: number, turns: number): Complex {
   const cosine = Math.cos(angle);
   const sine = Math.sin(angle);
   return { re: re * cosine + im * sine, im: im * cosine - re * sine };
-}
-
-/** Coefficients of even and odd powers in ascending order, each with the sign of j^k. */
-interface AxisPolynomial {
-  degree: number;
-  even: Float64Array;
-  odd: Float64Array;
-}
-
-function prepare(polynomial: Polynomial): AxisPolynomial {
-  const degree = polynomial.length - 1;
-  const ofParity = (parity: number) =>
-    Float64Array.from({ length: Math.max(0, Math.ceil((degree + 1 - parity) / 2)) }, (_, i) => {
-      return (i % 2 === 0 ? 1 : -1) * polynomial[degree - parity - 2 * i]!;
-    });
-  return { degree, even: ofParity(0), odd: ofParity(1) };
-}
-
-/**
- * p(jω), above ω = 1 divided by ω^degree. Even and odd powers stay apart, so that real and imaginary part each come from a
- * real polynomial in ω², and in powers of 1/ω above ω = 1, so that high degrees do not overflow.
- */
-function evaluateOnAxis({ degree, even, odd }: AxisPolynomial, omega: number, out: Complex): void {
-  if (Math.abs(omega) > 1) {
-    const x = 1 / omega;
-    out.re = fromLowest(even, x * x) * (degree % 2 === 0 ? 1 : x);
-    out.im = fromLowest(odd, x * x) * (degree % 2 === 1 ? 1 : x);
-  } else {
-    out.re = fromHighest(even, omega * omega);
-    out.im = fromHighest(odd, omega * omega) * omega;
-  }
-}
-
-/** Horner's rule with the lowest power of ω multiplied most often. */
-function fromLowest(terms: Float64Array, square: number): number {
-  let sum = 0;
-  for (const term of terms) sum = sum * square + term;
-  return sum;
-}
-
-function fromHighest(terms: Float64Array, square: number): number {
-  let sum = 0;
-  for (let i = terms.length - 1; i >= 0; i--) sum = sum * square + terms[i]!;
-  return sum;
 }
