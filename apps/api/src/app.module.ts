@@ -16,6 +16,7 @@ import { HealthModule } from './health/health.module.js';
 import { HttpModule } from './http/http.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
 import { LimitsModule } from './limits/limits.module.js';
+import { MailsModule } from './mails/mails.module.js';
 import { NotesModule } from './notes/notes.module.js';
 import { ProjectsModule } from './projects/projects.module.js';
 import { ReadingRulesModule } from './reading-rules/reading-rules.module.js';
@@ -42,6 +43,7 @@ export class AppModule {
         ProjectsModule,
         StorageModule,
         JobsModule,
+        MailsModule,
         ReadingRulesModule,
         RecordingsModule,
         UploadingModule,

@@ -6,8 +6,8 @@ import { projectRole, projects } from './projects.js';
 import { reports } from './reports.js';
 
 /**
- * E-mail that the product sends, one row a recipient. A link with a secret is not kept: `linkPath` holds the place
- * where the secret goes, which is derived anew when the message goes out.
+ * E-mail that the product sends, one row a recipient. A link with a secret is not kept: `text` and `html` hold the place
+ * where it goes, and it is derived anew when the message goes out.
  */
 export const mails = pgTable(
   'mails',

@@ -1,13 +1,13 @@
 import { z } from 'zod';
 import { idSchema, pageOf, pageQuerySchema, timestampSchema } from './common.js';
 
-const emailSchema = z
+export const emailSchema = z
   .email()
   .max(254)
   .transform((email) => email.toLowerCase())
   .describe('E-mail address, compared without regard to case');
 
-const newPasswordSchema = z
+export const newPasswordSchema = z
   .string()
   .min(12, 'Use at least 12 characters')
   .max(256, 'Use at most 256 characters')

@@ -1,5 +1,6 @@
 import { join, resolve } from 'node:path';
 import type { Environment } from './environment.js';
+import { usualSender, type MailSettings } from './mail-settings.js';
 import { storageSettings, type StorageSettings } from './storage-settings.js';
 
 /** Settings of the process, checked at start. Nothing else reads the environment. */
@@ -31,6 +32,7 @@ export class AppConfig {
   readonly adminEmail?: string;
   readonly adminPassword?: string;
   readonly storage: StorageSettings;
+  readonly mail: MailSettings;
 
   constructor(env: Environment) {
     this.port = env.PORT;
@@ -53,6 +55,7 @@ export class AppConfig {
     this.jobsAtOnce = 2 * env.COMPUTE_THREADS;
     this.adminEmail = env.ADMIN_EMAIL?.toLowerCase();
     this.adminPassword = env.ADMIN_PASSWORD;
+    this.mail = { smtp: env.SMTP_URL ?? null, from: env.MAIL_FROM ?? usualSender(this.publicUrl) };
     this.storage = storageSettings(env, join(this.dataDir, 'storage'));
   }
 

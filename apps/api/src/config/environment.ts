@@ -1,6 +1,7 @@
 import { isIP } from 'node:net';
 import { availableParallelism, platform } from 'node:os';
 import { z } from 'zod';
+import { senderSchema, smtpUrlSchema } from './mail-settings.js';
 import { s3Variables } from './storage-settings.js';
 
 const absent = (value: unknown) => (value === '' ? undefined : value);
@@ -71,6 +72,8 @@ export const environmentSchema = z
     ),
     ADMIN_EMAIL: optional(z.email({ error: 'give an e-mail address' })),
     ADMIN_PASSWORD: optional(z.string().min(12, 'use at least 12 characters').max(256)),
+    SMTP_URL: optional(smtpUrlSchema),
+    MAIL_FROM: optional(senderSchema),
     STORAGE: z.preprocess(absent, z.enum(['disk', 's3']).default('disk')),
     S3_ENDPOINT: optional(z.url({ protocol: /^https?$/, error: 'give an http:// or https:// address' })),
     S3_BUCKET: optional(z.string()),

@@ -22,6 +22,7 @@ import { DATABASE, POOL } from '../database/database.tokens.js';
 import { clearStorageJob } from '../jobs/definitions/clear-storage.job.js';
 import { jobDefinitions } from '../jobs/definitions/index.js';
 import { JobsService } from '../jobs/jobs.service.js';
+import { SendMailHandler } from '../mails/sending/send-mail.handler.js';
 import { ReadRecordingHandler } from '../recordings/reading/read-recording.handler.js';
 import { ClearStorageHandler } from './clear-storage.handler.js';
 import { gaveUpProblem, taskFor } from './job-runner.js';
@@ -54,8 +55,9 @@ export class WorkerService implements OnApplicationBootstrap, BeforeApplicationS
     readRecording: ReadRecordingHandler,
     analyseRecording: AnalyseRecordingHandler,
     clearStorage: ClearStorageHandler,
+    sendMail: SendMailHandler,
   ) {
-    this.handlers = matchHandlers(jobDefinitions, [readRecording, analyseRecording, clearStorage]);
+    this.handlers = matchHandlers(jobDefinitions, [readRecording, analyseRecording, clearStorage, sendMail]);
   }
 
   async onApplicationBootstrap(): Promise<void> {

@@ -1,0 +1,13 @@
+import { Module } from '@nestjs/common';
+import { MailsRepository } from './mails.repository.js';
+import { MailsService } from './mails.service.js';
+import { SecretLinks } from './secret-links.js';
+import { MailTransport } from './sending/mail-transport.js';
+import { OutgoingMails } from './sending/outgoing-mails.js';
+import { SendMailHandler } from './sending/send-mail.handler.js';
+
+@Module({
+  providers: [MailsService, MailsRepository, SecretLinks, OutgoingMails, MailTransport, SendMailHandler],
+  exports: [MailsService, SecretLinks, SendMailHandler],
+})
+export class MailsModule {}
