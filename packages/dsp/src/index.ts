@@ -175,6 +175,47 @@ export {
   type TimeResponse,
 } from './transfer/time-response.js';
 export { periodicTransient, type PeriodicTransient } from './transfer/periodic-transient.js';
+export type { ComponentSpread, Figures } from './tolerance/spread.js';
+export {
+  cornerStudy,
+  MAX_CORNER_COMPONENTS,
+  type CornerRange,
+  type CornerResult,
+} from './tolerance/corners.js';
+export {
+  drawStudy,
+  MAX_DRAWS,
+  type DrawOptions,
+  type DrawRange,
+  type DrawResult,
+} from './tolerance/draws.js';
+export {
+  spreadsOf,
+  stageFigures,
+  withValues,
+  type StageSpread,
+  type StageValue,
+} from './tolerance/stage-figures.js';
+export { worstOrder, type WorstOrder } from './tolerance/worst-order.js';
+export { seededSource, type RandomSource } from './tolerance/xoshiro.js';
+export { smallestMeeting, type GoalSeekOptions, type GoalSeekResult } from './search/smallest-meeting.js';
+export {
+  calibratedResponse,
+  type CalibratedResponse,
+  type CalibrationRow,
+  type ChainResponse,
+} from './measuring-chain/calibration-table.js';
+export {
+  measuringChainResponse,
+  type MeasuringStage,
+  type StageUncertainty,
+} from './measuring-chain/chain-response.js';
+export {
+  correctLines,
+  type CorrectedLine,
+  type CorrectionOptions,
+  type RecordedLine,
+} from './measuring-chain/correct-line.js';
 export { twoLevelSeries, type TwoLevelWave } from './transfer/two-level-wave.js';
 export { twoLevelSteadyState, type TwoLevelSteadyState } from './transfer/two-level-steady-state.js';
 export { routhTable, type RouthElement, type RouthRow, type RouthTable } from './transfer/routh-table.js';
