@@ -73,7 +73,9 @@ export function nyquist(loop: StageChain): NyquistResult {
   const last = responseOf(open)(endHz);
   const bend = last === null ? 0 : Math.atan2(last.im, 1 + last.re);
   const degree = open.denominator.length - 1;
-  const closedLoopRightPoles = Math.round((degree * (Math.PI / 2) - (angle + beyond - bend)) / Math.PI);
+  const counted = Math.round((degree * (Math.PI / 2) - (angle + beyond - bend)) / Math.PI);
+  // Not −0.
+  const closedLoopRightPoles = Math.max(0, counted);
   return {
     verdict: closedLoopRightPoles === 0 ? 'stable' : 'unstable',
     closedLoopRightPoles,
