@@ -22,6 +22,7 @@ import { ProjectsModule } from './projects/projects.module.js';
 import { ReadingRulesModule } from './reading-rules/reading-rules.module.js';
 import { RecordingsModule } from './recordings/recordings.module.js';
 import { UploadingModule } from './recordings/uploading/uploading.module.js';
+import { ReportChecksModule } from './report-checks/report-checks.module.js';
 import { ReportsModule } from './reports/reports.module.js';
 import { StorageModule } from './storage/storage.module.js';
 import { UsersModule } from './users/users.module.js';
@@ -51,6 +52,7 @@ export class AppModule {
         NotesModule,
         LimitsModule,
         ReportsModule,
+        ReportChecksModule,
         ...(config.worker === 'embedded' ? [WorkerModule] : []),
         ...(config.demo ? [DemoModule] : []),
         HealthModule,

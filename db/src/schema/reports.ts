@@ -38,6 +38,8 @@ export const reports = pgTable(
     recipients: jsonb().$type<ReportRecipient[]>().notNull().default([]),
     /** The issued revision that this one replaces once it is issued; it carries the same number. */
     replacesId: uuid().references((): AnyPgColumn => reports.id),
+    /** Why a revision replaces its predecessor; null for the first. */
+    revisionReason: text(),
     /** Why it was issued in spite of calibrations that were overdue; null where none was. */
     overdueReason: text(),
     status: reportStatus().notNull().default('draft'),

@@ -46,6 +46,8 @@ export const permissions = {
   'report.write': { allow: analysis },
   'report.submit': { allow: analysis },
   'report.decide': { allow: manager },
+  'report.comment': { allow: bench },
+  'report.check': { allow: 'public' },
 } as const satisfies Record<
   string,
   {

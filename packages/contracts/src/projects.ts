@@ -8,6 +8,12 @@ const name = z.string().trim().min(1).max(160).describe('Name of the project');
 export const createProjectSchema = z.object({
   name,
   customer: z.string().trim().max(160).default('').describe('For whom the work is done'),
+  customerContact: z
+    .string()
+    .trim()
+    .max(500)
+    .default('')
+    .describe('Address of the customer and how to reach them, as reports print it'),
   description: z.string().trim().max(2000).default(''),
   defaultSettings: settingsSchema
     .prefault({ profile: 'mains', nominalFrequencyHz: 'auto' })
@@ -25,6 +31,8 @@ export const updateProjectSchema = z
   .object({
     name,
     customer: z.string().trim().max(160),
+    customerContact: z.string().trim().max(500),
+    preparerMayIssue: z.boolean(),
     description: z.string().trim().max(2000),
     defaultSettings: settingsSchema,
     comparisonLimitSetId: z.string().max(80).nullable(),
@@ -37,6 +45,8 @@ export const projectSchema = z.object({
   id: idSchema,
   name: z.string(),
   customer: z.string(),
+  customerContact: z.string(),
+  preparerMayIssue: z.boolean().describe('Whether who prepared a report may issue it too'),
   description: z.string(),
   defaultSettings: settingsSchema,
   comparisonLimitSetId: z.string().nullable(),

@@ -28,23 +28,66 @@ const fields = {
     .max(50)
     .refine((ids) => new Set(ids).size === ids.length, { message: 'Each verdict may stand once' }),
   summary: z.string().trim().max(4000).describe('What the reader needs to know first'),
+  deviations: z
+    .string()
+    .trim()
+    .max(4000)
+    .describe('Additions to, deviations or exclusions from the method (ISO/IEC 17025:2017, 7.8.2.1 n)'),
+  recipients: z
+    .array(reportRecipientSchema)
+    .max(20)
+    .refine((all) => new Set(all.map(({ email }) => email)).size === all.length, {
+      message: 'Each address may stand once',
+    })
+    .describe('To whom the issued report is sent'),
+  revisionReason: z.string().trim().max(2000).describe('Why a new revision is made; of no use for the first'),
 };
 
-export const createReportSchema = z.object({ ...fields, summary: fields.summary.default('') });
+export const createReportSchema = z.object({
+  title: fields.title,
+  verdictIds: fields.verdictIds,
+  summary: fields.summary.default(''),
+  deviations: fields.deviations.default(''),
+  recipients: fields.recipients.default([]),
+});
 export type CreateReport = z.infer<typeof createReportSchema>;
 
 export const updateReportSchema = z.object(fields).partial();
 export type UpdateReport = z.infer<typeof updateReportSchema>;
 
+const comment = z.string().trim().max(2000);
+
 /** Comment that goes with a step; needed when a report is returned. */
-export const reportStepSchema = z.object({ comment: z.string().trim().max(2000).default('') });
-export const returnReportSchema = z.object({
-  comment: z.string().trim().min(1, 'Say what must be mended').max(2000),
-});
+export const reportStepSchema = z.object({ comment: comment.default('') });
 export type ReportStep = z.infer<typeof reportStepSchema>;
+export const submitReportSchema = reportStepSchema.extend({
+  revisionReason: fields.revisionReason.optional().describe('Needed for a new revision that has none yet'),
+});
+export type SubmitReport = z.infer<typeof submitReportSchema>;
+export const returnReportSchema = z.object({ comment: comment.min(1, 'Say what must be mended') });
+export const issueReportSchema = reportStepSchema.extend({
+  overdueReason: z
+    .string()
+    .trim()
+    .min(20, 'Say in at least 20 characters why the results stand in spite of it')
+    .max(2000)
+    .optional()
+    .describe('Needed where calibration was overdue or missing: why the results stand; it is printed'),
+});
+export type IssueReport = z.infer<typeof issueReportSchema>;
+export const commentReportSchema = z.object({ comment: comment.min(1, 'Write a comment') });
 
 export const reportEventSchema = z.object({
-  kind: z.enum(['created', 'changed', 'submitted', 'returned', 'issued', 'superseded']),
+  kind: z.enum([
+    'created',
+    'changed',
+    'submitted',
+    'withdrawn',
+    'returned',
+    'issued',
+    'superseded',
+    'commented',
+  ]),
   by: personRefSchema,
   at: timestampSchema,
   comment: z.string(),
@@ -116,7 +159,9 @@ export const reportContentSchema = z.object({
     name: z.string(),
     customer: z.string(),
     customerContact: z.string(),
+    preparerMayIssue: z.boolean().describe('Whether one person may prepare and issue a report'),
   }),
+  revisionReason: z.string().nullable().describe('Why this revision was made; null for the first'),
   laboratory: laboratorySchema,
   sections: z.array(reportSectionSchema),
   result: verdictResultSchema.describe('The worst of the verdicts'),
@@ -130,10 +175,18 @@ const revisionRefSchema = z.object({
 });
 export type RevisionRef = z.infer<typeof revisionRefSchema>;
 
+/** What who issues a report should know of it; `section` counts from 0. */
+export const reportCautionSchema = z.object({
+  code: z.enum(['verdict-outdated', 'chain-not-named', 'calibration-overdue']),
+  section: z.number().int(),
+  message: z.string().describe('What is the matter, and the cure'),
+});
+export type ReportCaution = z.infer<typeof reportCautionSchema>;
+
 export const reportSchema = z.object({
   id: idSchema,
   projectId: idSchema,
-  number: z.string().nullable().describe('Given when issued: HR-0001'),
+  number: z.string().nullable().describe('Given when first issued: HR-0001; revisions keep it'),
   revision: z.number().int(),
   title: z.string(),
   summary: z.string(),
@@ -145,24 +198,33 @@ export const reportSchema = z.object({
     .string()
     .nullable()
     .describe('Why it was issued although calibrations were overdue; null where none was'),
+  revisionReason: z.string().nullable().describe('Why this revision is made; null for the first'),
   status: reportStatusSchema,
+  returned: z
+    .object({ by: personRefSchema, at: timestampSchema, comment: z.string() })
+    .nullable()
+    .describe('What must be mended: a draft that came back from review; null for any other'),
   verdictIds: z.array(idSchema),
   content: reportContentSchema.describe('Live for a draft, frozen while in review and once issued'),
+  cautions: z.array(reportCautionSchema),
   events: z.array(reportEventSchema),
   preparedBy: personRefSchema,
+  submittedBy: personRefSchema.nullable().describe('Who submitted it last'),
   issuedBy: personRefSchema.nullable(),
   issuedAt: timestampSchema.nullable(),
+  isIssuedByPreparer: z.boolean().describe('Prepared and issued by the same person, as the project allowed'),
   pdfSha256: z.string().nullable(),
   jsonSha256: z.string().nullable(),
   csvSha256: z.string().nullable(),
   checkCode: z.string().nullable().describe('With the number it opens the public check page'),
+  checkUrl: z.string().nullable().describe('Address of the public check page of this revision'),
   createdAt: timestampSchema,
   updatedAt: timestampSchema,
 });
 export type Report = z.infer<typeof reportSchema>;
 
 export const reportListItemSchema = reportSchema
-  .omit({ content: true, events: true, verdictIds: true, recipients: true })
+  .omit({ content: true, events: true, cautions: true, verdictIds: true, recipients: true })
   .extend({ result: verdictResultSchema, sections: z.number().int() });
 export type ReportListItem = z.infer<typeof reportListItemSchema>;
 export const reportPageSchema = pageOf(reportListItemSchema);
@@ -170,3 +232,17 @@ export const reportPageSchema = pageOf(reportListItemSchema);
 /** Path of the public check page of an issued report, as its PDF and its QR code name it. */
 export const reportCheckPath = (number: string, code: string): string =>
   `/check/${encodeURIComponent(number)}/${encodeURIComponent(code)}`;
+
+/** What the public check page tells of an issued revision, and nothing else. */
+export const reportCheckSchema = z.object({
+  number: z.string(),
+  revision: z.number().int(),
+  issuedAt: timestampSchema,
+  state: z.enum(['current', 'superseded']),
+  newest: z
+    .object({ revision: z.number().int(), issuedAt: timestampSchema })
+    .nullable()
+    .describe('The revision that is current now; null where this one is'),
+  pdfSha256: z.string().describe('SHA-256 of the PDF that was issued, in hexadecimal'),
+});
+export type ReportCheck = z.infer<typeof reportCheckSchema>;

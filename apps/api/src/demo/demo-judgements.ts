@@ -99,6 +99,11 @@ export class DemoJudgements {
     }
     const { of, ...words } = work.report;
     const ids = of.flatMap((fileName) => verdictIds.get(fileName) ?? []);
-    await this.reports.create(analyst, projectId, { ...words, verdictIds: ids });
+    await this.reports.create(analyst, projectId, {
+      ...words,
+      verdictIds: ids,
+      deviations: '',
+      recipients: [],
+    });
   }
 }

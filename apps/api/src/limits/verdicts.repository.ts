@@ -30,7 +30,7 @@ export class VerdictsRepository {
   }
 
   /** Those of the ids whose recording was read or scaled anew since, with its number. */
-  async outdated(tx: Tx, ids: readonly string[]) {
+  async outdated(tx: Database | Tx, ids: readonly string[]) {
     return tx
       .select({ id: verdicts.id, number: recordings.number })
       .from(verdicts)

@@ -87,6 +87,16 @@ export class VerdictsService {
     throw problem(409, 'verdict-outdated', detail, errors);
   }
 
+  /** Those of the ids whose recording was read or scaled anew since, with the cure. */
+  async outdated(ids: readonly string[]): Promise<{ id: string; message: string }[]> {
+    if (ids.length === 0) return [];
+    const rows = await this.repository.outdated(this.database, ids);
+    return rows.map(({ id, number }) => ({
+      id,
+      message: `${recordingNumber(number)} was read or scaled anew since this verdict; ${cure}, and put that in its place`,
+    }));
+  }
+
   private async subject(
     analysisId: string,
     { channel: index, limitSetId }: CreateVerdict,

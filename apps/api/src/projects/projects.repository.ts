@@ -12,7 +12,14 @@ export type NewProject = typeof projects.$inferInsert;
 export type ProjectChange = Partial<
   Pick<
     NewProject,
-    'name' | 'customer' | 'description' | 'defaultSettings' | 'comparisonLimitSetId' | 'archivedAt'
+    | 'name'
+    | 'customer'
+    | 'customerContact'
+    | 'description'
+    | 'defaultSettings'
+    | 'comparisonLimitSetId'
+    | 'preparerMayIssue'
+    | 'archivedAt'
   >
 >;
 export type ProjectRow = Awaited<ReturnType<ProjectsRepository['list']>>[number];
@@ -88,6 +95,8 @@ export class ProjectsRepository {
         id: projects.id,
         name: projects.name,
         customer: projects.customer,
+        customerContact: projects.customerContact,
+        preparerMayIssue: projects.preparerMayIssue,
         description: projects.description,
         defaultSettings: projects.defaultSettings,
         comparisonLimitSetId: projects.comparisonLimitSetId,
@@ -96,7 +105,11 @@ export class ProjectsRepository {
         role: members.role,
         recordings: this.database.$count(recordings, eq(recordings.projectId, projects.id)),
         members: this.database.$count(sql`${members} counted`, sql`counted.project_id = ${projects.id}`),
-        reports: this.database.$count(reports, eq(reports.projectId, projects.id)),
+        // Guests see what was issued alone, and are told no more by its number.
+        reports: this.database.$count(
+          reports,
+          sql`${reports.projectId} = ${projects.id} and (${members.role} is distinct from 'guest' or ${reports.status} in ('issued', 'superseded'))`,
+        ),
       })
       .from(projects)
       .leftJoin(members, and(eq(members.projectId, projects.id), eq(members.userId, userId)));

@@ -86,6 +86,8 @@ function toProject(row: ProjectRow): Project {
     id: row.id,
     name: row.name,
     customer: row.customer,
+    customerContact: row.customerContact,
+    preparerMayIssue: row.preparerMayIssue,
     description: row.description,
     defaultSettings: row.defaultSettings,
     comparisonLimitSetId: row.comparisonLimitSetId,

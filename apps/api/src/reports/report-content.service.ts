@@ -21,15 +21,18 @@ export class ReportContentService {
   ) {}
 
   /** The content as of now, one section per verdict in the order given. */
-  async gather(project: ReportContent['project'], verdictIds: readonly string[]): Promise<ReportContent> {
-    const verdicts = await this.verdicts.ofProject(project.id, verdictIds);
+  async gather(
+    head: Pick<ReportContent, 'project' | 'revisionReason'>,
+    verdictIds: readonly string[],
+  ): Promise<ReportContent> {
+    const verdicts = await this.verdicts.ofProject(head.project.id, verdictIds);
     const sections: ReportSection[] = [];
     for (const verdict of verdicts) {
       if (verdict) sections.push(await this.section(verdict));
     }
     const laboratory = { name: '', address: '', contact: '', accreditation: '' };
     return {
-      project,
+      ...head,
       laboratory,
       sections,
       result: worstResult(sections.map((section) => section.verdict.result)),

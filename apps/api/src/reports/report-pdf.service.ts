@@ -3,7 +3,7 @@ import { createHash } from 'node:crypto';
 import { problem } from '../common/problem.js';
 import { Storage } from '../storage/storage.js';
 import { ReportRendering } from './rendering/report-rendering.service.js';
-import { reportNumber } from './report-view.js';
+import { reportNumber } from './report-number.js';
 import { ReportsRepository } from './reports.repository.js';
 import { ReportsService } from './reports.service.js';
 

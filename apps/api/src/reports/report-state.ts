@@ -7,12 +7,12 @@ import {
 import { problem } from '../common/problem.js';
 
 /** What can be done with a report in a state. */
-export type ReportAction = 'change' | 'delete' | 'submit' | 'return' | 'issue';
+export type ReportAction = 'change' | 'delete' | 'submit' | 'withdraw' | 'return' | 'issue' | 'revise';
 
 const possible: Record<ReportStatus, readonly ReportAction[]> = {
   draft: ['change', 'delete', 'submit'],
-  'in-review': ['return', 'issue'],
-  issued: [],
+  'in-review': ['withdraw', 'return', 'issue'],
+  issued: ['revise'],
   superseded: [],
 };
 
@@ -25,9 +25,9 @@ const statusWords: Record<ReportStatus, string> = {
 
 const sentence: Record<ReportStatus, string> = {
   draft: 'it can be changed, deleted or submitted for review',
-  'in-review': 'a manager can return or issue it',
-  issued: 'it can only be read',
-  superseded: 'it can only be read',
+  'in-review': 'its preparer can withdraw it, a manager can return or issue it',
+  issued: 'it can only be read, or replaced by a new revision',
+  superseded: 'it can only be read; the revision that replaced it is the one to go on from',
 };
 
 /** @throws a 409 problem that says what is possible when the report's state does not allow the action */
@@ -37,7 +37,8 @@ export function requireAction(status: ReportStatus, action: ReportAction): void 
   throw problem(409, 'wrong-state', detail);
 }
 
-const settled: readonly ReportStatus[] = ['issued', 'superseded'];
+/** States in which a report is frozen. */
+export const settled: readonly ReportStatus[] = ['issued', 'superseded'];
 
 /** States in which a person sees a report: guests read for the customer and see what was issued alone. */
 export const visibleStatuses = (role: ProjectRole | null): readonly ReportStatus[] =>

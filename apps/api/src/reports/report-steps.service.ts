@@ -1,33 +1,39 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { Report } from '@overtally/contracts';
+import type { Report, ReportEvent, SubmitReport } from '@overtally/contracts';
 import type { Database } from '@overtally/db';
+import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
-import { Storage } from '../storage/storage.js';
-import { ReportRendering } from './rendering/report-rendering.service.js';
-import { requireAction } from './report-state.js';
-import { reportNumber } from './report-view.js';
+import { requireAction, type ReportAction } from './report-state.js';
+import { isPreparer } from './report-view.js';
 import { ReportsRepository } from './reports.repository.js';
 import { ReportsService } from './reports.service.js';
 
-/** The way of a report from draft through review to issue. */
+/** The way of a report from draft into review and back; what is said of it on the way. */
 @Injectable()
 export class ReportStepsService {
   constructor(
     @Inject(DATABASE) private readonly database: Database,
     private readonly repository: ReportsRepository,
     private readonly reports: ReportsService,
-    private readonly storage: Storage,
-    private readonly rendering: ReportRendering,
   ) {}
 
-  /** Into review, with what it says kept, so that what is reviewed is what will be issued. */
-  async submit(user: SignedInUser, id: string, comment: string): Promise<Report> {
+  /**
+   * Into review, with what it says kept, so that what is reviewed is what will be issued.
+   * @throws 422 for a new revision that nobody says the reason of
+   */
+  async submit(user: SignedInUser, id: string, { comment, ...input }: SubmitReport): Promise<Report> {
     const draft = await this.reports.get(id);
     requireAction(draft.status, 'submit');
+    const revisionReason = draft.replaces ? input.revisionReason || draft.revisionReason : null;
+    if (draft.replaces && !revisionReason) {
+      const message = 'Say why the report is revised; the new revision prints it';
+      throw problem(422, 'revision-reason-missing', message, [{ path: 'revisionReason', message }]);
+    }
+    const content = { ...draft.content, revisionReason };
     await this.database.transaction(async (tx) => {
       await this.reports.lockAsRead(tx, draft, 'submit');
-      await this.repository.update(tx, id, { status: 'in-review', content: draft.content });
+      await this.repository.update(tx, id, { status: 'in-review', content, revisionReason });
       await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'submitted', comment });
     });
     return this.reports.get(id);
@@ -35,44 +41,39 @@ export class ReportStepsService {
 
   /** Back to the author as a draft, with what must be mended. */
   async return(user: SignedInUser, id: string, comment: string): Promise<Report> {
-    await this.database.transaction(async (tx) => {
-      await this.reports.lockFor(tx, id, 'return');
-      await this.repository.update(tx, id, { status: 'draft', content: null });
-      await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'returned', comment });
-    });
-    return this.reports.get(id);
+    return this.backToDraft(user, id, { action: 'return', kind: 'returned', comment });
   }
 
   /**
-   * Gives the report as reviewed its number and keeps its PDF with the SHA-256.
-   *
-   * The PDF is stored before the commit, so that an issued report always has one; a number whose transaction
-   * fails is given out again, so that numbers have no gaps.
+   * Out of review as a draft again, by who brought it there.
+   * @throws 403 for anybody but who prepared or submitted it
    */
-  async issue(user: SignedInUser, id: string, comment: string): Promise<Report> {
-    const reviewed = await this.reports.get(id);
-    requireAction(reviewed.status, 'issue');
+  async withdraw(user: SignedInUser, id: string, comment: string): Promise<Report> {
+    if (!isPreparer(await this.reports.preparers(id), user.id)) {
+      const detail = 'Who prepared or submitted the report withdraws it; a manager can return it instead';
+      throw problem(403, 'not-the-preparer', detail);
+    }
+    return this.backToDraft(user, id, { action: 'withdraw', kind: 'withdrawn', comment });
+  }
+
+  /** Puts words beside a report in whatever state; they change nothing of it. */
+  async comment(user: SignedInUser, id: string, comment: string): Promise<Report> {
+    await this.database.transaction((tx) =>
+      this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'commented', comment }),
+    );
+    return this.reports.get(id);
+  }
+
+  private async backToDraft(
+    user: SignedInUser,
+    id: string,
+    step: { action: ReportAction; kind: ReportEvent['kind']; comment: string },
+  ): Promise<Report> {
+    const { action, ...event } = step;
     await this.database.transaction(async (tx) => {
-      const row = await this.reports.lockAsRead(tx, reviewed, 'issue');
-      const number = await this.repository.nextNumber(tx, row.projectId);
-      const issuedAt = new Date();
-      const { pdf } = await this.rendering.forms(
-        {
-          ...reviewed,
-          number: reportNumber(number),
-          status: 'issued',
-          issuedBy: { id: user.id, name: user.name },
-          issuedAt: issuedAt.toISOString(),
-        },
-        ['pdf'],
-      );
-      const pdfKey = `reports/${id}/revision-${row.revision}.pdf`;
-      const { sha256: pdfSha256 } = await this.storage.put(pdfKey, pdf);
-      await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'issued', comment });
-      await this.repository.update(tx, id, {
-        ...{ number, issuedAt, pdfKey, pdfSha256, status: 'issued' },
-        ...{ content: reviewed.content, issuedById: user.id, updatedAt: issuedAt },
-      });
+      await this.reports.lockFor(tx, id, action);
+      await this.repository.update(tx, id, { status: 'draft', content: null });
+      await this.repository.addEvent(tx, { reportId: id, byId: user.id, ...event });
     });
     return this.reports.get(id);
   }

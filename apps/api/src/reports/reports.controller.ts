@@ -42,9 +42,8 @@ export class ReportsController {
   @Get('reports/:id')
   @RequirePermission('report.read', { resource: 'report' })
   @ZodResponse({ status: 200, type: ReportDto })
-  async read(@ProjectAccess() { role }: Access, @Param('id') id: string) {
-    await this.reports.requireVisible(id, role);
-    return this.reports.get(id);
+  read(@ProjectAccess() { role }: Access, @Param('id') id: string) {
+    return this.reports.getFor(role, id);
   }
 
   @Patch('reports/:id')

@@ -4,9 +4,11 @@ import { LimitsModule } from '../limits/limits.module.js';
 import { NotesModule } from '../notes/notes.module.js';
 import { RecordingsModule } from '../recordings/recordings.module.js';
 import { ReportContentService } from './report-content.service.js';
+import { ReportIssueService } from './report-issue.service.js';
 import { ReportPdfController } from './report-pdf.controller.js';
 import { ReportPdfService } from './report-pdf.service.js';
 import { ReportPictures } from './report-pictures.service.js';
+import { ReportRevisionsService } from './report-revisions.service.js';
 import { ReportStepsController } from './report-steps.controller.js';
 import { ReportStepsService } from './report-steps.service.js';
 import { ReportsController } from './reports.controller.js';
@@ -22,6 +24,8 @@ import { ReportsService } from './reports.service.js';
     ReportsRepository,
     ReportContentService,
     ReportStepsService,
+    ReportIssueService,
+    ReportRevisionsService,
     ReportRendering,
     ReportPictures,
     ReportPdfService,

@@ -1,11 +1,13 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { ReportEvent, ReportStatus, RevisionRef, VerdictResult } from '@overtally/contracts';
+import type { PersonRef, ReportEvent, ReportStatus, RevisionRef, VerdictResult } from '@overtally/contracts';
 import { schema, type Database, type Tx } from '@overtally/db';
 import { and, asc, desc, eq, getTableColumns, inArray, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import { DATABASE } from '../database/database.tokens.js';
 
-const { projects, reportEvents, reports, reportVerdicts, users, verdicts } = schema;
+const { projects, reportEvents, reportReferences, reports, reportVerdicts, users, verdicts } = schema;
+
+type ReportReferenceKind = (typeof reportReferences.$inferInsert)['kind'];
 
 const preparers = alias(users, 'preparers');
 const issuers = alias(users, 'issuers');
@@ -17,6 +19,16 @@ const joined = {
   projectName: projects.name,
   customer: projects.customer,
   customerContact: projects.customerContact,
+  preparerMayIssue: projects.preparerMayIssue,
+  submittedBy: sql<PersonRef | null>`(
+    select json_build_object('id', u.id, 'name', u.name) from ${reportEvents} e join ${users} u on u.id = e.by_id
+    where e.report_id = ${reports.id} and e.kind = 'submitted' order by e.created_at desc limit 1)`,
+  lastStep: sql<LastStep | null>`(
+    select json_build_object('kind', e.kind, 'by', json_build_object('id', u.id, 'name', u.name), 'at', e.created_at,
+      'comment', e.comment)
+    from ${reportEvents} e join ${users} u on u.id = e.by_id
+    where e.report_id = ${reports.id} and e.kind in ('submitted', 'returned', 'withdrawn')
+    order by e.created_at desc limit 1)`,
   replaces: sql<RevisionRef | null>`(
     select json_build_object('id', r.id, 'revision', r.revision, 'status', r.status) from ${reports} r
     where r.id = ${reports.replacesId})`,
@@ -30,6 +42,9 @@ const joined = {
     select json_agg(v.result order by rv.position) from ${reportVerdicts} rv
     join ${verdicts} v on v.id = rv.verdict_id where rv.report_id = ${reports.id}), '[]')`,
 };
+
+/** What last moved a report into review or out of it. */
+type LastStep = Pick<ReportEvent, 'by' | 'at' | 'comment'> & { kind: 'submitted' | 'returned' | 'withdrawn' };
 
 export type LockedReport = typeof reports.$inferSelect;
 export type ReportRow = NonNullable<Awaited<ReturnType<ReportsRepository['find']>>>;
@@ -47,6 +62,17 @@ export class ReportsRepository {
       .innerJoin(projects, eq(projects.id, reports.projectId))
       .innerJoin(preparers, eq(preparers.id, reports.preparedById))
       .leftJoin(issuers, eq(issuers.id, reports.issuedById))
+      .where(eq(reports.id, id));
+    return row;
+  }
+
+  /** Who had the report in hand before its review, and whether that person may issue it. */
+  async preparers(id: string) {
+    const { preparerMayIssue, submittedBy } = joined;
+    const [row] = await this.database
+      .select({ preparedById: reports.preparedById, submittedBy, preparerMayIssue })
+      .from(reports)
+      .innerJoin(projects, eq(projects.id, reports.projectId))
       .where(eq(reports.id, id));
     return row;
   }
@@ -96,6 +122,11 @@ export class ReportsRepository {
     return row;
   }
 
+  /** Whether there is a revision that replaces the report, or will. */
+  async isReplaced(tx: Tx, id: string): Promise<boolean> {
+    return (await tx.$count(reports, eq(reports.replacesId, id))) > 0;
+  }
+
   async insert(tx: Tx, row: typeof reports.$inferInsert): Promise<string> {
     const [made] = await tx.insert(reports).values(row).returning({ id: reports.id });
     return made!.id;
@@ -124,6 +155,24 @@ export class ReportsRepository {
 
   async delete(tx: Tx, id: string): Promise<void> {
     await tx.delete(reports).where(eq(reports.id, id));
+  }
+
+  /** The number that the next report of a project would get, if no other takes it meanwhile. */
+  async numberAhead(projectId: string): Promise<number> {
+    const [counter] = await this.database
+      .select({ last: projects.lastReportNumber })
+      .from(projects)
+      .where(eq(projects.id, projectId));
+    return counter!.last + 1;
+  }
+
+  async addReferences(
+    tx: Tx,
+    reportId: string,
+    references: readonly { targetId: string; kind: ReportReferenceKind }[],
+  ): Promise<void> {
+    if (references.length === 0) return;
+    await tx.insert(reportReferences).values(references.map((reference) => ({ reportId, ...reference })));
   }
 
   /** The next report number of a project; one that is not committed is given out again. */

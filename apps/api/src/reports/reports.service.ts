@@ -9,16 +9,18 @@ import type {
 } from '@overtally/contracts';
 import type { Database, Tx } from '@overtally/db';
 import { z } from 'zod';
-import { completed } from '../analyses/completed-channel.js';
 import { decodeCursor, pageOfRows } from '../common/paging.js';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
+import { AppConfig } from '../config/app-config.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { VerdictsService } from '../limits/verdicts.service.js';
+import { completedContent } from './completed-content.js';
+import { cautionsOf } from './report-cautions.js';
 import { ReportContentService } from './report-content.service.js';
 import { requireAction, visibleStatuses, type ReportAction } from './report-state.js';
-import { toListItem, toReport } from './report-view.js';
-import { ReportsRepository, type LockedReport } from './reports.repository.js';
+import { asSeenBy, toListItem, toReport } from './report-view.js';
+import { ReportsRepository, type LockedReport, type ReportRow } from './reports.repository.js';
 
 const placeSchema = z.tuple([z.iso.datetime(), z.uuid()]);
 
@@ -36,17 +38,27 @@ export class ReportsService {
     private readonly repository: ReportsRepository,
     private readonly verdicts: VerdictsService,
     private readonly contents: ReportContentService,
+    private readonly config: AppConfig,
   ) {}
 
   /** A report with its content: live for a draft, as frozen by submission for any other. */
   async get(id: string): Promise<Report> {
     const [row, events] = await Promise.all([this.repository.find(id), this.repository.eventsOf(id)]);
     if (!row) throw noSuchReport();
-    const { projectId, projectName, customer, customerContact } = row;
-    const project = { id: projectId, name: projectName, customer, customerContact };
-    const frozen = row.content && withCompletedChannels(row.content);
-    const content = frozen ?? (await this.contents.gather(project, row.verdictIds));
-    return toReport(row, content, events);
+    const content = row.content ? completedContent(row.content) : await this.gather(row);
+    const isOpen = row.status === 'draft' || row.status === 'in-review';
+    const outdated = isOpen ? await this.verdicts.outdated(row.verdictIds) : [];
+    const cautions = cautionsOf(content, outdated);
+    return toReport(row, { content, cautions, events }, this.config.publicUrl);
+  }
+
+  /**
+   * The report as a person of this role sees it.
+   * @throws 404 when there is no such report for a person of this role
+   */
+  async getFor(role: ProjectRole | null, id: string): Promise<Report> {
+    await this.requireVisible(id, role);
+    return asSeenBy(role, await this.get(id));
   }
 
   /** @throws 404 when there is no such report for a person of this role */
@@ -55,13 +67,25 @@ export class ReportsService {
     if (!status || !visibleStatuses(role).includes(status)) throw noSuchReport();
   }
 
+  /** Who prepared and who last submitted a report, and whether they may issue it by the rule of the project. */
+  async preparers(id: string) {
+    const row = await this.repository.preparers(id);
+    if (!row) throw noSuchReport();
+    return row;
+  }
+
   /** Reports of a project that a person of this role sees, the newest first. */
   async list(projectId: string, role: ProjectRole | null, { status, cursor, limit }: ReportQuery) {
     const place = decodeCursor(cursor, placeSchema);
     const after = place && { createdAt: place[0], id: place[1] };
     const statuses = visibleStatuses(role).filter((visible) => status === undefined || visible === status);
     const rows = await this.repository.list(projectId, statuses, after, limit + 1);
-    return pageOfRows(rows, limit, (row) => [row.createdAt.toISOString(), row.id], toListItem);
+    return pageOfRows(
+      rows,
+      limit,
+      (row) => [row.createdAt.toISOString(), row.id],
+      (row) => asSeenBy(role, toListItem(row, this.config.publicUrl)),
+    );
   }
 
   async create(user: SignedInUser, projectId: string, input: CreateReport): Promise<Report> {
@@ -121,6 +145,12 @@ export class ReportsService {
     return row;
   }
 
+  private gather(row: ReportRow): Promise<ReportContent> {
+    const { projectId, projectName, customer, customerContact, preparerMayIssue, revisionReason } = row;
+    const project = { id: projectId, name: projectName, customer, customerContact, preparerMayIssue };
+    return this.contents.gather({ project, revisionReason }, row.verdictIds);
+  }
+
   private async requireVerdicts(projectId: string, ids: readonly string[]): Promise<void> {
     const found = await this.verdicts.ofProject(projectId, ids);
     const errors = found.flatMap((verdict, index) =>
@@ -137,14 +167,3 @@ export class ReportsService {
 }
 
 const noSuchReport = () => problem(404, 'not-found', 'There is no such report');
-
-/** Frozen content may be older than the engine of today, whose figures it then lacks. */
-function withCompletedChannels(content: ReportContent): ReportContent {
-  const sections = content.sections.map((section) => ({
-    ...section,
-    waveform: section.waveform ?? null,
-    distortion: section.distortion ?? null,
-    analysis: { ...section.analysis, channel: completed(section.analysis.channel) },
-  }));
-  return { ...content, sections };
-}

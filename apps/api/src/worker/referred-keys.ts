@@ -51,7 +51,7 @@ export async function referredKeys(database: Database, keys: readonly string[]):
       .from(analysisChannels)
       .where(inArray(analysisChannels.analysisId, ids(computed, 1))),
     database
-      .select({ key: reports.pdfKey })
+      .select({ pdf: reports.pdfKey, json: reports.jsonKey, csv: reports.csvKey })
       .from(reports)
       .where(inArray(reports.id, ids(issued, 0))),
   ]);
@@ -62,7 +62,7 @@ export async function referredKeys(database: Database, keys: readonly string[]):
     ...sourceRows.map(({ key }) => key),
     ...sampleRows.flatMap(({ samples, pyramid }) => [samples, pyramid]),
     ...arrayRows.flatMap(({ spectrum, series }) => (series === null ? [spectrum] : [spectrum, series])),
-    ...reportRows.flatMap(({ key }) => (key === null ? [] : [key])),
+    ...reportRows.flatMap(({ pdf, json, csv }) => [pdf, json, csv].filter((key) => key !== null)),
     ...readings.filter(({ parts }) => beingRead.has(parts[0]!)).map(({ key }) => key),
     ...computed.filter(({ parts }) => beingComputed.has(parts[1]!)).map(({ key }) => key),
   ]);

@@ -42,6 +42,8 @@ export function sampleReport(status: ReportStatus, change: Partial<Report> = {})
     ...{ summary: 'Over at order 3.', number: isIssued ? 'HR-0001' : null, verdictIds: [verdict.id] },
     content: {
       project: sampleProject(),
+      revisionReason: null,
+      laboratory: { name: 'Brackwater bench', address: '', contact: '', accreditation: '' },
       sections: [
         {
           verdict,
@@ -52,11 +54,15 @@ export function sampleReport(status: ReportStatus, change: Partial<Report> = {})
             channel: sampleChannel(),
           },
           notes: [],
+          ...{ equipment: null, operatingMode: null, chain: null, conditions: {} },
         },
       ],
       result: 'fail',
     },
     events: [{ kind: 'created', by: analyst, at: moment, comment: '' }],
+    ...{ deviations: '', recipients: [], replaces: null, replacedBy: null, overdueReason: null },
+    ...{ revisionReason: null, returned: null, cautions: [], submittedBy: null, isIssuedByPreparer: false },
+    ...{ jsonSha256: null, csvSha256: null, checkCode: null, checkUrl: null },
     ...{ preparedBy: analyst, issuedBy: isIssued ? analyst : null, issuedAt: isIssued ? moment : null },
     pdfSha256: isIssued ? 'ab'.repeat(32) : null,
     ...{ createdAt: moment, updatedAt: moment },

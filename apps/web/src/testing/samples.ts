@@ -33,6 +33,8 @@ export const sampleProject = (change: Partial<Project> = {}): Project =>
     id: sampleId(10),
     name: 'Halden kiln and lighting, 2026',
     customer: 'Halden Ceramics',
+    customerContact: '',
+    preparerMayIssue: false,
     description: '',
     defaultSettings: { profile: 'mains', nominalFrequencyHz: 'auto' },
     comparisonLimitSetId: null,

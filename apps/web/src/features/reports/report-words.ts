@@ -12,9 +12,11 @@ export const eventWords: Record<ReportEvent['kind'], string> = {
   created: 'Draft made',
   changed: 'Changed',
   submitted: 'Submitted for review',
+  withdrawn: 'Withdrawn from review',
   returned: 'Returned',
   issued: 'Issued',
   superseded: 'Superseded',
+  commented: 'Comment',
 };
 
 /** What a note speaks of: "Order 15", "151.2 Hz", "from 1.20 s to 1.40 s". */

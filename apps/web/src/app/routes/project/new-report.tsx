@@ -48,7 +48,10 @@ export function Component() {
         </EmptyState>
       ) : (
         <ReportForm
-          initial={{ title: '', summary: '', verdictIds: chosen(search, judged.data.verdicts) }}
+          initial={{
+            ...{ title: '', summary: '', deviations: '', recipients: [] },
+            verdictIds: chosen(search, judged.data.verdicts),
+          }}
           verdicts={judged.data.verdicts}
           recordings={judged.data.recordings}
           submitLabel="Create the draft"

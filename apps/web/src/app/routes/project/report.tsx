@@ -66,10 +66,10 @@ function EditDraft({ report, onDone }: { report: Report; onDone: () => void }) {
   const { update } = useReportChanges(report);
   if (judged.error) return <ErrorState error={judged.error} onRetry={judged.refetch} />;
   if (!judged.data) return <LoadingState label="Loading the verdicts" />;
-  const { title, summary, verdictIds } = report;
+  const { title, summary, deviations, recipients, verdictIds } = report;
   return (
     <ReportForm
-      initial={{ title, summary, verdictIds }}
+      initial={{ title, summary, deviations, recipients, verdictIds }}
       verdicts={judged.data.verdicts}
       recordings={judged.data.recordings}
       submitLabel="Save the draft"

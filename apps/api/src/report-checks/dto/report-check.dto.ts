@@ -1,0 +1,4 @@
+import { reportCheckSchema } from '@overtally/contracts';
+import { createZodDto } from 'nestjs-zod';
+
+export class ReportCheckDto extends createZodDto(reportCheckSchema) {}

@@ -1,0 +1,1 @@
+ALTER TABLE "reports" ADD COLUMN "revision_reason" text;
