@@ -196,7 +196,7 @@ export {
   type StageSpread,
   type StageValue,
 } from './tolerance/stage-figures.js';
-export { worstOrder, type WorstOrder } from './tolerance/worst-order.js';
+export { marginToLimits, worstOrder, type WorstOrder } from './tolerance/worst-order.js';
 export { seededSource, type RandomSource } from './tolerance/xoshiro.js';
 export { smallestMeeting, type GoalSeekOptions, type GoalSeekResult } from './search/smallest-meeting.js';
 export {

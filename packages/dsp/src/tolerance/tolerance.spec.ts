@@ -4,7 +4,8 @@ import { cornerStudy, MAX_CORNER_COMPONENTS } from './corners.js';
 import { drawStudy } from './draws.js';
 import type { ComponentSpread } from './spread.js';
 import { spreadsOf, stageFigures } from './stage-figures.js';
-import { worstOrder } from './worst-order.js';
+import { smallestMeeting } from '../search/smallest-meeting.js';
+import { marginToLimits, worstOrder } from './worst-order.js';
 
 const spread = (nominal: number, tolerancePercent: number, name = 'R'): ComponentSpread => ({
   ...{ name, nominal, tolerancePercent },
@@ -122,5 +123,27 @@ describe('worstOrder', () => {
   it('is the one nearest to its limit', () => {
     expect(worstOrder([3, 9, null, 1], [4, 10, 1, null])).toEqual({ index: 1, ratio: 0.9 });
     expect(worstOrder([1], [null])).toBeNull();
+  });
+});
+
+describe('marginToLimits', () => {
+  it('is what the worst figure has left', () => {
+    expect(marginToLimits([3, 9, 7], [4, 10, null])).toBeCloseTo(0.1, 12);
+    expect(marginToLimits([NaN, 1], [1, 1])).toBeNaN();
+    expect(marginToLimits([5], [null])).toBe(Infinity);
+  });
+
+  it('finds the smallest capacitor that keeps an order below its limit', () => {
+    const specs: StageSpec[] = [
+      { kind: 'circuit', circuit: 'rc-low-pass', values: { resistanceOhm: 1000, capacitanceF: 1e-6 } },
+    ];
+    const input = { frequencyHz: 50, dc: 0, components: [{ order: 5, rms: 10, phaseDeg: null }] };
+    const figures = stageFigures(specs, [{ stage: 0, parameter: 'capacitanceF' }], input);
+    const result = smallestMeeting((farad) => marginToLimits(figures(Float64Array.of(farad)), [2]), {
+      ...{ from: 1e-9, to: 1e-3, scale: 'logarithmic' },
+    });
+    // 10/√(1 + (ωRC)²) = 2: ωRC = √24.
+    const wanted = Math.sqrt(24) / (2 * Math.PI * 250 * 1000);
+    expect(result).toMatchObject({ isFound: true, value: expect.closeTo(wanted, 13) });
   });
 });

@@ -24,3 +24,17 @@ export function worstOrder(
     return worst === null || ratio > worst.ratio ? { index, ratio } : worst;
   }, null);
 }
+
+/**
+ * How far figures stay below their limits, as the smallest share of a limit that is left: 0.1 when the worst stands at 90 %
+ * of it, negative when it is exceeded. For `smallestMeeting` and the condition of `drawStudy`.
+ *
+ * @returns NaN when a figure with a limit does not exist; Infinity without limits
+ */
+export function marginToLimits(figures: ArrayLike<number>, limits: readonly (number | null)[]): number {
+  return limits.reduce<number>((least, limit, i) => {
+    if (limit === null || !(limit > 0)) return least;
+    const left = 1 - (figures[i] ?? NaN) / limit;
+    return Number.isNaN(left) || left < least ? left : least;
+  }, Infinity);
+}

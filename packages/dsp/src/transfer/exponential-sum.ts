@@ -53,35 +53,63 @@ export function roundingOf(terms: readonly ExponentialTerm[]): number {
   }, 0);
 }
 
-const STEPS_PER_RADIAN = 10;
+const STEPS_PER_RADIAN = 20;
 const MAX_STEPS = 400_000;
+/** A term counts while it can reach this share of the level looked for. */
+const COUNTS = 1e-3;
 
 /**
- * Last time at which a decaying sum is larger in magnitude than a band. Beyond the time at which the envelopes of the terms
- * together fit into the band it cannot be; from there the sum is walked backwards in steps of a tenth of a radian of the
- * fastest term that still counts, and the last crossing is found by bisection.
+ * Times from 0 to an end between which a decaying sum cannot leave and reach a level unseen: steps of a twentieth of a radian
+ * (of a twentieth of a time constant for a real pole) of the fastest term that still counts.
  *
- * @param terms all with negative real part of the pole
- * @returns 0 when it never is; null when a term does not decay or the walk would take too many steps
+ * @returns null when that would take more than 400 000 steps
+ */
+export function scanTimes(terms: readonly ExponentialTerm[], end: number, level: number): number[] | null {
+  const least = (COUNTS * level) / Math.max(1, terms.length);
+  // Each term counts until its envelope, past its top, has fallen below the least; the fastest come first.
+  const spans = terms
+    .map((term) => ({ rate: complexAbs(term.pole), until: timeBelow(term, least) }))
+    .sort((a, b) => b.rate - a.rate);
+  const slowest = end > 0 ? 1 / end : 0;
+  const times = [0];
+  for (let t = 0; t < end;) {
+    const rate = Math.max(slowest, spans.find(({ until }) => until > t)?.rate ?? 0);
+    t = Math.min(end, t + 1 / (STEPS_PER_RADIAN * rate));
+    times.push(t);
+    if (times.length > MAX_STEPS) return null;
+  }
+  return times;
+}
+
+/** Time, past the top of its envelope, after which a term stays below a value. */
+function timeBelow(term: ExponentialTerm, value: number): number {
+  const decay = -term.pole.re;
+  let to = term.power / decay;
+  if (envelope(term, to) <= value) return 0;
+  let from = to;
+  while (envelope(term, to) > value) to += 1 / decay;
+  for (let i = 0; i < 20; i++) {
+    const middle = (from + to) / 2;
+    if (envelope(term, middle) > value) from = middle;
+    else to = middle;
+  }
+  return to;
+}
+
+/**
+ * Last time at which a decaying sum is larger in magnitude than a band. Once the envelopes of the terms together fit into
+ * the band it cannot be any more; up to there it is looked at from the end backwards at the times of `scanTimes`, and the
+ * last crossing is found by bisection.
+ *
+ * @returns 0 when it never is; null when a term does not decay or the search would take too many steps
  */
 export function lastTimeOutside(terms: readonly ExponentialTerm[], band: number): number | null {
   if (!(band > 0) || terms.some(({ pole }) => pole.re >= 0)) return null;
-  const total = (t: number) => terms.reduce((sum, term) => sum + envelope(term, t), 0);
-  // From there on every envelope falls.
-  const falling = Math.max(0, ...terms.map(({ pole, power }) => power / -pole.re));
-  const slowest = Math.max(0, ...terms.map(({ pole }) => 1 / -pole.re));
-  let end = falling;
-  while (total(end) > band) end += slowest;
-  let inside = end;
-  for (let i = 0; i < MAX_STEPS; i++) {
-    if (inside <= 0) return 0;
-    const active = terms.filter((term) => envelope(term, inside) > (1e-3 * band) / terms.length);
-    const rate = Math.max(1 / slowest, ...active.map(({ pole }) => complexAbs(pole)));
-    const next = Math.max(0, inside - 1 / (STEPS_PER_RADIAN * rate));
-    if (Math.abs(sumAt(terms, next)) > band) return crossing(terms, band, next, inside);
-    inside = next;
-  }
-  return null;
+  const end = Math.max(0, ...terms.map((term) => timeBelow(term, band / terms.length)));
+  const times = scanTimes(terms, end, band);
+  if (times === null) return null;
+  const last = times.findLastIndex((t) => Math.abs(sumAt(terms, t)) > band);
+  return last < 0 ? 0 : crossing(terms, band, times[last]!, times[last + 1] ?? end);
 }
 
 function crossing(terms: readonly ExponentialTerm[], band: number, from: number, to: number): number {

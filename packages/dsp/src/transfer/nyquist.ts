@@ -1,6 +1,7 @@
 import { AnalysisInputError } from '../errors.js';
 import { angleDegrees, complexAbs, complexAdd, complexDivide, type Complex } from '../linear/complex.js';
 import { axisPolynomial, evaluateOnAxis } from './axis-polynomial.js';
+import { chainPoles } from './chain-poles.js';
 import { closeLoop, inSeries } from './compose.js';
 import { responseOf, type Response, type StageChain } from './frequency-response.js';
 import { gainCrossingFrequencies } from './loop-margins.js';
@@ -39,7 +40,7 @@ const MAX_HALVINGS = 48;
 export function nyquist(loop: StageChain): NyquistResult {
   const open = inSeries(loop);
   const excess = relativeDegree(open) ?? Infinity;
-  const openPoles = poles(open);
+  const openPoles = chainPoles(loop);
   const openLoopRightPoles = openPoles.reduce((sum, p) => sum + (p.re > 0 ? p.multiplicity : 0), 0);
   const limit = excess > 0 ? 0 : Math.abs((open.numerator[0] ?? 0) / open.denominator[0]!);
   // A rational loop that does not fade away has a finite number of poles all the same.

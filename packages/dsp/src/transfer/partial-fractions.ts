@@ -25,11 +25,16 @@ export interface PartialFractions {
  * Partial fractions of a ratio of polynomials, repeated poles included. The residues at a pole of multiplicity m are the
  * first m Taylor coefficients of N(s)/Q(s) there, Q being the denominator without the pole (Heaviside's cover-up rule and its
  * derivatives, as power series).
+ *
+ * @param all roots of the denominator where they are known better than from its coefficients
  */
-export function partialFractions(numerator: Polynomial, denominator: Polynomial): PartialFractions {
+export function partialFractions(
+  numerator: Polynomial,
+  denominator: Polynomial,
+  all: readonly Root[] = polynomialRoots(denominator),
+): PartialFractions {
   const n = trimLeadingZeros(numerator);
   const d = trimLeadingZeros(denominator);
-  const all = polynomialRoots(d);
   return {
     fractions: all.map((pole) => ({
       pole: { re: pole.re, im: pole.im },

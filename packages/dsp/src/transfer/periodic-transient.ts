@@ -4,6 +4,7 @@ import type { FourierSeries } from '../fourier/types.js';
 import { seriesFigures } from '../fourier/series-figures.js';
 import { undrawnOrders } from '../fourier/waveform.js';
 import { complexAdd, complexDivide, fromPolar, type Complex } from '../linear/complex.js';
+import { chainPoles } from './chain-poles.js';
 import { inSeries } from './compose.js';
 import {
   exponentialTerms,
@@ -16,7 +17,6 @@ import type { StageChain } from './frequency-response.js';
 import { residuesAt } from './partial-fractions.js';
 import { steadyStateOf } from './steady-state.js';
 import type { StabilityVerdict } from './stability.js';
-import { poles } from './transfer-function.js';
 
 /** How a periodic input that sets in at t = 0 settles behind stages at rest. */
 export interface PeriodicTransient {
@@ -69,7 +69,7 @@ export function periodicTransient(
       'The stages are improper (the numerator has the higher degree): they answer the onset with an impulse. Add a low-pass.',
     );
   }
-  const all = poles({ numerator, denominator });
+  const all = chainPoles(chain);
   const terms = exponentialTerms(
     all.map((pole) => ({
       pole: { re: pole.re, im: pole.im },

@@ -203,7 +203,7 @@ describe('polynomialRoots', () => {
         expect(roots).toHaveLength(tail.length);
         // Vieta: the sum of the roots is −c_1; the imaginary parts cancel exactly in pairs.
         const sum = roots.reduce((total, { re }) => total + re, 0);
-        const size = roots.reduce((total, { re }) => total + Math.abs(re), Math.abs(tail[0]!));
+        const size = roots.reduce((total, { re, im }) => total + Math.hypot(re, im), Math.abs(tail[0]!));
         expect(Math.abs(sum + tail[0]!)).toBeLessThanOrEqual(1e-9 * size);
         const sorted = roots.map(({ im }) => im).sort((a, b) => a - b);
         sorted.forEach((im, i) => expect(im + sorted[sorted.length - 1 - i]!).toBe(0));

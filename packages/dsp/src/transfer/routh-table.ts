@@ -35,14 +35,17 @@ export interface RouthTable {
   signChanges: number;
   /** True where a row vanished: roots lie symmetrically about the origin, perhaps on the imaginary axis. */
   hasZeroRow: boolean;
+  /**
+   * False where a zero at the head and roots on the imaginary axis come together: ε may then have moved those roots to the
+   * right, and the count be too large. Poles decide.
+   */
+  isConclusive: boolean;
 }
 
 /**
  * Routh-Hurwitz table of a polynomial (E. J. Routh 1877; Ogata, Modern Control Engineering, 5-6). A zero at the head of a
  * row becomes a small positive ε, in which all further elements are carried on exactly; a row of zeros is replaced by the
  * derivative of the auxiliary polynomial.
- *
- * The count of sign changes is not sure where a zero at the head and a row of zeros come together.
  *
  * @param coefficients in descending powers
  * @throws AnalysisInputError for the zero polynomial
@@ -62,11 +65,16 @@ export function routhTable(coefficients: readonly number[]): RouthTable {
     const elements = rows.length === 1 ? everySecond(1) : nextRow(rows[rows.length - 2]!.elements, above);
     rows.push(withoutZeros(elements, above, power));
   }
+  const hasZeroRow = rows.some(({ special }) => special === 'zero-row');
+  const hasEpsilon = rows.some(({ special }) => special === 'zero-first-element');
+  // A head that vanishes with ε without having been put there shows a row that vanishes.
+  const vanishes = rows.some(({ elements: [head], special }) => special === null && head!.power > 0);
   const heads = rows.map(({ elements }) => signOf(elements[0]!)).filter((sign) => sign !== 0);
   return {
     rows: rows.map(({ elements, special }, i) => describeRow(elements, special, degree - i)),
     signChanges: heads.slice(1).filter((sign, i) => sign !== heads[i]).length,
-    hasZeroRow: rows.some(({ special }) => special === 'zero-row'),
+    hasZeroRow,
+    isConclusive: !(hasEpsilon && (hasZeroRow || vanishes)),
   };
 }
 

@@ -1,4 +1,6 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { polynomialRoots } from './polynomial-roots.js';
 import { routhTable } from './routh-table.js';
 import { stability } from './stability.js';
 import { transferFunction } from './transfer-function.js';
@@ -54,6 +56,7 @@ function firstColumn(coefficients: number[]): string[] {
 }
 
 describe('routhTable', () => {
+  // The texts are cited from memory; numpy.roots (1.24) has the same number of roots on the right.
   it.each([
     ['Nise, Control Systems Engineering', [1, 10, 31, 1030], ['1', '10', '-72', '1030'], 2],
     ['Ogata, Modern Control Engineering', [1, 2, 3, 4, 5], ['1', '2', '1', '-6', '5'], 2],
@@ -97,6 +100,28 @@ describe('routhTable', () => {
     expect(routhTable([1, 0, 25])).toMatchObject({ signChanges: 0, hasZeroRow: true });
     // (s + 0.3)(s² + 0.7): the row vanishes but for the rounding of decimal fractions.
     expect(routhTable([1, 0.3, 0.7, 0.21])).toMatchObject({ signChanges: 0, hasZeroRow: true });
+  });
+
+  it('says when ε may have moved roots off the axis', () => {
+    // s⁵ + 3s³ + s² + 2s + 1 has ±j among its roots and two on the right; with ε in place of the missing s⁴ it has four.
+    expect(routhTable([1, 0, 3, 1, 2, 1])).toMatchObject({ signChanges: 4, isConclusive: false });
+    expect(routhTable([1, 2, 2, 4, 11, 10])).toMatchObject({ isConclusive: true });
+  });
+
+  it('counts the roots on the right, where it is conclusive', () => {
+    const coefficient = fc.integer({ min: -3, max: 3 });
+    fc.assert(
+      fc.property(fc.array(coefficient, { minLength: 2, maxLength: 6 }), (tail) => {
+        const { signChanges, isConclusive } = routhTable([1, ...tail]);
+        const right = polynomialRoots([1, ...tail]).reduce(
+          (sum, { re, im, multiplicity }) => sum + (re > 1e-7 * Math.hypot(re, im) ? multiplicity : 0),
+          0,
+        );
+        fc.pre(isConclusive && tail.at(-1) !== 0);
+        expect(signChanges).toBe(right);
+      }),
+      { numRuns: 300 },
+    );
   });
 
   it('has rows as long as their power of s', () => {

@@ -22,6 +22,23 @@ describe('timeResponse', () => {
     expect(response.rounding).toBeLessThan(1e-13);
   });
 
+  it('keeps close poles of several stages apart, and tells the rounding they cost', () => {
+    // 1/(s + 1)² 1/(s + 1.001): with d = 0.001 the impulse is e^(−t) (t/d − 1/d²) + e^(−(1 + d)t)/d².
+    const stages = [
+      [1, 1],
+      [1, 1],
+      [1, 1.001],
+    ].map((denominator) => transferFunction([1], denominator));
+    const response = timeResponse(stages, 'impulse');
+    for (const t of TIMES) {
+      // (e^(−x) − 1 + x)/d² with x = dt by its power series.
+      const x = 0.001 * t;
+      const exact = Math.exp(-t) * t * t * (1 / 2 - x / 6 + x ** 2 / 24 - x ** 3 / 120);
+      expect(Math.abs(response.at(t) - exact)).toBeLessThan(10 * response.rounding);
+    }
+    expect(response.rounding).toBeLessThan(1e-9);
+  });
+
   it('waits for the delay and tells what passes at once', () => {
     const lead = timeResponse(transferFunction([2, 1], [1, 1], 0.5), 'step');
     expect(lead.at(0.49)).toBe(0);

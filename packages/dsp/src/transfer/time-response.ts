@@ -1,10 +1,12 @@
 import { AnalysisInputError } from '../errors.js';
 import { inSeries } from './compose.js';
+import { chainPoles, uniteRoots } from './chain-poles.js';
 import type { StageChain } from './frequency-response.js';
 import {
   exponentialTerms,
   lastTimeOutside,
   roundingOf,
+  scanTimes,
   sumAt,
   type ExponentialTerm,
 } from './exponential-sum.js';
@@ -40,10 +42,12 @@ export interface TimeResponse {
 export function timeResponse(chain: StageChain, input: TestInput): TimeResponse {
   const { numerator, denominator, delayS = 0 } = inSeries(chain);
   const integrations = { impulse: 0, step: 1, ramp: 2 }[input];
-  const { fractions, direct } = partialFractions(numerator, [
-    ...denominator,
-    ...new Array<number>(integrations).fill(0),
-  ]);
+  const origin = integrations > 0 ? [{ re: 0, im: 0, multiplicity: integrations }] : [];
+  const { fractions, direct } = partialFractions(
+    numerator,
+    [...denominator, ...new Array<number>(integrations).fill(0)],
+    uniteRoots([...chainPoles(chain), ...origin]),
+  );
   const terms = exponentialTerms(fractions);
   const at = (timeS: number) => (timeS < delayS ? 0 : sumAt(terms, timeS - delayS));
   return {
@@ -65,8 +69,6 @@ export interface StepFigures {
   /** After which it stays within the band about the final value, from the step on; null when that is 0. */
   settlingTimeS: number | null;
 }
-
-const SCAN_POINTS = 20_000;
 
 /**
  * Rise, overshoot and settling of the step response of stable stages.
@@ -90,47 +92,47 @@ export function stepFigures(chain: StageChain, bandPercent = 2): StepFigures | n
   const settled = lastTimeOutside(transient, (bandPercent / 100) * Math.abs(finalValue));
   // Beyond the time at which 0.1 % is left nothing new is reached.
   const end = lastTimeOutside(transient, 1e-3 * Math.abs(finalValue)) ?? 0;
+  const times = scanTimes(transient, end, Math.abs(finalValue)) ?? [];
   const share = (t: number) => sumAt(terms, t) / finalValue;
-  const first = (level: number) => firstReached(share, level, end);
-  const [tenth, ninetieth] = [first(0.1), first(0.9)];
-  const top = highest(share, end);
+  const shares = times.map(share);
+  const [tenth, ninetieth] = [0.1, 0.9].map((level) => firstReached(share, level, times, shares));
+  const top = highest(share, times, shares);
   return {
     finalValue,
-    riseTimeS: tenth === null || ninetieth === null ? null : ninetieth - tenth,
+    riseTimeS: typeof tenth !== 'number' || typeof ninetieth !== 'number' ? null : ninetieth - tenth,
     overshootPercent: Math.max(0, 100 * (top.value - 1)),
     peakTimeS: top.value > 1 ? delayS + top.timeS : null,
     settlingTimeS: settled === null ? null : delayS + settled,
   };
 }
 
-function firstReached(share: (t: number) => number, level: number, end: number): number | null {
-  let before = 0;
-  for (let i = 0; i <= SCAN_POINTS; i++) {
-    const t = (end * i) / SCAN_POINTS;
-    if (share(t) >= level) {
-      let after = t;
-      for (let k = 0; k < 60; k++) {
-        const middle = (before + after) / 2;
-        if (share(middle) >= level) after = middle;
-        else before = middle;
-      }
-      return after;
-    }
-    before = t;
+function firstReached(
+  share: (t: number) => number,
+  level: number,
+  times: readonly number[],
+  shares: readonly number[],
+): number | null {
+  const at = shares.findIndex((x) => x >= level);
+  if (at < 0) return null;
+  let [before, after] = [times[Math.max(0, at - 1)]!, times[at]!];
+  for (let k = 0; k < 60; k++) {
+    const middle = (before + after) / 2;
+    if (share(middle) >= level) after = middle;
+    else before = middle;
   }
-  return null;
+  return after;
 }
 
 /** The largest of the scanned points, made finer by halving steps about it. */
-function highest(share: (t: number) => number, end: number): { timeS: number; value: number } {
-  let step = end / SCAN_POINTS;
-  let best = { timeS: 0, value: share(0) };
-  for (let i = 1; i <= SCAN_POINTS; i++) {
-    const timeS = i * step;
-    const value = share(timeS);
-    if (value > best.value) best = { timeS, value };
-  }
-  while (step > 1e-12 * end) {
+function highest(
+  share: (t: number) => number,
+  times: readonly number[],
+  shares: readonly number[],
+): { timeS: number; value: number } {
+  const at = shares.reduce((best, x, i) => (x > shares[best]! ? i : best), 0);
+  let best = { timeS: times[at] ?? 0, value: shares[at] ?? 0 };
+  let step = (times[at + 1] ?? best.timeS) - best.timeS;
+  for (let i = 0; i < 40; i++) {
     step /= 2;
     for (const timeS of [Math.max(0, best.timeS - step), best.timeS + step]) {
       const value = share(timeS);
