@@ -12,9 +12,12 @@ import { AppConfig } from './config/app-config.js';
 import { ConfigModule } from './config/config.module.js';
 import { DatabaseModule } from './database/database.module.js';
 import { DemoModule } from './demo/demo.module.js';
+import { EquipmentModule } from './equipment/equipment.module.js';
 import { HealthModule } from './health/health.module.js';
 import { HttpModule } from './http/http.module.js';
+import { InstrumentsModule } from './instruments/instruments.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
+import { LaboratoryModule } from './laboratory/laboratory.module.js';
 import { LimitsModule } from './limits/limits.module.js';
 import { MailsModule } from './mails/mails.module.js';
 import { NotesModule } from './notes/notes.module.js';
@@ -45,6 +48,9 @@ export class AppModule {
         StorageModule,
         JobsModule,
         MailsModule,
+        LaboratoryModule,
+        InstrumentsModule,
+        EquipmentModule,
         ReadingRulesModule,
         RecordingsModule,
         UploadingModule,

@@ -19,7 +19,7 @@ describe('signing in', () => {
   it('answers with the account and nothing more, whatever the case of the e-mail address', async () => {
     const reply = await signInAs('Analyst@Example.COM').expect(200);
     const { id, email, name } = test.people.analyst;
-    expect(reply.body).toEqual({ id, email, name, isAdministrator: false });
+    expect(reply.body).toEqual({ id, email, name, isAdministrator: false, worksInLaboratory: true });
   });
 
   it('keeps a person signed in until they sign out', async () => {

@@ -41,6 +41,7 @@ export const operatingModes = pgTable(
     position: integer().notNull(),
     name: text().notNull(),
     description: text().notNull().default(''),
+    retiredAt: moment(),
   },
   (table) => [unique('operating_modes_equipment_name_key').on(table.equipmentId, table.name)],
 );

@@ -20,6 +20,13 @@ describe('who may do what', () => {
     expect(held.every((permission) => /\.(read|list)$/.test(permission))).toBe(true);
   });
 
+  it('shares instruments with whoever works in the laboratory, and with no customer', () => {
+    const readers = projectRoleSchema.options.filter((role) => holds('instrument.read', role));
+    expect(readers).toEqual(['technician', 'analyst', 'manager']);
+    expect(holds('instrument.write', null)).toBe(false);
+    expect(holds('instrument.write', null, true)).toBe(true);
+  });
+
   it('gives a stranger nothing in a project, and an administrator reading and members only', () => {
     const inProject = (Object.keys(permissions) as Permission[]).filter((permission) =>
       Array.isArray(permissions[permission].allow),

@@ -13,8 +13,10 @@ const manager: readonly ProjectRole[] = ['manager'];
  * Who may do what: the one table that guards, screens and the access tests read.
  *
  * `public` needs no sign-in, `signed-in` any account, `administrator` an administrator of the
- * installation; every other entry lists the project roles that hold the permission. An administrator
- * may read every project and manage its members (`administratorToo`), and does nothing else in it.
+ * installation, `laboratory` an administrator or whoever works at the bench of any project (what the
+ * laboratory's projects share is no business of its customers); every other entry lists the project
+ * roles that hold the permission. An administrator may read every project and manage its members
+ * (`administratorToo`), and does nothing else in it.
  */
 export const permissions = {
   'auth.sign-in': { allow: 'public' },
@@ -24,10 +26,16 @@ export const permissions = {
   'project.create': { allow: 'signed-in' },
   'limit-set.list': { allow: 'signed-in' },
   'user.manage': { allow: 'administrator' },
+  'laboratory.read': { allow: 'signed-in' },
+  'laboratory.update': { allow: 'administrator' },
+  'instrument.read': { allow: 'laboratory' },
+  'instrument.write': { allow: 'laboratory' },
   'project.read': { allow: everyMember, administratorToo: true },
   'project.update': { allow: manager },
   'member.list': { allow: everyMember, administratorToo: true },
   'member.manage': { allow: manager, administratorToo: true },
+  'equipment.read': { allow: everyMember, administratorToo: true },
+  'equipment.write': { allow: bench },
   'recording.read': { allow: everyMember, administratorToo: true },
   'recording.upload': { allow: bench },
   'recording.update': { allow: bench },
@@ -51,18 +59,25 @@ export const permissions = {
 } as const satisfies Record<
   string,
   {
-    allow: 'public' | 'signed-in' | 'administrator' | readonly ProjectRole[];
+    allow: 'public' | 'signed-in' | 'administrator' | 'laboratory' | readonly ProjectRole[];
     administratorToo?: boolean;
   }
 >;
 export type Permission = keyof typeof permissions;
 
-/** True when a member with `role` (null: not a member) holds a project permission. */
+/** Roles that make somebody one of the laboratory, whatever project they are held in. */
+export const laboratoryRoles = bench;
+
+/**
+ * True when a member with `role` (null: not a member) holds a project permission. For a permission of the laboratory
+ * `role` is one of `laboratoryRoles` that the person holds in any project.
+ */
 export function holds(permission: Permission, role: ProjectRole | null, isAdministrator = false): boolean {
   const entry: { allow: string | readonly ProjectRole[]; administratorToo?: boolean } =
     permissions[permission];
   if (entry.allow === 'public' || entry.allow === 'signed-in') return true;
   if (entry.allow === 'administrator') return isAdministrator;
+  if (entry.allow === 'laboratory') return isAdministrator || (role !== null && bench.includes(role));
   if (entry.administratorToo && isAdministrator) return true;
   return role !== null && entry.allow.includes(role);
 }

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { idSchema, pageOf, timestampSchema } from './common.js';
+import { idSchema, pageOf, pageQuerySchema, timestampSchema } from './common.js';
 
 /** A day of the calendar, YYYY-MM-DD. */
 export const daySchema = z.iso.date().describe('Day, YYYY-MM-DD');
@@ -26,6 +26,13 @@ const operatingModeFields = {
 export const operatingModeSchema = z.object({ id: idSchema, name: z.string(), description: z.string() });
 export type OperatingMode = z.infer<typeof operatingModeSchema>;
 
+/** A mode as its equipment lists it; one that is retired is not offered any more. */
+const listedModeSchema = operatingModeSchema.extend({
+  recordings: z.number().int().describe('Recordings made in it'),
+  retired: z.boolean(),
+});
+export type ListedMode = z.infer<typeof listedModeSchema>;
+
 const equipmentFields = {
   name: z.string().trim().min(1, 'Name the equipment').max(160),
   manufacturer: z.string().trim().max(160).default(''),
@@ -36,9 +43,11 @@ const equipmentFields = {
   remark: z.string().trim().max(2000).default(''),
 };
 
-/** Modes without an id are new; those of the equipment that are not named are removed. */
+/** Modes without an id are new; those of the equipment that are not named are removed, unless recordings use them. */
 const modesToWriteSchema = z
-  .array(z.strictObject({ id: idSchema.optional(), ...operatingModeFields }))
+  .array(
+    z.strictObject({ id: idSchema.optional(), ...operatingModeFields, retired: z.boolean().default(false) }),
+  )
   .max(50)
   .refine((modes) => new Set(modes.map(({ name }) => name)).size === modes.length, {
     message: 'Each operating mode has a name of its own',
@@ -76,13 +85,49 @@ export const equipmentSchema = z.object({
   ratings: equipmentRatingsSchema,
   receivedOn: daySchema.nullable(),
   remark: z.string(),
-  operatingModes: z.array(operatingModeSchema),
+  operatingModes: z.array(listedModeSchema).describe('In their order'),
   recordings: z.number().int().describe('Recordings of it'),
   retiredAt: timestampSchema.nullable(),
   createdAt: timestampSchema,
 });
 export type Equipment = z.infer<typeof equipmentSchema>;
 export const equipmentPageSchema = pageOf(equipmentSchema);
+
+/** Query texts are true or false in words. */
+export const retiredQuerySchema = z
+  .enum(['true', 'false'])
+  .optional()
+  .describe('true: retired ones only; false: none that are retired; absent: all');
+
+export const equipmentQuerySchema = pageQuerySchema.extend({
+  q: z.string().trim().max(200).optional().describe('Looks in name, manufacturer, model, serial number'),
+  retired: retiredQuerySchema,
+});
+export type EquipmentQuery = z.infer<typeof equipmentQuerySchema>;
+
+/** Equipment as a recording names it. */
+export const equipmentRefSchema = equipmentSchema.pick({
+  id: true,
+  name: true,
+  manufacturer: true,
+  model: true,
+  serialNumber: true,
+  ratings: true,
+  retiredAt: true,
+});
+export type EquipmentRef = z.infer<typeof equipmentRefSchema>;
+
+/** Equipment in one line: name, manufacturer and model, serial number, as far as known. */
+export function equipmentLine({
+  name,
+  manufacturer,
+  model,
+  serialNumber,
+}: Pick<Equipment, 'name' | 'manufacturer' | 'model' | 'serialNumber'>): string {
+  const kind = [manufacturer, model].filter((text) => text !== '').join(' ');
+  const serial = serialNumber === '' ? '' : `serial no. ${serialNumber}`;
+  return [name, kind, serial].filter((text) => text !== '').join(', ');
+}
 
 /** Conditions while a recording was made; what is not known is absent. */
 export const testConditionsSchema = z.strictObject({

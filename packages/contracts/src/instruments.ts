@@ -1,6 +1,6 @@
 import { z } from 'zod';
-import { idSchema, pageOf, personRefSchema, timestampSchema } from './common.js';
-import { daySchema } from './equipment.js';
+import { idSchema, pageOf, pageQuerySchema, personRefSchema, timestampSchema } from './common.js';
+import { daySchema, retiredQuerySchema } from './equipment.js';
 
 /** The laboratory that issues the reports, as their title page names it. */
 export const laboratorySchema = z.object({
@@ -32,6 +32,11 @@ export type InstrumentKind = z.infer<typeof instrumentKindSchema>;
 /** Whether an instrument was in calibration at a moment; `none`: there is no calibration before it. */
 export const calibrationStateSchema = z.enum(['valid', 'overdue', 'none']);
 export type CalibrationState = z.infer<typeof calibrationStateSchema>;
+
+/** Days ahead from which on calibration counts as due soon. */
+export const calibrationNoticeDays = 30;
+/** Largest file that is taken as a certificate. */
+export const maxCertificateBytes = 20 * 1024 * 1024;
 
 export const calibrationSchema = z.object({
   id: idSchema,
@@ -107,6 +112,18 @@ export const instrumentSchema = instrumentRefSchema.extend({
 export type Instrument = z.infer<typeof instrumentSchema>;
 export const instrumentPageSchema = pageOf(instrumentSchema);
 
+export const instrumentQuerySchema = pageQuerySchema.extend({
+  q: z.string().trim().max(200).optional().describe('Looks in name, manufacturer, model, serial number'),
+  state: z
+    .enum(['valid', 'due-soon', 'overdue', 'none'])
+    .optional()
+    .describe(
+      `Calibration as of today (UTC); due-soon: valid, but for ${calibrationNoticeDays} days at most`,
+    ),
+  retired: retiredQuerySchema,
+});
+export type InstrumentQuery = z.infer<typeof instrumentQuerySchema>;
+
 export const writeChainSchema = z.strictObject({
   name: z.string().trim().min(1, 'Name the chain').max(160),
   description: z.string().trim().max(2000).default(''),
@@ -133,8 +150,26 @@ export const measuringChainSchema = z.object({
 export type MeasuringChain = z.infer<typeof measuringChainSchema>;
 
 export const measuringChainListItemSchema = measuringChainSchema.extend({
+  recordings: z.number().int().describe('Recordings made through it, of all projects'),
   retiredAt: timestampSchema.nullable(),
   createdAt: timestampSchema,
 });
 export type MeasuringChainListItem = z.infer<typeof measuringChainListItemSchema>;
 export const measuringChainPageSchema = pageOf(measuringChainListItemSchema);
+
+export const chainQuerySchema = pageQuerySchema.extend({
+  q: z.string().trim().max(200).optional().describe('Looks in name and description'),
+  retired: retiredQuerySchema,
+});
+export type ChainQuery = z.infer<typeof chainQuerySchema>;
+
+/** A measuring chain as a recording or a channel names it. */
+export const chainRefSchema = z.object({
+  id: idSchema,
+  name: z.string(),
+  calibrationState: calibrationStateSchema.describe(
+    'The worst of its instruments when the recording was captured, or uploaded where that is not known',
+  ),
+  retiredAt: timestampSchema.nullable(),
+});
+export type ChainRef = z.infer<typeof chainRefSchema>;

@@ -30,6 +30,14 @@ export const accountSchema = z.object({
 });
 export type Account = z.infer<typeof accountSchema>;
 
+/** One's own account, with what it opens outside the projects. */
+export const ownAccountSchema = accountSchema.extend({
+  worksInLaboratory: z
+    .boolean()
+    .describe('Whether it may use what the projects of the laboratory share, such as instruments'),
+});
+export type OwnAccount = z.infer<typeof ownAccountSchema>;
+
 export const updateAccountSchema = z.object({ name: z.string().trim().min(1).max(120) });
 export type UpdateAccount = z.infer<typeof updateAccountSchema>;
 

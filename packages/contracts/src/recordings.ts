@@ -7,6 +7,8 @@ import {
   personRefSchema,
   timestampSchema,
 } from './common.js';
+import { equipmentRefSchema, operatingModeSchema, testConditionsSchema } from './equipment.js';
+import { chainRefSchema } from './instruments.js';
 
 export const quantitySchema = z.enum([
   'voltage',
@@ -134,6 +136,12 @@ export const channelSchema = z.object({
 });
 export type Channel = z.infer<typeof channelSchema>;
 
+/** A channel as its recording lists it. */
+export const recordedChannelSchema = channelSchema.extend({
+  chain: chainRefSchema.nullable().describe('Measuring chain of its own; null: that of the recording'),
+});
+export type RecordedChannel = z.infer<typeof recordedChannelSchema>;
+
 /** Figures of one channel of the latest analysis, enough for a list row and its tally strip. */
 export const channelSummarySchema = z.object({
   channel: z.number().int(),
@@ -156,9 +164,20 @@ const bench = {
   remark: z.string().trim().max(2000),
 };
 
+/** What was tested, how, through what and under which conditions. */
+const standing = {
+  equipmentId: idSchema
+    .nullable()
+    .describe('Equipment of the project; eut becomes its line unless it is stated as well'),
+  operatingModeId: idSchema.nullable().describe('Operating mode of that equipment'),
+  measuringChainId: idSchema.nullable(),
+  conditions: testConditionsSchema.describe('Replaces all that was said of the conditions'),
+};
+
 export const updateRecordingSchema = z
   .object({
     ...bench,
+    ...standing,
     channels: z
       .array(
         z.object({
@@ -168,6 +187,10 @@ export const updateRecordingSchema = z
           unit: z.string().trim().max(20).optional(),
           gain: scaleSchema.optional(),
           offset: scaleSchema.optional(),
+          measuringChainId: idSchema
+            .nullable()
+            .optional()
+            .describe('Where it differs from that of the recording; needs no new analysis'),
         }),
       )
       .describe('Scaling changes are followed by a new analysis'),
@@ -180,6 +203,10 @@ export const recordingSchema = z.object({
   projectId: idSchema,
   number: z.string().describe('Number in the project, R-0001'),
   ...bench,
+  equipment: equipmentRefSchema.nullable(),
+  operatingMode: operatingModeSchema.extend({ retired: z.boolean() }).nullable(),
+  chain: chainRefSchema.nullable(),
+  conditions: testConditionsSchema,
   status: recordingStatusSchema,
   progress: z.number().min(0).max(1),
   problem: readProblemSchema.nullable(),
@@ -196,7 +223,7 @@ export const recordingSchema = z.object({
   sampleRateHz: z.number().nullable(),
   sampleCount: z.number().int().nullable(),
   durationS: z.number().nullable(),
-  channels: z.array(channelSchema),
+  channels: z.array(recordedChannelSchema),
   latestAnalysisId: idSchema.nullable(),
   summaries: z.array(channelSummarySchema),
   uploadedBy: personRefSchema,
@@ -208,8 +235,9 @@ export const recordingPageSchema = pageOf(recordingSchema);
 export const recordingSortSchema = z.enum(['number', '-number', 'name', '-name', 'createdAt', '-createdAt']);
 
 export const recordingQuerySchema = pageQuerySchema.extend({
-  q: z.string().trim().max(200).optional().describe('Looks in number, name, EUT, file name'),
+  q: z.string().trim().max(200).optional().describe('Looks in number, name, EUT, equipment, file name'),
   status: recordingStatusSchema.optional(),
+  equipmentId: idSchema.optional().describe('Recordings of this equipment'),
   sort: recordingSortSchema.default('-number'),
 });
 export type RecordingQuery = z.infer<typeof recordingQuerySchema>;

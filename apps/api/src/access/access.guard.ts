@@ -1,6 +1,6 @@
 import { Injectable, type CanActivate, type ExecutionContext } from '@nestjs/common';
 import { Reflector } from '@nestjs/core';
-import { holds, idSchema, permissions } from '@overtally/contracts';
+import { holds, idSchema, permissions, type ProjectRole } from '@overtally/contracts';
 import { problem, ProblemException } from '../common/problem.js';
 import type { AppRequest, ProjectAccess, SignedInUser } from '../common/request.js';
 import { bearerSecret, hashOfSecret } from './access-key.js';
@@ -25,10 +25,17 @@ export class AccessGuard implements CanActivate {
     if (route.resource) {
       request.access = await this.projectAccess(request, route.resource, route.param, request.user);
     }
-    if (!holds(route.permission, request.access?.role ?? null, request.user.isAdministrator)) {
+    const role = await this.role(route, request);
+    if (!holds(route.permission, role, request.user.isAdministrator)) {
       throw problem(403, 'role-too-low', 'Your role does not allow this');
     }
     return true;
+  }
+
+  /** The role in the project of the request, or for what the laboratory shares one that is held anywhere in it. */
+  private role({ permission }: RouteAccess, { access, user }: AppRequest): Promise<ProjectRole | null> {
+    if (permissions[permission].allow !== 'laboratory') return Promise.resolve(access?.role ?? null);
+    return this.repository.findLaboratoryRole(user!.id);
   }
 
   /** The holder of the key that the request carries, else the person of its session. */

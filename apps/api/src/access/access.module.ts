@@ -3,5 +3,8 @@ import { APP_GUARD } from '@nestjs/core';
 import { AccessGuard } from './access.guard.js';
 import { AccessRepository } from './access.repository.js';
 
-@Module({ providers: [AccessRepository, { provide: APP_GUARD, useClass: AccessGuard }] })
+@Module({
+  providers: [AccessRepository, { provide: APP_GUARD, useClass: AccessGuard }],
+  exports: [AccessRepository],
+})
 export class AccessModule {}

@@ -1,12 +1,13 @@
 import { Inject, Injectable } from '@nestjs/common';
+import { laboratoryRoles, type ProjectRole } from '@overtally/contracts';
 import { schema, type Database } from '@overtally/db';
-import { and, eq, gt, isNull, or } from 'drizzle-orm';
+import { and, eq, gt, inArray, isNull, or } from 'drizzle-orm';
 import type { ProjectAccess, SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import type { ResourceKind } from './require-permission.decorator.js';
 
 const { accessKeys, users, members, projects, readingRules, recordings, analyses, notes } = schema;
-const { verdicts, reports, limitSets } = schema;
+const { equipment, verdicts, reports, limitSets } = schema;
 
 const person = { id: users.id, email: users.email, name: users.name, isAdministrator: users.isAdministrator };
 
@@ -47,6 +48,16 @@ export class AccessRepository {
     return row.person;
   }
 
+  /** A role that makes the person one of the laboratory; null where they hold none in any project. */
+  async findLaboratoryRole(userId: string): Promise<ProjectRole | null> {
+    const [member] = await this.database
+      .select({ role: members.role })
+      .from(members)
+      .where(and(eq(members.userId, userId), inArray(members.role, [...laboratoryRoles])))
+      .limit(1);
+    return member?.role ?? null;
+  }
+
   /** The project a thing belongs to and the person's role there; undefined when there is no such thing. */
   async findProjectAccess(
     resource: ResourceKind,
@@ -66,6 +77,11 @@ export class AccessRepository {
     switch (resource) {
       case 'project':
         return this.database.select({ projectId: projects.id }).from(projects).where(eq(projects.id, id));
+      case 'equipment':
+        return this.database
+          .select({ projectId: equipment.projectId })
+          .from(equipment)
+          .where(eq(equipment.id, id));
       case 'reading-rule':
         return this.database
           .select({ projectId: readingRules.projectId })

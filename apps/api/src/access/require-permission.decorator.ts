@@ -8,7 +8,15 @@ export type { ProjectAccess as ProjectAccessValue } from '../common/request.js';
 
 /** Kinds of things that belong to a project, whose id may stand in a path. */
 export type ResourceKind =
-  'project' | 'reading-rule' | 'recording' | 'analysis' | 'note' | 'verdict' | 'report' | 'limit-set';
+  | 'project'
+  | 'equipment'
+  | 'reading-rule'
+  | 'recording'
+  | 'analysis'
+  | 'note'
+  | 'verdict'
+  | 'report'
+  | 'limit-set';
 
 export interface RouteAccess {
   permission: Permission;
@@ -55,7 +63,8 @@ function documentation({ permission, resource }: RouteAccess): MethodDecorator[]
   const { allow } = permissions[permission];
   if (allow === 'public') return all;
   all.push(ApiCookieAuth('session'), ApiBearerAuth('bearer'), ApiProblem(401, 'Nobody is signed in'));
-  if (allow !== 'signed-in') all.push(ApiProblem(403, 'The role of the person who asks is too low'));
+  if (allow === 'laboratory') all.push(ApiProblem(403, 'Who asks does not work in the laboratory'));
+  else if (allow !== 'signed-in') all.push(ApiProblem(403, 'The role of the person who asks is too low'));
   if (resource) all.push(ApiProblem(404, 'No such thing, or not in a project of the person who asks'));
   return all;
 }

@@ -1,14 +1,14 @@
 import { Body, Controller, Get, HttpCode, Patch, Post, Req, Res } from '@nestjs/common';
 import { ApiNoContentResponse, ApiTags } from '@nestjs/swagger';
-import type { Account } from '@overtally/contracts';
+import type { OwnAccount } from '@overtally/contracts';
 import type { Response } from 'express';
 import { ZodResponse } from 'nestjs-zod';
 import { RequirePermission } from '../access/require-permission.decorator.js';
 import { ApiProblem } from '../common/api-problem.decorator.js';
 import { CurrentUser } from '../common/current-user.decorator.js';
 import type { AppRequest, SignedInUser } from '../common/request.js';
-import { AuthService, toAccount } from './auth.service.js';
-import { AccountDto, ChangePasswordDto, SignInDto, UpdateAccountDto } from './dto/auth.dto.js';
+import { AuthService } from './auth.service.js';
+import { ChangePasswordDto, OwnAccountDto, SignInDto, UpdateAccountDto } from './dto/auth.dto.js';
 import { beginSession, endSession } from './sessions.js';
 
 @ApiTags('account')
@@ -18,13 +18,17 @@ export class AuthController {
 
   @Post('sign-in')
   @RequirePermission('auth.sign-in')
-  @ZodResponse({ status: 200, type: AccountDto, description: 'Signed in; the reply sets the session cookie' })
+  @ZodResponse({
+    status: 200,
+    type: OwnAccountDto,
+    description: 'Signed in; the reply sets the session cookie',
+  })
   @ApiProblem(401, 'E-mail or password is wrong')
   @ApiProblem(429, 'Too many failed attempts; Retry-After tells the seconds to wait')
-  async signIn(@Req() request: AppRequest, @Body() input: SignInDto): Promise<Account> {
+  async signIn(@Req() request: AppRequest, @Body() input: SignInDto): Promise<OwnAccount> {
     const account = await this.auth.checkCredentials(input, request.ip ?? '');
     await beginSession(request, account.id);
-    return account;
+    return this.auth.own(account);
   }
 
   @Post('sign-out')
@@ -37,15 +41,15 @@ export class AuthController {
 
   @Get('me')
   @RequirePermission('account.own')
-  @ZodResponse({ status: 200, type: AccountDto })
-  me(@CurrentUser() user: SignedInUser): Account {
-    return toAccount(user);
+  @ZodResponse({ status: 200, type: OwnAccountDto })
+  me(@CurrentUser() user: SignedInUser): Promise<OwnAccount> {
+    return this.auth.own(user);
   }
 
   @Patch('me')
   @RequirePermission('account.own')
-  @ZodResponse({ status: 200, type: AccountDto })
-  rename(@CurrentUser() user: SignedInUser, @Body() input: UpdateAccountDto): Promise<Account> {
+  @ZodResponse({ status: 200, type: OwnAccountDto })
+  rename(@CurrentUser() user: SignedInUser, @Body() input: UpdateAccountDto): Promise<OwnAccount> {
     return this.auth.rename(user, input);
   }
 

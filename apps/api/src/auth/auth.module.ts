@@ -6,6 +6,7 @@ import {
   type OnModuleDestroy,
 } from '@nestjs/common';
 import type pg from 'pg';
+import { AccessModule } from '../access/access.module.js';
 import { AppConfig } from '../config/app-config.js';
 import { POOL } from '../database/database.tokens.js';
 import { AccessKeysController } from './access-keys.controller.js';
@@ -20,6 +21,7 @@ import { SignInLimits } from './sign-in-limits.js';
 import { makeSessionStore, sessionMiddleware } from './session.middleware.js';
 
 @Module({
+  imports: [AccessModule],
   controllers: [AuthController, AccessKeysController],
   providers: [
     AuthService,

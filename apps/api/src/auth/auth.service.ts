@@ -1,6 +1,14 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { Account, ChangePassword, SignIn, UpdateAccount } from '@overtally/contracts';
+import {
+  holds,
+  type Account,
+  type ChangePassword,
+  type OwnAccount,
+  type SignIn,
+  type UpdateAccount,
+} from '@overtally/contracts';
 import type { Database } from '@overtally/db';
+import { AccessRepository } from '../access/access.repository.js';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
@@ -14,6 +22,7 @@ export class AuthService {
   constructor(
     @Inject(DATABASE) private readonly database: Database,
     private readonly accounts: AccountsRepository,
+    private readonly access: AccessRepository,
     private readonly sessions: AccountSessions,
     private readonly hasher: PasswordHasher,
     private readonly limits: SignInLimits,
@@ -36,9 +45,15 @@ export class AuthService {
     return toAccount(account);
   }
 
-  async rename(user: SignedInUser, { name }: UpdateAccount): Promise<Account> {
+  async rename(user: SignedInUser, { name }: UpdateAccount): Promise<OwnAccount> {
     await this.database.transaction((tx) => this.accounts.rename(tx, user.id, name));
-    return toAccount({ ...user, name });
+    return this.own({ ...user, name });
+  }
+
+  /** The account of who asks, with what it opens outside the projects. */
+  async own(user: SignedInUser): Promise<OwnAccount> {
+    const role = await this.access.findLaboratoryRole(user.id);
+    return { ...toAccount(user), worksInLaboratory: holds('instrument.read', role, user.isAdministrator) };
   }
 
   /**

@@ -1,4 +1,10 @@
-import type { Channel, ChannelSummary, Recording } from '@overtally/contracts';
+import type {
+  ChainRef,
+  ChannelSummary,
+  EquipmentRef,
+  RecordedChannel,
+  Recording,
+} from '@overtally/contracts';
 import { recordingNumber } from './recording-number.js';
 import type { RecordingRow } from './recordings.repository.js';
 
@@ -6,14 +12,26 @@ import type { RecordingRow } from './recordings.repository.js';
 export type RecordingRecord = RecordingRow & {
   duplicateOf: { id: string; number: number } | null;
   uploaderName: string;
+  equipment: (Omit<EquipmentRef, 'retiredAt'> & { retiredAt: Date | null }) | null;
+  operatingMode: { id: string; name: string; description: string; retiredAt: Date | null } | null;
 };
+
+/** The moment whose calibrations count for a recording: its capture, else its upload. */
+export function momentOf({ capturedAt, createdAt }: Pick<RecordingRow, 'capturedAt' | 'createdAt'>): Date {
+  return capturedAt ?? createdAt;
+}
 
 /** The recording as the contract words it. */
 export function toRecording(
   row: RecordingRecord,
-  parts: { channels: Channel[]; latestAnalysisId: string | null; summaries: ChannelSummary[] },
+  parts: {
+    chain: ChainRef | null;
+    channels: RecordedChannel[];
+    latestAnalysisId: string | null;
+    summaries: ChannelSummary[];
+  },
 ): Recording {
-  const { sampleRateHz, sampleCount } = row;
+  const { sampleRateHz, sampleCount, equipment, operatingMode: mode } = row;
   return {
     id: row.id,
     projectId: row.projectId,
@@ -24,6 +42,12 @@ export function toRecording(
     instrument: row.instrument,
     capturedAt: row.capturedAt?.toISOString() ?? null,
     remark: row.remark,
+    equipment: equipment && { ...equipment, retiredAt: equipment.retiredAt?.toISOString() ?? null },
+    operatingMode: mode && {
+      ...{ id: mode.id, name: mode.name, description: mode.description },
+      retired: mode.retiredAt !== null,
+    },
+    conditions: row.conditions,
     status: row.status,
     progress: row.progress,
     problem: row.problem,

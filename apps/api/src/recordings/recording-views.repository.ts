@@ -3,12 +3,33 @@ import type { Channel, ChannelSummary, Recording, RecordingQuery } from '@overta
 import { schema, type Database } from '@overtally/db';
 import { and, asc, desc, eq, getTableColumns, ilike, inArray, isNull, or, sql, type SQL } from 'drizzle-orm';
 import { z } from 'zod';
+import { ChainsService } from '../instruments/chains.service.js';
 import { decodeCursor, likePattern, pageOfRows } from '../common/paging.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { grouped } from './grouped.js';
-import { toRecording, type RecordingRecord } from './recording-view.js';
+import { momentOf, toRecording, type RecordingRecord } from './recording-view.js';
 
-const { analyses, analysisChannels, channels, harmonics, recordings, users } = schema;
+const { analyses, analysisChannels, channels, equipment, harmonics, operatingModes, recordings, users } =
+  schema;
+
+/** A channel with the id of its own chain; its chain stands as of the moment of its recording. */
+type ChannelPart = Channel & { measuringChainId: string | null };
+
+const equipmentColumns = {
+  id: equipment.id,
+  name: equipment.name,
+  manufacturer: equipment.manufacturer,
+  model: equipment.model,
+  serialNumber: equipment.serialNumber,
+  ratings: equipment.ratings,
+  retiredAt: equipment.retiredAt,
+};
+const modeColumns = {
+  id: operatingModes.id,
+  name: operatingModes.name,
+  description: operatingModes.description,
+  retiredAt: operatingModes.retiredAt,
+};
 
 const sortColumns = { number: recordings.number, name: recordings.name, createdAt: recordings.createdAt };
 type SortKey = keyof typeof sortColumns;
@@ -20,10 +41,13 @@ const cursorShapes = {
   createdAt: z.tuple([z.iso.datetime(), z.uuid()]),
 };
 
-/** Recordings as the outside sees them, a whole page in four queries. */
+/** Recordings as the outside sees them, a whole page in few queries. */
 @Injectable()
 export class RecordingViewsRepository {
-  constructor(@Inject(DATABASE) private readonly database: Database) {}
+  constructor(
+    @Inject(DATABASE) private readonly database: Database,
+    private readonly chains: ChainsService,
+  ) {}
 
   async one(id: string): Promise<Recording | undefined> {
     const records = await this.records(eq(recordings.id, id));
@@ -56,9 +80,17 @@ export class RecordingViewsRepository {
         and earlier.number < ${recordings.number}
       order by earlier.number limit 1)`;
     return this.database
-      .select({ ...getTableColumns(recordings), duplicateOf: earlier, uploaderName: users.name })
+      .select({
+        ...getTableColumns(recordings),
+        duplicateOf: earlier,
+        uploaderName: users.name,
+        equipment: equipmentColumns,
+        operatingMode: modeColumns,
+      })
       .from(recordings)
       .innerJoin(users, eq(users.id, recordings.uploadedById))
+      .leftJoin(equipment, eq(equipment.id, recordings.equipmentId))
+      .leftJoin(operatingModes, eq(operatingModes.id, recordings.operatingModeId))
       .where(where)
       .orderBy(...order)
       .limit(limit);
@@ -69,20 +101,27 @@ export class RecordingViewsRepository {
     const ids = records.map(({ id }) => id);
     const [channelsById, latestById] = await Promise.all([this.channelsOf(ids), this.latestAnalyses(ids)]);
     const summaries = await this.summariesOf([...latestById.values()]);
+    const parts = [...records, ...[...channelsById.values()].flat()];
+    const chainAt = await this.chains.refs(parts.flatMap(({ measuringChainId }) => measuringChainId ?? []));
     return records.map((record) => {
       const latestAnalysisId = latestById.get(record.id) ?? null;
+      const moment = momentOf(record);
       return toRecording(record, {
-        channels: channelsById.get(record.id) ?? [],
+        chain: chainAt(record.measuringChainId, moment),
+        channels: (channelsById.get(record.id) ?? []).map(({ measuringChainId, ...channel }) => ({
+          ...channel,
+          chain: chainAt(measuringChainId, moment),
+        })),
         latestAnalysisId,
         summaries: summaries.get(latestAnalysisId ?? '') ?? [],
       });
     });
   }
 
-  private async channelsOf(ids: string[]): Promise<Map<string, Channel[]>> {
-    const { recordingId, index, name, quantity, unit, gain, offset } = channels;
+  private async channelsOf(ids: string[]): Promise<Map<string, ChannelPart[]>> {
+    const { recordingId, index, name, quantity, unit, gain, offset, measuringChainId } = channels;
     const rows = await this.database
-      .select({ recordingId, index, name, quantity, unit, gain, offset })
+      .select({ recordingId, index, name, quantity, unit, gain, offset, measuringChainId })
       .from(channels)
       .where(inArray(channels.recordingId, ids))
       .orderBy(channels.index);
@@ -138,9 +177,10 @@ export class RecordingViewsRepository {
   }
 }
 
-function matches({ q, status }: RecordingQuery): SQL[] {
+function matches({ q, status, equipmentId }: RecordingQuery): SQL[] {
   const conditions: SQL[] = [];
   if (status !== undefined) conditions.push(eq(recordings.status, status));
+  if (equipmentId !== undefined) conditions.push(eq(recordings.equipmentId, equipmentId));
   if (q !== undefined && q !== '') {
     const pattern = likePattern(q);
     const written = sql`'R-' || lpad(${recordings.number}::text, greatest(4, length(${recordings.number}::text)), '0')`;
@@ -149,6 +189,7 @@ function matches({ q, status }: RecordingQuery): SQL[] {
         ilike(written, pattern),
         ilike(recordings.name, pattern),
         ilike(recordings.eut, pattern),
+        ilike(equipment.name, pattern),
         ilike(recordings.fileName, pattern),
       )!,
     );

@@ -37,9 +37,12 @@ export class RecordingsController {
 
   @Patch('recordings/:id')
   @RequirePermission('recording.update', { resource: 'recording' })
-  @ApiOperation({ summary: 'Change bench data, or the channels, which is followed by a new analysis' })
+  @ApiOperation({
+    summary: 'Change bench data, or the channels; other scaling is followed by a new analysis',
+  })
   @ZodResponse({ status: 200, type: RecordingDto })
   @ApiProblem(409, 'The channels are not known yet')
+  @ApiProblem(422, 'Equipment, mode or chain that is not there, not of the project, or retired')
   update(@Param('id') id: string, @CurrentUser() user: SignedInUser, @Body() change: UpdateRecordingDto) {
     return this.recordings.update(id, user.id, change);
   }

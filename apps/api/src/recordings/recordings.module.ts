@@ -1,5 +1,7 @@
 import { Module } from '@nestjs/common';
 import { AnalysisRunsService } from './analysis-runs.service.js';
+import { EquipmentModule } from '../equipment/equipment.module.js';
+import { InstrumentsModule } from '../instruments/instruments.module.js';
 import { ReadingRulesModule } from '../reading-rules/reading-rules.module.js';
 import { PreviewsService } from './previewing/previews.service.js';
 import { ReadRecordingHandler } from './reading/read-recording.handler.js';
@@ -12,7 +14,7 @@ import { UploadLimitsService } from './uploading/upload-limits.service.js';
 import { WaveformService } from './waveform.service.js';
 
 @Module({
-  imports: [ReadingRulesModule],
+  imports: [EquipmentModule, InstrumentsModule, ReadingRulesModule],
   controllers: [RecordingsController, RecordingDataController],
   providers: [
     RecordingsService,

@@ -10,6 +10,8 @@ import type { Database, Tx } from '@overtally/db';
 import { randomUUID } from 'node:crypto';
 import { parse } from 'node:path';
 import { problem } from '../common/problem.js';
+import { EquipmentService } from '../equipment/equipment.service.js';
+import { ChainsService } from '../instruments/chains.service.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { readRecordingJob } from '../jobs/definitions/read-recording.job.js';
 import { JobsService } from '../jobs/jobs.service.js';
@@ -34,6 +36,9 @@ const readingCancelled: ReadProblem = {
   cure: 'Read it again; the uploaded file is kept',
 };
 
+/** A recording that is being made names nothing yet. */
+const unnamed = { equipmentId: null, operatingModeId: null, measuringChainId: null };
+
 export interface Upload {
   /** What the recording is to be known by; where it is there already, it stays the only one. */
   id?: string;
@@ -57,6 +62,8 @@ export class RecordingsService {
     private readonly rules: ReadingRulesService,
     private readonly previews: PreviewsService,
     private readonly limits: UploadLimitsService,
+    private readonly equipment: EquipmentService,
+    private readonly chains: ChainsService,
   ) {}
 
   async get(id: string): Promise<Recording> {
@@ -84,6 +91,7 @@ export class RecordingsService {
   async upload({ projectId, uploadedById, staged, fields, ...upload }: Upload): Promise<Recording> {
     const fileName = upload.fileName.replace(/\p{Cc}/gu, '');
     const { import: _, readingRuleId: __, capturedAt, name, ...bench } = fields;
+    const standing = await this.standing(projectId, bench, unnamed);
     const key = sourceKey(projectId, staged.sha256);
     const rules = await this.rules.candidates(projectId, fields);
     const id = await this.database.transaction(async (tx) => {
@@ -101,6 +109,7 @@ export class RecordingsService {
         projectId,
         uploadedById,
         ...bench,
+        ...standing,
         name: name ?? nameFrom(fileName),
         capturedAt: toDate(capturedAt ?? null),
         fileName: fileName.slice(0, maxFileNameLength),
@@ -122,8 +131,11 @@ export class RecordingsService {
       const recording = await this.locked(tx, id);
       const { channels, capturedAt, ...bench } = change;
       const moment = capturedAt === undefined ? {} : { capturedAt: toDate(capturedAt) };
-      await this.repository.update(tx, id, { ...bench, ...moment });
-      if (channels !== undefined && channels.length > 0) await this.rescale(tx, recording, userId, channels);
+      const standing = await this.standing(recording.projectId, bench, recording);
+      await this.repository.update(tx, id, { ...bench, ...moment, ...standing });
+      if (channels !== undefined && channels.length > 0) {
+        await this.changeChannels(tx, recording, userId, channels);
+      }
     });
     return this.get(id);
   }
@@ -229,14 +241,32 @@ export class RecordingsService {
     return recording;
   }
 
-  private async rescale(
+  /**
+   * Columns for what was tested and through what, checked.
+   * @throws 422 for what the project has not, and for what is retired and was not named before
+   */
+  private async standing(
+    projectId: string,
+    { eut, equipmentId, operatingModeId, measuringChainId }: Omit<UpdateRecording, 'channels'>,
+    before: Pick<RecordingRow, 'equipmentId' | 'operatingModeId' | 'measuringChainId'>,
+  ) {
+    const named = await this.equipment.named(projectId, { equipmentId, operatingModeId }, before);
+    if (typeof measuringChainId === 'string' && measuringChainId !== before.measuringChainId) {
+      await this.chains.demandInUse([{ path: 'measuringChainId', id: measuringChainId }]);
+    }
+    return eut === undefined ? named : { ...named, eut };
+  }
+
+  /** Changes channels; other names, units or scales are followed by a new analysis. */
+  private async changeChannels(
     tx: Tx,
     recording: RecordingRow,
     userId: string,
     changes: NonNullable<UpdateRecording['channels']>,
   ): Promise<void> {
     const { id } = recording;
-    const known = new Set((await this.repository.channelsOf(tx, id)).map(({ index }) => index));
+    const rows = await this.repository.channelsOf(tx, id);
+    const known = new Set(rows.map(({ index }) => index));
     if (isBeingRead(recording) || known.size === 0) {
       throw problem(409, 'not-read', 'The channels can be changed once the recording has been read');
     }
@@ -247,9 +277,21 @@ export class RecordingsService {
     );
     if (errors.length > 0)
       throw problem(400, 'invalid-request', 'A channel is not known; see errors', errors);
+    const before = new Map(rows.map((row) => [row.index, row.measuringChainId]));
+    await this.chains.demandInUse(
+      changes.flatMap(({ index, measuringChainId: chainId }, place) =>
+        typeof chainId === 'string' && chainId !== before.get(index)
+          ? [{ path: `channels.${place}.measuringChainId`, id: chainId }]
+          : [],
+      ),
+    );
     for (const { index, ...change } of changes) {
       if (Object.keys(change).length > 0) await this.repository.updateChannel(tx, id, index, change);
     }
+    const rescales = changes.some(
+      ({ index: _, measuringChainId: __, ...scale }) => Object.keys(scale).length > 0,
+    );
+    if (!rescales) return;
     const settings = await this.repository.settingsFor(tx, recording);
     await this.runs.start(tx, { recordingId: id, settings, startedById: userId, replacesEarlier: true });
   }

@@ -182,7 +182,10 @@ export class ResumableUploadsController {
   @ApiProblem(400, 'Options that are not valid')
   @ApiProblem(409, 'Bytes are missing')
   @ApiProblem(413, 'The project would hold more than its quota')
-  @ApiProblem(422, 'What arrived has another checksum, or is an archive that cannot be unpacked')
+  @ApiProblem(
+    422,
+    'Another checksum, an archive that cannot be unpacked, or equipment, mode or chain do not fit',
+  )
   finish(
     @Param('id') projectId: string,
     @Param('uploadId') uploadId: string,

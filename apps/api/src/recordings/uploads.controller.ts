@@ -47,6 +47,7 @@ export class UploadsController {
   @ZodResponse({ status: 202, type: RecordingDto })
   @ApiProblem(400, 'No file, a ZIP archive, or import options that are not valid')
   @ApiProblem(413, 'The file is larger than the limit, or than what the project may still take')
+  @ApiProblem(422, 'Equipment, mode or chain that is not there, not of the project, or retired')
   @ApiProblem(507, 'The disk of the server has no room')
   upload(
     @Param('id') projectId: string,
@@ -68,7 +69,7 @@ export class UploadsController {
   @ZodResponse({ status: 202, type: UploadOutcomeDto })
   @ApiProblem(400, 'No file, no ZIP archive, or import options that are not valid')
   @ApiProblem(413, 'The archive is larger than the limit, or than what the project may still take')
-  @ApiProblem(422, 'The archive cannot be read or holds nothing')
+  @ApiProblem(422, 'The archive cannot be read or holds nothing, or equipment, mode or chain do not fit')
   @ApiProblem(507, 'The disk of the server has no room')
   unpack(
     @Param('id') projectId: string,

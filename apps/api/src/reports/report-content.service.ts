@@ -1,6 +1,9 @@
 import { Injectable } from '@nestjs/common';
 import type { Analysis, Note, ReportContent, ReportSection, Verdict } from '@overtally/contracts';
 import { AnalysesService } from '../analyses/analyses.service.js';
+import { EquipmentService } from '../equipment/equipment.service.js';
+import { ChainsService } from '../instruments/chains.service.js';
+import { LaboratoryService } from '../laboratory/laboratory.service.js';
 import { VerdictsService } from '../limits/verdicts.service.js';
 import { NotesService } from '../notes/notes.service.js';
 import { RecordingsService } from '../recordings/recordings.service.js';
@@ -18,6 +21,9 @@ export class ReportContentService {
     private readonly analyses: AnalysesService,
     private readonly notes: NotesService,
     private readonly pictures: ReportPictures,
+    private readonly equipment: EquipmentService,
+    private readonly chains: ChainsService,
+    private readonly laboratory: LaboratoryService,
   ) {}
 
   /** The content as of now, one section per verdict in the order given. */
@@ -30,10 +36,9 @@ export class ReportContentService {
     for (const verdict of verdicts) {
       if (verdict) sections.push(await this.section(verdict));
     }
-    const laboratory = { name: '', address: '', contact: '', accreditation: '' };
     return {
       ...head,
-      laboratory,
+      laboratory: await this.laboratory.get(),
       sections,
       result: worstResult(sections.map((section) => section.verdict.result)),
     };
@@ -57,6 +62,9 @@ export class ReportContentService {
       this.notesOf(verdict.analysisId),
     ]);
     const { id, number, name, eut, measuringChain, instrument, capturedAt, file } = recording;
+    const chainId =
+      recording.channels.find(({ index }) => index === verdict.channel)?.chain?.id ?? recording.chain?.id;
+    const moment = new Date(recording.capturedAt ?? recording.createdAt);
     const { sampleRateHz, sampleCount, durationS, metadata } = recording;
     const { recordingId, analysisId } = verdict;
     const judged = analysisPart(analysis, verdict.channel);
@@ -68,10 +76,9 @@ export class ReportContentService {
       },
       analysis: judged,
       notes: notes.filter((note) => note.channel === verdict.channel),
-      equipment: null,
-      operatingMode: null,
-      chain: null,
-      conditions: {},
+      ...(await this.equipment.ofRecording(recording.id)),
+      chain: chainId === undefined ? null : await this.chains.chainAt(chainId, moment),
+      conditions: recording.conditions,
       ...(await this.pictures.of({ recordingId, analysisId, ...judged })),
     };
   }

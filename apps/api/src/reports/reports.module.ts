@@ -1,5 +1,8 @@
 import { Module } from '@nestjs/common';
 import { AnalysesModule } from '../analyses/analyses.module.js';
+import { EquipmentModule } from '../equipment/equipment.module.js';
+import { InstrumentsModule } from '../instruments/instruments.module.js';
+import { LaboratoryModule } from '../laboratory/laboratory.module.js';
 import { LimitsModule } from '../limits/limits.module.js';
 import { NotesModule } from '../notes/notes.module.js';
 import { RecordingsModule } from '../recordings/recordings.module.js';
@@ -17,7 +20,15 @@ import { ReportRendering } from './rendering/report-rendering.service.js';
 import { ReportsService } from './reports.service.js';
 
 @Module({
-  imports: [AnalysesModule, LimitsModule, NotesModule, RecordingsModule],
+  imports: [
+    AnalysesModule,
+    EquipmentModule,
+    InstrumentsModule,
+    LaboratoryModule,
+    LimitsModule,
+    NotesModule,
+    RecordingsModule,
+  ],
   controllers: [ReportsController, ReportStepsController, ReportPdfController],
   providers: [
     ReportsService,

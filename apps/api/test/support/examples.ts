@@ -3,6 +3,7 @@ import type { ResourceKind } from '../../dist/access/require-permission.decorato
 import { newPerson } from './factories.js';
 import {
   newAnalysis,
+  newEquipment,
   newLimitSet,
   newNote,
   newReadingRule,
@@ -26,6 +27,7 @@ export async function makeExamples({ database, project }: TestApp, userId: strin
   const verdict = await newVerdict(database, analysis.id, owner);
   return {
     project: project.id,
+    equipment: (await newEquipment(database, owner)).id,
     'reading-rule': (await newReadingRule(database, owner)).id,
     recording: recording.id,
     analysis: analysis.id,

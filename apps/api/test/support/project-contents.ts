@@ -30,6 +30,20 @@ export async function newRecording(database: Database, { projectId, userId }: Ow
   return made(row);
 }
 
+/** A compressor with one operating mode. */
+export async function newEquipment(database: Database, { projectId, userId }: Owner) {
+  const [row] = await database
+    .insert(schema.equipment)
+    .values({ projectId, name: 'Compressor', createdById: userId })
+    .returning();
+  const equipment = made(row);
+  const [mode] = await database
+    .insert(schema.operatingModes)
+    .values({ equipmentId: equipment.id, position: 0, name: 'Full load' })
+    .returning();
+  return { ...equipment, mode: made(mode) };
+}
+
 /** A reading rule that fits tables by their ending. */
 export async function newReadingRule(database: Database, { projectId, userId }: Owner) {
   const name = `Rule ${randomUUID()}`;

@@ -1,11 +1,11 @@
 import {
-  accountSchema,
+  ownAccountSchema,
   limitSetSchema,
   memberSchema,
   projectSchema,
   recordingSchema,
   userSchema,
-  type Account,
+  type OwnAccount,
   type LimitSet,
   type Member,
   type Project,
@@ -19,12 +19,13 @@ export const sampleId = (number: number) => `00000000-0000-4000-8000-${String(nu
 const moment = '2026-11-26T13:20:00Z';
 
 /** Samples go through the schemas of the contracts, so that they cannot drift from them. */
-export const sampleAccount = (change: Partial<Account> = {}): Account =>
-  accountSchema.parse({
+export const sampleAccount = (change: Partial<OwnAccount> = {}): OwnAccount =>
+  ownAccountSchema.parse({
     id: sampleId(1),
     email: 'mara.lind@halden.example',
     name: 'Mara Lind',
     isAdministrator: false,
+    worksInLaboratory: true,
     ...change,
   });
 
@@ -87,6 +88,7 @@ export const sampleRecording = (change: Partial<Recording> = {}): Recording =>
   recordingSchema.parse({
     ...{ id: sampleId(147), projectId: sampleId(10), number: 'R-0147', name: 'Bench dimmer' },
     ...{ eut: 'DM-4', measuringChain: '', instrument: '', capturedAt: moment, remark: '' },
+    ...{ equipment: null, operatingMode: null, chain: null, conditions: {} },
     ...{ status: 'ready', progress: 1, problem: null, warnings: [], duplicateOf: null },
     file: { name: 'dimmer.csv', size: 1000, sha256: '9f3c1ad0'.padEnd(64, '0') },
     ...{
@@ -98,7 +100,7 @@ export const sampleRecording = (change: Partial<Recording> = {}): Recording =>
       sampleCount: 20_000,
       durationS: 2,
     },
-    channels: [{ index: 0, name: 'i', quantity: 'current', unit: 'A', gain: 1, offset: 0 }],
+    channels: [{ index: 0, name: 'i', quantity: 'current', unit: 'A', gain: 1, offset: 0, chain: null }],
     ...{ latestAnalysisId: sampleId(500), summaries: [], createdAt: moment },
     uploadedBy: { id: sampleId(1), name: 'Mara Lind' },
     ...change,

@@ -1,9 +1,9 @@
 import {
   accessKeyPageSchema,
-  accountSchema,
   changePasswordSchema,
   createAccessKeySchema,
   createdAccessKeySchema,
+  ownAccountSchema,
   pageQuerySchema,
   signInSchema,
   updateAccountSchema,
@@ -11,7 +11,7 @@ import {
 import { createZodDto } from 'nestjs-zod';
 
 export class SignInDto extends createZodDto(signInSchema) {}
-export class AccountDto extends createZodDto(accountSchema) {}
+export class OwnAccountDto extends createZodDto(ownAccountSchema) {}
 export class UpdateAccountDto extends createZodDto(updateAccountSchema) {}
 export class ChangePasswordDto extends createZodDto(changePasswordSchema) {}
 

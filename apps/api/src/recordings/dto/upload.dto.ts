@@ -2,6 +2,7 @@ import {
   finishUploadSchema,
   importOptionsSchema,
   readingRuleIdSchema,
+  testConditionsSchema,
   unfinishedUploadListSchema,
   updateRecordingSchema,
   uploadLimitsSchema,
@@ -18,10 +19,10 @@ const filled = <T extends z.ZodType>(schema: T) =>
   z.preprocess((value) => (value === '' ? undefined : value), schema);
 
 /** An empty text counts as absent, the text null as none. */
-const readingRuleIdField = z.preprocess(
-  (value) => (value === '' ? undefined : value === 'null' ? null : value),
-  readingRuleIdSchema,
-);
+const named = <T extends z.ZodType>(schema: T) =>
+  z.preprocess((value) => (value === '' ? undefined : value === 'null' ? null : value), schema);
+
+const readingRuleIdField = named(readingRuleIdSchema);
 
 const uploadSchema = z.object({
   name: filled(bench.name),
@@ -30,6 +31,10 @@ const uploadSchema = z.object({
   instrument: filled(bench.instrument),
   capturedAt: filled(bench.capturedAt),
   remark: filled(bench.remark),
+  equipmentId: named(bench.equipmentId),
+  operatingModeId: named(bench.operatingModeId),
+  measuringChainId: named(bench.measuringChainId),
+  conditions: jsonText(testConditionsSchema).optional(),
   import: jsonText(importOptionsSchema).optional(),
   readingRuleId: readingRuleIdField,
 });
@@ -82,6 +87,10 @@ export const uploadBody = {
     instrument: text,
     capturedAt: { ...text, format: 'date-time' },
     remark: text,
+    equipmentId: { ...text, format: 'uuid', description: 'Equipment of the project' },
+    operatingModeId: { ...text, format: 'uuid', description: 'Operating mode of that equipment' },
+    measuringChainId: { ...text, format: 'uuid', description: 'Measuring chain of the laboratory' },
+    conditions: { ...text, description: 'Test conditions as JSON, such as {"ambientTemperatureC": 23.5}' },
     import: { ...text, description: 'Import options as JSON; what is absent is detected' },
     readingRuleId: readingRuleText,
   },

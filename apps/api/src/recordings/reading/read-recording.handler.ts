@@ -13,7 +13,7 @@ import { ReadingRulesService } from '../../reading-rules/reading-rules.service.j
 import { Storage } from '../../storage/storage.js';
 import { AnalysisRunsService } from '../analysis-runs.service.js';
 import { readPrefix } from '../recording-keys.js';
-import { RecordingsRepository, type RecordingRow } from '../recordings.repository.js';
+import { RecordingsRepository, type ChannelRow, type RecordingRow } from '../recordings.repository.js';
 import type { ReadTaskInput, ReadTaskResult } from './read-task.js';
 
 type Payload = z.infer<typeof readRecordingJob.payload>;
@@ -103,7 +103,11 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
       await this.repository.replaceChannels(
         tx,
         recordingId,
-        result.channels.map(({ column: _column, ...channel }) => ({ ...channel, recordingId })),
+        result.channels.map(({ column: _column, ...channel }) => ({
+          ...channel,
+          recordingId,
+          measuringChainId: keptChain(channel, earlier, result.channels),
+        })),
       );
       const { format, metadata, sampleRateHz, sampleCount, warnings } = result;
       await this.repository.update(tx, recordingId, {
@@ -141,6 +145,23 @@ export class ReadRecordingHandler implements JobHandler<Payload> {
       await this.repository.update(tx, recording.id, { status: 'failed', problem });
     });
   }
+}
+
+type Named = Pick<ChannelRow, 'index' | 'name' | 'quantity'>;
+
+/** The chain of an earlier channel that is the same one: by name, else by place where neither name stands elsewhere. */
+export function keptChain(
+  channel: Named,
+  earlier: readonly (Named & Pick<ChannelRow, 'measuringChainId'>)[],
+  channels: readonly Named[],
+): string | null {
+  const sameName = earlier.find(({ name }) => name === channel.name);
+  if (sameName !== undefined) return sameName.measuringChainId;
+  const samePlace = earlier.find(
+    ({ index, quantity }) => index === channel.index && quantity === channel.quantity,
+  );
+  if (samePlace === undefined || channels.some(({ name }) => name === samePlace.name)) return null;
+  return samePlace.measuringChainId;
 }
 
 /** A problem of a file that was read by a rule: the fault may lie in the rule, which whoever sent the file may not know. */

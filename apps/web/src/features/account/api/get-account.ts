@@ -1,4 +1,4 @@
-import { accountSchema } from '@overtally/contracts';
+import { ownAccountSchema } from '@overtally/contracts';
 import { queryOptions } from '@tanstack/react-query';
 import { requestJson } from '../../../lib/http.js';
 
@@ -6,6 +6,6 @@ import { requestJson } from '../../../lib/http.js';
 export const accountQuery = () =>
   queryOptions({
     queryKey: ['account'],
-    queryFn: ({ signal }) => requestJson(accountSchema, '/auth/me', { signal }),
+    queryFn: ({ signal }) => requestJson(ownAccountSchema, '/auth/me', { signal }),
     staleTime: 60_000,
   });

@@ -1,6 +1,6 @@
-import { accountSchema, type Account, type UpdateAccount } from '@overtally/contracts';
+import { ownAccountSchema, type OwnAccount, type UpdateAccount } from '@overtally/contracts';
 import { requestJson } from '../../../lib/http.js';
 
-export function updateAccount(change: UpdateAccount): Promise<Account> {
-  return requestJson(accountSchema, '/auth/me', { method: 'PATCH', body: change });
+export function updateAccount(change: UpdateAccount): Promise<OwnAccount> {
+  return requestJson(ownAccountSchema, '/auth/me', { method: 'PATCH', body: change });
 }

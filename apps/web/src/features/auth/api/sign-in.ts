@@ -1,6 +1,6 @@
-import { accountSchema, type Account, type SignIn } from '@overtally/contracts';
+import { ownAccountSchema, type OwnAccount, type SignIn } from '@overtally/contracts';
 import { requestJson } from '../../../lib/http.js';
 
-export function signIn(credentials: SignIn): Promise<Account> {
-  return requestJson(accountSchema, '/auth/sign-in', { method: 'POST', body: credentials });
+export function signIn(credentials: SignIn): Promise<OwnAccount> {
+  return requestJson(ownAccountSchema, '/auth/sign-in', { method: 'POST', body: credentials });
 }

@@ -1,6 +1,6 @@
 import { Button, Input, Stack } from '@chakra-ui/react';
 import { zodResolver } from '@hookform/resolvers/zod';
-import { signInSchema, type Account } from '@overtally/contracts';
+import { signInSchema, type OwnAccount } from '@overtally/contracts';
 import { useMutation } from '@tanstack/react-query';
 import { useForm } from 'react-hook-form';
 import { FormField } from '../../../components/form-field.js';
@@ -20,7 +20,7 @@ function refusal(error: unknown): string {
 }
 
 /** E-mail and password. */
-export function SignInForm({ onSignedIn }: { onSignedIn: (account: Account) => void }) {
+export function SignInForm({ onSignedIn }: { onSignedIn: (account: OwnAccount) => void }) {
   const form = useForm({ resolver: zodResolver(signInSchema), defaultValues: { email: '', password: '' } });
   const { errors } = form.formState;
   const submit = useMutation({

@@ -1,10 +1,10 @@
-import type { Channel, Recording } from '@overtally/contracts';
+import type { RecordedChannel, Recording } from '@overtally/contracts';
 import { hashKey } from '@tanstack/react-query';
 import { describe, expect, it } from 'vitest';
 import { waveformQuery } from './get-waveform.js';
 
-const channel = (change: Partial<Channel> = {}): Channel => ({
-  ...{ index: 0, name: 'u', quantity: 'voltage', unit: 'V', gain: 1, offset: 0 },
+const channel = (change: Partial<RecordedChannel> = {}): RecordedChannel => ({
+  ...{ index: 0, name: 'u', quantity: 'voltage', unit: 'V', gain: 1, offset: 0, chain: null },
   ...change,
 });
 const recording = {

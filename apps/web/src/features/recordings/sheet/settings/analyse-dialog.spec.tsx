@@ -12,8 +12,8 @@ import { AnalyseDialog } from './analyse-dialog.js';
 
 const recording = sampleRecording({
   channels: [
-    { index: 0, name: 'u', quantity: 'voltage', unit: 'V', gain: 1, offset: 0 },
-    { index: 1, name: 'i', quantity: 'current', unit: 'A', gain: 1, offset: 0 },
+    { index: 0, name: 'u', quantity: 'voltage', unit: 'V', gain: 1, offset: 0, chain: null },
+    { index: 1, name: 'i', quantity: 'current', unit: 'A', gain: 1, offset: 0, chain: null },
   ],
 });
 

@@ -1,0 +1,1 @@
+ALTER TABLE "operating_modes" ADD COLUMN "retired_at" timestamp (3) with time zone;
