@@ -7,3 +7,4 @@ export * from './mails.js';
 export * from './projects.js';
 export * from './recordings.js';
 export * from './reports.js';
+export * from './studies.js';

@@ -19,6 +19,7 @@ export const projects = pgTable('projects', {
   preparerMayIssue: boolean().notNull().default(false),
   lastRecordingNumber: integer().notNull().default(0),
   lastReportNumber: integer().notNull().default(0),
+  lastStudyNumber: integer().notNull().default(0),
   archivedAt: moment(),
   createdById: uuid()
     .notNull()

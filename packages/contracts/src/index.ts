@@ -15,4 +15,5 @@ export * from './report-twin.js';
 export * from './reports.js';
 export * from './power.js';
 export * from './series.js';
+export * from './studies.js';
 export * from './uploads.js';
