@@ -100,26 +100,19 @@ export {
   zeros,
   type TransferFunction,
 } from './transfer/transfer-function.js';
-export { relativeDegree } from './transfer/transfer-function.js';
+export { closeLoop, type LoopOutput } from './transfer/close-loop.js';
+export { relativeDegree, type Response, type StabilityVerdict } from './transfer/transfer-function.js';
 export { fromZerosPolesGain, zerosPolesGain, type ZerosPolesGain } from './transfer/zeros-poles-gain.js';
-export {
-  closeLoop,
-  inSeries,
-  MAX_PADE_ORDER,
-  padeDelay,
-  withPadeDelay,
-  type LoopOutput,
-} from './transfer/compose.js';
+export { inSeries, MAX_PADE_ORDER, padeDelay, withPadeDelay } from './transfer/compose.js';
 export { expandRoots, polynomialRoots, type Root } from './transfer/polynomial-roots.js';
 export {
   frequencyResponse,
   responseOf,
   totalDelay,
-  type Response,
   type ResponsePoint,
   type StageChain,
 } from './transfer/frequency-response.js';
-export { stability, type Stability, type StabilityVerdict } from './transfer/stability.js';
+export { stability, type Stability } from './transfer/stability.js';
 export { steadyStateOf, type SteadyState } from './transfer/steady-state.js';
 export { logFrequencies, resonancePeaks, type ResonancePeak } from './transfer/resonance.js';
 export {
@@ -143,6 +136,13 @@ export {
   type StageSpec,
 } from './circuits/stage-spec.js';
 export { pidController, type ControllerSettings } from './circuits/controller.js';
+export {
+  supplyImpedance,
+  transformerImpedance,
+  type SeriesElements,
+  type SupplyData,
+  type TransformerData,
+} from './circuits/network-data.js';
 export { lineReactorInductance, type LineReactorRating } from './circuits/line-reactor.js';
 export {
   designCTypeFilter,

@@ -1,4 +1,5 @@
 import { AnalysisInputError } from '../errors.js';
+import { requirePositive } from './network-data.js';
 
 /** What a shunt filter shall do; per phase quantities follow for a star of three branches. */
 export interface ShuntFilterDemand {
@@ -65,11 +66,7 @@ export function parallelResonanceOrder(shortCircuitPowerVA: number, capacitorPow
 }
 
 function checked(demand: ShuntFilterDemand): { omega: number; order: number } {
-  for (const [name, value] of Object.entries(demand) as [string, number][]) {
-    if (!(value > 0 && value < Infinity)) {
-      throw new AnalysisInputError(`${name} is ${value}; it must be greater than 0.`);
-    }
-  }
+  requirePositive(demand);
   if (!(demand.tuningOrder > 1)) {
     throw new AnalysisInputError(`The filter is tuned to order ${demand.tuningOrder}; it must be above 1.`);
   }

@@ -1,3 +1,5 @@
+import { AnalysisInputError } from '../errors.js';
+import { transferFunction } from '../transfer/transfer-function.js';
 import { ABSENT, NONE, parameter, type CheckedValues, type CircuitKind } from './circuit-kind.js';
 import { ladderTransfer, seriesImpedance, type LadderElement, type SeriesBranch } from './impedance.js';
 import { lineReactorInductance } from './line-reactor.js';
@@ -14,7 +16,15 @@ const load = parameter.resistance(
 );
 const neededLoad = parameter.resistance('loadResistanceOhm', 'RLoad', 'load across the output');
 
-/** Passive two-ports, from the voltage of a source without impedance to the voltage across the load. */
+const branch = [
+  parameter.resistance('resistanceOhm', 'R', 'resistance', NONE),
+  parameter.inductance('inductanceH', 'L', 'inductance', NONE),
+  parameter.capacitance('capacitanceF', 'C', 'capacitance in series, none if left out', ABSENT),
+];
+
+/**
+ * Passive two-ports, from the voltage of a source without impedance to the voltage across the load, and plain impedances.
+ */
 export const passiveStages = {
   'rc-low-pass': {
     meaning: 'voltage across C, behind R in series',
@@ -123,6 +133,28 @@ export const passiveStages = {
       ]);
     },
   },
+  'series-impedance': {
+    meaning: 'voltage across R, L and C in series over the current through them, V/A',
+    parameters: branch,
+    // Improper with L: behind a shunt filter it gives the voltage at the bus from the current in the supply.
+    transfer: (v) => {
+      const { numerator, denominator } = seriesImpedance(branchOf(v));
+      return transferFunction(numerator, denominator);
+    },
+  },
+  'series-admittance': {
+    meaning: 'current through R, L and C in series over the voltage across them, A/V',
+    parameters: branch,
+    transfer: (v) => {
+      const { numerator, denominator } = seriesImpedance(branchOf(v));
+      if (numerator.every((c) => c === 0)) {
+        throw new AnalysisInputError(
+          'A branch without R, L and C is a short circuit; give at least one of them.',
+        );
+      }
+      return transferFunction(denominator, numerator);
+    },
+  },
   transformer: {
     meaning: 'voltage at the load on the secondary over the voltage at the primary',
     parameters: [
@@ -167,6 +199,14 @@ function reactorOf(v: CheckedValues): number {
     ratedCurrentA: v.of('ratedCurrentA'),
     ratedFrequencyHz: v.of('ratedFrequencyHz'),
   });
+}
+
+function branchOf(v: CheckedValues): SeriesBranch {
+  return {
+    resistanceOhm: v.of('resistanceOhm'),
+    inductanceH: v.of('inductanceH'),
+    capacitanceF: v.maybe('capacitanceF'),
+  };
 }
 
 function series(branch: SeriesBranch): LadderElement {

@@ -1,6 +1,6 @@
 import { AnalysisInputError } from '../errors.js';
 import type { Complex } from '../linear/complex.js';
-import { closeLoop, type LoopOutput } from '../transfer/compose.js';
+import { closeLoop, type LoopOutput } from '../transfer/close-loop.js';
 import { transferFunction, type TransferFunction } from '../transfer/transfer-function.js';
 import { fromZerosPolesGain } from '../transfer/zeros-poles-gain.js';
 import { checkValues, type CircuitKind, type CircuitValues } from './circuit-kind.js';

@@ -6,6 +6,8 @@ import { stability } from '../transfer/stability.js';
 import { fromZerosPolesGain, zerosPolesGain } from '../transfer/zeros-poles-gain.js';
 import { designCTypeFilter, designTunedFilter, parallelResonanceOrder } from './filter-design.js';
 import { lineReactorInductance } from './line-reactor.js';
+import { supplyImpedance, transformerImpedance } from './network-data.js';
+import { relativeDegree } from '../transfer/transfer-function.js';
 import { chainOf, circuitKinds, stageTransfer, type CircuitName, type StageSpec } from './stage-spec.js';
 
 const circuit = (name: CircuitName, values: Record<string, number>) =>
@@ -154,6 +156,38 @@ describe('filter design', () => {
     });
     const [peak] = resonancePeaks(h);
     expect(peak!.frequencyHz / 500).toBeCloseTo(1, 4);
+  });
+
+  it('takes supply and transformer from their rating', () => {
+    // 10 MVA at 400 V: 16 mΩ; with X/R = 4/3 it is 9.6 mΩ and 12.8 mΩ.
+    const supply = {
+      voltageV: 400,
+      shortCircuitPowerVA: 10e6,
+      reactanceToResistance: 4 / 3,
+      frequencyHz: 50,
+    };
+    const { resistanceOhm, inductanceH } = supplyImpedance(supply);
+    expect(resistanceOhm).toBeCloseTo(0.0096, 12);
+    expect(2 * Math.PI * 50 * inductanceH).toBeCloseTo(0.0128, 12);
+    // 630 kVA, 400 V, 6 %: 0.06 · 0.16/0.63 Ω = 15.238 mΩ.
+    const transformer = transformerImpedance({
+      ...{ ratedPowerVA: 630e3, ratedVoltageV: 400, shortCircuitVoltagePercent: 6 },
+      ...{ reactanceToResistance: 5, frequencyHz: 50 },
+    });
+    const reactance = 2 * Math.PI * 50 * transformer.inductanceH;
+    expect(Math.hypot(transformer.resistanceOhm, reactance)).toBeCloseTo(0.0152381, 7);
+    expect(reactance / transformer.resistanceOhm).toBeCloseTo(5, 12);
+    expect(() => supplyImpedance({ ...supply, shortCircuitPowerVA: 0 })).toThrow(/shortCircuitPowerVA is 0/);
+  });
+
+  it('gives the voltage at the bus by the supply impedance behind the filter', () => {
+    // 10 A of order 5 into 0.1 Ω + j0.5 Ω at 250 Hz alone: 10 · √0.26 V.
+    const h = circuit('series-impedance', { resistanceOhm: 0.1, inductanceH: 0.5 / (2 * Math.PI * 250) });
+    expect(10 * complexAbs(responseOf(h)(250)!)).toBeCloseTo(10 * Math.sqrt(0.26), 10);
+    expect(relativeDegree(h)).toBe(-1);
+    const y = circuit('series-admittance', { resistanceOhm: 2, capacitanceF: 1e-3 });
+    expect(complexAbs(responseOf(y)(50)!)).toBeCloseTo(1 / Math.hypot(2, 1 / (100 * Math.PI * 1e-3)), 12);
+    expect(() => circuit('series-admittance', {})).toThrow(/short circuit/);
   });
 
   it('sizes a line reactor by its percent impedance', () => {

@@ -3,7 +3,7 @@ import { checkSeries } from '../fourier/check-series.js';
 import type { FourierSeries } from '../fourier/types.js';
 import { waveformOf } from '../fourier/waveform.js';
 import type { StageChain } from '../transfer/frequency-response.js';
-import type { StabilityVerdict } from '../transfer/stability.js';
+import type { StabilityVerdict } from '../transfer/transfer-function.js';
 import { steadyStateOf } from '../transfer/steady-state.js';
 
 export interface ThroughStagesOptions {

@@ -1,6 +1,6 @@
 import { AnalysisInputError } from '../errors.js';
 import { stagesOf, totalDelay, type StageChain } from './frequency-response.js';
-import { addPolynomials, multiplyPolynomials, type Polynomial } from './polynomial.js';
+import { multiplyPolynomials } from './polynomial.js';
 import { transferFunction, type TransferFunction } from './transfer-function.js';
 
 /** Highest order of the Padé approximant; above it its coefficients no longer carry enough digits. */
@@ -50,52 +50,4 @@ export function padeDelay(delayS: number, order: number): TransferFunction {
 export function withPadeDelay(h: TransferFunction, order: number): TransferFunction {
   const { numerator, denominator, delayS = 0 } = h;
   return delayS === 0 ? h : inSeries([{ numerator, denominator }, padeDelay(delayS, order)]);
-}
-
-/** Which answer of a loop with unity feedback is meant. */
-export type LoopOutput = 'reference-to-output' | 'reference-to-error' | 'disturbance-to-output';
-
-/**
- * A loop of controller C and plant G with unity negative feedback: C G/(1 + C G) from reference to output, 1/(1 + C G) from
- * reference to error, G/(1 + C G) from a disturbance at the input of the plant to the output. All three have the full
- * characteristic polynomial as denominator, so a mode that C and G cancel between them stays visible.
- *
- * @param padeOrder order of the Padé approximant that stands for delays within the loop
- * @throws AnalysisInputError when there is a delay and no order is given (closed, it has infinitely many poles), or when
- *   1 + C G is zero
- */
-export function closeLoop(
-  controller: StageChain,
-  plant: StageChain,
-  output: LoopOutput = 'reference-to-output',
-  padeOrder?: number,
-): TransferFunction {
-  const c = rational(controller, padeOrder);
-  const g = rational(plant, padeOrder);
-  const forward = multiplyPolynomials(c.numerator, g.numerator);
-  const open = multiplyPolynomials(c.denominator, g.denominator);
-  const characteristic = addPolynomials(open, forward);
-  if (characteristic.length === 0) {
-    throw new AnalysisInputError(
-      'The loop gain is −1 at every frequency: the loop has no solution. Change its gain.',
-    );
-  }
-  const numerators: Record<LoopOutput, () => Polynomial> = {
-    'reference-to-output': () => forward,
-    'reference-to-error': () => open,
-    'disturbance-to-output': () => multiplyPolynomials(g.numerator, c.denominator),
-  };
-  return transferFunction(numerators[output](), characteristic);
-}
-
-function rational(chain: StageChain, padeOrder: number | undefined): TransferFunction {
-  const h = inSeries(chain);
-  if (h.delayS === undefined) return h;
-  if (padeOrder === undefined) {
-    throw new AnalysisInputError(
-      `The loop holds a delay of ${h.delayS} s and so has infinitely many poles. State a Padé order from 1 to ` +
-        `${MAX_PADE_ORDER}, or judge the loop by the Nyquist criterion.`,
-    );
-  }
-  return withPadeDelay(h, padeOrder);
 }

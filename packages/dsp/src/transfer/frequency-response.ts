@@ -1,7 +1,7 @@
 import { angleDegrees, complexAbs, type Complex } from '../linear/complex.js';
 import { axisPolynomial, evaluateOnAxis } from './axis-polynomial.js';
 import { trimLeadingZeros } from './polynomial.js';
-import { dcGain, type TransferFunction } from './transfer-function.js';
+import { dcGain, type Response, type TransferFunction } from './transfer-function.js';
 
 export interface ResponsePoint {
   frequencyHz: number;
@@ -16,9 +16,6 @@ export interface ResponsePoint {
 /** One stage or several in series; the whole response is their product. */
 export type StageChain = TransferFunction | readonly TransferFunction[];
 
-/** H(j2πf); null at a pole on the imaginary axis. */
-export type Response = (frequencyHz: number) => Complex | null;
-
 /** The stages of a chain, one by one. */
 export function stagesOf(chain: StageChain): readonly TransferFunction[] {
   return 'numerator' in chain ? [chain] : chain;
@@ -30,8 +27,11 @@ export function totalDelay(chain: StageChain): number {
 }
 
 /** Response H(j2πf) of a stage or of stages in series at each of the frequencies, which may be 0. */
-export function frequencyResponse(chain: StageChain, frequenciesHz: ArrayLike<number>): ResponsePoint[] {
-  const response = responseOf(chain);
+export function frequencyResponse(
+  chain: StageChain | Response,
+  frequenciesHz: ArrayLike<number>,
+): ResponsePoint[] {
+  const response = typeof chain === 'function' ? chain : responseOf(chain);
   return Array.from(frequenciesHz, (frequencyHz) => responsePoint(frequencyHz, response(frequencyHz)));
 }
 
@@ -73,6 +73,7 @@ export function responseOf(chain: StageChain): Response {
 }
 
 function stageResponse(h: TransferFunction): Response {
+  if (h.exact) return h.exact.response;
   const numerator = axisPolynomial(trimLeadingZeros(h.numerator));
   const denominator = axisPolynomial(trimLeadingZeros(h.denominator));
   const excess = numerator.degree - denominator.degree;

@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { pidController } from '../circuits/controller.js';
-import { closeLoop, inSeries, padeDelay, withPadeDelay } from './compose.js';
+import { closeLoop } from './close-loop.js';
+import { inSeries, padeDelay, withPadeDelay } from './compose.js';
 import { responseAt } from './frequency-response.js';
 import { loopMargins } from './loop-margins.js';
 import { hiddenModes } from './natural-modes.js';
@@ -115,12 +116,32 @@ describe('closeLoop', () => {
     expect(() => closeLoop([], transferFunction([-1], [1]))).toThrow(/−1 at every frequency/);
   });
 
-  it('answers on the axis as the exact loop does', () => {
-    const loop = delayedIntegrator(1);
-    const exact = closedLoopResponse(loop)(0.2)!;
-    const approximate = responseAt(closeLoop([], loop, 'reference-to-output', 6), 0.2)!;
-    expect(Math.hypot(exact.re - approximate.re, exact.im - approximate.im)).toBeLessThan(1e-6);
-    expect(closedLoopResponse(loop)(0)).toEqual({ re: 1, im: 0 });
+  it('answers on the axis as the exact loop does, far beyond what the approximant can follow', () => {
+    // L = e^(−jω)/(jω), by arithmetic, at 40 rad/s: a first-order approximant is long off there.
+    const closed = closeLoop([], delayedIntegrator(1), 'reference-to-output', 1);
+    const { re, im } = responseAt(closed, 40 / (2 * Math.PI))!;
+    // L/(1 + L) = 1/(1 + 1/L) = 1/(1 + jω e^(jω)).
+    const [x, y] = [1 - 40 * Math.sin(40), 40 * Math.cos(40)];
+    expect(re).toBeCloseTo(x / (x * x + y * y), 12);
+    expect(im).toBeCloseTo(-y / (x * x + y * y), 12);
+    expect(closedLoopResponse(delayedIntegrator(1))(0)).toEqual({ re: 1, im: 0 });
+    expect(responseAt(closed, 0)!.re).toBeCloseTo(1, 12);
+    const rational = { numerator: closed.numerator, denominator: closed.denominator };
+    const fine = closeLoop([], delayedIntegrator(1), 'reference-to-output', 6);
+    const [exact, close] = [responseAt(fine, 0.2)!, responseAt({ ...fine, exact: undefined }, 0.2)!];
+    expect(Math.hypot(exact.re - close.re, exact.im - close.im)).toBeLessThan(1e-6);
+    expect(responseAt(rational, 40 / (2 * Math.PI))!.re).not.toBeCloseTo(re, 3);
+  });
+
+  it('judges a loop with a delay exactly, whatever the approximant says', () => {
+    // The limit is π/2; the first-order approximant puts it at 2: 1.9 is unstable all the same.
+    const closed = closeLoop([], delayedIntegrator(1.9), 'reference-to-output', 1);
+    const { numerator, denominator } = closed;
+    expect(stability({ numerator, denominator }).verdict).toBe('stable');
+    expect(stability(closed)).toMatchObject({ verdict: 'unstable', offending: [] });
+    expect(stability([closed, transferFunction([1], [1, 1])]).reason).toContain(
+      '2 poles with positive real part',
+    );
   });
 });
 

@@ -2,11 +2,19 @@ import { AnalysisInputError } from '../errors.js';
 import { angleDegrees, complexAbs, complexAdd, complexDivide, type Complex } from '../linear/complex.js';
 import { axisPolynomial, evaluateOnAxis } from './axis-polynomial.js';
 import { chainPoles } from './chain-poles.js';
-import { closeLoop, inSeries } from './compose.js';
-import { responseOf, type Response, type StageChain } from './frequency-response.js';
+import { inSeries } from './compose.js';
+import { responseOf, type StageChain } from './frequency-response.js';
 import { gainCrossingFrequencies } from './loop-margins.js';
-import { poles, relativeDegree, type TransferFunction } from './transfer-function.js';
-import { stability, type StabilityVerdict } from './stability.js';
+import {
+  poles,
+  relativeDegree,
+  transferFunction,
+  type Response,
+  type StabilityVerdict,
+  type TransferFunction,
+} from './transfer-function.js';
+import { addPolynomials } from './polynomial.js';
+import { stability } from './stability.js';
 import { scanFrequencies } from './resonance.js';
 
 export interface NyquistResult {
@@ -91,7 +99,7 @@ export function nyquist(loop: StageChain): NyquistResult {
 }
 
 function byPoles(open: TransferFunction, openLoopRightPoles: number): NyquistResult {
-  const closed = closeLoop([], open);
+  const closed = transferFunction(open.numerator, addPolynomials(open.denominator, open.numerator));
   const { verdict, reason, offending } = stability(closed);
   const right = poles(closed).reduce((sum, p) => sum + (p.re > 0 ? p.multiplicity : 0), 0);
   const isOnAxis = verdict !== 'stable' && right === 0;

@@ -16,7 +16,7 @@ import {
 import type { StageChain } from './frequency-response.js';
 import { residuesAt } from './partial-fractions.js';
 import { steadyStateOf } from './steady-state.js';
-import type { StabilityVerdict } from './stability.js';
+import type { StabilityVerdict } from './transfer-function.js';
 
 /** How a periodic input that sets in at t = 0 settles behind stages at rest. */
 export interface PeriodicTransient {
@@ -39,7 +39,8 @@ export interface PeriodicTransient {
 /**
  * Output of stages at rest when a periodic input sets in at t = 0, by Laplace transform: an order √2 X cos(hωt + φ) has the
  * transform Re-part of √2 X e^(jφ)/(s − jhω); its poles on the axis give the steady state, the poles of the stages the
- * transient, in closed form and with all orders together.
+ * transient, in closed form and with all orders together. Of a closed loop with a delay the steady state is exact, the
+ * transient that of its Padé approximant.
  *
  * @param percent of the peak of the steady state, default 1: within it the output counts as settled
  * @returns why there is no steady state, when a stage is not stable

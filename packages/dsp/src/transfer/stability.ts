@@ -2,13 +2,11 @@ import { complexAbs } from '../linear/complex.js';
 import { stagesOf, type StageChain } from './frequency-response.js';
 import { evaluate, evaluateMagnitudes, trimLeadingZeros } from './polynomial.js';
 import { COEFFICIENT_PRECISION, type Root } from './polynomial-roots.js';
-import { poles, type TransferFunction } from './transfer-function.js';
-
-export type StabilityVerdict = 'stable' | 'marginal' | 'unstable';
+import { poles, type StabilityVerdict, type TransferFunction } from './transfer-function.js';
 
 export interface Stability {
   verdict: StabilityVerdict;
-  /** The poles the verdict rests on; empty when stable. */
+  /** The poles the verdict rests on; empty when stable, or when the Nyquist criterion decided. */
   offending: Root[];
   /** In plain words. */
   reason: string;
@@ -21,10 +19,14 @@ export interface Stability {
  *
  * Poles are never cancelled against zeros, not against those of another stage either: a mode that a zero hides from the
  * output is still there. A pole counts as on the axis when a change of the coefficients of its stage by 1e-11 could put it
- * there. A delay in series changes nothing; for one within a loop see `nyquist`.
+ * there. A delay in series changes nothing; a closed loop with a delay is judged by the Nyquist criterion.
  */
 export function stability(chain: StageChain): Stability {
-  const all = stagesOf(chain).flatMap(judgedPoles);
+  const stages = stagesOf(chain);
+  const loops = stages.flatMap(({ exact }) => (exact ? [exact.stability] : []));
+  const unstable = loops.find(({ verdict }) => verdict === 'unstable');
+  if (unstable) return { verdict: 'unstable', offending: [], reason: unstable.reason };
+  const all = stages.filter(({ exact }) => !exact).flatMap(judgedPoles);
   const right = all.filter(({ place }) => place === 'right').map(({ pole }) => pole);
   if (right.length > 0) {
     return { verdict: 'unstable', offending: right, reason: `${named(right)} has a positive real part.` };
@@ -38,6 +40,8 @@ export function stability(chain: StageChain): Stability {
       reason: `${named(repeated)} lies on the imaginary axis more than once.`,
     };
   }
+  const marginal = loops.find(({ verdict }) => verdict === 'marginal');
+  if (marginal) return { verdict: 'marginal', offending: [], reason: marginal.reason };
   if (onAxis.length > 0) {
     return {
       verdict: 'marginal',

@@ -2,7 +2,8 @@ import type { FourierSeries } from '../fourier/types.js';
 import { angleDegrees, complexAbs } from '../linear/complex.js';
 import { wrapDegrees } from '../model/fit-sinusoids.js';
 import { responseOf, type StageChain } from './frequency-response.js';
-import { stability, type StabilityVerdict } from './stability.js';
+import { stability } from './stability.js';
+import type { StabilityVerdict } from './transfer-function.js';
 
 /** The periodic signal behind a stage, or why there is none. */
 export type SteadyState =

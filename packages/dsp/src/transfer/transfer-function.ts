@@ -1,4 +1,5 @@
 import { AnalysisInputError } from '../errors.js';
+import type { Complex } from '../linear/complex.js';
 import { rootsAtOrigin, trimLeadingZeros } from './polynomial.js';
 import { polynomialRoots, type Root } from './polynomial-roots.js';
 
@@ -11,7 +12,15 @@ export interface TransferFunction {
   denominator: readonly number[];
   /** Pure delay in seconds, default 0. It has no poles and changes the phase alone. */
   delayS?: number;
+  /** Of a closed loop with a delay, for which the coefficients stand by a Padé approximant: what holds exactly. Not plain data:
+   * between threads, send the description of the stage. */
+  exact?: { response: Response; stability: { verdict: StabilityVerdict; reason: string } };
 }
+
+/** H(j2πf); null at a pole on the imaginary axis. */
+export type Response = (frequencyHz: number) => Complex | null;
+
+export type StabilityVerdict = 'stable' | 'marginal' | 'unstable';
 
 const MAX_DEGREE = 50;
 
