@@ -16,6 +16,7 @@ import { EquipmentModule } from './equipment/equipment.module.js';
 import { HealthModule } from './health/health.module.js';
 import { HttpModule } from './http/http.module.js';
 import { InstrumentsModule } from './instruments/instruments.module.js';
+import { InvitationsModule } from './invitations/invitations.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
 import { LaboratoryModule } from './laboratory/laboratory.module.js';
 import { LimitsModule } from './limits/limits.module.js';
@@ -51,6 +52,7 @@ export class AppModule {
         LaboratoryModule,
         InstrumentsModule,
         EquipmentModule,
+        InvitationsModule,
         ReadingRulesModule,
         RecordingsModule,
         UploadingModule,

@@ -20,6 +20,8 @@ const manager: readonly ProjectRole[] = ['manager'];
  */
 export const permissions = {
   'auth.sign-in': { allow: 'public' },
+  'password.reset': { allow: 'public' },
+  'invitation.answer': { allow: 'public' },
   'system.read': { allow: 'public' },
   'account.own': { allow: 'signed-in' },
   'project.list': { allow: 'signed-in' },
@@ -30,6 +32,7 @@ export const permissions = {
   'laboratory.update': { allow: 'administrator' },
   'instrument.read': { allow: 'laboratory' },
   'instrument.write': { allow: 'laboratory' },
+  'mail.read': { allow: 'administrator' },
   'project.read': { allow: everyMember, administratorToo: true },
   'project.update': { allow: manager },
   'member.list': { allow: everyMember, administratorToo: true },
@@ -56,6 +59,9 @@ export const permissions = {
   'report.decide': { allow: manager },
   'report.comment': { allow: bench },
   'report.check': { allow: 'public' },
+  'delivery.read': { allow: bench, administratorToo: true },
+  'delivery.send': { allow: manager },
+  'mail.retry': { allow: manager, administratorToo: true },
 } as const satisfies Record<
   string,
   {

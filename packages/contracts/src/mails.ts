@@ -125,5 +125,11 @@ export type AcceptedInvitation = z.infer<typeof acceptedInvitationSchema>;
 export const forgotPasswordSchema = z.strictObject({ email: emailSchema });
 export type ForgotPassword = z.infer<typeof forgotPasswordSchema>;
 
+/** The same whether or not the address has an account. */
+export const sentResetLinkSchema = z.object({
+  validForMinutes: z.number().int().describe('If the address has an account, a link is on its way'),
+});
+export type SentResetLink = z.infer<typeof sentResetLinkSchema>;
+
 export const resetPasswordSchema = z.strictObject({ token: tokenSchema, password: newPasswordSchema });
 export type ResetPassword = z.infer<typeof resetPasswordSchema>;

@@ -1,13 +1,13 @@
 import { Inject, Injectable } from '@nestjs/common';
 import { laboratoryRoles, type ProjectRole } from '@overtally/contracts';
 import { schema, type Database } from '@overtally/db';
-import { and, eq, gt, inArray, isNull, or } from 'drizzle-orm';
+import { and, eq, gt, inArray, isNull, or, sql } from 'drizzle-orm';
 import type { ProjectAccess, SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import type { ResourceKind } from './require-permission.decorator.js';
 
 const { accessKeys, users, members, projects, readingRules, recordings, analyses, notes } = schema;
-const { equipment, verdicts, reports, limitSets } = schema;
+const { equipment, verdicts, reports, limitSets, invitations, mails } = schema;
 
 const person = { id: users.id, email: users.email, name: users.name, isAdministrator: users.isAdministrator };
 
@@ -108,6 +108,17 @@ export class AccessRepository {
           .where(eq(verdicts.id, id));
       case 'report':
         return this.database.select({ projectId: reports.projectId }).from(reports).where(eq(reports.id, id));
+      case 'invitation':
+        return this.database
+          .select({ projectId: invitations.projectId })
+          .from(invitations)
+          .where(eq(invitations.id, id));
+      case 'mail':
+        // Messages of no project, such as those about accounts, are for administrators, whose access needs none.
+        return this.database
+          .select({ projectId: sql<string>`${mails.projectId}`.as('project_id') })
+          .from(mails)
+          .where(eq(mails.id, id));
       case 'limit-set':
         return this.database
           .select({ projectId: limitSets.projectId })

@@ -16,7 +16,9 @@ export type ResourceKind =
   | 'note'
   | 'verdict'
   | 'report'
-  | 'limit-set';
+  | 'limit-set'
+  | 'invitation'
+  | 'mail';
 
 export interface RouteAccess {
   permission: Permission;

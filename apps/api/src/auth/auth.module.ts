@@ -9,6 +9,7 @@ import type pg from 'pg';
 import { AccessModule } from '../access/access.module.js';
 import { AppConfig } from '../config/app-config.js';
 import { POOL } from '../database/database.tokens.js';
+import { MailsModule } from '../mails/mails.module.js';
 import { AccessKeysController } from './access-keys.controller.js';
 import { AccessKeysRepository } from './access-keys.repository.js';
 import { AccessKeysService } from './access-keys.service.js';
@@ -17,12 +18,15 @@ import { AccountsRepository } from './accounts.repository.js';
 import { AuthController } from './auth.controller.js';
 import { AuthService } from './auth.service.js';
 import { PasswordHasher } from './password-hasher.js';
+import { PasswordResetsController } from './recovery/password-resets.controller.js';
+import { PasswordResetsService } from './recovery/password-resets.service.js';
+import { ResetRequestsModule } from './recovery/reset-requests.module.js';
 import { SignInLimits } from './sign-in-limits.js';
 import { makeSessionStore, sessionMiddleware } from './session.middleware.js';
 
 @Module({
-  imports: [AccessModule],
-  controllers: [AuthController, AccessKeysController],
+  imports: [AccessModule, MailsModule, ResetRequestsModule],
+  controllers: [AuthController, AccessKeysController, PasswordResetsController],
   providers: [
     AuthService,
     AccountsRepository,
@@ -31,6 +35,7 @@ import { makeSessionStore, sessionMiddleware } from './session.middleware.js';
     SignInLimits,
     AccessKeysService,
     AccessKeysRepository,
+    PasswordResetsService,
   ],
   exports: [AccountSessions, PasswordHasher],
 })

@@ -1,5 +1,5 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { AddMember, Member, UpdateMember } from '@overtally/contracts';
+import type { AddMember, Member, ProjectRole, UpdateMember } from '@overtally/contracts';
 import type { Database, Tx } from '@overtally/db';
 import { z } from 'zod';
 import { decodeCursor, pageOfRows } from '../common/paging.js';
@@ -41,6 +41,11 @@ export class MembersService {
       }
       return toMember(await this.find(tx, projectId, user.id));
     });
+  }
+
+  /** Makes a person a member inside the caller's transaction; one who is a member keeps their role. */
+  async join(tx: Tx, projectId: string, userId: string, role: ProjectRole): Promise<void> {
+    await this.repository.insert(tx, projectId, userId, role);
   }
 
   /** @throws 404 for a person who is no member, 409 when no manager would be left */

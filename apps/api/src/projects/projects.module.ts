@@ -11,6 +11,6 @@ import { ProjectsService } from './projects.service.js';
   imports: [UsersModule],
   controllers: [ProjectsController, MembersController],
   providers: [ProjectsService, ProjectsRepository, MembersService, MembersRepository],
-  exports: [ProjectsService],
+  exports: [ProjectsService, MembersService],
 })
 export class ProjectsModule {}

@@ -8,6 +8,7 @@ import { Storage } from '../storage/storage.js';
 import { newCheckCode } from './check-code.js';
 import { ReportRendering } from './rendering/report-rendering.service.js';
 import type { RenderedForms } from './rendering/report-task.js';
+import { ReportNotices } from './report-notices.service.js';
 import { reportNumber } from './report-number.js';
 import { referencesOf } from './report-references.js';
 import { requireAction } from './report-state.js';
@@ -24,6 +25,7 @@ export class ReportIssueService {
     private readonly reports: ReportsService,
     private readonly storage: Storage,
     private readonly rendering: ReportRendering,
+    private readonly notices: ReportNotices,
   ) {}
 
   /**
@@ -71,6 +73,7 @@ export class ReportIssueService {
         ...{ issuedById: user.id, overdueReason: stated, checkCode: toIssue.checkCode, updatedAt: issuedAt },
       });
       if (row.replacesId !== null) await this.supersede(tx, user, row.replacesId, row.revision);
+      await this.notices.issued(tx, id, user);
     });
     return this.reports.get(id);
   }

@@ -4,6 +4,7 @@ import type { Database } from '@overtally/db';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
+import { ReportNotices } from './report-notices.service.js';
 import { requireAction, type ReportAction } from './report-state.js';
 import { isPreparer } from './report-view.js';
 import { ReportsRepository } from './reports.repository.js';
@@ -16,6 +17,7 @@ export class ReportStepsService {
     @Inject(DATABASE) private readonly database: Database,
     private readonly repository: ReportsRepository,
     private readonly reports: ReportsService,
+    private readonly notices: ReportNotices,
   ) {}
 
   /**
@@ -35,6 +37,7 @@ export class ReportStepsService {
       await this.reports.lockAsRead(tx, draft, 'submit');
       await this.repository.update(tx, id, { status: 'in-review', content, revisionReason });
       await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'submitted', comment });
+      await this.notices.reviewRequested(tx, id, user, comment);
     });
     return this.reports.get(id);
   }
@@ -74,6 +77,7 @@ export class ReportStepsService {
       await this.reports.lockFor(tx, id, action);
       await this.repository.update(tx, id, { status: 'draft', content: null });
       await this.repository.addEvent(tx, { reportId: id, byId: user.id, ...event });
+      if (event.kind === 'returned') await this.notices.returned(tx, id, user, event.comment);
     });
     return this.reports.get(id);
   }

@@ -4,10 +4,14 @@ import { EquipmentModule } from '../equipment/equipment.module.js';
 import { InstrumentsModule } from '../instruments/instruments.module.js';
 import { LaboratoryModule } from '../laboratory/laboratory.module.js';
 import { LimitsModule } from '../limits/limits.module.js';
+import { MailsModule } from '../mails/mails.module.js';
 import { NotesModule } from '../notes/notes.module.js';
 import { RecordingsModule } from '../recordings/recordings.module.js';
 import { ReportContentService } from './report-content.service.js';
 import { ReportIssueService } from './report-issue.service.js';
+import { ReportDeliveriesController } from './report-deliveries.controller.js';
+import { ReportNoticesRepository } from './report-notices.repository.js';
+import { ReportNotices } from './report-notices.service.js';
 import { ReportPdfController } from './report-pdf.controller.js';
 import { ReportPdfService } from './report-pdf.service.js';
 import { ReportPictures } from './report-pictures.service.js';
@@ -26,11 +30,14 @@ import { ReportsService } from './reports.service.js';
     InstrumentsModule,
     LaboratoryModule,
     LimitsModule,
+    MailsModule,
     NotesModule,
     RecordingsModule,
   ],
-  controllers: [ReportsController, ReportStepsController, ReportPdfController],
+  controllers: [ReportDeliveriesController, ReportsController, ReportStepsController, ReportPdfController],
   providers: [
+    ReportNotices,
+    ReportNoticesRepository,
     ReportsService,
     ReportsRepository,
     ReportContentService,

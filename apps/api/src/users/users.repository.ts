@@ -1,6 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import { schema, type Database, type Tx } from '@overtally/db';
-import { and, asc, eq, ilike, isNull, or, sql } from 'drizzle-orm';
+import { and, asc, eq, ilike, isNull, or, sql, type SQL } from 'drizzle-orm';
 import { likePattern } from '../common/paging.js';
 import { DATABASE } from '../database/database.tokens.js';
 
@@ -40,12 +40,12 @@ export class UsersRepository {
       .limit(limit);
   }
 
-  async findEnabledByEmail(email: string): Promise<UserRow | undefined> {
-    const [row] = await this.database
-      .select(columns)
-      .from(users)
-      .where(and(eq(users.email, email), isNull(users.disabledAt)));
-    return row;
+  findEnabledByEmail(email: string): Promise<UserRow | undefined> {
+    return this.findOne(eq(users.email, email));
+  }
+
+  findEnabled(id: string): Promise<UserRow | undefined> {
+    return this.findOne(eq(users.id, id));
   }
 
   /** Undefined when the e-mail address has an account already. */
@@ -76,5 +76,13 @@ export class UsersRepository {
 
   countEnabledAdministrators(tx: Tx): Promise<number> {
     return tx.$count(users, and(eq(users.isAdministrator, true), isNull(users.disabledAt)));
+  }
+
+  private async findOne(which: SQL): Promise<UserRow | undefined> {
+    const [row] = await this.database
+      .select(columns)
+      .from(users)
+      .where(and(which, isNull(users.disabledAt)));
+    return row;
   }
 }

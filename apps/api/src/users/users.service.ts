@@ -1,6 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import type { CreateUser, UpdateUser, User, UserQuery } from '@overtally/contracts';
-import type { Database } from '@overtally/db';
+import type { Database, Tx } from '@overtally/db';
 import { z } from 'zod';
 import { AccountSessions } from '../auth/account-sessions.js';
 import { PasswordHasher } from '../auth/password-hasher.js';
@@ -27,6 +27,19 @@ export class UsersService {
   /** The account of an e-mail address, unless disabled. */
   findEnabledByEmail(email: string): Promise<UserRow | undefined> {
     return this.repository.findEnabledByEmail(email);
+  }
+
+  /** The person of an id, unless disabled. */
+  findEnabled(id: string): Promise<UserRow | undefined> {
+    return this.repository.findEnabled(id);
+  }
+
+  /** Makes an account inside the caller's transaction; undefined when the address has one already. */
+  insert(
+    tx: Tx,
+    person: { email: string; name: string; passwordHash: string },
+  ): Promise<UserRow | undefined> {
+    return this.repository.insert(tx, person);
   }
 
   /** @throws 409 when the e-mail address has an account already */

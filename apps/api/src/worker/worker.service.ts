@@ -17,6 +17,7 @@ import {
 import { EventEmitter } from 'node:events';
 import type { Pool } from 'pg';
 import { AnalyseRecordingHandler } from '../analyses/computing/analyse-recording.handler.js';
+import { RequestPasswordResetHandler } from '../auth/recovery/request-password-reset.handler.js';
 import { AppConfig } from '../config/app-config.js';
 import { DATABASE, POOL } from '../database/database.tokens.js';
 import { clearStorageJob } from '../jobs/definitions/clear-storage.job.js';
@@ -56,8 +57,15 @@ export class WorkerService implements OnApplicationBootstrap, BeforeApplicationS
     analyseRecording: AnalyseRecordingHandler,
     clearStorage: ClearStorageHandler,
     sendMail: SendMailHandler,
+    requestPasswordReset: RequestPasswordResetHandler,
   ) {
-    this.handlers = matchHandlers(jobDefinitions, [readRecording, analyseRecording, clearStorage, sendMail]);
+    this.handlers = matchHandlers(jobDefinitions, [
+      readRecording,
+      analyseRecording,
+      clearStorage,
+      sendMail,
+      requestPasswordReset,
+    ]);
   }
 
   async onApplicationBootstrap(): Promise<void> {

@@ -4,7 +4,9 @@ import { newPerson } from './factories.js';
 import {
   newAnalysis,
   newEquipment,
+  newInvitation,
   newLimitSet,
+  newMail,
   newNote,
   newReadingRule,
   newRecording,
@@ -35,6 +37,8 @@ export async function makeExamples({ database, project }: TestApp, userId: strin
     verdict: verdict.id,
     report: (await newReport(database, verdict.id, owner)).id,
     'limit-set': (await newLimitSet(database, owner)).id,
+    invitation: (await newInvitation(database, owner)).id,
+    mail: (await newMail(database, owner)).id,
   };
 }
 

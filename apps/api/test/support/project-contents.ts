@@ -142,3 +142,35 @@ const limits: Omit<LimitSet, 'id' | 'projectId'> = {
   evidence: '',
   notes: [],
 };
+
+/** An invitation that nobody answered, and its message. */
+export async function newInvitation(database: Database, { projectId, userId }: Owner) {
+  const [row] = await database
+    .insert(schema.invitations)
+    .values({
+      projectId,
+      email: `${randomUUID()}@example.com`,
+      role: 'guest',
+      tokenSha256: randomUUID(),
+      invitedById: userId,
+      expiresAt: new Date(Date.now() + 3_600_000),
+    })
+    .returning();
+  return made(row);
+}
+
+/** A message that waits to be sent. */
+export async function newMail(database: Database, { projectId }: Pick<Owner, 'projectId'>) {
+  const [row] = await database
+    .insert(schema.mails)
+    .values({
+      projectId,
+      kind: 'review-requested',
+      toAddress: 'reader@example.com',
+      subject: 'Review requested',
+      text: 'A report waits',
+      html: '<p>A report waits</p>',
+    })
+    .returning();
+  return made(row);
+}

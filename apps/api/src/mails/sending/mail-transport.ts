@@ -1,5 +1,5 @@
 import { Injectable, type OnApplicationShutdown } from '@nestjs/common';
-import { createTransport, type Transporter } from 'nodemailer';
+import { createTransport } from 'nodemailer';
 import { AppConfig } from '../../config/app-config.js';
 import type { SmtpSettings } from '../../config/mail-settings.js';
 import type { OutgoingMail } from './outgoing-mails.js';
@@ -24,7 +24,7 @@ export interface Recipient {
 /** Hands messages to the mail server; without one they are kept, and the mailbox page shows them. */
 @Injectable()
 export class MailTransport implements OnApplicationShutdown {
-  private transporter: Transporter | undefined;
+  private transporter: ReturnType<typeof open> | undefined;
 
   constructor(private readonly config: AppConfig) {}
 
@@ -50,7 +50,7 @@ export class MailTransport implements OnApplicationShutdown {
   }
 }
 
-function open({ host, port, secure, requireTls, auth }: SmtpSettings): Transporter {
+function open({ host, port, secure, requireTls, auth }: SmtpSettings) {
   return createTransport({
     pool: true,
     // The queue decides when a message is tried again, and counts it.
