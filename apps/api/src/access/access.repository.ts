@@ -116,7 +116,7 @@ export class AccessRepository {
       case 'mail':
         // Messages of no project, such as those about accounts, are for administrators, whose access needs none.
         return this.database
-          .select({ projectId: sql<string>`${mails.projectId}`.as('project_id') })
+          .select({ projectId: sql<string>`${mails.projectId}`.as('mail_project_id') })
           .from(mails)
           .where(eq(mails.id, id));
       case 'limit-set':

@@ -38,7 +38,7 @@ export class AcceptingService {
    * Makes the person a member. The link shows that they read the mail of the address: enough to make the account of that
    * address, not to use one that is there. Whose it is must be signed in, by password.
    * @param signedInId the person of the session, if any
-   * @throws 410 as `look`, 401 when the address has an account that is not signed in, 400 for a new account without name
+   * @throws 410 as `look`, 409 when the address has an account that is not signed in, 400 for a new account without name
    * or password
    */
   async accept(input: AcceptInvitation, signedInId: string | undefined): Promise<AcceptedInvitation> {
@@ -103,4 +103,4 @@ const deadLink = () =>
   );
 
 const signInFirst = ({ invitation }: OfferRow) =>
-  problem(401, 'not-signed-in', `${invitation.email} has an account; sign in with it to accept`);
+  problem(409, 'sign-in-first', `${invitation.email} has an account; sign in with it to accept`);

@@ -69,7 +69,7 @@ export class InvitationsController {
   @HttpCode(200)
   @RequirePermission('invitation.answer')
   @ZodResponse({ status: 200, type: AcceptedInvitationDto, description: 'A member now, and signed in' })
-  @ApiProblem(401, 'The address has an account, which is not signed in')
+  @ApiProblem(409, 'The address has an account, which is not signed in')
   @ApiProblem(403, 'The account is disabled')
   @ApiProblem(410, 'The invitation was answered, taken back, has expired or never was')
   async accept(@Req() request: AppRequest, @Body() input: AcceptInvitationDto): Promise<AcceptedInvitation> {
