@@ -1,6 +1,5 @@
-import type { MailStatus } from '@overtally/contracts';
 import { schema } from '@overtally/db';
-import { and, eq, sql } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import { setTimeout as wait } from 'node:timers/promises';
 import type { TestApp } from './test-app.js';
 
@@ -33,11 +32,6 @@ export async function makeJobsDue({ database }: TestApp): Promise<void> {
   await database.execute(
     sql`update graphile_worker._private_jobs set run_at = now() where locked_at is null and run_at > now()`,
   );
-}
-
-/** How many messages to an address have a status. */
-export function countMails({ database }: TestApp, address: string, status: MailStatus): Promise<number> {
-  return database.$count(mails, and(eq(mails.toAddress, address), eq(mails.status, status)));
 }
 
 /** The secret of the link in a message: what stands behind # (RFC 3986, 3.5). */

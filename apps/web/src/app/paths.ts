@@ -5,7 +5,10 @@ export const paths = {
   signIn: (next?: string) =>
     next && next !== '/' ? `/sign-in?next=${encodeURIComponent(next)}` : '/sign-in',
   projects: () => '/projects',
+  forgotPassword: () => '/forgot-password',
   account: () => '/account',
+  mailbox: () => '/mailbox',
+  mail: (mailId: string) => `/mailbox/${mailId}`,
   people: () => '/people',
   project,
   recordings: (projectId: string) => `${project(projectId)}/recordings`,

@@ -11,6 +11,11 @@ export const routes: RouteObject[] = [
     HydrateFallback: StartingUp,
     ErrorBoundary: BareProblem,
   },
+  ...[
+    { path: '/forgot-password', lazy: () => import('./routes/forgot-password.js') },
+    { path: '/reset-password', lazy: () => import('./routes/reset-password.js') },
+    { path: '/invitation', lazy: () => import('./routes/invitation.js') },
+  ].map((route) => ({ ...route, HydrateFallback: StartingUp, ErrorBoundary: BareProblem })),
   {
     path: '/',
     lazy: () => import('./layouts/signed-in.js'),
@@ -24,6 +29,8 @@ export const routes: RouteObject[] = [
           { path: 'projects', lazy: () => import('./routes/projects.js') },
           { path: 'account', lazy: () => import('./routes/account.js') },
           { path: 'people', lazy: () => import('./routes/people.js') },
+          { path: 'mailbox', lazy: () => import('./routes/mailbox.js') },
+          { path: 'mailbox/:mailId', lazy: () => import('./routes/mail.js') },
           { path: '*', lazy: () => import('./routes/not-found.js') },
         ],
       },

@@ -2,8 +2,8 @@ import { Inject, Injectable } from '@nestjs/common';
 import type { ResetPassword } from '@overtally/contracts';
 import type { Database } from '@overtally/db';
 import type pg from 'pg';
-import { problem } from '../../common/problem.js';
-import { consumeLimit, limitKey, makeRequestLimit } from '../../common/request-limits.js';
+import { problem, ProblemException } from '../../common/problem.js';
+import { consume, limitKey, rateLimiter } from '../../common/rate-limit.js';
 import { DATABASE, POOL } from '../../database/database.tokens.js';
 import { requestPasswordResetJob } from '../../jobs/definitions/request-password-reset.job.js';
 import { JobsService } from '../../jobs/jobs.service.js';
@@ -34,8 +34,8 @@ export class PasswordResetsService {
     private readonly mails: MailsService,
     private readonly jobs: JobsService,
   ) {
-    this.perEmail = makeRequestLimit(pool, 'reset-account', REQUESTS_PER_EMAIL_AND_ADDRESS, WINDOW_S);
-    this.perAddress = makeRequestLimit(pool, 'reset-address', REQUESTS_PER_ADDRESS, WINDOW_S);
+    this.perEmail = rateLimiter(pool, 'reset-account', REQUESTS_PER_EMAIL_AND_ADDRESS, WINDOW_S);
+    this.perAddress = rateLimiter(pool, 'reset-address', REQUESTS_PER_ADDRESS, WINDOW_S);
   }
 
   /**
@@ -44,8 +44,8 @@ export class PasswordResetsService {
    * @throws 429 after too many requests
    */
   async request(email: string, address: string): Promise<void> {
-    await consumeLimit(this.perAddress, limitKey(address), 'requests');
-    await consumeLimit(this.perEmail, limitKey(`${email} ${address}`), 'requests');
+    await consume(this.perAddress, limitKey(address), tooManyRequests);
+    await consume(this.perEmail, limitKey(`${email} ${address}`), tooManyRequests);
     await this.database.transaction((tx) => this.jobs.enqueue(tx, requestPasswordResetJob, { email }));
   }
 
@@ -85,3 +85,8 @@ export class PasswordResetsService {
 
 const deadLink = () =>
   problem(410, 'link-dead', 'This link was used already or has expired; ask for a new one');
+
+function tooManyRequests(waitS: number): ProblemException {
+  const detail = `Too many requests for a new password. Try again in ${Math.ceil(waitS / 60)} min`;
+  return new ProblemException(429, 'too-many-attempts', detail, undefined, { 'Retry-After': String(waitS) });
+}

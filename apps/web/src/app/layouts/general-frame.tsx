@@ -9,7 +9,12 @@ export function GeneralFrame({ children }: { children: ReactNode }) {
   const account = useAccount();
   const tabs = [
     { label: 'Projects', to: paths.projects() },
-    ...(account.isAdministrator ? [{ label: 'People', to: paths.people() }] : []),
+    ...(account.isAdministrator
+      ? [
+          { label: 'People', to: paths.people() },
+          { label: 'Mailbox', to: paths.mailbox() },
+        ]
+      : []),
     { label: 'Account', to: paths.account() },
   ];
   return (

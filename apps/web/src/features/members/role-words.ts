@@ -26,6 +26,7 @@ export const duties: readonly { permission: Permission; label: string }[] = [
   { permission: 'report.write', label: 'Write reports' },
   { permission: 'report.submit', label: 'Send reports to review' },
   { permission: 'report.decide', label: 'Return and issue reports' },
-  { permission: 'member.manage', label: 'Add and remove members' },
+  { permission: 'delivery.send', label: 'Send issued reports to recipients' },
+  { permission: 'member.manage', label: 'Add, invite and remove members' },
   { permission: 'project.update', label: 'Change the project' },
 ];

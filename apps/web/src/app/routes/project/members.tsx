@@ -7,6 +7,7 @@ import { Section } from '../../../components/section.js';
 import { useAccount } from '../../../features/account/hooks/use-account.js';
 import { membersQuery } from '../../../features/members/api/list-members.js';
 import { AddMemberForm } from '../../../features/members/components/add-member-form.js';
+import { Invitations } from '../../../features/members/components/invitations.js';
 import { MemberTable } from '../../../features/members/components/member-table.js';
 import { RoleTable } from '../../../features/members/components/role-table.js';
 import { useProject } from '../../../features/projects/hooks/use-project.js';
@@ -30,6 +31,7 @@ export function Component() {
       {members.isSuccess ? (
         <MemberTable projectId={project.id} members={members.data} ownId={account.id} mayManage={mayManage} />
       ) : null}
+      {mayManage ? <Invitations projectId={project.id} /> : null}
       <Section title="What each role may do" mt="10">
         <RoleTable />
       </Section>

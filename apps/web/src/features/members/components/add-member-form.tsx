@@ -1,28 +1,35 @@
 import { Button, Flex, Input, Stack } from '@chakra-ui/react';
 import { zodResolver } from '@hookform/resolvers/zod';
-import { addMemberSchema } from '@overtally/contracts';
+import { addMemberSchema, type CreateInvitation } from '@overtally/contracts';
+import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { FormField, SelectInput } from '../../../components/form-field.js';
 import { FormProblem } from '../../../components/form-problem.js';
 import { notifyDone } from '../../../components/notify.js';
+import { ApiProblem } from '../../../lib/api-problem.js';
 import { setFormProblem } from '../../../lib/form-errors.js';
 import { useMemberChanges } from '../hooks/use-member-changes.js';
 import { roleOptions } from '../role-words.js';
+import { InviteDialog } from './invite-dialog.js';
 
 const empty = { email: '', role: 'technician' as const };
 
-/** Adds somebody who has an account, by e-mail. */
+/** Adds somebody who has an account, by e-mail; whoever has none is invited. */
 export function AddMemberForm({ projectId }: { projectId: string }) {
   const form = useForm({ resolver: zodResolver(addMemberSchema), defaultValues: empty });
   const { errors } = form.formState;
   const { add } = useMemberChanges(projectId);
+  const [wanted, setWanted] = useState<CreateInvitation | null>(null);
   const submit = form.handleSubmit((values) =>
     add.mutate(values, {
       onSuccess: (member) => {
         form.reset(empty);
         notifyDone(`${member.name} added`);
       },
-      onError: (error) => setFormProblem(form, error),
+      onError: (error) => {
+        if (error instanceof ApiProblem && error.code === 'unknown-person') setWanted(values);
+        else setFormProblem(form, error);
+      },
     }),
   );
   return (
@@ -51,6 +58,12 @@ export function AddMemberForm({ projectId }: { projectId: string }) {
           </Button>
         </Flex>
       </Stack>
+      <InviteDialog
+        projectId={projectId}
+        wanted={wanted}
+        onClose={() => setWanted(null)}
+        onInvited={() => form.reset(empty)}
+      />
     </form>
   );
 }
