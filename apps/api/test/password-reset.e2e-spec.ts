@@ -49,8 +49,7 @@ describe('a forgotten password', () => {
     const person = await newPerson(test.database);
     const browser = supertest.agent(test.http);
     await browser.post('/api/auth/sign-in').send({ email: person.email, password: PASSWORD }).expect(200);
-    const { secret } = (await browser.post('/api/access-keys').send({ name: 'Script' }).expect(201))
-      .body;
+    const { secret } = (await browser.post('/api/auth/keys').send({ name: 'Script' }).expect(201)).body;
     const earlier = await askedToken(person.email);
     const token = await askedToken(person.email);
     expect(token).not.toBe(earlier);

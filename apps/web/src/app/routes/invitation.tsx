@@ -42,9 +42,8 @@ function Offer({ token, offer }: { token: string; offer: OfferedInvitation }) {
   const navigate = useNavigate();
   const queryClient = useQueryClient();
   const account = useQuery({ ...accountQuery(), enabled: offer.hasAccount, retry: false });
-  const accepted = ({ projectId, account: own }: AcceptedInvitation) => {
+  const accepted = ({ projectId }: AcceptedInvitation) => {
     queryClient.clear();
-    queryClient.setQueryData(accountQuery().queryKey, own);
     void navigate(paths.project(projectId), { replace: true });
   };
   const { email, role, invitedBy, expiresAt, hasAccount } = offer;
