@@ -1,6 +1,7 @@
 import { Catch, HttpException, Logger, type ArgumentsHost, type ExceptionFilter } from '@nestjs/common';
 import type { ProblemDetails } from '@overtally/contracts';
 import type { Response } from 'express';
+import pg from 'pg';
 import { ZodSerializationException, ZodValidationException } from 'nestjs-zod';
 import { z } from 'zod';
 import { ProblemException, problemBody } from './problem.js';
@@ -47,8 +48,18 @@ function answerTo(error: unknown): Answer {
   if (error instanceof HttpException && error.getStatus() === 503) {
     return { status: 503, extra: { detail: 'A part this service needs is not available' } };
   }
+  if (isKeptByReport(error)) {
+    const detail = 'It stands in an issued report, so it stays on record and cannot be deleted';
+    return { status: 409, extra: { code: 'stands-in-issued-report', detail } };
+  }
   if (isClientHttpError(error)) return { status: error.status, extra: { detail: error.message } };
   return { status: 500, extra: { detail: 'Unexpected error; the log has more under the request id' } };
+}
+
+/** The refusal of the database to delete what an issued report speaks of (trigger `keep_referred`). */
+function isKeptByReport(error: unknown): boolean {
+  const cause = error instanceof Error ? error.cause : undefined;
+  return cause instanceof pg.DatabaseError && cause.constraint === 'report_references_kept';
 }
 
 function invalidRequest(error: ZodValidationException): Answer {

@@ -87,7 +87,7 @@ export class RecordingsRepository {
       .innerJoin(reports, eq(reports.id, reportVerdicts.reportId))
       .innerJoin(verdicts, eq(verdicts.id, reportVerdicts.verdictId))
       .innerJoin(analyses, eq(analyses.id, verdicts.analysisId))
-      .where(eq(analyses.recordingId, recordingId));
+      .where(and(eq(analyses.recordingId, recordingId), inArray(reports.status, ['draft', 'in-review'])));
     return rows.map(({ title }) => title);
   }
 

@@ -1,9 +1,13 @@
+import { reportCheckPath } from '@overtally/contracts';
+
 const project = (projectId: string) => `/projects/${projectId}`;
 
 /** Addresses of all pages. */
 export const paths = {
   signIn: (next?: string) =>
     next && next !== '/' ? `/sign-in?next=${encodeURIComponent(next)}` : '/sign-in',
+  /** The public check page, filled in when number and code are given. */
+  check: (number?: string, code?: string) => (number && code ? reportCheckPath(number, code) : '/check'),
   projects: () => '/projects',
   forgotPassword: () => '/forgot-password',
   account: () => '/account',

@@ -17,6 +17,12 @@ export const routes: RouteObject[] = [
     { path: '/invitation', lazy: () => import('./routes/invitation.js') },
   ].map((route) => ({ ...route, HydrateFallback: StartingUp, ErrorBoundary: BareProblem })),
   {
+    path: '/check/:number?/:code?',
+    lazy: () => import('./routes/check.js'),
+    HydrateFallback: StartingUp,
+    ErrorBoundary: BareProblem,
+  },
+  {
     path: '/',
     lazy: () => import('./layouts/signed-in.js'),
     HydrateFallback: StartingUp,

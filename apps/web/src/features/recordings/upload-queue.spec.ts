@@ -4,7 +4,7 @@ import { fakeUploadServer } from '../../testing/fake-upload-server.js';
 import { sampleId } from '../../testing/samples.js';
 import { uploadLimitsQuery } from './api/upload-limits.js';
 import { UploadQueue } from './upload-queue.js';
-import { digestBlob } from './upload/file-digest.js';
+import { digestBlob } from '../../lib/digest/file-digest.js';
 
 const projectId = sampleId(10);
 

@@ -7,6 +7,7 @@ import {
   type UploadOptions,
 } from 'tus-js-client';
 import { ApiProblem, problemFrom } from '../../../lib/api-problem.js';
+import { unreadableFile } from '../../../lib/digest/unreadable-file.js';
 import { apiUrl } from '../../../lib/http.js';
 
 export interface Transfer {
@@ -147,12 +148,3 @@ const isReadable = (file: File): Promise<boolean> =>
       () => true,
       () => false,
     );
-
-/** A file of this computer that the browser may no longer read. */
-export const unreadableFile = (name: string) =>
-  new ApiProblem({
-    status: 400,
-    code: 'file-unreadable',
-    title: 'The file cannot be read',
-    detail: `${name} was changed, moved or removed on this computer since it was chosen. Choose it again.`,
-  });

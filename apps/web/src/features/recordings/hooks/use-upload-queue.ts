@@ -5,7 +5,7 @@ import { unfinishedUploadsQuery } from '../api/upload-list.js';
 import { isPassing } from '../api/upload-transfer.js';
 import { isOpen } from '../upload-item.js';
 import { UploadQueue } from '../upload-queue.js';
-import { digestFile } from '../upload/digest-file.js';
+import { digestFile } from '../../../lib/digest/digest-file.js';
 
 const queues = new Map<string, UploadQueue>();
 

@@ -1,4 +1,4 @@
-import { unreadableFile } from '../api/upload-transfer.js';
+import { unreadableFile } from './unreadable-file.js';
 import type { DigestReply } from './digest.worker.js';
 
 /**
