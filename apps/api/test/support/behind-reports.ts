@@ -1,10 +1,4 @@
-import type {
-  InstrumentRef,
-  MeasuringChain,
-  Report,
-  ReportContent,
-  ReportSection,
-} from '@overtally/contracts';
+import type { InstrumentRef, MeasuringChain, Report, ReportSection } from '@overtally/contracts';
 import { schema } from '@overtally/db';
 import { eq } from 'drizzle-orm';
 import { randomUUID } from 'node:crypto';
@@ -78,7 +72,7 @@ export async function freezeWith(
   const sections = content.sections.map((section) => ({ ...section, ...change(section) }));
   await database
     .update(schema.reports)
-    .set({ content: { ...content, sections } as ReportContent })
+    .set({ content: { ...content, sections } })
     .where(eq(schema.reports.id, id));
 }
 
