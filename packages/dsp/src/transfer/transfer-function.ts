@@ -12,8 +12,10 @@ export interface TransferFunction {
   denominator: readonly number[];
   /** Pure delay in seconds, default 0. It has no poles and changes the phase alone. */
   delayS?: number;
-  /** Of a closed loop with a delay, for which the coefficients stand by a Padé approximant: what holds exactly. Not plain data:
-   * between threads, send the description of the stage. */
+  /**
+   * Of a closed loop with a delay, for which the coefficients stand by a Padé approximant: what holds exactly. Not plain data:
+   * between threads, send the description of the stage.
+   */
   exact?: { response: Response; stability: { verdict: StabilityVerdict; reason: string } };
 }
 
