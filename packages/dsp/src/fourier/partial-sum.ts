@@ -1,5 +1,5 @@
-import { synthesise } from '../harmonics/synthesise.js';
 import type { FourierSeries } from './types.js';
+import { waveformOf } from './waveform.js';
 
 /**
  * One cycle of the partial sum of the orders 0..maxOrder (Fourier synthesis). An order whose phase is not known cannot be
@@ -10,10 +10,8 @@ import type { FourierSeries } from './types.js';
  * @throws RangeError when N is not an integer of at least 2
  */
 export function partialSum(series: FourierSeries, maxOrder: number, pointCount: number): Float64Array {
-  const drawn = series.components.flatMap(({ order, rms, phaseDeg }) =>
-    order <= maxOrder && phaseDeg !== null ? [{ order, rms, phaseDeg }] : [],
-  );
-  return synthesise(drawn, pointCount, series.dc);
+  const components = series.components.filter(({ order }) => order <= maxOrder);
+  return waveformOf({ ...series, components }, { pointsPerCycle: pointCount }).values;
 }
 
 /** One cycle of the waveform with all its orders, as `partialSum`. */

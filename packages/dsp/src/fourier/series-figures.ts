@@ -1,4 +1,6 @@
 import { thdF, thdR } from '../figures/distortion.js';
+import { goldenMaximum } from '../search/golden-maximum.js';
+import { seriesValue } from './series-value.js';
 import type { FourierSeries } from './types.js';
 import { undrawnOrders, waveformOf } from './waveform.js';
 
@@ -17,12 +19,13 @@ export interface SeriesFigures {
   crestFactor: number | null;
 }
 
-/** Points for each period of the highest order when the peak is looked for: its error is below (π/32)²/2, 0.5 %. */
+/** Points for each period of the highest order among which the peak is looked for. */
 const POINTS_PER_PERIOD = 32;
 
 /**
  * rms, distortion and crest factor of a series. The peak is the largest of at least 32 points for each period of the
- * highest order, which is too low by less than 0.5 % of the highest orders.
+ * highest order, made exact by golden section about it; of two peaks that differ by less than 0.5 % of the highest orders
+ * it may be that of the lower one.
  *
  * @param maxOrder last order that counts for the distortion
  */
@@ -35,13 +38,7 @@ export function seriesFigures(series: FourierSeries, maxOrder: number): SeriesFi
     square += rms ** 2;
   }
   const rms = Math.sqrt(square);
-  const peak =
-    undrawnOrders(series).length > 0
-      ? null
-      : waveformOf(series, { pointsPerCycle: POINTS_PER_PERIOD * highest }).values.reduce(
-          (max, x) => Math.max(max, Math.abs(x)),
-          0,
-        );
+  const peak = undrawnOrders(series).length > 0 ? null : peakOf(series, POINTS_PER_PERIOD * highest);
   return {
     rms,
     fundamentalRms: byOrder[0]!,
@@ -50,4 +47,11 @@ export function seriesFigures(series: FourierSeries, maxOrder: number): SeriesFi
     peak,
     crestFactor: peak === null || rms === 0 ? null : peak / rms,
   };
+}
+
+function peakOf(series: FourierSeries, pointCount: number): number {
+  const { values } = waveformOf(series, { pointsPerCycle: pointCount });
+  const at = values.reduce((best, y, n) => (Math.abs(y) > Math.abs(values[best]!) ? n : best), 0);
+  const magnitude = (share: number) => Math.abs(seriesValue(series, share));
+  return magnitude(goldenMaximum(magnitude, (at - 1) / pointCount, (at + 1) / pointCount));
 }

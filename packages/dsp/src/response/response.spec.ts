@@ -66,6 +66,9 @@ describe('seriesFigures', () => {
     expect(figures.thdF).toBeCloseTo(0.5, 12);
     expect(figures.thdR).toBeCloseTo(0.5 / Math.sqrt(1.25), 12);
     expect(figures.crestFactor).toBeCloseTo((Math.SQRT2 * 1.5) / Math.sqrt(1.25), 10);
+    // The peak of a sine lies between any points: √2 all the same.
+    const turned = { frequencyHz: 50, dc: 0, components: [{ order: 3, rms: 7, phaseDeg: 37 }] };
+    expect(seriesFigures(turned, 40).crestFactor).toBeCloseTo(Math.SQRT2, 12);
     const unknown = [components[0]!, { order: 2, rms: 0.5, phaseDeg: null }];
     expect(seriesFigures({ frequencyHz: 50, dc: 0, components: unknown }, 40)).toMatchObject({
       ...{ peak: null, crestFactor: null, fundamentalRms: 1 },

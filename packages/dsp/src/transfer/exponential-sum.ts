@@ -1,4 +1,5 @@
 import { complexAbs, type Complex } from '../linear/complex.js';
+import { turningPoint } from '../search/turning-point.js';
 import type { PartialFraction } from './partial-fractions.js';
 
 /** One term of a real function for t ≥ 0: Re(coefficient e^(pole t)) t^power/power!. */
@@ -86,14 +87,9 @@ function timeBelow(term: ExponentialTerm, value: number): number {
   const decay = -term.pole.re;
   let to = term.power / decay;
   if (envelope(term, to) <= value) return 0;
-  let from = to;
+  const from = to;
   while (envelope(term, to) > value) to += 1 / decay;
-  for (let i = 0; i < 20; i++) {
-    const middle = (from + to) / 2;
-    if (envelope(term, middle) > value) from = middle;
-    else to = middle;
-  }
-  return to;
+  return turningPoint((t) => envelope(term, t) <= value, to, from);
 }
 
 /**
@@ -109,15 +105,7 @@ export function lastTimeOutside(terms: readonly ExponentialTerm[], band: number)
   const times = scanTimes(terms, end, band);
   if (times === null) return null;
   const last = times.findLastIndex((t) => Math.abs(sumAt(terms, t)) > band);
-  return last < 0 ? 0 : crossing(terms, band, times[last]!, times[last + 1] ?? end);
-}
-
-function crossing(terms: readonly ExponentialTerm[], band: number, from: number, to: number): number {
-  let [outside, inside] = [from, to];
-  for (let i = 0; i < 60; i++) {
-    const middle = (outside + inside) / 2;
-    if (Math.abs(sumAt(terms, middle)) > band) outside = middle;
-    else inside = middle;
-  }
-  return inside;
+  return last < 0
+    ? 0
+    : turningPoint((t) => Math.abs(sumAt(terms, t)) <= band, times[last + 1] ?? end, times[last]!);
 }

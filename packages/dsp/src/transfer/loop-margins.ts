@@ -1,4 +1,5 @@
 import { angleDegrees, complexAbs } from '../linear/complex.js';
+import { turningPoint } from '../search/turning-point.js';
 import { inSeries } from './compose.js';
 import { responseOf, totalDelay, type StageChain } from './frequency-response.js';
 import { addPolynomials, multiplyPolynomials, scalePolynomial, type Polynomial } from './polynomial.js';
@@ -108,7 +109,9 @@ function phaseCrossingFrequencies(loop: StageChain, lastGainCrossingHz: number):
       continue;
     }
     if (before !== null && before.im * value.im < 0) {
-      const crossing = bisect((f) => response(f)?.im ?? 0, before.frequencyHz, frequencyHz);
+      const sign = Math.sign(before.im);
+      const hasSameSign = (f: number) => Math.sign(response(f)?.im ?? 0) === sign;
+      const crossing = turningPoint(hasSameSign, before.frequencyHz, frequencyHz);
       // Im L also changes its sign through a pole, where it does not vanish.
       const there = response(crossing);
       if (there !== null && there.re < 0 && Math.abs(there.im) < 1e-6 * Math.abs(there.re))
@@ -131,17 +134,6 @@ function phaseScan(loop: StageChain, lastGainCrossingHz: number): number[] {
   const count = Math.min(MAX_STEPS, Math.ceil(end / step));
   const even = Array.from({ length: count }, (_, i) => (i + 1) * step);
   return [...base.filter((f) => f <= end), ...even].sort((a, b) => a - b);
-}
-
-function bisect(f: (x: number) => number, from: number, to: number): number {
-  let [a, b] = [from, to];
-  const sign = Math.sign(f(a));
-  for (let i = 0; i < 100 && b - a > 4e-16 * b; i++) {
-    const middle = (a + b) / 2;
-    if (Math.sign(f(middle)) === sign) a = middle;
-    else b = middle;
-  }
-  return (a + b) / 2;
 }
 
 function smallest(values: readonly number[]): number | null {

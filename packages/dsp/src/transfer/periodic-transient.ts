@@ -2,6 +2,7 @@ import { AnalysisInputError } from '../errors.js';
 import { checkSeries } from '../fourier/check-series.js';
 import type { FourierSeries } from '../fourier/types.js';
 import { seriesFigures } from '../fourier/series-figures.js';
+import { seriesValue } from '../fourier/series-value.js';
 import { undrawnOrders } from '../fourier/waveform.js';
 import { complexAdd, complexDivide, fromPolar, type Complex } from '../linear/complex.js';
 import { chainPoles } from './chain-poles.js';
@@ -86,19 +87,13 @@ export function periodicTransient(
   return {
     isDefined: true,
     ...{ series: state.series, terms, delayS, band, settledAfterS },
-    at: (timeS) => (timeS < delayS ? 0 : valueAt(state.series, timeS) + sumAt(terms, timeS - delayS)),
+    at: (timeS) =>
+      timeS < delayS
+        ? 0
+        : seriesValue(state.series, timeS * input.frequencyHz) + sumAt(terms, timeS - delayS),
     settledAfterCycles: settledAfterS === null ? null : settledAfterS * input.frequencyHz,
     rounding: roundingOf(terms),
   };
-}
-
-/** Value of a series at one time in seconds. */
-function valueAt({ frequencyHz, dc, components }: FourierSeries, timeS: number): number {
-  return components.reduce((sum, { order, rms, phaseDeg }) => {
-    const turns = order * frequencyHz * timeS;
-    const angle = 2 * Math.PI * (turns - Math.round(turns)) + ((phaseDeg ?? 0) * Math.PI) / 180;
-    return sum + Math.SQRT2 * rms * Math.cos(angle);
-  }, dc);
 }
 
 /** Ascending Taylor coefficients of the transform of the input about a pole. */

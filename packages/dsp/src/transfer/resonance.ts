@@ -1,4 +1,6 @@
 import { complexAbs } from '../linear/complex.js';
+import { goldenMaximum } from '../search/golden-maximum.js';
+import { turningPoint } from '../search/turning-point.js';
 import { responseOf, stagesOf, type StageChain } from './frequency-response.js';
 import { poles, zeros } from './transfer-function.js';
 
@@ -17,9 +19,6 @@ export interface ResonancePeak {
 }
 
 const POINTS_PER_DECADE = 200;
-/** Golden section halves the interval about every 1.44 steps: 90 steps reach the precision that a maximum has. */
-const GOLDEN = (Math.sqrt(5) - 1) / 2;
-const STEPS = 90;
 /** A maximum must stand out by this share, or rounding alone could make one. */
 const PROMINENCE = 1e-7;
 
@@ -44,7 +43,7 @@ export function resonancePeaks(chain: StageChain): ResonancePeak[] {
   for (let i = 1; i + 1 < frequencies.length; i++) {
     const [before, here, after] = [gains[i - 1]!, gains[i]!, gains[i + 1]!];
     if (!(here >= before && here > after) || !Number.isFinite(here)) continue;
-    const frequencyHz = maximum(gainAt, frequencies[i - 1]!, frequencies[i + 1]!);
+    const frequencyHz = goldenMaximum(gainAt, frequencies[i - 1]!, frequencies[i + 1]!);
     const gain = gainAt(frequencyHz);
     if (!Number.isFinite(gain) || !standsOut(gains, i, gain)) continue;
     const nearest = nearestPair(pairs, frequencyHz);
@@ -84,25 +83,6 @@ export function logFrequencies(fromHz: number, toHz: number, pointsPerDecade: nu
   return Array.from({ length: count + 1 }, (_, i) =>
     i === count ? toHz : fromHz * 10 ** ((decades * i) / count),
   );
-}
-
-function maximum(gainAt: (f: number) => number, from: number, to: number): number {
-  let [a, b] = [from, to];
-  let inner = b - GOLDEN * (b - a);
-  let outer = a + GOLDEN * (b - a);
-  let [gainInner, gainOuter] = [gainAt(inner), gainAt(outer)];
-  for (let i = 0; i < STEPS && b - a > 1e-12 * b; i++) {
-    if (gainInner > gainOuter) {
-      [b, outer, gainOuter] = [outer, inner, gainInner];
-      inner = b - GOLDEN * (b - a);
-      gainInner = gainAt(inner);
-    } else {
-      [a, inner, gainInner] = [inner, outer, gainOuter];
-      outer = a + GOLDEN * (b - a);
-      gainOuter = gainAt(outer);
-    }
-  }
-  return (a + b) / 2;
 }
 
 /** True when the gain falls by more than rounding on both sides before it gets higher. */
@@ -159,13 +139,7 @@ function crossing(
       inside = frequency;
       continue;
     }
-    let outside = frequency;
-    for (let i = 0; i < 60; i++) {
-      const middle = (inside + outside) / 2;
-      if (gainAt(middle) > level) inside = middle;
-      else outside = middle;
-    }
-    return (inside + outside) / 2;
+    return turningPoint((f) => gainAt(f) > level, inside, frequency);
   }
   return null;
 }

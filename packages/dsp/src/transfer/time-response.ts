@@ -1,4 +1,5 @@
 import { AnalysisInputError } from '../errors.js';
+import { turningPoint } from '../search/turning-point.js';
 import { inSeries } from './compose.js';
 import { chainPoles, uniteRoots } from './chain-poles.js';
 import type { StageChain } from './frequency-response.js';
@@ -114,13 +115,7 @@ function firstReached(
 ): number | null {
   const at = shares.findIndex((x) => x >= level);
   if (at < 0) return null;
-  let [before, after] = [times[Math.max(0, at - 1)]!, times[at]!];
-  for (let k = 0; k < 60; k++) {
-    const middle = (before + after) / 2;
-    if (share(middle) >= level) after = middle;
-    else before = middle;
-  }
-  return after;
+  return turningPoint((t) => share(t) >= level, times[at]!, times[Math.max(0, at - 1)]!);
 }
 
 /** The largest of the scanned points, made finer by halving steps about it. */
