@@ -53,6 +53,8 @@ export const permissions = {
   'limit-set.write': { allow: analysis },
   'verdict.read': { allow: everyMember, administratorToo: true },
   'verdict.create': { allow: analysis },
+  'study.read': { allow: everyMember, administratorToo: true },
+  'study.write': { allow: analysis },
   'report.read': { allow: everyMember, administratorToo: true },
   'report.write': { allow: analysis },
   'report.submit': { allow: analysis },

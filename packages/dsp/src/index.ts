@@ -82,6 +82,7 @@ export { qualityFlags, type FlagContext } from './flags/quality-flags.js';
 export { type WindowSynchronism } from './flags/not-synchronous.js';
 export { countedFrequency } from './fundamental/counted-frequency.js';
 export type { FourierSeries, SeriesComponent } from './fourier/types.js';
+export { textbookSeries, type TextbookShape, type TextbookWave } from './fourier/textbook-series.js';
 export { oneCycle, partialSum } from './fourier/partial-sum.js';
 export {
   ordersForResidual,

@@ -1,6 +1,7 @@
 export { evaluate, type Evaluation } from './evaluate.js';
 export { limitForOrder, type LimitContext } from './limit-for-order.js';
 export { basisOfChannel, measurementOfChannel, type CurrentShape, type Measurement } from './measurement.js';
+export { measurementOfSeries, seriesOfChannel } from './study-series.js';
 export {
   limitRows,
   neededParameters,
