@@ -1,9 +1,8 @@
 import type { Report } from '@overtally/contracts';
 import { replacementCharacter } from './fonts.js';
-import { formatMoment } from './format.js';
+import { reportMark } from './furniture.js';
 import type { Sheet } from './sheet.js';
-import { text } from './theme.js';
-import { drawTitleBlock } from './title-block.js';
+import { boldLine, colours, text } from './theme.js';
 
 const cautions = [
   'The results hold for the recordings named here alone, as they were captured with the measuring chain stated.',
@@ -12,33 +11,20 @@ const cautions = [
   'Mains voltage can kill. Measurements on mains are for qualified persons with rated probes and isolation; local codes and the licensed practitioner decide.',
 ];
 
-/** Last part: what the results do not say, and who stands for them. */
+/** Last part: what the results do not say, and the mark that nothing follows. */
 export function drawClosing(sheet: Sheet, report: Report): void {
-  sheet.room(270);
-  sheet.heading('Cautions', 40, 'H2');
-  for (const caution of cautions) {
-    sheet.paragraph(caution, text.cell);
-    sheet.y += 4;
-  }
-  if (sheet.fonts.replaced) {
-    sheet.paragraph(
-      `${replacementCharacter} stands for a character that the fonts of this report do not have; the stored text has it.`,
-      text.cell,
-    );
-  }
-  sheet.heading('Signatures', 100, 'H2');
-  drawTitleBlock(sheet, [
-    [
-      { caption: 'Prepared by', value: report.preparedBy.name },
-      { caption: 'Issued by', value: report.issuedBy?.name ?? 'not issued' },
-    ],
-    [
-      { caption: 'Prepared', value: formatMoment(report.createdAt) },
-      { caption: 'Issued', value: formatMoment(report.issuedAt) },
-    ],
-    [
-      { caption: 'Signature', value: '\n\n ' },
-      { caption: 'Signature', value: '\n\n ' },
-    ],
+  sheet.heading('Cautions', 130, 'H2');
+  sheet.list([
+    ...cautions,
+    ...(sheet.fonts.replaced
+      ? [
+          `${replacementCharacter} stands for a character that the fonts of this report do not have; the stored text, and the report as data, have it.`,
+        ]
+      : []),
   ]);
+  sheet.room(30);
+  sheet.y += 12;
+  sheet.rule(sheet.y, boldLine, colours.ink);
+  sheet.y += 6;
+  sheet.paragraph(`End of report ${reportMark(report)}`, text.kicker, 'P', { align: 'center' });
 }

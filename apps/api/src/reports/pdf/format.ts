@@ -118,9 +118,6 @@ export function formatDate(iso: string | null): string {
   return `${at.getUTCDate()} ${months[at.getUTCMonth()]} ${at.getUTCFullYear()}`;
 }
 
-/** Text as given, or an en dash when there is none. */
-export const formatText = (text: string | null | undefined): string => text?.trim() || absent;
-
 /** "2, 3 and 5", and "2, 3, 5 and 7 more" past `atMost`. */
 export function formatList(items: readonly (string | number)[], atMost = Infinity): string {
   if (items.length > atMost) return `${items.slice(0, atMost).join(', ')} and ${items.length - atMost} more`;
@@ -133,3 +130,6 @@ export function noteLetter(index: number): string {
   const letter = String.fromCharCode(97 + (index % 26));
   return index < 26 ? letter : noteLetter(Math.floor(index / 26) - 1) + letter;
 }
+
+/** A day of the calendar, YYYY-MM-DD, as "3 Feb 2026". */
+export const formatDay = (day: string): string => formatDate(`${day}T00:00:00Z`);

@@ -10,6 +10,8 @@ const height = 172;
 const axisWidth = 44;
 const axisHeight = 32;
 const badgeRadius = 5;
+/** Points between the labels of two orders. */
+const leastLabelStep = 16;
 
 /** The spectrum by order against its limits, drawn with vectors; the alternative text names what is over. */
 export function drawOrderChart(sheet: Sheet, section: ReportSection): void {
@@ -43,7 +45,7 @@ export function drawOrderChart(sheet: Sheet, section: ReportSection): void {
       drawLegend(sheet, plot, bars);
       drawBadges(sheet, plot, scale, bars, section);
     },
-    describe(section, bars),
+    { alt: describe(section, bars) },
   );
   sheet.y = top + height + axisHeight;
 }
@@ -81,9 +83,9 @@ function drawOrderAxis(sheet: Sheet, plot: Plot, count: number): void {
     .moveTo(plot.left, foot)
     .lineTo(plot.left + plot.width, foot)
     .stroke(colours.ink);
-  const every = count > 60 ? 5 : count > 24 ? 2 : 1;
+  const every = [1, 2, 5, 10, 20].find((step) => step * plot.slot >= leastLabelStep) ?? 50;
   for (let order = plot.firstOrder; order < plot.firstOrder + count; order += 1) {
-    const labelled = every === 5 ? order % 5 === 0 || order === 1 : (order - 1) % every === 0;
+    const labelled = every === 2 ? order % 2 === 1 : order % every === 0;
     if (!labelled) continue;
     const middle = slotLeft(plot, order) + plot.slot / 2;
     sheet.line(String(order), text.axis, middle - 12, foot + 3, { width: 24, align: 'center' });

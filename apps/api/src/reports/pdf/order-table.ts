@@ -13,61 +13,87 @@ const figure = (content: string, over = false, colour?: string): Cell => ({
   style: over && colour ? tinted(text.figureStrong, colour) : text.figure,
 });
 
-/** Every order against its limit: value, part of the fundamental, highest 1.5 s value, limit, share, result. */
+/** Which of the columns that not every verdict fills are there. */
+interface Filled {
+  uncertainty: boolean;
+  highest: boolean;
+}
+
+/** Every order against its limit: value, uncertainty, part of the fundamental, highest 1.5 s value, limit, margin, share, result. */
 export function drawOrderTable(sheet: Sheet, section: ReportSection): void {
-  const { orders, unit } = section.verdict;
+  const { orders } = section.verdict;
   if (orders.length === 0) return;
-  const withUncertainty = orders.some((entry) => entry.uncertainty !== null);
-  sheet.heading('Orders against their limits', 60);
-  drawTable(sheet, orderColumns(withUncertainty), orderRows(section, unit, withUncertainty), { rowHeight });
+  const filled: Filled = {
+    uncertainty: orders.some((entry) => entry.uncertainty !== null),
+    highest: orders.some((entry) => entry.smoothedMax !== null),
+  };
+  sheet.heading('Orders against their limits', 90);
+  drawTable(sheet, orderColumns(filled), orderRows(section, filled), { rowHeight, groupOf: 5 });
   drawRemarks(sheet, orders);
 }
 
-function orderColumns(withUncertainty: boolean): Column[] {
+function orderColumns({ uncertainty, highest }: Filled): Column[] {
   const right = (header: string, share: number): Column => ({ header, share, align: 'right' });
   return [
-    right('Order', 0.7),
-    right('Value', 1.3),
-    ...(withUncertainty ? [right('±, k = 2', 1.2)] : []),
-    right('Of fundamental', 1.25),
-    right('Highest 1.5 s', 1.3),
-    right('Limit', 1.3),
-    right('Share', 1.2),
-    { header: 'Result', share: 1.35 },
+    right('Order', 0.75),
+    right('Value', 1.25),
+    ...(uncertainty ? [right('U\n(k = 2)', 1.15)] : []),
+    right('Of funda-\nmental', 1.1),
+    ...(highest ? [right('Highest\n1.5 s', 1.25)] : []),
+    right('Limit', 1.25),
+    right('Margin', 1.3),
+    right('Share of\nlimit', 1.15),
+    { header: 'Result', share: 1.5 },
   ];
 }
 
-function orderRows({ verdict, analysis }: ReportSection, unit: string, withUncertainty: boolean): Cell[][] {
+function orderRows({ verdict, analysis }: ReportSection, filled: Filled): Cell[][] {
+  const { unit, orders } = verdict;
   const parts = new Map(analysis.channel.harmonics.map((each) => [each.order, each.percentOfFundamental]));
   const { fundamental } = analysis.channel;
   const none = figure('–');
+  const row = (
+    cells: Record<'order' | 'value' | 'u' | 'part' | 'highest' | 'limit' | 'margin' | 'share', Cell>,
+    result: Cell,
+  ) => [
+    cells.order,
+    cells.value,
+    ...(filled.uncertainty ? [cells.u] : []),
+    cells.part,
+    ...(filled.highest ? [cells.highest] : []),
+    cells.limit,
+    cells.margin,
+    cells.share,
+    result,
+  ];
   const first =
-    fundamental === null
+    fundamental === null || orders.some(({ order }) => order === 1)
       ? []
       : [
-          [
-            figure('1'),
-            figure(formatQuantity(fundamental.rms, unit)),
-            ...(withUncertainty ? [none] : []),
-            figure(formatPercent(100)),
-            none,
-            none,
-            none,
+          row(
+            {
+              ...{ order: figure('1'), value: figure(formatQuantity(fundamental.rms, unit)), u: none },
+              ...{ part: figure(formatPercent(100)), highest: none, limit: none, margin: none, share: none },
+            },
             { text: 'fundamental', style: tinted(text.cell, text.soft.colour) },
-          ],
+          ),
         ];
-  const judged = verdict.orders.map((entry) => {
+  const judged = orders.map((entry) => {
     const colour = resultColour(entry.result);
-    return [
-      figure(String(entry.order), isOver(entry.result), colour),
-      figure(formatQuantity(entry.mean, unit)),
-      ...(withUncertainty ? [figure(formatQuantity(entry.uncertainty, unit, 2))] : []),
-      figure(formatPercent(parts.get(entry.order))),
-      figure(formatQuantity(entry.smoothedMax, unit)),
-      figure(formatQuantity(entry.limit, unit)),
-      figure(formatShare(entry.sharePercent), isOver(entry.result), colour),
+    const over = isOver(entry.result);
+    return row(
+      {
+        order: figure(String(entry.order), over, colour),
+        value: figure(formatQuantity(entry.mean, unit)),
+        u: figure(formatQuantity(entry.uncertainty, unit, 2)),
+        part: figure(formatPercent(parts.get(entry.order))),
+        highest: figure(formatQuantity(entry.smoothedMax, unit)),
+        limit: figure(formatQuantity(entry.limit, unit)),
+        margin: figure(formatQuantity(entry.margin, unit), over, colour),
+        share: figure(formatShare(entry.sharePercent), over, colour),
+      },
       resultCell(entry.result),
-    ];
+    );
   });
   return [...first, ...judged];
 }

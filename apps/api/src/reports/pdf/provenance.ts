@@ -1,33 +1,19 @@
-import type { ImportOptions, LimitSet, ReportSection, Settings } from '@overtally/contracts';
+import type { ImportOptions, LimitSet, ReportSection } from '@overtally/contracts';
+import { drawFacts, type Fact } from './facts.js';
 import { formatCount, formatGiven, formatMoment } from './format.js';
 import type { Sheet } from './sheet.js';
-import { drawTable, type Cell } from './table.js';
-import { text, tinted } from './theme.js';
-import { confidenceName, profileName } from './words.js';
+import { confidenceName } from './words.js';
 
 /** Where every figure of a section comes from, so that it can be computed again. */
 export function drawProvenance(sheet: Sheet, section: ReportSection): void {
   sheet.heading('Provenance', 50);
-  const rows = provenanceRows(section).map(([name, value, mono]): Cell[] => [
-    { text: name, style: tinted(text.cell, text.soft.colour) },
-    { text: value, style: mono ? text.figure : text.cell },
-  ]);
-  drawTable(
-    sheet,
-    [
-      { header: 'What', share: 1 },
-      { header: 'As stored', share: 3.6 },
-    ],
-    rows,
-  );
+  drawFacts(sheet, provenanceFacts(section));
 }
 
 const confidenceWords = ({ confidence, evidence }: LimitSet): string =>
   evidence === '' ? confidenceName(confidence) : `${confidenceName(confidence)}, evidence: ${evidence}`;
 
-type Row = [name: string, value: string, mono?: boolean];
-
-function provenanceRows({ recording, analysis, verdict }: ReportSection): Row[] {
+function provenanceFacts({ recording, analysis, verdict }: ReportSection): Fact[] {
   const { limitSet } = verdict;
   const edition = [limitSet.standard, limitSet.edition, limitSet.tableRef]
     .filter((part) => part !== '')
@@ -37,18 +23,17 @@ function provenanceRows({ recording, analysis, verdict }: ReportSection): Row[] 
     ['Source file', `${recording.file.name}, ${formatCount(recording.file.size)} bytes`],
     ['SHA-256 of the file', recording.file.sha256, true],
     ['Import options', importWords(recording.import)],
-    ...Object.entries(recording.metadata).map(([name, value]): Row => [`From the file: ${name}`, value]),
+    ...Object.entries(recording.metadata).map(([name, value]): Fact => [`From the file: ${name}`, value]),
     ['Analysis', analysis.id, true],
     ['Engine version', analysis.engineVersion ?? '–', true],
     ['Finished', formatMoment(analysis.finishedAt)],
-    ['Settings', settingsWords(analysis.settings)],
     ['Verdict', verdict.id, true],
     ['Judged by', `${verdict.author.name}, ${formatMoment(verdict.createdAt)}`],
     ['Limit set', `${limitSet.title} (${limitSet.id}, version ${limitSet.version})`],
     ['Edition', edition === '' ? '–' : edition],
     ['Source of the limits', limitSet.source.join('; ') || '–'],
     ['Confidence in the limits', confidenceWords(limitSet)],
-    ...limitSet.notes.map((note): Row => ['Note to the limits', note]),
+    ...limitSet.notes.map((note): Fact => ['Note to the limits', note]),
     ['Parameters', parameters.length === 0 ? 'none' : parameters.map(parameterWords).join(', ')],
   ];
 }
@@ -67,21 +52,6 @@ const parameterUnits: Record<string, [name: string, unit: string]> = {
 function parameterWords([key, value]: [string, number]): string {
   const [name, unit] = parameterUnits[key] ?? [key, ''];
   return `${name} ${formatGiven(value)}\u00a0${unit}`.trimEnd();
-}
-
-function settingsWords(settings: Settings): string {
-  const { nominalFrequencyHz: nominal, span } = settings;
-  return [
-    profileName(settings.profile),
-    nominal === 'auto' ? 'fundamental searched' : `nominal frequency ${formatGiven(nominal)} Hz`,
-    settings.window && `${settings.window} window for the drawn spectrum`,
-    settings.cyclesPerWindow && `${settings.cyclesPerWindow} cycles per window`,
-    settings.maxOrder && `orders up to ${settings.maxOrder}`,
-    settings.thdMaxOrder && `THD up to order ${settings.thdMaxOrder}`,
-    span && `from ${formatGiven(span.fromS)} s to ${formatGiven(span.toS)} s`,
-  ]
-    .filter((part) => typeof part === 'string')
-    .join('; ');
 }
 
 const delimiterNames = { ',': 'comma', ';': 'semicolon', '\t': 'tab', ' ': 'space', '|': 'bar' } as const;

@@ -1,8 +1,12 @@
 import type { Report } from '@overtally/contracts';
 import PDFDocument from 'pdfkit';
+import { drawAuthorisation } from './authorisation.js';
+import { drawCheckBlock } from './check-block.js';
 import { drawClosing } from './closing.js';
 import { drawCoverPage } from './cover-page.js';
 import { drawFurniture, reportMark } from './furniture.js';
+import { keepPagesAsText } from './page-text.js';
+import { drawParticulars } from './particulars.js';
 import { drawSection } from './section-pages.js';
 import { Sheet } from './sheet.js';
 import { page } from './theme.js';
@@ -20,11 +24,12 @@ export interface RenderOptions {
  * Everything printed comes from the report's content; nothing is computed anew. A report that is not issued is
  * marked DRAFT on each page. The same report gives the same bytes.
  */
-export async function renderReportPdf(report: Report, { between }: RenderOptions): Promise<Buffer> {
+export async function renderReportPdf(report: Report, { checkUrl, between }: RenderOptions): Promise<Buffer> {
   const doc = new PDFDocument({
     size: 'A4',
     margins: { left: page.left, right: page.right, top: page.top, bottom: page.bottom },
     bufferPages: true,
+    autoFirstPage: false,
     tagged: true,
     lang: 'en-GB',
     displayTitle: true,
@@ -39,12 +44,17 @@ export async function renderReportPdf(report: Report, { between }: RenderOptions
     },
   });
   const bytes = collect(doc);
+  keepPagesAsText(doc);
+  doc.addPage();
   const sheet = new Sheet(doc);
   drawCoverPage(sheet, report);
+  drawParticulars(sheet, report);
+  drawAuthorisation(sheet, report);
   report.content.sections.forEach((section, index, all) => {
     between();
     drawSection(sheet, section, index, all.length);
   });
+  drawCheckBlock(sheet, report, checkUrl);
   drawClosing(sheet, report);
   drawFurniture(sheet, report);
   doc.end();

@@ -8,13 +8,22 @@ interface Place {
   align?: 'left' | 'right' | 'center';
 }
 
+interface TagOptions {
+  /** What a figure shows, in words. */
+  alt?: string;
+  /** For header cells of a table. */
+  scope?: 'Row' | 'Column';
+}
+
 /** The report's page as the parts see it: a cursor, tagged text, rules and page breaks. */
 export class Sheet {
   readonly left = page.left;
   readonly width = textWidth;
+  readonly right = page.left + textWidth;
   readonly floor = page.height - page.bottom;
   readonly fonts: Fonts;
   private parent: PDFKit.PDFStructureElement;
+  private bookmark: PDFKit.PDFOutline | undefined;
 
   constructor(readonly doc: PDFKit.PDFDocument) {
     this.fonts = new Fonts(doc);
@@ -32,7 +41,7 @@ export class Sheet {
 
   /** Begins a page when less than `height` is left on this one; true when it did. */
   room(height: number): boolean {
-    if (this.y + height <= this.floor) return false;
+    if (this.y + height <= this.floor || this.y <= page.top) return false;
     this.newPage();
     return true;
   }
@@ -53,9 +62,9 @@ export class Sheet {
     element.end();
   }
 
-  /** Draws one tagged piece; `alt` says in words what a figure shows. */
-  tag(type: string, draw: () => void, alt?: string): void {
-    const element = this.doc.struct(type, alt === undefined ? {} : { alt }, [draw]);
+  /** Draws one tagged piece. */
+  tag(type: string, draw: () => void, options: TagOptions = {}): void {
+    const element = this.doc.struct(type, options, [draw]);
     this.parent.add(element);
     element.end();
   }
@@ -79,14 +88,32 @@ export class Sheet {
     this.doc.text(printed, x, y, { width, align, lineGap: style.size * 0.12 });
   }
 
-  /** One unwrapped line at a place; the cursor stays. */
+  /** One unwrapped line at a place, made smaller where it would not fit its width; the cursor stays. */
   line(content: string, style: TextStyle, x: number, y: number, place: Omit<Place, 'x' | 'y'> = {}): void {
-    const printed = this.use(content, style);
-    const slack = place.width === undefined ? 0 : place.width - this.doc.widthOfString(printed);
-    const shift = place.align === 'right' ? slack : place.align === 'center' ? slack / 2 : 0;
+    const { width, align } = place;
+    const fitted = width === undefined ? content : this.fitted(content, style, width);
+    const printed = this.use(fitted, style);
+    const slack = width === undefined ? 0 : width - this.doc.widthOfString(printed);
+    const shift = align === 'right' ? slack : align === 'center' ? slack / 2 : 0;
     const cursor = this.y;
     this.doc.text(printed, x + shift, y, { lineBreak: false });
     this.y = cursor;
+  }
+
+  /** Items one under the other, each behind a dash. */
+  list(items: readonly string[], style: TextStyle = text.cell): void {
+    this.group('L', () => {
+      for (const item of items) {
+        this.room(2 * style.size * 1.4);
+        this.group('LI', () => {
+          const top = this.y;
+          this.tag('Lbl', () => this.line('–', style, this.left, top));
+          this.y = top;
+          this.paragraph(item, style, 'LBody', { x: this.left + 12, width: this.width - 12 });
+        });
+        this.y += 3;
+      }
+    });
   }
 
   /** Height that `flow` would take. */
@@ -97,6 +124,19 @@ export class Sheet {
 
   widthOf(content: string, style: TextStyle): number {
     return this.doc.widthOfString(this.use(content, style));
+  }
+
+  /** The line cut to a width, with an ellipsis where something was cut off. */
+  fitted(content: string, style: TextStyle, width: number): string {
+    if (this.widthOf(content, style) <= width) return content;
+    const signs = [...content];
+    let [fits, not] = [0, signs.length];
+    while (not - fits > 1) {
+      const middle = (fits + not) >> 1;
+      if (this.widthOf(`${signs.slice(0, middle).join('')}…`, style) <= width) fits = middle;
+      else not = middle;
+    }
+    return `${signs.slice(0, fits).join('').trimEnd()}…`;
   }
 
   /** A horizontal rule over the text width, or between two places. */
@@ -117,11 +157,19 @@ export class Sheet {
   }
 
   /** Begins a part of a section: a heading over the one bold line, kept together with `keep` points below. */
-  heading(content: string, keep = 60, type = 'H3'): void {
+  heading(content: string, keep = 60, type: 'H2' | 'H3' = 'H3'): void {
     if (!this.room(30 + keep)) this.y += 14;
+    if (type === 'H2') this.mark(content);
+    else this.mark(content, this.bookmark);
     this.paragraph(content, text.subheading, type);
     this.rule(this.y + 2, boldLine, colours.ink);
     this.y += 9;
+  }
+
+  /** Adds a place to the outline; one that stands under no other takes those that follow under it. */
+  mark(title: string, under?: PDFKit.PDFOutline): void {
+    const made = (under ?? this.doc.outline).addItem(title);
+    if (under === undefined) this.bookmark = made;
   }
 
   private use(content: string, style: TextStyle): string {

@@ -32,20 +32,18 @@ export function drawTallyStrip(
   const foot = y + height;
   const full = height / tallestShare;
   const { doc } = sheet;
-  sheet.artifact(() => {
-    doc
-      .lineWidth(hairline)
-      .moveTo(x, foot - full)
-      .lineTo(x + width, foot - full)
-      .stroke(colours.ruleStrong);
-    for (let index = 0; index < count; index += 1) {
-      const entry = byOrder.get(firstOrder + index);
-      const share = (entry?.sharePercent ?? 0) / 100;
-      const tick = Math.max(stub, Math.min(share, tallestShare) * full);
-      const at = x + (index + Math.floor(index / groupOf) * 0.6) * slot;
-      doc.rect(at, foot - tick, slot * 0.62, tick).fill(tickColour(entry));
-    }
-  });
+  doc
+    .lineWidth(hairline)
+    .moveTo(x, foot - full)
+    .lineTo(x + width, foot - full)
+    .stroke(colours.ruleStrong);
+  for (let index = 0; index < count; index += 1) {
+    const entry = byOrder.get(firstOrder + index);
+    const share = (entry?.sharePercent ?? 0) / 100;
+    const tick = Math.max(stub, Math.min(share, tallestShare) * full);
+    const at = x + (index + Math.floor(index / groupOf) * 0.6) * slot;
+    doc.rect(at, foot - tick, slot * 0.62, tick).fill(tickColour(entry));
+  }
 }
 
 function tickColour(entry: OrderVerdict | undefined): string {

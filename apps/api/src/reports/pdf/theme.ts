@@ -13,7 +13,7 @@ export const colours = {
 } as const;
 
 /** A4 in PostScript points, with the margins of the text area. */
-export const page = { width: 595.28, height: 841.89, left: 54, right: 54, top: 74, bottom: 62 } as const;
+export const page = { width: 595.28, height: 841.89, left: 56, right: 50, top: 68, bottom: 80 } as const;
 export const textWidth = page.width - page.left - page.right;
 
 export const hairline = 0.5;
@@ -28,8 +28,9 @@ export interface TextStyle {
 const style = (font: TextStyle['font'], size: number, colour: string): TextStyle => ({ font, size, colour });
 
 export const text = {
-  title: style('sans-strong', 21, colours.ink),
-  verdict: style('sans-strong', 16, colours.ink),
+  kicker: style('sans-strong', 9, colours.inkSoft),
+  title: style('sans-strong', 22, colours.ink),
+  verdict: style('sans-strong', 19, colours.ink),
   heading: style('sans-strong', 15, colours.ink),
   subheading: style('sans-strong', 10, colours.ink),
   body: style('sans', 9.5, colours.ink),
@@ -41,6 +42,10 @@ export const text = {
   figure: style('mono', 8, colours.ink),
   figureStrong: style('mono-strong', 8, colours.ink),
   axis: style('sans', 6.5, colours.inkSoft),
+  axisStrong: style('sans-strong', 6.5, colours.over),
+  tiny: style('sans', 5.5, colours.inkSoft),
+  strip: style('sans', 7.5, colours.ink),
+  stripStrong: style('mono-strong', 7.5, colours.ink),
 } as const;
 
 /** The same style in another colour. */

@@ -8,15 +8,17 @@ export interface TitleCell {
   share?: number;
   /** For figures and codes. */
   mono?: boolean;
+  strong?: boolean;
   colour?: string;
 }
 
 const padding = 6;
-const captionHeight = 11;
+const captionHeight = 10.5;
 
-function styleOf(cell: TitleCell): TextStyle {
-  if (cell.colour !== undefined) return tinted(cell.mono ? text.figureStrong : text.cellStrong, cell.colour);
-  return cell.mono ? text.figure : text.cell;
+function styleOf({ mono = false, strong = false, colour }: TitleCell): TextStyle {
+  const bold = strong || colour !== undefined;
+  const base = mono ? (bold ? text.figureStrong : text.figure) : bold ? text.cellStrong : text.cell;
+  return colour === undefined ? base : tinted(base, colour);
 }
 
 /** The title block over a part of the report, as on an engineering drawing: ruled cells with small captions. */
@@ -25,13 +27,10 @@ export function drawTitleBlock(sheet: Sheet, rows: TitleCell[][]): void {
   const total = heights.reduce((sum, height) => sum + height, 0);
   sheet.room(total);
   const top = sheet.y;
-  sheet.artifact(() =>
-    sheet.doc.lineWidth(hairline).rect(sheet.left, top, sheet.width, total).stroke(colours.ruleStrong),
-  );
+  drawLines(sheet, rows, heights, top, total);
   let y = top;
   rows.forEach((row, index) => {
-    if (index > 0) sheet.rule(y);
-    drawRow(sheet, row, y, heights[index]!);
+    drawRow(sheet, row, y);
     y += heights[index]!;
   });
   sheet.y = top + total;
@@ -48,30 +47,39 @@ function rowHeight(sheet: Sheet, row: TitleCell[]): number {
   const heights = row.map((cell, index) =>
     sheet.heightOf(cell.value, styleOf(cell), widths[index]! - 2 * padding),
   );
-  return captionHeight + Math.max(...heights) + 1.6 * padding;
+  return captionHeight + Math.max(...heights) + 1.5 * padding;
 }
 
-function drawRow(sheet: Sheet, row: TitleCell[], y: number, height: number): void {
+function drawLines(sheet: Sheet, rows: TitleCell[][], heights: number[], top: number, total: number): void {
+  const { doc } = sheet;
+  sheet.artifact(() => {
+    let y = top;
+    rows.forEach((row, index) => {
+      if (index > 0) doc.moveTo(sheet.left, y).lineTo(sheet.right, y);
+      const widths = cellWidths(sheet, row);
+      let x = sheet.left;
+      for (const width of widths.slice(0, -1)) {
+        x += width;
+        doc.moveTo(x, y).lineTo(x, y + heights[index]!);
+      }
+      y += heights[index]!;
+    });
+    doc.lineWidth(hairline).stroke(colours.ruleStrong);
+    doc.lineWidth(1).rect(sheet.left, top, sheet.width, total).stroke(colours.ink);
+  });
+}
+
+function drawRow(sheet: Sheet, row: TitleCell[], y: number): void {
   const widths = cellWidths(sheet, row);
   let x = sheet.left;
   row.forEach((cell, index) => {
-    if (index > 0) {
-      const at = x;
-      sheet.artifact(() =>
-        sheet.doc
-          .lineWidth(hairline)
-          .moveTo(at, y)
-          .lineTo(at, y + height)
-          .stroke(colours.rule),
-      );
-    }
     const inner = {
       x: x + padding,
-      y: y + 0.8 * padding + captionHeight,
+      y: y + 0.7 * padding + captionHeight,
       width: widths[index]! - 2 * padding,
     };
     sheet.tag('P', () => {
-      sheet.line(cell.caption, text.caption, inner.x, y + 0.8 * padding);
+      sheet.line(cell.caption, text.caption, inner.x, y + 0.7 * padding, { width: inner.width });
       sheet.flow(cell.value, styleOf(cell), inner);
     });
     x += widths[index]!;

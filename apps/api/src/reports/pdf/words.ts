@@ -89,6 +89,10 @@ const groupPhrases: [VerdictResult, string][] = [
 
 /** The overall result as one sentence: "2 of 3 judged channels are over a limit, 1 within the limits." */
 export function overallSentence(content: ReportContent): string {
+  const [only, ...others] = content.sections;
+  if (only && others.length === 0) {
+    return `${only.recording.number} ${only.recording.name}, ${only.verdict.channelName}: ${verdictInShort(only.verdict)}.`;
+  }
   const results = content.sections.map((section) => section.verdict.result);
   const first = `${results.length} verdict${results.length === 1 ? '' : 's'} on ${recordingsCount(
     new Set(content.sections.map((section) => section.recording.id)).size,
@@ -99,3 +103,12 @@ export function overallSentence(content: ReportContent): string {
     .map((part) => `${part.count} ${part.phrase}`);
   return `${first}: ${formatList(parts)}.`;
 }
+
+/** Said where a report must state something and nothing is known. */
+export const notStated = 'not stated';
+
+/** Text as given, or what is said when there is none. */
+export const stated = (given: string, otherwise: string = notStated): string => given.trim() || otherwise;
+
+export const laboratoryName = ({ laboratory }: Pick<ReportContent, 'laboratory'>): string =>
+  stated(laboratory.name, 'Laboratory not stated');
