@@ -13,7 +13,7 @@ import {
   UploadOutcomeDto,
 } from './dto/upload.dto.js';
 import { FinishUploadService } from './uploading/finish-upload.service.js';
-import { goneSignal } from './uploading/gone-signal.js';
+import { goneSignal } from '../common/gone-signal.js';
 import { ResumableUploadsService } from './uploading/resumable-uploads.service.js';
 import { UploadLimitsService } from './uploading/upload-limits.service.js';
 import { UploadSpool } from './uploading/upload-spool.js';

@@ -23,7 +23,7 @@ import { RecordingsService } from './recordings.service.js';
 import { ArchiveInterceptor } from './uploading/archives/archive.interceptor.js';
 import { ArchivesService } from './uploading/archives/archives.service.js';
 import { formLimits } from './uploading/form-limits.js';
-import { goneSignal } from './uploading/gone-signal.js';
+import { goneSignal } from '../common/gone-signal.js';
 import type { StagedFile } from './uploading/staging-engine.js';
 import { UploadInterceptor } from './uploading/upload.interceptor.js';
 

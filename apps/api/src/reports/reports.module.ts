@@ -12,8 +12,8 @@ import { ReportIssueService } from './report-issue.service.js';
 import { ReportDeliveriesController } from './report-deliveries.controller.js';
 import { ReportNoticesRepository } from './report-notices.repository.js';
 import { ReportNotices } from './report-notices.service.js';
-import { ReportPdfController } from './report-pdf.controller.js';
-import { ReportPdfService } from './report-pdf.service.js';
+import { ReportFilesController } from './report-files.controller.js';
+import { ReportFiles } from './report-files.service.js';
 import { ReportPictures } from './report-pictures.service.js';
 import { ReportRevisionsService } from './report-revisions.service.js';
 import { ReportStepsController } from './report-steps.controller.js';
@@ -34,7 +34,7 @@ import { ReportsService } from './reports.service.js';
     NotesModule,
     RecordingsModule,
   ],
-  controllers: [ReportDeliveriesController, ReportsController, ReportStepsController, ReportPdfController],
+  controllers: [ReportDeliveriesController, ReportsController, ReportStepsController, ReportFilesController],
   providers: [
     ReportNotices,
     ReportNoticesRepository,
@@ -46,7 +46,7 @@ import { ReportsService } from './reports.service.js';
     ReportRevisionsService,
     ReportRendering,
     ReportPictures,
-    ReportPdfService,
+    ReportFiles,
   ],
   exports: [ReportsService, ReportStepsService, ReportRendering],
 })

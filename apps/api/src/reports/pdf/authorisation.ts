@@ -10,6 +10,8 @@ interface Signatory {
   comment: string;
 }
 
+const samePerson = 'Prepared and issued by the same person, as the project allows.';
+
 /** Who prepared, submitted and issued the report, when, and where they sign. */
 export function drawAuthorisation(sheet: Sheet, report: Report): void {
   sheet.heading('Authorisation', 150, 'H2');
@@ -27,7 +29,6 @@ export function drawAuthorisation(sheet: Sheet, report: Report): void {
 
 function signatoriesOf(report: Report): Signatory[] {
   const submitted = lastOf(report.events, 'submitted');
-  const issued = lastOf(report.events, 'issued');
   const isIssued = report.issuedBy !== null && report.issuedAt !== null;
   return [
     {
@@ -38,7 +39,7 @@ function signatoriesOf(report: Report): Signatory[] {
     },
     {
       role: 'Submitted for review by',
-      name: submitted?.by.name ?? 'not submitted',
+      name: report.submittedBy?.name ?? submitted?.by.name ?? 'not submitted',
       moment: formatMoment(submitted?.at ?? null),
       comment: submitted?.comment ?? '',
     },
@@ -46,7 +47,7 @@ function signatoriesOf(report: Report): Signatory[] {
       role: 'Reviewed and authorised for issue by',
       name: isIssued ? report.issuedBy!.name : 'not issued',
       moment: formatMoment(report.issuedAt),
-      comment: issued?.comment ?? '',
+      comment: report.isIssuedByPreparer ? samePerson : '',
     },
   ];
 }

@@ -1,4 +1,4 @@
-import type { Report, ReportContent, ReportSection } from '@overtally/contracts';
+import type { Report, ReportSection } from '@overtally/contracts';
 import { formatDate } from './format.js';
 import type { Sheet } from './sheet.js';
 import { drawTable } from './table.js';
@@ -101,19 +101,15 @@ function itemsInShort(sections: readonly ReportSection[]): string {
 /** A revision says what it takes the place of, so that nobody relies on the older one (7.8.8). */
 function drawReplaced(sheet: Sheet, { replaces, number, content }: Report): void {
   if (replaces === null) return;
-  const reason = revisionReason(content);
   const name = number === null ? '' : ` of ${number}`;
   const words = `This report replaces revision ${replaces.revision}${name}, which is superseded from the date of issue on.`;
   sheet.y += 10;
   drawPanel(sheet, colours.act, () => {
     sheet.paragraph(words, text.strong, 'P', panelPlace(sheet));
     sheet.y += 2;
-    sheet.paragraph(`Reason: ${stated(reason)}`, text.body, 'P', panelPlace(sheet));
+    sheet.paragraph(`Reason: ${stated(content.revisionReason ?? '')}`, text.body, 'P', panelPlace(sheet));
   });
 }
-
-const revisionReason = (content: ReportContent & { revisionReason?: string | null }): string =>
-  content.revisionReason?.trim() ?? '';
 
 function drawResult(sheet: Sheet, { content }: Report): void {
   sheet.heading('Result', 90, 'H2');

@@ -1,5 +1,5 @@
 import type { Response } from 'express';
-import { problem } from '../../common/problem.js';
+import { problem } from './problem.js';
 
 /** Fires when who asked goes away before the answer. */
 export function goneSignal(reply: Response): AbortSignal {
