@@ -20,8 +20,11 @@ import { AnalyseRecordingHandler } from '../analyses/computing/analyse-recording
 import { RequestPasswordResetHandler } from '../auth/recovery/request-password-reset.handler.js';
 import { AppConfig } from '../config/app-config.js';
 import { DATABASE, POOL } from '../database/database.tokens.js';
+import { CalibrationNoticesHandler } from '../instruments/notices/calibration-notices.handler.js';
+import { calibrationNoticesJob } from '../jobs/definitions/calibration-notices.job.js';
 import { clearStorageJob } from '../jobs/definitions/clear-storage.job.js';
 import { jobDefinitions } from '../jobs/definitions/index.js';
+import type { JobDefinition } from '../jobs/job-definition.js';
 import { JobsService } from '../jobs/jobs.service.js';
 import { SendMailHandler } from '../mails/sending/send-mail.handler.js';
 import { ReadRecordingHandler } from '../recordings/reading/read-recording.handler.js';
@@ -32,8 +35,10 @@ import { queueLogger } from './queue-logger.js';
 import { exhaustedJobs, releaseDeadWorkers, resumeInterrupted, WorkerLease } from './worker-lease.js';
 
 const sweepIntervalMs = 5_000;
-/** Every night at an odd minute, in UTC. */
-const schedule = `17 2 * * * ${clearStorageJob.name} ?max=${clearStorageJob.maxAttempts}&jobKey=${clearStorageJob.key({})}`;
+const entry = (time: string, { name, maxAttempts, key }: JobDefinition<Record<string, never>>) =>
+  `${time} * * * ${name} ?max=${maxAttempts}&jobKey=${key({})}`;
+/** Each once a day at an odd minute, in UTC. */
+const schedule = [entry('17 2', clearStorageJob), entry('37 5', calibrationNoticesJob)].join('\n');
 
 /** Runs the queue in this process and looks after what dead workers left behind. */
 @Injectable()
@@ -58,6 +63,7 @@ export class WorkerService implements OnApplicationBootstrap, BeforeApplicationS
     clearStorage: ClearStorageHandler,
     sendMail: SendMailHandler,
     requestPasswordReset: RequestPasswordResetHandler,
+    calibrationNotices: CalibrationNoticesHandler,
   ) {
     this.handlers = matchHandlers(jobDefinitions, [
       readRecording,
@@ -65,12 +71,15 @@ export class WorkerService implements OnApplicationBootstrap, BeforeApplicationS
       clearStorage,
       sendMail,
       requestPasswordReset,
+      calibrationNotices,
     ]);
   }
 
   async onApplicationBootstrap(): Promise<void> {
     this.utils = await makeWorkerUtils({ pgPool: this.pool, logger: queueLogger });
-    await this.database.transaction((tx) => this.jobs.enqueue(tx, clearStorageJob, {}));
+    await this.database.transaction(async (tx) => {
+      for (const job of [clearStorageJob, calibrationNoticesJob]) await this.jobs.enqueue(tx, job, {});
+    });
     const events: WorkerEvents = new EventEmitter();
     events.on('pool:create', ({ workerPool }) => {
       this.lease = new WorkerLease(this.pool, workerPool.id);

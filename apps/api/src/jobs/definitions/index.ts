@@ -1,5 +1,6 @@
 import type { JobDefinition } from '../job-definition.js';
 import { analyseRecordingJob } from './analyse-recording.job.js';
+import { calibrationNoticesJob } from './calibration-notices.job.js';
 import { clearStorageJob } from './clear-storage.job.js';
 import { readRecordingJob } from './read-recording.job.js';
 import { requestPasswordResetJob } from './request-password-reset.job.js';
@@ -12,4 +13,5 @@ export const jobDefinitions: readonly Pick<JobDefinition, 'name'>[] = [
   clearStorageJob,
   sendMailJob,
   requestPasswordResetJob,
+  calibrationNoticesJob,
 ];
