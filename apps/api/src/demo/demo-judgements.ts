@@ -6,6 +6,7 @@ import { eq, sql } from 'drizzle-orm';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { VerdictsService } from '../limits/verdicts.service.js';
+import { InvitationsService } from '../invitations/invitations.service.js';
 import { NotesService } from '../notes/notes.service.js';
 import { RecordingsService } from '../recordings/recordings.service.js';
 import { ReportsService } from '../reports/reports.service.js';
@@ -22,6 +23,8 @@ const work = {
     text: 'Order 3 is the largest; compare with the capture at 25°.',
     cause: 'Phase control, conduction from 90°',
   },
+  recipients: [{ name: 'Priya Castellan', email: 'priya@ostrel-appliances.example' }],
+  invited: { email: 'quality@ostrel-appliances.example', role: 'guest' },
   report: {
     title: 'Harmonic currents of compressor RC-210 and hood module HM-1000',
     summary: 'Compressor running, and hood module with phase control at 90°, on the checked supply.',
@@ -29,7 +32,13 @@ const work = {
   },
 } as const;
 
-/** Verdicts, a note and a draft report of the demonstration, made the way a person makes them. */
+interface Place {
+  projectId: string;
+  analyst: SignedInUser;
+  manager: SignedInUser;
+}
+
+/** Verdicts, a note, a draft report and an invitation of the demonstration, made the way a person makes them. */
 @Injectable()
 export class DemoJudgements {
   constructor(
@@ -38,13 +47,14 @@ export class DemoJudgements {
     private readonly verdicts: VerdictsService,
     private readonly notes: NotesService,
     private readonly reports: ReportsService,
+    private readonly invitations: InvitationsService,
   ) {}
 
   /** Makes them once the captures are analysed; false while some are not. A project with verdicts is left alone. */
   async make(): Promise<boolean> {
     const place = await this.place();
     if (place === undefined) return true;
-    const { projectId, analyst } = place;
+    const { projectId } = place;
     return this.database.transaction(async (tx) => {
       // Held while the work is done elsewhere, so that a second process does not do it as well.
       await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended('demonstration', 0))`);
@@ -54,23 +64,28 @@ export class DemoJudgements {
       if (captures.some(({ status }) => status !== 'ready')) {
         return captures.some(({ status }) => status === 'failed');
       }
-      await this.work(projectId, analyst, captures);
+      await this.work(place, captures);
       return true;
     });
   }
 
-  private async place(): Promise<{ projectId: string; analyst: SignedInUser } | undefined> {
+  private async place(): Promise<Place | undefined> {
     const name = demoProjects[0]?.name ?? '';
-    const email = demoPeople.find(({ role }) => role === 'analyst')?.email ?? '';
     const [project] = await this.database
       .select({ id: projects.id })
       .from(projects)
       .where(eq(projects.name, name));
-    const [analyst] = await this.database
+    const [analyst, manager] = await Promise.all([this.person('analyst'), this.person('manager')]);
+    return project && analyst && manager && { projectId: project.id, analyst, manager };
+  }
+
+  private async person(wanted: 'analyst' | 'manager'): Promise<SignedInUser | undefined> {
+    const email = demoPeople.find(({ role }) => role === wanted)?.email ?? '';
+    const [person] = await this.database
       .select({ id: users.id, email: users.email, name: users.name, isAdministrator: users.isAdministrator })
       .from(users)
       .where(eq(users.email, email));
-    return project && analyst && { projectId: project.id, analyst };
+    return person;
   }
 
   /** The captures that are judged; undefined when one was deleted. */
@@ -80,7 +95,7 @@ export class DemoJudgements {
     return found.every((recording) => recording !== undefined) ? found : undefined;
   }
 
-  private async work(projectId: string, analyst: SignedInUser, captures: Recording[]): Promise<void> {
+  private async work({ projectId, analyst, manager }: Place, captures: Recording[]): Promise<void> {
     const verdictIds = new Map<string, string>();
     for (const { file, channels, latestAnalysisId: analysisId } of captures) {
       const current = channels.find(({ quantity }) => quantity === 'current');
@@ -103,7 +118,8 @@ export class DemoJudgements {
       ...words,
       verdictIds: ids,
       deviations: '',
-      recipients: [],
+      recipients: [...work.recipients],
     });
+    await this.invitations.invite(manager, projectId, work.invited);
   }
 }

@@ -13,6 +13,9 @@ export function serveWeb(app: NestExpressApplication, webDist: string): void {
   app.use(pageForAddresses(join(webDist, 'index.html')));
 }
 
+/** Pages that links with a secret lead to; where they lead on to is not told of them. */
+const SECRET_PAGES = new Set(['/invitation', '/reset-password']);
+
 /** Addresses of the application's pages all get its one page; what looks like a file stays missing. */
 function pageForAddresses(indexHtml: string): RequestHandler {
   return (request, response, next) => {
@@ -20,6 +23,7 @@ function pageForAddresses(indexHtml: string): RequestHandler {
     const isApi = request.path === '/api' || request.path.startsWith('/api/');
     const isFile = request.path.startsWith('/assets/');
     if (!isRead || isApi || isFile || !request.accepts('html')) return next();
+    if (SECRET_PAGES.has(request.path)) response.setHeader('Referrer-Policy', 'no-referrer');
     response.sendFile(indexHtml, { headers: { 'Cache-Control': 'no-cache' }, cacheControl: false }, next);
   };
 }

@@ -12,5 +12,6 @@ import { InvitationsService } from './invitations.service.js';
   imports: [AuthModule, MailsModule, ProjectsModule, UsersModule],
   controllers: [InvitationsController],
   providers: [InvitationsService, AcceptingService, InvitationsRepository],
+  exports: [InvitationsService],
 })
 export class InvitationsModule {}

@@ -5,9 +5,11 @@ import { useNavigate, useParams } from 'react-router-dom';
 import { ErrorState } from '../../../components/error-state.js';
 import { LoadingState } from '../../../components/loading-state.js';
 import { PageHeader } from '../../../components/page-header.js';
+import { useAccount } from '../../../features/account/hooks/use-account.js';
 import { useProject } from '../../../features/projects/hooks/use-project.js';
 import { reportQuery } from '../../../features/reports/api/get-report.js';
 import { ReportActions } from '../../../features/reports/components/report-actions.js';
+import { ReportDeliveries } from '../../../features/reports/components/report-deliveries.js';
 import { ReportForm } from '../../../features/reports/components/report-form.js';
 import { ReportSheet } from '../../../features/reports/components/report-sheet.js';
 import { useReportChanges } from '../../../features/reports/hooks/use-report-changes.js';
@@ -28,6 +30,7 @@ export function Component() {
 }
 
 function ReportPage({ report }: { report: Report }) {
+  const account = useAccount();
   const project = useProject(useProjectId());
   const navigate = useNavigate();
   const [editing, setEditing] = useState(false);
@@ -55,7 +58,10 @@ function ReportPage({ report }: { report: Report }) {
       {isEditing ? (
         <EditDraft report={report} onDone={() => setEditing(false)} />
       ) : (
-        <ReportSheet report={report} />
+        <>
+          <ReportSheet report={report} />
+          <ReportDeliveries report={report} role={project.role} isAdministrator={account.isAdministrator} />
+        </>
       )}
     </>
   );
