@@ -37,6 +37,7 @@ export { fitHarmonics, type FittedHarmonic, type HarmonicFit } from './harmonics
 export { zeroCrossingPhase } from './harmonics/zero-crossing-phase.js';
 export { synthesise, type SynthesisComponent } from './harmonics/synthesise.js';
 export { crestFactor } from './figures/crest-factor.js';
+export { currentShape, type CurrentShapeAngles, type CurrentShapeInput } from './figures/current-shape.js';
 export { formFactor } from './figures/form-factor.js';
 export { thdF, thdR } from './figures/distortion.js';
 export { listPeaks, type PeakList, type PeakListOptions } from './peaks/list-peaks.js';

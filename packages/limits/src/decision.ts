@@ -6,7 +6,8 @@ export type Judgement = (typeof severity)[number];
 
 /** A value exactly at its limit passes; this covers the rounding of binary arithmetic. */
 const roundingTolerance = 1e-9;
-const within = (value: number, limit: number): boolean => value <= limit * (1 + roundingTolerance);
+/** Whether a value is at most its limit. */
+export const within = (value: number, limit: number): boolean => value <= limit * (1 + roundingTolerance);
 
 export interface Decision {
   rule: DecisionRule;

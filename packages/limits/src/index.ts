@@ -14,7 +14,16 @@ export {
 } from './resolve.js';
 export { findPublishedLimitSet, publishedLimitSets } from './sets/index.js';
 export { sharesOfSummary } from './shares.js';
-export { combineRepeats, type CombinedRepeats, type RepeatedOrder } from './repeats.js';
+export { ordersAbove150 } from './excursions.js';
+export { combineRepeats, repeatabilityLimitPercent, type CombinedRepeats } from './repeats.js';
 export { cloneLimitSet } from './custom/clone-limit-set.js';
-export { parseLimitTable, type LimitTable, type TableProblem } from './custom/parse-limit-table.js';
+export { commonReading, readByOwn, readingOf } from './custom/common-reading.js';
+export { limitTableRows, limitTableText, type LimitTableRow } from './custom/limit-table-text.js';
+export {
+  limitTableLines,
+  parseLimitRows,
+  parseLimitTable,
+  type LimitTable,
+  type TableProblem,
+} from './custom/parse-limit-table.js';
 export { checkTestSupply, type NominalSupply, type SupplyCheck } from './test-supply.js';

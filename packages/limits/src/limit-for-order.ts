@@ -20,6 +20,8 @@ const parameterUnits: Readonly<Record<ParameterName, string>> = {
   nominalV: 'V',
 };
 
+export const parameterNames = Object.keys(parameterUnits) as ParameterName[];
+
 /** Unit that a limit of the set has once it is an amount: that of the set, of its reference, or A. */
 export function limitUnit(set: LimitSet): string | null {
   if (set.basis === 'absolute') return set.unit;
@@ -49,7 +51,10 @@ export function limitScale(set: LimitSet, context: LimitContext): number | null 
 }
 
 /** The set as one of its entries reads it: an entry may be in a unit or of a basis of its own. */
-export const readBy = (set: LimitSet, entry: LimitEntry): LimitSet => ({
+export const readBy = <Set extends Pick<LimitSet, 'basis' | 'unit' | 'referenceParameter'>>(
+  set: Set,
+  entry: LimitEntry,
+): Set => ({
   ...set,
   basis: entry.basis ?? set.basis,
   unit: entry.unit ?? set.unit,

@@ -23,7 +23,7 @@ export interface Measurement {
     /** Expanded uncertainty (k = 2) of the mean, in the channel's unit; absent or null when not known. */
     uncertainty?: number | null;
     /** Smoothed values in equal steps over the observation, for the time above 150 % of a limit. */
-    smoothed?: readonly number[];
+    smoothed?: readonly number[] | Float64Array;
     /** Share of the observation, 0 to 1, with smoothed values above 150 % of the limit, where it is known. */
     timeAbove150Share?: number;
   }[];

@@ -1,5 +1,5 @@
 import type { LimitSet, OrderVerdict, VerdictParameters } from '@overtally/contracts';
-import { expandedUncertainty, withMeasured, type Decision } from './decision.js';
+import { expandedUncertainty, within, withMeasured, type Decision } from './decision.js';
 import { amountOf } from './limit-for-order.js';
 import type { Measurement } from './measurement.js';
 
@@ -33,7 +33,7 @@ const guardGap = 'The decision rule needs the expanded uncertainty of this order
 function timeAbove150({ timeAbove150Share, smoothed }: MeasuredOrder, limit: number | null): number | null {
   if (timeAbove150Share !== undefined) return timeAbove150Share;
   if (limit === null || smoothed === undefined || smoothed.length === 0) return null;
-  return smoothed.filter((value) => value > 1.5 * limit).length / smoothed.length;
+  return smoothed.filter((value) => !within(value, 1.5 * limit)).length / smoothed.length;
 }
 
 /**

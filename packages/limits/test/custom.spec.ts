@@ -2,9 +2,11 @@ import { createLimitSetSchema, type LimitSet } from '@overtally/contracts';
 import { describe, expect, it } from 'vitest';
 import { parseExpression } from '../src/custom/arithmetic.js';
 import { cloneLimitSet } from '../src/custom/clone-limit-set.js';
-import { parseLimitTable } from '../src/custom/parse-limit-table.js';
+import { commonReading, readByOwn, readingOf } from '../src/custom/common-reading.js';
+import { limitTableRows, limitTableText } from '../src/custom/limit-table-text.js';
+import { parseLimitRows, parseLimitTable } from '../src/custom/parse-limit-table.js';
 import { limitForOrder } from '../src/limit-for-order.js';
-import { neededParameters } from '../src/resolve.js';
+import { limitRows, neededParameters } from '../src/resolve.js';
 import { publishedLimitSets } from '../src/sets/index.js';
 import { classA, classD, judge, measured, orderOf, setOf } from './measured.js';
 
@@ -112,6 +114,71 @@ describe('a table of limits as text', () => {
     const table = parseLimitTable('3;1;A\n5;x;A\n7;y;A');
     expect(table.problems?.map(({ line }) => line)).toEqual([2, 3]);
     expect(table.orders).toBeNull();
+  });
+});
+
+// RFC 4180 for the form of the text; what is read back must be what was written.
+describe('a table written out', () => {
+  const tables = publishedLimitSets.flatMap((set) => {
+    const rows = limitRows(set);
+    return rows.length === 0 ? [set] : rows.map((row) => row.set);
+  });
+
+  it('of every published set reads back to the same orders, formulas, caps and totals', () => {
+    expect(tables.length).toBeGreaterThan(publishedLimitSets.length);
+    for (const set of tables) {
+      const { orders, totals } = readByOwn(good(limitTableText(set)), readingOf(set));
+      // Where the formula is a sentence ("25 % of …"), the number is written in its place.
+      const kept = set.orders.map(({ formula, ...entry }) =>
+        formula === undefined || formula.includes(' of ') ? entry : { ...entry, formula },
+      );
+      expect({ orders, totals }, set.title).toEqual({ orders: kept, totals: set.totals });
+    }
+  });
+
+  it('names its set, edition and source, and puts equal limits into ranges', () => {
+    const lines = limitTableText(classA).split('\r\n');
+    expect(lines[0]).toBe('# IEC 61000-3-2, class A, version 1');
+    expect(lines.filter((line) => line.startsWith('# Source: ')).length).toBe(classA.source.length);
+    expect(lines.slice(-8)).toEqual([
+      ...['6,0.3,A,', '7,0.77,A,', '8-40 even,0.23*8/n,A,', '9,0.4,A,', '11,0.33,A,', '13,0.21,A,'],
+      ...['15-39 odd,0.15*15/n,A,', ''],
+    ]);
+  });
+
+  it('keeps units of single entries, and drops those that the set says', () => {
+    const text = '3;10;%\n5;4;% IL\n7;250;mA\n9;3;%\n11;2;%\nTHC;5;%';
+    const { orders, totals } = good(text);
+    const reading = commonReading(orders);
+    expect(reading).toEqual({ basis: 'percent-of-fundamental', unit: '%', referenceParameter: null });
+    const own = readByOwn({ orders, totals }, reading!);
+    expect(own.orders.map(({ basis }) => basis)).toEqual([
+      ...[undefined, 'percent-of-reference', 'absolute', undefined, undefined],
+    ]);
+    expect(own.totals).toEqual([{ name: 'THC', limit: 5, maxOrder: 40 }]);
+    const again = parseLimitRows(limitTableRows({ ...reading!, ...own }));
+    expect(readByOwn(again.problems === null ? again : own, reading!)).toMatchObject(own);
+  });
+
+  it('reads a power factor that multiplies a limit (edition 4 of class C: 30 times lambda)', () => {
+    expect(good('3;30*lambda;%').orders).toEqual([
+      {
+        ...{ order: 3, limit: 30, timesParameter: 'powerFactor', basis: 'percent-of-fundamental' },
+        formula: '30*lambda',
+      },
+    ]);
+  });
+
+  it('names row and cell of rows that were typed', () => {
+    const { problems } = parseLimitRows([
+      ['3', '2,30', 'A', ''],
+      ['x', '1', '', ''],
+      ['5', '', '', ''],
+    ]);
+    expect(problems).toMatchObject([
+      { line: 2, cell: 0, message: expect.stringMatching(/not an order; give 3/) },
+      { line: 3, cell: 1, message: expect.stringMatching(/missing: give a number/) },
+    ]);
   });
 });
 

@@ -24,12 +24,15 @@ function parts(line: string, separator: string): { raw: string; at: number }[] {
   return found;
 }
 
+/** A text with points in place of commas between digits. */
+export const decimalPoints = (text: string): string => text.replace(/(\d),(\d)/g, '$1.$2');
+
 function cellOf({ raw, at }: { raw: string; at: number }, decimalComma: boolean): Cell {
   const leading = raw.length - raw.trimStart().length;
   const trimmed = raw.trim();
   const isQuoted = trimmed.length > 1 && trimmed.startsWith('"') && trimmed.endsWith('"');
   const bare = isQuoted ? trimmed.slice(1, -1).replace(/""/g, '"').trim() : trimmed;
-  const text = decimalComma || isQuoted ? bare.replace(/(\d),(\d)/g, '$1.$2') : bare;
+  const text = decimalComma || isQuoted ? decimalPoints(bare) : bare;
   return { text, column: at + leading + (isQuoted ? 2 : 1) };
 }
 
