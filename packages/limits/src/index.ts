@@ -27,3 +27,4 @@ export {
   type TableProblem,
 } from './custom/parse-limit-table.js';
 export { checkTestSupply, type NominalSupply, type SupplyCheck } from './test-supply.js';
+export { supplyVerdict, type StatedSupply } from './supply-verdict.js';

@@ -40,8 +40,15 @@ export class AnalysesService {
 
   /** An analysis with all its figures. */
   async get(id: string): Promise<Analysis> {
+    const analysis = await this.find(id);
+    if (analysis === undefined) throw noSuchAnalysis();
+    return analysis;
+  }
+
+  /** Undefined where there is none, or no more. */
+  async find(id: string): Promise<Analysis | undefined> {
     const row = await this.repository.find(id);
-    if (row === undefined) throw noSuchAnalysis();
+    if (row === undefined) return undefined;
     // After the state: an analysis that is done has its figures, whereas those read before may lack them.
     const [channels, harmonics] = await Promise.all([
       this.repository.channelsOf(id),

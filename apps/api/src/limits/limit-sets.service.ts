@@ -1,13 +1,26 @@
 import { Inject, Injectable } from '@nestjs/common';
-import { holds, type CreateLimitSet, type LimitBasis, type LimitSet } from '@overtally/contracts';
+import {
+  holds,
+  type CloneLimitSet,
+  type CreateLimitSet,
+  type LimitSet,
+  type UpdateLimitSet,
+} from '@overtally/contracts';
 import type { Database } from '@overtally/db';
-import { findPublishedLimitSet, neededParameters, publishedLimitSets } from '@overtally/limits';
+import {
+  cloneLimitSet,
+  findPublishedLimitSet,
+  limitRows,
+  limitTableText,
+  publishedLimitSets,
+} from '@overtally/limits';
 import { randomUUID } from 'node:crypto';
 import { z } from 'zod';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
-import { LimitSetsRepository, type LimitSetRow } from './limit-sets.repository.js';
+import { definitionFrom, toLimitSet } from './limit-set-view.js';
+import { isKeptByReport, LimitSetsRepository, type LimitSetRow } from './limit-sets.repository.js';
 
 const uuid = z.uuid();
 
@@ -24,7 +37,7 @@ export class LimitSetsService {
     private readonly repository: LimitSetsRepository,
   ) {}
 
-  /** Published sets and the custom ones a person may see, of one project or of all own ones. */
+  /** Published sets and the newest versions of the custom ones a person may see, of one project or of all own ones. */
   async list(user: SignedInUser, projectId: string | undefined): Promise<LimitSetPage> {
     if (projectId === undefined) return withPublished(await this.repository.ofMember(user.id));
     if (!(await this.mayRead(user, projectId))) throw problem(404, 'not-found', 'There is no such project');
@@ -40,10 +53,33 @@ export class LimitSetsService {
     const published = findPublishedLimitSet(id);
     if (published) return published;
     const row = await this.findCustom(id);
-    if (!row || !(await this.mayRead(user, row.projectId))) {
-      throw problem(404, 'not-found', 'There is no such limit set');
-    }
+    if (!row || !(await this.mayRead(user, row.projectId))) throw noSuchSet();
     return toLimitSet(row);
+  }
+
+  /** All versions of a custom set, the newest first. */
+  async versions(id: string): Promise<LimitSetPage> {
+    const { familyId } = await this.custom(id);
+    const rows = await this.repository.versions(familyId);
+    return { items: rows.map(toLimitSet), nextCursor: null };
+  }
+
+  /**
+   * The limits of a set as CSV.
+   * @param row which of the rows of a set that has them, from 0
+   * @throws 404 for a row that the set does not have
+   */
+  async table(user: SignedInUser, id: string, row: number): Promise<string> {
+    const set = await this.get(user, id);
+    const rows = limitRows(set);
+    if (rows.length === 0 && row === 0) return limitTableText(set);
+    const chosen = rows[row];
+    if (chosen) return limitTableText({ ...chosen.set, title: `${set.title}, ${chosen.label ?? ''}` });
+    throw problem(
+      404,
+      'no-such-row',
+      `The set has ${Math.max(1, rows.length)} tables, from 0; there is no ${row}`,
+    );
   }
 
   /** The set that a verdict in a project may use; undefined for an unknown one and for another project's. */
@@ -54,26 +90,89 @@ export class LimitSetsService {
     return row?.projectId === projectId ? toLimitSet(row) : undefined;
   }
 
+  /** @throws as `definitionFrom` */
   async create(user: SignedInUser, projectId: string, input: CreateLimitSet): Promise<LimitSet> {
-    if (input.basis === 'absolute' && input.unit === '') {
-      const message = 'Give the unit of the limits, such as A or V';
-      throw problem(422, 'unit-missing', message, [{ path: 'unit', message }]);
-    }
-    const id = randomUUID();
-    const row = await this.database.transaction((tx) =>
-      this.repository.insert(tx, {
-        id,
-        familyId: id,
-        projectId,
-        definition: definitionFrom(input, user.name),
-        createdById: user.id,
-      }),
-    );
-    return toLimitSet(row);
+    return this.insert({ projectId, definition: definitionFrom(input, user.name), createdById: user.id });
   }
 
+  /**
+   * A set of the project's own with the limits of another one, published or of the same project.
+   * @throws 422 where there is no set to copy
+   */
+  async clone(
+    user: SignedInUser,
+    projectId: string,
+    { limitSetId, title }: CloneLimitSet,
+  ): Promise<LimitSet> {
+    const original = await this.resolve(projectId, limitSetId);
+    if (!original) {
+      const message = `The project has no limit set ${limitSetId} to copy`;
+      throw problem(422, 'limit-set-unknown', message, [{ path: 'limitSetId', message }]);
+    }
+    return this.insert({
+      projectId,
+      clonedFrom: original.id,
+      definition: definitionFrom(cloneLimitSet(original, title), user.name, original),
+      createdById: user.id,
+    });
+  }
+
+  /**
+   * A new version of a custom set; the earlier ones stay as they are.
+   * @throws 409 for a version that is not the newest, and as `definitionFrom`
+   */
+  async addVersion(user: SignedInUser, id: string, input: CreateLimitSet): Promise<LimitSet> {
+    const newId = await this.database.transaction(async (tx) => {
+      const earlier = await this.repository.lockNewest(tx, id);
+      if (earlier === undefined) throw noSuchSet();
+      if (earlier.id !== id) {
+        const detail = `Version ${earlier.version} is the newest by now; make the new version from that`;
+        throw problem(409, 'limit-set-replaced', detail);
+      }
+      const made = await this.repository.insert(tx, {
+        ...{ projectId: earlier.projectId, familyId: earlier.familyId, version: earlier.version + 1 },
+        ...{ clonedFrom: earlier.clonedFrom, createdById: user.id },
+        definition: definitionFrom(input, user.name, earlier.definition),
+      });
+      await this.repository.compareWith(tx, id, made);
+      return made;
+    });
+    return toLimitSet(await this.custom(newId));
+  }
+
+  /** Retires a set with all its versions, or brings it back. */
+  async update(id: string, { retired }: UpdateLimitSet): Promise<LimitSet> {
+    const { familyId } = await this.custom(id);
+    await this.database.transaction((tx) => this.repository.retire(tx, familyId, retired));
+    return toLimitSet(await this.custom(id));
+  }
+
+  /**
+   * Deletes one version of a set.
+   * @throws 409 for one that an issued report refers to
+   */
   async delete(id: string): Promise<void> {
-    await this.database.transaction((tx) => this.repository.delete(tx, id));
+    try {
+      await this.database.transaction((tx) => this.repository.delete(tx, id));
+    } catch (error) {
+      if (!isKeptByReport(error)) throw error;
+      const detail = 'An issued report refers to this limit set, which therefore stays; retire it instead';
+      throw problem(409, 'in-issued-report', detail);
+    }
+  }
+
+  private async insert(
+    row: Omit<Parameters<LimitSetsRepository['insert']>[1], 'familyId'>,
+  ): Promise<LimitSet> {
+    const id = randomUUID();
+    await this.database.transaction((tx) => this.repository.insert(tx, { ...row, id, familyId: id }));
+    return toLimitSet(await this.custom(id));
+  }
+
+  private async custom(id: string): Promise<LimitSetRow> {
+    const row = await this.findCustom(id);
+    if (!row) throw noSuchSet();
+    return row;
   }
 
   private async findCustom(id: string): Promise<LimitSetRow | undefined> {
@@ -86,40 +185,9 @@ export class LimitSetsService {
   }
 }
 
-const toLimitSet = ({ id, projectId, definition }: LimitSetRow): LimitSet => ({
-  id,
-  projectId,
-  ...definition,
-});
+const noSuchSet = () => problem(404, 'not-found', 'There is no such limit set');
 
 const withPublished = (rows: LimitSetRow[]): LimitSetPage => ({
   items: [...publishedLimitSets, ...rows.map(toLimitSet)],
   nextCursor: null,
 });
-
-const unitOfBasis: Readonly<Record<LimitBasis, string | null>> = {
-  absolute: null,
-  'percent-of-fundamental': '%',
-  'percent-of-reference': '%',
-  'milliampere-per-watt': 'mA/W',
-};
-
-/** A custom set is compared plainly, order by order, unless it says otherwise; TDD needs the demand current. */
-function definitionFrom(input: CreateLimitSet, author: string): LimitSetRow['definition'] {
-  const { source, orders, unit, referenceParameter = null, procedure = 'plain', ...rest } = input;
-  const definition: LimitSetRow['definition'] = {
-    ...rest,
-    unit: unitOfBasis[input.basis] ?? unit,
-    version: 1,
-    tableRef: '',
-    referenceParameter,
-    procedure,
-    parameters: [],
-    orders: [...orders].sort((one, other) => one.order - other.order),
-    source: [source],
-    confidence: 'medium',
-    evidence: `Entered in the project by ${author}; to be checked against its source`,
-    notes: [],
-  };
-  return { ...definition, parameters: neededParameters(definition) };
-}

@@ -22,8 +22,14 @@ export class VerdictsController {
   @Post('analyses/:id/verdicts')
   @RequirePermission('verdict.create', { resource: 'analysis' })
   @ZodResponse({ status: 201, type: VerdictDto })
-  @ApiProblem(409, 'The analysis is not done, or the recording was read or scaled anew since')
-  @ApiProblem(422, 'The analysis has no such channel, or the project no such limit set')
+  @ApiProblem(
+    409,
+    'The analysis is not done, the recording was read or scaled anew since, or the set is retired',
+  )
+  @ApiProblem(
+    422,
+    'The analysis has no such channel, the project no such limit set, or repeats do not go together',
+  )
   create(
     @CurrentUser() user: SignedInUser,
     @Param('id') analysisId: string,

@@ -1,10 +1,11 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { Verdict } from '@overtally/contracts';
+import type { TestConditions, Verdict } from '@overtally/contracts';
 import { schema, type Database, type Tx } from '@overtally/db';
-import { and, desc, eq, getTableColumns, inArray, isNotNull, sql, type SQL } from 'drizzle-orm';
+import { and, desc, eq, getTableColumns, inArray, isNotNull, ne, sql, type SQL } from 'drizzle-orm';
 import { DATABASE } from '../database/database.tokens.js';
+import { recordingNumber } from '../recordings/recording-number.js';
 
-const { analyses, analysisChannels, recordings, users, verdicts } = schema;
+const { analyses, analysisChannels, recordings, users, verdictRepeats, verdicts } = schema;
 
 export type VerdictRow = Awaited<ReturnType<VerdictsRepository['find']>> & object;
 
@@ -13,6 +14,8 @@ export interface VerdictFilter {
   projectId?: string;
   recordingId?: string;
 }
+
+type RepeatRecord = Omit<Verdict['repeats'][number], 'recordingNumber'> & { number: number };
 
 /** Verdicts with what their analysis, channel and author add to them. */
 @Injectable()
@@ -29,14 +32,24 @@ export class VerdictsRepository {
     return this.select(and(inArray(verdicts.id, [...ids]), eq(recordings.projectId, projectId)));
   }
 
-  /** Those of the ids whose recording was read or scaled anew since, with its number. */
+  /** Those of the ids of which a recording was read or scaled anew since, with its number. */
   async outdated(tx: Database | Tx, ids: readonly string[]) {
-    return tx
-      .select({ id: verdicts.id, number: recordings.number })
+    const selected = { id: verdicts.id, number: recordings.number };
+    const are = and(inArray(verdicts.id, [...ids]), isNotNull(analyses.supersededById));
+    const own = await tx
+      .select(selected)
       .from(verdicts)
       .innerJoin(analyses, eq(analyses.id, verdicts.analysisId))
       .innerJoin(recordings, eq(recordings.id, analyses.recordingId))
-      .where(and(inArray(verdicts.id, [...ids]), isNotNull(analyses.supersededById)));
+      .where(are);
+    const repeated = await tx
+      .selectDistinct(selected)
+      .from(verdicts)
+      .innerJoin(verdictRepeats, eq(verdictRepeats.verdictId, verdicts.id))
+      .innerJoin(analyses, eq(analyses.id, verdictRepeats.analysisId))
+      .innerJoin(recordings, eq(recordings.id, analyses.recordingId))
+      .where(and(are, ne(analyses.id, verdicts.analysisId)));
+    return [...own, ...repeated];
   }
 
   /** The newest first, from behind `after`. */
@@ -53,12 +66,39 @@ export class VerdictsRepository {
       .limit(limit);
   }
 
-  async insert(tx: Tx, row: typeof verdicts.$inferInsert): Promise<string> {
+  /** The conditions that the recording was made under, as far as they were stated. */
+  async conditionsOf(recordingId: string): Promise<TestConditions> {
+    const [row] = await this.database
+      .select({ conditions: recordings.conditions })
+      .from(recordings)
+      .where(eq(recordings.id, recordingId));
+    return row?.conditions ?? {};
+  }
+
+  /** Writes a verdict with its repeats in their order. */
+  async insert(
+    tx: Tx,
+    row: typeof verdicts.$inferInsert,
+    repeats: Omit<typeof verdictRepeats.$inferInsert, 'verdictId' | 'position'>[],
+  ): Promise<string> {
     const [made] = await tx.insert(verdicts).values(row).returning({ id: verdicts.id });
-    return made!.id;
+    const verdictId = made!.id;
+    if (repeats.length > 0) {
+      const rows = repeats.map((repeat, position) => ({ ...repeat, verdictId, position }));
+      await tx.insert(verdictRepeats).values(rows);
+    }
+    return verdictId;
   }
 
   private select(where: SQL | undefined) {
+    const repeats = sql<RepeatRecord[]>`(
+      select coalesce(json_agg(json_build_object(
+        'analysisId', r.analysis_id, 'recordingId', of_repeat.id, 'number', of_repeat.number,
+        'channel', r.channel_index, 'result', r.result, 'reason', r.reason) order by r.position), '[]')
+      from verdict_repeats r
+      join analyses a on a.id = r.analysis_id
+      join recordings of_repeat on of_repeat.id = a.recording_id
+      where r.verdict_id = ${verdicts.id})`;
     return this.database
       .select({
         ...getTableColumns(verdicts),
@@ -66,6 +106,7 @@ export class VerdictsRepository {
         channelName: analysisChannels.name,
         unit: analysisChannels.unit,
         authorName: users.name,
+        repeats,
       })
       .from(verdicts)
       .innerJoin(analyses, eq(analyses.id, verdicts.analysisId))
@@ -102,7 +143,10 @@ export function toVerdict(row: VerdictRow): Verdict {
     orders: row.orders,
     totals: row.totals,
     supply: row.supply,
-    repeats: [],
+    repeats: row.repeats.map(({ number, ...repeat }) => ({
+      ...repeat,
+      recordingNumber: recordingNumber(number),
+    })),
     repeatability: row.repeatability,
     author: { id: row.authorId, name: row.authorName },
     createdAt: row.createdAt.toISOString(),

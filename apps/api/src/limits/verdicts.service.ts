@@ -1,16 +1,23 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { ChannelAnalysis, CreateVerdict, LimitSet, Verdict } from '@overtally/contracts';
+import type { CreateVerdict, LimitSet, SupplyVerdict, Verdict } from '@overtally/contracts';
 import type { Database, Tx } from '@overtally/db';
-import { evaluate, measurementOfChannel } from '@overtally/limits';
+import {
+  combineRepeats,
+  evaluate,
+  supplyVerdict,
+  type Evaluation,
+  type StatedSupply,
+} from '@overtally/limits';
 import { z } from 'zod';
-import { AnalysesService } from '../analyses/analyses.service.js';
 import { decodeCursor, pageOfRows } from '../common/paging.js';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { recordingNumber } from '../recordings/recording-number.js';
-import { LimitSetsService } from './limit-sets.service.js';
+import { MeasurementsService } from './measurements.service.js';
+import { VerdictSubjectsService, type Subject } from './verdict-subjects.service.js';
 import { toVerdict, VerdictsRepository, type VerdictFilter } from './verdicts.repository.js';
+import { voltageBeside } from './voltage-beside.js';
 
 const cure = 'judge its newest analysis';
 const placeSchema = z.tuple([z.iso.datetime(), z.uuid()]);
@@ -26,25 +33,38 @@ export class VerdictsService {
   constructor(
     @Inject(DATABASE) private readonly database: Database,
     private readonly repository: VerdictsRepository,
-    private readonly limitSets: LimitSetsService,
-    private readonly analyses: AnalysesService,
+    private readonly subjects: VerdictSubjectsService,
+    private readonly measurements: MeasurementsService,
   ) {}
 
+  /**
+   * Judges a channel, and its repeats where any are named: each by itself, then together.
+   * @throws as `VerdictSubjectsService.find`
+   */
   async create(user: SignedInUser, analysisId: string, input: CreateVerdict): Promise<Verdict> {
-    const { channel, limitSet } = await this.subject(analysisId, input);
     const { parameters, decisionRule } = input;
-    const evaluation = evaluate(limitSet, measurementOfChannel(channel), { parameters, decisionRule });
+    const { limitSet: found, subjects } = await this.subjects.find(analysisId, input);
+    // What becomes of a set later does not belong into the copy of it.
+    const { newestId: _newestId, retiredAt: _retiredAt, ...limitSet } = found;
+    const judged: Judged[] = [];
+    for (const subject of subjects) judged.push(await this.judge(subject, limitSet, input));
+    const [first] = judged as [Judged, ...Judged[]];
+    const { decisionRuleText } = first.evaluation;
+    const isRepeated = judged.length > 1;
+    const combined = isRepeated
+      ? combineRepeats(judged.map(({ evaluation }) => evaluation))
+      : { ...first.evaluation, repeatability: null };
     const id = await this.database.transaction((tx) =>
-      this.repository.insert(tx, {
-        analysisId,
-        channelIndex: channel.index,
-        limitSetId: limitSet.id,
-        limitSet,
-        parameters,
-        decisionRule,
-        authorId: user.id,
-        ...evaluation,
-      }),
+      this.repository.insert(
+        tx,
+        {
+          ...{ analysisId, channelIndex: input.channel, limitSetId: limitSet.id, limitSet },
+          ...{ parameters, decisionRule, decisionRuleText, authorId: user.id },
+          ...combined,
+          supply: worstSupply(judged),
+        },
+        isRepeated ? judged.map(toRepeat) : [],
+      ),
     );
     return this.get(id);
   }
@@ -71,7 +91,7 @@ export class VerdictsService {
   }
 
   /**
-   * Refuses verdicts on samples that were read or scaled anew since. One on an earlier analysis of the same
+   * Refuses verdicts on samples, of a repeat too, that were read or scaled anew since. One on an earlier analysis of the same
    * samples, under other settings, stands.
    * @throws 409 naming the place of each outdated verdict among the ids
    */
@@ -97,25 +117,54 @@ export class VerdictsService {
     }));
   }
 
-  private async subject(
-    analysisId: string,
-    { channel: index, limitSetId }: CreateVerdict,
-  ): Promise<{ channel: ChannelAnalysis; limitSet: LimitSet }> {
-    const analysis = await this.analyses.get(analysisId);
-    if (analysis.status !== 'done') {
-      const detail = `The analysis is ${analysis.status}; a verdict needs one that is done`;
-      throw problem(409, 'analysis-not-done', detail);
-    }
-    if (analysis.supersededById !== null) {
-      const detail = `The recording was read or scaled anew since this analysis; ${cure}`;
-      throw problem(409, 'analysis-superseded', detail);
-    }
-    const limitSet = await this.limitSets.resolve(analysis.projectId, limitSetId);
-    const channel = analysis.channels.find((each) => each.index === index);
-    if (limitSet && channel) return { channel, limitSet };
-    throw problem(422, 'verdict-subject-unknown', 'The verdict cannot be made; see errors', [
-      ...(channel ? [] : [{ path: 'channel', message: `The analysis has no channel ${index}` }]),
-      ...(limitSet ? [] : [{ path: 'limitSetId', message: `The project has no limit set ${limitSetId}` }]),
-    ]);
+  private async judge(
+    { analysis, channel }: Subject,
+    limitSet: LimitSet,
+    { parameters, decisionRule }: CreateVerdict,
+  ): Promise<Judged> {
+    const measurement = await this.measurements.of(analysis, channel, limitSet, parameters);
+    const voltage = channel.quantity === 'current' ? voltageBeside(analysis, channel.index) : undefined;
+    const stated = voltage && (await this.statedSupply(analysis, parameters));
+    return {
+      ...{ analysisId: analysis.id, channelIndex: channel.index },
+      evaluation: evaluate(limitSet, measurement, { parameters, decisionRule }),
+      supply: voltage && stated ? supplyVerdict(limitSet, voltage, stated) : null,
+    };
   }
+
+  /** Nominal values of the supply: of the verdict's parameters, of the test conditions, of the analysis' settings. */
+  private async statedSupply(
+    { recordingId, settings }: Subject['analysis'],
+    { nominalV }: CreateVerdict['parameters'],
+  ): Promise<StatedSupply> {
+    const { supplyVoltageV, supplyFrequencyHz } = await this.repository.conditionsOf(recordingId);
+    const { nominalFrequencyHz } = settings;
+    const ofSettings = nominalFrequencyHz === 'auto' ? undefined : nominalFrequencyHz;
+    return { nominalV: nominalV ?? supplyVoltageV, frequencyHz: supplyFrequencyHz ?? ofSettings };
+  }
+}
+
+interface Judged {
+  analysisId: string;
+  channelIndex: number;
+  evaluation: Evaluation;
+  supply: SupplyVerdict | null;
+}
+
+const toRepeat = ({ analysisId, channelIndex, evaluation: { result, reason } }: Judged) => ({
+  ...{ analysisId, channelIndex },
+  ...{ result, reason },
+});
+
+const supplyResults = ['pass', 'not-decidable', 'fail'] as const;
+
+/** The supply of the repeat that keeps worst to its demands, the first of equals, saying which that is. */
+function worstSupply(judged: readonly Judged[]): SupplyVerdict | null {
+  const rank = ({ result }: SupplyVerdict) => supplyResults.indexOf(result);
+  const known = judged.flatMap(({ supply }, index) => (supply ? [{ supply, repeat: index + 1 }] : []));
+  const [first, ...rest] = known;
+  if (first === undefined) return null;
+  const worst = rest.reduce((held, next) => (rank(next.supply) > rank(held.supply) ? next : held), first);
+  const { supply, repeat } = worst;
+  return judged.length === 1 ? supply : { ...supply, summary: `Repeat ${repeat}: ${supply.summary}` };
 }

@@ -1,9 +1,11 @@
 import { Inject, Injectable } from '@nestjs/common';
 import { schema, type Database, type Tx } from '@overtally/db';
-import { and, eq, inArray, isNull, or, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNull, ne, or, sql } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/pg-core';
 import { DATABASE } from '../database/database.tokens.js';
 
-const { analyses, channels, projects, recordings, reportVerdicts, reports, verdicts } = schema;
+const { analyses, channels, projects, recordings, reportVerdicts, reports, verdictRepeats, verdicts } =
+  schema;
 
 export type RecordingRow = typeof recordings.$inferSelect;
 export type ChannelRow = typeof channels.$inferSelect;
@@ -89,6 +91,21 @@ export class RecordingsRepository {
       .innerJoin(analyses, eq(analyses.id, verdicts.analysisId))
       .where(and(eq(analyses.recordingId, recordingId), inArray(reports.status, ['draft', 'in-review'])));
     return rows.map(({ title }) => title);
+  }
+
+  /** Numbers of other recordings with a verdict that this recording is a repeat of. */
+  async repeatedBy(tx: Tx, recordingId: string): Promise<number[]> {
+    const ofRepeat = alias(analyses, 'of_repeat');
+    const rows = await tx
+      .selectDistinct({ number: recordings.number })
+      .from(verdictRepeats)
+      .innerJoin(ofRepeat, eq(ofRepeat.id, verdictRepeats.analysisId))
+      .innerJoin(verdicts, eq(verdicts.id, verdictRepeats.verdictId))
+      .innerJoin(analyses, eq(analyses.id, verdicts.analysisId))
+      .innerJoin(recordings, eq(recordings.id, analyses.recordingId))
+      .where(and(eq(ofRepeat.recordingId, recordingId), ne(recordings.id, recordingId)))
+      .orderBy(asc(recordings.number));
+    return rows.map(({ number }) => number);
   }
 
   /** Keeps uploads and deletions of the same source apart until the transaction ends. */

@@ -23,6 +23,7 @@ import { AnalysisRunsService } from './analysis-runs.service.js';
 import type { UploadFields } from './dto/upload.dto.js';
 import { columnBytes, PreviewsService } from './previewing/previews.service.js';
 import { recordingPrefix, sourceKey } from './recording-keys.js';
+import { recordingNumber } from './recording-number.js';
 import { RecordingViewsRepository } from './recording-views.repository.js';
 import { UploadLimitsService } from './uploading/upload-limits.service.js';
 import { RecordingsRepository, type RecordingRow } from './recordings.repository.js';
@@ -191,6 +192,12 @@ export class RecordingsService {
       if (titles.length > 0) {
         const named = titles.map((title) => `“${title}”`).join(', ');
         throw problem(409, 'in-report', `A verdict on this recording stands in ${named}; take it out first`);
+      }
+      const repeatedBy = await this.repository.repeatedBy(tx, id);
+      if (repeatedBy.length > 0) {
+        const named = repeatedBy.map(recordingNumber).join(', ');
+        const detail = `This recording is one of the repeats that a verdict on ${named} is made of; the verdict goes with ${named} when that is deleted`;
+        throw problem(409, 'in-verdict', detail);
       }
       await this.repository.delete(tx, id);
       return row;

@@ -40,6 +40,21 @@ export class WaveformService {
     };
   }
 
+  /**
+   * Samples `first` up to but not including `end` of a channel in its unit, NaN where none is stored; held to the record.
+   * @throws as `part`
+   */
+  async samples(recordingId: string, index: number, first: number, end: number): Promise<Float64Array> {
+    const { channel, sampleCount } = await this.channel(recordingId, index);
+    const samples = await readNpy(
+      this.storage,
+      channel.samplesKey,
+      Math.max(0, first),
+      Math.min(sampleCount, end),
+    );
+    return samples.map((value) => value * channel.gain + channel.offset);
+  }
+
   /** The whole channel in its unit as an .npy file, with its size in bytes. */
   async asNpy(recordingId: string, index: number): Promise<{ stream: Readable; size: number }> {
     const { channel } = await this.channel(recordingId, index);

@@ -37,6 +37,7 @@ export function currentShape(input: CurrentShapeInput): CurrentShapeAngles | nul
   const { voltage, sampleRateHz, frequencyHz } = input;
   const cycle = sampleRateHz / frequencyHz;
   if (cycle / 2 < LEAST_PER_HALF_CYCLE || voltage.length < 2 * cycle) return null;
+  if (input.current.some(Number.isNaN)) return null;
   const [fundamental] = fitSinusoids(voltage, sampleRateHz, [frequencyHz]).components;
   if (fundamental === undefined || !(fundamental.rms > 0)) return null;
   const { values, first } = withoutHighContent(input.current, sampleRateHz);

@@ -45,6 +45,21 @@ export class SeriesService {
     };
   }
 
+  /**
+   * The harmonic group of one order from window to window (IEC 61000-4-7, 5.5.1), rms in the channel's unit; null where
+   * it was not followed.
+   */
+  async groups(
+    id: string,
+    index: number,
+    order: number,
+  ): Promise<{ values: Float64Array; intervalS: number } | null> {
+    const { series: shape, seriesKey: key } = await this.analyses.channel(id, index);
+    if (shape === null || key === null || order < 1 || order > shape.orders) return null;
+    const values = await readRow(this.storage, { key, shape }, 'group', order - 1);
+    return { values, intervalS: shape.intervalS };
+  }
+
   /** A figure with all its orders over time as CSV; errors as for `figure`. */
   async table(id: string, { channel: index, figure, aggregation }: SeriesTableQuery): Promise<Readable> {
     const channel = await this.analyses.channel(id, index);
