@@ -84,10 +84,12 @@ describe('limit sets', () => {
   });
 
   it('keeps entries of several kinds and derives what a verdict must be given', async () => {
-    const table = parseLimitTable('3;3.4;mA/W;2.3\n15-39 odd: 0.15*15/n;A\n5;4;% IL');
+    const table = parseLimitTable('3;3.4;mA/W;2.3\n15-39 odd: 0.15*15/n;A\n5;4;% IL\n7;250;mA');
     const set = await createAsAnalyst({ orders: table.orders });
-    expect(set.orders.map(({ order }) => order).slice(0, 3)).toEqual([3, 5, 15]);
-    expect(set.orders[2]).toMatchObject({ limit: 0.15, unit: 'A', formula: '0.15*15/n' });
+    expect(set.orders.map(({ order }) => order).slice(0, 3)).toEqual([3, 5, 7]);
+    // What the set says of itself is not said again.
+    expect(set.orders[3]).toEqual({ order: 15, limit: 0.15, formula: '0.15*15/n' });
+    expect(set.orders[2]).toEqual({ order: 7, limit: 250, basis: 'absolute', unit: 'mA' });
     expect([...set.parameters].sort()).toEqual(['ilA', 'powerW']);
   });
 

@@ -17,6 +17,7 @@ export { sharesOfSummary } from './shares.js';
 export { ordersAbove150 } from './excursions.js';
 export { combineRepeats, repeatabilityLimitPercent, type CombinedRepeats } from './repeats.js';
 export { cloneLimitSet } from './custom/clone-limit-set.js';
+export { unitCell } from './custom/unit-cell.js';
 export { commonReading, readByOwn, readingOf } from './custom/common-reading.js';
 export { limitTableRows, limitTableText, type LimitTableRow } from './custom/limit-table-text.js';
 export {

@@ -23,6 +23,8 @@ export const paths = {
   newLimitSet: (projectId: string) => `${project(projectId)}/limits/new`,
   limitSet: (projectId: string, limitSetId: string) =>
     `${project(projectId)}/limits/${encodeURIComponent(limitSetId)}`,
+  newLimitSetVersion: (projectId: string, limitSetId: string) =>
+    `${project(projectId)}/limits/${encodeURIComponent(limitSetId)}/new-version`,
   reports: (projectId: string) => `${project(projectId)}/reports`,
   newReport: (projectId: string, verdictIds: readonly string[] = []) =>
     `${project(projectId)}/reports/new${verdictIds.length > 0 ? `?verdicts=${verdictIds.join(',')}` : ''}`,

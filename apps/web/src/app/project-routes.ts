@@ -8,6 +8,10 @@ export const projectRoutes: RouteObject[] = [
   { path: 'limits', lazy: () => import('./routes/project/limits.js') },
   { path: 'limits/new', lazy: () => import('./routes/project/new-limit-set.js') },
   { path: 'limits/:limitSetId', lazy: () => import('./routes/project/limit-set.js') },
+  {
+    path: 'limits/:limitSetId/new-version',
+    lazy: () => import('./routes/project/new-limit-set-version.js'),
+  },
   { path: 'reports', lazy: () => import('./routes/project/reports.js') },
   { path: 'reports/new', lazy: () => import('./routes/project/new-report.js') },
   { path: 'reports/:reportId', lazy: () => import('./routes/project/report.js') },

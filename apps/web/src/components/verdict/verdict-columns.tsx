@@ -1,5 +1,5 @@
 import { Text } from '@chakra-ui/react';
-import type { OrderVerdict, TotalVerdict } from '@overtally/contracts';
+import type { OrderVerdict, RepeatOrder, TotalVerdict } from '@overtally/contracts';
 import { formatPercent, formatSi, none } from '../../lib/format.js';
 import type { TableColumn } from '../table-column.js';
 import { partWords, verdictTone } from './verdict-words.js';
@@ -25,8 +25,36 @@ function reasonColumn<Row extends { reason: string | null }>(rows: readonly Row[
   ];
 }
 
-/** Columns of a verdict order by order; amounts in `unit`. Uncertainties are shown where any is known. */
-export function orderColumns(orders: readonly OrderVerdict[], unit: string): TableColumn<OrderVerdict>[] {
+/** Spread of the repeats of each order; none for a verdict over one analysis. */
+function spreadColumns(spread: readonly RepeatOrder[]): TableColumn<OrderVerdict>[] {
+  if (spread.length === 0) return [];
+  const byOrder = new Map(spread.map((row) => [row.order, row]));
+  const column = (
+    key: 'repeatabilityPercent' | 'deviationPercent',
+    header: string,
+  ): TableColumn<OrderVerdict> => ({
+    key,
+    header,
+    fileHeader: `${header} (% of limit)`,
+    align: 'right',
+    value: ({ order }) => byOrder.get(order)?.[key] ?? null,
+    show: ({ order }) => formatPercent(byOrder.get(order)?.[key] ?? null),
+  });
+  return [
+    column('repeatabilityPercent', 'Spread s, of limit'),
+    column('deviationPercent', 'Furthest, of limit'),
+  ];
+}
+
+/**
+ * Columns of a verdict order by order; amounts in `unit`. Uncertainties are shown where any is known, and the spread of
+ * repeats where there are some.
+ */
+export function orderColumns(
+  orders: readonly OrderVerdict[],
+  unit: string,
+  spread: readonly RepeatOrder[] = [],
+): TableColumn<OrderVerdict>[] {
   const amount = (
     key: 'mean' | 'uncertainty' | 'smoothedMax' | 'limit' | 'margin',
     header: string,
@@ -55,6 +83,7 @@ export function orderColumns(orders: readonly OrderVerdict[], unit: string): Tab
       show: (row) => formatPercent(row.sharePercent),
       tone: shareTone,
     },
+    ...spreadColumns(spread),
     {
       key: 'result',
       header: 'Result',

@@ -1,5 +1,5 @@
 import { Box } from '@chakra-ui/react';
-import type { OrderVerdict, TotalVerdict } from '@overtally/contracts';
+import type { OrderVerdict, RepeatOrder, TotalVerdict } from '@overtally/contracts';
 import { useMemo } from 'react';
 import { TableTwin } from '../table-twin.js';
 import { orderColumns, totalColumns } from './verdict-columns.js';
@@ -9,6 +9,8 @@ interface VerdictTablesProps {
   subject: string;
   orders: readonly OrderVerdict[];
   totals: readonly TotalVerdict[];
+  /** Spread of each order over repeats; absent for a verdict over one analysis. */
+  spread?: readonly RepeatOrder[] | undefined;
   /** Unit of the channel. */
   unit: string;
   fileName: string;
@@ -16,8 +18,16 @@ interface VerdictTablesProps {
 }
 
 /** The numbers of a verdict: every limited order, then the totals. */
-export function VerdictTables({ subject, orders, totals, unit, fileName, maxHeight }: VerdictTablesProps) {
-  const columns = useMemo(() => orderColumns(orders, unit), [orders, unit]);
+export function VerdictTables({
+  subject,
+  orders,
+  totals,
+  spread,
+  unit,
+  fileName,
+  maxHeight,
+}: VerdictTablesProps) {
+  const columns = useMemo(() => orderColumns(orders, unit, spread), [orders, unit, spread]);
   return (
     <Box>
       {orders.length > 0 ? (

@@ -3,6 +3,7 @@ import {
   type ChannelAnalysis,
   type DecisionRule,
   type LimitSet,
+  type Repeat,
   type VerdictParameters,
 } from '@overtally/contracts';
 import { neededParameters, optionalParameters } from '@overtally/limits';
@@ -14,6 +15,8 @@ export interface JudgeDraft {
   limitSetId: string;
   decisionRule: DecisionRule;
   entries: Partial<Record<ParameterKey, string>>;
+  /** Channels of other analyses that are repeats of the test. */
+  repeats: Repeat[];
 }
 
 /** Parameters that a verdict is asked for; optional ones are checked when given. */
@@ -72,11 +75,12 @@ function problemOf(key: ParameterKey, value: number): string | null {
   return key === 'expandedUncertaintyPercent' ? 'Between 0 % and 100 %' : 'Must be above zero';
 }
 
-/** Sets for the quantity of the channel first, the others after; each part keeps its order. */
+/** Sets for the quantity of the channel first, the others after; each part keeps its order, without retired sets. */
 export function setsForChannel(
   sets: readonly LimitSet[],
   channel: Pick<ChannelAnalysis, 'quantity'> | undefined,
 ): { fitting: LimitSet[]; others: LimitSet[] } {
+  const offered = sets.filter(({ retiredAt }) => retiredAt === undefined);
   const fits = (set: LimitSet) => set.quantity === channel?.quantity;
-  return { fitting: sets.filter(fits), others: sets.filter((set) => !fits(set)) };
+  return { fitting: offered.filter(fits), others: offered.filter((set) => !fits(set)) };
 }

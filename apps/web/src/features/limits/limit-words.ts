@@ -26,12 +26,6 @@ export const confidenceWords: Record<LimitSet['confidence'], string> = {
   low: 'low: check before use',
 };
 
-/** Edition of a set, and how sure its values are where they are not sure. */
-export function editionLine({ edition, confidence }: Pick<LimitSet, 'edition' | 'confidence'>): string {
-  const stated = `Edition ${edition || 'not stated'}`;
-  return confidence === 'high' ? stated : `${stated}. Confidence ${confidenceWords[confidence]}`;
-}
-
 const evidenceOfPublished: Readonly<Record<string, string>> = {
   source: 'Taken from the named sources',
   source_partial: 'In part from the named source, the rest from memory',

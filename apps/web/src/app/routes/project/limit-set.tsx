@@ -3,9 +3,11 @@ import { useQuery } from '@tanstack/react-query';
 import { useNavigate, useParams } from 'react-router-dom';
 import { ErrorState } from '../../../components/error-state.js';
 import { LoadingState } from '../../../components/loading-state.js';
+import { notifyDone } from '../../../components/notify.js';
 import { PageHeader } from '../../../components/page-header.js';
 import { limitSetQuery } from '../../../features/limits/api/get-limit-set.js';
-import { DeleteLimitSet } from '../../../features/limits/components/delete-limit-set.js';
+import { LimitSetActions } from '../../../features/limits/components/limit-set-actions.js';
+import { LimitSetVersions } from '../../../features/limits/components/limit-set-versions.js';
 import { LimitSetSheet } from '../../../features/limits/components/limit-set-sheet.js';
 import { useProject } from '../../../features/projects/hooks/use-project.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
@@ -24,7 +26,6 @@ export function Component() {
       <LoadingState label="Loading the limit set" />
     );
   }
-  const mayDelete = set.projectId === project.id && holds('limit-set.write', project.role);
   return (
     <>
       <PageHeader
@@ -33,11 +34,20 @@ export function Component() {
         crumb={set.title}
         documentTitle={`${set.title}, ${project.name}`}
         actions={
-          mayDelete ? (
-            <DeleteLimitSet set={set} onDeleted={() => void navigate(paths.limits(project.id))} />
-          ) : undefined
+          <LimitSetActions
+            projectId={project.id}
+            set={set}
+            mayWrite={holds('limit-set.write', project.role)}
+            newVersionTo={paths.newLimitSetVersion(project.id, set.id)}
+            onCloned={(made) => {
+              notifyDone(`${made.title} made`);
+              void navigate(paths.limitSet(project.id, made.id));
+            }}
+            onDeleted={() => void navigate(paths.limits(project.id))}
+          />
         }
       />
+      <LimitSetVersions set={set} setTo={(id) => paths.limitSet(project.id, id)} />
       <LimitSetSheet set={set} />
     </>
   );

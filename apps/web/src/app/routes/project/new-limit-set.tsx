@@ -3,7 +3,8 @@ import { useNavigate } from 'react-router-dom';
 import { EmptyState } from '../../../components/empty-state.js';
 import { notifyDone } from '../../../components/notify.js';
 import { PageHeader } from '../../../components/page-header.js';
-import { CreateLimitSetForm } from '../../../features/limits/components/create-limit-set-form.js';
+import { createLimitSet } from '../../../features/limits/api/create-limit-set.js';
+import { LimitSetForm } from '../../../features/limits/components/limit-set-form.js';
 import { useProject } from '../../../features/projects/hooks/use-project.js';
 import { paths } from '../../paths.js';
 import { useProjectId } from '../../use-project-id.js';
@@ -20,9 +21,10 @@ export function Component() {
         documentTitle={`New limit set, ${project.name}`}
       />
       {holds('limit-set.write', project.role) ? (
-        <CreateLimitSetForm
-          projectId={project.id}
-          onCreated={(set) => {
+        <LimitSetForm
+          submitLabel="Create limit set"
+          onSubmit={(input) => createLimitSet(project.id, input)}
+          onDone={(set) => {
             notifyDone(`${set.title} created`);
             void navigate(paths.limitSet(project.id, set.id));
           }}

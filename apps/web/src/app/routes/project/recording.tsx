@@ -16,6 +16,7 @@ import { VerdictList } from '../../../features/limits/components/verdict-list.js
 import { useProject } from '../../../features/projects/hooks/use-project.js';
 import { recordingQuery } from '../../../features/recordings/api/get-recording.js';
 import { RecordingSheet, type SheetPlace } from '../../../features/recordings/sheet/recording-sheet.js';
+import { allRecordingsQuery } from '../../../features/recordings/api/list-all-recordings.js';
 import { queryClient } from '../../../lib/query-client.js';
 import { paths } from '../../paths.js';
 import { useProjectId } from '../../use-project-id.js';
@@ -81,6 +82,7 @@ interface JudgeButtonProps {
 
 function JudgeButton({ project, subject, analysis, channel }: JudgeButtonProps) {
   const [open, setOpen] = useState(false);
+  const recordings = useQuery({ ...allRecordingsQuery(project.id), enabled: open });
   return (
     <>
       <Button variant="solid" onClick={() => setOpen(true)}>
@@ -95,6 +97,7 @@ function JudgeButton({ project, subject, analysis, channel }: JudgeButtonProps) 
         channel={channel}
         limitSetId={project.comparisonLimitSetId}
         subject={subject}
+        repeatCandidates={recordings.data?.filter(({ id }) => id !== analysis.recordingId) ?? []}
         verdictActions={({ id }) => <PutIntoReport project={project} verdictId={id} />}
       />
     </>

@@ -6,7 +6,7 @@ import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { notifyDone, notifyProblem } from '../../../components/notify.js';
 import { deleteLimitSet } from '../api/delete-limit-set.js';
 
-/** Takes a custom set away after asking. */
+/** Takes a custom set, or its newest version, away after asking. */
 export function DeleteLimitSet({ set, onDeleted }: { set: LimitSet; onDeleted: () => void }) {
   const queryClient = useQueryClient();
   const [asking, setAsking] = useState(false);
@@ -28,7 +28,7 @@ export function DeleteLimitSet({ set, onDeleted }: { set: LimitSet; onDeleted: (
       <ConfirmDialog
         open={asking}
         onClose={() => setAsking(false)}
-        title={`Delete ${set.title}?`}
+        title={set.version > 1 ? `Delete version ${set.version} of ${set.title}?` : `Delete ${set.title}?`}
         confirmLabel="Delete the limit set"
         destructive
         pending={remove.isPending}

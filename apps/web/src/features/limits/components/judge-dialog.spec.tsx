@@ -9,11 +9,25 @@ import { system } from '../../../lib/theme/system.js';
 import { json, mockApi, page } from '../../../testing/mock-api.js';
 import { sampleChannel } from '../../../testing/sample-analyses.js';
 import { sampleVerdict } from '../../../testing/sample-verdicts.js';
-import { sampleId, sampleLimitSet } from '../../../testing/samples.js';
+import { sampleId, sampleLimitSet, sampleRecording } from '../../../testing/samples.js';
 import { JudgeDialog } from './judge-dialog.js';
 
 const analysisId = sampleId(500);
 const published = ['iec61000-3-2.classD', 'iec61000-3-12.table5'].map((id) => findPublishedLimitSet(id)!);
+const summary = {
+  ...{ channel: 0, name: 'i', quantity: 'current', unit: 'A' },
+  ...{ fundamentalHz: 50, rms: 4, thdFPercent: 60, harmonicRms: [3, 0, 2.4] },
+} as const;
+const candidates = [
+  sampleRecording({
+    id: sampleId(148),
+    number: 'R-0148',
+    name: 'Second run',
+    latestAnalysisId: sampleId(501),
+    summaries: [{ ...summary, harmonicRms: [...summary.harmonicRms] }],
+  }),
+  sampleRecording({ id: sampleId(149), number: 'R-0149', name: 'Not analysed', latestAnalysisId: null }),
+];
 const sets = [sampleLimitSet(), ...published];
 
 function open() {
@@ -31,6 +45,7 @@ function open() {
           analysisId={analysisId}
           channels={[sampleChannel()]}
           subject="R-0147"
+          repeatCandidates={candidates}
         />
       </QueryClientProvider>
     </ChakraProvider>,
@@ -41,13 +56,25 @@ function open() {
 describe('judging a channel', () => {
   it('shows where it leads before anything is stored: 2.4 A against 2.3 A fails', async () => {
     const { seen, user } = open();
-    expect(await screen.findByText('Preview, not stored')).toBeTruthy();
+    expect(await screen.findByText(/^Preview of this recording, not stored/)).toBeTruthy();
     expect(screen.getByRole('status').textContent).toBe('Fail. Over at 3.');
     await user.click(screen.getByRole('button', { name: 'Store the verdict' }));
     expect(await screen.findByRole('dialog', { name: 'Verdict on R-0147' })).toBeTruthy();
     expect(seen.at(-1)?.body).toEqual({
       ...{ limitSetId: sampleId(30), channel: 0, parameters: {}, decisionRule: 'simple-acceptance' },
     });
+  });
+
+  // The contract of POST /analyses/:id/verdicts: repeats as analysis and channel.
+  it('takes other recordings of the project as repeats of the test', async () => {
+    const { seen, user } = open();
+    await user.click(await screen.findByLabelText(/R-0148 Second run/));
+    expect(screen.queryByLabelText(/R-0149/)).toBeNull();
+    expect(screen.getByText(/and the repeat\.$/)).toBeTruthy();
+    await user.click(screen.getByRole('button', { name: 'Store the verdict' }));
+    await waitFor(() =>
+      expect(seen.at(-1)?.body).toMatchObject({ repeats: [{ analysisId: sampleId(501), channel: 0 }] }),
+    );
   });
 
   it('asks for what the set and the rule need, with units, before it can be stored', async () => {

@@ -9,6 +9,7 @@ import { Modal } from '../../../components/modal.js';
 import { limitSetsQuery } from '../api/list-limit-sets.js';
 import { useCreateVerdict } from '../hooks/use-create-verdict.js';
 import { askedParameters, readParameters, setsForChannel, type JudgeDraft } from '../judge-draft.js';
+import type { RepeatCandidate } from '../repeat-candidates.js';
 import { JudgeForm } from './judge-form.js';
 import { VerdictView } from './verdict-view.js';
 
@@ -26,6 +27,8 @@ interface JudgeDialogProps {
   channel?: number;
   /** Set to begin with, where it fits the channel. */
   limitSetId?: string | null;
+  /** Other recordings of the project, to choose repeats of the test from. */
+  repeatCandidates?: readonly RepeatCandidate[];
   /** What can be done with the verdict once it is stored. */
   verdictActions?: (verdict: Verdict) => ReactNode;
 }
@@ -56,7 +59,7 @@ function Judging({
   limitSets,
   ...props
 }: Omit<JudgeDialogProps, 'open'> & { limitSets: readonly LimitSet[] }) {
-  const { onClose, projectId, analysisId, channels, subject, verdictActions } = props;
+  const { onClose, projectId, analysisId, channels, subject, repeatCandidates, verdictActions } = props;
   const [draft, setDraft] = useState(() => firstDraft(props, limitSets));
   const create = useCreateVerdict(projectId, analysisId);
   const set = limitSets.find(({ id }) => id === draft.limitSetId);
@@ -71,6 +74,7 @@ function Judging({
       channel: draft.channel,
       decisionRule: draft.decisionRule,
       parameters: read.parameters,
+      ...(draft.repeats.length > 0 ? { repeats: draft.repeats } : {}),
     });
   return (
     <Modal
@@ -99,7 +103,13 @@ function Judging({
       {verdict ? (
         <VerdictView verdict={verdict} subject={subject} />
       ) : (
-        <JudgeForm channels={channels} limitSets={limitSets} draft={draft} onChange={setDraft} />
+        <JudgeForm
+          channels={channels}
+          limitSets={limitSets}
+          repeatCandidates={repeatCandidates ?? []}
+          draft={draft}
+          onChange={setDraft}
+        />
       )}
     </Modal>
   );
@@ -111,11 +121,12 @@ function firstDraft(
 ): JudgeDraft {
   const chosen = channels.find(({ index }) => index === channel) ?? channels[0];
   const { fitting } = setsForChannel(limitSets, chosen);
-  const set = fitting.find(({ id }) => id === limitSetId) ?? fitting[0] ?? limitSets[0];
+  const set = fitting.find(({ id }) => id === limitSetId) ?? fitting[0];
   return {
     channel: chosen?.index ?? 0,
     limitSetId: set?.id ?? '',
     decisionRule: 'simple-acceptance',
     entries: {},
+    repeats: [],
   };
 }

@@ -6,14 +6,17 @@ import { FormField, SelectInput } from '../../../components/form-field.js';
 import { decisionRuleNames, parameterWords } from '../../../components/verdict/verdict-words.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
 import { askedParameters, readParameters, setsForChannel, type JudgeDraft } from '../judge-draft.js';
-import { editionLine } from '../limit-words.js';
+import type { RepeatCandidate } from '../repeat-candidates.js';
 import { Judgement } from './judgement.js';
 import { LimitSetSelect } from './limit-set-select.js';
 import { ParameterFields } from './parameter-fields.js';
+import { RepeatFields } from './repeat-fields.js';
+import { SetSource } from './set-source.js';
 
 interface JudgeFormProps {
   channels: readonly ChannelAnalysis[];
   limitSets: readonly LimitSet[];
+  repeatCandidates: readonly RepeatCandidate[];
   draft: JudgeDraft;
   onChange: (draft: JudgeDraft) => void;
 }
@@ -21,7 +24,7 @@ interface JudgeFormProps {
 const ruleOptions = decisionRuleSchema.options.map((value) => ({ value, label: decisionRuleNames[value] }));
 
 /** Channel, limit set, parameters and decision rule, with what they would lead to. */
-export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormProps) {
+export function JudgeForm({ channels, limitSets, repeatCandidates, draft, onChange }: JudgeFormProps) {
   const channel = channels.find(({ index }) => index === draft.channel);
   const set = limitSets.find(({ id }) => id === draft.limitSetId);
   const { fitting, others } = setsForChannel(limitSets, channel);
@@ -47,6 +50,7 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
     onChange({
       ...draft,
       channel: index,
+      repeats: [],
       limitSetId: keeps ? draft.limitSetId : (first?.id ?? draft.limitSetId),
     });
   };
@@ -63,7 +67,7 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
             onChange={(event) => choose(Number(event.target.value))}
           />
         </FormField>
-        <FormField label="Limit set" help={set ? editionLine(set) : undefined}>
+        <FormField label="Limit set">
           <LimitSetSelect
             fitting={fitting}
             others={others}
@@ -72,6 +76,7 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
           />
         </FormField>
       </Stack>
+      {set ? <SetSource set={set} /> : null}
       <FormField label="Decision rule" help={preview?.decisionRuleText}>
         <SelectInput
           options={ruleOptions}
@@ -87,6 +92,14 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
         problems={read.problems}
         onChange={(key, text) => onChange({ ...draft, entries: { ...draft.entries, [key]: text } })}
       />
+      {channel ? (
+        <RepeatFields
+          candidates={repeatCandidates}
+          channel={channel}
+          chosen={draft.repeats}
+          onChange={(repeats) => onChange({ ...draft, repeats })}
+        />
+      ) : null}
       {read.missing.length > 0 ? (
         <Text color="near">
           {`Still needed: ${read.missing.map((key) => parameterWords[key].label).join(', ')}.`}
@@ -94,7 +107,7 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
       ) : preview && set && channel ? (
         <Judgement
           preview
-          caption="Preview, not stored"
+          caption={previewCaption(draft.repeats.length)}
           subject={`${limitSetName(set)}, ${channel.name}`}
           unit={channel.unit}
           fileName={`preview-${channel.name}`}
@@ -103,4 +116,10 @@ export function JudgeForm({ channels, limitSets, draft, onChange }: JudgeFormPro
       ) : null}
     </Stack>
   );
+}
+
+/** What the preview leaves out: the server adds it when the verdict is stored. */
+function previewCaption(repeats: number): string {
+  const more = repeats === 0 ? '' : `, and ${repeats === 1 ? 'the repeat' : `the ${repeats} repeats`}`;
+  return `Preview of this recording, not stored. The stored verdict also takes values over time and a recorded supply voltage into account${more}.`;
 }

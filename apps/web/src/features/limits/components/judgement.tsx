@@ -1,5 +1,5 @@
 import { Box, Flex, Text } from '@chakra-ui/react';
-import type { OrderVerdict, TotalVerdict, VerdictResult } from '@overtally/contracts';
+import type { OrderVerdict, RepeatOrder, TotalVerdict, VerdictResult } from '@overtally/contracts';
 import type { ReactNode } from 'react';
 import { TallyStrip } from '../../../components/tally-strip.js';
 import { ResultWords } from '../../../components/verdict/result-words.js';
@@ -13,12 +13,18 @@ interface JudgementProps {
   subject: string;
   unit: string;
   fileName: string;
-  judgement: { result: VerdictResult; reason: string; orders: OrderVerdict[]; totals: TotalVerdict[] };
+  judgement: {
+    result: VerdictResult;
+    reason: string;
+    orders: OrderVerdict[];
+    totals: TotalVerdict[];
+    repeatability?: { orders: RepeatOrder[] } | null;
+  };
 }
 
 /** A result with its reason, its tally strip and its numbers. */
 export function Judgement({ caption, preview, subject, unit, fileName, judgement }: JudgementProps) {
-  const { result, reason, orders, totals } = judgement;
+  const { result, reason, orders, totals, repeatability } = judgement;
   return (
     <Box
       borderWidth="1px"
@@ -42,6 +48,7 @@ export function Judgement({ caption, preview, subject, unit, fileName, judgement
         subject={subject}
         orders={orders}
         totals={totals}
+        spread={repeatability?.orders}
         unit={unit}
         fileName={fileName}
         maxHeight="300px"

@@ -1,6 +1,6 @@
 import { NativeSelect } from '@chakra-ui/react';
 import type { LimitSet } from '@overtally/contracts';
-import { limitSetName } from '../../../lib/limit-set-name.js';
+import { limitSetChoice } from '../../../lib/limit-set-name.js';
 import { quantityWords } from '../limit-words.js';
 
 interface LimitSetSelectProps {
@@ -20,7 +20,7 @@ export function LimitSetSelect({ fitting, others, value, onChange }: LimitSetSel
           <optgroup label="For this channel">
             {fitting.map((set) => (
               <option key={set.id} value={set.id}>
-                {limitSetName(set)}
+                {limitSetChoice(set)}
               </option>
             ))}
           </optgroup>
@@ -29,7 +29,7 @@ export function LimitSetSelect({ fitting, others, value, onChange }: LimitSetSel
           <optgroup label="For other quantities">
             {others.map((set) => (
               <option key={set.id} value={set.id}>
-                {`${limitSetName(set)} (${quantityWords[set.quantity].toLowerCase()})`}
+                {`${limitSetChoice(set)} (${quantityWords[set.quantity].toLowerCase()})`}
               </option>
             ))}
           </optgroup>

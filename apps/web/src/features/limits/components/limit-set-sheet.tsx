@@ -41,6 +41,7 @@ function titleCells(set: LimitSet): TitleCell[] {
   return [
     { caption: 'Standard', value: set.standard || 'none named' },
     { caption: 'Edition', value: set.edition || 'not stated', grow: 2 },
+    ...(set.projectId === null ? [] : [{ caption: 'Version', value: String(set.version) }]),
     ...(set.tableRef ? [{ caption: 'Place', value: set.tableRef }] : []),
     { caption: 'Quantity', value: quantityWords[set.quantity] },
     {

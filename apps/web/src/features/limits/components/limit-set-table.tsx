@@ -42,6 +42,8 @@ export function LimitSetTable({ label, sets, setTo }: LimitSetTableProps) {
                 </Link>
                 <Text color="inkSoft" fontSize="13px">
                   {set.edition ? `Edition ${set.edition}` : 'Edition not stated'}
+                  {set.projectId === null ? null : `, version ${set.version}`}
+                  {set.retiredAt ? ', retired' : null}
                 </Text>
               </Table.Cell>
               <Table.Cell>{quantityWords[set.quantity]}</Table.Cell>

@@ -3,7 +3,9 @@ import type { Verdict } from '@overtally/contracts';
 import { formatDateTime } from '../../../lib/format-date.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
 import { parameterLine } from '../../../components/verdict/parameter-line.js';
-import { editionLine } from '../limit-words.js';
+import { RepeatsView } from '../../../components/verdict/repeats-view.js';
+import { SupplyView } from '../../../components/verdict/supply-view.js';
+import { SetSource } from './set-source.js';
 import { Judgement } from './judgement.js';
 
 /** A stored verdict: the set, the rule, the parameters, the result and its numbers. */
@@ -13,7 +15,8 @@ export function VerdictView({ verdict, subject }: { verdict: Verdict; subject: s
   return (
     <Stack gap="3">
       <Text>
-        {channelName} against {name}. {editionLine(limitSet)}.
+        {channelName} against {name}
+        {limitSet.projectId === null ? '' : `, version ${limitSet.version}`}.
       </Text>
       <Judgement
         preview={false}
@@ -26,6 +29,11 @@ export function VerdictView({ verdict, subject }: { verdict: Verdict; subject: s
       <Text color="inkSoft" fontSize="13px">
         {verdict.decisionRuleText} {parameterLine(verdict.parameters)}
       </Text>
+      {verdict.supply ? (
+        <SupplyView supply={verdict.supply} fileName={`${subject}-${channelName}-supply`} />
+      ) : null}
+      <RepeatsView repeats={verdict.repeats} />
+      <SetSource set={limitSet} />
     </Stack>
   );
 }

@@ -3,7 +3,7 @@ import type { LimitSet } from '@overtally/contracts';
 import { FigureFrame } from '../../../components/figure-frame.js';
 import { FormField, SelectInput } from '../../../components/form-field.js';
 import { Plot } from '../../../components/plot.js';
-import { limitSetName } from '../../../lib/limit-set-name.js';
+import { limitSetChoice } from '../../../lib/limit-set-name.js';
 import { usePalette } from '../../../lib/theme/use-palette.js';
 import { ceilingFor, setsFor } from '../ceiling.js';
 import { orderLines } from '../charts/order-lines.js';
@@ -104,7 +104,7 @@ function LimitChoice({
             disabled={sets.length === 0}
             options={[
               { value: '', label: sets.length > 0 ? 'None' : 'No set for these quantities together' },
-              ...sets.map((set) => ({ value: set.id, label: limitSetName(set) })),
+              ...sets.map((set) => ({ value: set.id, label: limitSetChoice(set) })),
             ]}
             value={value}
             onChange={(event) => onChange(event.target.value || null)}

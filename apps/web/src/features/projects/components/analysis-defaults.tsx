@@ -3,6 +3,7 @@ import type { LimitSet } from '@overtally/contracts';
 import type { UseFormReturn } from 'react-hook-form';
 import { FormField, SelectInput } from '../../../components/form-field.js';
 import { Section } from '../../../components/section.js';
+import { limitSetChoice } from '../../../lib/limit-set-name.js';
 import type { ProjectForm } from '../settings-form-values.js';
 
 const profiles = [
@@ -30,7 +31,7 @@ export function AnalysisDefaults({ form, limitSets }: AnalysisDefaultsProps) {
     { value: '', label: 'None' },
     ...limitSets.map((set) => ({
       value: set.id,
-      label: [set.title, set.edition].filter(Boolean).join(', '),
+      label: [limitSetChoice(set), set.edition].filter(Boolean).join(', '),
     })),
   ];
   return (
