@@ -2,6 +2,7 @@ import { ChakraProvider } from '@chakra-ui/react';
 import { QueryClientProvider } from '@tanstack/react-query';
 import { render, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
+import type { Recording } from '@overtally/contracts';
 import { findPublishedLimitSet } from '@overtally/limits';
 import { describe, expect, it } from 'vitest';
 import { queryClient } from '../../../lib/query-client.js';
@@ -14,17 +15,19 @@ import { JudgeDialog } from './judge-dialog.js';
 
 const analysisId = sampleId(500);
 const published = ['iec61000-3-2.classD', 'iec61000-3-12.table5'].map((id) => findPublishedLimitSet(id)!);
-const summary = {
-  ...{ channel: 0, name: 'i', quantity: 'current', unit: 'A' },
-  ...{ fundamentalHz: 50, rms: 4, thdFPercent: 60, harmonicRms: [3, 0, 2.4] },
-} as const;
+const summaries: Recording['summaries'] = [
+  {
+    ...{ channel: 0, name: 'i', quantity: 'current', unit: 'A' },
+    ...{ fundamentalHz: 50, rms: 4, thdFPercent: 60, harmonicRms: [3, 0, 2.4] },
+  },
+];
 const candidates = [
   sampleRecording({
     id: sampleId(148),
     number: 'R-0148',
     name: 'Second run',
     latestAnalysisId: sampleId(501),
-    summaries: [{ ...summary, harmonicRms: [...summary.harmonicRms] }],
+    summaries,
   }),
   sampleRecording({ id: sampleId(149), number: 'R-0149', name: 'Not analysed', latestAnalysisId: null }),
 ];
