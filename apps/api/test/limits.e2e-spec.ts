@@ -191,7 +191,7 @@ describe('limit sets', () => {
     await judge().expect(201);
   });
 
-  it('keeps a set that an issued report refers to, and says to retire it', async () => {
+  it('keeps a set that an issued report refers to, and says to retire it', { timeout: 120_000 }, async () => {
     const { id } = await createAsAnalyst();
     const { analysisId } = await newJudged(test);
     const analyst = await test.signIn('analyst');
