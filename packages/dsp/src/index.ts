@@ -133,6 +133,7 @@ export type { CircuitKind, CircuitParameter, CircuitValues } from './circuits/ci
 export {
   chainOf,
   circuitKinds,
+  isCircuitName,
   stageTransfer,
   type CircuitName,
   type StageSpec,

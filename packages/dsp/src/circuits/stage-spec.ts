@@ -17,6 +17,10 @@ export type CircuitName = keyof typeof kinds;
 /** All kinds of stages with their parameters, for forms and for checking. */
 export const circuitKinds: Readonly<Record<CircuitName, CircuitKind>> = kinds;
 
+export function isCircuitName(name: string): name is CircuitName {
+  return Object.hasOwn(kinds, name);
+}
+
 /** A stage as plain data, as it is entered and stored. */
 export type StageSpec =
   | {
@@ -34,7 +38,12 @@ export type StageSpec =
       gain: number;
       delayS?: number | undefined;
     }
-  | { kind: 'circuit'; circuit: CircuitName; values: CircuitValues }
+  | {
+      kind: 'circuit';
+      /** One of `circuitKinds`; another is refused. */
+      circuit: string;
+      values: CircuitValues;
+    }
   | {
       kind: 'closed-loop';
       controller: ControllerSettings;
@@ -57,12 +66,12 @@ export function stageTransfer(spec: StageSpec): TransferFunction {
     case 'zeros-poles-gain':
       return fromZerosPolesGain(spec, spec.delayS);
     case 'circuit': {
-      const kind = Object.hasOwn(kinds, spec.circuit) ? circuitKinds[spec.circuit] : undefined;
-      if (kind === undefined) {
+      if (!isCircuitName(spec.circuit)) {
         throw new AnalysisInputError(
           `There is no kind of stage "${spec.circuit}"; there are ${Object.keys(kinds).join(', ')}.`,
         );
       }
+      const kind = circuitKinds[spec.circuit];
       return kind.transfer(checkValues(kind, spec.values, `The stage "${spec.circuit}"`));
     }
     case 'closed-loop':

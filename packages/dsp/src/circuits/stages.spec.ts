@@ -63,7 +63,7 @@ describe('stageTransfer', () => {
       { kind: 'coefficients', numerator: [1], denominator: [0] },
     ];
     expect(() => chainOf(specs)).toThrow(/^Stage 2: The denominator/);
-    const unknown = { kind: 'circuit', circuit: 'toString' as CircuitName, values: {} } as const;
+    const unknown = { kind: 'circuit', circuit: 'toString', values: {} } as const;
     expect(() => stageTransfer(unknown)).toThrow(/no kind of stage "toString"/);
   });
 

@@ -21,11 +21,14 @@ export interface SeriesFigures {
 
 /** Points for each period of the highest order among which the peak is looked for. */
 const POINTS_PER_PERIOD = 32;
+/** Above as many points, fewer for each period, but never fewer than these. */
+const MANY_POINTS = 4096;
+const FEWEST_PER_PERIOD = 8;
 
 /**
- * rms, distortion and crest factor of a series. The peak is the largest of at least 32 points for each period of the
- * highest order, made exact by golden section about it; of two peaks that differ by less than 0.5 % of the highest orders
- * it may be that of the lower one.
+ * rms, distortion and crest factor of a series. The peak is the largest of 32 points for each period of the
+ * highest order (above order 128 down to 8), made exact by golden section about it; of two peaks that differ by less than
+ * 0.5 % (8 %) of the highest orders it may be that of the lower one.
  *
  * @param maxOrder last order that counts for the distortion
  */
@@ -38,7 +41,7 @@ export function seriesFigures(series: FourierSeries, maxOrder: number): SeriesFi
     square += rms ** 2;
   }
   const rms = Math.sqrt(square);
-  const peak = undrawnOrders(series).length > 0 ? null : peakOf(series, POINTS_PER_PERIOD * highest);
+  const peak = undrawnOrders(series).length > 0 ? null : peakOf(series, highest);
   return {
     rms,
     fundamentalRms: byOrder[0]!,
@@ -49,7 +52,11 @@ export function seriesFigures(series: FourierSeries, maxOrder: number): SeriesFi
   };
 }
 
-function peakOf(series: FourierSeries, pointCount: number): number {
+function peakOf(series: FourierSeries, highest: number): number {
+  const pointCount = Math.max(
+    Math.min(POINTS_PER_PERIOD * highest, MANY_POINTS),
+    FEWEST_PER_PERIOD * highest,
+  );
   const { values } = waveformOf(series, { pointsPerCycle: pointCount });
   const at = values.reduce((best, y, n) => (Math.abs(y) > Math.abs(values[best]!) ? n : best), 0);
   const magnitude = (share: number) => Math.abs(seriesValue(series, share));

@@ -26,9 +26,12 @@ export function synthesise(
   for (const { order, rms, phaseDeg } of components) {
     const re = Math.SQRT2 * rms * Math.cos((phaseDeg * Math.PI) / 180);
     const im = Math.SQRT2 * rms * Math.sin((phaseDeg * Math.PI) / 180);
-    for (let n = 0; n < pointCount; n++) {
-      const at = (order * n) % pointCount;
+    // order · n modulo N, step by step.
+    const step = order % pointCount;
+    for (let n = 0, at = 0; n < pointCount; n++) {
       out[n]! += re * cosine[at]! - im * sine[at]!;
+      at += step;
+      if (at >= pointCount) at -= pointCount;
     }
   }
   return out;
