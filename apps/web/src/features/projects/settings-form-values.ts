@@ -8,6 +8,8 @@ export const projectFormSchema = z
   .object({
     name: z.string().trim().min(1, 'Name the project').max(160, 'Use at most 160 characters'),
     customer: z.string().trim().max(160, 'Use at most 160 characters'),
+    customerContact: z.string().trim().max(500, 'Use at most 500 characters'),
+    preparerMayIssue: z.boolean(),
     description: z.string().trim().max(2000, 'Use at most 2000 characters'),
     profile: profileSchema,
     nominal: z.enum(nominalChoices),
@@ -34,6 +36,8 @@ export function toForm(project: Project): ProjectForm {
   return {
     name: project.name,
     customer: project.customer,
+    customerContact: project.customerContact,
+    preparerMayIssue: project.preparerMayIssue,
     description: project.description,
     profile,
     nominal: known ?? 'other',
@@ -52,6 +56,8 @@ export function toUpdate(project: Project, values: ProjectForm): UpdateProject {
   return {
     name: values.name,
     customer: values.customer,
+    customerContact: values.customerContact,
+    preparerMayIssue: values.preparerMayIssue,
     description: values.description,
     defaultSettings: {
       ...project.defaultSettings,

@@ -1,4 +1,4 @@
-import type { Note, ReportEvent, ReportStatus, Settings } from '@overtally/contracts';
+import type { Note, Report, ReportEvent, ReportStatus, Settings } from '@overtally/contracts';
 import { formatDuration, formatHz } from '../../lib/format.js';
 
 export const statusWords: Record<ReportStatus, string> = {
@@ -7,6 +7,10 @@ export const statusWords: Record<ReportStatus, string> = {
   issued: 'Issued',
   superseded: 'Superseded',
 };
+
+/** Where a report stands; a draft that came back from review is told apart. */
+export const standingWords = ({ status, returned }: Pick<Report, 'status' | 'returned'>): string =>
+  returned ? 'Returned' : statusWords[status];
 
 export const eventWords: Record<ReportEvent['kind'], string> = {
   created: 'Draft made',

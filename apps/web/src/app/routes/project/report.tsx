@@ -13,7 +13,7 @@ import { ReportDeliveries } from '../../../features/reports/components/report-de
 import { ReportForm } from '../../../features/reports/components/report-form.js';
 import { ReportSheet } from '../../../features/reports/components/report-sheet.js';
 import { useReportChanges } from '../../../features/reports/hooks/use-report-changes.js';
-import { statusWords } from '../../../features/reports/report-words.js';
+import { standingWords } from '../../../features/reports/report-words.js';
 import { paths } from '../../paths.js';
 import { useProjectId } from '../../use-project-id.js';
 import { useJudged } from './use-judged.js';
@@ -42,15 +42,18 @@ function ReportPage({ report }: { report: Report }) {
         subtitle={
           report.number ? `${report.number}, revision ${report.revision}` : `Revision ${report.revision}`
         }
-        crumb={report.number ?? statusWords[report.status]}
+        crumb={report.number ?? standingWords(report)}
         documentTitle={`${report.number ?? report.title}, ${project.name}`}
         actions={
           isEditing ? undefined : (
             <ReportActions
               report={report}
               role={project.role}
+              personId={account.id}
+              preparerMayIssue={project.preparerMayIssue}
               onEdit={() => setEditing(true)}
               onDeleted={() => void navigate(paths.reports(project.id))}
+              onRevised={({ id }) => void navigate(paths.report(project.id, id))}
             />
           )
         }
@@ -59,7 +62,7 @@ function ReportPage({ report }: { report: Report }) {
         <EditDraft report={report} onDone={() => setEditing(false)} />
       ) : (
         <>
-          <ReportSheet report={report} />
+          <ReportSheet report={report} role={project.role} reportTo={(id) => paths.report(project.id, id)} />
           <ReportDeliveries report={report} role={project.role} isAdministrator={account.isAdministrator} />
         </>
       )}
@@ -75,13 +78,22 @@ function EditDraft({ report, onDone }: { report: Report; onDone: () => void }) {
   const { title, summary, deviations, recipients, verdictIds } = report;
   return (
     <ReportForm
-      initial={{ title, summary, deviations, recipients, verdictIds }}
+      initial={{
+        ...{ title, summary, deviations, recipients, verdictIds },
+        ...(report.replaces && { revisionReason: report.revisionReason ?? '' }),
+      }}
       verdicts={judged.data.verdicts}
       recordings={judged.data.recordings}
       submitLabel="Save the draft"
-      save={update}
+      // Verdicts that stay are not sent: one that is outdated would hinder saving the words.
+      save={({ verdictIds: chosen, ...words }) =>
+        update(isSame(chosen, verdictIds) ? words : { ...words, verdictIds: chosen })
+      }
       onSaved={onDone}
       onCancel={onDone}
     />
   );
 }
+
+const isSame = (a: readonly string[], b: readonly string[]): boolean =>
+  a.length === b.length && a.every((id, index) => id === b[index]);

@@ -1,4 +1,4 @@
-import { Button, Input, Stack, Textarea } from '@chakra-ui/react';
+import { Box, Button, Flex, Input, Stack, Text, Textarea } from '@chakra-ui/react';
 import { zodResolver } from '@hookform/resolvers/zod';
 import type { LimitSet, Project } from '@overtally/contracts';
 import { useForm } from 'react-hook-form';
@@ -45,12 +45,34 @@ export function ProjectSettingsForm({ project, limitSets }: ProjectSettingsFormP
           >
             <Input autoComplete="off" {...form.register('customer')} />
           </FormField>
+          <FormField
+            label="Customer's address"
+            optional
+            error={errors.customerContact?.message}
+            help="And how to reach them; reports print it."
+          >
+            <Textarea rows={2} {...form.register('customerContact')} />
+          </FormField>
           <FormField label="Description" optional error={errors.description?.message}>
             <Textarea rows={4} {...form.register('description')} />
           </FormField>
         </Stack>
       </Section>
       <AnalysisDefaults form={form} limitSets={limitSets} />
+      <Section title="Who issues reports">
+        <label>
+          <Flex as="span" gap="3" align="flex-start" maxW="lg">
+            <input type="checkbox" {...form.register('preparerMayIssue')} />
+            <Box as="span">
+              Who prepared a report may issue it too
+              <Text as="span" display="block" color="inkSoft" fontSize="13px">
+                Otherwise another manager looks at each report before it goes out. Allow this only where the
+                laboratory has nobody else; each report issued so says that one person prepared and issued it.
+              </Text>
+            </Box>
+          </Flex>
+        </label>
+      </Section>
       <Stack gap="3" align="flex-start" mb="10">
         <FormProblem message={errors.root?.message} />
         <Button type="submit" variant="solid" loading={update.isPending} disabled={!isDirty}>

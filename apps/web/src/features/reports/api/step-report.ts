@@ -1,9 +1,19 @@
-import { reportSchema, type Report } from '@overtally/contracts';
+import {
+  reportSchema,
+  type IssueReport,
+  type Report,
+  type ReportStep,
+  type SubmitReport,
+} from '@overtally/contracts';
 import { requestJson } from '../../../lib/http.js';
 
-/** What moves a report on, or back to its author. */
-export type Step = 'submit' | 'return' | 'issue';
+/** What moves a report on, or back to its author, with what is said on it. */
+export type Step =
+  | { step: 'submit'; input: SubmitReport }
+  | { step: 'withdraw' | 'return'; input: ReportStep }
+  | { step: 'issue'; input: IssueReport };
+export type StepName = Step['step'];
 
-export function stepReport(reportId: string, step: Step, comment: string): Promise<Report> {
-  return requestJson(reportSchema, `/reports/${reportId}/${step}`, { method: 'POST', body: { comment } });
+export function stepReport(reportId: string, { step, input }: Step): Promise<Report> {
+  return requestJson(reportSchema, `/reports/${reportId}/${step}`, { method: 'POST', body: input });
 }

@@ -1,27 +1,37 @@
 import { Button, Text } from '@chakra-ui/react';
 import { holds, type ProjectRole, type Report } from '@overtally/contracts';
-import { useState } from 'react';
+import { useId, useState } from 'react';
 import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { apiUrl } from '../../../lib/http.js';
-import type { Step } from '../api/step-report.js';
+import type { StepName } from '../api/step-report.js';
+import { issueHindrance } from '../issue-hindrance.js';
 import { useReportChanges } from '../hooks/use-report-changes.js';
 import { StepDialog } from './step-dialog.js';
 
 interface ReportActionsProps {
   report: Report;
   role: ProjectRole | null;
+  personId: string;
+  /** The rule of the project on who issues. */
+  preparerMayIssue: boolean;
   onEdit: () => void;
   onDeleted: () => void;
+  onRevised: (revision: Report) => void;
 }
 
 /** What the reader may do with the report in its present state. */
-export function ReportActions({ report, role, onEdit, onDeleted }: ReportActionsProps) {
-  const { step, remove } = useReportChanges(report);
-  const [asking, setAsking] = useState<Step | 'delete' | null>(null);
+export function ReportActions(props: ReportActionsProps) {
+  const { report, role, personId, preparerMayIssue, onEdit, onDeleted, onRevised } = props;
+  const hintId = useId();
+  const { step, remove, revise } = useReportChanges(report);
+  const [asking, setAsking] = useState<StepName | 'delete' | null>(null);
   const isDraft = report.status === 'draft';
   const inReview = report.status === 'in-review';
   const mayWrite = isDraft && holds('report.write', role);
   const mayDecide = inReview && holds('report.decide', role);
+  const isOwn = report.preparedBy.id === personId || report.submittedBy?.id === personId;
+  const hindrance = mayDecide ? issueHindrance(report, { personId, preparerMayIssue }) : null;
+  const mayRevise = report.status === 'issued' && !report.replacedBy && holds('report.write', role);
   const close = () => {
     setAsking(null);
     step.reset();
@@ -51,21 +61,40 @@ export function ReportActions({ report, role, onEdit, onDeleted }: ReportActions
           Submit for review
         </Button>
       ) : null}
+      {inReview && isOwn && holds('report.submit', role) ? (
+        <Button onClick={() => setAsking('withdraw')}>Withdraw</Button>
+      ) : null}
       {mayDecide ? (
         <>
           <Button onClick={() => setAsking('return')}>Return</Button>
-          <Button variant="solid" onClick={() => setAsking('issue')}>
+          <Button
+            variant="solid"
+            disabled={hindrance !== null}
+            aria-describedby={hindrance ? hintId : undefined}
+            onClick={() => setAsking('issue')}
+          >
             Issue
           </Button>
         </>
       ) : null}
+      {mayRevise ? (
+        <Button loading={revise.isPending} onClick={() => revise.mutate(undefined, { onSuccess: onRevised })}>
+          Make a new revision
+        </Button>
+      ) : null}
+      {hindrance ? (
+        <Text id={hintId} flexBasis="100%" color="inkSoft" fontSize="13px" maxW="75ch">
+          {hindrance}
+        </Text>
+      ) : null}
       {asking !== null && asking !== 'delete' ? (
         <StepDialog
           step={asking}
+          report={report}
           onClose={close}
           pending={step.isPending}
           error={step.error}
-          onConfirm={(comment) => step.mutate({ step: asking, comment }, { onSuccess: close })}
+          onConfirm={(input) => step.mutate({ step: asking, input }, { onSuccess: close })}
         />
       ) : null}
       <ConfirmDialog

@@ -1,28 +1,44 @@
 import { Button, Input, Stack, Textarea } from '@chakra-ui/react';
 import { zodResolver } from '@hookform/resolvers/zod';
-import { createReportSchema, type CreateReport, type Report, type Verdict } from '@overtally/contracts';
+import {
+  createReportSchema,
+  updateReportSchema,
+  type CreateReport,
+  type Report,
+  type Verdict,
+} from '@overtally/contracts';
 import { useMutation } from '@tanstack/react-query';
 import { useController, useForm } from 'react-hook-form';
+import type { z } from 'zod';
 import { FormField } from '../../../components/form-field.js';
 import { FormProblem } from '../../../components/form-problem.js';
 import { setFormProblem } from '../../../lib/form-errors.js';
 import type { RecordingName } from '../verdict-groups.js';
+import { RecipientsField } from './recipients-field.js';
 import { VerdictPicker } from './verdict-picker.js';
 
+const { revisionReason } = updateReportSchema.shape;
+const reportFormSchema = createReportSchema.extend({ revisionReason });
+export type ReportFormInput = z.input<typeof reportFormSchema>;
+
 interface ReportFormProps {
-  initial: CreateReport;
+  /** With a reason, even an empty one, for a new revision. */
+  initial: CreateReport & { revisionReason?: string };
   verdicts: readonly Verdict[];
   recordings: readonly RecordingName[];
   /** Names the act: "Create the draft". */
   submitLabel: string;
-  save: (input: CreateReport) => Promise<Report>;
+  save: (input: CreateReport & { revisionReason?: string }) => Promise<Report>;
   onSaved: (report: Report) => void;
   onCancel: () => void;
 }
 
-/** Title, summary and verdicts of a draft. */
+/** Title, words, recipients and verdicts of a draft. */
 export function ReportForm(props: ReportFormProps) {
-  const form = useForm({ resolver: zodResolver(createReportSchema), defaultValues: props.initial });
+  const form = useForm<ReportFormInput, unknown, CreateReport & { revisionReason?: string }>({
+    resolver: zodResolver(reportFormSchema),
+    defaultValues: props.initial,
+  });
   const { errors } = form.formState;
   const { field } = useController({ control: form.control, name: 'verdictIds' });
   const write = useMutation({
@@ -36,6 +52,15 @@ export function ReportForm(props: ReportFormProps) {
         <FormField label="Title" error={errors.title?.message}>
           <Input autoComplete="off" {...form.register('title')} />
         </FormField>
+        {props.initial.revisionReason === undefined ? null : (
+          <FormField
+            label="Reason for the revision"
+            error={errors.revisionReason?.message}
+            help="Needed before it is submitted; the new revision prints it."
+          >
+            <Textarea rows={2} {...form.register('revisionReason')} />
+          </FormField>
+        )}
         <FormField
           label="Summary"
           optional
@@ -44,6 +69,15 @@ export function ReportForm(props: ReportFormProps) {
         >
           <Textarea rows={4} {...form.register('summary')} />
         </FormField>
+        <FormField
+          label="Deviations"
+          optional
+          error={errors.deviations?.message}
+          help="Additions to, deviations or exclusions from the method."
+        >
+          <Textarea rows={3} {...form.register('deviations')} />
+        </FormField>
+        <RecipientsField form={form} />
         <VerdictPicker
           verdicts={props.verdicts}
           recordings={props.recordings}

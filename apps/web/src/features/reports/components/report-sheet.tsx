@@ -1,28 +1,57 @@
-import { Box, Button, Text } from '@chakra-ui/react';
-import type { Report } from '@overtally/contracts';
+import { Box, Text } from '@chakra-ui/react';
+import { holds, type ProjectRole, type Report } from '@overtally/contracts';
 import { MarginLayout } from '../../../components/margin-column.js';
-import { notifyDone, notifyProblem } from '../../../components/notify.js';
 import { TitleBlock, type TitleCell } from '../../../components/title-block.js';
 import { verdictTone, verdictWords } from '../../../components/verdict/verdict-words.js';
 import { formatDateTime } from '../../../lib/format-date.js';
+import { CommentForm } from './comment-form.js';
+import { IssuedPanel } from './issued-panel.js';
 import { ReportLog } from './report-log.js';
 import { ReportSection } from './report-section.js';
+import { ReportStanding } from './report-standing.js';
 import { ReportSteps } from './report-steps.js';
+import { RevisionChangesList } from './revision-changes-list.js';
+
+interface ReportSheetProps {
+  report: Report;
+  role: ProjectRole | null;
+  reportTo: (reportId: string) => string;
+}
 
 /** A report as it will be printed, with its way and its log. */
-export function ReportSheet({ report }: { report: Report }) {
-  const { content, summary, pdfSha256 } = report;
+export function ReportSheet({ report, role, reportTo }: ReportSheetProps) {
+  const { content, summary, deviations, replaces } = report;
+  const mayComment = holds('report.comment', role);
   return (
     <>
       <TitleBlock label="Report" cells={titleCells(report)} />
       <ReportSteps report={report} />
-      <MarginLayout margin={<ReportLog events={report.events} />}>
-        {pdfSha256 ? <IssuedSha sha256={pdfSha256} /> : null}
+      <ReportStanding report={report} reportTo={reportTo} />
+      <MarginLayout
+        margin={
+          <ReportLog events={report.events}>{mayComment ? <CommentForm report={report} /> : null}</ReportLog>
+        }
+      >
+        <IssuedPanel report={report} />
         {summary ? (
           <Text whiteSpace="pre-line" maxW="75ch" fontSize="md">
             {summary}
           </Text>
         ) : null}
+        {deviations ? (
+          <Text whiteSpace="pre-line" maxW="75ch" mt="2">
+            <Box as="span" fontWeight="600">
+              Deviations from the method:{' '}
+            </Box>
+            {deviations}
+          </Text>
+        ) : null}
+        {report.recipients.length > 0 ? (
+          <Text color="inkSoft" mt="2" maxW="75ch" overflowWrap="anywhere">
+            For {report.recipients.map(({ name, email }) => (name ? `${name} (${email})` : email)).join(', ')}
+          </Text>
+        ) : null}
+        {replaces ? <RevisionChangesList report={report} beforeId={replaces.id} /> : null}
         {content.sections.map((section, index) => (
           <ReportSection key={section.verdict.id} section={section} place={index + 1} />
         ))}
@@ -52,24 +81,4 @@ function titleCells(report: Report): TitleCell[] {
     },
     { caption: 'Result', value: verdictWords[content.result], ...(tone ? { tone } : {}) },
   ];
-}
-
-function IssuedSha({ sha256 }: { sha256: string }) {
-  const copy = () => {
-    navigator.clipboard.writeText(sha256).then(
-      () => notifyDone('SHA-256 copied'),
-      (error: unknown) => notifyProblem('Not copied', error),
-    );
-  };
-  return (
-    <Box mb="4" fontSize="13px">
-      <Text color="inkSoft">SHA-256 of the issued PDF: a copy with another one is not this report.</Text>
-      <Box as="span" fontFamily="mono" overflowWrap="anywhere" mr="2">
-        {sha256}
-      </Box>
-      <Button size="2xs" variant="ghost" colorPalette="act" onClick={copy}>
-        Copy
-      </Button>
-    </Box>
-  );
 }

@@ -9,7 +9,7 @@ const steps = [
 ] as const;
 
 /** Where the report stands on its way, with who brought it there. */
-export function ReportSteps({ report }: { report: Pick<Report, 'status' | 'events'> }) {
+export function ReportSteps({ report }: { report: Pick<Report, 'status' | 'events' | 'returned'> }) {
   const at = report.status === 'superseded' ? 2 : steps.findIndex(({ status }) => status === report.status);
   return (
     <Flex as="ol" aria-label="Way of the report" listStyleType="none" gap="1" mb="4">
@@ -28,6 +28,7 @@ export function ReportSteps({ report }: { report: Pick<Report, 'status' | 'event
           >
             <Text fontWeight={index === at ? '600' : '400'} color={index <= at ? 'ink' : 'inkSoft'}>
               {label}
+              {index === 0 && at === 0 && report.returned ? ', returned' : ''}
               {index === at && report.status === 'superseded' ? ', superseded' : ''}
             </Text>
             <Text fontSize="13px" color="inkSoft">

@@ -4,7 +4,7 @@ import { Link as RouterLink } from 'react-router-dom';
 import { Sheet } from '../../../components/sheet.js';
 import { ResultWords } from '../../../components/verdict/result-words.js';
 import { formatDate, formatDateTimeFull } from '../../../lib/format-date.js';
-import { statusWords } from '../report-words.js';
+import { standingWords } from '../report-words.js';
 
 interface ReportTableProps {
   reports: readonly ReportListItem[];
@@ -59,7 +59,7 @@ function Row({ report, to }: { report: ReportListItem; to: string }) {
           Revision {report.revision}, prepared by {report.preparedBy.name}
         </Text>
       </Table.Cell>
-      <Table.Cell whiteSpace="nowrap">{statusWords[report.status]}</Table.Cell>
+      <Table.Cell whiteSpace="nowrap">{standingWords(report)}</Table.Cell>
       <Table.Cell>
         <ResultWords result={report.result} />
       </Table.Cell>
