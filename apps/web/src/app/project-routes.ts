@@ -4,6 +4,7 @@ import type { RouteObject } from 'react-router-dom';
 export const projectRoutes: RouteObject[] = [
   { path: 'recordings', lazy: () => import('./routes/project/recordings.js') },
   { path: 'recordings/:recordingId', lazy: () => import('./routes/project/recording.js') },
+  { path: 'equipment', lazy: () => import('./routes/project/equipment.js') },
   { path: 'overlay', lazy: () => import('./routes/project/overlay.js') },
   { path: 'limits', lazy: () => import('./routes/project/limits.js') },
   { path: 'limits/new', lazy: () => import('./routes/project/new-limit-set.js') },

@@ -34,6 +34,10 @@ export const routes: RouteObject[] = [
         children: [
           { path: 'projects', lazy: () => import('./routes/projects.js') },
           { path: 'account', lazy: () => import('./routes/account.js') },
+          { path: 'instruments', lazy: () => import('./routes/instruments.js') },
+          { path: 'instruments/:instrumentId', lazy: () => import('./routes/instrument.js') },
+          { path: 'measuring-chains', lazy: () => import('./routes/measuring-chains.js') },
+          { path: 'laboratory', lazy: () => import('./routes/laboratory.js') },
           { path: 'people', lazy: () => import('./routes/people.js') },
           { path: 'mailbox', lazy: () => import('./routes/mailbox.js') },
           { path: 'mailbox/:mailId', lazy: () => import('./routes/mail.js') },

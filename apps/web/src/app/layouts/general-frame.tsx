@@ -9,8 +9,15 @@ export function GeneralFrame({ children }: { children: ReactNode }) {
   const account = useAccount();
   const tabs = [
     { label: 'Projects', to: paths.projects() },
+    ...(account.worksInLaboratory
+      ? [
+          { label: 'Instruments', to: paths.instruments() },
+          { label: 'Measuring chains', to: paths.chains() },
+        ]
+      : []),
     ...(account.isAdministrator
       ? [
+          { label: 'Laboratory', to: paths.laboratory() },
           { label: 'People', to: paths.people() },
           { label: 'Mailbox', to: paths.mailbox() },
         ]

@@ -21,6 +21,7 @@ export function Component() {
   const { id } = project;
   const tabs = [
     { label: 'Recordings', to: paths.recordings(id) },
+    { label: 'Equipment', to: paths.equipment(id) },
     { label: 'Overlay', to: paths.overlay(id) },
     { label: 'Limits', to: paths.limits(id) },
     { label: 'Reports', to: paths.reports(id) },

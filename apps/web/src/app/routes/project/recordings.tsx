@@ -18,6 +18,7 @@ import { ListToolbar } from '../../../features/recordings/list/list-toolbar.js';
 import { RecordingTable } from '../../../features/recordings/list/recording-table.js';
 import { useRecordingFilter } from '../../../features/recordings/list/use-recording-filter.js';
 import { Intake } from '../../../features/recordings/upload/intake.js';
+import { equipmentQuery } from '../../../lib/bench-queries.js';
 import { paths } from '../../paths.js';
 import { useProjectId } from '../../use-project-id.js';
 
@@ -30,6 +31,7 @@ export function Component() {
   const [selection, setSelection] = useState<ReadonlySet<string>>(new Set());
   const recordings = useInfiniteQuery(recordingsQuery(project.id, filter));
   const limitSets = useQuery(limitSetsQuery(project.id));
+  const equipment = useQuery(equipmentQuery(project.id));
   const wanted = limitSetId ?? project.comparisonLimitSetId ?? 'none';
   const limitSet = limitSets.data?.find((set) => set.id === wanted) ?? null;
   const shown = recordings.data?.pages.flatMap((page) => page.items) ?? [];
@@ -55,7 +57,7 @@ export function Component() {
       const channel = recording ? compareRecording(recording, limitSet).channel : null;
       return channel ? `${id}:${channel.channel}` : id;
     });
-  const filtered = filter.q !== '' || filter.status !== null;
+  const filtered = filter.q !== '' || filter.status !== null || filter.equipmentId !== null;
   return (
     <>
       <PageHeader
@@ -85,6 +87,7 @@ export function Component() {
             filter={filter}
             limitSets={limitSets.data ?? []}
             limitSetId={limitSet?.id ?? ''}
+            equipment={equipment.data ?? []}
             onChange={change}
           />
           {shown.length > 0 ? (
@@ -99,7 +102,7 @@ export function Component() {
           ) : (
             <EmptyState
               title="No recording matches"
-              actions={<Button onClick={() => change({ q: '', status: '' })}>Show all</Button>}
+              actions={<Button onClick={() => change({ q: '', status: '', equipment: '' })}>Show all</Button>}
             >
               Numbers, names, equipment and file names are searched.
             </EmptyState>

@@ -6,6 +6,8 @@ import { isBusy } from '../recording-status.js';
 export interface RecordingFilter {
   q: string;
   status: RecordingStatus | null;
+  /** Recordings of this equipment alone. */
+  equipmentId?: string | null;
   sort: RecordingQuery['sort'];
 }
 

@@ -1,5 +1,5 @@
 import { Flex, Input } from '@chakra-ui/react';
-import type { LimitSet } from '@overtally/contracts';
+import type { Equipment, LimitSet } from '@overtally/contracts';
 import { useEffect, useState } from 'react';
 import { FormField, SelectInput } from '../../../components/form-field.js';
 import type { RecordingFilter } from '../api/list-recordings.js';
@@ -8,9 +8,10 @@ import { statusWords } from '../recording-status.js';
 interface ListToolbarProps {
   filter: RecordingFilter;
   limitSets: readonly LimitSet[];
+  equipment: readonly Equipment[];
   /** Set the rows are compared with; empty for none. */
   limitSetId: string;
-  onChange: (changes: Partial<Record<'q' | 'status' | 'sort' | 'limits', string>>) => void;
+  onChange: (changes: Partial<Record<'q' | 'status' | 'sort' | 'limits' | 'equipment', string>>) => void;
 }
 
 const statusOptions = [
@@ -26,7 +27,7 @@ const sortOptions = [
 ];
 
 /** Search, state, sorting and the limit set the rows are compared with. */
-export function ListToolbar({ filter, limitSets, limitSetId, onChange }: ListToolbarProps) {
+export function ListToolbar({ filter, limitSets, equipment, limitSetId, onChange }: ListToolbarProps) {
   return (
     <Flex gap="3" wrap="wrap" align="flex-end" mb="3">
       <Flex flex="1 1 200px" minW="0">
@@ -43,6 +44,20 @@ export function ListToolbar({ filter, limitSets, limitSetId, onChange }: ListToo
           />
         </FormField>
       </Flex>
+      {equipment.length > 0 ? (
+        <Flex flex="0 1 190px">
+          <FormField label="Equipment">
+            <SelectInput
+              options={[
+                { value: '', label: 'Any equipment' },
+                ...equipment.map(({ id, name }) => ({ value: id, label: name })),
+              ]}
+              value={filter.equipmentId ?? ''}
+              onChange={(event) => onChange({ equipment: event.target.value })}
+            />
+          </FormField>
+        </Flex>
+      ) : null}
       <Flex flex="0 1 150px">
         <FormField label="Sort by">
           <SelectInput

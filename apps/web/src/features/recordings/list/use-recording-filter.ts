@@ -11,12 +11,13 @@ export function useRecordingFilter() {
     const sort = recordingSortSchema.safeParse(search.get('sort'));
     return {
       q: search.get('q') ?? '',
+      equipmentId: search.get('equipment'),
       status: status.success ? status.data : null,
       sort: sort.success ? sort.data : '-number',
     };
   }, [search]);
   const change = useCallback(
-    (changes: Partial<Record<'q' | 'status' | 'sort' | 'limits', string>>) =>
+    (changes: Partial<Record<'q' | 'status' | 'sort' | 'limits' | 'equipment', string>>) =>
       setSearch(
         (before) => {
           const next = new URLSearchParams(before);
