@@ -11,8 +11,11 @@ export interface IncomingFile {
   reason?: string | null;
 }
 
-/** The options that a file is to be read by, and the rule they come from. */
-export type Reading = Pick<FinishUpload, 'import' | 'readingRuleId'>;
+/** The options that a file is to be read by, the rule they come from, and what is said of the capture. */
+export type Reading = Pick<
+  FinishUpload,
+  'import' | 'readingRuleId' | 'equipmentId' | 'operatingModeId' | 'measuringChainId' | 'conditions'
+>;
 
 /**
  * - `looking`, `asking`: its layout is looked into; the form asks how it is to be read

@@ -4,6 +4,8 @@ import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { ConfirmDialog } from '../../../components/confirm-dialog.js';
 import { formatBytes } from '../../../lib/format.js';
+import { ImportBench } from '../bench/import-bench.js';
+import { useImportBench } from '../bench/use-import-bench.js';
 import { uploadLimitsQuery } from '../api/upload-limits.js';
 import { useUnfinishedUploads } from '../hooks/use-unfinished-uploads.js';
 import { useUploadQueue } from '../hooks/use-upload-queue.js';
@@ -23,7 +25,8 @@ interface IntakeProps {
 export function Intake({ projectId, recordingTo, onRemoveCopy }: IntakeProps) {
   const { queue, items } = useUploadQueue(projectId);
   const [checkFirst, setCheckFirst] = useState(false);
-  const intake = useIntake(projectId, queue, checkFirst);
+  const bench = useImportBench(projectId);
+  const intake = useIntake(projectId, queue, checkFirst, bench.data);
   const unfinished = useUnfinishedUploads(projectId, items);
   const limits = useQuery(uploadLimitsQuery(projectId));
   const inQuestion = items.find(({ state }) => state === 'asking');
@@ -31,6 +34,7 @@ export function Intake({ projectId, recordingTo, onRemoveCopy }: IntakeProps) {
   const { inDoubt } = unfinished;
   return (
     <>
+      <ImportBench projectId={projectId} bench={bench} />
       <DropZone
         onFiles={intake.drop}
         maxFileBytes={limits.data?.maxFileBytes ?? null}
@@ -57,7 +61,9 @@ export function Intake({ projectId, recordingTo, onRemoveCopy }: IntakeProps) {
           projectId={projectId}
           source={{ kind: 'file', file: inQuestion.file }}
           onClose={() => queue.leaveOut(inQuestion.id)}
-          onRead={(options, readingRuleId) => queue.send(inQuestion.id, { import: options, readingRuleId })}
+          onRead={(options, readingRuleId) =>
+            queue.send(inQuestion.id, { ...bench.data, import: options, readingRuleId })
+          }
         />
       ) : null}
       <ConfirmDialog

@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { notifyProblem } from '../../../components/notify.js';
 import { previewImport } from '../api/preview-import.js';
-import type { IncomingFile, UploadItem } from '../upload-item.js';
+import type { IncomingFile, Reading, UploadItem } from '../upload-item.js';
 import type { UploadQueue } from '../upload-queue.js';
 import { joinHalves, otherHalf, pairKey } from './comtrade-halves.js';
 import { incomingFiles } from './incoming-files.js';
@@ -12,8 +12,9 @@ const manyFiles = 50;
 /**
  * Takes dropped files in: a file whose layout is plain is sent at once, one that leaves doubts waits for the
  * import form.
+ * @param said what goes with every capture
  */
-export function useIntake(projectId: string, queue: UploadQueue, checkFirst: boolean) {
+export function useIntake(projectId: string, queue: UploadQueue, checkFirst: boolean, said: Reading = {}) {
   const [unconfirmed, setUnconfirmed] = useState<readonly IncomingFile[]>([]);
 
   async function drop(dropped: readonly File[]): Promise<void> {
@@ -34,7 +35,7 @@ export function useIntake(projectId: string, queue: UploadQueue, checkFirst: boo
 
   async function lookInto({ id, file, reason }: UploadItem, amongOthers: boolean): Promise<void> {
     if (reason) return queue.leaveOut(id, reason);
-    if (await isArchive(file)) return queue.send(id);
+    if (await isArchive(file)) return queue.send(id, said);
     if (checkFirst) return queue.ask(id);
     try {
       const { confident, problem, format } = await previewImport(projectId, file, null);
@@ -45,7 +46,7 @@ export function useIntake(projectId: string, queue: UploadQueue, checkFirst: boo
     } catch (error) {
       notifyProblem(`${file.name} could not be looked into first; it is sent as it is`, error);
     }
-    queue.send(id);
+    queue.send(id, said);
   }
 
   return {

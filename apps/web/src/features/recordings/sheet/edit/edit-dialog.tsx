@@ -1,12 +1,14 @@
 import { Button, Grid, GridItem, Input, Stack, Text, Textarea } from '@chakra-ui/react';
 import { zodResolver } from '@hookform/resolvers/zod';
 import type { Recording } from '@overtally/contracts';
-import { useForm } from 'react-hook-form';
+import { Controller, useForm } from 'react-hook-form';
 import { FormField } from '../../../../components/form-field.js';
 import { FormProblem } from '../../../../components/form-problem.js';
 import { Modal } from '../../../../components/modal.js';
 import { notifyDone } from '../../../../components/notify.js';
 import { setFormProblem } from '../../../../lib/form-errors.js';
+import { BenchFields } from '../../bench/bench-fields.js';
+import type { BenchValues } from '../../bench/bench-values.js';
 import { useRecordingChanges } from '../../hooks/use-recording-changes.js';
 import { ChannelFields } from './channel-fields.js';
 import { editSchema, toEditValues, toUpdate, type EditValues } from './edit-values.js';
@@ -74,6 +76,19 @@ function EditForm({ recording, onClose }: Omit<EditDialogProps, 'open'>) {
             </FormField>
           </GridItem>
         </Grid>
+        <Controller
+          control={form.control}
+          name="bench"
+          render={({ field }) => (
+            <BenchFields
+              projectId={recording.projectId}
+              recording={recording}
+              values={field.value}
+              errors={messagesOf(errors.bench)}
+              onChange={field.onChange}
+            />
+          )}
+        />
         {recording.channels.length > 0 ? (
           <Stack gap="3">
             <Text color="inkSoft" fontSize="13px">
@@ -94,4 +109,10 @@ function EditForm({ recording, onClose }: Omit<EditDialogProps, 'open'>) {
       </Stack>
     </form>
   );
+}
+
+function messagesOf(
+  errors: Partial<Record<keyof BenchValues, { message?: string }>> | undefined,
+): Partial<Record<keyof BenchValues, string | undefined>> {
+  return Object.fromEntries(Object.entries(errors ?? {}).map(([key, error]) => [key, error?.message]));
 }

@@ -9,6 +9,10 @@ const recording = {
   instrument: '',
   remark: '',
   capturedAt: '2026-11-26T13:20:00.250Z',
+  equipment: null,
+  operatingMode: null,
+  chain: null,
+  conditions: {},
   channels: [
     { index: 0, name: 'u', quantity: 'voltage', unit: 'V', gain: 1, offset: 0 },
     { index: 1, name: 'i', quantity: 'current', unit: 'A', gain: 10, offset: 0 },
@@ -26,6 +30,17 @@ describe('editing a recording', () => {
     const values = toEditValues(recording);
     values.channels[1] = { ...values.channels[1]!, gain: '12,5' };
     expect(toUpdate(values, recording).channels).toEqual([{ index: 1, gain: 12.5 }]);
+  });
+
+  it('leaves the text of the equipment to the server when other equipment is chosen, unless it was changed', () => {
+    const values = toEditValues(recording);
+    const other = { ...values, bench: { ...values.bench, equipmentId: 'e1' } };
+    expect(toUpdate(other, recording)).not.toHaveProperty('eut');
+    expect(toUpdate({ ...other, eut: 'Sample 3' }, recording)).toMatchObject({
+      equipmentId: 'e1',
+      eut: 'Sample 3',
+    });
+    expect(toUpdate(values, recording)).toMatchObject({ equipmentId: null, eut: 'DM-4' });
   });
 
   it('turns the local time of the field into UTC, and an empty one into none', () => {

@@ -1,5 +1,6 @@
 import { quantitySchema, type Channel, type Recording, type UpdateRecording } from '@overtally/contracts';
 import { z } from 'zod';
+import { benchSchema, fromBench, toBench } from '../../bench/bench-values.js';
 
 const decimal = (text: string) => (text.trim() === '' ? Number.NaN : Number(text.trim().replace(',', '.')));
 const number = (message: string) => z.string().refine((text) => Number.isFinite(decimal(text)), { message });
@@ -12,6 +13,7 @@ export const editSchema = z.object({
   instrument: z.string().trim().max(200, 'Use at most 200 characters'),
   capturedAt: z.string(),
   remark: z.string().trim().max(2000, 'Use at most 2000 characters'),
+  bench: benchSchema,
   channels: z.array(
     z.object({
       index: z.number(),
@@ -42,6 +44,7 @@ export function toEditValues(recording: Recording): EditValues {
   return {
     ...{ name, eut, measuringChain, instrument, remark },
     capturedAt: toLocalField(capturedAt),
+    bench: toBench(recording),
     channels: channels.map((channel) => ({
       index: channel.index,
       name: channel.name,
@@ -65,7 +68,10 @@ function channelChange(values: EditValues['channels'][number], before: Channel):
 
 /** What to send: bench data as it stands, and of the channels only what was changed. */
 export function toUpdate(values: EditValues, recording: Recording): UpdateRecording {
-  const { channels, capturedAt, ...bench } = values;
+  const { channels, capturedAt, bench, eut, ...texts } = values;
+  const said = fromBench(bench);
+  // The line of other equipment takes the place of a text that was left alone.
+  const keepsEut = eut !== recording.eut || said.equipmentId === (recording.equipment?.id ?? null);
   const changes = channels.flatMap((channel) => {
     const before = recording.channels.find(({ index }) => index === channel.index);
     const change = before && channelChange(channel, before);
@@ -73,7 +79,9 @@ export function toUpdate(values: EditValues, recording: Recording): UpdateRecord
   });
   const untouched = capturedAt === toLocalField(recording.capturedAt);
   return {
-    ...bench,
+    ...texts,
+    ...said,
+    ...(keepsEut ? { eut } : {}),
     // A field of whole seconds must not cut the fraction off a moment that was left alone.
     ...(untouched ? {} : { capturedAt: capturedAt ? new Date(capturedAt).toISOString() : null }),
     ...(changes.length > 0 ? { channels: changes } : {}),
