@@ -1,6 +1,8 @@
 import type { ChannelAnalysis } from '@overtally/contracts';
 import { describe, expect, it } from 'vitest';
+import { supplyVerdict } from '../src/supply-verdict.js';
 import { checkTestSupply } from '../src/test-supply.js';
+import { classA, classD, en50160 } from './measured.js';
 
 /** A voltage channel of 230 V and 50 Hz with harmonics in percent of the fundamental. */
 function supply(percents: Record<number, number>, rest: object = {}): ChannelAnalysis {
@@ -68,5 +70,48 @@ describe('test supply of IEC 61000-3-2', () => {
     channel.harmonics = channel.harmonics.slice(0, 20);
     const open = checkTestSupply(channel, nominal).filter(({ result }) => result === 'not-decidable');
     expect(open.map(({ name }) => name)).toEqual(Array.from({ length: 20 }, (_, i) => `harmonic ${i + 21}`));
+  });
+});
+
+// IEC 61000-3-2, A.2; usual voltages of IEC 60038:2009, table 1.
+describe('the supply of a verdict', () => {
+  const ofClassA = (channel: ChannelAnalysis, stated: Parameters<typeof supplyVerdict>[2] = {}) =>
+    supplyVerdict(classA, { ...channel, index: 1, name: 'u' }, stated);
+
+  it('takes the nearest usual nominal values and says so, or those that were stated', () => {
+    const assumed = ofClassA(supply({}));
+    expect(assumed).toMatchObject({ nominalV: 230, frequencyHz: 50, result: 'pass', channelName: 'u' });
+    expect(assumed?.assumption).toMatch(/230 V, the usual one nearest .*; a nominal frequency of 50 Hz/);
+    const stated = ofClassA(supply({}), { nominalV: 240, frequencyHz: 50 });
+    expect(stated).toMatchObject({ nominalV: 240, assumption: null, result: 'fail' });
+    expect(stated?.summary).toMatch(/misses .*: voltage\. .*this result holds for the supply as it was/);
+  });
+
+  it('reads a voltage between lines as that to neutral where the channel is so', () => {
+    // 400 V / sqrt 3 = 230.94 V.
+    const verdict = ofClassA(supply({}), { nominalV: 400, frequencyHz: 50 });
+    expect(verdict?.nominalV).toBeCloseTo(230.94, 2);
+    expect(verdict).toMatchObject({ result: 'pass' });
+    expect(verdict?.assumption).toMatch(/400 V as the voltage between lines, 230.9 V to neutral/);
+  });
+
+  it('asks for the peak only where the class does, and for nothing of other standards', () => {
+    const flat = supply({}, { crestFactor: 1.3 });
+    expect(ofClassA(flat)?.result).toBe('pass');
+    expect(supplyVerdict(classD, { ...flat, index: 1, name: 'u' }, {})).toMatchObject({
+      result: 'fail',
+      summary: expect.stringMatching(/: peak over rms\./),
+    });
+    expect(supplyVerdict(en50160, flat, {})).toBeNull();
+    expect(ofClassA(supply({}, { fundamental: null }))).toBeNull();
+  });
+
+  it('is open where an order was not analysed', () => {
+    const short = supply({});
+    short.harmonics = short.harmonics.slice(0, 30);
+    expect(ofClassA(short)).toMatchObject({ result: 'not-decidable' });
+    expect(ofClassA(short)?.summary).toMatch(
+      /is open: harmonic 31, harmonic 32, harmonic 33 and 7 more not measured/,
+    );
   });
 });
