@@ -77,7 +77,10 @@ export class RecordingsRepository {
     await tx.insert(channels).values(rows);
   }
 
+  /** Deletes a recording with all that hangs on it. Its verdicts go first, since their repeats hold on to analyses. */
   async delete(tx: Tx, id: string): Promise<void> {
+    const own = tx.select({ id: analyses.id }).from(analyses).where(eq(analyses.recordingId, id));
+    await tx.delete(verdicts).where(inArray(verdicts.analysisId, own));
     await tx.delete(recordings).where(eq(recordings.id, id));
   }
 
