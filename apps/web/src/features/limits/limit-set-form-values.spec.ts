@@ -119,7 +119,7 @@ describe('limits pasted or dropped', () => {
     ['commas between columns', '3,2.30,A\n5,1.14,A'],
   ])('understands %s', (_, text) => {
     const read = tableFromText(text);
-    expect(read.table?.rows).toEqual([row('3', '2.3'), row('5', '1.14')]);
+    expect(read.table?.rows).toEqual([row('3', '2.30'), row('5', '1.14')]);
     expect(read).toMatchObject({ count: 2, reading: { basis: 'absolute', unit: 'A' } });
   });
 

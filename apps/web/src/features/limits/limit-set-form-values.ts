@@ -11,6 +11,7 @@ import {
   cloneLimitSet,
   commonReading,
   limitRows,
+  limitTableLines,
   limitTableRows,
   parseLimitRows,
   parseLimitTable,
@@ -156,11 +157,13 @@ export function limitSetFrom(values: LimitSetFormValues, base?: LimitSet): Creat
 }
 
 /** Rows of a table as they are typed; a unit that the set has is left out. */
-function tableOf(set: Pick<LimitSet, 'orders' | 'totals'> & Reading, label = ''): TableValues {
-  const ownUnit = unitCell(set);
+const tableOf = (set: Pick<LimitSet, 'orders' | 'totals'> & Reading, label = ''): TableValues =>
+  tableOfRows(limitTableRows(set), unitCell(set), label);
+
+function tableOfRows(rows: readonly (readonly string[])[], ownUnit: string, label = ''): TableValues {
   const table: TableValues = { label, rows: [], totals: [] };
-  for (const [first, limit, unit, last] of limitTableRows(set)) {
-    const name = shape.totals.unwrap().element.shape.name.safeParse(first);
+  for (const [first = '', limit = '', unit = '', last = ''] of rows) {
+    const name = shape.totals.unwrap().element.shape.name.safeParse(first.toUpperCase());
     if (name.success) table.totals.push({ name: name.data, limit, unit, maxOrder: last });
     else table.rows.push({ orders: first, limit, unit: unit === ownUnit ? '' : unit, cap: last });
   }
@@ -191,9 +194,11 @@ export function tableFromText(text: string): ReadText {
   const read = parseLimitTable(text);
   if (read.problems !== null) return { table: null, problems: read.problems };
   const reading = commonReading(read.orders);
-  const own = reading ? readByOwn(read, reading) : read;
-  const set = { ...(reading ?? readingOf({})), orders: own.orders, totals: own.totals };
-  return { table: tableOf(set), reading, count: read.orders.length, problems: null };
+  const rows = limitTableLines(text).map(({ cells: [first, limit, unit, last] }) =>
+    [first, limit, unit, last].map((cell) => cell?.text ?? ''),
+  );
+  const ownUnit = reading ? unitCell(reading) : '';
+  return { table: tableOfRows(rows, ownUnit), reading, count: read.orders.length, problems: null };
 }
 
 export const emptyRow: LimitRowValues = { orders: '', limit: '', unit: '', cap: '' };
