@@ -22,7 +22,7 @@ export function RepeatsView({ repeats }: { repeats: Verdict['repeats'] }) {
               <Table.Row key={analysisId} verticalAlign="top">
                 <Table.Cell>{index + 1}</Table.Cell>
                 <Table.Cell whiteSpace="nowrap">{recordingNumber}</Table.Cell>
-                <Table.Cell>
+                <Table.Cell whiteSpace="normal">
                   <ResultWords result={result} />
                   <Text color="inkSoft" fontSize="xs">
                     {reason}

@@ -14,6 +14,10 @@ const words: Record<Check['result'], string> = {
 };
 const tones = { pass: 'within', fail: 'over', 'not-decidable': 'near' } as const;
 
+/** Percentages to a hundredth of the strictest demand, 0.1 %. */
+const measured = ({ value, unit }: Check): string =>
+  value !== null && unit === '%' ? `${value.toFixed(3)} %` : formatSi(value, unit);
+
 function allowed({ from, upTo, unit }: Check): string {
   const shown = (value: number) => formatSi(value, unit, { trim: true });
   if (from !== null && upTo !== null) return `${shown(from)} to ${shown(upTo)}`;
@@ -28,7 +32,7 @@ const columns: TableColumn<Check>[] = [
     fileHeader: 'Measured',
     align: 'right',
     value: (row) => row.value,
-    show: (row) => formatSi(row.value, row.unit),
+    show: measured,
   },
   {
     key: 'allowed',
@@ -63,7 +67,7 @@ export function SupplyView({ supply, fileName }: { supply: SupplyVerdict; fileNa
         {formatSi(frequencyHz, 'Hz', { trim: true })}.{assumption ? ` ${assumption}.` : ''} The result above
         is that of the currents as measured.
       </Text>
-      <Button size="xs" variant="ghost" px="0" aria-expanded={open} onClick={() => setOpen(!open)}>
+      <Button size="xs" variant="plain" color="act" px="0" aria-expanded={open} onClick={() => setOpen(!open)}>
         {open ? 'Hide the checks of the supply' : `Show the ${checks.length} checks of the supply`}
       </Button>
       {open ? (

@@ -1,17 +1,24 @@
-import type { LimitSet } from '@overtally/contracts';
+import type { LimitEntry, LimitSet } from '@overtally/contracts';
 import { amplitudeAxis, amplitudeRange, type Scale } from '../../components/charts/amplitude-axis.js';
 import { ceilingTraces } from '../../components/charts/limit-ceiling.js';
 import type { PlotLayout } from '../../components/plot-layout.js';
 import type { PlotTrace } from '../../components/plot.js';
 import { formatSi } from '../../lib/format.js';
 import type { Palette } from '../../lib/theme/palette.js';
+import { unitOfEntry } from './limit-words.js';
+
+/** The limits in the set's own unit; others cannot stand on the same axis. */
+export const drawnOrders = (set: LimitSet): LimitEntry[] =>
+  set.orders.filter((entry) => unitOfEntry(entry, set) === unitOfEntry({}, set));
 
 /** The limits of a set as a ceiling over the orders, in the set's own unit. */
 export function limitChart(
-  { orders, unit }: Pick<LimitSet, 'orders' | 'unit'>,
+  set: LimitSet,
   scale: Scale,
   palette: Palette,
 ): { traces: PlotTrace[]; layout: PlotLayout } {
+  const { unit } = set;
+  const orders = drawnOrders(set);
   const limits = orders.map(({ limit }) => limit);
   const range = amplitudeRange([], limits, scale);
   const last = orders.reduce((highest, { order }) => Math.max(highest, order), 2);

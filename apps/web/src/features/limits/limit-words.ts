@@ -1,5 +1,5 @@
-import type { LimitBasis, LimitSet, Quantity, RowChoice } from '@overtally/contracts';
-import { shownLimits } from '@overtally/limits';
+import type { LimitBasis, LimitEntry, LimitSet, Quantity, RowChoice } from '@overtally/contracts';
+import { shownLimits, unitCell } from '@overtally/limits';
 
 export const quantityWords: Record<Quantity, string> = {
   voltage: 'Voltage',
@@ -35,6 +35,16 @@ const evidenceOfPublished: Readonly<Record<string, string>> = {
 
 /** Values of published sets come from print or from memory; custom sets say it in a sentence of their own. */
 export const evidenceWords = (evidence: string): string => evidenceOfPublished[evidence] ?? evidence;
+
+/** Unit of one limit of a set: its own, or what it refers to, as `% IL`. */
+export function unitOfEntry(
+  entry: Pick<LimitEntry, 'basis' | 'unit' | 'referenceParameter'>,
+  set: Pick<LimitSet, 'basis' | 'unit' | 'referenceParameter'>,
+): string {
+  if (entry.basis === undefined) return entry.unit ?? set.unit;
+  const { basis, unit = set.unit, referenceParameter = null } = entry;
+  return unitCell({ basis, unit, referenceParameter }) || unit;
+}
 
 /** What the rows of a set are chosen by. */
 export const rowChoiceWords: Record<RowChoice, string> = {

@@ -36,7 +36,9 @@ interface LimitSetFormProps {
   onCancel: () => void;
 }
 
-const sentence = (text: string): string => `${text.charAt(0).toUpperCase()}${text.slice(1)}`;
+/** A unit keeps its letters: mA is no MA. */
+const sentence = (text: string): string =>
+  text.startsWith('mA') ? text : `${text.charAt(0).toUpperCase()}${text.slice(1)}`;
 const quantityOptions = quantitySchema.options.map((value) => ({ value, label: quantityWords[value] }));
 const basisOptions = limitBasisSchema.options.map((value) => ({
   value,

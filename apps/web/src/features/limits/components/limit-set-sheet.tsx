@@ -15,7 +15,7 @@ import { parameterWords } from '../../../components/verdict/verdict-words.js';
 import { formatSi } from '../../../lib/format.js';
 import { limitSetName } from '../../../lib/limit-set-name.js';
 import { usePalette } from '../../../lib/theme/use-palette.js';
-import { limitChart } from '../limit-chart.js';
+import { drawnOrders, limitChart } from '../limit-chart.js';
 import {
   basisWords,
   confidenceWords,
@@ -23,6 +23,7 @@ import {
   orderRange,
   quantityWords,
   rowChoiceWords,
+  unitOfEntry,
 } from '../limit-words.js';
 
 /** Everything a limit set says: its values as a ceiling and as numbers, and where they come from. */
@@ -66,6 +67,7 @@ function Ceiling({ set }: { set: LimitSet }) {
   const [row, setRow] = useState(0);
   const shown = rows[row]?.set ?? set;
   const { traces, layout } = limitChart(shown, scale, palette);
+  const undrawn = shown.orders.length - drawnOrders(shown).length;
   return (
     <FigureFrame
       title="Limit by order"
@@ -103,6 +105,11 @@ function Ceiling({ set }: { set: LimitSet }) {
         </Box>
       ) : null}
       <Totals set={shown} />
+      {undrawn > 0 ? (
+        <Text fontSize="13px" color="inkSoft" mb="2">
+          {undrawn === 1 ? '1 limit' : `${undrawn} limits`} in another unit: see the table.
+        </Text>
+      ) : null}
       <Plot label={`Limits of ${limitSetName(set)} by order`} traces={traces} layout={layout} height={380} />
     </FigureFrame>
   );
@@ -127,7 +134,7 @@ function columns(set: LimitSet): TableColumn<LimitEntry>[] {
       fileHeader: `Limit (${set.unit})`,
       align: 'right',
       value: (row) => row.limit,
-      show: (row) => shownLimit(row, set.unit),
+      show: (row) => shownLimit(row, set),
     },
     ...(set.orders.some((row) => row.formula !== undefined) ? [formulaColumn] : []),
     ...(set.orders.some((row) => row.capA !== undefined) ? caps : []),
@@ -143,8 +150,9 @@ const formulaColumn: TableColumn<LimitEntry> = {
 };
 
 /** A limit in its own unit; one that is multiplied by a parameter says by which. */
-function shownLimit({ limit, unit, timesParameter }: LimitEntry, unitOfSet: string): string {
-  const amount = formatSi(limit, unit ?? unitOfSet, { trim: true });
+function shownLimit(entry: LimitEntry, set: LimitSet): string {
+  const { limit, timesParameter } = entry;
+  const amount = formatSi(limit, unitOfEntry(entry, set), { trim: true });
   return timesParameter ? `${amount} × ${parameterWords[timesParameter].label.toLowerCase()}` : amount;
 }
 

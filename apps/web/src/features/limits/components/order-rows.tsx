@@ -39,7 +39,7 @@ export function OrderRows({ form, table }: { form: LimitSetForm; table: number }
     >
       <Stack direction={{ base: 'column', xl: 'row' }} gap="8" align="flex-start">
         <Stack gap="2" align="flex-start" w="full" maxW="2xl">
-          <Table.ScrollArea w="full">
+          <Table.ScrollArea w="full" position="relative">
             <Table.Root size="sm" aria-label="Limits by order">
               <Table.Header>
                 <Table.Row>

@@ -57,6 +57,7 @@ export function TotalRows({ form, table }: { form: LimitSetForm; table: number }
               size="sm"
               variant="ghost"
               mt={{ sm: '6' }}
+              alignSelf="flex-start"
               aria-label={`Remove total ${index + 1}`}
               onClick={() => rows.remove(index)}
             />
