@@ -67,7 +67,14 @@ export function SupplyView({ supply, fileName }: { supply: SupplyVerdict; fileNa
         {formatSi(frequencyHz, 'Hz', { trim: true })}.{assumption ? ` ${assumption}.` : ''} The result above
         is that of the currents as measured.
       </Text>
-      <Button size="xs" variant="plain" color="act" px="0" aria-expanded={open} onClick={() => setOpen(!open)}>
+      <Button
+        size="xs"
+        variant="plain"
+        color="act"
+        px="0"
+        aria-expanded={open}
+        onClick={() => setOpen(!open)}
+      >
         {open ? 'Hide the checks of the supply' : `Show the ${checks.length} checks of the supply`}
       </Button>
       {open ? (
