@@ -10,6 +10,7 @@ import { setTimeout as wait } from 'node:timers/promises';
 import { RecordingsService } from '../recordings/recordings.service.js';
 import { Storage } from '../storage/storage.js';
 import { DemoAccounts, type PendingCapture } from './demo-accounts.js';
+import { DemoBench } from './demo-bench.js';
 import { DemoJudgements } from './demo-judgements.js';
 
 const askAgainMs = 1_000;
@@ -24,6 +25,7 @@ export class DemoService implements OnApplicationBootstrap, BeforeApplicationShu
   constructor(
     private readonly accounts: DemoAccounts,
     private readonly judgements: DemoJudgements,
+    private readonly bench: DemoBench,
     private readonly recordings: RecordingsService,
     private readonly storage: Storage,
   ) {}
@@ -42,7 +44,9 @@ export class DemoService implements OnApplicationBootstrap, BeforeApplicationShu
   }
 
   private async fill(): Promise<void> {
-    for (const pending of await this.accounts.pending()) {
+    const captures = await this.accounts.pending();
+    if (captures.length > 0) await this.bench.nameLaboratory();
+    for (const pending of captures) {
       if (this.stopped) return;
       await this.upload(pending);
     }
@@ -50,8 +54,10 @@ export class DemoService implements OnApplicationBootstrap, BeforeApplicationShu
   }
 
   /** The same way as over HTTP: streamed into storage, then read and analysed by the queue. */
-  private async upload({ projectId, uploadedById, capture }: PendingCapture): Promise<void> {
-    const { fileName, ...fields } = capture;
+  private async upload(pending: PendingCapture): Promise<void> {
+    const { projectId, uploadedById, capture } = pending;
+    const { fileName, ...words } = capture;
+    const fields = { ...words, ...(await this.bench.saidOf(pending)) };
     const staged = await this.storage.stage(createReadStream(demoCapturePath(fileName)));
     try {
       await this.recordings.upload({ projectId, uploadedById, fileName, staged, fields });
