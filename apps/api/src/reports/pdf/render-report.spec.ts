@@ -1,6 +1,6 @@
 import type { Report } from '@overtally/contracts';
-import { execFileSync } from 'node:child_process';
 import { describe, expect, it } from 'vitest';
+import { pagesOfPdf } from '../../../test/support/pdf-reading.js';
 import {
   channelWith,
   dimmerChannel,
@@ -12,12 +12,7 @@ import { renderReportPdf as render } from './render-report.js';
 
 const renderReportPdf = (report: Report) => render(report, { checkUrl: null, between: () => undefined });
 
-/** Pages as poppler reads them, spaces made plain. */
-async function pagesOf(report: Report): Promise<string[]> {
-  const input = await renderReportPdf(report);
-  const text = execFileSync('pdftotext', ['-layout', '-', '-'], { input, encoding: 'utf8' });
-  return text.replaceAll('\u00a0', ' ').split('\f').slice(0, -1);
-}
+const pagesOf = async (report: Report): Promise<string[]> => pagesOfPdf(await renderReportPdf(report));
 
 const headOfOrders = /Order +Value( +\(k = 2\))? +mental +1\.5 s +Limit +Margin +limit +Result/;
 
