@@ -43,6 +43,7 @@ function fullSection(): ReportSection {
       ...section.verdict,
       supply: {
         ...{ channel: 1, channelName: 'Supply voltage', nominalV: 230, frequencyHz: 50, result: 'fail' },
+        ...{ assumption: 'Taken as 230 V, since none was stated', summary: 'Order 3 is too high' },
         checks: [{ name: 'Harmonic order 3', unit: '%', value: 1.21, from: null, upTo: 0.9, result: 'fail' }],
       },
       repeats: [1, 2].map((repeat) => ({
@@ -125,7 +126,7 @@ describe('what a test report must state', () => {
     ['traceability', ['K-26-0117', '3 Feb 2026', '3 Nov 2026', 'OVERDUE', '0.12 %, k = 2']],
     ['overdue calibration', ['Found within its limits as received in December.']],
     ['amendment', ['replaces revision 0 of HR-0001', 'The operating mode was named wrongly.']],
-    ['supply', ['Supply voltage does not meet', '1.210 %', '0.9000 %', 'not met']],
+    ['supply', ['Supply voltage does not meet', '1.210 %', '0.9000 %', 'not met', 'Taken as 230 V']],
     ['repeats', ['R-0201', 'R-0202', 'do not agree within the repeatability', '6.25 %', '4.42 %']],
   ])('%s', (_item, expected) => {
     for (const part of expected) expect(words).toContain(part);

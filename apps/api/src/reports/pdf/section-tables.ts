@@ -114,6 +114,7 @@ export function drawSupply(sheet: Sheet, { verdict: { supply } }: ReportSection)
     `${channelName} ${supplyResults[supply.result]} what the standard asks of a supply of ${formatGiven(nominalV)} V, ${formatGiven(frequencyHz)} Hz.`,
     tinted(text.strong, resultColour(supply.result)),
   );
+  if (supply.assumption) sheet.paragraph(`${supply.assumption.replace(/\.$/, '')}.`, text.soft);
   sheet.y += 4;
   const bound = (value: number | null, unit: string): string =>
     value === null ? '–' : formatQuantity(value, unit);
