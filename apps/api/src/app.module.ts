@@ -29,6 +29,7 @@ import { UploadingModule } from './recordings/uploading/uploading.module.js';
 import { ReportChecksModule } from './report-checks/report-checks.module.js';
 import { ReportsModule } from './reports/reports.module.js';
 import { StorageModule } from './storage/storage.module.js';
+import { StudiesModule } from './studies/studies.module.js';
 import { UsersModule } from './users/users.module.js';
 import { WorkerModule } from './worker/worker.module.js';
 
@@ -59,6 +60,7 @@ export class AppModule {
         AnalysesModule,
         NotesModule,
         LimitsModule,
+        StudiesModule,
         ReportsModule,
         ReportChecksModule,
         ...(config.worker === 'embedded' ? [WorkerModule] : []),

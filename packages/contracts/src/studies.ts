@@ -287,6 +287,14 @@ export const studyQuerySchema = pageQuerySchema.extend({
   q: z.string().trim().max(200).optional().describe('Looks in number and name'),
 });
 export type StudyQuery = z.infer<typeof studyQuerySchema>;
+export const studyVersionQuerySchema = z.object({
+  version: z.coerce.number().int().min(1).optional().describe('The newest when absent'),
+});
+export const studyComparisonQuerySchema = studyVersionQuerySchema.extend({
+  analysisId: idSchema.describe('An analysis of a recording of the same project'),
+  channel: z.coerce.number().int().min(0).max(maxChannelIndex),
+});
+export type StudyComparisonQuery = z.infer<typeof studyComparisonQuerySchema>;
 
 /** Predicted against measured, order by order. */
 export const studyComparisonSchema = z.object({
@@ -307,5 +315,7 @@ export const studyComparisonSchema = z.object({
   ),
   predictedThdF: z.number().nullable(),
   measuredThdF: z.number().nullable(),
+  frequencyTolerancePercent: z.number().describe('Within which both count as the same frequency'),
+  cautions: z.array(z.string()).describe('What stands against comparing the two, in words'),
 });
 export type StudyComparison = z.infer<typeof studyComparisonSchema>;

@@ -29,3 +29,4 @@ export {
 } from './custom/parse-limit-table.js';
 export { checkTestSupply, type NominalSupply, type SupplyCheck } from './test-supply.js';
 export { supplyVerdict, type StatedSupply } from './supply-verdict.js';
+export { unitRatio } from './units.js';

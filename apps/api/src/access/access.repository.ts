@@ -7,7 +7,7 @@ import { DATABASE } from '../database/database.tokens.js';
 import type { ResourceKind } from './require-permission.decorator.js';
 
 const { accessKeys, users, members, projects, readingRules, recordings, analyses, notes } = schema;
-const { equipment, verdicts, reports, limitSets, invitations, mails } = schema;
+const { equipment, verdicts, reports, limitSets, studies, invitations, mails } = schema;
 
 const person = { id: users.id, email: users.email, name: users.name, isAdministrator: users.isAdministrator };
 
@@ -106,6 +106,8 @@ export class AccessRepository {
           .innerJoin(analyses, eq(analyses.id, verdicts.analysisId))
           .innerJoin(recordings, eq(recordings.id, analyses.recordingId))
           .where(eq(verdicts.id, id));
+      case 'study':
+        return this.database.select({ projectId: studies.projectId }).from(studies).where(eq(studies.id, id));
       case 'report':
         return this.database.select({ projectId: reports.projectId }).from(reports).where(eq(reports.id, id));
       case 'invitation':

@@ -15,6 +15,7 @@ export type ResourceKind =
   | 'analysis'
   | 'note'
   | 'verdict'
+  | 'study'
   | 'report'
   | 'limit-set'
   | 'invitation'

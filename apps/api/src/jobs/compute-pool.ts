@@ -39,6 +39,8 @@ interface Pools {
   previews: Piscina;
   /** A thread that draws reports, one at a time, so that neither a preview nor memory waits for a long one. */
   reports: Piscina;
+  /** A thread for studies, whose draws take seconds. */
+  studies: Piscina;
 }
 
 /** Runs computations in threads of their own, so that requests are answered meanwhile. */
@@ -66,9 +68,8 @@ export class ComputePool implements OnApplicationShutdown {
 
   async onApplicationShutdown(): Promise<void> {
     if (this.pools === undefined) return;
-    const { workers, coordinators, previews, reports } = await this.pools;
-    const pools = [coordinators, workers, previews, reports];
-    await Promise.all(pools.map((pool) => pool.destroy()));
+    const { coordinators, ...others } = await this.pools;
+    await Promise.all([coordinators, ...Object.values(others)].map((pool: Piscina) => pool.destroy()));
   }
 
   /** Runs a task, and what it hands on, under one flag to stop. */
@@ -133,12 +134,14 @@ export class ComputePool implements OnApplicationShutdown {
       coordinators: make(jobsAtOnce, true),
       previews: make(1, false),
       reports: make(1, false),
+      studies: make(1, false),
     };
   }
 }
 
-function poolFor(task: ComputeTask, { workers, coordinators, previews, reports }: Pools): Piscina {
+function poolFor(task: ComputeTask, { workers, coordinators, previews, reports, studies }: Pools): Piscina {
   if (task === 'preview') return previews;
   if (task === 'report') return reports;
+  if (task === 'study') return studies;
   return task === 'analyse' ? coordinators : workers;
 }

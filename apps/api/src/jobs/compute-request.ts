@@ -12,10 +12,10 @@ export interface ComputeEnvironment {
 }
 
 /**
- * `preview` and `report` are short and somebody waits for them. `analyse` hands most of its work on as `analysis-part` and
+ * `preview`, `study` and `report` are short and somebody waits for them. `analyse` hands most of its work on as `analysis-part` and
  * waits for it; the others compute alone and wait for nothing but storage.
  */
-export type ComputeTask = 'preview' | 'report' | 'read' | 'analyse' | 'analysis-part';
+export type ComputeTask = 'preview' | 'study' | 'report' | 'read' | 'analyse' | 'analysis-part';
 
 /** One computation, as sent to a thread. */
 export interface ComputeRequest {

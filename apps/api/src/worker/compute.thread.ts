@@ -15,6 +15,7 @@ import { toPlainError } from '../jobs/plain-error.js';
 import { previewTask, type PreviewTaskInput } from '../recordings/previewing/preview-task.js';
 import { readTask, type ReadTaskInput } from '../recordings/reading/read-task.js';
 import { reportTask, type ReportTaskInput } from '../reports/rendering/report-task.js';
+import { studyTask, type StudyTaskInput } from '../studies/computing/study-task.js';
 import { openStorage } from '../storage/open-storage.js';
 import { lowerThreadPriority } from './lower-priority.js';
 
@@ -47,6 +48,8 @@ function perform({ task, input }: ComputeRequest, context: ComputeContext): Prom
   switch (task) {
     case 'preview':
       return previewTask(input as PreviewTaskInput);
+    case 'study':
+      return studyTask(input as StudyTaskInput, context);
     case 'report':
       return reportTask(input as ReportTaskInput, context);
     case 'read':

@@ -11,6 +11,7 @@ import {
   newReadingRule,
   newRecording,
   newReport,
+  newStudy,
   newVerdict,
 } from './project-contents.js';
 import type { TestApp } from './test-app.js';
@@ -35,6 +36,7 @@ export async function makeExamples({ database, project }: TestApp, userId: strin
     analysis: analysis.id,
     note: (await newNote(database, analysis.id, owner)).id,
     verdict: verdict.id,
+    study: (await newStudy(database, owner)).id,
     report: (await newReport(database, verdict.id, owner)).id,
     'limit-set': (await newLimitSet(database, owner)).id,
     invitation: (await newInvitation(database, owner)).id,

@@ -1,4 +1,4 @@
-import type { LimitSet } from '@overtally/contracts';
+import { studyDefinitionSchema, type LimitSet } from '@overtally/contracts';
 import { schema, type Database } from '@overtally/db';
 import { randomUUID } from 'node:crypto';
 import { made } from './factories.js';
@@ -173,4 +173,33 @@ export async function newMail(database: Database, { projectId }: Pick<Owner, 'pr
     })
     .returning();
   return made(row);
+}
+
+/** A study of a sine with one version and no stages. */
+export async function newStudy(database: Database, { projectId, userId }: Owner) {
+  lastNumber += 1;
+  const [row] = await database
+    .insert(schema.studies)
+    .values({ projectId, number: 100_000 + lastNumber, name: 'Filter' })
+    .returning();
+  const study = made(row);
+  const series = { frequencyHz: 50, dc: 0, components: [{ order: 1, rms: 1, phaseDeg: -90 }] };
+  const figures = { rms: 1, fundamentalRms: 1, thdF: 0, thdR: 0, peak: Math.SQRT2, crestFactor: Math.SQRT2 };
+  const order = { order: 1, frequencyHz: 50, inputRms: 1, outputRms: 1, gain: 1 };
+  await database.insert(schema.studyVersions).values({
+    ...{ studyId: study.id, version: 1, authorId: userId, series },
+    definition: studyDefinitionSchema.parse({
+      input: { kind: 'harmonics', series },
+      ...{ inputQuantity: 'current', inputUnit: 'A', outputQuantity: 'current', outputUnit: 'A' },
+      ...{ stages: [], judgement: null },
+    }),
+    result: {
+      engineVersion: '0.2.0',
+      stability: { verdict: 'stable', reason: 'Every pole has a negative real part.', poles: [] },
+      ...{ input: figures, output: figures, verdictBefore: null, verdictAfter: null, spread: null },
+      orders: [{ ...order, inputPhaseDeg: -90, outputPhaseDeg: -90 }],
+      warnings: [],
+    },
+  });
+  return study;
 }

@@ -44,13 +44,14 @@ export function checkValues(
   if (unknown !== undefined) {
     throw new AnalysisInputError(
       `${where} has no value "${unknown}"; it takes ${parameters.map(({ name }) => name).join(', ')}.`,
+      unknown,
     );
   }
   const checked = new Map<string, number | undefined>();
   for (const parameter of parameters) {
     const value = values[parameter.name] ?? parameter.default;
     if (value === undefined) {
-      throw new AnalysisInputError(`${where} lacks ${parameter.name}: ${parameter.meaning}.`);
+      throw new AnalysisInputError(`${where} lacks ${parameter.name}: ${parameter.meaning}.`, parameter.name);
     }
     if (value !== null) checkRange(parameter, value, where);
     checked.set(parameter.name, value ?? undefined);
@@ -73,6 +74,7 @@ function checkRange({ name, unit, range }: CircuitParameter, value: number, wher
   const wanted = { positive: 'greater than 0', 'not-negative': '0 or more', any: 'a finite number' }[range];
   throw new AnalysisInputError(
     `${where}: ${name} is ${value}${unit === '' ? '' : ` ${unit}`}; it must be ${wanted}.`,
+    name,
   );
 }
 
