@@ -33,8 +33,9 @@ async function issuedDemoReport(): Promise<Report> {
   });
   expect(answer.status()).toBe(200);
   pdf = await (await manager.request.get(`/api/reports/${draft}/pdf`)).body();
+  const issued = reportSchema.parse(await answer.json());
   await Promise.all([analyst.close(), manager.close()]);
-  return reportSchema.parse(await answer.json());
+  return issued;
 }
 
 async function draftOf({ request }: BrowserContext, projectId: string): Promise<string> {

@@ -59,6 +59,50 @@ describe('report', () => {
     );
   });
 
+  it('says why a manager cannot issue what that manager submitted', async () => {
+    const own = { id: sampleAccount().id, name: sampleAccount().name };
+    mockApi(answers('manager', sampleReport('in-review', { submittedBy: own })));
+    renderRoute(address);
+    const issue = await screen.findByRole('button', { name: 'Issue', description: /another manager/ });
+    expect(issue).toHaveProperty('disabled', true);
+    expect(buttons()).toEqual(expect.arrayContaining(['Withdraw', 'Return']));
+  });
+
+  it('shows what must be mended, and asks for the reason of overdue calibration', async () => {
+    const by = { id: sampleAccount().id, name: 'Maren Lund' };
+    const returned = { by, at: '2026-11-27T10:00:00Z', comment: 'Name the probe' };
+    mockApi(answers('analyst', sampleReport('draft', { returned })));
+    renderRoute(address);
+    expect(await screen.findByRole('region', { name: 'Returned for mending' })).toHaveProperty(
+      'textContent',
+      expect.stringMatching(/Maren Lund.*Name the probe/),
+    );
+  });
+
+  it('is issued in spite of overdue calibration only with a reason', async () => {
+    const message = 'Probe, no. 7, used for R-0147: calibration was due on 2026-02-03, before the capture';
+    const cautions = [{ code: 'calibration-overdue' as const, section: 0, message }];
+    const seen = mockApi({
+      ...answers('manager', sampleReport('in-review', { cautions })),
+      [`POST /reports/${id}/issue`]: json(sampleReport('issued')),
+    });
+    const { user } = renderRoute(address);
+    await user.click(await screen.findByRole('button', { name: 'Issue' }));
+    const dialog = await screen.findByRole('alertdialog');
+    await user.click(within(dialog).getByRole('button', { name: 'Issue the report' }));
+    expect(await within(dialog).findByText(/Say in at least 20 characters/)).toBeTruthy();
+    const overdueReason = 'Compared with the reference probe on the day';
+    await user.type(within(dialog).getByLabelText(/Why the results stand/), overdueReason);
+    await user.click(within(dialog).getByRole('button', { name: 'Issue the report' }));
+    await waitFor(() =>
+      expect(seen).toContainEqual({
+        method: 'POST',
+        path: `/reports/${id}/issue`,
+        body: { comment: '', overdueReason },
+      }),
+    );
+  });
+
   it('says why it was not issued when somebody else was quicker', async () => {
     const detail = 'The report is issued: it can only be read';
     mockApi({
