@@ -100,7 +100,7 @@ beforeAll(async () => {
 }, 60_000);
 
 /** ISO/IEC 17025:2017, 7.8.2.1 a) to p), 7.8.3.1, 7.8.4.1, 7.8.6.2, 7.8.8.3: what a test report has to state. */
-describe('what a test report must state', () => {
+describe('what a test report must state', { timeout: 60_000 }, () => {
   it.each([
     ['a) title', ['Harmonic test report', 'Harmonic current of dimmer DM-4']],
     ['b) laboratory', ['Halden EMC laboratory', 'Kanalgata 4, 1767 Halden', 'lab@halden.example']],
@@ -148,7 +148,7 @@ describe('what a test report must state', () => {
   });
 });
 
-describe('the QR code', () => {
+describe('the QR code', { timeout: 60_000 }, () => {
   it('is read by an independent decoder as the address of the check page', () => {
     const page = pages.findIndex((text) => text.includes('Check this report')) + 1;
     const { data, width, height } = pageAsPixels(pdf, page, 150);
