@@ -33,15 +33,18 @@ function cosineForm(sineDeg: number | null): number | null {
   return cosine <= -180 ? cosine + 360 : cosine;
 }
 
+/** A periodic signal by its orders. */
+interface PeriodicSignal {
+  dc: number;
+  components: readonly { order: number; rms: number }[];
+  restRms?: number | undefined;
+}
+
 /**
  * A periodic signal as limits take it. In the steady state every smoothed value of an order is the order itself; its
  * uncertainty is not known.
  */
-export function measurementOfSeries(
-  series: Pick<StudySeries, 'dc' | 'restRms'> & { components: readonly StudySeries['components'][number][] },
-  quantity: Quantity,
-  unit: string,
-): Measurement {
+export function measurementOfSeries(series: PeriodicSignal, quantity: Quantity, unit: string): Measurement {
   const { components, dc, restRms = 0 } = series;
   const square = components.reduce((sum, { rms }) => sum + rms ** 2, dc ** 2 + restRms ** 2);
   return {

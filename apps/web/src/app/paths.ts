@@ -30,6 +30,11 @@ export const paths = {
     `${project(projectId)}/limits/${encodeURIComponent(limitSetId)}`,
   newLimitSetVersion: (projectId: string, limitSetId: string) =>
     `${project(projectId)}/limits/${encodeURIComponent(limitSetId)}/new-version`,
+  studies: (projectId: string) => `${project(projectId)}/studies`,
+  newStudy: (projectId: string, from?: { analysisId: string; channel: number }) =>
+    `${project(projectId)}/studies/new${from ? `?analysis=${from.analysisId}&channel=${from.channel}` : ''}`,
+  study: (projectId: string, studyId: string, version?: number) =>
+    `${project(projectId)}/studies/${studyId}${version === undefined ? '' : `?version=${version}`}`,
   reports: (projectId: string) => `${project(projectId)}/reports`,
   newReport: (projectId: string, verdictIds: readonly string[] = []) =>
     `${project(projectId)}/reports/new${verdictIds.length > 0 ? `?verdicts=${verdictIds.join(',')}` : ''}`,

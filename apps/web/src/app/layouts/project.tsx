@@ -24,6 +24,7 @@ export function Component() {
     { label: 'Equipment', to: paths.equipment(id) },
     { label: 'Overlay', to: paths.overlay(id) },
     { label: 'Limits', to: paths.limits(id) },
+    { label: 'Studies', to: paths.studies(id) },
     { label: 'Reports', to: paths.reports(id) },
     { label: 'Members', to: paths.members(id) },
     ...(holds('reading-rule.read', project.role, account.isAdministrator)

@@ -55,6 +55,15 @@ export function Component() {
                 </RouterLink>
               </Button>
             ) : null}
+            {shown.analysis ? (
+              <Button asChild>
+                <RouterLink
+                  to={paths.newStudy(project.id, { analysisId: shown.analysis.id, channel: shown.channel })}
+                >
+                  Predict behind stages
+                </RouterLink>
+              </Button>
+            ) : null}
             {shown.analysis?.supersededById === null && mayJudge ? (
               <JudgeButton {...shown} analysis={shown.analysis} {...named} />
             ) : null}

@@ -1,0 +1,14 @@
+import { studyComparisonSchema } from '@overtally/contracts';
+import { queryOptions } from '@tanstack/react-query';
+import { requestJson } from '../../../lib/http.js';
+
+/** What a study predicted against what a recording of the built stages shows. */
+export const comparisonQuery = (studyId: string, analysisId: string, channel: number) =>
+  queryOptions({
+    queryKey: ['studies', studyId, 'comparison', analysisId, channel],
+    queryFn: ({ signal }) =>
+      requestJson(studyComparisonSchema, `/studies/${studyId}/comparison`, {
+        query: { analysisId, channel },
+        signal,
+      }),
+  });
