@@ -61,7 +61,7 @@ interface Begun {
 function NewStudy(props: Begun & { limitSets: Parameters<typeof useStudySlots>[2] }) {
   const project = useProject(useProjectId());
   const navigate = useNavigate();
-  const slots = useStudySlots(project.id, props.definition.input, props.limitSets);
+  const { slots } = useStudySlots(project.id, props.definition.input, props.limitSets);
   return (
     <StudyPage
       {...props}

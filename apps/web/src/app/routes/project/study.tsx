@@ -6,7 +6,10 @@ import { LoadingState } from '../../../components/loading-state.js';
 import { limitSetsQuery } from '../../../features/limits/api/list-limit-sets.js';
 import { useProject } from '../../../features/projects/hooks/use-project.js';
 import { studyQuery } from '../../../features/studies/api/get-study.js';
+import { ComparisonPart } from '../../../features/studies/components/comparison-part.js';
+import { StudyMenu } from '../../../features/studies/components/study-menu.js';
 import { StudyPage } from '../../../features/studies/components/study-page.js';
+import { VersionList } from '../../../features/studies/components/version-list.js';
 import { paths } from '../../paths.js';
 import { useProjectId } from '../../use-project-id.js';
 import { useStudySlots } from './use-study-slots.js';
@@ -27,7 +30,8 @@ export function Component() {
 function SavedStudy({ study, limitSets }: { study: Study; limitSets: Parameters<typeof useStudySlots>[2] }) {
   const project = useProject(useProjectId());
   const navigate = useNavigate();
-  const slots = useStudySlots(project.id, study.definition.input, limitSets);
+  const { slots, analysed } = useStudySlots(project.id, study.definition.input, limitSets);
+  const mayWrite = holds('study.write', project.role);
   return (
     <StudyPage
       study={study}
@@ -36,8 +40,16 @@ function SavedStudy({ study, limitSets }: { study: Study; limitSets: Parameters<
       limitSets={limitSets}
       projectId={project.id}
       projectName={project.name}
-      mayWrite={holds('study.write', project.role)}
-      slots={slots}
+      mayWrite={mayWrite}
+      slots={{ ...slots, comparison: <ComparisonPart study={study} recordings={analysed} /> }}
+      versions={
+        <>
+          <VersionList study={study} versionTo={(version) => paths.study(project.id, study.id, version)} />
+          {mayWrite ? (
+            <StudyMenu study={study} onDeleted={() => void navigate(paths.studies(project.id))} />
+          ) : null}
+        </>
+      }
       onSaved={({ id }) => void navigate(paths.study(project.id, id))}
     />
   );

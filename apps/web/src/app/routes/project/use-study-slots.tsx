@@ -1,5 +1,5 @@
 import { Link } from '@chakra-ui/react';
-import type { LimitSet, StudyInput } from '@overtally/contracts';
+import type { LimitSet, Recording, StudyInput } from '@overtally/contracts';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { Link as RouterLink } from 'react-router-dom';
 import { JudgementFields } from '../../../features/limits/components/judgement-fields.js';
@@ -14,7 +14,7 @@ export function useStudySlots(
   projectId: string,
   input: StudyInput,
   limitSets: readonly LimitSet[],
-): StudySlots {
+): { slots: StudySlots; analysed: Recording[] } {
   const queryClient = useQueryClient();
   const recordings = useQuery(allRecordingsQuery(projectId));
   const analysed = (recordings.data ?? []).filter(({ latestAnalysisId }) => latestAnalysisId !== null);
@@ -26,7 +26,7 @@ export function useStudySlots(
   const channel = source.data?.channels.find(
     ({ index }) => input.kind === 'channel' && index === input.channel,
   );
-  return {
+  const slots: StudySlots = {
     source: recording ? (
       <>
         <Link asChild>
@@ -48,4 +48,5 @@ export function useStudySlots(
     ),
     judgement: (props) => <JudgementFields {...props} limitSets={limitSets} rest={{ of: 'both' }} />,
   };
+  return { slots, analysed };
 }

@@ -15,6 +15,7 @@ import { GoalPart } from './goal-part.js';
 import { RebuildPart } from './rebuild-part.js';
 import { SpreadPart } from './spread-part.js';
 import type { StudyDefinition } from '@overtally/contracts';
+import { AssumptionsPart } from './assumptions-part.js';
 import { InputPart } from './input-part.js';
 import { JudgementPart, type JudgementSlotProps } from './judgement-part.js';
 import { Cautions, ResonanceRemarks } from './margin-remarks.js';
@@ -27,6 +28,8 @@ export interface StudySlots {
   channelInput: ReactNode;
   source: ReactNode;
   judgement: (props: JudgementSlotProps) => ReactNode;
+  /** Of a saved study with a recording. */
+  comparison?: ReactNode;
 }
 
 interface StudyDeskProps {
@@ -51,9 +54,13 @@ export function StudyDesk({ slots, readOnly }: StudyDeskProps) {
             <JudgementPart disabled={readOnly} fields={slots.judgement} />
           </Box>
         </SidePart>
+        <SidePart title="Resting on">
+          <AssumptionsPart disabled={readOnly} />
+        </SidePart>
       </Box>
       <Box flex="1" minW="0" w="full">
         <SpreadResults readOnly={readOnly} />
+        {slots.comparison}
       </Box>
     </Flex>
   );

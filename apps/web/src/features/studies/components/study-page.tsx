@@ -1,4 +1,3 @@
-import { Button } from '@chakra-ui/react';
 import type { LimitSet, Study, StudyDefinition } from '@overtally/contracts';
 import type { FourierSeries } from '@overtally/dsp';
 import { useState, type ReactNode } from 'react';
@@ -20,13 +19,13 @@ interface StudyPageProps {
   slots: StudySlots;
   /** Goes to a study that was saved, or to one of its versions. */
   onSaved: (study: Study) => void;
+  /** Versions of a saved study, and what else can be done with it. */
   versions?: ReactNode;
-  foot?: ReactNode;
 }
 
 /** A study, saved or new. Mounted anew for each version, so that its draft begins with it. */
 export function StudyPage(props: StudyPageProps) {
-  const { study, definition, series, limitSets, projectName, mayWrite, slots, versions, foot } = props;
+  const { study, definition, series, limitSets, projectName, mayWrite, slots, versions } = props;
   const [store] = useState(() => createStudyStore(draftOf(definition, series), limitSets));
   const isEarlier = study !== null && study.version !== (study.versions[0]?.version ?? study.version);
   const title = study?.name ?? 'New study';
@@ -36,7 +35,7 @@ export function StudyPage(props: StudyPageProps) {
         title={title}
         subtitle={
           study
-            ? `${study.number}, version ${study.version}${isEarlier ? ', an earlier one: to read, not to change' : ''}`
+            ? `${study.number}, version ${study.version}${isEarlier ? ', an earlier one: to read, not to change' : ''}${study.retiredAt ? ', retired' : ''}`
             : 'Predicts what stages make of a signal; nothing is stored until you save it'
         }
         crumb={study?.number ?? 'New study'}
@@ -47,12 +46,10 @@ export function StudyPage(props: StudyPageProps) {
             {mayWrite && !isEarlier ? (
               <SaveParts study={study} projectId={props.projectId} onSaved={props.onSaved} />
             ) : null}
-            {study?.retiredAt ? <Button disabled>Retired</Button> : null}
           </>
         }
       />
       <StudyDesk slots={slots} readOnly={isEarlier} />
-      {foot}
     </StudyContext>
   );
 }
