@@ -133,4 +133,6 @@ export type ReportReferenceKind =
   | 'operating-mode'
   | 'instrument'
   | 'calibration'
-  | 'measuring-chain';
+  | 'measuring-chain'
+  | 'study'
+  | 'study-version';

@@ -6,6 +6,7 @@ import { laboratorySchema, measuringChainSchema } from './instruments.js';
 import { verdictResultSchema, verdictSchema } from './limits.js';
 import { recordingSchema, waveformSchema } from './recordings.js';
 import { seriesSchema } from './series.js';
+import { reportStudySchema } from './studies.js';
 
 export const reportStatusSchema = z.enum(['draft', 'in-review', 'issued', 'superseded']);
 export type ReportStatus = z.infer<typeof reportStatusSchema>;
@@ -24,9 +25,13 @@ const fields = {
   title: z.string().trim().min(1, 'Name the report').max(200),
   verdictIds: z
     .array(idSchema)
-    .min(1, 'Choose at least one verdict')
     .max(50)
     .refine((ids) => new Set(ids).size === ids.length, { message: 'Each verdict may stand once' }),
+  studyVersionIds: z
+    .array(idSchema)
+    .max(20)
+    .refine((ids) => new Set(ids).size === ids.length, { message: 'Each study may stand once' })
+    .describe('Versions of studies that it shows as predictions'),
   summary: z.string().trim().max(4000).describe('What the reader needs to know first'),
   deviations: z
     .string()
@@ -43,9 +48,11 @@ const fields = {
   revisionReason: z.string().trim().max(2000).describe('Why a new revision is made; of no use for the first'),
 };
 
+/** A report speaks of at least one verdict or one study. */
 export const createReportSchema = z.object({
   title: fields.title,
-  verdictIds: fields.verdictIds,
+  verdictIds: fields.verdictIds.default([]),
+  studyVersionIds: fields.studyVersionIds.default([]),
   summary: fields.summary.default(''),
   deviations: fields.deviations.default(''),
   recipients: fields.recipients.default([]),
@@ -164,6 +171,7 @@ export const reportContentSchema = z.object({
   revisionReason: z.string().nullable().describe('Why this revision was made; null for the first'),
   laboratory: laboratorySchema,
   sections: z.array(reportSectionSchema),
+  studies: z.array(reportStudySchema),
   result: verdictResultSchema.describe('The worst of the verdicts'),
 });
 export type ReportContent = z.infer<typeof reportContentSchema>;
@@ -205,6 +213,7 @@ export const reportSchema = z.object({
     .nullable()
     .describe('What must be mended: a draft that came back from review; null for any other'),
   verdictIds: z.array(idSchema),
+  studyVersionIds: z.array(idSchema),
   content: reportContentSchema.describe('Live for a draft, frozen while in review and once issued'),
   cautions: z.array(reportCautionSchema),
   events: z.array(reportEventSchema),
@@ -224,7 +233,14 @@ export const reportSchema = z.object({
 export type Report = z.infer<typeof reportSchema>;
 
 export const reportListItemSchema = reportSchema
-  .omit({ content: true, events: true, cautions: true, verdictIds: true, recipients: true })
+  .omit({
+    content: true,
+    events: true,
+    cautions: true,
+    verdictIds: true,
+    studyVersionIds: true,
+    recipients: true,
+  })
   .extend({ result: verdictResultSchema, sections: z.number().int() });
 export type ReportListItem = z.infer<typeof reportListItemSchema>;
 export const reportPageSchema = pageOf(reportListItemSchema);

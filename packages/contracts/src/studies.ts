@@ -319,3 +319,54 @@ export const studyComparisonSchema = z.object({
   cautions: z.array(z.string()).describe('What stands against comparing the two, in words'),
 });
 export type StudyComparison = z.infer<typeof studyComparisonSchema>;
+
+const reportStageValueSchema = z.object({
+  symbol: z.string(),
+  meaning: z.string(),
+  value: z.number().describe('In the unit beside it, without prefix'),
+  unit: z.string(),
+  tolerancePercent: z.number().nullable(),
+});
+
+/** One stage as a report says it. */
+const reportStageSchema = z.object({
+  name: z.string(),
+  kind: z.string().describe('In words'),
+  meaning: z.string().describe('Output over input'),
+  isOn: z.boolean(),
+  values: z.array(reportStageValueSchema),
+  words: z.string().describe('What has no single values, such as coefficients; else empty'),
+});
+export type ReportStage = z.infer<typeof reportStageSchema>;
+
+/** A version of a study as a report shows it: a prediction, not a measurement. */
+export const reportStudySchema = z.object({
+  id: idSchema,
+  versionId: idSchema,
+  number: z.string(),
+  name: z.string(),
+  version: z.number().int(),
+  author: personRefSchema,
+  savedAt: timestampSchema,
+  source: z.object({
+    words: z.string().describe('Where the harmonics that it starts from come from'),
+    recordingId: idSchema.nullable(),
+    analysisId: idSchema.nullable(),
+  }),
+  ...studyDefinitionSchema.pick({
+    inputQuantity: true,
+    inputUnit: true,
+    outputQuantity: true,
+    outputUnit: true,
+    thdMaxOrder: true,
+  }).shape,
+  limitSet: z.object({ id: z.string(), title: z.string() }).nullable(),
+  stages: z.array(reportStageSchema),
+  spreadWords: z.string().nullable().describe('How tolerances were tried; null where they were not'),
+  assumptions: z.string(),
+  result: studyResultSchema,
+  response: z
+    .array(z.object({ frequencyHz: z.number(), gainDb: z.number().nullable() }))
+    .describe('Gain of all stages; empty without a steady state'),
+});
+export type ReportStudy = z.infer<typeof reportStudySchema>;

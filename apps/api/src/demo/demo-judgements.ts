@@ -117,6 +117,7 @@ export class DemoJudgements {
     await this.reports.create(analyst, projectId, {
       ...words,
       verdictIds: ids,
+      studyVersionIds: [],
       deviations: '',
       recipients: [...work.recipients],
     });

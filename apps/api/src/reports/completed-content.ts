@@ -19,7 +19,7 @@ type EarlierSection = Optional<
 /** A report's content as some earlier version froze it: what was not known then is absent. */
 export type EarlierContent = Optional<
   Omit<ReportContent, 'project' | 'sections'>,
-  'laboratory' | 'revisionReason'
+  'laboratory' | 'revisionReason' | 'studies'
 > & {
   project: Optional<ReportContent['project'], 'customerContact' | 'preparerMayIssue'>;
   sections: EarlierSection[];
@@ -32,6 +32,7 @@ export type EarlierContent = Optional<
 export function completedContent(content: EarlierContent): ReportContent {
   return {
     revisionReason: null,
+    studies: [],
     laboratory: { name: '', address: '', contact: '', accreditation: '' },
     ...content,
     project: { customerContact: '', preparerMayIssue: true, ...content.project },

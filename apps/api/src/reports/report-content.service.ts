@@ -5,6 +5,7 @@ import { EquipmentService } from '../equipment/equipment.service.js';
 import { ChainsService } from '../instruments/chains.service.js';
 import { LaboratoryService } from '../laboratory/laboratory.service.js';
 import { VerdictsService } from '../limits/verdicts.service.js';
+import { ReportedStudies } from '../studies/reported-studies.service.js';
 import { NotesService } from '../notes/notes.service.js';
 import { RecordingsService } from '../recordings/recordings.service.js';
 import { ReportPictures } from './report-pictures.service.js';
@@ -24,12 +25,14 @@ export class ReportContentService {
     private readonly equipment: EquipmentService,
     private readonly chains: ChainsService,
     private readonly laboratory: LaboratoryService,
+    private readonly studies: ReportedStudies,
   ) {}
 
-  /** The content as of now, one section per verdict in the order given. */
+  /** The content as of now, one section per verdict and one study per version in the order given. */
   async gather(
     head: Pick<ReportContent, 'project' | 'revisionReason'>,
     verdictIds: readonly string[],
+    studyVersionIds: readonly string[],
   ): Promise<ReportContent> {
     const verdicts = await this.verdicts.ofProject(head.project.id, verdictIds);
     const sections: ReportSection[] = [];
@@ -40,6 +43,7 @@ export class ReportContentService {
       ...head,
       laboratory: await this.laboratory.get(),
       sections,
+      studies: await this.studies.ofProject(head.project.id, studyVersionIds),
       result: worstResult(sections.map((section) => section.verdict.result)),
     };
   }

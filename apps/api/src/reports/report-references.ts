@@ -1,4 +1,4 @@
-import { idSchema, type ReportContent, type ReportSection } from '@overtally/contracts';
+import { idSchema, type ReportContent, type ReportSection, type ReportStudy } from '@overtally/contracts';
 import type { schema } from '@overtally/db';
 
 type Kind = (typeof schema.reportReferences.$inferInsert)['kind'];
@@ -10,7 +10,10 @@ export interface ReportReference {
 
 /** Everything that a report speaks of and that must stay as long as the report, each once. */
 export function referencesOf(content: ReportContent): ReportReference[] {
-  const all = content.sections.flatMap(referencesOfSection);
+  const all = [
+    ...content.sections.flatMap(referencesOfSection),
+    ...content.studies.flatMap(referencesOfStudy),
+  ];
   return [...new Map(all.map((reference) => [reference.targetId, reference])).values()];
 }
 
@@ -29,6 +32,20 @@ function referencesOfSection(section: ReportSection): ReportReference[] {
     ['instrument', instruments.map(({ id }) => id)],
     ['calibration', instruments.map(({ calibration }) => calibration?.id)],
   ];
+  return referencesTo(named);
+}
+
+function referencesOfStudy({ id, versionId, source, limitSet }: ReportStudy): ReportReference[] {
+  return referencesTo([
+    ['study', [id]],
+    ['study-version', [versionId]],
+    ['recording', [source.recordingId ?? undefined]],
+    ['analysis', [source.analysisId ?? undefined]],
+    ['limit-set', [idSchema.safeParse(limitSet?.id).data]],
+  ]);
+}
+
+function referencesTo(named: readonly [Kind, (string | undefined)[]][]): ReportReference[] {
   return named.flatMap(([kind, ids]) =>
     ids.filter((id) => id !== undefined).map((targetId) => ({ targetId, kind })),
   );

@@ -23,7 +23,7 @@ export class ReportRevisionsService {
    * @throws 409 for a report that is not issued, or that a revision is under way for
    */
   async revise(user: SignedInUser, id: string): Promise<Report> {
-    const { replacedBy, verdictIds } = await this.reports.get(id);
+    const { replacedBy, verdictIds, studyVersionIds } = await this.reports.get(id);
     const made = await this.database.transaction(async (tx) => {
       const row = await this.reports.lockFor(tx, id, 'revise');
       if (replacedBy || (await this.repository.isReplaced(tx, id))) throw revisionUnderWay(row.revision + 1);
@@ -34,6 +34,7 @@ export class ReportRevisionsService {
         ...{ revision, replacesId: id, preparedById: user.id },
       });
       await this.repository.setVerdicts(tx, draft, verdictIds);
+      await this.repository.setStudies(tx, draft, studyVersionIds);
       const comment = `Revision ${revision} of ${reportNumber(number ?? 0)}`;
       await this.repository.addEvent(tx, { reportId: draft, byId: user.id, kind: 'created', comment });
       return draft;

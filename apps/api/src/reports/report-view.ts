@@ -68,6 +68,7 @@ export const toReport = (row: ReportRow, parts: Parts, publicUrl: string): Repor
   ...toHead(row, publicUrl),
   recipients: row.recipients,
   verdictIds: row.verdictIds,
+  studyVersionIds: row.studyVersionIds,
   content: parts.content,
   cautions: parts.cautions,
   events: parts.events.map(toEvent),

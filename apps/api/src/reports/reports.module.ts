@@ -7,6 +7,7 @@ import { LimitsModule } from '../limits/limits.module.js';
 import { MailsModule } from '../mails/mails.module.js';
 import { NotesModule } from '../notes/notes.module.js';
 import { RecordingsModule } from '../recordings/recordings.module.js';
+import { StudiesModule } from '../studies/studies.module.js';
 import { ReportContentService } from './report-content.service.js';
 import { ReportIssueService } from './report-issue.service.js';
 import { ReportDeliveriesController } from './report-deliveries.controller.js';
@@ -33,6 +34,7 @@ import { ReportsService } from './reports.service.js';
     MailsModule,
     NotesModule,
     RecordingsModule,
+    StudiesModule,
   ],
   controllers: [ReportDeliveriesController, ReportsController, ReportStepsController, ReportFilesController],
   providers: [

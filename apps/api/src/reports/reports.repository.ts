@@ -5,7 +5,8 @@ import { and, asc, desc, eq, getTableColumns, inArray, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import { DATABASE } from '../database/database.tokens.js';
 
-const { projects, reportEvents, reportReferences, reports, reportVerdicts, users, verdicts } = schema;
+const { projects, reportEvents, reportReferences, reports, reportStudies, reportVerdicts, users, verdicts } =
+  schema;
 
 type ReportReferenceKind = (typeof reportReferences.$inferInsert)['kind'];
 
@@ -38,6 +39,9 @@ const joined = {
   verdictIds: sql<string[]>`coalesce((
     select json_agg(rv.verdict_id order by rv.position) from ${reportVerdicts} rv
     where rv.report_id = ${reports.id}), '[]')`,
+  studyVersionIds: sql<string[]>`coalesce((
+    select json_agg(rs.study_version_id order by rs.position) from ${reportStudies} rs
+    where rs.report_id = ${reports.id}), '[]')`,
   results: sql<VerdictResult[]>`coalesce((
     select json_agg(v.result order by rv.position) from ${reportVerdicts} rv
     join ${verdicts} v on v.id = rv.verdict_id where rv.report_id = ${reports.id}), '[]')`,
@@ -141,9 +145,27 @@ export class ReportsRepository {
 
   async setVerdicts(tx: Tx, reportId: string, verdictIds: readonly string[]): Promise<void> {
     await tx.delete(reportVerdicts).where(eq(reportVerdicts.reportId, reportId));
+    if (verdictIds.length === 0) return;
     await tx
       .insert(reportVerdicts)
       .values(verdictIds.map((verdictId, position) => ({ reportId, verdictId, position })));
+  }
+
+  async setStudies(tx: Tx, reportId: string, versionIds: readonly string[]): Promise<void> {
+    await tx.delete(reportStudies).where(eq(reportStudies.reportId, reportId));
+    if (versionIds.length === 0) return;
+    await tx
+      .insert(reportStudies)
+      .values(versionIds.map((studyVersionId, position) => ({ reportId, studyVersionId, position })));
+  }
+
+  /** How many verdicts and studies a report speaks of. */
+  async subjects(tx: Tx, reportId: string): Promise<number> {
+    const [verdictCount, studyCount] = await Promise.all([
+      tx.$count(reportVerdicts, eq(reportVerdicts.reportId, reportId)),
+      tx.$count(reportStudies, eq(reportStudies.reportId, reportId)),
+    ]);
+    return verdictCount + studyCount;
   }
 
   async addEvent(

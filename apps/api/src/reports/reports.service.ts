@@ -15,6 +15,7 @@ import type { SignedInUser } from '../common/request.js';
 import { AppConfig } from '../config/app-config.js';
 import { DATABASE } from '../database/database.tokens.js';
 import { VerdictsService } from '../limits/verdicts.service.js';
+import { ReportedStudies } from '../studies/reported-studies.service.js';
 import { completedContent } from './completed-content.js';
 import { cautionsOf } from './report-cautions.js';
 import { ReportContentService } from './report-content.service.js';
@@ -38,6 +39,7 @@ export class ReportsService {
     private readonly repository: ReportsRepository,
     private readonly verdicts: VerdictsService,
     private readonly contents: ReportContentService,
+    private readonly studies: ReportedStudies,
     private readonly config: AppConfig,
   ) {}
 
@@ -89,12 +91,15 @@ export class ReportsService {
   }
 
   async create(user: SignedInUser, projectId: string, input: CreateReport): Promise<Report> {
-    const { verdictIds, ...words } = input;
+    const { verdictIds, studyVersionIds, ...words } = input;
     await this.requireVerdicts(projectId, verdictIds);
+    await this.studies.require(projectId, studyVersionIds);
+    if (verdictIds.length + studyVersionIds.length === 0) throw nothingToReport();
     const id = await this.database.transaction(async (tx) => {
       await this.verdicts.requireCurrent(tx, verdictIds);
       const made = await this.repository.insert(tx, { ...words, projectId, preparedById: user.id });
       await this.repository.setVerdicts(tx, made, verdictIds);
+      await this.repository.setStudies(tx, made, studyVersionIds);
       await this.repository.addEvent(tx, { reportId: made, byId: user.id, kind: 'created' });
       return made;
     });
@@ -102,14 +107,17 @@ export class ReportsService {
   }
 
   async update(user: SignedInUser, projectId: string, id: string, input: UpdateReport): Promise<Report> {
-    const { verdictIds, ...words } = input;
+    const { verdictIds, studyVersionIds, ...words } = input;
     if (verdictIds) await this.requireVerdicts(projectId, verdictIds);
+    if (studyVersionIds) await this.studies.require(projectId, studyVersionIds);
     await this.database.transaction(async (tx) => {
       await this.lockFor(tx, id, 'change');
       if (verdictIds) {
         await this.verdicts.requireCurrent(tx, verdictIds);
         await this.repository.setVerdicts(tx, id, verdictIds);
       }
+      if (studyVersionIds) await this.repository.setStudies(tx, id, studyVersionIds);
+      if ((await this.repository.subjects(tx, id)) === 0) throw nothingToReport();
       await this.repository.update(tx, id, words);
       await this.repository.addEvent(tx, { reportId: id, byId: user.id, kind: 'changed' });
     });
@@ -148,7 +156,7 @@ export class ReportsService {
   private gather(row: ReportRow): Promise<ReportContent> {
     const { projectId, projectName, customer, customerContact, preparerMayIssue, revisionReason } = row;
     const project = { id: projectId, name: projectName, customer, customerContact, preparerMayIssue };
-    return this.contents.gather({ project, revisionReason }, row.verdictIds);
+    return this.contents.gather({ project, revisionReason }, row.verdictIds, row.studyVersionIds);
   }
 
   private async requireVerdicts(projectId: string, ids: readonly string[]): Promise<void> {
@@ -164,6 +172,11 @@ export class ReportsService {
       errors,
     );
   }
+}
+
+function nothingToReport() {
+  const message = 'Choose at least one verdict or one study';
+  return problem(422, 'nothing-to-report', message, [{ path: 'verdictIds', message }]);
 }
 
 const noSuchReport = () => problem(404, 'not-found', 'There is no such report');

@@ -195,6 +195,7 @@ export function exampleReport(sections: ReportSection[], given: Partial<Report> 
     isIssuedByPreparer: false,
     status: 'issued',
     verdictIds: sections.map((section) => section.verdict.id),
+    studyVersionIds: [],
     content: {
       project: {
         id: idFor('project'),
@@ -206,6 +207,7 @@ export function exampleReport(sections: ReportSection[], given: Partial<Report> 
       revisionReason: null,
       laboratory: { name: '', address: '', contact: '', accreditation: '' },
       sections,
+      studies: [],
       result: sections[0]!.verdict.result,
     },
     events: [],

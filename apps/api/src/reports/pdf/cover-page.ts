@@ -1,4 +1,4 @@
-import type { Report, ReportSection } from '@overtally/contracts';
+import type { Report, ReportSection, ReportStudy } from '@overtally/contracts';
 import { formatDate } from './format.js';
 import type { Sheet } from './sheet.js';
 import { drawTable } from './table.js';
@@ -32,8 +32,11 @@ export function drawCoverPage(sheet: Sheet, report: Report): void {
     sheet.heading('Summary', 30, 'H2');
     sheet.paragraph(report.summary);
   }
-  drawJudgedRecordings(sheet, report.content.sections);
-  drawDecisionRules(sheet, report.content.sections);
+  if (report.content.sections.length > 0) {
+    drawJudgedRecordings(sheet, report.content.sections);
+    drawDecisionRules(sheet, report.content.sections);
+  }
+  drawPredictions(sheet, report.content.studies);
 }
 
 function drawLaboratory(sheet: Sheet, { content }: Report): void {
@@ -113,6 +116,11 @@ function drawReplaced(sheet: Sheet, { replaces, number, content }: Report): void
 
 function drawResult(sheet: Sheet, { content }: Report): void {
   sheet.heading('Result', 90, 'H2');
+  if (content.sections.length === 0) {
+    const words = 'No recording is judged in this report; it shows predictions alone.';
+    drawPanel(sheet, colours.near, () => sheet.paragraph(words, text.strong, 'P', panelPlace(sheet)));
+    return;
+  }
   const colour = resultColour(content.result);
   drawPanel(sheet, colour, () => {
     sheet.paragraph(resultName(content.result), tinted(text.verdict, colour), 'P', panelPlace(sheet));
@@ -173,6 +181,29 @@ function drawJudgedRecordings(sheet: Sheet, sections: readonly ReportSection[]):
         text: `${resultName(verdict.result)}\n${verdictInShort(verdict)}`,
         style: tinted(text.cellStrong, resultColour(verdict.result)),
       },
+    ]),
+  );
+}
+
+/** Studies stand apart from what was measured. */
+function drawPredictions(sheet: Sheet, studies: readonly ReportStudy[]): void {
+  if (studies.length === 0) return;
+  sheet.heading('Predictions, not measurements', 60, 'H2');
+  const outcome = (verdict: ReportStudy['result']['verdictAfter']): string =>
+    verdict === null ? 'not judged' : `${resultName(verdict.result)}\n${verdictInShort(verdict)}`;
+  drawTable(
+    sheet,
+    [
+      { header: 'Study', share: 2.6 },
+      { header: 'Starts from', share: 2.6 },
+      { header: 'Before', share: 1.6 },
+      { header: 'Behind, predicted', share: 1.6 },
+    ],
+    studies.map(({ number, name, version, source, result }) => [
+      { text: `${number}  ${name}\nversion ${version}` },
+      { text: source.words },
+      { text: outcome(result.verdictBefore) },
+      { text: result.output === null ? 'no steady state' : outcome(result.verdictAfter) },
     ]),
   );
 }

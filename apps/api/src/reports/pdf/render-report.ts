@@ -9,6 +9,7 @@ import { keepPagesAsText } from './page-text.js';
 import { drawParticulars } from './particulars.js';
 import { drawSection } from './section-pages.js';
 import { Sheet } from './sheet.js';
+import { drawStudy } from './study-pages.js';
 import { page } from './theme.js';
 
 export interface RenderOptions {
@@ -53,6 +54,10 @@ export async function renderReportPdf(report: Report, { checkUrl, between }: Ren
   report.content.sections.forEach((section, index, all) => {
     between();
     drawSection(sheet, section, index, all.length);
+  });
+  report.content.studies.forEach((study, index, all) => {
+    between();
+    drawStudy(sheet, study, index, all.length);
   });
   drawCheckBlock(sheet, report, checkUrl);
   drawClosing(sheet, report);

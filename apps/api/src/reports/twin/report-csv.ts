@@ -1,4 +1,4 @@
-import type { OrderVerdict, Report, ReportSection, TotalVerdict } from '@overtally/contracts';
+import type { OrderVerdict, Report, ReportSection, ReportStudy, TotalVerdict } from '@overtally/contracts';
 
 const columns = [
   'report',
@@ -18,16 +18,22 @@ const columns = [
   'highest_smoothed_value',
   'result',
   'reason',
+  'basis',
 ] as const;
 
 type Row = Record<(typeof columns)[number], string | number | null>;
 
 /**
- * The judged orders and totals of all sections as CSV (RFC 4180, UTF-8 with byte order mark): one row each, figures in
- * full with a decimal point, empty where one does not apply.
+ * The judged orders and totals of all sections, and the orders of all studies behind their stages, as CSV (RFC 4180, UTF-8
+ * with byte order mark): one row each, figures in full with a decimal point, empty where one does not apply. The column
+ * `basis` says whether a row is measured or predicted; a study stands in `recording` by its number.
  */
 export function reportCsv(report: Report): Uint8Array {
-  const rows = report.content.sections.flatMap((section, index) => sectionRows(report, section, index + 1));
+  const { sections, studies } = report.content;
+  const rows = [
+    ...sections.flatMap((section, index) => sectionRows(report, section, index + 1)),
+    ...studies.flatMap((study, index) => studyRows(report, study, sections.length + index + 1)),
+  ];
   const lines = [columns.join(','), ...rows.map((row) => columns.map((name) => cell(row[name])).join(','))];
   return Buffer.from(`\ufeff${lines.join('\r\n')}\r\n`);
 }
@@ -42,6 +48,7 @@ function sectionRows(report: Report, section: ReportSection, number: number): Ro
     section: number,
     recording: recording.number,
     channel: verdict.channelName,
+    basis: 'measured',
   };
   const orderRow = (entry: OrderVerdict): Row => ({
     ...place,
@@ -75,6 +82,26 @@ function sectionRows(report: Report, section: ReportSection, number: number): Ro
     reason: total.reason,
   });
   return [...verdict.orders.map(orderRow), ...verdict.totals.map(totalRow)];
+}
+
+function studyRows(report: Report, { number, result, outputUnit }: ReportStudy, section: number): Row[] {
+  const judged = new Map(result.verdictAfter?.orders.map((entry) => [entry.order, entry]));
+  return result.orders.map(({ order, frequencyHz, outputRms }): Row => {
+    const entry = judged.get(order);
+    return {
+      ...{ report: report.number, revision: report.revision, section, recording: number, channel: null },
+      ...{
+        kind: 'order',
+        order_or_total: order,
+        frequency_hz: frequencyHz,
+        value: outputRms,
+        unit: outputUnit,
+      },
+      ...{ expanded_uncertainty_k2: null, limit: entry?.limit ?? null, margin: entry?.margin ?? null },
+      ...{ share_percent: entry?.sharePercent ?? null, highest_smoothed_value: null },
+      ...{ result: entry?.result ?? null, reason: entry?.reason ?? null, basis: 'predicted' },
+    };
+  });
 }
 
 /** Signs that make a spreadsheet take a text for a formula. */

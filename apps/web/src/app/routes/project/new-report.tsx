@@ -49,7 +49,7 @@ export function Component() {
       ) : (
         <ReportForm
           initial={{
-            ...{ title: '', summary: '', deviations: '', recipients: [] },
+            ...{ title: '', summary: '', deviations: '', recipients: [], studyVersionIds: [] },
             verdictIds: chosen(search, judged.data.verdicts),
           }}
           verdicts={judged.data.verdicts}

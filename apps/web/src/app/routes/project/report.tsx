@@ -75,11 +75,11 @@ function EditDraft({ report, onDone }: { report: Report; onDone: () => void }) {
   const { update } = useReportChanges(report);
   if (judged.error) return <ErrorState error={judged.error} onRetry={judged.refetch} />;
   if (!judged.data) return <LoadingState label="Loading the verdicts" />;
-  const { title, summary, deviations, recipients, verdictIds } = report;
+  const { title, summary, deviations, recipients, verdictIds, studyVersionIds } = report;
   return (
     <ReportForm
       initial={{
-        ...{ title, summary, deviations, recipients, verdictIds },
+        ...{ title, summary, deviations, recipients, verdictIds, studyVersionIds },
         ...(report.replaces && { revisionReason: report.revisionReason ?? '' }),
       }}
       verdicts={judged.data.verdicts}
