@@ -81,7 +81,7 @@ export function ReportForm(props: ReportFormProps) {
         <VerdictPicker
           verdicts={props.verdicts}
           recordings={props.recordings}
-          value={field.value}
+          value={field.value ?? []}
           onChange={field.onChange}
           error={errors.verdictIds?.message}
         />
