@@ -271,6 +271,7 @@ export const studyListItemSchema = studySchema
     number: true,
     name: true,
     version: true,
+    versionId: true,
     retiredAt: true,
     createdAt: true,
   })

@@ -1,5 +1,5 @@
 import { Inject, Injectable } from '@nestjs/common';
-import type { Recording } from '@overtally/contracts';
+import { studyDefinitionSchema, type Recording } from '@overtally/contracts';
 import { schema, type Database } from '@overtally/db';
 import { demoPeople, demoProjects } from '@overtally/fixtures';
 import { eq, sql } from 'drizzle-orm';
@@ -10,6 +10,7 @@ import { InvitationsService } from '../invitations/invitations.service.js';
 import { NotesService } from '../notes/notes.service.js';
 import { RecordingsService } from '../recordings/recordings.service.js';
 import { ReportsService } from '../reports/reports.service.js';
+import { StudiesService } from '../studies/studies.service.js';
 
 const { projects, users } = schema;
 
@@ -32,13 +33,38 @@ const work = {
   },
 } as const;
 
+/** A damped filter at the mains side of the hood module, which passes with it. */
+const study = {
+  of: 'dimmer-90deg.csv',
+  name: 'Damped mains filter for hood module HM-1000',
+  comment: 'First design',
+  assumptions:
+    'The module draws the measured current whatever stands in front of it. The supply is a reactor of 10 mH with the mains behind it. The filter’s own current at 50 Hz is not part of the prediction.',
+  stage: {
+    name: 'Filter between reactor and module',
+    isOn: true,
+    spec: {
+      kind: 'circuit',
+      circuit: 'high-pass-filter',
+      values: {
+        ...{ capacitanceF: 22e-6, inductanceH: 50e-3, coilResistanceOhm: 0.1, dampingResistanceOhm: 22 },
+        ...{ sourceInductanceH: 10e-3, sourceResistanceOhm: 0.3 },
+      },
+    },
+    tolerances: [
+      { parameter: 'capacitanceF', tolerancePercent: 10 },
+      { parameter: 'sourceInductanceH', tolerancePercent: 10 },
+    ],
+  },
+} as const;
+
 interface Place {
   projectId: string;
   analyst: SignedInUser;
   manager: SignedInUser;
 }
 
-/** Verdicts, a note, a draft report and an invitation of the demonstration, made the way a person makes them. */
+/** Verdicts, a note, a study, a draft report and an invitation of the demonstration, made the way a person makes them. */
 @Injectable()
 export class DemoJudgements {
   constructor(
@@ -47,6 +73,7 @@ export class DemoJudgements {
     private readonly verdicts: VerdictsService,
     private readonly notes: NotesService,
     private readonly reports: ReportsService,
+    private readonly studies: StudiesService,
     private readonly invitations: InvitationsService,
   ) {}
 
@@ -102,6 +129,7 @@ export class DemoJudgements {
       if (analysisId === null || current === undefined) continue;
       if (file.name === work.note.fileName) {
         const { target, text, cause } = work.note;
+        await this.predict(analyst, projectId, { analysisId, channel: current.index, unit: current.unit });
         await this.notes.create(analysisId, analyst.id, { channel: current.index, target, text, cause });
       }
       const { id } = await this.verdicts.create(analyst, analysisId, {
@@ -122,5 +150,23 @@ export class DemoJudgements {
       recipients: [...work.recipients],
     });
     await this.invitations.invite(manager, projectId, work.invited);
+  }
+
+  /** What a filter would make of the current that fails. */
+  private async predict(
+    analyst: SignedInUser,
+    projectId: string,
+    { unit, ...channel }: { analysisId: string; channel: number; unit: string },
+  ): Promise<void> {
+    const { name, comment, assumptions, stage } = study;
+    const definition = studyDefinitionSchema.parse({
+      input: { kind: 'channel', ...channel },
+      ...{ inputQuantity: 'current', inputUnit: unit, outputQuantity: 'current', outputUnit: unit },
+      stages: [stage],
+      judgement: { limitSetId: work.limitSetId, parameters: {}, decisionRule: 'simple-acceptance' },
+      spread: { method: 'corners' },
+      assumptions,
+    });
+    await this.studies.create(analyst, projectId, { name, definition, comment });
   }
 }

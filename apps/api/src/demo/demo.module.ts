@@ -8,6 +8,7 @@ import { InvitationsModule } from '../invitations/invitations.module.js';
 import { NotesModule } from '../notes/notes.module.js';
 import { RecordingsModule } from '../recordings/recordings.module.js';
 import { ReportsModule } from '../reports/reports.module.js';
+import { StudiesModule } from '../studies/studies.module.js';
 import { DemoAccounts } from './demo-accounts.js';
 import { DemoBench } from './demo-bench.js';
 import { DemoJudgements } from './demo-judgements.js';
@@ -24,6 +25,7 @@ import { DemoService } from './demo.service.js';
     NotesModule,
     RecordingsModule,
     ReportsModule,
+    StudiesModule,
   ],
   providers: [DemoAccounts, DemoBench, DemoJudgements, DemoService],
 })

@@ -67,6 +67,7 @@ export class StudiesRepository {
     const newest = this.database
       .selectDistinctOn([studyVersions.studyId], {
         studyId: studyVersions.studyId,
+        versionId: sql<string>`${studyVersions.id}`.as('version_id'),
         version: studyVersions.version,
         savedAt: sql<Date>`${studyVersions.createdAt}`.mapWith(studyVersions.createdAt).as('saved_at'),
         authorId: studyVersions.authorId,
@@ -84,7 +85,12 @@ export class StudiesRepository {
       .select({
         ...{ id: studies.id, projectId: studies.projectId, number: studies.number, name: studies.name },
         ...{ retiredAt: studies.retiredAt, createdAt: studies.createdAt },
-        ...{ version: newest.version, savedAt: newest.savedAt, stability: newest.stability },
+        ...{
+          version: newest.version,
+          versionId: newest.versionId,
+          savedAt: newest.savedAt,
+          stability: newest.stability,
+        },
         ...{ resultBefore: newest.before, resultAfter: newest.after },
         ...{ authorId: newest.authorId, authorName: users.name },
       })
