@@ -35,16 +35,17 @@ export function Component() {
         <ErrorState error={judged.error} onRetry={judged.refetch} />
       ) : !judged.data ? (
         <LoadingState label="Loading the verdicts" />
-      ) : judged.data.verdicts.length === 0 ? (
+      ) : judged.data.verdicts.length + judged.data.studies.length === 0 ? (
         <EmptyState
-          title="No verdict to report yet"
+          title="Nothing to report yet"
           actions={
             <Button asChild variant="solid">
               <Link to={paths.recordings(project.id)}>Go to the recordings</Link>
             </Button>
           }
         >
-          A report is made of verdicts. Open a recording and judge it by a limit set; then come back.
+          A report is made of verdicts, and of studies as predictions. Open a recording and judge it by a
+          limit set; then come back.
         </EmptyState>
       ) : (
         <ReportForm
@@ -54,6 +55,7 @@ export function Component() {
           }}
           verdicts={judged.data.verdicts}
           recordings={judged.data.recordings}
+          studies={judged.data.studies}
           submitLabel="Create the draft"
           save={(input) => createReport(project.id, input)}
           onSaved={(report) => {

@@ -84,6 +84,7 @@ function EditDraft({ report, onDone }: { report: Report; onDone: () => void }) {
       }}
       verdicts={judged.data.verdicts}
       recordings={judged.data.recordings}
+      studies={judged.data.studies}
       submitLabel="Save the draft"
       // Verdicts that stay are not sent: one that is outdated would hinder saving the words.
       save={({ verdictIds: chosen, ...words }) =>

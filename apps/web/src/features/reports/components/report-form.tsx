@@ -5,6 +5,7 @@ import {
   updateReportSchema,
   type CreateReport,
   type Report,
+  type StudyListItem,
   type Verdict,
 } from '@overtally/contracts';
 import { useMutation } from '@tanstack/react-query';
@@ -15,6 +16,7 @@ import { FormProblem } from '../../../components/form-problem.js';
 import { setFormProblem } from '../../../lib/form-errors.js';
 import type { RecordingName } from '../verdict-groups.js';
 import { RecipientsField } from './recipients-field.js';
+import { StudyPicker } from './study-picker.js';
 import { VerdictPicker } from './verdict-picker.js';
 
 const { revisionReason } = updateReportSchema.shape;
@@ -26,6 +28,7 @@ interface ReportFormProps {
   initial: CreateReport & { revisionReason?: string };
   verdicts: readonly Verdict[];
   recordings: readonly RecordingName[];
+  studies: readonly StudyListItem[];
   /** Names the act: "Create the draft". */
   submitLabel: string;
   save: (input: CreateReport & { revisionReason?: string }) => Promise<Report>;
@@ -41,6 +44,7 @@ export function ReportForm(props: ReportFormProps) {
   });
   const { errors } = form.formState;
   const { field } = useController({ control: form.control, name: 'verdictIds' });
+  const { field: studyField } = useController({ control: form.control, name: 'studyVersionIds' });
   const write = useMutation({
     mutationFn: props.save,
     onSuccess: props.onSaved,
@@ -84,6 +88,12 @@ export function ReportForm(props: ReportFormProps) {
           value={field.value ?? []}
           onChange={field.onChange}
           error={errors.verdictIds?.message}
+        />
+        <StudyPicker
+          studies={props.studies}
+          value={studyField.value ?? []}
+          onChange={studyField.onChange}
+          error={errors.studyVersionIds?.message}
         />
         <FormProblem message={errors.root?.message} />
         <Stack direction="row" gap="2">

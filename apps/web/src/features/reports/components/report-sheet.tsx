@@ -7,6 +7,7 @@ import { formatDateTime } from '../../../lib/format-date.js';
 import { CommentForm } from './comment-form.js';
 import { IssuedPanel } from './issued-panel.js';
 import { ReportLog } from './report-log.js';
+import { ReportPrediction } from './report-prediction.js';
 import { ReportSection } from './report-section.js';
 import { ReportStanding } from './report-standing.js';
 import { ReportSteps } from './report-steps.js';
@@ -55,6 +56,9 @@ export function ReportSheet({ report, role, reportTo }: ReportSheetProps) {
         {content.sections.map((section, index) => (
           <ReportSection key={section.verdict.id} section={section} place={index + 1} />
         ))}
+        {content.studies.map((study, index) => (
+          <ReportPrediction key={study.versionId} study={study} place={index + 1} />
+        ))}
         <Text color="inkSoft" fontSize="13px" maxW="80ch">
           A verdict here is not a certificate by an accredited body unless the laboratory that issues it is
           one. The edition of each limit set is for the laboratory to check.
@@ -73,6 +77,9 @@ function titleCells(report: Report): TitleCell[] {
     { caption: 'Customer', value: content.project.customer || 'not stated', grow: 1.5 },
     { caption: 'Project', value: content.project.name, grow: 2 },
     { caption: 'Verdicts', value: String(content.sections.length), mono: true },
+    ...(content.studies.length > 0
+      ? [{ caption: 'Predictions', value: String(content.studies.length), mono: true }]
+      : []),
     { caption: 'Prepared by', value: report.preparedBy.name, grow: 1.5 },
     {
       caption: 'Issued',
