@@ -34,7 +34,7 @@ export function readHarmonics({ text, amounts, frequencyHz, fundamentalRms }: Ha
     const at = `Line ${index + 1}`;
     const trimmed = line.trim();
     if (trimmed === '' || trimmed.startsWith('#')) continue;
-    const cells = cellsOf(trimmed);
+    const cells = cellsOf(trimmed.replaceAll(/\s+(?=[%°])/g, ''));
     const numbers = cells.map((cell) => (cell === '' ? null : numberIn(cell)));
     if (seen.size === 0 && numbers.every((number) => number === null || Number.isNaN(number))) continue;
     const wrong = numbers.findIndex((number) => Number.isNaN(number));
