@@ -91,7 +91,7 @@ describe('a study', () => {
     const tau = (part: number) => `τ, time constant, of plant ${part} of stage 1`;
     await fill('Ti in s', '');
     await fill(tau(1), '1 ms');
-    for (const _ of [2, 3]) {
+    for (let part = 2; part <= 3; part++) {
       await page.getByLabel('Add to the plant of stage 1').selectOption({ label: 'Low-pass of first order' });
       await page.getByRole('button', { name: 'Add to the plant' }).click();
     }

@@ -2,6 +2,7 @@ import { Box, chakra } from '@chakra-ui/react';
 import { useLayoutEffect, useRef, useState, type PointerEvent, type ReactNode } from 'react';
 import {
   bandPath,
+  labelsThatFit,
   linePath,
   nearestIndex,
   placeOn,
@@ -64,7 +65,7 @@ interface CurveChartProps {
 }
 
 const color = (token: Tone | 'sheet' | 'wash') => `var(--chakra-colors-${token})`;
-const margin = { left: 60, right: 10, top: 10 };
+const margin = { left: 60, right: 18, top: 10 };
 const textStyle = { fontSize: 12, fill: color('ink-soft') } as const;
 
 /** A chart as plain SVG: for curves that are drawn anew while a slider moves, where a charting library takes too long. */
@@ -125,8 +126,8 @@ function Frame({ x, y, placeX, placeY, right, bottom }: CurveChartProps & Placed
         </g>
       ))}
       <path d={`M${margin.left} ${bottom}H${right}`} stroke={color('ink-soft')} />
-      {x.ticks.tickvals.map((value, i) => (
-        <text key={value} x={placeX(value)} y={bottom + 16} textAnchor="middle" {...textStyle}>
+      {labelsThatFit(x.ticks, placeX).map((i) => (
+        <text key={i} x={placeX(x.ticks.tickvals[i]!)} y={bottom + 16} textAnchor="middle" {...textStyle}>
           {x.ticks.ticktext[i]}
         </text>
       ))}

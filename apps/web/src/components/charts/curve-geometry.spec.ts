@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { bandPath, linePath, nearestIndex, placeOn, valueAtPlace } from './curve-geometry.js';
+import { bandPath, labelsThatFit, linePath, nearestIndex, placeOn, valueAtPlace } from './curve-geometry.js';
 
 const ticks = { tickvals: [], ticktext: [] };
 const linear = { scale: 'linear', from: -1, to: 1, ticks } as const;
@@ -32,4 +32,11 @@ it('closes a band and leaves it out with fewer than two places', () => {
 it('finds the nearest place on the scale of the axis', () => {
   expect(nearestIndex([10, 100, 1000], 350, placeOn(log, 0, 200))).toBe(2);
   expect(nearestIndex([10, 100, 1000], 300, placeOn(log, 0, 200))).toBe(1);
+});
+
+it('leaves out labels that would stand on each other', () => {
+  const tickvals = [-1, -0.9, 0, 1];
+  const labels = { tickvals, ticktext: ['100 Hz', '110 Hz', '200 Hz', '300 Hz'] };
+  expect(labelsThatFit(labels, placeOn(linear, 0, 200))).toEqual([0, 2, 3]);
+  expect(labelsThatFit(labels, placeOn(linear, 0, 60))).toEqual([0, 3]);
 });

@@ -82,3 +82,19 @@ export function nearestIndex(x: ArrayLike<number>, value: number, placeX: Place)
   }
   return best;
 }
+
+/** About the width of a digit or letter on an axis, and the room between two labels, in px. */
+const letterPx = 6.6;
+const roomPx = 8;
+
+/** Indexes of the labels that can stand beside each other along an axis, from its start. */
+export function labelsThatFit({ tickvals, ticktext }: AxisTicks, place: Place): number[] {
+  let end = -Infinity;
+  return tickvals.flatMap((value, i) => {
+    const half = ((ticktext[i] ?? '').length * letterPx) / 2;
+    const at = place(value);
+    if (at - half < end + roomPx) return [];
+    end = at + half;
+    return [i];
+  });
+}

@@ -1,5 +1,5 @@
 import type { LimitSet } from '@overtally/contracts';
-import { createContext, useContext, useSyncExternalStore } from 'react';
+import { createContext, useContext, useDeferredValue, useSyncExternalStore } from 'react';
 import { definitionOf, type StudyDraft } from './draft.js';
 import { predict, type Prediction } from './predict.js';
 
@@ -16,7 +16,7 @@ export interface StudyStore {
   /** Whether the draft says something else than at the start. */
   isChanged: () => boolean;
   change: (change: Change) => void;
-  /** As `change`, at the next frame: of several before it, all apply and one redraw follows. */
+  /** As `change`, once a frame: the first at once, those that come in the same frame together at its end. */
   slide: (change: Change) => void;
 }
 
@@ -24,12 +24,22 @@ export function createStudyStore(initial: StudyDraft, limitSets: readonly LimitS
   let draft = initial;
   let predicted: { of: StudyDraft; prediction: Prediction } | null = null;
   let waiting: Change[] = [];
+  let isHeld = false;
   const first = JSON.stringify(definitionOf(initial));
   const listeners = new Set<() => void>();
   const limitSet = () => limitSets.find(({ id }) => id === draft.judgement?.limitSetId) ?? null;
   const change = (apply: Change) => {
     draft = apply(draft);
     for (const listener of [...listeners]) listener();
+  };
+  /** At the end of a frame: what came in it is applied, and holds the next one. */
+  const release = () => {
+    const all = waiting;
+    waiting = [];
+    isHeld = all.length > 0;
+    if (!isHeld) return;
+    change((current) => all.reduce((held, next) => next(held), current));
+    requestAnimationFrame(release);
   };
   return {
     limitSets,
@@ -46,13 +56,13 @@ export function createStudyStore(initial: StudyDraft, limitSets: readonly LimitS
       return predicted.prediction;
     },
     slide: (apply) => {
-      waiting.push(apply);
-      if (waiting.length > 1) return;
-      requestAnimationFrame(() => {
-        const all = waiting;
-        waiting = [];
-        change((current) => all.reduce((held, next) => next(held), current));
-      });
+      if (isHeld) {
+        waiting.push(apply);
+        return;
+      }
+      isHeld = true;
+      change(apply);
+      requestAnimationFrame(release);
     },
   };
 }
@@ -86,3 +96,10 @@ export function usePredictionKind(): Prediction['kind'] {
   const store = useStudyStore();
   return useSyncExternalStore(store.subscribe, () => store.prediction().kind);
 }
+
+/** The stages for parts that may follow a moving slider late. */
+export function useLateStages(): StudyDraft['stages'] {
+  return useDeferredValue(useDraftPart(stagesOf));
+}
+
+const stagesOf = ({ stages }: StudyDraft) => stages;

@@ -7,7 +7,7 @@ import { NumberInput } from '../../../components/number-input.js';
 import { formatPercent } from '../../../lib/format.js';
 import { specOf, stagesOn } from '../draft.js';
 import { valueText } from '../stages/value-text.js';
-import { useDraftPart, useStudyStore } from '../study-store.js';
+import { useDraftPart, useLateStages, useStudyStore } from '../study-store.js';
 import type { Goal, GoalOutcome } from '../varying/goal-work.js';
 import { useStudyWork } from '../varying/use-study-work.js';
 import { variableValues, type VariableValue } from '../varying/variable-values.js';
@@ -35,7 +35,7 @@ const keyOf = ({ stage, parameter }: VariableValue) => `${stage} ${parameter.nam
 
 function GoalForm({ disabled }: { disabled: boolean }) {
   const store = useStudyStore();
-  const stages = useDraftPart((draft) => draft.stages);
+  const stages = useLateStages();
   const hasLimits = useDraftPart((draft) => draft.judgement !== null);
   const values = variableValues(stages);
   const [chosen, setChosen] = useState('');

@@ -7,7 +7,7 @@ import { TableTwin } from '../../../components/table-twin.js';
 import { formatPercent, formatSi } from '../../../lib/format.js';
 import { specOf, stagesOn } from '../draft.js';
 import { bodeFrequencies } from '../predict.js';
-import { useDraftPart, useStudyStore } from '../study-store.js';
+import { useDraftPart, useLateStages, useStudyStore } from '../study-store.js';
 import type { SpreadOutcome } from '../varying/spread-work.js';
 import { useStudyWork } from '../varying/use-study-work.js';
 import { spreadPlaces } from '../varying/variable-values.js';
@@ -43,7 +43,7 @@ export function SpreadPart({ disabled, outcome, onOutcome }: SpreadPartProps) {
 
 function SpreadForm({ disabled, outcome, onOutcome }: SpreadPartProps) {
   const store = useStudyStore();
-  const stages = useDraftPart((draft) => draft.stages);
+  const stages = useLateStages();
   const spread = useDraftPart((draft) => draft.spread);
   const settings: Settings = spread ?? { method: 'draws', draws: 1000, seed: 1 };
   const { state, run, cancel } = useStudyWork<SpreadOutcome>(onOutcome);

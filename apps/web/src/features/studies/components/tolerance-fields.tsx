@@ -2,7 +2,7 @@ import { Table, Text } from '@chakra-ui/react';
 import { SelectInput } from '../../../components/form-field.js';
 import { NumberInput } from '../../../components/number-input.js';
 import { valueText } from '../stages/value-text.js';
-import { useDraftPart, useStudyStore } from '../study-store.js';
+import { useLateStages, useStudyStore } from '../study-store.js';
 import { variableValues, withTolerance, type VariableValue } from '../varying/variable-values.js';
 
 type Distribution = 'uniform' | 'normal';
@@ -15,7 +15,7 @@ const distributions = [
 /** The tolerance of each value of the stages that are on. */
 export function ToleranceFields({ disabled }: { disabled: boolean }) {
   const store = useStudyStore();
-  const stages = useDraftPart((draft) => draft.stages);
+  const stages = useLateStages();
   const values = variableValues(stages);
   if (values.length === 0) {
     return <Text fontSize="13px">No stage that is on has a value that could vary.</Text>;
