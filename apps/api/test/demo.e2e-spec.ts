@@ -1,4 +1,11 @@
-import type { Project, Recording, Report, ReportListItem } from '@overtally/contracts';
+import {
+  studyPageSchema,
+  studySchema,
+  type Project,
+  type Recording,
+  type Report,
+  type ReportListItem,
+} from '@overtally/contracts';
 import { demoPeople, demoProjects } from '@overtally/fixtures';
 import { createHash } from 'node:crypto';
 import { readFile } from 'node:fs/promises';
@@ -73,6 +80,27 @@ it('the analyst has judged currents, noted a cause and begun a report', { timeou
   expect(order15.mean).toBeCloseTo(0.198, 3);
   expect(order15.limit).toBeCloseTo(0.15, 10);
   expect(sections[1]!.notes).toHaveLength(1);
+});
+
+it('a study shows a filter that makes the failing current pass', async () => {
+  const { body } = await analyst.get('/api/projects').expect(200);
+  const { id } = (body.items as Project[]).find(({ name }) => name === demoProjects[0]!.name)!;
+  const { items } = studyPageSchema.parse(
+    (await analyst.get(`/api/projects/${id}/studies`).expect(200)).body,
+  );
+  expect(items).toMatchObject([{ stability: 'stable', resultBefore: 'fail', resultAfter: 'pass' }]);
+  // C with Rd and L in parallel, beside Ls and Rs: Zf/(Zf + Zs) at order 15, by arithmetic of impedances.
+  const study = studySchema.parse((await analyst.get(`/api/studies/${items[0]!.id}`).expect(200)).body);
+  const order15 = study.result.orders.find(({ order }) => order === 15)!;
+  const omega = 2 * Math.PI * order15.frequencyHz;
+  const [x, r] = [omega * 50e-3, 22];
+  // (0.1 + jx) beside r.
+  const size = (0.1 + r) ** 2 + x ** 2;
+  const beside = { re: (r * (0.1 * (0.1 + r) + x ** 2)) / size, im: (r * r * x) / size };
+  const filter = { re: beside.re, im: beside.im - 1 / (omega * 22e-6) };
+  const whole = { re: filter.re + 0.3, im: filter.im + omega * 10e-3 };
+  const gain = Math.hypot(filter.re, filter.im) / Math.hypot(whole.re, whole.im);
+  expect(order15.gain).toBeCloseTo(gain, 10);
 });
 
 it('makes nothing twice', async () => {
