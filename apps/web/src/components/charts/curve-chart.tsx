@@ -22,7 +22,7 @@ export interface ChartCurve {
   dash?: string;
 }
 
-/** Bars of one kind; `shift` moves them beside others at the same place, in px. */
+/** Bars of one kind at whole numbers; `shift` moves them beside others at the same place. Width and shift in px, less where places are close. */
 export interface ChartBars {
   x: readonly number[];
   y: readonly (number | null)[];
@@ -155,6 +155,9 @@ function Content(props: CurveChartProps & Placed) {
     right,
     bottom,
   } = props;
+  // Two bars and a gap find room between neighbouring whole numbers.
+  const narrowed = (set: ChartBars) =>
+    Math.min(1, (0.36 * Math.abs(placeX(x.from + 1) - placeX(x.from))) / set.width);
   const foot = Math.min(bottom, y.scale === 'log' ? bottom : placeY(Math.max(0, y.from)));
   return (
     <>
@@ -195,9 +198,9 @@ function Content(props: CurveChartProps & Placed) {
           return (
             <rect
               key={`${index} ${at}`}
-              x={placeX(at) - set.width / 2 + (set.shift ?? 0)}
+              x={placeX(at) + narrowed(set) * ((set.shift ?? 0) - set.width / 2)}
               y={top}
-              width={set.width}
+              width={set.width * narrowed(set)}
               height={Math.max(1, foot - top)}
               fill={set.isHollow ? color('sheet') : tone}
               stroke={tone}

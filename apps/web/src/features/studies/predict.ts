@@ -8,7 +8,6 @@ import {
   poles,
   resonancePeaks,
   resonanceWarnings,
-  seriesFigures,
   stability,
   unwrappedPhase,
   zeros,
@@ -138,7 +137,3 @@ export function judged(
   if (limitSet === null || judgement === null) return null;
   return evaluate(limitSet, measurementOfSeries(series, quantity, unit), judgement);
 }
-
-/** Figures of the input alone, for the page before there are stages. */
-export const inputFigures = ({ series, thdMaxOrder }: StudyDraft): SeriesFigures =>
-  seriesFigures(series, thdMaxOrder);

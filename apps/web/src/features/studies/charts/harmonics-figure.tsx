@@ -127,7 +127,7 @@ function HarmonicBars({ scale }: { scale: Scale }) {
       />
       <Text fontSize="xs" color="inkSoft">
         {isSame ? '' : `The input, another quantity, stands in the table. `}
-        {limits.length > 0 ? 'The blue line is the limit of each order at the output.' : ''}
+        {limits.length > 0 ? 'The stepped line is the limit of each order at the output.' : ''}
       </Text>
     </>
   );

@@ -47,7 +47,9 @@ export function ToleranceFields({ disabled }: { disabled: boolean }) {
             const held = stages[stage]!.tolerances.find((each) => each.parameter === parameter.name);
             return (
               <Table.Row key={`${stages[stage]!.key} ${parameter.name}`}>
-                <Table.Cell>{label}</Table.Cell>
+                <Table.Cell whiteSpace="normal" minW="28">
+                  {label}
+                </Table.Cell>
                 <Table.Cell textAlign="end" fontFamily="mono" whiteSpace="nowrap">
                   {valueText(value.value, parameter.unit)}
                 </Table.Cell>
