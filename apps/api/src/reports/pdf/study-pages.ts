@@ -115,10 +115,13 @@ function stageHead({ name, kind, meaning, isOn }: ReportStage): string {
 function stageValues({ values, words }: ReportStage): string {
   const lines = values.map(({ symbol, meaning, value, unit, tolerancePercent }) => {
     const tolerance = tolerancePercent === null ? '' : ` ± ${formatGiven(tolerancePercent)} %`;
-    return `${symbol} = ${formatQuantity(value, unit, 5)}${tolerance}, ${meaning}`;
+    return `${symbol} = ${trimmed(formatQuantity(value, unit, 5))}${tolerance}, ${meaning}`;
   });
   return [...lines, ...(words === '' ? [] : [words])].join('\n') || 'none';
 }
+
+/** Zeros that say nothing of a value that was given: 22.000 µF becomes 22 µF. */
+const trimmed = (quantity: string): string => quantity.replace(/(?:\.0+|(\.\d*?[1-9])0+)(?=\D|$)/, '$1');
 
 /** Verdicts and figures before and behind the stages. */
 function drawOutcome(sheet: Sheet, { result, inputUnit, outputUnit, thdMaxOrder }: ReportStudy): void {
