@@ -9,20 +9,24 @@ import {
   type StageKind,
 } from '../stages/stage-words.js';
 import { KindSelect } from './kind-select.js';
-import { NumberValue, OpenFields, type OpenSpec, type SpecFieldsProps } from './open-fields.js';
+import { NumberValue, OpenFields, type Edit, type OpenSpec, type SpecFieldsProps } from './open-fields.js';
 
-type LoopSpec = Extract<StudyStage['spec'], { kind: 'closed-loop' }>;
+export type LoopSpec = Extract<StudyStage['spec'], { kind: 'closed-loop' }>;
 
 const outputs = (Object.keys(loopWords) as LoopOutput[]).map((value) => ({ value, label: loopWords[value] }));
 
 /** Controller and plant of a loop with unity negative feedback. */
 export function LoopFields(props: SpecFieldsProps<LoopSpec>) {
-  const { spec, stage, disabled, onChange, onSlide } = props;
+  const { spec, stage, disabled, onEdit } = props;
+  const onChange = (next: LoopSpec) => onEdit(() => next);
   const { controller, plant } = spec;
-  const withPlant = (index: number, next: OpenSpec): LoopSpec => ({
-    ...spec,
-    plant: plant.map((each, i) => (i === index ? next : each)),
-  });
+  const onPlant =
+    (index: number): Edit<OpenSpec> =>
+    (edit, isSliding) =>
+      onEdit(
+        (held) => ({ ...held, plant: held.plant.map((each, i) => (i === index ? edit(each) : each)) }),
+        isSliding,
+      );
   const time = { least: 0, isAbove: true, isOptional: true, disabled };
   return (
     <Stack gap="3">
@@ -85,8 +89,7 @@ export function LoopFields(props: SpecFieldsProps<LoopSpec>) {
             spec={part}
             stage={`plant ${index + 1} of ${stage}`}
             disabled={disabled}
-            onChange={(next) => onChange(withPlant(index, next))}
-            onSlide={(next) => onSlide(withPlant(index, next))}
+            onEdit={onPlant(index)}
           />
         </Stack>
       ))}

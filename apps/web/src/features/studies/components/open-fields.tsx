@@ -1,4 +1,5 @@
 import { Stack, Text } from '@chakra-ui/react';
+import { useCallback } from 'react';
 import type { StudyStage } from '@overtally/contracts';
 import { circuitKinds } from '@overtally/dsp';
 import { numberOf, numberText } from '../../../lib/number-text.js';
@@ -12,40 +13,60 @@ export interface SpecFieldsProps<Spec = StudyStage['spec']> {
   /** Name of the stage for screen readers. */
   stage: string;
   disabled: boolean;
-  onChange: (spec: Spec) => void;
-  onSlide: (spec: Spec) => void;
+  /** Edits the description as it is by then, so that fields need not be drawn anew with it. */
+  onEdit: Edit<Spec>;
 }
+
+/** `isSliding`: more edits may follow within the frame. */
+export type Edit<Spec> = (edit: (spec: Spec) => Spec, isSliding?: boolean) => void;
 
 export type OpenSpec = Exclude<StudyStage['spec'], { kind: 'closed-loop' }>;
 
+type CircuitSpec = Extract<OpenSpec, { kind: 'circuit' }>;
+
 /** Fields of a stage that is no loop; a loop has them for its plant. */
 export function OpenFields(props: SpecFieldsProps<OpenSpec>) {
-  const { spec, stage, disabled, onChange, onSlide } = props;
-  if (spec.kind === 'circuit') {
-    const circuit = circuitOf(spec);
-    if (circuit === null)
-      return <Text fontSize="13px">{`A kind of stage that this page does not know.`}</Text>;
-    const { [circuit]: kind } = circuitKinds;
-    const withValue = (name: string, value: number | undefined) => {
-      const { [name]: _was, ...others } = spec.values;
-      return { ...spec, values: value === undefined ? others : { ...others, [name]: value } };
-    };
-    return (
-      <Stack gap="3">
-        {kind.parameters.map((parameter) => (
-          <ValueField
-            key={parameter.name}
-            parameter={parameter}
-            value={spec.values[parameter.name]}
-            stage={stage}
-            disabled={disabled}
-            onChange={(value) => onChange(withValue(parameter.name, value))}
-            onSlide={(value) => onSlide(withValue(parameter.name, value))}
-          />
-        ))}
-      </Stack>
-    );
-  }
+  const { spec } = props;
+  return spec.kind === 'circuit' ? (
+    <CircuitFields {...props} spec={spec} />
+  ) : (
+    <RationalFields {...props} spec={spec} />
+  );
+}
+
+function CircuitFields({ spec, stage, disabled, onEdit }: SpecFieldsProps<OpenSpec> & { spec: CircuitSpec }) {
+  const onValue = useCallback(
+    (name: string, value: number | undefined, isSliding: boolean) =>
+      onEdit((held) => (held.kind === 'circuit' ? withValue(held, name, value) : held), isSliding),
+    [onEdit],
+  );
+  const circuit = circuitOf(spec);
+  if (circuit === null) return <Text fontSize="13px">A kind of stage that this page does not know.</Text>;
+  return (
+    <Stack gap="3">
+      {circuitKinds[circuit].parameters.map((parameter) => (
+        <ValueField
+          key={parameter.name}
+          parameter={parameter}
+          value={spec.values[parameter.name]}
+          stage={stage}
+          disabled={disabled}
+          onValue={onValue}
+        />
+      ))}
+    </Stack>
+  );
+}
+
+function withValue(spec: CircuitSpec, name: string, value: number | undefined): CircuitSpec {
+  const { [name]: _was, ...others } = spec.values;
+  return { ...spec, values: value === undefined ? others : { ...others, [name]: value } };
+}
+
+type RationalSpec = Exclude<OpenSpec, { kind: 'circuit' }>;
+
+function RationalFields({ spec, disabled, onEdit }: SpecFieldsProps<OpenSpec> & { spec: RationalSpec }) {
+  const onChange = (next: RationalSpec) => onEdit(() => next);
   const numbers = {
     write: numbersText,
     read: (text: string) => {

@@ -1,12 +1,13 @@
 import { Box, Button, chakra, Flex, Input, Text } from '@chakra-ui/react';
-import { memo, useState, type DragEvent } from 'react';
+import { memo, useCallback, useState, type DragEvent } from 'react';
 import type { DraftStage } from '../draft.js';
 import { kindWords, stageMeaning, stageName } from '../stages/stage-words.js';
+import type { Edit } from './open-fields.js';
 import { SpecFields } from './spec-fields.js';
 
 export interface StageActs {
   change: (key: number, stage: Partial<DraftStage>) => void;
-  slide: (key: number, spec: DraftStage['spec']) => void;
+  editSpec: (key: number, edit: (spec: DraftStage['spec']) => DraftStage['spec'], isSliding: boolean) => void;
   move: (key: number, to: number) => void;
   duplicate: (key: number) => void;
   remove: (key: number) => void;
@@ -27,6 +28,10 @@ export const StageCard = memo(function StageCard({ stage, index, count, acts, di
   const { key, isOn, spec } = stage;
   const name = stageName(stage);
   const [isTarget, setIsTarget] = useState(false);
+  const onEdit = useCallback<Edit<DraftStage['spec']>>(
+    (edit, isSliding = false) => acts.editSpec(key, edit, isSliding),
+    [acts, key],
+  );
   const drop = (event: DragEvent) => {
     const moved = Number(event.dataTransfer.getData(dragType));
     setIsTarget(false);
@@ -82,13 +87,7 @@ export const StageCard = memo(function StageCard({ stage, index, count, acts, di
       <Text fontSize="xs" color="inkSoft" mb="2">
         {stageMeaning(spec)}
       </Text>
-      <SpecFields
-        spec={spec}
-        stage={`stage ${index + 1}`}
-        disabled={disabled}
-        onChange={(next) => acts.change(key, { spec: next })}
-        onSlide={(next) => acts.slide(key, next)}
-      />
+      <SpecFields spec={spec} stage={`stage ${index + 1}`} disabled={disabled} onEdit={onEdit} />
       {disabled ? null : (
         <Flex mt="2" gap="0.5" wrap="wrap" align="center">
           <Input

@@ -58,8 +58,13 @@ function stageActs(store: StudyStore): StageActs {
     stages.map((stage) => (stage.key === key ? { ...stage, ...change } : stage));
   return {
     change: (key, change) => set(replaced(key, change)),
-    slide: (key, spec) =>
-      store.slide((draft) => ({ ...draft, stages: replaced(key, { spec })(draft.stages) })),
+    editSpec: (key, edit, isSliding) =>
+      (isSliding ? store.slide : store.change)((draft) =>
+        withStages(
+          draft,
+          draft.stages.map((stage) => (stage.key === key ? { ...stage, spec: edit(stage.spec) } : stage)),
+        ),
+      ),
     move: (key, to) =>
       set((stages) => {
         const moved = stages.find((stage) => stage.key === key);

@@ -11,22 +11,20 @@ interface ValueFieldProps {
   /** Name of the stage, to tell equal values apart for screen readers. */
   stage: string;
   disabled: boolean;
-  onChange: (value: number | undefined) => void;
-  /** While the slider moves. */
-  onSlide: (value: number) => void;
+  onValue: (name: string, value: number | undefined, isSliding: boolean) => void;
 }
 
 /** One value of a stage: typed with prefix and unit, or moved by a slider over a stated range. */
 export const ValueField = memo(function ValueField(props: ValueFieldProps) {
-  const { parameter, value, stage, disabled, onChange, onSlide } = props;
-  const { symbol, meaning, unit, range, default: fallback } = parameter;
+  const { parameter, value, stage, disabled, onValue } = props;
+  const { name, symbol, meaning, unit, range, default: fallback } = parameter;
   const [draft, setDraft] = useState<string | null>(null);
   const shown = value ?? fallback ?? undefined;
   const written = value === undefined ? '' : valueText(value, unit);
   const read = draft === null ? null : readValue(draft, parameter);
   const commit = () => {
     if (read === null || read.problem !== null) return;
-    if (read.value !== value) onChange(read.value);
+    if (read.value !== value) onValue(name, read.value, false);
     setDraft(null);
   };
   return (
@@ -67,7 +65,7 @@ export const ValueField = memo(function ValueField(props: ValueFieldProps) {
           disabled={disabled}
           onSlide={(next) => {
             setDraft(null);
-            onSlide(next);
+            onValue(name, next, true);
           }}
         />
       )}
