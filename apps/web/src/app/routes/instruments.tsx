@@ -11,6 +11,7 @@ import { instrumentsQuery } from '../../features/instruments/api/list-instrument
 import { InstrumentDialog } from '../../features/instruments/components/instrument-dialog.js';
 import { InstrumentFilterBar } from '../../features/instruments/components/instrument-filter.js';
 import { InstrumentTable } from '../../features/instruments/components/instrument-table.js';
+import { LaboratoryOnly } from '../../features/instruments/components/laboratory-only.js';
 import { filtered, type InstrumentFilter } from '../../features/instruments/instrument-filter.js';
 import { paths } from '../paths.js';
 
@@ -23,7 +24,7 @@ export function Component() {
   const [filter, setFilter] = useState(noFilter);
   const [creating, setCreating] = useState(false);
   const [now] = useState(() => new Date());
-  if (!account.worksInLaboratory) return <OthersOnly />;
+  if (!account.worksInLaboratory) return <LaboratoryOnly title="Instruments" />;
   const shown = filtered(instruments.data ?? [], filter, now);
   const overdue = filtered(instruments.data ?? [], { ...noFilter, state: 'overdue' }, now).length;
   const create = (
@@ -75,18 +76,6 @@ export function Component() {
         onClose={() => setCreating(false)}
         onSaved={({ id }) => void navigate(paths.instrument(id))}
       />
-    </>
-  );
-}
-
-function OthersOnly() {
-  return (
-    <>
-      <PageHeader title="Instruments" />
-      <EmptyState title="Instruments are the laboratory's own">
-        Technicians, analysts and managers of its projects see them. What a report was measured with stands in
-        the report.
-      </EmptyState>
     </>
   );
 }

@@ -9,9 +9,11 @@ import { ErrorState } from '../../components/error-state.js';
 import { LoadingState } from '../../components/loading-state.js';
 import { notifyDone, notifyProblem } from '../../components/notify.js';
 import { PageHeader } from '../../components/page-header.js';
+import { useAccount } from '../../features/account/hooks/use-account.js';
 import { instrumentsQuery } from '../../features/instruments/api/list-instruments.js';
 import { ChainDialog } from '../../features/instruments/components/chain-dialog.js';
 import { ChainList } from '../../features/instruments/components/chain-list.js';
+import { LaboratoryOnly } from '../../features/instruments/components/laboratory-only.js';
 import { useLaboratoryChanges } from '../../features/instruments/hooks/use-laboratory-changes.js';
 import { chainsQuery } from '../../lib/bench-queries.js';
 import { paths } from '../paths.js';
@@ -19,11 +21,13 @@ import { paths } from '../paths.js';
 type Asked = { chain: MeasuringChainListItem | null; act: 'write' | 'copy' | 'delete' };
 
 export function Component() {
-  const chains = useQuery(chainsQuery());
-  const instruments = useQuery(instrumentsQuery());
+  const account = useAccount();
+  const chains = useQuery({ ...chainsQuery(), enabled: account.worksInLaboratory });
+  const instruments = useQuery({ ...instrumentsQuery(), enabled: account.worksInLaboratory });
   const [asked, setAsked] = useState<Asked | null>(null);
   const [now] = useState(() => new Date());
   const { removeChain } = useLaboratoryChanges();
+  if (!account.worksInLaboratory) return <LaboratoryOnly title="Measuring chains" />;
   const close = () => setAsked(null);
   const hasInstruments = (instruments.data?.length ?? 0) > 0;
   const create = hasInstruments ? (

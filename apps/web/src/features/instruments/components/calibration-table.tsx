@@ -25,7 +25,9 @@ export function CalibrationTable({ calibrations, countingId }: CalibrationTableP
         <Table.Header>
           <Table.Row>
             <Table.ColumnHeader scope="col">Calibrated</Table.ColumnHeader>
-            <Table.ColumnHeader scope="col">Due</Table.ColumnHeader>
+            <Table.ColumnHeader scope="col" hideBelow="md">
+              Due
+            </Table.ColumnHeader>
             <Table.ColumnHeader scope="col" hideBelow="md">
               Uncertainty
             </Table.ColumnHeader>
@@ -40,11 +42,16 @@ export function CalibrationTable({ calibrations, countingId }: CalibrationTableP
             <Table.Row key={calibration.id}>
               <Table.Cell whiteSpace="nowrap">
                 {formatDay(calibration.calibratedOn)}
+                <Text hideFrom="md" fontSize="13px">
+                  due {formatDay(calibration.dueOn)}
+                </Text>
                 <Text color="inkSoft" fontSize="13px">
                   {calibration.id === countingId ? 'counts today' : calibration.calibratedBy}
                 </Text>
               </Table.Cell>
-              <Table.Cell whiteSpace="nowrap">{formatDay(calibration.dueOn)}</Table.Cell>
+              <Table.Cell hideBelow="md" whiteSpace="nowrap">
+                {formatDay(calibration.dueOn)}
+              </Table.Cell>
               <Table.Cell hideBelow="md">{calibration.uncertainty || none}</Table.Cell>
               <Table.Cell overflowWrap="anywhere">
                 {calibration.certificateNumber || (calibration.certificate ? '' : none)}
