@@ -2,7 +2,7 @@ import { Box, Button, Heading, Table, Text } from '@chakra-ui/react';
 import { inSeries, routhTable, type RouthRow } from '@overtally/dsp';
 import { useState } from 'react';
 import { Sheet } from '../../../components/sheet.js';
-import { formatSi, none } from '../../../lib/format.js';
+import { formatSi, none, signed } from '../../../lib/format.js';
 import type { ChainFacts } from '../predict.js';
 
 /** Why stages have no steady state: the poles at fault, and the Routh-Hurwitz table on request. */
@@ -37,10 +37,16 @@ export function UnsteadyNotice({ facts }: { facts: ChainFacts }) {
   );
 }
 
+/** Coefficients span many decades. */
+const coefficient = (value: number) =>
+  value !== 0 && (Math.abs(value) < 1e-3 || Math.abs(value) >= 1e6)
+    ? signed(value.toExponential(3))
+    : formatSi(value, '');
+
 const cellText = ({ value, epsilonPower }: RouthRow['elements'][number]) =>
   epsilonPower === 0
-    ? formatSi(value, '')
-    : `${formatSi(value, '')} ε${epsilonPower === 1 ? '' : `^${epsilonPower}`}`;
+    ? coefficient(value)
+    : `${coefficient(value)} ε${epsilonPower === 1 ? '' : `^${epsilonPower}`}`;
 
 function Routh({ facts }: { facts: ChainFacts }) {
   const table = routhTable(inSeries(facts.chain).denominator);
