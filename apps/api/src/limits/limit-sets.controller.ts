@@ -1,5 +1,5 @@
 import { Body, Controller, Delete, Get, Header, HttpCode, Param, Patch, Post, Query } from '@nestjs/common';
-import { ApiNoContentResponse, ApiProduces, ApiResponse, ApiTags } from '@nestjs/swagger';
+import { ApiNoContentResponse, ApiProduces, ApiOkResponse, ApiTags } from '@nestjs/swagger';
 import { ZodResponse } from 'nestjs-zod';
 import { RequirePermission } from '../access/require-permission.decorator.js';
 import { ApiProblem } from '../common/api-problem.decorator.js';
@@ -41,7 +41,10 @@ export class LimitSetsController {
   @RequirePermission('limit-set.list')
   @Header('Content-Type', 'text/csv; charset=utf-8')
   @ApiProduces('text/csv')
-  @ApiResponse({ status: 200, description: 'Limits as CSV that can be given as the `table` of a new set' })
+  @ApiOkResponse({
+    description: 'Limits as CSV that can be given as the `table` of a new set',
+    schema: { type: 'string' },
+  })
   @ApiProblem(404, 'No such limit set or row, or not of a project of the person who asks')
   table(@CurrentUser() user: SignedInUser, @Param('id') id: string, @Query() { row }: LimitTableQueryDto) {
     return this.limitSets.table(user, id, row);
