@@ -222,7 +222,8 @@ describe('the whole life of a report', () => {
       const judged = verdict.orders.filter(({ sharePercent }) => sharePercent !== null);
       expect(judged.length).toBeGreaterThan(30);
       for (const { order, sharePercent } of judged) {
-        const share = sharePercent!.toFixed(1).replace('.', String.raw`\.`);
+        const shown = sharePercent! < 0.05 ? '< 0.1' : sharePercent!.toFixed(1);
+        const share = shown.replace('.', String.raw`\.`);
         expect(text, `order ${order}`).toMatch(new RegExp(String.raw`^\s*${order}\s.*\s${share}\s*%`, 'm'));
       }
       for (const said of [title, mended, first.number, first.checkCode, secondManager.name]) {
