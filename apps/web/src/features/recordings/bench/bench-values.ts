@@ -41,7 +41,7 @@ const amounts = [
 const texts = ['supply', 'place', 'remark'] as const;
 
 export function toBench({ equipment, operatingMode, chain, conditions }: Recording): BenchValues {
-  const numbers = amounts.map((key) => {
+  const numbers = amounts.map((key): [string, string] => {
     const value = conditions[key];
     return [key, value === undefined ? '' : numberText(value)];
   });
@@ -50,7 +50,10 @@ export function toBench({ equipment, operatingMode, chain, conditions }: Recordi
     equipmentId: equipment?.id ?? '',
     operatingModeId: operatingMode?.id ?? '',
     measuringChainId: chain?.id ?? '',
-    ...Object.fromEntries([...numbers, ...texts.map((key) => [key, conditions[key] ?? ''])]),
+    ...Object.fromEntries([
+      ...numbers,
+      ...texts.map((key): [string, string] => [key, conditions[key] ?? '']),
+    ]),
   };
 }
 
@@ -71,7 +74,7 @@ export function fromBench(values: BenchValues): BenchData {
     equipmentId: values.equipmentId || null,
     operatingModeId: values.equipmentId && values.operatingModeId ? values.operatingModeId : null,
     measuringChainId: values.measuringChainId || null,
-    conditions: Object.fromEntries([...numbers, ...said]),
+    conditions: Object.fromEntries<number | string>([...numbers, ...said]),
   };
 }
 
