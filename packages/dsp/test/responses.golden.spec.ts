@@ -8,7 +8,6 @@ import {
   stageTransfer,
   timeResponse,
   transferFunction,
-  type CircuitName,
   type CircuitValues,
 } from '../src/index.js';
 

@@ -39,7 +39,12 @@ export function sampleReport(status: ReportStatus, change: Partial<Report> = {})
   const verdict = sampleVerdict();
   return reportSchema.parse({
     ...{ id: sampleId(800), projectId: sampleProject().id, revision: 0, title: 'Dimmer, type test', status },
-    ...{ summary: 'Over at order 3.', number: isIssued ? 'HR-0001' : null, verdictIds: [verdict.id], studyVersionIds: [] },
+    ...{
+      summary: 'Over at order 3.',
+      number: isIssued ? 'HR-0001' : null,
+      verdictIds: [verdict.id],
+      studyVersionIds: [],
+    },
     content: {
       project: sampleProject(),
       revisionReason: null,
