@@ -27,13 +27,13 @@ describe('who may do what', () => {
     expect(holds('instrument.write', null, true)).toBe(true);
   });
 
-  it('gives a stranger nothing in a project, and an administrator reading and members only', () => {
+  it('gives a stranger nothing in a project, and an administrator reading, members and the messages of the mailbox only', () => {
     const inProject = (Object.keys(permissions) as Permission[]).filter((permission) =>
       Array.isArray(permissions[permission].allow),
     );
     expect(inProject.filter((permission) => holds(permission, null))).toEqual([]);
     expect(
       inProject.filter((permission) => holds(permission, null, true) && !/\.(read|list)$/.test(permission)),
-    ).toEqual(['member.manage']);
+    ).toEqual(['member.manage', 'mail.retry']);
   });
 });

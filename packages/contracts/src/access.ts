@@ -15,8 +15,8 @@ const manager: readonly ProjectRole[] = ['manager'];
  * `public` needs no sign-in, `signed-in` any account, `administrator` an administrator of the
  * installation, `laboratory` an administrator or whoever works at the bench of any project (what the
  * laboratory's projects share is no business of its customers); every other entry lists the project
- * roles that hold the permission. An administrator may read every project and manage its members
- * (`administratorToo`), and does nothing else in it.
+ * roles that hold the permission. An administrator may read every project, manage its members and send
+ * its messages anew (`administratorToo`), and does nothing else in it.
  */
 export const permissions = {
   'auth.sign-in': { allow: 'public' },
