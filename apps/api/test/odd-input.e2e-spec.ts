@@ -69,7 +69,7 @@ it('keeps a capture whose cells and name are padded with NUL', async () => {
 });
 
 describe('a form with more text than a capture needs', () => {
-  const manyFields = Array.from({ length: 9 }, (_, i) => [`field${i}`, 'x'] as const);
+  const manyFields = Array.from({ length: 17 }, (_, i) => [`field${i}`, 'x'] as const);
   const longField = [['remark', 'x'.repeat(256 * 1024 + 1)]] as const;
 
   it.each([
