@@ -8,7 +8,7 @@ export default defineConfig({
     globalSetup: ['test/support/template-database.ts'],
     setupFiles: ['reflect-metadata'],
     maxWorkers: 2,
-    testTimeout: 30_000,
+    testTimeout: 90_000,
     hookTimeout: 120_000,
   },
 });

@@ -3,7 +3,7 @@ import { setTimeout as wait } from 'node:timers/promises';
 import type TestAgent from 'supertest/lib/agent.js';
 
 const pollMs = 30;
-const patienceMs = 20_000;
+const patienceMs = 60_000;
 
 /** Uploads a capture and returns the recording as the API answers, with the status 202 checked. */
 export async function upload(

@@ -87,14 +87,14 @@ function collectOutput(child: ChildProcess): () => string {
 }
 
 async function untilHealthy(baseUrl: string, child: ChildProcess, log: () => string): Promise<void> {
-  const deadline = Date.now() + 60_000;
+  const deadline = Date.now() + 120_000;
   while (Date.now() < deadline) {
     if (child.exitCode !== null) throw new Error(`The server ended with ${child.exitCode}:\n${log()}`);
     const answer = await fetch(`${baseUrl}/api/health`).catch(() => null);
     if (answer?.ok) return;
     await new Promise((resolve) => setTimeout(resolve, 200));
   }
-  throw new Error(`The server was not ready in 60 s:\n${log()}`);
+  throw new Error(`The server was not ready in 120 s:\n${log()}`);
 }
 
 async function ended(child: ChildProcess): Promise<void> {
