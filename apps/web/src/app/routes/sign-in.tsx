@@ -16,7 +16,7 @@ export function Component() {
       title="Sign in"
       foot={
         <>
-          <RouterLink to={paths.forgotPassword()} color="act">
+          <RouterLink to={paths.forgotPassword()} color="act" textDecoration="underline">
             Forgot the password?
           </RouterLink>{' '}
           Accounts come by invitation to a project, or from an administrator.
