@@ -8,12 +8,6 @@ const { limitSets, members, projects } = schema;
 /** A version of a custom set, with the id of the newest one. */
 export type LimitSetRow = typeof limitSets.$inferSelect & { newestId: string };
 
-/** True for the refusal to delete what an issued report refers to (PostgreSQL manual, appendix A: 23001). */
-export function isKeptByReport(error: unknown): boolean {
-  const { cause } = error as { cause?: { code?: string } };
-  return cause?.code === '23001';
-}
-
 const newestId = sql<string>`first_value(${limitSets.id}) over (
   partition by ${limitSets.familyId} order by ${limitSets.version} desc)`;
 

@@ -19,8 +19,9 @@ import { z } from 'zod';
 import { problem } from '../common/problem.js';
 import type { SignedInUser } from '../common/request.js';
 import { DATABASE } from '../database/database.tokens.js';
+import { isKeptByReport } from '../database/referred-violation.js';
 import { definitionFrom, toLimitSet } from './limit-set-view.js';
-import { isKeptByReport, LimitSetsRepository, type LimitSetRow } from './limit-sets.repository.js';
+import { LimitSetsRepository, type LimitSetRow } from './limit-sets.repository.js';
 
 const uuid = z.uuid();
 
